@@ -1,0 +1,2 @@
+/** Version of the computation; part of every frozen evaluation, raised whenever any output could change. */
+export const ENGINE_VERSION = '0.1.0'
