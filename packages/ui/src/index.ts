@@ -1,0 +1,2 @@
+export * from './theme'
+export * from './shell'

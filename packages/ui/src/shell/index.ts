@@ -1,0 +1,5 @@
+export { default as AppShell } from './AppShell.vue'
+export { default as PageHeading } from './PageHeading.vue'
+export { default as RuleGlyph } from './RuleGlyph.vue'
+export { useRouteFocus } from './useRouteFocus'
+export type { Breadcrumb, NavGroup, NavItem } from './types'

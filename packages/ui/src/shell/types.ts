@@ -1,0 +1,20 @@
+import type { RouteLocationRaw } from 'vue-router'
+
+/** One entry of the left navigation; `count` is what waits there, left out when nothing does. */
+export interface NavItem {
+  to: RouteLocationRaw
+  label: string
+  count?: number
+}
+
+/** Entries under a small heading, such as those of the organisation one works for. */
+export interface NavGroup {
+  title: string
+  items: NavItem[]
+}
+
+/** One step of the way to this page; the last has no `to`. */
+export interface Breadcrumb {
+  label: string
+  to?: RouteLocationRaw
+}
