@@ -1,0 +1,4 @@
+export * from './access'
+export * from './common'
+export * from './define'
+export * as system from './system'

@@ -1,0 +1,62 @@
+/** What a process reads from its environment; every name is set by infra/start.mjs. */
+export interface Config {
+  databaseUrl: string
+  systemDatabaseUrl: string
+  sessionDatabaseUrl: string
+  sessionSecret: string
+  oidc: { issuer: string; supplier: OidcClient; customer: OidcClient }
+  origins: { supplier: string; customer: string }
+  ports: { supplier: number; customer: number }
+  dist: { supplier: string; customer: string }
+  s3: { endpoint: string; bucket: string; accessKeyId: string; secretAccessKey: string; region: string }
+  smtpUrl: string
+  enginesDir: string
+  logLevel: string
+}
+export interface OidcClient {
+  id: string
+  secret: string
+}
+
+function need(env: NodeJS.ProcessEnv, name: string): string {
+  const value = env[name]
+  if (!value)
+    throw new Error(`The environment variable ${name} is missing; start the product with npm start.`)
+  return value
+}
+
+export function readConfig(env: NodeJS.ProcessEnv): Config {
+  return {
+    databaseUrl: need(env, 'DATABASE_URL'),
+    systemDatabaseUrl: need(env, 'SYSTEM_DATABASE_URL'),
+    sessionDatabaseUrl: need(env, 'SESSION_DATABASE_URL'),
+    sessionSecret: need(env, 'SESSION_SECRET'),
+    oidc: {
+      issuer: need(env, 'OIDC_ISSUER'),
+      supplier: {
+        id: need(env, 'OIDC_SUPPLIER_CLIENT_ID'),
+        secret: need(env, 'OIDC_SUPPLIER_CLIENT_SECRET'),
+      },
+      customer: {
+        id: need(env, 'OIDC_CUSTOMER_CLIENT_ID'),
+        secret: need(env, 'OIDC_CUSTOMER_CLIENT_SECRET'),
+      },
+    },
+    origins: { supplier: need(env, 'SUPPLIER_ORIGIN'), customer: need(env, 'CUSTOMER_ORIGIN') },
+    ports: {
+      supplier: Number(env.EVENRULE_SUPPLIER_PORT ?? 4310),
+      customer: Number(env.EVENRULE_CUSTOMER_PORT ?? 4320),
+    },
+    dist: { supplier: need(env, 'SUPPLIER_DIST'), customer: need(env, 'CUSTOMER_DIST') },
+    s3: {
+      endpoint: need(env, 'S3_ENDPOINT'),
+      bucket: need(env, 'S3_BUCKET'),
+      accessKeyId: need(env, 'S3_ACCESS_KEY_ID'),
+      secretAccessKey: need(env, 'S3_SECRET_ACCESS_KEY'),
+      region: env.S3_REGION ?? 'us-east-1',
+    },
+    smtpUrl: need(env, 'SMTP_URL'),
+    enginesDir: need(env, 'ENGINES_DIR'),
+    logLevel: env.LOG_LEVEL ?? 'info',
+  }
+}

@@ -1,0 +1,95 @@
+import { sql, type SQL } from 'drizzle-orm'
+import { customType, foreignKey, pgPolicy, uuid, type AnyPgColumn } from 'drizzle-orm/pg-core'
+import { v7 } from 'uuid'
+
+export const newId = (): string => v7()
+
+/** The organisation of the running transaction; null (no rows) where none is set. */
+export const currentOrg = sql.raw(`nullif(current_setting('app.org_id', true), '')::uuid`)
+export const currentUser = sql.raw(`nullif(current_setting('app.user_id', true), '')::uuid`)
+
+/** An instant as ISO 8601 text in UTC, so that what is stored, signed and shown is the same string. */
+export const instant = customType<{ data: string; driverData: string }>({
+  dataType: () => 'timestamp (3) with time zone',
+  fromDriver: (value) => new Date(value).toISOString(),
+})
+
+export const primaryId = () => uuid().primaryKey().$defaultFn(newId)
+
+/** The one organisation that owns the row. */
+export const ownerColumn = { orgId: uuid().notNull() }
+
+/** The two organisations that share the row. */
+export const sharedColumns = {
+  relationshipId: uuid().notNull(),
+  supplierOrgId: uuid().notNull(),
+  customerOrgId: uuid().notNull(),
+}
+
+const appRole = 'evenrule_app'
+
+/** Rows of one organisation: seen and written by it alone. */
+export const ownerPolicy = (name: string, column = 'org_id') =>
+  pgPolicy(`${name}_owner`, {
+    as: 'permissive',
+    for: 'all',
+    to: appRole,
+    using: sql.raw(`${column} = nullif(current_setting('app.org_id', true), '')::uuid`),
+    withCheck: sql.raw(`${column} = nullif(current_setting('app.org_id', true), '')::uuid`),
+  })
+
+const party = `(supplier_org_id = nullif(current_setting('app.org_id', true), '')::uuid or customer_org_id = nullif(current_setting('app.org_id', true), '')::uuid)`
+
+/** Rows of a relationship: seen and written by its two parties. */
+export const sharedPolicy = (name: string) =>
+  pgPolicy(`${name}_parties`, {
+    as: 'permissive',
+    for: 'all',
+    to: appRole,
+    using: sql.raw(party),
+    withCheck: sql.raw(party),
+  })
+
+/** Narrows what the permissive policy grants; `condition` is SQL over the table's own columns. */
+export const restrictPolicy = (
+  name: string,
+  condition: string,
+  command: 'all' | 'select' | 'insert' | 'update' | 'delete' = 'all',
+) =>
+  pgPolicy(name, {
+    as: 'restrictive',
+    for: command,
+    to: appRole,
+    ...(command === 'insert' ? {} : { using: sql.raw(condition) }),
+    ...(command === 'select' || command === 'delete' ? {} : { withCheck: sql.raw(condition) }),
+  })
+
+/** SQL: the row's column names the side that the current organisation has in this row's relationship. */
+export const ownSideOnly = (sideColumn: string): string =>
+  `((${sideColumn} = 'supplier' and supplier_org_id = nullif(current_setting('app.org_id', true), '')::uuid) or (${sideColumn} = 'customer' and customer_org_id = nullif(current_setting('app.org_id', true), '')::uuid))`
+
+export const supplierOnly = `supplier_org_id = nullif(current_setting('app.org_id', true), '')::uuid`
+
+interface SharedTable {
+  relationshipId: AnyPgColumn
+  supplierOrgId: AnyPgColumn
+  customerOrgId: AnyPgColumn
+}
+
+/** Foreign-key checks bypass row security, so shared rows refer to the relationship with both parties. */
+export const relationshipKey = (
+  name: string,
+  table: SharedTable,
+  relationships: () => Omit<SharedTable, 'relationshipId'> & { id: AnyPgColumn },
+) =>
+  foreignKey({
+    name: `${name}_relationship_fk`,
+    columns: [table.relationshipId, table.supplierOrgId, table.customerOrgId],
+    foreignColumns: [relationships().id, relationships().supplierOrgId, relationships().customerOrgId] as [
+      AnyPgColumn,
+      AnyPgColumn,
+      AnyPgColumn,
+    ],
+  })
+
+export type { SQL }

@@ -1,0 +1,47 @@
+export interface FieldError {
+  /** Where in the input: `body.readings[3]`. */
+  path: string
+  message: string
+  row?: number
+  column?: string
+}
+
+/** An error the caller can act on. The middleware turns it into `application/problem+json`. */
+export class ProblemError extends Error {
+  constructor(
+    readonly code: string,
+    readonly status: number,
+    message: string,
+    readonly errors?: readonly FieldError[],
+  ) {
+    super(message)
+    this.name = 'ProblemError'
+  }
+}
+
+/** Makes the constructor of one kind of error, with its stable code and status. The detail says what to do. */
+export const defineError =
+  <A extends unknown[]>(code: string, status: number, message: string | ((...args: A) => string)) =>
+  (...args: A): ProblemError =>
+    new ProblemError(code, status, typeof message === 'string' ? message : message(...args))
+
+export const notFound = defineError(
+  'not-found',
+  404,
+  (what: string) => `There is no ${what} here that you may see. Check the address, or go back to the list.`,
+)
+export const changedMeanwhile = defineError(
+  'changed-meanwhile',
+  409,
+  (what: string) =>
+    `Somebody changed this ${what} since you opened it. Load it again; what you typed is kept.`,
+)
+export const wrongState = defineError(
+  'wrong-state',
+  409,
+  (what: string, state: string) =>
+    `This ${what} is ${state} now, so that is no longer possible. Load it again.`,
+)
+/** Bad input found by a rule that the contract's schema cannot express. */
+export const invalidInput = (errors: readonly FieldError[]): ProblemError =>
+  new ProblemError('invalid-input', 422, 'Some fields need another look.', errors)

@@ -1,0 +1,98 @@
+import { randomUUID } from 'node:crypto'
+import type { ErrorRequestHandler, RequestHandler } from 'express'
+import type { Logger } from 'pino'
+import type { Problem } from '../../contract/common'
+import { ProblemError } from '../errors'
+
+/** The one place where errors become answers: `application/problem+json` (RFC 9457) with a stable code. */
+export function problemHandler(logger: Logger): ErrorRequestHandler {
+  return (error: unknown, request, response, next) => {
+    if (response.headersSent) return next(error)
+    const problem = toProblem(error)
+    if (problem.status >= 500) {
+      problem.id = randomUUID()
+      logger.error(
+        { err: error, id: problem.id, path: request.path, method: request.method },
+        'request failed',
+      )
+    }
+    response.status(problem.status).type('application/problem+json').send(JSON.stringify(problem))
+  }
+}
+
+function toProblem(error: unknown): Problem {
+  if (error instanceof ProblemError) {
+    return {
+      type: `urn:evenrule:problem:${error.code}`,
+      title: error.code,
+      status: error.status,
+      code: error.code,
+      detail: error.message,
+      ...(error.errors ? { errors: error.errors.map((each) => ({ ...each })) } : {}),
+    }
+  }
+  const status = bodyParserStatus(error)
+  if (status === 413) return plain('body-too-large', 413, 'This is too much at once. Send less.')
+  if (status !== undefined)
+    return plain('invalid-json', 400, 'The body is not JSON. Check commas, quotes and brackets.')
+  if (isUnavailable(error))
+    return plain(
+      'unavailable',
+      503,
+      'A part of the service does not answer right now. Nothing was changed; try again in a moment.',
+    )
+  return plain(
+    'unexpected',
+    500,
+    'Something went wrong on our side. Nothing was changed; the id names the entry in our log.',
+  )
+}
+
+const plain = (code: string, status: number, detail: string): Problem => ({
+  type: `urn:evenrule:problem:${code}`,
+  title: code,
+  status,
+  code,
+  detail,
+})
+
+/** Errors of the body parser carry a status and a `type`. */
+function bodyParserStatus(error: unknown): number | undefined {
+  if (typeof error !== 'object' || error === null) return undefined
+  const { status, type } = error as { status?: unknown; type?: unknown }
+  if (typeof status !== 'number' || status >= 500) return undefined
+  return typeof type === 'string' || error instanceof URIError ? status : undefined
+}
+
+const unavailableCodes = new Set([
+  'ECONNREFUSED',
+  'ECONNRESET',
+  'ETIMEDOUT',
+  'EPIPE',
+  '57P01',
+  '57P02',
+  '57P03',
+  '08006',
+  '08001',
+  '53300',
+])
+
+function isUnavailable(error: unknown): boolean {
+  for (
+    let at: unknown = error;
+    typeof at === 'object' && at !== null;
+    at = (at as { cause?: unknown }).cause
+  ) {
+    const { code, errno, message } = at as { code?: unknown; errno?: unknown; message?: unknown }
+    if (unavailableCodes.has(String(code ?? errno ?? ''))) return true
+    if (typeof message === 'string' && message.startsWith('Connection terminated')) return true
+  }
+  return false
+}
+
+export const unknownRoute: RequestHandler = (_request, response) => {
+  response
+    .status(404)
+    .type('application/problem+json')
+    .send(JSON.stringify(plain('not-found', 404, 'There is no such address in this interface.')))
+}

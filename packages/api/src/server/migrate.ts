@@ -1,0 +1,6 @@
+import { migrateDatabase } from './db/migrate'
+
+const url = process.env.MIGRATOR_DATABASE_URL
+if (!url) throw new Error('MIGRATOR_DATABASE_URL is missing.')
+const count = await migrateDatabase(url, process.env.MIGRATIONS_DIR ?? 'infra/migrations')
+console.log(`${count} migrations applied`)

@@ -1,0 +1,160 @@
+import type { Clause } from '@evenrule/metrology'
+import { sql } from 'drizzle-orm'
+import {
+  date,
+  foreignKey,
+  index,
+  integer,
+  jsonb,
+  pgTable,
+  text,
+  unique,
+  uniqueIndex,
+  uuid,
+} from 'drizzle-orm/pg-core'
+import type { Side } from '../../../contract/access'
+import {
+  instant,
+  ownSideOnly,
+  primaryId,
+  relationshipKey,
+  restrictPolicy,
+  sharedColumns,
+  sharedPolicy,
+} from '../../db/columns'
+import { characteristics, parts } from '../parts/parts.table'
+import { relationships } from '../relationships/relationships.table'
+
+/** The thread of criteria for one scope: the whole relationship, one part number, or one characteristic. */
+export const agreements = pgTable(
+  'agreements',
+  {
+    id: primaryId(),
+    ...sharedColumns,
+    partId: uuid(),
+    characteristicId: uuid(),
+    /** Counts the agreements of this relationship, so that people can name them. */
+    number: integer().notNull(),
+    createdAt: instant().notNull(),
+  },
+  (t) => [
+    unique('agreements_relationship_id').on(t.relationshipId, t.id),
+    unique('agreements_number').on(t.relationshipId, t.number),
+    uniqueIndex('agreements_scope').on(
+      t.relationshipId,
+      sql`coalesce(part_id, '00000000-0000-0000-0000-000000000000'::uuid)`,
+      sql`coalesce(characteristic_id, '00000000-0000-0000-0000-000000000000'::uuid)`,
+    ),
+    foreignKey({
+      name: 'agreements_part_fk',
+      columns: [t.relationshipId, t.partId],
+      foreignColumns: [parts.relationshipId, parts.id],
+    }),
+    foreignKey({
+      name: 'agreements_characteristic_fk',
+      columns: [t.relationshipId, t.characteristicId],
+      foreignColumns: [characteristics.relationshipId, characteristics.id],
+    }),
+    relationshipKey('agreements', t, () => relationships),
+    sharedPolicy('agreements'),
+  ],
+)
+
+/** What is stored of a version's state; in force, superseded and lapsed follow from dates and are derived. */
+export type StoredVersionState = 'draft' | 'proposed' | 'countered' | 'agreed' | 'signed' | 'withdrawn'
+
+export const agreementVersions = pgTable(
+  'agreement_versions',
+  {
+    id: primaryId(),
+    ...sharedColumns,
+    agreementId: uuid().notNull(),
+    number: integer().notNull(),
+    state: text().$type<StoredVersionState>().notNull(),
+    /** The side that began it; a draft is seen by that side alone. */
+    begunBy: text().$type<Side>().notNull(),
+    /** From agreement on: first day in force, the canonical text both sides sign, and its SHA-256. */
+    effectiveOn: date({ mode: 'string' }),
+    text: text(),
+    sha256: text(),
+    signedAt: instant(),
+    createdAt: instant().notNull(),
+    rowVersion: integer().notNull().default(1),
+  },
+  (t) => [
+    unique('agreement_versions_relationship_id').on(t.relationshipId, t.id),
+    unique('agreement_versions_number').on(t.relationshipId, t.agreementId, t.number),
+    // Only one version of a scope can be under negotiation at a time.
+    uniqueIndex('agreement_versions_one_open')
+      .on(t.relationshipId, t.agreementId)
+      .where(sql`state in ('draft', 'proposed', 'countered', 'agreed')`),
+    index('agreement_versions_supplier').on(t.supplierOrgId, t.state),
+    index('agreement_versions_customer').on(t.customerOrgId, t.state),
+    foreignKey({
+      name: 'agreement_versions_agreement_fk',
+      columns: [t.relationshipId, t.agreementId],
+      foreignColumns: [agreements.relationshipId, agreements.id],
+    }),
+    relationshipKey('agreement_versions', t, () => relationships),
+    sharedPolicy('agreement_versions'),
+    restrictPolicy('agreement_versions_drafts', `state <> 'draft' or ${ownSideOnly('begun_by')}`),
+  ],
+)
+
+/** One side's complete proposal. Its draft is never seen by the other side. */
+export const agreementRounds = pgTable(
+  'agreement_rounds',
+  {
+    id: primaryId(),
+    ...sharedColumns,
+    versionId: uuid().notNull(),
+    number: integer().notNull(),
+    side: text().$type<Side>().notNull(),
+    state: text().$type<'draft' | 'sent' | 'accepted' | 'answered' | 'withdrawn'>().notNull(),
+    clauses: jsonb().$type<Clause[]>().notNull(),
+    effectiveOn: date({ mode: 'string' }).notNull(),
+    comment: text().notNull().default(''),
+    createdAt: instant().notNull(),
+    createdBy: uuid().notNull(),
+    sentAt: instant(),
+    rowVersion: integer().notNull().default(1),
+  },
+  (t) => [
+    unique('agreement_rounds_number').on(t.relationshipId, t.versionId, t.number),
+    foreignKey({
+      name: 'agreement_rounds_version_fk',
+      columns: [t.relationshipId, t.versionId],
+      foreignColumns: [agreementVersions.relationshipId, agreementVersions.id],
+    }),
+    relationshipKey('agreement_rounds', t, () => relationships),
+    sharedPolicy('agreement_rounds'),
+    restrictPolicy('agreement_rounds_drafts', `state <> 'draft' or ${ownSideOnly('side')}`),
+  ],
+)
+
+/** Both sides sign the same bytes: each signature names the hash it was given for. */
+export const agreementSignatures = pgTable(
+  'agreement_signatures',
+  {
+    id: primaryId(),
+    ...sharedColumns,
+    versionId: uuid().notNull(),
+    side: text().$type<Side>().notNull(),
+    userId: uuid().notNull(),
+    sha256: text().notNull(),
+    signedAt: instant().notNull(),
+    /** When the signer had signed in afresh. */
+    authenticatedAt: instant().notNull(),
+  },
+  (t) => [
+    unique('agreement_signatures_side').on(t.relationshipId, t.versionId, t.side),
+    foreignKey({
+      name: 'agreement_signatures_version_fk',
+      columns: [t.relationshipId, t.versionId],
+      foreignColumns: [agreementVersions.relationshipId, agreementVersions.id],
+    }),
+    relationshipKey('agreement_signatures', t, () => relationships),
+    sharedPolicy('agreement_signatures'),
+    restrictPolicy('agreement_signatures_own_side', ownSideOnly('side'), 'insert'),
+  ],
+)

@@ -1,0 +1,77 @@
+import { sql } from 'drizzle-orm'
+import { foreignKey, index, integer, pgPolicy, pgTable, text, unique, uuid } from 'drizzle-orm/pg-core'
+import { instant, ownerColumn, primaryId } from '../../db/columns'
+import { organisations } from '../organisations/organisations.table'
+import { users } from '../sign-in/sign-in.table'
+
+const own = `org_id = nullif(current_setting('app.org_id', true), '')::uuid and user_id = nullif(current_setting('app.user_id', true), '')::uuid`
+
+/** Every message, readable in the app by the one person it is for. Written through a function of the database. */
+export const messages = pgTable(
+  'messages',
+  {
+    ...ownerColumn,
+    id: primaryId(),
+    userId: uuid().notNull(),
+    side: text().$type<'supplier' | 'customer'>().notNull(),
+    kind: text().notNull(),
+    subject: text().notNull(),
+    body: text().notNull(),
+    /** Path in the app of that side, such as `/organisations/…/submissions/…`. */
+    link: text().notNull(),
+    createdAt: instant().notNull(),
+    readAt: instant(),
+  },
+  (t) => [
+    unique('messages_org_id').on(t.orgId, t.id),
+    index('messages_person').on(t.orgId, t.userId, t.createdAt),
+    foreignKey({ name: 'messages_org_fk', columns: [t.orgId], foreignColumns: [organisations.id] }),
+    foreignKey({ name: 'messages_user_fk', columns: [t.userId], foreignColumns: [users.id] }),
+    pgPolicy('messages_own', { as: 'permissive', for: 'select', to: 'evenrule_app', using: sql.raw(own) }),
+    pgPolicy('messages_read', {
+      as: 'permissive',
+      for: 'update',
+      to: 'evenrule_app',
+      using: sql.raw(own),
+      withCheck: sql.raw(own),
+    }),
+    pgPolicy('messages_system', {
+      as: 'permissive',
+      for: 'select',
+      to: 'evenrule_system',
+      using: sql.raw('true'),
+    }),
+  ],
+)
+
+/** Mail waiting to be sent, once each; the worker's alone. */
+export const outbox = pgTable(
+  'outbox',
+  {
+    ...ownerColumn,
+    id: primaryId(),
+    messageId: uuid().notNull(),
+    attempts: integer().notNull().default(0),
+    nextAttemptAt: instant().notNull(),
+    sentAt: instant(),
+    lastError: text(),
+  },
+  (t) => [
+    unique('outbox_message').on(t.orgId, t.messageId),
+    index('outbox_due')
+      .on(t.nextAttemptAt)
+      .where(sql`sent_at is null`),
+    foreignKey({
+      name: 'outbox_message_fk',
+      columns: [t.orgId, t.messageId],
+      foreignColumns: [messages.orgId, messages.id],
+    }),
+    pgPolicy('outbox_system', {
+      as: 'permissive',
+      for: 'all',
+      to: 'evenrule_system',
+      using: sql.raw('true'),
+      withCheck: sql.raw('true'),
+    }),
+  ],
+)

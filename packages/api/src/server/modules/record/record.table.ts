@@ -1,0 +1,70 @@
+import { sql } from 'drizzle-orm'
+import { check, index, integer, pgPolicy, pgTable, primaryKey, text, uuid } from 'drizzle-orm/pg-core'
+import { instant } from '../../db/columns'
+
+const owner = `org_id = nullif(current_setting('app.org_id', true), '')::uuid`
+const party = `supplier_org_id = nullif(current_setting('app.org_id', true), '')::uuid or customer_org_id = nullif(current_setting('app.org_id', true), '')::uuid`
+
+/** Either an organisation's journal (`org_id`) or a relationship's chain (both parties). */
+const chainColumns = {
+  chainId: uuid().notNull(),
+  orgId: uuid(),
+  supplierOrgId: uuid(),
+  customerOrgId: uuid(),
+}
+
+/** The last link of every chain; locked last and in id order when events are appended. */
+export const recordHeads = pgTable(
+  'record_heads',
+  { ...chainColumns, sequence: integer().notNull(), hash: text().notNull() },
+  (t) => [
+    primaryKey({ columns: [t.chainId] }),
+    check(
+      'record_heads_kind',
+      sql`(org_id is not null) <> (supplier_org_id is not null and customer_org_id is not null)`,
+    ),
+    pgPolicy('record_heads_visible', {
+      as: 'permissive',
+      for: 'all',
+      to: 'evenrule_app',
+      using: sql.raw(`${owner} or ${party}`),
+      withCheck: sql.raw(`${owner} or ${party}`),
+    }),
+  ],
+)
+
+/** Events, each holding the hash of the one before. The runtime role may insert and read, nothing else. */
+export const recordEvents = pgTable(
+  'record_events',
+  {
+    ...chainColumns,
+    sequence: integer().notNull(),
+    at: instant().notNull(),
+    type: text().notNull(),
+    actorUserId: uuid(),
+    actorOrgId: uuid(),
+    /** What it is about, for filters: `submission`, `agreement-version`, … and its id. */
+    subjectType: text().notNull(),
+    subjectId: uuid().notNull(),
+    taskId: uuid(),
+    /** The event as canonical JSON (RFC 8785); `hash` is the SHA-256 of this text, which contains `previousHash`. */
+    text: text().notNull(),
+    previousHash: text().notNull(),
+    hash: text().notNull(),
+  },
+  (t) => [
+    primaryKey({ columns: [t.chainId, t.sequence] }),
+    index('record_events_subject').on(t.chainId, t.subjectType, t.subjectId),
+    check(
+      'record_events_kind',
+      sql`(org_id is not null) <> (supplier_org_id is not null and customer_org_id is not null)`,
+    ),
+    pgPolicy('record_events_visible', {
+      as: 'permissive',
+      for: 'all',
+      to: 'evenrule_app',
+      using: sql.raw(`${owner} or ${party}`),
+      withCheck: sql.raw(`${owner} or ${party}`),
+    }),
+  ],
+)

@@ -1,0 +1,200 @@
+import {
+  boolean,
+  foreignKey,
+  index,
+  integer,
+  pgTable,
+  primaryKey,
+  text,
+  unique,
+  uuid,
+} from 'drizzle-orm/pg-core'
+import type { Side } from '../../../contract/access'
+import {
+  instant,
+  ownerColumn,
+  ownerPolicy,
+  ownSideOnly,
+  primaryId,
+  relationshipKey,
+  restrictPolicy,
+  sharedColumns,
+  sharedPolicy,
+  supplierOnly,
+} from '../../db/columns'
+import { measuringTasks } from '../parts/parts.table'
+import { relationships } from '../relationships/relationships.table'
+import { studies, studyData } from '../studies/studies.table'
+
+export type StoredSubmissionState =
+  | 'draft'
+  | 'for-signature'
+  | 'submitted'
+  | 'challenged'
+  | 'answered'
+  | 'awaiting-second-person'
+  | 'accepted'
+  | 'accepted-with-conditions'
+  | 'refused'
+  | 'withdrawn'
+  | 'superseded'
+
+/** What a supplier puts before one customer for one measuring task. The customer sees it once it is submitted. */
+export const submissions = pgTable(
+  'submissions',
+  {
+    id: primaryId(),
+    ...sharedColumns,
+    /** Counts the submissions of the relationship, so that people can name them. */
+    number: integer().notNull(),
+    taskId: uuid().notNull(),
+    partId: uuid().notNull(),
+    characteristicId: uuid().notNull(),
+    state: text().$type<StoredSubmissionState>().notNull(),
+    createdAt: instant().notNull(),
+    createdBy: uuid().notNull(),
+    sentForSignatureAt: instant(),
+    submittedAt: instant(),
+    decidedAt: instant(),
+    /** Everything frozen at signing: canonical JSON and its SHA-256, which the signatures name. */
+    frozenText: text(),
+    frozenSha256: text(),
+    /** Overall verdict and counts, for lists; derived from the clauses when frozen. */
+    verdict: text(),
+    clausesMet: integer(),
+    clausesTotal: integer(),
+    safety: boolean().notNull(),
+    supersededBy: uuid(),
+    rowVersion: integer().notNull().default(1),
+  },
+  (t) => [
+    unique('submissions_relationship_id').on(t.relationshipId, t.id),
+    unique('submissions_number').on(t.relationshipId, t.number),
+    index('submissions_supplier_state').on(t.supplierOrgId, t.state, t.submittedAt),
+    index('submissions_customer_state').on(t.customerOrgId, t.state, t.submittedAt),
+    index('submissions_task').on(t.relationshipId, t.taskId),
+    foreignKey({
+      name: 'submissions_task_fk',
+      columns: [t.relationshipId, t.taskId],
+      foreignColumns: [measuringTasks.relationshipId, measuringTasks.id],
+    }),
+    relationshipKey('submissions', t, () => relationships),
+    sharedPolicy('submissions'),
+    restrictPolicy('submissions_drafts', `submitted_at is not null or ${supplierOnly}`),
+  ],
+)
+
+/** The studies and data revisions a draft draws on: the supplier's alone. */
+export const submissionStudies = pgTable(
+  'submission_studies',
+  {
+    ...ownerColumn,
+    relationshipId: uuid().notNull(),
+    submissionId: uuid().notNull(),
+    studyId: uuid().notNull(),
+    dataId: uuid().notNull(),
+  },
+  (t) => [
+    primaryKey({ columns: [t.orgId, t.submissionId, t.studyId] }),
+    foreignKey({
+      name: 'submission_studies_submission_fk',
+      columns: [t.relationshipId, t.submissionId],
+      foreignColumns: [submissions.relationshipId, submissions.id],
+    }),
+    foreignKey({
+      name: 'submission_studies_study_fk',
+      columns: [t.orgId, t.studyId],
+      foreignColumns: [studies.orgId, studies.id],
+    }),
+    foreignKey({
+      name: 'submission_studies_data_fk',
+      columns: [t.orgId, t.dataId],
+      foreignColumns: [studyData.orgId, studyData.id],
+    }),
+    ownerPolicy('submission_studies'),
+  ],
+)
+
+const ofVisibleSubmission = 'exists (select 1 from submissions s where s.id = submission_id)'
+
+/** The verdict of one clause with its evaluation: input and output texts are the original. */
+export const submissionClauses = pgTable(
+  'submission_clauses',
+  {
+    id: primaryId(),
+    ...sharedColumns,
+    submissionId: uuid().notNull(),
+    position: integer().notNull(),
+    clauseKey: text().notNull(),
+    verdict: text().notNull(),
+    inputText: text().notNull(),
+    outputText: text().notNull(),
+    outputSha256: text().notNull(),
+    engineVersion: text().notNull(),
+    engineSha256: text().notNull(),
+  },
+  (t) => [
+    unique('submission_clauses_key').on(t.relationshipId, t.submissionId, t.clauseKey),
+    foreignKey({
+      name: 'submission_clauses_submission_fk',
+      columns: [t.relationshipId, t.submissionId],
+      foreignColumns: [submissions.relationshipId, submissions.id],
+    }),
+    relationshipKey('submission_clauses', t, () => relationships),
+    sharedPolicy('submission_clauses'),
+    restrictPolicy('submission_clauses_visible', ofVisibleSubmission),
+  ],
+)
+
+/** Files that go with a submission; same bytes in the object store, listed for both sides. */
+export const submissionFiles = pgTable(
+  'submission_files',
+  {
+    id: primaryId(),
+    ...sharedColumns,
+    submissionId: uuid().notNull(),
+    role: text().$type<'readings' | 'gauge-certificate' | 'standard-certificate'>().notNull(),
+    name: text().notNull(),
+    contentType: text().notNull(),
+    size: integer().notNull(),
+    sha256: text().notNull(),
+    storageKey: text().notNull(),
+  },
+  (t) => [
+    foreignKey({
+      name: 'submission_files_submission_fk',
+      columns: [t.relationshipId, t.submissionId],
+      foreignColumns: [submissions.relationshipId, submissions.id],
+    }),
+    relationshipKey('submission_files', t, () => relationships),
+    sharedPolicy('submission_files'),
+    restrictPolicy('submission_files_visible', ofVisibleSubmission),
+  ],
+)
+
+/** Signatures under a submission's frozen bytes: the supplier's approver, and those who decide. */
+export const submissionSignatures = pgTable(
+  'submission_signatures',
+  {
+    id: primaryId(),
+    ...sharedColumns,
+    submissionId: uuid().notNull(),
+    side: text().$type<Side>().notNull(),
+    userId: uuid().notNull(),
+    meaning: text().$type<'submits' | 'accepts' | 'accepts-with-conditions' | 'second-person'>().notNull(),
+    sha256: text().notNull(),
+    signedAt: instant().notNull(),
+    authenticatedAt: instant().notNull(),
+  },
+  (t) => [
+    foreignKey({
+      name: 'submission_signatures_submission_fk',
+      columns: [t.relationshipId, t.submissionId],
+      foreignColumns: [submissions.relationshipId, submissions.id],
+    }),
+    relationshipKey('submission_signatures', t, () => relationships),
+    sharedPolicy('submission_signatures'),
+    restrictPolicy('submission_signatures_visible', ofVisibleSubmission),
+    restrictPolicy('submission_signatures_own_side', ownSideOnly('side'), 'insert'),
+  ],
+)
