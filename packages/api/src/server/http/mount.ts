@@ -69,17 +69,19 @@ async function run(
   { side, database, services }: MountDependencies,
 ): Promise<unknown> {
   const { endpoint } = route
-  const parsed = {
-    params: parse(endpoint.params, request.params, 'params'),
+  const params = parse(endpoint.params, request.params, 'params')
+  // Query and body are read after authorisation: a stranger learns nothing about what an endpoint expects.
+  const rest = () => ({
+    params,
     query: parse(endpoint.query, request.query, 'query'),
     body: parse(endpoint.body, request.body, 'body'),
-  }
+  })
   const handle = route.handle as (call: unknown) => Promise<unknown>
-  if (route.scope === 'public') return handle({ ...parsed, side, services, request, response })
+  if (route.scope === 'public') return handle({ ...rest(), side, services, request, response })
   const person = request.session.person as SignedIn
-  if (route.scope === 'person') return handle({ ...parsed, person, side, services, request, response })
+  if (route.scope === 'person') return handle({ ...rest(), person, side, services, request, response })
 
-  const organisationId = (parsed.params as { organisationId: string }).organisationId
+  const organisationId = (params as { organisationId: string }).organisationId
   const context = {
     organisationId,
     userId: person.userId,
@@ -88,18 +90,18 @@ async function run(
     authenticatedAt: person.authenticatedAt,
   }
   const permission = endpoint.access as Permission
-  let prepared: unknown
+  const isFresh = () => services.clock().getTime() - Date.parse(person.authenticatedAt) <= freshFor
   try {
+    let prepared: unknown
     if (route.prepare) {
       await withTenant(database, services, context, (tenant) => authorise(tenant, permission))
       const file = request.file ? uploaded(request.file) : undefined
-      prepared = await (route.prepare as (call: unknown) => Promise<unknown>)({ ...parsed, file, services })
+      prepared = await (route.prepare as (call: unknown) => Promise<unknown>)({ ...rest(), file, services })
     }
     return await withTenant(database, services, context, async (tenant) => {
-      const authorised = await authorise(tenant, permission)
-      if (endpoint.fresh && services.clock().getTime() - Date.parse(person.authenticatedAt) > freshFor)
-        throw signInAfresh()
-      return handle({ ...parsed, tenant: authorised, prepared })
+      await authorise(tenant, permission)
+      if (endpoint.fresh && !isFresh()) throw signInAfresh()
+      return handle({ ...rest(), tenant, prepared })
     })
   } catch (error) {
     if (error instanceof ProblemError && error.code === 'not-allowed') {
@@ -110,7 +112,7 @@ async function run(
 }
 
 /** The membership is read on every request: a role taken away, or a membership that ended, counts at once. */
-async function authorise(tenant: Tenant, permission: Permission): Promise<Tenant> {
+async function authorise(tenant: Tenant, permission: Permission): Promise<void> {
   const [membership] = await tenant.tx
     .select({ roles: memberships.roles, endsOn: memberships.endsOn })
     .from(memberships)
@@ -119,7 +121,6 @@ async function authorise(tenant: Tenant, permission: Permission): Promise<Tenant
     throw notFound('organisation')
   if (!allows(permission, tenant.side, membership.roles)) throw notAllowed()
   tenant.roles = membership.roles
-  return tenant
 }
 
 async function logRefusal(
