@@ -1,2 +1,6 @@
-export * from './theme'
+export * from './charts'
+export * from './format'
+export * from './margin-rule'
 export * from './shell'
+export * from './strings'
+export * from './theme'

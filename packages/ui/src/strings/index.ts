@@ -1,0 +1,25 @@
+export {
+  clauseTypeHints,
+  clauseTypeWords,
+  describeClause,
+  describeMargin,
+  describeTerms,
+  figureWords,
+  subjectOf,
+  subjectWords,
+} from './clauses'
+export { describeIncentive, incentiveWords, type IncentiveSentence } from './incentives'
+export { numberProblemWords, problemWords } from './problems'
+export { reasonWords, settleWords, type ReasonWords } from './reasons'
+export { roleWords, sideWords } from './roles'
+export { describeRule } from './rules'
+export {
+  agreementStateWords,
+  challengeStateWords,
+  classWords,
+  coverageWords,
+  studyStateWords,
+  submissionStateWords,
+} from './states'
+export { verdictWords } from './verdicts'
+export { describeWarning, nameReadings, warningWords } from './warnings'

@@ -1,0 +1,124 @@
+import type { ReasonCode, SettleCode } from '@evenrule/metrology'
+
+export interface ReasonWords {
+  /** Why the verdict is what it is. */
+  sentence: string
+  /** What would change it, where something would. */
+  remedy?: string
+}
+
+/** Why a clause was judged as it was. Figures stand beside the sentence, on the rule and in the table. */
+export const reasonWords: Record<ReasonCode, ReasonWords> = {
+  'no-study': {
+    sentence: 'There is no study for this clause yet.',
+    remedy: 'Plan and register one.',
+  },
+  'one-reading': {
+    sentence: 'One reading says nothing about the spread.',
+    remedy: 'Take at least a second reading; the plan names the number that settles it.',
+  },
+  'zero-spread': {
+    sentence: 'All readings are the same: the spread hides below the resolution.',
+    remedy:
+      'Use a gauge with a finer resolution, or enter the resolution so that it can stand in for the spread.',
+  },
+  'reference-uncertainty-too-large': {
+    sentence: 'The uncertainty of the reference standard alone eats the margin.',
+    remedy: 'Use a reference standard with a smaller uncertainty.',
+  },
+  'not-representable': {
+    sentence: 'These values differ by less than can be computed with.',
+    remedy: 'Enter the readings as deviations from the reference value.',
+  },
+  'margin-undefined': {
+    sentence: 'The margin is not defined for this characteristic.',
+    remedy: 'Agree a margin as a value with its unit.',
+  },
+  'interval-inside-margin': { sentence: 'The whole interval lies inside the margin.' },
+  'interval-outside-margin': {
+    sentence: 'The whole interval lies outside the margin.',
+    remedy: 'Adjust or recalibrate the gauge, then repeat the study.',
+  },
+  'interval-crosses-margin': {
+    sentence: 'The interval reaches across the margin: the readings neither prove nor disprove it.',
+    remedy: 'More readings or less spread narrow the interval.',
+  },
+  'bias-within-allowed': {
+    sentence: 'The bias is smaller than the test can tell from zero with these readings.',
+  },
+  'bias-beyond-allowed': {
+    sentence: 'The bias is larger than the test allows with these readings.',
+    remedy: 'Adjust or recalibrate the gauge, then repeat the study.',
+  },
+  'design-as-agreed': { sentence: 'The study was made as agreed.' },
+  'too-few-readings': {
+    sentence: 'There are fewer readings than agreed.',
+    remedy: 'Register a study of the agreed size.',
+  },
+  'not-registered-beforehand': {
+    sentence: 'The study was not registered before its first reading.',
+    remedy: 'Register a new study, then take its readings.',
+  },
+  'too-many-attempts': {
+    sentence: 'More attempts were made on this task than agreed.',
+    remedy: 'Ask the other side to agree another attempt.',
+  },
+  'design-unknown': {
+    sentence: 'How the study was made is not known.',
+    remedy: 'Register a study, so that its size and date are on record.',
+  },
+  'resolution-fine-enough': { sentence: 'The resolution is within the agreed share.' },
+  'resolution-too-coarse': {
+    sentence: 'The resolution is coarser than agreed.',
+    remedy: 'Use a gauge with a finer resolution.',
+  },
+  'resolution-unknown': {
+    sentence: 'The resolution of the gauge is not known.',
+    remedy: 'Enter it with the gauge.',
+  },
+  'no-tolerance-width': {
+    sentence: 'The characteristic has no two-sided tolerance, so a share of it is not defined.',
+    remedy: 'Agree another base for this clause.',
+  },
+  'no-process-spread': {
+    sentence: 'The process variation is not known, so a share of it is not defined.',
+    remedy: 'Enter it with the characteristic.',
+  },
+  'in-calibration': { sentence: 'Everything was in calibration on the day of collection.' },
+  'gauge-out-of-calibration': {
+    sentence: 'The gauge was out of calibration on the day of collection.',
+    remedy: 'Have it calibrated, then repeat the study.',
+  },
+  'standard-out-of-calibration': {
+    sentence: 'The reference standard was out of calibration on the day of collection.',
+    remedy: 'Use a standard in calibration, then repeat the study.',
+  },
+  'gauge-calibration-unknown': {
+    sentence: 'There is no calibration on record for the gauge.',
+    remedy: 'Add its certificate.',
+  },
+  'standard-calibration-unknown': {
+    sentence: 'There is no calibration on record for the reference standard.',
+    remedy: 'Add its certificate.',
+  },
+  'calibration-unknown': {
+    sentence: 'There is no calibration on record for the day of collection.',
+    remedy: 'Add the certificates.',
+  },
+}
+
+/** What would likely settle a clause that is not shown. */
+export const settleWords: Record<SettleCode, string> = {
+  'more-readings': 'More readings would likely settle it.',
+  settled: 'Nothing more is needed.',
+  'no-study': 'A study would settle it.',
+  'one-reading': 'A second reading is needed before anything can be said.',
+  'finer-resolution': 'A gauge with a finer resolution would settle it.',
+  'better-standard': 'A reference standard with a smaller uncertainty is needed.',
+  'estimate-beyond-margin':
+    'More readings would rather show that it falls short: the estimate lies beyond the margin.',
+  'estimate-too-near-margin':
+    'The estimate lies so near the margin that no practical number of readings settles it.',
+  'margin-undefined': 'A margin must be agreed first.',
+  'not-an-equivalence': 'This clause has no number of readings that makes it surer.',
+}
