@@ -13,6 +13,7 @@ import {
   unique,
   uuid,
 } from 'drizzle-orm/pg-core'
+import type { StudyState } from '../../../contract/moves/study'
 import { instant, ownerColumn, ownerPolicy, primaryId } from '../../db/columns'
 import { files } from '../files/files.table'
 import { gauges, referenceStandards } from '../gauges/gauges.table'
@@ -47,7 +48,12 @@ export interface FrozenCharacteristic {
   processStandardDeviation: string | null
 }
 
-export type StoredStudyState = 'registered' | 'collecting' | 'computed' | 'abandoned'
+/** A row of a file that held no number where a reading was expected, left out by the person who stored it. */
+export interface LeftOutRow {
+  row: number
+  column: string
+  text: string
+}
 
 /** Working rows of a study: the supplier's alone. Customers see the frozen copy in a submission. */
 export const studies = pgTable(
@@ -60,7 +66,7 @@ export const studies = pgTable(
     kind: text().$type<'bias'>().notNull(),
     gaugeId: uuid().notNull(),
     standardId: uuid().notNull(),
-    state: text().$type<StoredStudyState>().notNull(),
+    state: text().$type<StudyState>().notNull(),
     registeredAt: instant().notNull(),
     registeredBy: uuid().notNull(),
     /** False for history taken over from elsewhere, which the other side is told. */
@@ -69,6 +75,8 @@ export const studies = pgTable(
     /** What the plan assumed: true bias and spread (unit of the readings) and the wanted chance. */
     plan: jsonb().$type<{ bias: string; standardDeviation: string; chance: number } | null>(),
     runSheetSeed: integer().notNull(),
+    /** Positions or times of day among which the run sheet deals the readings in random order. */
+    slots: text().array().notNull().default([]),
     unit: text().notNull(),
     /** Readings are values, or deviations from the standard's certified value. */
     measuredAs: text().$type<'value' | 'deviation'>().notNull(),
@@ -132,7 +140,7 @@ export const studyTasks = pgTable(
   ],
 )
 
-/** A revision of a study's readings; earlier revisions stay. */
+/** A revision of a study's readings, in the study's unit and as measured; earlier revisions stay. */
 export const studyData = pgTable(
   'study_data',
   {
@@ -141,10 +149,15 @@ export const studyData = pgTable(
     studyId: uuid().notNull(),
     revision: integer().notNull(),
     source: text().$type<'typed' | 'pasted' | 'uploaded'>().notNull(),
+    /** False while more readings are to follow; such a revision is kept but not judged. */
+    complete: boolean().notNull(),
+    /** Why readings that were judged before were replaced. */
+    reason: text(),
     fileId: uuid(),
     values: doublePrecision().array().notNull(),
     /** Each reading as it was entered. */
     texts: text().array().notNull(),
+    leftOut: jsonb().$type<LeftOutRow[]>().notNull().default([]),
     /** Code of the person who took the readings, as the other side sees it. */
     appraiser: text().notNull(),
     /** People of this organisation who took the readings; they may not sign the submission. */

@@ -1,0 +1,33 @@
+import type { Permission, Side } from '../access'
+
+/**
+ * One move of an aggregate's state machine. The table of an aggregate's moves is the one home of what is
+ * allowed: the service asks it before it changes a state, the apps offer only what it allows.
+ */
+export interface Move<State extends string, Precondition extends string = string> {
+  name: string
+  /** States it may start from; an empty list for the move that makes the aggregate. */
+  from: readonly State[]
+  to: State
+  /** Who may make it: the side, and the permission a member of that side must hold. */
+  side: Side
+  permission: Permission
+  /** Named conditions beyond the state, each checked by the service. */
+  preconditions: readonly Precondition[]
+  /** The type of the event it leaves in the record. */
+  event: string
+  /** What the button says. */
+  words: string
+}
+
+/** Moves that a state allows, for those who hold the permission. */
+export const possibleMoves = <M extends Move<string>>(
+  moves: readonly M[],
+  state: M['from'][number],
+  side: Side,
+  holds: (permission: Permission) => boolean,
+): M[] =>
+  moves.filter(
+    (move) =>
+      (move.from as readonly string[]).includes(state) && move.side === side && holds(move.permission),
+  )
