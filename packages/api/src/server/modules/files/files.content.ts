@@ -1,0 +1,58 @@
+import type { UploadedFile } from '../../http/route'
+import { invalidInput } from '../../errors'
+
+/** The types of file that the product takes; told by content, never by name. */
+export type ContentType = 'application/pdf' | 'image/png' | 'image/jpeg' | 'text/csv'
+
+const startsWith = (bytes: Buffer, ...head: number[]): boolean =>
+  head.every((byte, index) => bytes[index] === byte)
+
+/** The type that the first bytes of a file prove, or null where they prove none that is taken here. */
+export function contentTypeOf(bytes: Buffer): ContentType | null {
+  // Writers may put a few bytes before a PDF's header; readers look for it in the first kilobyte.
+  if (bytes.subarray(0, 1024).includes('%PDF-')) return 'application/pdf'
+  if (startsWith(bytes, 0x89, 0x50, 0x4e, 0x47, 0x0d, 0x0a, 0x1a, 0x0a)) return 'image/png'
+  if (startsWith(bytes, 0xff, 0xd8, 0xff)) return 'image/jpeg'
+  return isText(bytes) ? 'text/csv' : null
+}
+
+/** Text in UTF-8 or Latin-1: no control characters but tab and line ends. */
+function isText(bytes: Buffer): boolean {
+  return (
+    bytes.length > 0 &&
+    bytes.every((byte) => (byte >= 0x20 ? byte !== 0x7f : byte === 0x09 || byte === 0x0a || byte === 0x0d))
+  )
+}
+
+/** The certificate types. */
+export const certificateTypes = ['application/pdf', 'image/png', 'image/jpeg'] as const
+
+/** The type of an uploaded certificate; refuses anything that is no PDF, PNG or JPEG, whatever it is called. */
+export function certificateType(file: UploadedFile): ContentType {
+  const type = contentTypeOf(file.bytes)
+  if (type && (certificateTypes as readonly ContentType[]).includes(type)) return type
+  throw invalidInput([
+    {
+      path: 'body.file',
+      message: `${file.name} is no PDF, PNG or JPEG file, whatever its name says. Save the certificate as one of these and choose it again.`,
+    },
+  ])
+}
+
+/**
+ * A file's name as it is kept and shown: without folders, control characters, direction marks or quotes, and
+ * not so long that it cannot be saved again.
+ */
+export function cleanFileName(name: string): string {
+  const bare = (name.split(/[\\/]/).pop() ?? '')
+    .normalize('NFC')
+    // eslint-disable-next-line no-control-regex -- the control characters are what is removed
+    .replace(
+      /[\u0000-\u001f\u007f-\u009f\u200b-\u200f\u2028-\u202e\u2066-\u2069\ufeff\ud800-\udfff"<>|:*?]/g,
+      '',
+    )
+    .replace(/^[\s.]+|[\s.]+$/g, '')
+  if (bare.length <= 120) return bare || 'file'
+  const ending = /\.[A-Za-z0-9]{1,8}$/.exec(bare)?.[0] ?? ''
+  return bare.slice(0, 120 - ending.length) + ending
+}

@@ -1,0 +1,59 @@
+import type { Characteristic } from '@evenrule/metrology'
+import type { Tenant } from '../../db/tenant'
+import { notFound } from '../../errors'
+import type { FrozenCharacteristic } from '../studies/studies.table'
+import { selectCharacteristic } from './characteristics.repository'
+import { selectTask, type TaskRow } from './tasks.repository'
+import { convertText } from './units'
+
+/** One measuring task that this organisation may see, archived or not; 404 otherwise. */
+export async function taskById(tenant: Tenant, taskId: string): Promise<TaskRow> {
+  const row = await selectTask(tenant, taskId)
+  if (!row) throw notFound('measuring task')
+  return row
+}
+
+/** A characteristic as it stands now, in the shape that studies and submissions freeze. */
+export async function frozenCharacteristic(
+  tenant: Tenant,
+  characteristicId: string,
+): Promise<FrozenCharacteristic> {
+  const row = await selectCharacteristic(tenant, characteristicId)
+  if (!row) throw notFound('characteristic')
+  const { characteristic, part, revision } = row
+  return {
+    characteristicId: characteristic.id,
+    partNumber: part.number,
+    revision: revision.label,
+    number: characteristic.number,
+    name: characteristic.name,
+    nominal: characteristic.nominal,
+    lowerLimit: characteristic.lowerLimit,
+    upperLimit: characteristic.upperLimit,
+    unit: characteristic.unit,
+    class: characteristic.class,
+    processStandardDeviation: characteristic.processStandardDeviation,
+  }
+}
+
+/**
+ * The characteristic as the computation takes it, in its own unit. A gauge's resolution is given in the gauge's
+ * unit and converted exactly; only the final figures are doubles.
+ */
+export function toCharacteristic(
+  frozen: FrozenCharacteristic,
+  { resolution, gaugeUnit }: { resolution?: string; gaugeUnit?: string } = {},
+): Characteristic {
+  const { lowerLimit, upperLimit, processStandardDeviation, unit } = frozen
+  return {
+    unit,
+    tolerance: {
+      ...(lowerLimit === null ? {} : { lower: Number(lowerLimit) }),
+      ...(upperLimit === null ? {} : { upper: Number(upperLimit) }),
+    },
+    ...(processStandardDeviation === null
+      ? {}
+      : { processStandardDeviation: Number(processStandardDeviation) }),
+    ...(resolution === undefined ? {} : { resolution: convertText(resolution, gaugeUnit ?? unit, unit) }),
+  }
+}
