@@ -1,0 +1,94 @@
+import { mkdirSync } from 'node:fs'
+import { readFileSync } from 'node:fs'
+import { createRequire } from 'node:module'
+import { chromium, type Browser, type BrowserContext, type Page } from 'playwright-core'
+
+const need = (name: string): string => {
+  const value = process.env[name]
+  if (!value) throw new Error(`${name} is missing: run the tests through npm test.`)
+  return value
+}
+
+/** Addresses of the running instance that npm test started. */
+export const addresses = () => ({
+  supplier: need('E2E_SUPPLIER_URL'),
+  customer: need('E2E_CUSTOMER_URL'),
+  mail: need('E2E_MAIL_URL'),
+})
+
+/** Debian's Chromium, headless, with nothing that reaches for the network by itself. */
+export const launch = (): Promise<Browser> =>
+  chromium.launch({
+    executablePath: process.env.CHROMIUM_PATH ?? '/usr/bin/chromium',
+    args: [
+      '--no-sandbox',
+      '--disable-gpu',
+      '--disable-quic',
+      '--no-first-run',
+      '--disable-background-networking',
+      '--disable-component-update',
+      '--disable-sync',
+    ],
+  })
+
+/** Signs a person of the demonstration in through the provider's page, as they would. */
+export async function signIn(page: Page, app: string, name: string): Promise<void> {
+  await page.goto(app)
+  await page
+    .getByRole('link', { name: /^sign in/i })
+    .or(page.getByRole('button', { name: /^sign in/i }))
+    .first()
+    .click()
+  await chooseAtProvider(page, name)
+  await page.waitForURL((url) => url.href.startsWith(app) && url.pathname.includes('/organisations/'))
+}
+
+/** Picks a person on the provider's page; also used when a signature asks for a fresh sign-in. */
+export async function chooseAtProvider(page: Page, name: string): Promise<void> {
+  await page
+    .getByRole('button', { name: new RegExp(name) })
+    .first()
+    .click()
+}
+
+const axeSource = readFileSync(createRequire(import.meta.url).resolve('axe-core/axe.min.js'), 'utf8')
+
+interface AxeResult {
+  violations: { id: string; help: string; nodes: { target: unknown[]; failureSummary?: string }[] }[]
+}
+
+/** Accessibility faults of the page as it stands, one line each; empty when there is none. */
+export async function axeFaults(page: Page): Promise<string[]> {
+  // Through evaluate, which the content security policy does not govern.
+  await page.evaluate(axeSource)
+  const result = await page.evaluate(
+    async () =>
+      (await (globalThis as unknown as { axe: { run: (options: unknown) => Promise<unknown> } }).axe.run({
+        runOnly: ['wcag2a', 'wcag2aa', 'wcag21a', 'wcag21aa', 'best-practice'],
+      })) as never,
+  )
+  return (result as AxeResult).violations.flatMap((violation) =>
+    violation.nodes.map((node) => `${violation.id}: ${violation.help} at ${node.target.join(' ')}`),
+  )
+}
+
+/** Saves a picture for people to look at when the variable names a folder; nothing is compared with it. */
+export async function picture(page: Page, name: string): Promise<void> {
+  const folder = process.env.E2E_PICTURES
+  if (!folder) return
+  mkdirSync(folder, { recursive: true })
+  await page.screenshot({ path: `${folder}/${name}.png`, fullPage: true })
+}
+
+/** Errors a page wrote to its console or threw; a test expects none. */
+export function watchErrors(context: BrowserContext): string[] {
+  const errors: string[] = []
+  context.on('page', (page) => {
+    page.on('pageerror', (error) => errors.push(`${page.url()}: ${error.message}`))
+    page.on('console', (message) => {
+      if (message.type() === 'error' && !/status of (401|403|409|422)/.test(message.text()))
+        errors.push(`${page.url()}: ${message.text()}`)
+    })
+  })
+  return errors
+}
