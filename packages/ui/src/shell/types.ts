@@ -5,6 +5,10 @@ export interface NavItem {
   to: RouteLocationRaw
   label: string
   count?: number
+  /** Further pages that belong to the entry, such as those of reference standards to "Gauges". */
+  also?: RouteLocationRaw[]
+  /** Only the page itself belongs to the entry, not what lies below its path. */
+  exact?: boolean
 }
 
 /** Entries under a small heading, such as those of the organisation one works for. */

@@ -1,0 +1,6 @@
+export { createClient, provideClient, useApi, useSide, type Client } from './client'
+export { needsFreshSignIn, signInAfresh, signInUrl } from './freshSignIn'
+export { createEvenruleRouter, organisationPath, type EvenrulePages, type RouterOptions } from './router'
+export { rememberStores, resetOrganisationStores } from './stores'
+export { usePage, usePageStore, type PageOptions } from './usePage'
+export { useSession, useSessionStore } from './useSessionStore'

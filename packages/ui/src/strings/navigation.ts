@@ -1,0 +1,15 @@
+/** Entries of the left navigation. */
+export const navigationWords = {
+  waiting: 'Waiting on us',
+  decisions: 'For our decision',
+  customers: 'Customers',
+  suppliers: 'Suppliers',
+  parts: 'Parts',
+  studies: 'Studies',
+  submissions: 'Submissions',
+  gauges: 'Gauges',
+  agreements: 'Agreements',
+  record: 'Record',
+  members: 'Members',
+  messages: 'Messages',
+} as const
