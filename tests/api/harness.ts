@@ -15,6 +15,7 @@ import { withTenant, type Tenant } from '../../packages/api/src/server/db/tenant
 import type { SignedIn } from '../../packages/api/src/server/http/session'
 import { openEngines } from '../../packages/api/src/server/integrations/engines'
 import type { FileStore } from '../../packages/api/src/server/integrations/file-store'
+import { openIdentity } from '../../packages/api/src/server/integrations/oidc'
 import { sha256 } from '../../packages/api/src/server/modules/record/record.append'
 import { allRoutes } from '../../packages/api/src/server/routes'
 import type { Services } from '../../packages/api/src/server/services'
@@ -86,13 +87,19 @@ export async function startHarness() {
   }
   const routes = allRoutes({
     database,
-    config: {
+    config: { origins },
+    // Nothing answers at this address: signing in for real is proved in sign-in.test.ts.
+    identity: openIdentity({
       origins,
       oidc: {
-        issuer: 'http://oidc.test',
+        issuer: 'http://127.0.0.1:9',
         supplier: { id: 's', secret: 's' },
         customer: { id: 'c', secret: 'c' },
       },
+    }),
+    sessions: {
+      end: async (req) => void Object.assign(req, { session: {} }),
+      endAllOf: async () => 0,
     },
   })
   const apps = { supplier: appOf('supplier'), customer: appOf('customer') } satisfies Record<Side, Express>

@@ -6,7 +6,7 @@ import type { Side } from '../contract/access'
 import type { Database } from './db/database'
 import { mount } from './http/mount'
 import type { Route } from './http/route'
-import { problemHandler, unknownRoute } from './middleware/problem'
+import { problemHandler, tooMany, unknownRoute } from './middleware/problem'
 import { sameOrigin } from './middleware/same-origin'
 import type { Services } from './services'
 
@@ -64,20 +64,7 @@ const limiter = (perMinute: number): RequestHandler =>
         limit: perMinute,
         standardHeaders: 'draft-8',
         legacyHeaders: false,
-        handler: (_request, response) => {
-          response
-            .status(429)
-            .type('application/problem+json')
-            .send(
-              JSON.stringify({
-                type: 'urn:evenrule:problem:too-many',
-                title: 'too-many',
-                status: 429,
-                code: 'too-many',
-                detail: 'Too many requests in a short time. Wait a minute and try again.',
-              }),
-            )
-        },
+        handler: tooMany,
       })
 
 function securityHeaders(origin: string): RequestHandler {

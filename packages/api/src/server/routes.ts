@@ -1,14 +1,22 @@
 import type { Database } from './db/database'
 import type { Config } from './config'
 import type { Route } from './http/route'
+import type { Identity } from './integrations/oidc'
+import type { Sessions } from './integrations/sessions'
+import { signInRoutes } from './modules/sign-in/sign-in.routes'
 import { systemRoutes } from './modules/system/system.routes'
 
 export interface RouteDependencies {
   database: Database
-  config: Pick<Config, 'oidc' | 'origins'>
+  config: Pick<Config, 'origins'>
+  identity: Identity
+  sessions: Pick<Sessions, 'end' | 'endAllOf'>
 }
 
 /** Every route of the product, for the server and for the test that walks them all. */
-export function allRoutes({ database }: RouteDependencies): Route[] {
-  return [...systemRoutes(database)]
+export function allRoutes({ database, config, identity, sessions }: RouteDependencies): Route[] {
+  return [
+    ...systemRoutes(database),
+    ...signInRoutes({ database, identity, sessions, origins: config.origins }),
+  ]
 }

@@ -1,5 +1,6 @@
 import { randomUUID } from 'node:crypto'
-import type { ErrorRequestHandler, RequestHandler } from 'express'
+import escapeHtml from 'escape-html'
+import type { ErrorRequestHandler, Request, RequestHandler, Response } from 'express'
 import type { Logger } from 'pino'
 import type { Problem } from '../../contract/common'
 import { ProblemError } from '../errors'
@@ -16,9 +17,38 @@ export function problemHandler(logger: Logger): ErrorRequestHandler {
         'request failed',
       )
     }
-    response.status(problem.status).type('application/problem+json').send(JSON.stringify(problem))
+    sendProblem(request, response, problem)
   }
 }
+
+/** Sends problem details; somebody whose browser came here by a link gets them as a page to read. */
+export function sendProblem(request: Request, response: Response, problem: Problem): void {
+  response.status(problem.status)
+  if (isVisit(request)) response.type('html').send(problemPage(problem))
+  else response.type('application/problem+json').send(JSON.stringify(problem))
+}
+
+/** A browser that opens an address asks for a page first; our client and programs ask for JSON or anything. */
+const isVisit = (request: Request): boolean =>
+  request.method === 'GET' && request.accepts(['application/json', 'text/html']) === 'text/html'
+
+const problemPage = ({ detail, id }: Problem): string => `<!doctype html>
+<html lang="en">
+  <head>
+    <meta charset="utf-8" />
+    <meta name="viewport" content="width=device-width, initial-scale=1" />
+    <meta name="color-scheme" content="light dark" />
+    <title>What went wrong? · Evenrule</title>
+  </head>
+  <body>
+    <main>
+      <h1>What went wrong?</h1>
+      <p>${escapeHtml(detail ?? '')}</p>${id ? `\n      <p>${escapeHtml(id)}</p>` : ''}
+      <p><a href="/">Go to the front page</a></p>
+    </main>
+  </body>
+</html>
+`
 
 function toProblem(error: unknown): Problem {
   if (error instanceof ProblemError) {
@@ -90,9 +120,12 @@ function isUnavailable(error: unknown): boolean {
   return false
 }
 
-export const unknownRoute: RequestHandler = (_request, response) => {
-  response
-    .status(404)
-    .type('application/problem+json')
-    .send(JSON.stringify(plain('not-found', 404, 'There is no such address in this interface.')))
-}
+export const unknownRoute: RequestHandler = (request, response) =>
+  sendProblem(request, response, plain('not-found', 404, 'There is no such address in this interface.'))
+
+export const tooMany: RequestHandler = (request, response) =>
+  sendProblem(
+    request,
+    response,
+    plain('too-many', 429, 'Too many requests in a short time. Wait a minute and try again.'),
+  )

@@ -1,0 +1,58 @@
+import { sql } from 'drizzle-orm'
+import type { Role } from '../../../contract/access'
+import { newId } from '../../db/columns'
+import type { Database } from '../../db/database'
+import { withPerson } from '../../db/tenant'
+import type { Identified } from '../../integrations/oidc'
+import { securityEvents } from './sign-in.table'
+
+export type SecurityEventKind = 'sign-in' | 'sign-out' | 'sign-out-everywhere' | 'sign-in-refused'
+
+/** Finds or makes the person of a verified sign-in, keyed by issuer and subject; returns their id. */
+export async function personOf(database: Database, identified: Identified, at: string): Promise<string> {
+  const { issuer, subject, email, emailVerified, name } = identified
+  const { rows } = await database.execute<{ id: string }>(
+    sql`select sign_in_person(${issuer}, ${subject}, ${email}, ${emailVerified}, ${name}, ${at}::timestamptz) as id`,
+  )
+  const id = rows[0]?.id
+  if (!id) throw new Error('The database returned no person for a sign-in.')
+  return id
+}
+
+export interface MembershipRow extends Record<string, unknown> {
+  org_id: string
+  org_name: string
+  time_zone: string
+  roles: Role[]
+  supplies: boolean
+  buys: boolean
+}
+
+/** The organisations of a person whose membership has not ended by `today` (a calendar date). */
+export async function membershipsOf(
+  database: Database,
+  userId: string,
+  today: string,
+): Promise<MembershipRow[]> {
+  return withPerson(database, userId, async (tx) => {
+    const { rows } = await tx.execute<MembershipRow>(
+      sql`select * from memberships_of_person(${userId}::uuid, ${today}::date)`,
+    )
+    return rows
+  })
+}
+
+/** Appends to the log of sign-ins, sign-outs and refusals; never with tokens. */
+export async function logSecurityEvent(
+  database: Database,
+  event: { kind: SecurityEventKind; at: string; userId?: string; detail: Record<string, string> },
+): Promise<void> {
+  await database.insert(securityEvents).values({
+    id: newId(),
+    at: event.at,
+    kind: event.kind,
+    userId: event.userId ?? null,
+    orgId: null,
+    detail: event.detail,
+  })
+}
