@@ -1,4 +1,15 @@
-import { chownSync, existsSync, mkdirSync, readFileSync, renameSync, rmSync, statSync } from 'node:fs'
+import {
+  chownSync,
+  existsSync,
+  mkdirSync,
+  readFileSync,
+  readdirSync,
+  readlinkSync,
+  renameSync,
+  rmSync,
+  statSync,
+  writeFileSync,
+} from 'node:fs'
 import { spawnSync } from 'node:child_process'
 import { dirname, join } from 'node:path'
 import { host } from '../config.mjs'
@@ -44,42 +55,62 @@ function requireOwner(folder, user) {
   }
 }
 
+/** Server processes that work in a cluster's folder, which is where PostgreSQL makes them all live. */
+function processesIn(folder) {
+  return readdirSync('/proc')
+    .filter((name) => /^\d+$/.test(name))
+    .flatMap((pid) => {
+      try {
+        const ours =
+          readlinkSync(`/proc/${pid}/cwd`) === folder &&
+          readFileSync(`/proc/${pid}/comm`, 'utf8').trim() === 'postgres'
+        return ours ? [identify(Number(pid))].filter(Boolean) : []
+      } catch {
+        return []
+      }
+    })
+}
+
 /**
- * Ends a server that still holds the cluster though no note tells of it, and removes its lock file when the
- * number in it has passed to another program, which PostgreSQL itself cannot tell.
+ * Ends a server that still holds the cluster though no note tells of it, whole or what a kill left of it, and
+ * removes its lock files: PostgreSQL takes them for valid when the number in them has passed to another program,
+ * or when nobody has collected the dead process yet.
  */
 async function clearLock(folder) {
   const lock = join(folder, 'postmaster.pid')
-  if (!existsSync(lock)) return
-  const noted = identify(Number(readFileSync(lock, 'utf8').split('\n')[0]))
-  if (noted?.command.includes(folder)) await stopProcess(noted, { signal: 'SIGINT', seconds: 60 })
-  else rmSync(lock, { force: true })
+  const main = existsSync(lock) ? Number(readFileSync(lock, 'utf8').split('\n')[0]) : undefined
+  const server = processesIn(folder).find(({ pid }) => pid === main)
+  if (server) await stopProcess(server, { signal: 'SIGINT', seconds: 60 })
+  for (const orphan of processesIn(folder)) await stopProcess(orphan, { seconds: 5 })
+  const locks = readdirSync(folder).filter(
+    (name) => name === 'postmaster.pid' || /^\.s\.PGSQL\..*/.test(name),
+  )
+  for (const name of locks) rmSync(join(folder, name), { force: true })
 }
 
 async function makeCluster(folder, { binaries, user, secrets, log, signal }) {
   // Made under another name first: a start that is cut off here leaves no half cluster behind.
   const draft = `${folder}.new`
-  rmSync(draft, { recursive: true, force: true })
+  const passwordFile = `${folder}.password`
+  for (const path of [draft, passwordFile]) rmSync(path, { recursive: true, force: true })
   mkdirSync(draft, { recursive: true, mode: 0o700 })
-  if (user.uid !== undefined) chownSync(draft, user.uid, user.gid)
-  const options = [
-    '--username=postgres',
-    '--auth=scram-sha-256',
-    '--pwfile=/dev/stdin',
-    '--encoding=UTF8',
-    '--locale=C.UTF-8',
-  ]
+  writeFileSync(passwordFile, secrets.postgres.admin, { mode: 0o600, flag: 'wx' })
+  if (user.uid !== undefined) for (const path of [draft, passwordFile]) chownSync(path, user.uid, user.gid)
+  const access = ['--username=postgres', '--auth=scram-sha-256', `--pwfile=${passwordFile}`]
   // Names sort as people expect, whatever the system's own languages are.
-  const order = ['--locale-provider=icu', '--icu-locale=und']
-  await runTask(join(binaries, 'initdb'), ['-D', draft, '--data-checksums', ...options, ...order], {
-    ...user,
-    cwd: dirname(folder),
-    env: { PATH: process.env.PATH, LC_ALL: 'C.UTF-8' },
-    input: `${secrets.postgres.admin}\n`,
-    log,
-    what: 'Making the database cluster',
-    signal,
-  })
+  const language = ['--encoding=UTF8', '--locale=C.UTF-8', '--locale-provider=icu', '--icu-locale=und']
+  try {
+    await runTask(join(binaries, 'initdb'), ['-D', draft, '--data-checksums', ...access, ...language], {
+      ...user,
+      cwd: dirname(folder),
+      env: { PATH: process.env.PATH, LC_ALL: 'C.UTF-8' },
+      log,
+      what: 'Making the database cluster',
+      signal,
+    })
+  } finally {
+    rmSync(passwordFile)
+  }
   renameSync(draft, folder)
 }
 
