@@ -75,12 +75,15 @@ export interface Judgement {
   reason: Reason
 }
 
+/** The part of a study's result that verdicts rest on. */
+export type BiasFigures = Pick<BiasOutput, 'n' | 'bias' | 'standardDeviation' | 'reference'>
+
 /** Everything a clause is judged on; the characteristic's limits are in its unit. */
 export interface JudgementFacts {
   characteristic: Characteristic
   design: DesignFacts | null
   calibration: CalibrationFacts | null
-  study: BiasOutput | null
+  study: BiasFigures | null
   coverageFactor: number
 }
 

@@ -27,9 +27,10 @@ export interface SummaryOutput {
 export interface BiasOutput {
   kind: 'bias'
   n: number
-  mean: number
+  /** Mean and bias are null only where they are beyond what a number can hold. */
+  mean: number | null
   reference: { value: number; standardUncertainty: number | null }
-  bias: number
+  bias: number | null
   standardDeviation: number | null
   standardError: number | null
   degreesOfFreedom: number
@@ -37,7 +38,12 @@ export interface BiasOutput {
   t: number | null
   pValue: number | null
   interval: Interval | null
-  zeroTest: { alpha: number; criticalValue: number | null; allowedBias: number | null; accepts: boolean | null }
+  zeroTest: {
+    alpha: number
+    criticalValue: number | null
+    allowedBias: number | null
+    accepts: boolean | null
+  }
   equivalence: {
     alpha: number
     margin: number | null

@@ -1,0 +1,101 @@
+import { InvalidInput } from '../input/invalid-input'
+import { Reader } from '../input/reader'
+import type {
+  Characteristic,
+  Clause,
+  ClauseDescriptor,
+  ClauseOf,
+  ClauseType,
+  Judgement,
+  JudgementFacts,
+  Problem,
+  ProblemCode,
+} from '../types'
+import { problemCodes } from '../types'
+import { biasEquivalence } from './bias-equivalence'
+import { biasZeroTest } from './bias-zero-test'
+import { calibrationInDate } from './calibration-in-date'
+import { designMinimum } from './design-minimum'
+import { readField } from './fields'
+import { resolutionShare } from './resolution-share'
+
+/** Every clause type there is. A new one is a file beside this and a line here. */
+export const clauseDescriptors: { [T in ClauseType]: ClauseDescriptor<T> } = {
+  'design-minimum': designMinimum,
+  'resolution-share': resolutionShare,
+  'calibration-in-date': calibrationInDate,
+  'bias-equivalence': biasEquivalence,
+  'bias-zero-test': biasZeroTest,
+}
+
+export const clauseTypes = Object.keys(clauseDescriptors) as ClauseType[]
+
+export function clauseDescriptor<T extends ClauseType>(clause: ClauseOf<T>): ClauseDescriptor<T> {
+  return clauseDescriptors[clause.type as T]
+}
+
+/** Subject and measure: of two clauses with the same key the narrower scope's replaces the other. */
+export function clauseKey(clause: Clause): string {
+  const { subject, measure } = clauseDescriptors[clause.type]
+  return `${subject}/${measure}`
+}
+
+/** The one place where a verdict is made. */
+export function judgeClause(clause: Clause, facts: JudgementFacts): Judgement {
+  return clauseDescriptor(clause).judge(clause, facts)
+}
+
+/** Reads a clause; the first thing wrong with it is an `InvalidInput`. */
+export function readClause(reader: Reader): Clause {
+  const { type, parameters, fields } = openClause(reader)
+  return assembled(type, collect(fields, (field) => readField(field, parameters)))
+}
+
+/** Reads a clause from unknown data, such as a request body or a stored agreement. */
+export function parseClause(value: unknown, path = 'clause'): Clause {
+  return readClause(Reader.of(value, path))
+}
+
+/** Everything that keeps a clause, as written, from being agreed for a characteristic; empty when nothing does. */
+export function clauseProblems(value: unknown, characteristic: Characteristic): Problem[] {
+  const problems: Problem[] = []
+  const attempt = <V>(read: () => V): V | undefined => {
+    try {
+      return read()
+    } catch (error) {
+      if (!(error instanceof InvalidInput)) throw error
+      problems.push({ code: asProblemCode(error.code), path: error.path, message: error.message })
+      return undefined
+    }
+  }
+  const opened = attempt(() => openClause(Reader.of(value)))
+  if (!opened) return problems
+  const { type, parameters, fields } = opened
+  const values = collect(fields, (field) => attempt(() => readField(field, parameters)))
+  for (const path of parameters.unknownFields()) {
+    problems.push({ code: 'unknown-field', path, message: 'This field is not part of the clause.' })
+  }
+  if (problems.length > 0) return problems
+  const clause = assembled(type, values)
+  return clauseDescriptor(clause).check(clause, characteristic)
+}
+
+function openClause(reader: Reader) {
+  const type = reader.choice('type', clauseTypes)
+  return { type, parameters: reader.object('parameters'), fields: clauseDescriptors[type].fields }
+}
+
+function collect<F extends { name: string }>(fields: readonly F[], read: (field: F) => unknown) {
+  const given = fields.map((field) => [field.name, read(field)] as const)
+  return Object.fromEntries(given.filter(([, value]) => value !== undefined))
+}
+
+/** The fields of a type, read by their descriptors, are the parameters of that type. */
+function assembled(type: ClauseType, parameters: Record<string, unknown>): Clause {
+  return { type, parameters } as unknown as Clause
+}
+
+/** Codes of unreadable input that are no problem code of a clause are told as a number that is none. */
+function asProblemCode(code: string): ProblemCode {
+  return problemCodes.find((known) => known === code) ?? 'not-a-number'
+}

@@ -1,0 +1,23 @@
+import exp from '@stdlib/math-base-special-exp'
+import ln from '@stdlib/math-base-special-ln'
+import { scaledGamma } from './scaled-gamma'
+
+/**
+ * ln of the density of V = s/σ, the sample standard deviation over the true one, with df degrees of freedom, less its
+ * constant: df·(ln v − (v² − 1)/2) − ln v. Domain: v > 0.
+ */
+export function logChiShape(v: number, df: number): number {
+  return df * (ln(v) - 0.5 * (v - 1) * (v + 1)) - ln(v)
+}
+
+/** The constant of that density: √(df/π) / Γ*(df/2). */
+export function chiConstant(df: number): number {
+  return Math.sqrt(df / pi) / scaledGamma(df / 2)
+}
+
+/** Density of V = s/σ at v > 0. */
+export function chiDensity(v: number, df: number): number {
+  return chiConstant(df) * exp(logChiShape(v, df))
+}
+
+const pi = 3.141592653589793

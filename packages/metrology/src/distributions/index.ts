@@ -1,0 +1,12 @@
+/**
+ * Distribution functions, each with both tails. Only deterministic functions of @stdlib and arithmetic are used, so
+ * that Node and every browser give the same bits. Proved on reference grids in tests/reference, the seams too.
+ */
+export { betaDistributionTails, betaQuantile } from './beta'
+export { chiConstant, chiDensity, logChiShape } from './chi-density'
+export { chiSquareQuantile, chiSquareTails } from './chi-square'
+export { fQuantile, fTails } from './f'
+export type { Tails } from './incomplete-gamma'
+export { noncentralityAt, noncentralTQuantile, noncentralTTails } from './noncentral-t'
+export { normalCdf, normalQuantile, normalUpperTail } from './normal'
+export { tQuantile, tTails, tTwoSided } from './student-t'

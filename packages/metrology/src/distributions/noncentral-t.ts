@@ -1,0 +1,112 @@
+import exp from '@stdlib/math-base-special-exp'
+import ln from '@stdlib/math-base-special-ln'
+import { chiConstant, logChiShape } from './chi-density'
+import { chiSquareQuantile } from './chi-square'
+import { findRisingRoot } from './find-root'
+import { integrate } from './gauss-legendre'
+import type { Tails } from './incomplete-gamma'
+import { logNormalCdf, normalHazard, normalQuantile } from './normal'
+import { tQuantile, tTails } from './student-t'
+
+/**
+ * Both tails of the noncentral t distribution: T = (Z + noncentrality)/V with Z standard normal and V = s/σ on df > 0
+ * degrees of freedom, any real t. P(T ≤ t) = ∫ g(v)·Φ(t·v − noncentrality) dv is integrated over ln v around its one
+ * peak, so that far tails keep their relative accuracy (about 1e-12). The definition is that of Johnson, Kotz and
+ * Balakrishnan, Continuous Univariate Distributions 2 (1995), chapter 31.
+ */
+export function noncentralTTails(t: number, df: number, noncentrality: number): Tails {
+  if (noncentrality === 0) return tTails(t, df)
+  const lower = below(t, df, noncentrality)
+  if (lower <= 0.5) return { lower, upper: 1 - lower }
+  const upper = below(-t, df, -noncentrality)
+  return { lower: 1 - upper, upper }
+}
+
+/** P(T ≤ t), accurate relatively where it is small. */
+function below(t: number, df: number, shift: number): number {
+  // ln of the integrand over u = ln v, but for the constant of the density: one peak for every t and shift.
+  const height = (u: number): number => {
+    const v = exp(u)
+    return logChiShape(v, df) + u + logNormalCdf(t * v - shift)
+  }
+  const slope = (u: number): number => {
+    const v = exp(u)
+    return df * (1 - v) * (1 + v) + t * v * normalHazard(t * v - shift)
+  }
+  const peak = findRisingRoot((u) => -slope(u), 0, 0.5, 1e-3)
+  const top = height(peak)
+  const left = fallPoint(height, peak, -1 / Math.sqrt(df))
+  const right = fallPoint(height, peak, 1 / Math.sqrt(df))
+  const points = [...panels(left, peak, 7), ...panels(peak, right, 5), right]
+  const width = Math.min(peak - left, right - peak) / 5
+  const sharp = transitionPoints(t, shift, left, right, width)
+  const ascending = [...points, ...sharp].sort((a, b) => a - b)
+  const area = integrate((u) => exp(height(u) - top), ascending)
+  return exp(top + ln(area * chiConstant(df)))
+}
+
+/** Where the integrand has fallen to about 10⁻¹⁸ of its peak, going out from it in the direction of `step`. */
+function fallPoint(height: (u: number) => number, peak: number, step: number): number {
+  const floor = height(peak) - 42
+  let inner = 0
+  let outer = step
+  while (height(peak + outer) > floor) {
+    inner = outer
+    outer *= 2
+  }
+  for (let i = 0; i < 12; i++) {
+    const middle = 0.5 * (inner + outer)
+    if (height(peak + middle) > floor) inner = middle
+    else outer = middle
+  }
+  return peak + outer
+}
+
+function panels(from: number, to: number, count: number): number[] {
+  return Array.from({ length: count }, (_, i) => from + ((to - from) * i) / count)
+}
+
+/** Break points inside the step of Φ(t·v − shift), where it is sharper than the panels are wide. */
+function transitionPoints(t: number, shift: number, left: number, right: number, width: number): number[] {
+  const points: number[] = []
+  for (let x = -9; x <= 9; x += 1.5) {
+    const v = (x + shift) / t
+    if (!(v > 0)) continue
+    const u = ln(v)
+    if (u > left && u < right && 1.5 / Math.abs(t * v) < width) points.push(u)
+  }
+  return points
+}
+
+/**
+ * Quantile of the noncentral t distribution for a chance strictly between 0 and 1. Starts from the normal
+ * approximation with the mean and spread of (Z + noncentrality)/V.
+ */
+export function noncentralTQuantile(p: number, df: number, noncentrality: number): number {
+  if (noncentrality === 0) return tQuantile(p, df)
+  const useLower = p <= 0.5
+  const target = ln(useLower ? p : 1 - p)
+  const gap = (t: number): number => {
+    const tails = noncentralTTails(t, df, noncentrality)
+    return useLower ? ln(tails.lower) - target : target - ln(tails.upper)
+  }
+  const width = Math.sqrt(1 + (0.5 * noncentrality * noncentrality) / df)
+  return findRisingRoot(gap, noncentrality + normalQuantile(p) * width, 0.2 * width)
+}
+
+/**
+ * The noncentrality at which `t` is the quantile of the chance `p`: P(T ≤ t) falls from 1 to 0 as the noncentrality
+ * grows, so there is one. For p = confidence it is the one-sided lower confidence bound of the noncentrality.
+ */
+export function noncentralityAt(t: number, df: number, p: number): number {
+  // The normal part no longer counts: T is noncentrality / V, and V² · df is chi-square.
+  if (Math.abs(t) > 1e7) return t * Math.sqrt(chiSquareQuantile(t > 0 ? 1 - p : p, df) / df)
+  const useLower = p <= 0.5
+  const target = ln(useLower ? p : 1 - p)
+  const gap = (noncentrality: number): number => {
+    const tails = noncentralTTails(t, df, noncentrality)
+    return useLower ? target - ln(tails.lower) : ln(tails.upper) - target
+  }
+  const width = Math.sqrt(1 + (0.5 * t * t) / df)
+  return findRisingRoot(gap, t - normalQuantile(p) * width, 0.2 * width, 1e-13)
+}

@@ -1,0 +1,73 @@
+import type { Reader } from '../input/reader'
+import { readRule, ruleDescriptor } from '../rules'
+import { chancesOf } from '../rules/chances'
+import type { IncentiveChange, IncentivesOutput, Rule, Truth } from '../types'
+import { readDesign, readTruth } from './operating-characteristic'
+
+/** A change of a chance up to this counts as none: it is within the accuracy of the chances. */
+const threshold = 1e-9
+
+/**
+ * Whether the chance to meet a rule rises with twice the spread, falls with twice the readings, or rises at half the
+ * risk level. Computed from the exact chances, at the truth given or, without one, at the truth among those the rule
+ * is meant to accept where the wrong incentive is strongest.
+ */
+export function incentives(rule: Rule, n: number, truth?: Truth): IncentivesOutput {
+  const truths = truth ? [truth] : truthsMeantToBeAccepted(rule)
+  const stricterRule = ruleDescriptor(rule).stricter(rule) as Rule | null
+  const now = chancesOf(rule, n)
+  const before = truths.map((at) => now(at).meets)
+  const strongest = (change: IncentiveChange, rises: boolean, changed: (at: Truth) => number) => {
+    let worst = { change, truth: truths[0] as Truth, before: 0, after: 0 }
+    let largest = -Infinity
+    truths.forEach((at, index) => {
+      const shown = { change, truth: at, before: before[index] ?? 0, after: changed(at) }
+      const wrong = rises ? shown.after - shown.before : shown.before - shown.after
+      if (wrong > largest) [worst, largest] = [shown, wrong]
+    })
+    return { shown: worst, wrong: largest > threshold }
+  }
+  const worse = strongest('worse-repeatability', true, (at) => now(doubled(at)).meets)
+  const moreReadings = chancesOf(rule, 2 * n)
+  const more = strongest('more-readings', false, (at) => moreReadings(at).meets)
+  const atHalfTheRisk = stricterRule && chancesOf(stricterRule, n)
+  const stricter = atHalfTheRisk && strongest('stricter-risk', true, (at) => atHalfTheRisk(at).meets)
+  return {
+    kind: 'incentives',
+    worseRepeatabilityHelps: worse.wrong,
+    moreReadingsHurt: more.wrong,
+    stricterRiskHelps: stricter ? stricter.wrong : null,
+    shown: [worse.shown, more.shown, ...(stricter ? [stricter.shown] : [])],
+    warnings: [],
+  }
+}
+
+const doubled = ({ bias, standardDeviation }: Truth): Truth => ({
+  bias,
+  standardDeviation: 2 * standardDeviation,
+})
+
+/**
+ * Biases from zero to just inside the margin, each with spreads up to the largest the rule is meant to accept; for a
+ * rule without a margin biases up to three standard deviations, whose size does not matter then.
+ */
+function truthsMeantToBeAccepted(rule: Rule): Truth[] {
+  const { margin, largestSpread } = ruleDescriptor(rule)
+  const inside = margin(rule)
+  const steps = 20
+  if (inside === null) {
+    return Array.from({ length: 3 * steps + 1 }, (_, i) => ({ bias: i / steps, standardDeviation: 1 }))
+  }
+  const shares = [0.02, 0.05, 0.1, 0.2, 0.3, 0.4, 0.5, 0.65, 0.8, 1]
+  return Array.from({ length: steps }, (_, i) => (inside * i) / steps).flatMap((bias) => {
+    const largest = largestSpread(rule, bias) ?? inside
+    return shares.map((share) => ({ bias, standardDeviation: share * largest }))
+  })
+}
+
+export function readIncentives(reader: Reader): IncentivesOutput {
+  const rule = readRule(reader)
+  const n = readDesign(reader)
+  const truth = reader.optionalObject('truth')
+  return incentives(rule, n, truth && readTruth(truth))
+}

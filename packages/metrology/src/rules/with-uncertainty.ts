@@ -1,0 +1,25 @@
+import { uncertaintyBand } from './band'
+import type { RuleDescriptor } from './descriptor'
+
+/**
+ * Bias plus its expanded uncertainty within a margin: |bias| + k·√(s²/n + u²) ≤ margin meets, |bias| less the
+ * expanded uncertainty above the margin falls short. The error of the reference value is random over certificates.
+ */
+export const withUncertainty: RuleDescriptor<'with-uncertainty'> = {
+  type: 'with-uncertainty',
+  read: (reader) => ({
+    type: 'with-uncertainty',
+    margin: reader.number('margin', { above: 0 }),
+    referenceStandardUncertainty: reader.number('referenceStandardUncertainty', { least: 0 }),
+    coverageFactor: reader.optionalNumber('coverageFactor', { above: 0 }) ?? 2,
+  }),
+  accepts: (rule, n) =>
+    uncertaintyBand(rule.margin, -rule.coverageFactor, n, rule.referenceStandardUncertainty),
+  refusesOutside: (rule, n) =>
+    uncertaintyBand(rule.margin, rule.coverageFactor, n, rule.referenceStandardUncertainty),
+  referenceUncertainty: (rule) => rule.referenceStandardUncertainty,
+  margin: ({ margin }) => margin,
+  largestSpread: ({ margin }) => margin,
+  stricter: () => null,
+  powerOf: 'meets',
+}
