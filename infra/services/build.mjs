@@ -102,6 +102,7 @@ export class Builder {
       readJson(stamp)?.[name] === made && existsSync(join(build, target.proof))
     if (current(folder.build, file.stamp)) return
     mkdirSync(folder.build, { recursive: true })
+    linkPackages(root, folder.build)
     const usual = join(root, '.data/build')
     if (current(usual, join(usual, 'stamp.json'))) {
       // A second instance, such as the one of the tests, takes over what the first has built.
@@ -166,7 +167,6 @@ async function bundleServer({ root, folder }) {
   } catch (error) {
     throw new Problem(`The server cannot be built:\n${error.message}`)
   }
-  linkPackages(root, folder.build)
 }
 
 /** Bundles outside the checkout find the packages through a link, as those inside do by their place. */

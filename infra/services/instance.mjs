@@ -125,6 +125,12 @@ export class Instance {
     this.#say(`PostgreSQL answers on port ${this.#config.port.postgres}.`)
   }
 
+  /** Installs the npm packages when they are missing or not those that the lock file asks for. */
+  async packages() {
+    const log = join(this.#config.folder.log, 'packages.log')
+    await ensurePackages({ root: this.#config.root, log, say: this.#say, signal: this.#abort.signal })
+  }
+
   /** Runs a bundled program to its end. */
   async run(name, what, environment = {}) {
     await runTask(process.execPath, this.#script(name), {
@@ -144,8 +150,7 @@ export class Instance {
   }
 
   async #code() {
-    const log = join(this.#config.folder.log, 'packages.log')
-    await ensurePackages({ root: this.#config.root, log, say: this.#say, signal: this.#abort.signal })
+    await this.packages()
     await this.#builder.server()
     await this.#fakes()
   }

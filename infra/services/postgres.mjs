@@ -88,7 +88,7 @@ async function clearLock(folder) {
   for (const name of locks) rmSync(join(folder, name), { force: true })
 }
 
-async function makeCluster(folder, { binaries, user, secrets, log, signal }) {
+async function makeCluster(folder, { binaries, user, secrets, log, signal, durable }) {
   // Made under another name first: a start that is cut off here leaves no half cluster behind.
   const draft = `${folder}.new`
   const passwordFile = `${folder}.password`
@@ -96,7 +96,12 @@ async function makeCluster(folder, { binaries, user, secrets, log, signal }) {
   mkdirSync(draft, { recursive: true, mode: 0o700 })
   writeFileSync(passwordFile, secrets.postgres.admin, { mode: 0o600, flag: 'wx' })
   if (user.uid !== undefined) for (const path of [draft, passwordFile]) chownSync(path, user.uid, user.gid)
-  const access = ['--username=postgres', '--auth=scram-sha-256', `--pwfile=${passwordFile}`]
+  // The tests of a cluster that is thrown away connect as any role; one that is kept asks for passwords.
+  const access = [
+    '--username=postgres',
+    `--auth=${durable ? 'scram-sha-256' : 'trust'}`,
+    `--pwfile=${passwordFile}`,
+  ]
   // Names sort as people expect, whatever the system's own languages are.
   const language = ['--encoding=UTF8', '--locale=C.UTF-8', '--locale-provider=icu', '--icu-locale=und']
   try {
@@ -142,7 +147,7 @@ export async function preparePostgres(config, secrets, { say, signal, durable = 
         ? 'Making a private database cluster.'
         : `Making a private database cluster in ${folder}, since the database's user cannot reach ${config.data}.`,
     )
-    await makeCluster(folder, { binaries, user, secrets, log, signal })
+    await makeCluster(folder, { binaries, user, secrets, log, signal, durable })
   }
   const sockets = folder.length <= longestSocketFolder && !/[,"']/.test(folder) ? folder : ''
   const settings = [
