@@ -118,4 +118,7 @@ export class MailStore {
   }
 }
 
-const addressText = (address: AddressObject | undefined) => address?.text ?? '(nobody)'
+function addressText(sender: AddressObject | undefined): string {
+  const { name, address } = sender?.value[0] ?? {}
+  return name ? `${name} <${address ?? ''}>` : (address ?? '(nobody)')
+}
