@@ -122,7 +122,13 @@ export class Builder {
       [join(root, 'node_modules/vite/bin/vite.js'), 'build', '--logLevel', 'warn'],
       {
         cwd: root,
-        env: { ...process.env, NODE_ENV: 'production', EVENRULE_APP: name, EVENRULE_DIST: outcome },
+        env: {
+          ...process.env,
+          NODE_ENV: 'production',
+          NO_COLOR: '1',
+          EVENRULE_APP: name,
+          EVENRULE_DIST: outcome,
+        },
         log: join(folder.log, `build-${name}.log`),
         what: `Building the ${name} app`,
         signal: this.#tools.signal,

@@ -15,13 +15,17 @@ export function openLog(path) {
   return { file, since: statSync(path).size }
 }
 
-/** The last lines that a log holds from a place on. */
-export function lastLines(path, since, count = 15) {
+/** The last lines that a log holds from a place on, without the stack frames, which only the log's reader needs. */
+export function lastLines(path, since, count = 20) {
   const size = statSync(path).size
   const from = Math.max(since, size - 16_384)
   const buffer = Buffer.alloc(size - from)
   const file = openSync(path, 'r')
   readSync(file, buffer, 0, buffer.length, from)
   closeSync(file)
-  return buffer.toString('utf8').trimEnd().split('\n').slice(-count).join('\n')
+  const lines = buffer.toString('utf8').trimEnd().split('\n')
+  return lines
+    .filter((line) => !/^\s+at /.test(line))
+    .slice(-count)
+    .join('\n')
 }
