@@ -29,7 +29,7 @@ function asRoot() {
 export async function installPackages(packages, { what, log, say, signal }) {
   if (!onPath('apt-get')) {
     throw new Problem(
-      `${what} is missing, and without apt-get it cannot be installed from here; please install it (Debian: ${packages.join(' ')}).`,
+      `Without apt-get ${what} cannot be installed from here; please install it (Debian: ${packages.join(' ')}).`,
     )
   }
   const root = asRoot()

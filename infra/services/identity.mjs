@@ -28,6 +28,17 @@ export function identify(pid) {
   }
 }
 
+/**
+ * What tells a child that has just been started from others. For a moment after the start the system does not know
+ * its command line yet, and a note without it would fit nothing later.
+ */
+export function identifyNew(pid) {
+  const end = performance.now() + 1000
+  let found = identify(pid)
+  while (found && !found.command && performance.now() < end) found = identify(pid)
+  return found
+}
+
 /** Whether the very process that was noted still runs. */
 export function isAlive(noted) {
   const now = identify(noted.pid)

@@ -16,7 +16,7 @@ export function openLog(path) {
 }
 
 /** The last lines that a log holds from a place on, without the stack frames, which only the log's reader needs. */
-export function lastLines(path, since, count = 20) {
+export function lastLines(path, since, count = 40) {
   const size = statSync(path).size
   const from = Math.max(since, size - 16_384)
   const buffer = Buffer.alloc(size - from)

@@ -24,6 +24,13 @@ export function tell(text) {
 /** Ends the program after a failure: a plain line for a Problem, the whole stack for anything unforeseen. */
 export function fail(error) {
   if (error instanceof Stopped) return
-  process.stderr.write(`${error instanceof Problem ? error.message : (error?.stack ?? error)}\n`)
+  process.stderr.write(`${inWords(error)}\n`)
   process.exitCode = 1
+}
+
+function inWords(error) {
+  if (error instanceof Problem) return error.message
+  const refused = error?.code === 'EACCES' || error?.code === 'EPERM'
+  if (refused && error.path) return `This user may not use ${error.path}; start Evenrule as the one who owns it.`
+  return error?.stack ?? error
 }

@@ -6,7 +6,7 @@ import { join } from 'node:path'
 import { afterAll, describe, expect, it } from 'vitest'
 import { ports, readConfig } from '../config.mjs'
 import { chooseStages } from '../tests/stages.mjs'
-import { identify, isAlive, stopProcess } from './identity.mjs'
+import { identify, identifyNew, isAlive, stopProcess } from './identity.mjs'
 import { satisfies } from './node-version.mjs'
 import { freePorts, isFree, requireFreePorts } from './ports.mjs'
 import { RunFile, inStopOrder } from './run-file.mjs'
@@ -83,6 +83,15 @@ describe('the processes of an earlier start', () => {
     expect(isAlive({ ...noted, command: 'another program' })).toBe(false)
     expect(await stopProcess(noted)).toBe(true)
     expect(isAlive(noted)).toBe(false)
+  })
+
+  it('are noted with their command line however early they are looked at', () => {
+    const children = Array.from({ length: 20 }, () => {
+      const child = sleeper()
+      return { child, noted: identifyNew(child.pid) }
+    })
+    for (const { noted } of children) expect(noted.command).toContain('setInterval')
+    for (const { child } of children) child.kill()
   })
 
   it('are stopped by the next start, but not a program that merely has the number of one', async () => {

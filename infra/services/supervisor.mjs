@@ -1,7 +1,7 @@
 import { spawn } from 'node:child_process'
 import { closeSync } from 'node:fs'
 import { join } from 'node:path'
-import { identify, stopProcess } from './identity.mjs'
+import { identifyNew } from './identity.mjs'
 import { lastLines, openLog } from './log.mjs'
 import { inStopOrder, stopSignal } from './run-file.mjs'
 import { Problem, Stopped } from './say.mjs'
@@ -83,8 +83,9 @@ export class Supervisor {
     closeSync(file)
     running.once('error', (error) => this.#ended(child, error.message))
     running.once('exit', (code, signal) => this.#ended(child, code === null ? signal : `exit ${code}`))
-    child.noted = running.pid && identify(running.pid)
-    if (child.noted) this.#runFile.add(name, child.noted)
+    child.running = running
+    const noted = running.pid && identifyNew(running.pid)
+    if (noted) this.#runFile.add(name, noted)
   }
 
   #ended(child, reason) {
@@ -117,11 +118,14 @@ export class Supervisor {
   async stop() {
     this.#stopping = true
     for (const name of inStopOrder(this.#children.keys())) {
-      const { noted, timer } = this.#children.get(name)
-      clearTimeout(timer)
-      if (!noted) continue
+      const child = this.#children.get(name)
+      clearTimeout(child.timer)
       const seconds = name === 'postgres' ? 60 : 15
-      if (!(await stopProcess(noted, { signal: stopSignal(name), seconds }))) {
+      const gone = () => child.exit !== undefined
+      if (!gone()) child.running.kill(stopSignal(name))
+      if (!(await until(gone, { seconds, every: 20 }))) {
+        child.running.kill('SIGKILL')
+        await until(gone, { seconds: 5 })
         this.#say(`${name} did not stop within ${seconds} s and was ended.`)
       }
       this.#runFile.remove(name)
