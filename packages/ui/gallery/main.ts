@@ -11,6 +11,11 @@ const router = createRouter({
   routes: [
     { path: '/', redirect: '/study' },
     { path: '/study', component: () => import('./pages/StudyPage.vue') },
+    { path: '/desk', component: () => import('./pages/DeskPage.vue') },
+    { path: '/forms', component: () => import('./pages/FormsPage.vue') },
+    { path: '/tables', component: () => import('./pages/TablesPage.vue') },
+    { path: '/states', component: () => import('./pages/StatesPage.vue') },
+    { path: '/:rest(.*)', component: () => import('./pages/StatesPage.vue') },
   ],
 })
 

@@ -1,5 +1,6 @@
 import fc from 'fast-check'
 import { describe, expect, it } from 'vitest'
+import { dayNumber } from '../charts/calendar'
 import { textWidth } from '../charts/scales'
 import { layoutMarginRule, type MarginRuleInput, type MarginRuleLayout } from './marginRule'
 
@@ -79,6 +80,18 @@ describe('the margin rule', () => {
 
   it('draws nothing when no value is defined', () =>
     expect(layoutMarginRule({ estimate: null, interval: null, limits: {}, width: 400 })).toBeNull())
+
+  it('rules days by the firsts of months', () => {
+    const layout = laid({
+      estimate: dayNumber('2026-10-09'),
+      interval: null,
+      limits: { lower: dayNumber('2026-03-02'), upper: dayNumber('2027-03-01') },
+      width: 500,
+      calendar: true,
+    })
+    expect(numbers(layout)).toEqual(['Jan 2026', 'Jul 2026', 'Jan 2027'])
+    expect(layout.estimate).toBeGreaterThan(layout.limits[0]!)
+  })
 
   it('leaves out the numbers in a table cell', () => {
     const layout = laid({ ...bias, width: 160, compact: true })

@@ -1,3 +1,4 @@
+import { calendarTicks } from '../charts/calendar'
 import {
   coarser,
   linearScale,
@@ -25,6 +26,8 @@ export interface MarginRuleInput {
   width: number
   /** A rule for a table cell: no numbers, little height. */
   compact?: boolean
+  /** Values are day numbers (`dayNumber`): ticks stand at firsts of months. */
+  calendar?: boolean
   /** Writes the number under a major tick. */
   format?: (value: number, places: number) => string
 }
@@ -53,8 +56,8 @@ export interface MarginRuleLayout {
 
 const labelSize = 11
 const labelGap = 14
-/** Room for a limit's pointer at the very end of the rule. */
-const endRoom = 6
+/** Room at both ends: for a limit's pointer, and so that rules of one column start and end together. */
+const endRoom = { full: 26, compact: 6 }
 const leastBar = 3
 
 const defined = (values: (number | null | undefined)[]): number[] =>
@@ -76,6 +79,10 @@ function extentOf({ estimate, interval, limits }: MarginRuleInput): [number, num
   const room = 0.22 * (reach || Math.abs(high) || 1)
   if (!fromZero && (bounds.includes(low) || interval?.lower == null)) low -= room
   if (bounds.includes(high) || high - low < reach + room) high += bounds.length === 2 ? room : room * 2
+  // An interval or estimate beyond the limits must not touch the end of the rule either.
+  const clear = 0.05 * (high - low)
+  if (!fromZero && !bounds.includes(low)) low -= clear
+  if (!bounds.includes(high)) high += clear
   // Values that a double hardly tells apart still get a rule with a width.
   const least = 1e-9 * Math.max(Math.abs(low), Math.abs(high), 1e-3)
   return high - low < least ? [low - Math.max(room, least), high + Math.max(room, least)] : [low, high]
@@ -113,13 +120,25 @@ function chooseScale(extent: [number, number], input: MarginRuleInput) {
     const majors = multiples(domain, step)
     const labels = majors.map((value) => format(value, places))
     const widest = input.compact ? 0 : Math.max(...labels.map((label) => textWidth(label, labelSize)))
-    const room = Math.max(endRoom, Math.ceil(widest / 2))
+    const least = input.compact ? endRoom.compact : endRoom.full
+    // Numbers too long for the drawing may not eat the rule; thinOut drops those that do not fit.
+    const room = Math.min(Math.max(least, Math.ceil(widest / 2)), Math.floor(input.width / 4))
     const length = input.width - 2 * room
     const spacing = (length * stepValue(step, 1)) / (domain[1] - domain[0])
     const apart = input.compact ? 22 : Math.max(widest + labelGap, 40)
     if (spacing >= apart || majors.length <= 2) return { step, domain, majors, labels, room, spacing }
     step = coarser(step)
   }
+}
+
+/** Firsts of months as ticks; the labelled ones are the major ones. */
+function calendarRule(domain: readonly [number, number], at: (value: number) => number): RuleTick[] {
+  const most = Math.max(1, Math.floor((at(domain[1]) - at(domain[0])) / 76))
+  return calendarTicks(domain[0], domain[1], most).map(({ day, label }) => ({
+    x: at(day),
+    kind: label ? 'major' : 'half',
+    label,
+  }))
 }
 
 function rule(
@@ -147,17 +166,21 @@ function rule(
 export function layoutMarginRule(input: MarginRuleInput): MarginRuleLayout | null {
   const extent = extentOf(input)
   if (!extent || input.width < 40) return null
-  const { step, domain, majors, labels, room, spacing } = chooseScale(extent, input)
+  // A calendar has its own ticks; of the number scale it keeps only what both need.
+  const { step, domain, majors, labels, room, spacing } = input.calendar
+    ? { ...chooseScale(extent, { ...input, compact: true }), domain: extent, room: endRoom.full }
+    : chooseScale(extent, input)
   const [from, to] = [room, input.width - room]
   const { at } = linearScale(domain, [from, to])
   const { lower, upper } = input.limits
   const limits = defined([lower, upper])
   const start = lower == null ? from : at(lower)
   const end = upper == null ? to : at(upper)
-  const { interval } = input
+  const interval = defined([input.interval?.lower, input.interval?.upper]).length ? input.interval : null
   const left = interval && (interval.lower == null ? from : at(interval.lower))
   const right = interval && (interval.upper == null ? to : at(interval.upper))
-  const ticks = thinOut(rule(majors, labels, step, spacing, at), input.width)
+  const ruled = input.calendar ? calendarRule(domain, at) : rule(majors, labels, step, spacing, at)
+  const ticks = thinOut(ruled, input.width)
   return {
     width: input.width,
     height: input.compact ? 20 : 54,

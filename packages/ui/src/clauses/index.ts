@@ -1,0 +1,2 @@
+export { default as ClauseResultRow } from './ClauseResultRow.vue'
+export { ruleFigures, type RuleFigures } from './ruleFigures'
