@@ -31,6 +31,7 @@ export function fail(error) {
 function inWords(error) {
   if (error instanceof Problem) return error.message
   const refused = error?.code === 'EACCES' || error?.code === 'EPERM'
-  if (refused && error.path) return `This user may not use ${error.path}; start Evenrule as the one who owns it.`
+  if (refused && error.path)
+    return `This user may not use ${error.path}; start Evenrule as the one who owns it.`
   return error?.stack ?? error
 }

@@ -144,6 +144,8 @@ export class TestStand {
       E2E_OIDC_URL: address.oidc,
       E2E_MAIL_URL: address.mail,
       CHROMIUM_PATH: chromium,
+      // What was built for this run, so that a further instance need not build it again.
+      TEST_BUILD_FOLDER: this.#config.folder.build,
     }
     return { ...(this.#up.has('database') ? database : {}), ...(this.#up.has('product') ? product : {}) }
   }
