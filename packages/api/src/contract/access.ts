@@ -40,6 +40,7 @@ export const permissions = {
   'front.read': { sides: both, roles: everybody },
   'parts.read': { sides: both, roles: everybody },
   'parts.change': { sides: both, roles: workers },
+  'parts.confirm': { sides: ['customer'], roles: [...customerWorkers, 'admin'] },
   'gauges.read': { sides: ['supplier'], roles: everybody },
   'gauges.change': { sides: ['supplier'], roles: [...supplierWorkers, 'admin'] },
   'tasks.read': { sides: both, roles: everybody },

@@ -1,3 +1,4 @@
+import { units } from '@evenrule/metrology'
 import { z } from 'zod'
 import { roles, sides } from './access'
 
@@ -60,6 +61,15 @@ export const pageQuery = z.object({
 })
 export type PageQuery = z.output<typeof pageQuery>
 
+/** `sort` of one list: its allow-list of columns, the first (or the one named) by default. */
+export const sortBy = <const K extends string>(columns: readonly K[], standard?: NoInfer<K | `-${K}`>) =>
+  z
+    .enum(
+      columns.flatMap((column): (K | `-${K}`)[] => [column, `-${column}`]),
+      `Sort by one of ${columns.join(', ')}, with - before it for descending.`,
+    )
+    .default((standard ?? columns[0]) as never)
+
 /** Answer of a paged list. */
 export const pageOf = <T extends z.ZodType>(item: T) =>
   z.object({ items: z.array(item), total: z.number().int(), page: z.number().int(), size: z.number().int() })
@@ -94,30 +104,8 @@ export const problemSchema = z.object({
 })
 export type Problem = z.output<typeof problemSchema>
 
-/** A closed list of units by quantity, with exact factors to the first unit of each quantity. */
-export const units = {
-  mm: { quantity: 'length', factor: '1' },
-  µm: { quantity: 'length', factor: '0.001' },
-  cm: { quantity: 'length', factor: '10' },
-  m: { quantity: 'length', factor: '1000' },
-  in: { quantity: 'length', factor: '25.4' },
-  g: { quantity: 'mass', factor: '1' },
-  mg: { quantity: 'mass', factor: '0.001' },
-  kg: { quantity: 'mass', factor: '1000' },
-  N: { quantity: 'force', factor: '1' },
-  kN: { quantity: 'force', factor: '1000' },
-  'N·m': { quantity: 'torque', factor: '1' },
-  bar: { quantity: 'pressure', factor: '1' },
-  kPa: { quantity: 'pressure', factor: '0.01' },
-  MPa: { quantity: 'pressure', factor: '10' },
-  'ml/min': { quantity: 'flow', factor: '1' },
-  '°C': { quantity: 'temperature', factor: '1' },
-  V: { quantity: 'voltage', factor: '1' },
-  mV: { quantity: 'voltage', factor: '0.001' },
-  Ω: { quantity: 'resistance', factor: '1' },
-  mΩ: { quantity: 'resistance', factor: '0.001' },
-  '°': { quantity: 'angle', factor: '1' },
-  HRC: { quantity: 'hardness', factor: '1' },
-} as const
-export type Unit = keyof typeof units
-export const unitSchema = z.enum(Object.keys(units) as [Unit, ...Unit[]])
+/** A unit of the closed list; its home, with the exact conversions, is the computation package. */
+export const unitSchema = z.enum(
+  units.map(({ symbol }) => symbol),
+  'Choose a unit from the list.',
+)

@@ -39,9 +39,3 @@ export function subtractDecimals(a: string, b: string): string {
   const text = to === 0 ? digits : `${digits.slice(0, to)}.${digits.slice(to)}`
   return difference < 0n ? `-${text}` : text
 }
-
-/** The product as decimal text with a power of ten, exactly. */
-export function multiplyDecimals(a: string, b: string): string {
-  const [left, right] = [partsOf(a), partsOf(b)]
-  return `${left.coefficient * right.coefficient}e${left.exponent + right.exponent}`
-}

@@ -1,10 +1,9 @@
-import type { Characteristic } from '@evenrule/metrology'
+import { convert, type Characteristic } from '@evenrule/metrology'
 import type { Tenant } from '../../db/tenant'
 import { notFound } from '../../errors'
 import type { FrozenCharacteristic } from '../studies/studies.table'
 import { selectCharacteristic } from './characteristics.repository'
 import { selectTask, type TaskRow } from './tasks.repository'
-import { convertText } from './units'
 
 /** One measuring task that this organisation may see, archived or not; 404 otherwise. */
 export async function taskById(tenant: Tenant, taskId: string): Promise<TaskRow> {
@@ -38,13 +37,14 @@ export async function frozenCharacteristic(
 
 /**
  * The characteristic as the computation takes it, in its own unit. A gauge's resolution is given in the gauge's
- * unit and converted exactly; only the final figures are doubles.
+ * unit and converted exactly; it is left out where the units are of different quantities.
  */
 export function toCharacteristic(
   frozen: FrozenCharacteristic,
   { resolution, gaugeUnit }: { resolution?: string; gaugeUnit?: string } = {},
 ): Characteristic {
   const { lowerLimit, upperLimit, processStandardDeviation, unit } = frozen
+  const converted = resolution === undefined ? null : convert(Number(resolution), gaugeUnit ?? unit, unit)
   return {
     unit,
     tolerance: {
@@ -54,6 +54,6 @@ export function toCharacteristic(
     ...(processStandardDeviation === null
       ? {}
       : { processStandardDeviation: Number(processStandardDeviation) }),
-    ...(resolution === undefined ? {} : { resolution: convertText(resolution, gaugeUnit ?? unit, unit) }),
+    ...(converted === null ? {} : { resolution: converted }),
   }
 }
