@@ -23,7 +23,6 @@ export const gaugeSchema = z.object({
   /** Smallest difference it shows, decimal text in `unit`. */
   resolution: z.string(),
   unit: z.string(),
-  siteId: uuid.nullable(),
   site: z.string().nullable(),
   calibration: calibrationNow,
   /** Active measuring tasks it serves. */
@@ -62,7 +61,8 @@ const entered = {
   name: line(),
   resolution: positiveDecimalText,
   unit: unitSchema,
-  siteId: uuid.nullable().default(null),
+  /** Name of the site where it stands; a name that is not known yet becomes a site of the organisation. */
+  site: line(80).nullable().default(null),
 }
 
 export const createGauge = defineEndpoint({

@@ -3,6 +3,13 @@ import type { Config } from './config'
 import type { Route } from './http/route'
 import type { Identity } from './integrations/oidc'
 import type { Sessions } from './integrations/sessions'
+import { filesRoutes } from './modules/files/files.routes'
+import { calibrationsRoutes } from './modules/gauges/calibrations.routes'
+import { gaugesRoutes } from './modules/gauges/gauges.routes'
+import { standardsRoutes } from './modules/gauges/standards.routes'
+import { characteristicsRoutes } from './modules/parts/characteristics.routes'
+import { partsRoutes } from './modules/parts/parts.routes'
+import { tasksRoutes } from './modules/parts/tasks.routes'
 import { signInRoutes } from './modules/sign-in/sign-in.routes'
 import { systemRoutes } from './modules/system/system.routes'
 
@@ -18,5 +25,12 @@ export function allRoutes({ database, config, identity, sessions }: RouteDepende
   return [
     ...systemRoutes(database),
     ...signInRoutes({ database, identity, sessions, origins: config.origins }),
+    ...partsRoutes,
+    ...characteristicsRoutes,
+    ...tasksRoutes,
+    ...gaugesRoutes,
+    ...standardsRoutes,
+    ...calibrationsRoutes,
+    ...filesRoutes,
   ]
 }

@@ -1,4 +1,4 @@
-import { asc, desc, ilike, or, sql, type AnyColumn, type SQL } from 'drizzle-orm'
+import { asc, desc, ilike, isNotNull, isNull, or, sql, type AnyColumn, type SQL } from 'drizzle-orm'
 import type { PageQuery } from '../../contract/common'
 
 type Sortable = AnyColumn | SQL
@@ -30,5 +30,24 @@ export function containing(text: string | undefined, ...columns: Sortable[]): SQ
   return or(...columns.map((column) => ilike(column as AnyColumn, pattern)))
 }
 
+/** Rows that are in use, those that are archived, or both; `column` holds when a row was archived. */
+export const archivedIs = (filter: 'active' | 'archived' | 'all', column: AnyColumn): SQL | undefined =>
+  filter === 'all' ? undefined : filter === 'active' ? isNull(column) : isNotNull(column)
+
 /** Total over all pages, for the select list of a page's query. */
 export const totalOverPages = sql<number>`(count(*) over ())::integer`
+
+/**
+ * Runs a page's query, whose rows each carry the total. A page beyond the end is empty and still tells the total,
+ * so that a reader can be led back.
+ */
+export async function paged<Q extends PageQuery, R extends { total: number }, I>(
+  query: Q,
+  select: (query: Q) => Promise<R[]>,
+  asItems: (rows: R[]) => I[] | Promise<I[]>,
+): Promise<{ items: I[]; total: number; page: number; size: number }> {
+  const rows = await select(query)
+  const beyond = rows.length === 0 && query.page > 1 ? await select({ ...query, page: 1, size: 1 }) : rows
+  const { page, size } = query
+  return { items: await asItems(rows), total: beyond[0]?.total ?? 0, page, size }
+}

@@ -1,14 +1,26 @@
-import { and, desc, eq, lte } from 'drizzle-orm'
+import { and, desc, eq, lte, sql, type AnyColumn, type SQL } from 'drizzle-orm'
+import { dueSoonDays, type CalibrationStanding } from '../../../contract/calibrations'
+import type { listGaugeCalibrations } from '../../../contract/calibrations'
+import type { QueryOf } from '../../../contract/define'
+import { addDays } from '../../calendar'
+import { containing, orderOf, totalOverPages, windowOf } from '../../db/paging'
 import type { Tenant } from '../../db/tenant'
-import { calibrations } from './gauges.table'
+import { files } from '../files/files.table'
+import { calibrations, gauges, referenceStandards } from './gauges.table'
 
 export type CalibrationRow = typeof calibrations.$inferSelect
 
 /** What a calibration is of: one gauge or one reference standard. */
 export type CalibratedThing = { gaugeId: string } | { standardId: string }
 
-export const ofThing = (thing: CalibratedThing) =>
+const ofThing = (thing: CalibratedThing) =>
   'gaugeId' in thing ? eq(calibrations.gaugeId, thing.gaugeId) : eq(calibrations.standardId, thing.standardId)
+
+const latestFirst = [
+  desc(calibrations.calibratedOn),
+  desc(calibrations.createdAt),
+  desc(calibrations.id),
+] as const
 
 /** The latest calibration made on or before a day. */
 export async function selectCalibrationOn(
@@ -22,7 +34,83 @@ export async function selectCalibrationOn(
     .where(
       and(eq(calibrations.orgId, tenant.organisationId), ofThing(thing), lte(calibrations.calibratedOn, day)),
     )
-    .orderBy(desc(calibrations.calibratedOn), desc(calibrations.createdAt), desc(calibrations.id))
+    .orderBy(...latestFirst)
     .limit(1)
   return row
+}
+
+/** For a lateral join: per row of a list the calibration that counts on the day, by the same rule. */
+export const latestOn = ({ tx }: Tenant, table: typeof gauges | typeof referenceStandards, day: string) =>
+  tx
+    .select({
+      calibratedOn: calibrations.calibratedOn,
+      dueOn: calibrations.dueOn,
+      foundWithinLimits: calibrations.foundWithinLimits,
+    })
+    .from(calibrations)
+    .where(
+      and(
+        eq(calibrations.orgId, table.orgId),
+        eq(table === gauges ? calibrations.gaugeId : calibrations.standardId, table.id),
+        lte(calibrations.calibratedOn, day),
+      ),
+    )
+    .orderBy(...latestFirst)
+    .limit(1)
+    .as('latest')
+
+/** SQL of the standing on a day; `standingOn` of the contract says the same of one row. */
+export function hasStanding(
+  standing: CalibrationStanding | undefined,
+  dueOn: AnyColumn,
+  day: string,
+): SQL | undefined {
+  const soonUntil = addDays(day, dueSoonDays)
+  switch (standing) {
+    case undefined:
+      return undefined
+    case 'none':
+      return sql`${dueOn} is null`
+    case 'overdue':
+      return sql`${dueOn} < ${day}`
+    case 'due-soon':
+      return sql`${dueOn} between ${day} and ${soonUntil}`
+    case 'in-date':
+      return sql`${dueOn} > ${soonUntil}`
+  }
+}
+
+/** One page of calibrations with their certificates; every row carries the total. */
+export async function selectCalibrations(
+  tenant: Tenant,
+  thing: CalibratedThing,
+  query: QueryOf<typeof listGaugeCalibrations>,
+) {
+  const { calibratedOn, dueOn, certificateNumber, laboratory } = calibrations
+  return tenant.tx
+    .select({ calibration: calibrations, certificate: files, total: totalOverPages })
+    .from(calibrations)
+    .leftJoin(files, and(eq(files.orgId, calibrations.orgId), eq(files.id, calibrations.fileId)))
+    .where(
+      and(
+        eq(calibrations.orgId, tenant.organisationId),
+        ofThing(thing),
+        containing(query.search, certificateNumber, laboratory),
+      ),
+    )
+    .orderBy(...orderOf({ calibratedOn, dueOn }, query.sort, calibrations.id))
+    .limit(windowOf(query).limit)
+    .offset(windowOf(query).offset)
+}
+
+export async function insertCalibration(
+  tenant: Tenant,
+  row: Omit<typeof calibrations.$inferInsert, 'orgId' | 'createdAt' | 'createdBy'>,
+): Promise<CalibrationRow> {
+  const [inserted] = await tenant.tx
+    .insert(calibrations)
+    .values({ ...row, orgId: tenant.organisationId, createdAt: tenant.now, createdBy: tenant.userId })
+    .returning()
+  if (!inserted) throw new Error('The calibration was not stored.')
+  return inserted
 }

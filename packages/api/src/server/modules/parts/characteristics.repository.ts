@@ -1,29 +1,47 @@
-import { and, eq } from 'drizzle-orm'
+import { and, eq, sql } from 'drizzle-orm'
+import type { listCharacteristics } from '../../../contract/characteristics'
+import type { QueryOf } from '../../../contract/define'
+import { archivedIs, containing, orderOf, totalOverPages, windowOf } from '../../db/paging'
 import type { Tenant } from '../../db/tenant'
+import type { PartRow } from './parts.repository'
 import { characteristics, partRevisions, parts } from './parts.table'
 
 export type CharacteristicRow = typeof characteristics.$inferSelect
 
 /** Rows of the relationships in which this organisation stands on the side it acts on. */
-export const ownCharacteristics = (tenant: Tenant) =>
+const ownCharacteristics = (tenant: Tenant) =>
   eq(
     tenant.side === 'supplier' ? characteristics.supplierOrgId : characteristics.customerOrgId,
     tenant.organisationId,
   )
 
-/** A characteristic with the names of what it belongs to. */
-export interface CharacteristicInPart {
-  characteristic: CharacteristicRow
-  part: typeof parts.$inferSelect
-  revision: typeof partRevisions.$inferSelect
+export const isCurrentRevision = sql<boolean>`${partRevisions.sequence} = (select max(r.sequence) from part_revisions r where r.relationship_id = ${parts.relationshipId} and r.part_id = ${parts.id})`
+
+/**
+ * The number of the signed agreement that rests on the limits: one that covers the characteristic and was signed
+ * when it already stood there. What a later revision brings is reopened by it.
+ */
+const frozenBy = sql<number | null>`(
+  select min(a.number) from agreements a
+  join agreement_versions v on v.relationship_id = a.relationship_id and v.agreement_id = a.id
+  where a.relationship_id = ${characteristics.relationshipId}
+    and v.state = 'signed' and v.signed_at >= ${characteristics.createdAt}
+    and (a.part_id is null or a.part_id = ${characteristics.partId})
+    and (a.characteristic_id is null or a.characteristic_id = ${characteristics.id}))`
+
+const fields = {
+  characteristic: characteristics,
+  part: parts,
+  revision: partRevisions,
+  isCurrent: isCurrentRevision,
+  frozenBy,
+  total: totalOverPages,
 }
 
-export async function selectCharacteristic(
-  tenant: Tenant,
-  characteristicId: string,
-): Promise<CharacteristicInPart | undefined> {
-  const [row] = await tenant.tx
-    .select({ characteristic: characteristics, part: parts, revision: partRevisions })
+/** A characteristic with what it belongs to. */
+const fromCharacteristics = (tenant: Tenant) =>
+  tenant.tx
+    .select(fields)
     .from(characteristics)
     .innerJoin(
       parts,
@@ -36,6 +54,99 @@ export async function selectCharacteristic(
         eq(partRevisions.id, characteristics.revisionId),
       ),
     )
-    .where(and(ownCharacteristics(tenant), eq(characteristics.id, characteristicId)))
+    .$dynamic()
+
+export type CharacteristicInPart = Awaited<ReturnType<typeof selectCharacteristics>>[number]
+
+/** One page of characteristics; every row carries the total. */
+export async function selectCharacteristics(tenant: Tenant, query: QueryOf<typeof listCharacteristics>) {
+  const { number, name } = characteristics
+  // Safety first when descending: the order of the classes, not of their names.
+  const byClass = sql`array_position(array['ordinary', 'significant', 'safety'], ${characteristics.class})`
+  return fromCharacteristics(tenant)
+    .where(
+      and(
+        ownCharacteristics(tenant),
+        query.relationshipId ? eq(characteristics.relationshipId, query.relationshipId) : undefined,
+        query.partId ? eq(characteristics.partId, query.partId) : undefined,
+        query.revisionId ? eq(characteristics.revisionId, query.revisionId) : isCurrentRevision,
+        query.class ? eq(characteristics.class, query.class) : undefined,
+        archivedIs(query.archived, characteristics.archivedAt),
+        // Characteristics of an archived part are seen only when one asks for that part.
+        query.partId ? undefined : archivedIs('active', parts.archivedAt),
+        containing(query.search, name, sql`${number}::text`, parts.number, parts.supplierNumber),
+      ),
+    )
+    .orderBy(...orderOf({ number, name, class: byClass, part: parts.number }, query.sort, characteristics.id))
+    .limit(windowOf(query).limit)
+    .offset(windowOf(query).offset)
+}
+
+export async function selectCharacteristic(
+  tenant: Tenant,
+  characteristicId: string,
+): Promise<CharacteristicInPart | undefined> {
+  const [row] = await fromCharacteristics(tenant).where(
+    and(ownCharacteristics(tenant), eq(characteristics.id, characteristicId)),
+  )
   return row
+}
+
+/** What people enter of a characteristic. */
+export type EnteredCharacteristic = Pick<
+  CharacteristicRow,
+  | 'number'
+  | 'name'
+  | 'nominal'
+  | 'lowerLimit'
+  | 'upperLimit'
+  | 'unit'
+  | 'class'
+  | 'processStandardDeviation'
+  | 'confirmedByCustomer'
+>
+
+export async function insertCharacteristic(
+  tenant: Tenant,
+  part: PartRow,
+  revisionId: string,
+  entered: EnteredCharacteristic,
+): Promise<CharacteristicRow> {
+  const { relationshipId, supplierOrgId, customerOrgId } = part
+  const [inserted] = await tenant.tx
+    .insert(characteristics)
+    .values({
+      ...entered,
+      relationshipId,
+      supplierOrgId,
+      customerOrgId,
+      partId: part.id,
+      revisionId,
+      createdAt: tenant.now,
+      createdBy: tenant.userId,
+    })
+    .returning()
+  if (!inserted) throw new Error('The characteristic was not stored.')
+  return inserted
+}
+
+/** Changes a characteristic that still has the version the sender saw; undefined where it has not. */
+export async function updateCharacteristic(
+  tenant: Tenant,
+  characteristicId: string,
+  expectedVersion: number,
+  values: Partial<EnteredCharacteristic & Pick<CharacteristicRow, 'archivedAt'>>,
+): Promise<CharacteristicRow | undefined> {
+  const [updated] = await tenant.tx
+    .update(characteristics)
+    .set({ ...values, rowVersion: expectedVersion + 1 })
+    .where(
+      and(
+        ownCharacteristics(tenant),
+        eq(characteristics.id, characteristicId),
+        eq(characteristics.rowVersion, expectedVersion),
+      ),
+    )
+    .returning()
+  return updated
 }
