@@ -1,5 +1,7 @@
 import { date, foreignKey, index, integer, pgTable, text, unique, uuid } from 'drizzle-orm/pg-core'
 import type { Side } from '../../../contract/access'
+import type { ChallengeState } from '../../../contract/moves/challenge'
+import type { ChallengeReason } from '../../../contract/reviews'
 import {
   instant,
   ownSideOnly,
@@ -29,6 +31,8 @@ export const decisions = pgTable(
     decidedAt: instant().notNull(),
     secondBy: uuid(),
     secondAt: instant(),
+    /** Why it was sent back to review instead of being confirmed; the customer's own business. */
+    sentBackReason: text(),
   },
   (t) => [
     index('decisions_submission').on(t.relationshipId, t.submissionId),
@@ -58,8 +62,6 @@ export const decisions = pgTable(
   ],
 )
 
-export type ChallengeReason = 'result' | 'readings' | 'set-up' | 'reference-standard' | 'calculation'
-
 /** An objection of the customer to one named clause result. */
 export const challenges = pgTable(
   'challenges',
@@ -70,9 +72,11 @@ export const challenges = pgTable(
     number: integer().notNull(),
     clauseKey: text().notNull(),
     reasonKind: text().$type<ChallengeReason>().notNull(),
-    state: text().$type<'open' | 'answered' | 'withdrawn' | 'resolved'>().notNull(),
+    state: text().$type<ChallengeState>().notNull(),
     openedBy: uuid().notNull(),
     openedAt: instant().notNull(),
+    /** When the supplier answered it last. */
+    answeredAt: instant(),
     closedBy: uuid(),
     closedAt: instant(),
     rowVersion: integer().notNull().default(1),

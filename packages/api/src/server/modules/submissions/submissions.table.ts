@@ -1,5 +1,7 @@
+import { sql } from 'drizzle-orm'
 import {
   boolean,
+  check,
   foreignKey,
   index,
   integer,
@@ -7,9 +9,11 @@ import {
   primaryKey,
   text,
   unique,
+  uniqueIndex,
   uuid,
 } from 'drizzle-orm/pg-core'
 import type { Side } from '../../../contract/access'
+import type { SubmissionState } from '../../../contract/moves/submission'
 import {
   instant,
   ownerColumn,
@@ -26,39 +30,30 @@ import { measuringTasks } from '../parts/parts.table'
 import { relationships } from '../relationships/relationships.table'
 import { studies, studyData } from '../studies/studies.table'
 
-export type StoredSubmissionState =
-  | 'draft'
-  | 'for-signature'
-  | 'submitted'
-  | 'challenged'
-  | 'answered'
-  | 'awaiting-second-person'
-  | 'accepted'
-  | 'accepted-with-conditions'
-  | 'refused'
-  | 'withdrawn'
-  | 'superseded'
-
 /** What a supplier puts before one customer for one measuring task. The customer sees it once it is submitted. */
 export const submissions = pgTable(
   'submissions',
   {
     id: primaryId(),
     ...sharedColumns,
-    /** Counts the submissions of the relationship, so that people can name them. */
-    number: integer().notNull(),
+    /**
+     * Counts the signed submissions of the relationship, so that people can name them; null before, so that a
+     * gap in the numbers tells the customer nothing of what was prepared and not signed.
+     */
+    number: integer(),
     taskId: uuid().notNull(),
     partId: uuid().notNull(),
     characteristicId: uuid().notNull(),
-    state: text().$type<StoredSubmissionState>().notNull(),
+    state: text().$type<SubmissionState>().notNull(),
+    /** When it came into this state: what waits, waits since then. */
+    stateSince: instant().notNull(),
     createdAt: instant().notNull(),
     createdBy: uuid().notNull(),
     sentForSignatureAt: instant(),
     submittedAt: instant(),
     decidedAt: instant(),
-    /** Everything frozen at signing: canonical JSON and its SHA-256, which the signatures name. */
-    frozenText: text(),
-    frozenSha256: text(),
+    /** Why the supplier took it back after signing; both sides read it. */
+    withdrawalReason: text(),
     /** Overall verdict and counts, for lists; derived from the clauses when frozen. */
     verdict: text(),
     clausesMet: integer(),
@@ -70,6 +65,11 @@ export const submissions = pgTable(
   (t) => [
     unique('submissions_relationship_id').on(t.relationshipId, t.id),
     unique('submissions_number').on(t.relationshipId, t.number),
+    // One unsigned submission per measuring task at a time.
+    uniqueIndex('submissions_one_draft')
+      .on(t.relationshipId, t.taskId)
+      .where(sql`state in ('draft', 'for-signature')`),
+    check('submissions_signed_number', sql`(submitted_at is null) = (number is null)`),
     index('submissions_supplier_state').on(t.supplierOrgId, t.state, t.submittedAt),
     index('submissions_customer_state').on(t.customerOrgId, t.state, t.submittedAt),
     index('submissions_task').on(t.relationshipId, t.taskId),
@@ -80,6 +80,7 @@ export const submissions = pgTable(
     }),
     relationshipKey('submissions', t, () => relationships),
     sharedPolicy('submissions'),
+    restrictPolicy('submissions_by_supplier', supplierOnly, 'insert'),
     restrictPolicy('submissions_drafts', `submitted_at is not null or ${supplierOnly}`),
   ],
 )
@@ -115,7 +116,61 @@ export const submissionStudies = pgTable(
   ],
 )
 
+/** What engineers and approvers say to each other before signing: never seen by the customer. */
+export const submissionNotes = pgTable(
+  'submission_notes',
+  {
+    ...ownerColumn,
+    id: primaryId(),
+    relationshipId: uuid().notNull(),
+    submissionId: uuid().notNull(),
+    userId: uuid().notNull(),
+    text: text().notNull(),
+    createdAt: instant().notNull(),
+  },
+  (t) => [
+    index('submission_notes_submission').on(t.orgId, t.submissionId, t.createdAt),
+    foreignKey({
+      name: 'submission_notes_submission_fk',
+      columns: [t.relationshipId, t.submissionId],
+      foreignColumns: [submissions.relationshipId, submissions.id],
+    }),
+    ownerPolicy('submission_notes'),
+  ],
+)
+
 const ofVisibleSubmission = 'exists (select 1 from submissions s where s.id = submission_id)'
+
+/** Frozen rows are the supplier's to write, and only until the text that closes the submission is written. */
+const beforeText = (table: string): string =>
+  `${supplierOnly} and not exists (select 1 from submission_texts f where f.submission_id = ${table}.submission_id)`
+
+/**
+ * Everything frozen at signing: canonical JSON (RFC 8785) and its SHA-256, which the signatures name. Written
+ * last of what is frozen; nobody may change it or add to the clauses and files it names.
+ */
+export const submissionTexts = pgTable(
+  'submission_texts',
+  {
+    ...sharedColumns,
+    submissionId: uuid().notNull(),
+    text: text().notNull(),
+    sha256: text().notNull(),
+    frozenAt: instant().notNull(),
+  },
+  (t) => [
+    primaryKey({ columns: [t.relationshipId, t.submissionId] }),
+    foreignKey({
+      name: 'submission_texts_submission_fk',
+      columns: [t.relationshipId, t.submissionId],
+      foreignColumns: [submissions.relationshipId, submissions.id],
+    }),
+    relationshipKey('submission_texts', t, () => relationships),
+    sharedPolicy('submission_texts'),
+    restrictPolicy('submission_texts_visible', ofVisibleSubmission),
+    restrictPolicy('submission_texts_by_supplier', supplierOnly, 'insert'),
+  ],
+)
 
 /** The verdict of one clause with its evaluation: input and output texts are the original. */
 export const submissionClauses = pgTable(
@@ -143,6 +198,7 @@ export const submissionClauses = pgTable(
     relationshipKey('submission_clauses', t, () => relationships),
     sharedPolicy('submission_clauses'),
     restrictPolicy('submission_clauses_visible', ofVisibleSubmission),
+    restrictPolicy('submission_clauses_frozen', beforeText('submission_clauses'), 'insert'),
   ],
 )
 
@@ -169,8 +225,11 @@ export const submissionFiles = pgTable(
     relationshipKey('submission_files', t, () => relationships),
     sharedPolicy('submission_files'),
     restrictPolicy('submission_files_visible', ofVisibleSubmission),
+    restrictPolicy('submission_files_frozen', beforeText('submission_files'), 'insert'),
   ],
 )
+
+export type SignatureMeaning = 'submits' | 'accepts' | 'accepts-with-conditions' | 'refuses' | 'second-person'
 
 /** Signatures under a submission's frozen bytes: the supplier's approver, and those who decide. */
 export const submissionSignatures = pgTable(
@@ -181,7 +240,7 @@ export const submissionSignatures = pgTable(
     submissionId: uuid().notNull(),
     side: text().$type<Side>().notNull(),
     userId: uuid().notNull(),
-    meaning: text().$type<'submits' | 'accepts' | 'accepts-with-conditions' | 'second-person'>().notNull(),
+    meaning: text().$type<SignatureMeaning>().notNull(),
     sha256: text().notNull(),
     signedAt: instant().notNull(),
     authenticatedAt: instant().notNull(),

@@ -1,0 +1,283 @@
+import type { Side } from '../access'
+import type { Move } from './define'
+
+export const submissionStates = [
+  'draft',
+  'for-signature',
+  'submitted',
+  'challenged',
+  'answered',
+  'awaiting-second-person',
+  'accepted',
+  'accepted-with-conditions',
+  'refused',
+  'withdrawn',
+  'superseded',
+] as const
+export type SubmissionState = (typeof submissionStates)[number]
+
+export type SubmissionPrecondition =
+  /** At least one signed clause applies to the task today. */
+  | 'criteria-in-force'
+  /** One unsigned submission per measuring task at a time. */
+  | 'no-other-draft'
+  /** A sentence that says why. */
+  | 'reason-given'
+  /** The signer is not among those who took the readings. */
+  | 'did-not-take-readings'
+  /** The hash that the person saw is the hash of what is signed. */
+  | 'as-seen'
+  /** Challenges of the submission, as they stand after the move. */
+  | 'a-challenge-is-open'
+  | 'no-challenge-open'
+  | 'no-challenge-was-answered'
+  /** Every challenge has ended. */
+  | 'challenges-settled'
+  | 'safety-class'
+  | 'not-safety-class'
+  /** No submission of the same task that was signed later is accepted already. */
+  | 'no-newer-accepted'
+  | 'newer-accepted'
+  /** What was proposed decides which acceptance it becomes. */
+  | 'without-conditions'
+  | 'with-conditions'
+  /** The second person is not the first. */
+  | 'another-person'
+
+const engineer = { side: 'supplier', permission: 'submissions.prepare' } as const
+const signer = { side: 'supplier', permission: 'submissions.sign' } as const
+const reviewer = { side: 'customer', permission: 'reviews.decide' } as const
+const approver = { side: 'customer', permission: 'reviews.approve' } as const
+
+const undecided = ['submitted', 'challenged', 'answered', 'awaiting-second-person'] as const
+const decidable = ['submitted', 'answered'] as const
+
+/**
+ * The life of a submission. A name with several rows leads to several states; the preconditions tell which.
+ * Until it is signed it is the supplier's own; from then on every move stands in the relationship's record.
+ */
+export const submissionMoves = [
+  {
+    name: 'prepare',
+    from: [],
+    to: 'draft',
+    ...engineer,
+    preconditions: ['criteria-in-force', 'no-other-draft'],
+    event: 'submission.prepared',
+    words: 'Prepare a submission',
+  },
+  {
+    name: 'send-for-signature',
+    from: ['draft'],
+    to: 'for-signature',
+    ...engineer,
+    preconditions: ['criteria-in-force'],
+    event: 'submission.sent-for-signature',
+    words: 'Send for signature',
+  },
+  {
+    name: 'return',
+    from: ['for-signature'],
+    to: 'draft',
+    ...engineer,
+    preconditions: ['reason-given'],
+    event: 'submission.returned',
+    words: 'Return with a note',
+  },
+  {
+    name: 'sign',
+    from: ['for-signature'],
+    to: 'submitted',
+    ...signer,
+    preconditions: ['criteria-in-force', 'did-not-take-readings', 'as-seen'],
+    event: 'submission.signed',
+    words: 'Sign and submit',
+  },
+  {
+    name: 'discard',
+    from: ['draft', 'for-signature'],
+    to: 'withdrawn',
+    ...engineer,
+    preconditions: [],
+    event: 'submission.discarded',
+    words: 'Discard',
+  },
+  {
+    name: 'withdraw',
+    from: undecided,
+    to: 'withdrawn',
+    ...engineer,
+    preconditions: ['reason-given'],
+    event: 'submission.withdrawn',
+    words: 'Withdraw the submission',
+  },
+  {
+    name: 'challenge',
+    from: ['submitted', 'answered', 'challenged'],
+    to: 'challenged',
+    ...reviewer,
+    preconditions: ['a-challenge-is-open'],
+    event: 'submission.challenged',
+    words: 'Challenge a result',
+  },
+  {
+    name: 'answer',
+    from: ['challenged'],
+    to: 'answered',
+    side: 'supplier',
+    permission: 'reviews.answer',
+    preconditions: ['no-challenge-open'],
+    event: 'submission.answered',
+    words: 'Answer',
+  },
+  {
+    name: 'resume',
+    from: ['challenged'],
+    to: 'answered',
+    ...reviewer,
+    preconditions: ['no-challenge-open'],
+    event: 'submission.review-resumed',
+    words: 'Go on with the review',
+  },
+  {
+    name: 'resume',
+    from: ['challenged'],
+    to: 'submitted',
+    ...reviewer,
+    preconditions: ['no-challenge-open', 'no-challenge-was-answered'],
+    event: 'submission.review-resumed',
+    words: 'Go on with the review',
+  },
+  {
+    name: 'accept',
+    from: decidable,
+    to: 'accepted',
+    ...reviewer,
+    preconditions: ['as-seen', 'challenges-settled', 'no-newer-accepted', 'not-safety-class'],
+    event: 'submission.accepted',
+    words: 'Accept',
+  },
+  {
+    name: 'accept',
+    from: decidable,
+    to: 'awaiting-second-person',
+    ...reviewer,
+    preconditions: ['as-seen', 'challenges-settled', 'no-newer-accepted', 'safety-class'],
+    event: 'submission.second-person-asked',
+    words: 'Accept',
+  },
+  {
+    name: 'accept-with-conditions',
+    from: decidable,
+    to: 'accepted-with-conditions',
+    ...approver,
+    preconditions: ['as-seen', 'challenges-settled', 'no-newer-accepted', 'not-safety-class'],
+    event: 'submission.accepted-with-conditions',
+    words: 'Accept with conditions',
+  },
+  {
+    name: 'accept-with-conditions',
+    from: decidable,
+    to: 'awaiting-second-person',
+    ...approver,
+    preconditions: ['as-seen', 'challenges-settled', 'no-newer-accepted', 'safety-class'],
+    event: 'submission.second-person-asked',
+    words: 'Accept with conditions',
+  },
+  {
+    name: 'refuse',
+    from: decidable,
+    to: 'refused',
+    ...reviewer,
+    preconditions: ['as-seen', 'no-challenge-open', 'reason-given'],
+    event: 'submission.refused',
+    words: 'Refuse',
+  },
+  {
+    name: 'confirm',
+    from: ['awaiting-second-person'],
+    to: 'accepted',
+    ...reviewer,
+    preconditions: ['as-seen', 'another-person', 'no-newer-accepted', 'without-conditions'],
+    event: 'submission.accepted',
+    words: 'Confirm as second person',
+  },
+  {
+    name: 'confirm',
+    from: ['awaiting-second-person'],
+    to: 'accepted-with-conditions',
+    ...reviewer,
+    preconditions: ['as-seen', 'another-person', 'no-newer-accepted', 'with-conditions'],
+    event: 'submission.accepted-with-conditions',
+    words: 'Confirm as second person',
+  },
+  {
+    name: 'send-back',
+    from: ['awaiting-second-person'],
+    to: 'submitted',
+    ...reviewer,
+    preconditions: ['reason-given', 'no-challenge-was-answered'],
+    event: 'submission.second-person-declined',
+    words: 'Send back to review',
+  },
+  {
+    name: 'send-back',
+    from: ['awaiting-second-person'],
+    to: 'answered',
+    ...reviewer,
+    preconditions: ['reason-given'],
+    event: 'submission.second-person-declined',
+    words: 'Send back to review',
+  },
+  {
+    name: 'supersede',
+    from: ['accepted', 'accepted-with-conditions'],
+    to: 'superseded',
+    ...reviewer,
+    preconditions: ['newer-accepted'],
+    event: 'submission.superseded',
+    words: 'Replace by a newer acceptance',
+  },
+] as const satisfies readonly Move<SubmissionState, SubmissionPrecondition>[]
+
+export type SubmissionMove = (typeof submissionMoves)[number]
+export type SubmissionMoveName = SubmissionMove['name']
+
+/** The move of that name from one state to another, where the table has it. */
+export const submissionMove = (
+  name: SubmissionMoveName,
+  from: SubmissionState | null,
+  to: SubmissionState,
+): SubmissionMove | undefined =>
+  submissionMoves.find(
+    (move) =>
+      move.name === name &&
+      move.to === to &&
+      (from === null ? move.from.length === 0 : (move.from as readonly SubmissionState[]).includes(from)),
+  )
+
+/** Whether a move of that name may start from the state. */
+export const mayStart = (name: SubmissionMoveName, from: SubmissionState): boolean =>
+  submissionMoves.some(
+    (move) => move.name === name && (move.from as readonly SubmissionState[]).includes(from),
+  )
+
+/** Which side the next step is up to; null where nothing waits. */
+export const waitsOn: Record<SubmissionState, Side | null> = {
+  draft: 'supplier',
+  'for-signature': 'supplier',
+  submitted: 'customer',
+  challenged: 'supplier',
+  answered: 'customer',
+  'awaiting-second-person': 'customer',
+  accepted: null,
+  'accepted-with-conditions': null,
+  refused: null,
+  withdrawn: null,
+  superseded: null,
+}
+
+/** States in which the customer still has to decide. */
+export const underReview: readonly SubmissionState[] = undecided
+/** States that count as accepted proof. */
+export const acceptedStates: readonly SubmissionState[] = ['accepted', 'accepted-with-conditions']

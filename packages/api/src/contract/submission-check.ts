@@ -1,0 +1,218 @@
+import canonicalize from 'canonicalize'
+import { z } from 'zod'
+import { submissionContentSchema, type FrozenClauseResult } from './submission-content'
+
+export const clauseProblems = [
+  /** The frozen text names a clause whose evaluation is not there. */
+  'missing',
+  /** An evaluation is there that the frozen text does not name. */
+  'not-in-text',
+  'input-altered',
+  'output-altered',
+  'verdict-altered',
+  'engine-unavailable',
+  'engine-altered',
+  'recomputed-differs',
+] as const
+export type ClauseProblem = (typeof clauseProblems)[number]
+
+export const differenceSchema = z.object({
+  /** Path of the first field that differs, such as `study.equivalence.interval.lower`; empty for the whole. */
+  path: z.string(),
+  /** Both values as JSON; null where one side has no such field. */
+  stored: z.string().nullable(),
+  recomputed: z.string().nullable(),
+})
+export type Difference = z.output<typeof differenceSchema>
+
+const clauseCheckSchema = z.object({
+  clauseKey: z.string(),
+  equal: z.boolean(),
+  problem: z.enum(clauseProblems).nullable(),
+  difference: differenceSchema.nullable(),
+  engineVersion: z.string(),
+  engineSha256: z.string(),
+  outputSha256: z.string(),
+  recomputedSha256: z.string().nullable(),
+})
+export type ClauseCheck = z.output<typeof clauseCheckSchema>
+
+export const submissionCheckSchema = z.object({
+  /** Everything below is equal. */
+  equal: z.boolean(),
+  /** The frozen text is canonical and has the hash it is stored under. */
+  text: z.object({ equal: z.boolean(), stored: z.string(), recomputed: z.string() }),
+  /** Each signature names that hash. */
+  signatures: z.array(z.object({ meaning: z.string(), equal: z.boolean() })),
+  /** The readings of each study have the hash that the frozen text names. */
+  data: z.array(
+    z.object({ study: z.string(), equal: z.boolean(), stored: z.string(), recomputed: z.string() }),
+  ),
+  clauses: z.array(clauseCheckSchema),
+})
+export type SubmissionCheck = z.output<typeof submissionCheckSchema>
+
+export interface CheckedEvaluation {
+  clauseKey: string
+  inputText: string
+  outputText: string
+  outputSha256: string
+  engineVersion: string
+  engineSha256: string
+}
+
+/** The engine that an evaluation names could not be had, or is not the one with that hash. */
+export class EngineProblem extends Error {
+  constructor(readonly problem: 'engine-unavailable' | 'engine-altered') {
+    super(problem)
+    this.name = 'EngineProblem'
+  }
+}
+
+/** SHA-256 of a text in UTF-8, as 64 hex digits; the same in Node and in the browser. */
+export async function sha256Of(text: string): Promise<string> {
+  const digest = await crypto.subtle.digest('SHA-256', new TextEncoder().encode(text))
+  return [...new Uint8Array(digest)].map((byte) => byte.toString(16).padStart(2, '0')).join('')
+}
+
+type Json = null | boolean | number | string | Json[] | { [key: string]: Json }
+
+const isObject = (value: Json | undefined): value is { [key: string]: Json } =>
+  typeof value === 'object' && value !== null && !Array.isArray(value)
+
+function walk(a: Json | undefined, b: Json | undefined, path: string): Difference | null {
+  if (Array.isArray(a) && Array.isArray(b)) {
+    for (let at = 0; at < Math.max(a.length, b.length); at += 1) {
+      const found = walk(a[at], b[at], `${path}[${at}]`)
+      if (found) return found
+    }
+    return null
+  }
+  if (isObject(a) && isObject(b)) {
+    for (const key of [...new Set([...Object.keys(a), ...Object.keys(b)])].sort()) {
+      const found = walk(a[key], b[key], path ? `${path}.${key}` : key)
+      if (found) return found
+    }
+    return null
+  }
+  if (a !== undefined && b !== undefined && JSON.stringify(a) === JSON.stringify(b)) return null
+  const write = (value: Json | undefined) => (value === undefined ? null : JSON.stringify(value))
+  return { path, stored: write(a), recomputed: write(b) }
+}
+
+const parse = (text: string): Json | undefined => {
+  try {
+    return JSON.parse(text) as Json
+  } catch {
+    return undefined
+  }
+}
+
+/** The first field in which two JSON texts differ, in the order of their keys; null for the same bytes. */
+export function firstDifference(stored: string, recomputed: string): Difference | null {
+  if (stored === recomputed) return null
+  const [a, b] = [parse(stored), parse(recomputed)]
+  const found = a === undefined || b === undefined ? null : walk(a, b, '')
+  // The same values in other bytes: an order of keys or a spelling of numbers that is not canonical.
+  return found ?? { path: '', stored, recomputed }
+}
+
+async function checkClause(
+  clause: FrozenClauseResult,
+  evaluation: CheckedEvaluation | undefined,
+  recompute: Recompute,
+): Promise<ClauseCheck> {
+  const base = {
+    clauseKey: clause.clauseKey,
+    engineVersion: clause.engineVersion,
+    engineSha256: clause.engineSha256,
+    outputSha256: clause.outputSha256,
+  }
+  if (!evaluation)
+    return { ...base, equal: false, problem: 'missing', difference: null, recomputedSha256: null }
+  let recomputed: string
+  try {
+    // The engine is the one that the signed text names, whatever the row beside it says.
+    recomputed = await recompute({ ...evaluation, engineSha256: clause.engineSha256 })
+  } catch (error) {
+    const problem = error instanceof EngineProblem ? error.problem : 'engine-unavailable'
+    return { ...base, equal: false, problem, difference: null, recomputedSha256: null }
+  }
+  const recomputedSha256 = await sha256Of(recomputed)
+  const difference = firstDifference(evaluation.outputText, recomputed)
+  const problem = await problemOf(clause, evaluation, recomputedSha256, difference)
+  return { ...base, equal: problem === null, problem, difference, recomputedSha256 }
+}
+
+async function problemOf(
+  clause: FrozenClauseResult,
+  evaluation: CheckedEvaluation,
+  recomputedSha256: string,
+  difference: Difference | null,
+): Promise<ClauseProblem | null> {
+  if ((await sha256Of(evaluation.inputText)) !== clause.inputSha256) return 'input-altered'
+  if ((await sha256Of(evaluation.outputText)) !== clause.outputSha256) return 'output-altered'
+  if (evaluation.outputSha256 !== clause.outputSha256) return 'output-altered'
+  if (evaluation.engineSha256 !== clause.engineSha256) return 'engine-altered'
+  if (difference || recomputedSha256 !== clause.outputSha256) return 'recomputed-differs'
+  const output = parse(evaluation.outputText)
+  return isObject(output) && output.verdict === clause.verdict ? null : 'verdict-altered'
+}
+
+/** Computes the canonical output text of an evaluation's input on the engine it names, or throws `EngineProblem`. */
+export type Recompute = (evaluation: CheckedEvaluation) => Promise<string>
+
+/**
+ * Checks everything a submission froze: the hash of its text, what each signature names, the hashes of the
+ * readings, and every clause computed again. The server and the reviewer's browser run this same function, each
+ * with its own way to the engine.
+ */
+export async function checkSubmission(
+  submission: {
+    text: string
+    sha256: string
+    signatures: readonly { meaning: string; sha256: string }[]
+    evaluations: readonly CheckedEvaluation[]
+  },
+  recompute: Recompute,
+): Promise<SubmissionCheck> {
+  const content = submissionContentSchema.parse(JSON.parse(submission.text))
+  const recomputed = await sha256Of(submission.text)
+  const canonical = canonicalize(JSON.parse(submission.text)) === submission.text
+  const text = { equal: canonical && recomputed === submission.sha256, stored: submission.sha256, recomputed }
+  const signatures = submission.signatures.map(({ meaning, sha256 }) => ({
+    meaning,
+    equal: sha256 === recomputed,
+  }))
+  const data = await Promise.all(
+    content.studies.map(async ({ code, data: { readings, sha256 } }) => {
+      const again = await sha256Of(canonicalize(readings) ?? '')
+      return { study: code, equal: again === sha256, stored: sha256, recomputed: again }
+    }),
+  )
+  const clauses: ClauseCheck[] = []
+  for (const clause of content.clauses) {
+    const evaluation = submission.evaluations.find((each) => each.clauseKey === clause.clauseKey)
+    clauses.push(await checkClause(clause, evaluation, recompute))
+  }
+  clauses.push(...strangers(content.clauses, submission.evaluations))
+  const equal = [text, ...signatures, ...data, ...clauses].every((each) => each.equal)
+  return { equal, text, signatures, data, clauses }
+}
+
+const strangers = (
+  clauses: readonly FrozenClauseResult[],
+  evaluations: readonly CheckedEvaluation[],
+): ClauseCheck[] =>
+  evaluations
+    .filter((each) => !clauses.some((clause) => clause.clauseKey === each.clauseKey))
+    .map(({ clauseKey, engineVersion, engineSha256, outputSha256 }) => ({
+      clauseKey,
+      engineVersion,
+      engineSha256,
+      outputSha256,
+      equal: false,
+      problem: 'not-in-text',
+      difference: null,
+      recomputedSha256: null,
+    }))

@@ -1,0 +1,157 @@
+import type { Clause, Verdict } from '@evenrule/metrology'
+import { z } from 'zod'
+import { calendarDate, instant, uuid } from './common'
+
+const hash = z.string().regex(/^[0-9a-f]{64}$/)
+export const verdictSchema = z.enum([
+  'meets',
+  'meets-with-conditions',
+  'falls-short',
+  'not-shown',
+] as const satisfies readonly Verdict[])
+
+/** The agreed clause is kept whole, whatever its type; the engine named beside it knows what it means. */
+const clauseSchema = z.custom<Clause>(
+  (value) => typeof value === 'object' && value !== null && 'type' in value && 'parameters' in value,
+)
+
+const partySchema = z.object({ id: uuid, name: z.string() })
+
+const frozenCharacteristicSchema = z.object({
+  characteristicId: uuid,
+  partNumber: z.string(),
+  revision: z.string(),
+  number: z.number().int(),
+  name: z.string(),
+  nominal: z.string().nullable(),
+  lowerLimit: z.string().nullable(),
+  upperLimit: z.string().nullable(),
+  unit: z.string(),
+  class: z.enum(['ordinary', 'significant', 'safety']),
+  processStandardDeviation: z.string().nullable(),
+})
+
+const calibrationSchema = z
+  .object({ certificateNumber: z.string(), calibratedOn: calendarDate, dueOn: calendarDate })
+  .nullable()
+
+const frozenStudySchema = z.object({
+  code: z.string(),
+  kind: z.literal('bias'),
+  attempt: z.number().int(),
+  registeredAt: instant,
+  registeredBeforehand: z.boolean(),
+  plannedReadings: z.number().int(),
+  unit: z.string(),
+  measuredAs: z.enum(['value', 'deviation']),
+  standard: z.object({
+    code: z.string(),
+    name: z.string(),
+    certifiedValue: z.string(),
+    unit: z.string(),
+    expandedUncertainty: z.string().nullable(),
+    coverageFactor: z.string(),
+  }),
+  calibration: z.object({ gauge: calibrationSchema, standard: calibrationSchema }),
+  data: z.object({
+    revision: z.number().int(),
+    source: z.enum(['typed', 'pasted', 'uploaded']),
+    collectedOn: calendarDate,
+    /** Code of the person who took the readings; the name stays with the supplier. */
+    appraiser: z.string(),
+    /** Each reading as it was entered, in the study's unit. */
+    readings: z.array(z.string()),
+    /** SHA-256 of the canonical JSON of `readings`. */
+    sha256: hash,
+    /** SHA-256 of the file they were read from, where there is one. */
+    fileSha256: hash.nullable(),
+  }),
+})
+export type FrozenStudy = z.output<typeof frozenStudySchema>
+
+const frozenClauseSchema = z.object({
+  clauseKey: z.string(),
+  clause: clauseSchema,
+  agreementNumber: z.number().int(),
+  versionNumber: z.number().int(),
+  versionId: uuid,
+  scope: z.enum(['relationship', 'part', 'characteristic']),
+  /** Code of the study it is judged on; null where none answers it. */
+  study: z.string().nullable(),
+  verdict: verdictSchema,
+  inputSha256: hash,
+  outputSha256: hash,
+  engineVersion: z.string(),
+  engineSha256: hash,
+})
+export type FrozenClauseResult = z.output<typeof frozenClauseSchema>
+
+export const fileRoleSchema = z.enum(['readings', 'gauge-certificate', 'standard-certificate'])
+
+/** Everything a submission freezes at signing; the signatures name the SHA-256 of its canonical JSON. */
+export const submissionContentSchema = z.object({
+  format: z.literal('evenrule.submission/1'),
+  number: z.number().int(),
+  /** The calendar day, in the relationship's time zone, whose criteria it answers. */
+  criteriaOn: calendarDate,
+  relationship: z.object({ id: uuid, supplier: partySchema, customer: partySchema, timeZone: z.string() }),
+  characteristic: frozenCharacteristicSchema,
+  part: z.object({ id: uuid, name: z.string() }),
+  task: z.object({
+    id: uuid,
+    gaugeCode: z.string(),
+    gaugeName: z.string(),
+    /** As entered with the gauge, in the gauge's unit. */
+    gaugeResolution: z.string(),
+    gaugeUnit: z.string(),
+    site: z.string().nullable(),
+    processStep: z.string().nullable(),
+  }),
+  agreements: z.array(
+    z.object({
+      agreementNumber: z.number().int(),
+      versionNumber: z.number().int(),
+      versionId: uuid,
+      scope: z.enum(['relationship', 'part', 'characteristic']),
+      effectiveOn: calendarDate,
+      sha256: hash,
+    }),
+  ),
+  clauses: z.array(frozenClauseSchema),
+  studies: z.array(frozenStudySchema),
+  /** The day from which attempts count: the first on which criteria for this scope were in force. */
+  attemptsSince: calendarDate.nullable(),
+  /** Every study registered on the task since then, abandoned ones included. */
+  attempts: z.array(
+    z.object({
+      code: z.string(),
+      registeredAt: instant,
+      registeredBeforehand: z.boolean(),
+      state: z.enum(['registered', 'collecting', 'computed', 'abandoned']),
+      collectedOn: calendarDate.nullable(),
+      abandonReason: z.string().nullable(),
+    }),
+  ),
+  files: z.array(
+    z.object({
+      role: fileRoleSchema,
+      name: z.string(),
+      contentType: z.string(),
+      size: z.number().int(),
+      sha256: hash,
+    }),
+  ),
+})
+export type SubmissionContent = z.output<typeof submissionContentSchema>
+
+/**
+ * The verdict of a whole submission: it meets only where every clause does; one that falls short decides, then
+ * one that is not shown. Without clauses nothing is shown.
+ */
+export function overallVerdict(verdicts: readonly Verdict[]): Verdict {
+  for (const verdict of ['falls-short', 'not-shown', 'meets-with-conditions'] as const)
+    if (verdicts.includes(verdict)) return verdict
+  return verdicts.length ? 'meets' : 'not-shown'
+}
+
+export const isMet = (verdict: Verdict): boolean => verdict === 'meets' || verdict === 'meets-with-conditions'

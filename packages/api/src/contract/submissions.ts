@@ -1,0 +1,289 @@
+import { z } from 'zod'
+import {
+  calendarDate,
+  expectedVersion,
+  instant,
+  organisationParams,
+  pageOf,
+  pageQuery,
+  paragraph,
+  paramsWith,
+  sideSchema,
+  uuid,
+} from './common'
+import { defineEndpoint } from './define'
+import { submissionStates } from './moves/submission'
+import { challengeSchema, decisionSchema, movedSchema } from './reviews'
+import { fileRoleSchema, verdictSchema } from './submission-content'
+import { submissionCheckSchema } from './submission-check'
+
+export * from './submission-content'
+
+const hash = z.string().regex(/^[0-9a-f]{64}$/, 'This is not a SHA-256 hash.')
+const words = paragraph().min(1, 'Say why.')
+const state = z.enum(submissionStates)
+
+export const submissionRowSchema = z.object({
+  id: uuid,
+  /** Null until it is signed. */
+  number: z.number().int().nullable(),
+  state,
+  /** Calendar days in this state, in the relationship's time zone. */
+  ageDays: z.number().int(),
+  /** Whose step is next; null where nothing waits. */
+  waitsOn: sideSchema.nullable(),
+  taskId: uuid,
+  gaugeCode: z.string(),
+  gaugeName: z.string(),
+  partId: uuid,
+  partNumber: z.string(),
+  revision: z.string(),
+  characteristicNumber: z.number().int(),
+  characteristicName: z.string(),
+  nominal: z.string().nullable(),
+  lowerLimit: z.string().nullable(),
+  upperLimit: z.string().nullable(),
+  unit: z.string(),
+  safety: z.boolean(),
+  /** The organisation on the other side. */
+  other: z.object({ id: uuid, name: z.string() }),
+  verdict: verdictSchema.nullable(),
+  clausesMet: z.number().int().nullable(),
+  clausesTotal: z.number().int().nullable(),
+  createdAt: instant,
+  submittedAt: instant.nullable(),
+})
+export type SubmissionRow = z.output<typeof submissionRowSchema>
+
+/** Columns a list may be sorted by. */
+export const submissionSorts = [
+  'age',
+  'number',
+  'submitted',
+  'gauge',
+  'part',
+  'other',
+  'state',
+  'verdict',
+  'clauses',
+] as const
+export type SubmissionSort = (typeof submissionSorts)[number]
+const sortSchema = z.enum(submissionSorts.flatMap((sort) => [sort, `-${sort}`] as const)).optional()
+
+export const submissionQuery = pageQuery.extend({
+  sort: sortSchema,
+  state: state.optional(),
+  /** What waits for one side's next step. */
+  waitsOn: sideSchema.optional(),
+  verdict: verdictSchema.optional(),
+  safety: z.enum(['true', 'false']).optional(),
+  taskId: uuid.optional(),
+  partId: uuid.optional(),
+  relationshipId: uuid.optional(),
+})
+export type SubmissionQuery = z.output<typeof submissionQuery>
+
+export const listSubmissions = defineEndpoint({
+  method: 'get',
+  path: '/organisations/:organisationId/submissions',
+  access: 'submissions.read',
+  params: organisationParams,
+  query: submissionQuery,
+  response: pageOf(submissionRowSchema),
+  summary: 'Submissions of this organisation on its side; the customer sees those that are signed.',
+})
+
+/** One evaluation as stored: the canonical texts are the original. */
+export const evaluationSchema = z.object({
+  clauseKey: z.string(),
+  inputText: z.string(),
+  outputText: z.string(),
+  outputSha256: hash,
+  engineVersion: z.string(),
+  engineSha256: hash,
+})
+export type SubmissionEvaluation = z.output<typeof evaluationSchema>
+
+/** Why a move that the state and the role allow is still not this person's to make. */
+export const hindranceSchema = z.object({
+  move: z.enum(['send-for-signature', 'sign', 'accept', 'accept-with-conditions', 'refuse', 'confirm']),
+  code: z.enum([
+    'no-criteria',
+    'took-the-readings',
+    'same-person',
+    'challenge-open',
+    'challenge-unsettled',
+    'newer-accepted',
+  ]),
+})
+export type Hindrance = z.output<typeof hindranceSchema>
+
+export const submissionSchema = z.object({
+  id: uuid,
+  number: z.number().int().nullable(),
+  state,
+  rowVersion: z.number().int(),
+  ageDays: z.number().int(),
+  relationshipId: uuid,
+  taskId: uuid,
+  partId: uuid,
+  characteristicId: uuid,
+  safety: z.boolean(),
+  verdict: verdictSchema,
+  clausesMet: z.number().int(),
+  clausesTotal: z.number().int(),
+  createdAt: instant,
+  sentForSignatureAt: instant.nullable(),
+  submittedAt: instant.nullable(),
+  decidedAt: instant.nullable(),
+  withdrawalReason: z.string().nullable(),
+  supersededBy: z.object({ id: uuid, number: z.number().int() }).nullable(),
+  /**
+   * The frozen content as canonical JSON and its SHA-256; before signing, what signing today would freeze. Read it
+   * with `submissionContentSchema`.
+   */
+  text: z.string(),
+  sha256: hash,
+  evaluations: z.array(evaluationSchema),
+  files: z.array(
+    z.object({
+      /** Null before signing: the file then belongs to the supplier alone. */
+      id: uuid.nullable(),
+      role: fileRoleSchema,
+      name: z.string(),
+      contentType: z.string(),
+      size: z.number().int(),
+      sha256: hash,
+    }),
+  ),
+  signatures: z.array(
+    z.object({
+      side: sideSchema,
+      name: z.string().nullable(),
+      meaning: z.enum(['submits', 'accepts', 'accepts-with-conditions', 'refuses', 'second-person']),
+      sha256: hash,
+      signedAt: instant,
+    }),
+  ),
+  decisions: z.array(decisionSchema),
+  challenges: z.array(challengeSchema),
+  /** Between engineers and approvers, before signing; empty for the customer. */
+  notes: z.array(z.object({ id: uuid, name: z.string().nullable(), text: z.string(), createdAt: instant })),
+  /** Studies to choose from while it is a draft; empty otherwise. */
+  choices: z.array(
+    z.object({
+      studyId: uuid,
+      code: z.string(),
+      registeredAt: instant,
+      collectedOn: calendarDate.nullable(),
+      readings: z.number().int(),
+      chosen: z.boolean(),
+    }),
+  ),
+  hindrances: z.array(hindranceSchema),
+})
+export type Submission = z.output<typeof submissionSchema>
+
+const base = '/organisations/:organisationId/submissions/:submissionId'
+const params = paramsWith('submissionId')
+
+export const readSubmission = defineEndpoint({
+  method: 'get',
+  path: base,
+  access: 'submissions.read',
+  params,
+  response: submissionSchema,
+  summary: 'One submission with everything frozen in it, its signatures, decisions and challenges.',
+})
+
+export const prepareSubmission = defineEndpoint({
+  method: 'post',
+  path: '/organisations/:organisationId/submissions',
+  access: 'submissions.prepare',
+  params: organisationParams,
+  body: z.object({
+    taskId: uuid,
+    /** Which studies count; without it the newest computed one. */
+    studyIds: z.array(uuid).max(10).optional(),
+  }),
+  response: movedSchema,
+  summary: 'Prepares a submission for one measuring task from its studies.',
+})
+
+export const chooseStudies = defineEndpoint({
+  method: 'put',
+  path: `${base}/studies`,
+  access: 'submissions.prepare',
+  params,
+  body: z.object({ expectedVersion, studyIds: z.array(uuid).max(10) }),
+  response: movedSchema,
+  summary: 'Which studies a draft rests on.',
+})
+
+export const sendForSignature = defineEndpoint({
+  method: 'post',
+  path: `${base}/send-for-signature`,
+  access: 'submissions.prepare',
+  params,
+  body: z.object({ expectedVersion, note: paragraph().default('') }),
+  response: movedSchema,
+  summary: 'Hands a draft to those who may sign it.',
+})
+
+export const returnSubmission = defineEndpoint({
+  method: 'post',
+  path: `${base}/return`,
+  access: 'submissions.prepare',
+  params,
+  body: z.object({ expectedVersion, note: words }),
+  response: movedSchema,
+  summary: 'Returns a submission that waits for signature to its draft, with a note.',
+})
+
+export const signSubmission = defineEndpoint({
+  method: 'post',
+  path: `${base}/sign`,
+  access: 'submissions.sign',
+  params,
+  body: z.object({ expectedVersion, sha256: hash }),
+  response: movedSchema,
+  fresh: true,
+  summary: 'Signs and submits: everything is frozen, and the customer sees it.',
+})
+
+export const discardSubmission = defineEndpoint({
+  method: 'post',
+  path: `${base}/discard`,
+  access: 'submissions.prepare',
+  params,
+  body: z.object({ expectedVersion }),
+  response: movedSchema,
+  summary: 'Discards a submission that was not signed.',
+})
+
+export const withdrawSubmission = defineEndpoint({
+  method: 'post',
+  path: `${base}/withdraw`,
+  access: 'submissions.prepare',
+  params,
+  body: z.object({ expectedVersion, reason: words }),
+  response: movedSchema,
+  summary: 'Takes back a submission that is not decided yet, with the reason.',
+})
+
+export const verifySubmission = defineEndpoint({
+  method: 'get',
+  path: `${base}/verify`,
+  access: 'submissions.read',
+  params,
+  response: submissionCheckSchema,
+  summary: 'Recomputes every clause on the engine it names and compares everything frozen byte for byte.',
+})
+
+export const downloadSubmissionFile = defineEndpoint({
+  method: 'get',
+  path: `${base}/files/:fileId`,
+  access: 'submissions.read',
+  params: paramsWith('submissionId', 'fileId'),
+  summary: 'A file of a submission, byte for byte, as an attachment.',
+})
