@@ -8,7 +8,7 @@ export const sideSchema = z.enum(sides)
 /** An instant, ISO 8601 in UTC. */
 export const instant = z.iso.datetime()
 /** A calendar date, judged in the relationship's time zone. */
-export const calendarDate = z.iso.date()
+export const calendarDate = z.iso.date('Enter a day, such as 2026-10-14.')
 
 const forbidden =
   // eslint-disable-next-line no-control-regex -- the control characters are what is refused
@@ -43,8 +43,12 @@ export const decimalText = z
   .pipe(
     z
       .string()
-      .max(40, 'Shorten this number to 40 characters.')
-      .regex(/^[+-]?(\d+(\.\d*)?|\.\d+)(e[+-]?\d{1,3})?$/i, 'Enter a number, such as 24.025.')
+      .max(40, { error: 'Shorten this number to 40 characters.', abort: true })
+      // What is no number is not looked at any further, by the rules of the object around it either.
+      .regex(/^[+-]?(\d+(\.\d*)?|\.\d+)(e[+-]?\d{1,3})?$/i, {
+        error: 'Enter a number, such as 24.025.',
+        abort: true,
+      })
       .refine((text) => Number.isFinite(Number(text)), 'This number is too large.'),
   )
 export const positiveDecimalText = decimalText.refine(
