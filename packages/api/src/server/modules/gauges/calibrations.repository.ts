@@ -6,7 +6,7 @@ import { addDays } from '../../calendar'
 import { containing, orderOf, totalOverPages, windowOf } from '../../db/paging'
 import type { Tenant } from '../../db/tenant'
 import { files } from '../files/files.table'
-import { calibrations, gauges, referenceStandards } from './gauges.table'
+import { calibrations, gauges, type referenceStandards } from './gauges.table'
 
 export type CalibrationRow = typeof calibrations.$inferSelect
 
