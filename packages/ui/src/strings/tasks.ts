@@ -1,0 +1,60 @@
+import type { proof } from '@evenrule/api/contract'
+
+/** The standing of a measuring task: the decisive part, and the rest of the answer. */
+export const taskStandings: Record<proof.ProofState, (customer: string) => [string, string]> = {
+  'no-task': () => ['Nothing measures it.', ''],
+  missing: (customer) => [
+    'Not shown yet.',
+    `Nothing has been put before ${customer} for this measuring task.`,
+  ],
+  refused: (customer) => [`Refused by ${customer}.`, 'A new submission can show it.'],
+  challenged: (customer) => [
+    'Challenged.',
+    `${customer} objects to a named result; the submission says which.`,
+  ],
+  waiting: (customer) => ['Not decided yet.', `A submission waits for ${customer}.`],
+  'accepted-with-conditions': (customer) => [
+    `Accepted with conditions by ${customer}.`,
+    'The submission says what must follow.',
+  ],
+  accepted: (customer) => [`Yes, accepted by ${customer}.`, ''],
+}
+
+export const taskWords = {
+  heading: 'What measures it',
+  question: (gauge: string, characteristic: string) => `Is ${gauge} fit for ${characteristic}?`,
+  caption: 'Measuring tasks',
+  search: 'Search gauge, part or characteristic',
+  part: 'Part',
+  characteristic: 'Characteristic',
+  gauge: 'Gauge',
+  site: 'Site',
+  siteHint: 'Where the gauge stands, as both sides name it.',
+  processStep: 'Process step',
+  processStepHint: 'Such as OP 40 or final inspection.',
+  proof: 'Proof',
+  add: 'Add measuring task',
+  addTitle: 'Which gauge measures what?',
+  addShort: 'Say what measures it',
+  gaugeHint: (unit: string) => `A gauge that reads in ${unit} or a unit of the same quantity.`,
+  gaugeHintAny: 'The gauge must read in a unit of the characteristic’s quantity.',
+  searchGauge: 'Type a code or name',
+  searchCharacteristic: 'Type a part number or name',
+  noGauge: 'No gauge in use is found. Register it under Gauges first.',
+  noCharacteristic: 'No active characteristic is found.',
+  editTitle: 'Edit site and process step',
+  archiveTitle: 'Archive this measuring task?',
+  archiveText:
+    'The gauge no longer counts as measuring this characteristic. Its studies and submissions stay in the record.',
+  restoreTitle: 'Restore this measuring task?',
+  restoreText: 'The gauge counts as measuring this characteristic again.',
+  emptyTitle: 'Nothing measures this part yet',
+  emptyText: {
+    supplier: 'Say which gauge measures a characteristic; then studies can show that it is fit.',
+    customer: 'The supplier has not said yet which gauges measure these characteristics.',
+  },
+  emptyOfGauge: 'This gauge measures nothing yet',
+  emptyOfGaugeText: 'Say which characteristic it measures; then studies can show that it is fit.',
+  revision: (part: string, revision: string) => `${part} revision ${revision}`,
+  class: (word: string) => `class ${word}`,
+} as const
