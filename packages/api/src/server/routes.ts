@@ -10,6 +10,7 @@ import { standardsRoutes } from './modules/gauges/standards.routes'
 import { characteristicsRoutes } from './modules/parts/characteristics.routes'
 import { partsRoutes } from './modules/parts/parts.routes'
 import { tasksRoutes } from './modules/parts/tasks.routes'
+import { relationshipsRoutes } from './modules/relationships/relationships.routes'
 import { signInRoutes } from './modules/sign-in/sign-in.routes'
 import { systemRoutes } from './modules/system/system.routes'
 
@@ -25,6 +26,7 @@ export function allRoutes({ database, config, identity, sessions }: RouteDepende
   return [
     ...systemRoutes(database),
     ...signInRoutes({ database, identity, sessions, origins: config.origins }),
+    ...relationshipsRoutes,
     ...partsRoutes,
     ...characteristicsRoutes,
     ...tasksRoutes,
