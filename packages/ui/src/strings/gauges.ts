@@ -45,12 +45,17 @@ export const calibrationWords = {
   found: 'Found',
   foundWithin: 'within its limits',
   foundOutside: 'outside its limits',
+  foundOutsideShort: 'found outside its limits',
   foundField: 'Found within its limits, before any adjustment',
   foundHint: 'As the certificate says. Leave it off where it was found outside.',
   certificate: 'Certificate',
   certificateHint: 'PDF, PNG or JPEG, at most 20 MB. It is kept as it is.',
   search: 'Search certificate or laboratory',
   noFile: 'no file',
+  calibratedOnMissing: 'Enter the day of the calibration.',
+  dueOnMissing: 'Enter the day it is due.',
+  fileTooLarge: 'This file is larger than 20 MB. Choose a smaller one.',
+  fileAgain: (name: string) => `Choose ${name} again: a file cannot be kept across a reload.`,
   emptyTitle: 'No calibration yet',
   emptyText:
     'Enter the latest calibration from its certificate. Without one, criteria on calibration are not shown.',
@@ -119,6 +124,7 @@ export const standardWords = {
     'Stated beside U, often 2. Where the certificate states no k, ask the laboratory: a guess would change verdicts.',
   value: (value: string, uncertainty: string | null, factor: string | null) =>
     uncertainty === null ? value : `${value}, U ${uncertainty} (k = ${factor ?? '?'})`,
+  stated: (uncertainty: string, factor: string | null) => `${uncertainty} (k = ${factor ?? '?'})`,
   noUncertainty: 'no uncertainty stated',
   emptyTitle: 'No reference standard yet',
   emptyText:

@@ -48,6 +48,7 @@ export const partWords = {
   supplierNumberHint: 'The number under which the supplier keeps this part. Only the supplier changes it.',
   name: 'Name',
   partner: { supplier: 'Customer', customer: 'Supplier' },
+  partnerMissing: { supplier: 'Choose the customer.', customer: 'Choose the supplier.' },
   partnerHint: { supplier: 'Whose part it is.', customer: 'Who makes it.' },
   noPartners: {
     supplier: 'You have no customer yet. An admin opens the relationship first.',

@@ -1,0 +1,6 @@
+export { default as CalibrationWord } from './CalibrationWord.vue'
+export { default as GaugePage } from './GaugePage.vue'
+export { default as GaugesPage } from './GaugesPage.vue'
+export { default as StandardPage } from './StandardPage.vue'
+export { default as StandardsPage } from './StandardsPage.vue'
+export { standardText } from './standardText'

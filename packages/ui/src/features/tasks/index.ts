@@ -1,0 +1,2 @@
+export { default as TaskPage } from './TaskPage.vue'
+export { default as TasksTable } from './TasksTable.vue'
