@@ -1,0 +1,3 @@
+export { default as CoverageKey } from './CoverageKey.vue'
+export { default as CoverageRule } from './CoverageRule.vue'
+export type { CoverageState, CoverageTick } from './types'

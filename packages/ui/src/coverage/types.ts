@@ -1,0 +1,12 @@
+import type { coverageWords } from '../strings/states'
+
+export type CoverageState = keyof typeof coverageWords
+
+/** One characteristic of a part on the coverage rule. */
+export interface CoverageTick {
+  /** Its number on the drawing. */
+  number: number
+  /** "Ø 24.000 ±0.025, bore" */
+  label: string
+  state: CoverageState
+}
