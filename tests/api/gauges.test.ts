@@ -254,11 +254,7 @@ describe('calibrations', () => {
     ...more,
   })
   it.each([
-    [
-      { dueOn: '2026-09-30' },
-      'body.dueOn',
-      'Enter a due day on or after the day of calibration, 2026-10-01.',
-    ],
+    [{ dueOn: '2026-09-30' }, 'body.dueOn', 'Enter a due day on or after the day of the calibration.'],
     [
       { calibratedOn: '2026-11-03' },
       'body.calibratedOn',

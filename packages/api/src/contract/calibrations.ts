@@ -53,7 +53,7 @@ const body = z
       context.addIssue({
         code: 'custom',
         path: ['dueOn'],
-        message: `Enter a due day on or after the day of calibration, ${calibratedOn}.`,
+        message: 'Enter a due day on or after the day of the calibration.',
       })
   })
 

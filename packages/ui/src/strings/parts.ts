@@ -9,7 +9,7 @@ export const toleranceWords = {
 
 /** How far the proof of a task or characteristic has come, in a table cell. */
 export const proofWords: Record<proof.ProofState, string> = {
-  'no-task': 'nothing measures it',
+  'no-task': 'not measured',
   missing: 'not shown yet',
   refused: 'refused',
   challenged: 'challenged',
@@ -24,7 +24,6 @@ export const listWords = {
   active: 'in use',
   archived: 'archived',
   all: 'all',
-  every: 'every one',
   clear: 'Clear search and filters',
   nothingFound: 'Nothing found',
   nothingFoundText: 'No row matches the search and the filters together.',
@@ -34,6 +33,7 @@ export const listWords = {
   restore: 'Restore',
   saveChanges: 'Save changes',
   none: '–',
+  acts: 'Change',
 } as const
 
 export const partWords = {
@@ -111,7 +111,7 @@ export const characteristicWords = {
   process: 'Process standard deviation',
   processHint: 'Of the process that makes it, where both sides know one; for criteria by process variation.',
   tolerance: 'Tolerance',
-  tasks: 'Measured by',
+  tasks: 'Tasks',
   proof: 'Proof',
   safety: 'safety',
   unconfirmed: 'waits for the customer to confirm it',
@@ -133,12 +133,14 @@ export const characteristicWords = {
   has: (revision: string, count: number, safety: number) =>
     `Revision ${revision} has ${formatCount(count, 'characteristic')}${safety > 0 ? `, ${safety} of class safety` : ''}.`,
   accepted: (count: number, total: number) =>
-    count === total ? 'All stand on accepted proof.' : `${count} of ${total} stand on accepted proof`,
+    count === total
+      ? 'All stand on accepted proof.'
+      : `${count === 0 ? 'None stands' : `${count} of ${total} stand`} on accepted proof`,
   open: (parts: string[]) => `: ${parts.join(', ')}.`,
   challengedCount: (count: number) => `${count} challenged or refused`,
   waitingCount: (count: number) => `${count} waiting for a decision`,
   missingCount: (count: number) => `${count} not shown yet`,
-  waitForYou: (count: number) => `${formatCount(count, 'characteristic')} wait for your confirmation.`,
+  waitForYou: (count: number) => `${formatCount(count, 'characteristic')} to be confirmed by you.`,
   waitForCustomer: (count: number) =>
-    `${formatCount(count, 'characteristic')} wait for the customer’s confirmation.`,
+    `${formatCount(count, 'characteristic')} to be confirmed by the customer.`,
 } as const

@@ -1,4 +1,4 @@
-import { ProblemError } from '../errors'
+import { ProblemError, type FieldError } from '../errors'
 
 /** What to say when a unique constraint of the database refuses a row: which field, and how to mend it. */
 export type UniqueFields = Record<string, { path: string; message: string }>
@@ -13,9 +13,13 @@ export async function uniqueOr409<T>(fields: UniqueFields, write: () => Promise<
   } catch (error) {
     const field = fields[violated(error) ?? '']
     if (!field) throw error
-    throw new ProblemError('already-taken', 409, field.message, [field])
+    throw alreadyTaken(field)
   }
 }
+
+/** What the sender entered exists already; the field says what, and how to mend it. */
+export const alreadyTaken = (field: FieldError): ProblemError =>
+  new ProblemError('already-taken', 409, 'This exists already. See the marked field.', [field])
 
 function violated(error: unknown): string | undefined {
   for (let at = error; typeof at === 'object' && at !== null; at = (at as { cause?: unknown }).cause) {

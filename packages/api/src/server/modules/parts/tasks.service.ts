@@ -4,7 +4,8 @@ import type { ProofState } from '../../../contract/proof'
 import type { changeTask, createTask, listTasks, readTask } from '../../../contract/tasks'
 import { paged } from '../../db/paging'
 import type { Tenant } from '../../db/tenant'
-import { changedMeanwhile, invalidInput, notFound, ProblemError } from '../../errors'
+import { alreadyTaken } from '../../db/unique'
+import { changedMeanwhile, invalidInput, notFound, type ProblemError } from '../../errors'
 import { selectGauge } from '../gauges/gauges.repository'
 import { selectCharacteristic } from './characteristics.repository'
 import { isArchived, isNotArchived } from './parts.errors'
@@ -21,10 +22,11 @@ import {
 
 type TaskAnswer = AnswerInputOf<typeof readTask>
 
-const sameTask = (path: string): ProblemError => {
-  const message = 'This gauge already measures this characteristic at that site and process step.'
-  return new ProblemError('already-taken', 409, message, [{ path, message }])
-}
+const sameTask = (path: string): ProblemError =>
+  alreadyTaken({
+    path,
+    message: 'This gauge already measures this characteristic at that site and process step.',
+  })
 
 /** One page of measuring tasks with the proof they have. */
 export async function listOfTasks(tenant: Tenant, query: QueryOf<typeof listTasks>) {
