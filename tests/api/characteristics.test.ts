@@ -479,6 +479,36 @@ describe('measuring tasks', () => {
     expect(byStranger.status).toBe(404)
   })
 
+  it('are taken over into a new revision by the numbers of the characteristics, once', async () => {
+    const own = await newPart('take-over')
+    const bored = await asCustomerEnters(1, {}, own)
+    const weighed = await asCustomerEnters(2, { unit: 'g' }, own)
+    const gone = await asCustomerEnters(3, {}, own)
+    const [gauge, scale] = [await newGauge('BG-30'), await newGauge('SC-30', 'g')]
+    await newTask(bored.id, gauge.id, { site: 'Grinding shop', processStep: 'OP 40' })
+    await newTask(weighed.id, scale.id)
+    await newTask(gone.id, gauge.id)
+    const early = await asSupplier().send(
+      'post',
+      `/organisations/${supplier.id}/parts/${own.id}/tasks/take-over`,
+    )
+    expect(early.body).toMatchObject({ status: 409, code: 'no-earlier-revision' })
+    const next = await asCustomer().call(parts.addRevision, inCustomer({ partId: own.id }), {
+      body: { label: 'B', copyCharacteristics: false, expectedVersion: 1 },
+    })
+    await asCustomerEnters(1, { unit: 'cm' }, next)
+    await asCustomerEnters(2, { unit: 'N' }, next)
+    const take = () => asSupplier().call(tasks.takeOverTasks, inSupplier({ partId: own.id }))
+    expect(await take()).toEqual({ taken: 1, left: 2 })
+    expect(await take()).toEqual({ taken: 0, left: 3 })
+    const list = await asSupplier().call(tasks.listTasks, inSupplier(), {
+      query: { revisionId: next.currentRevision.id },
+    })
+    expect(list.items).toMatchObject([
+      { gaugeCode: 'BG-30', site: 'Grinding shop', processStep: 'OP 40', revision: 'B', proof: 'missing' },
+    ])
+  })
+
   it('refuse a stale version', async () => {
     const made = await asCustomerEnters(27)
     const task = await newTask(made.id, (await newGauge('BG-27')).id)

@@ -94,6 +94,16 @@ export const createTask = defineEndpoint({
   summary: 'Says which gauge measures a characteristic, where and at which process step.',
 })
 
+export const takeOverTasks = defineEndpoint({
+  method: 'post',
+  path: '/organisations/:organisationId/parts/:partId/tasks/take-over',
+  access: 'tasks.change',
+  params: paramsWith('partId'),
+  response: z.object({ taken: z.number().int(), left: z.number().int() }),
+  summary:
+    'Sets up the measuring tasks of the revision before the current one anew, by the numbers of the characteristics.',
+})
+
 export const changeTask = defineEndpoint({
   method: 'put',
   path: '/organisations/:organisationId/tasks/:taskId',

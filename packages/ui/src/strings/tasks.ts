@@ -56,6 +56,9 @@ export const taskWords = {
     supplier: 'Say which gauge measures a characteristic; then studies can show that it is fit.',
     customer: 'The supplier has not said yet which gauges measure these characteristics.',
   },
+  takeOver: (revision: string) => `Take over from revision ${revision}`,
+  takeOverHint: (revision: string) =>
+    `Or take over what measured revision ${revision}, by the numbers of the characteristics.`,
   emptyOfGauge: 'This gauge measures nothing yet',
   emptyOfGaugeText: 'Say which characteristic it measures; then studies can show that it is fit.',
   revision: (part: string, revision: string) => `${part} revision ${revision}`,

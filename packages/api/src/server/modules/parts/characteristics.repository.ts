@@ -1,4 +1,4 @@
-import { and, eq, sql } from 'drizzle-orm'
+import { and, eq, isNull, sql } from 'drizzle-orm'
 import type { listCharacteristics } from '../../../contract/characteristics'
 import type { QueryOf } from '../../../contract/define'
 import { archivedIs, containing, orderOf, totalOverPages, windowOf } from '../../db/paging'
@@ -80,6 +80,23 @@ export async function selectCharacteristics(tenant: Tenant, query: QueryOf<typeo
     .orderBy(...orderOf({ number, name, class: byClass, part: parts.number }, query.sort, characteristics.id))
     .limit(windowOf(query).limit)
     .offset(windowOf(query).offset)
+}
+
+/** Every active characteristic of a revision. */
+export async function selectActiveOfRevision(
+  tenant: Tenant,
+  revisionId: string,
+): Promise<CharacteristicRow[]> {
+  return tenant.tx
+    .select()
+    .from(characteristics)
+    .where(
+      and(
+        ownCharacteristics(tenant),
+        eq(characteristics.revisionId, revisionId),
+        isNull(characteristics.archivedAt),
+      ),
+    )
 }
 
 export async function selectCharacteristic(

@@ -26,6 +26,11 @@ export const alreadyConfirmed = defineError(
   409,
   'The customer has already confirmed this characteristic.',
 )
+export const noEarlierRevision = defineError(
+  'no-earlier-revision',
+  409,
+  'This part has only one revision, so there are no measuring tasks to take over.',
+)
 export const otherQuantity = defineError(
   'unit-of-another-quantity',
   409,

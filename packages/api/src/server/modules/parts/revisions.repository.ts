@@ -1,4 +1,4 @@
-import { and, eq, sql } from 'drizzle-orm'
+import { and, desc, eq, sql } from 'drizzle-orm'
 import type { QueryOf } from '../../../contract/define'
 import type { listRevisions } from '../../../contract/parts'
 import { newId } from '../../db/columns'
@@ -43,6 +43,20 @@ export async function selectRevision(
       ),
     )
   return row
+}
+
+/** The newest revisions of a part, the current one first. */
+export async function selectNewestRevisions(
+  { tx }: Tenant,
+  part: PartRow,
+  count: number,
+): Promise<RevisionRow[]> {
+  return tx
+    .select()
+    .from(partRevisions)
+    .where(and(eq(partRevisions.relationshipId, part.relationshipId), eq(partRevisions.partId, part.id)))
+    .orderBy(desc(partRevisions.sequence))
+    .limit(count)
 }
 
 /** Adds a revision at the end of the part's sequence. */

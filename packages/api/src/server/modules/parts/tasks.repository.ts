@@ -105,6 +105,15 @@ export async function selectTask(tenant: Tenant, taskId: string): Promise<TaskRo
   return row
 }
 
+/** Every active task of a revision; a revision has a few dozen at most. */
+export async function selectTasksOfRevision(tenant: Tenant, revisionId: string): Promise<TaskListed[]> {
+  return fromTasks(tenant)
+    .where(
+      and(ownTasks(tenant), eq(characteristics.revisionId, revisionId), isNull(measuringTasks.archivedAt)),
+    )
+    .orderBy(characteristics.number, measuringTasks.id)
+}
+
 /** An active task other than `exceptId` for the same characteristic, gauge, site and process step. */
 export async function selectSameTask(
   tenant: Tenant,
