@@ -40,6 +40,13 @@ export const problemNoticeWords = {
     unavailable: 'The service is not ready',
     forbidden: 'This is not yours to do',
     'signed-out': 'You are signed out',
+    'already-taken': 'This exists already',
+    archived: 'This is archived',
+    'limits-frozen': 'These limits are agreed',
+    'confirmed-by-customer': 'The customer stands behind this',
+    'gauge-in-use': 'This gauge is in use',
+    'file-too-large': 'This file is too large',
+    'too-many': 'Too many requests',
   } as Record<string, string>,
   other: 'That did not work',
   kept: 'What you typed is kept.',
@@ -62,4 +69,35 @@ export const formWords = {
   unsaved: 'Not saved yet',
   seeFields: 'See the marked fields. Nothing was sent yet.',
   close: 'Close',
+} as const
+
+export const plotWords = {
+  showNumbers: 'Show the numbers',
+  hideNumbers: 'Hide the numbers',
+  numbers: 'Numbers of the plot',
+  margin: (value: string) => `margin ${value}`,
+  marginWord: 'margin',
+  mean: 'mean',
+  reference: 'reference',
+  reading: 'reading',
+  readings: 'number of readings',
+  value: 'value',
+  order: 'in the order taken',
+  trueBias: 'true bias',
+  allowedBias: 'allowed bias',
+  planned: (count: number) => `planned, ${count} readings`,
+  marked: (readings: string) => `marked: ${readings.toLowerCase()}`,
+  runTitle: (count: number) => `${count} readings in the order taken`,
+  runRange: (low: string, high: string) => `, from ${low} to ${high}`,
+  chanceTitle: 'Chance to meet the clause, by true bias',
+  chanceOf: (name: string, atZero: string, atMargin: string) =>
+    `${name}: ${atZero} without bias${atMargin ? `, ${atMargin} at the margin` : ''}`,
+  allowedTitle: 'Bias the clause allows, by number of readings',
+  allowedOf: (name: string, first: string, from: number, last: string, to: number) =>
+    `${name}: ${first} with ${from} readings, ${last} with ${to}`,
+} as const
+
+export const coverageRuleWords = {
+  covered: (covered: number, total: number) => `${covered} of ${total} characteristics covered`,
+  key: 'one tick per characteristic, numbered as on the drawing: full accepted, half conditional, broken running out, flagged challenged, ring missing',
 } as const
