@@ -5,6 +5,7 @@ import {
   taskById,
   toCharacteristic,
 } from '../../packages/api/src/server/modules/parts/parts.lookup.service'
+import { submissions } from '../../packages/api/src/server/modules/submissions/submissions.table'
 import { startHarness, type Harness, type Organisation, type Person, type Relationship } from './harness'
 
 let harness: Harness
@@ -477,6 +478,49 @@ describe('measuring tasks', () => {
       .as('supplier', stranger)
       .send('get', `/organisations/${strangers.id}/tasks/${task.id}`)
     expect(byStranger.status).toBe(404)
+  })
+
+  it('carry their proof to the characteristic, which is as far as the worst of them', async () => {
+    const own = await newPart('proof')
+    const made = await asCustomerEnters(1, {}, own)
+    const gauge = await newGauge('BG-31')
+    const [one, two] = [
+      await newTask(made.id, gauge.id, { processStep: 'OP 1' }),
+      await newTask(made.id, gauge.id, { processStep: 'OP 2' }),
+    ]
+    let number = 500
+    const submit = (taskId: string, state: 'submitted' | 'accepted' | 'challenged' | 'draft') =>
+      harness.inTenant('supplier', supplier, engineer, ['gauge-engineer'], async ({ tx, now }) => {
+        await tx.insert(submissions).values({
+          relationshipId: relationship.id,
+          supplierOrgId: supplier.id,
+          customerOrgId: customer.id,
+          number: state === 'draft' ? null : (number += 1),
+          taskId,
+          partId: own.id,
+          characteristicId: made.id,
+          state,
+          stateSince: now,
+          createdAt: now,
+          createdBy: engineer.id,
+          submittedAt: state === 'draft' ? null : now,
+          safety: false,
+        })
+      })
+    const seen = async () => ({
+      ofTask: (await asCustomer().call(tasks.readTask, inCustomer({ taskId: one.id }))).proof,
+      ofCharacteristic: (
+        await asSupplier().call(characteristics.readCharacteristic, inSupplier({ characteristicId: made.id }))
+      ).proof,
+    })
+    await submit(one.id, 'draft')
+    expect(await seen()).toEqual({ ofTask: 'missing', ofCharacteristic: 'missing' })
+    await submit(one.id, 'accepted')
+    expect(await seen()).toEqual({ ofTask: 'accepted', ofCharacteristic: 'missing' })
+    await submit(two.id, 'challenged')
+    expect(await seen()).toEqual({ ofTask: 'accepted', ofCharacteristic: 'challenged' })
+    await submit(two.id, 'accepted')
+    expect(await seen()).toEqual({ ofTask: 'accepted', ofCharacteristic: 'accepted' })
   })
 
   it('are taken over into a new revision by the numbers of the characteristics, once', async () => {

@@ -32,6 +32,7 @@ export const listWords = {
   archive: 'Archive',
   restore: 'Restore',
   saveChanges: 'Save changes',
+  loadAgain: 'Load it again',
   none: '–',
   acts: 'Change',
 } as const
