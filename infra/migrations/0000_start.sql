@@ -27,6 +27,7 @@ CREATE TABLE "memberships" (
 	"roles" text[] NOT NULL,
 	"created_at" timestamp (3) with time zone NOT NULL,
 	"ends_on" date,
+	"row_version" integer DEFAULT 1 NOT NULL,
 	CONSTRAINT "memberships_org_id_user_id_pk" PRIMARY KEY("org_id","user_id")
 );
 --> statement-breakpoint
@@ -35,7 +36,8 @@ CREATE TABLE "organisations" (
 	"id" uuid PRIMARY KEY NOT NULL,
 	"name" text NOT NULL,
 	"time_zone" text NOT NULL,
-	"created_at" timestamp (3) with time zone NOT NULL
+	"created_at" timestamp (3) with time zone NOT NULL,
+	"row_version" integer DEFAULT 1 NOT NULL
 );
 --> statement-breakpoint
 ALTER TABLE "organisations" ENABLE ROW LEVEL SECURITY;--> statement-breakpoint
@@ -248,13 +250,17 @@ CREATE TABLE "agreement_versions" (
 	"supplier_org_id" uuid NOT NULL,
 	"customer_org_id" uuid NOT NULL,
 	"agreement_id" uuid NOT NULL,
-	"number" integer NOT NULL,
+	"number" integer,
 	"state" text NOT NULL,
 	"begun_by" text NOT NULL,
 	"effective_on" date,
 	"text" text,
 	"sha256" text,
+	"agreed_at" timestamp (3) with time zone,
 	"signed_at" timestamp (3) with time zone,
+	"withdrawn_at" timestamp (3) with time zone,
+	"withdrawn_by" text,
+	"withdrawn_reason" text,
 	"created_at" timestamp (3) with time zone NOT NULL,
 	"row_version" integer DEFAULT 1 NOT NULL,
 	CONSTRAINT "agreement_versions_relationship_id" UNIQUE("relationship_id","id"),
@@ -269,7 +275,8 @@ CREATE TABLE "agreements" (
 	"customer_org_id" uuid NOT NULL,
 	"part_id" uuid,
 	"characteristic_id" uuid,
-	"number" integer NOT NULL,
+	"number" integer,
+	"begun_by" text NOT NULL,
 	"created_at" timestamp (3) with time zone NOT NULL,
 	CONSTRAINT "agreements_relationship_id" UNIQUE("relationship_id","id"),
 	CONSTRAINT "agreements_number" UNIQUE("relationship_id","number")
@@ -290,6 +297,7 @@ CREATE TABLE "studies" (
 	"planned_readings" integer NOT NULL,
 	"plan" jsonb,
 	"run_sheet_seed" integer NOT NULL,
+	"slots" text[] DEFAULT '{}' NOT NULL,
 	"unit" text NOT NULL,
 	"measured_as" text NOT NULL,
 	"collected_on" date,
@@ -307,9 +315,12 @@ CREATE TABLE "study_data" (
 	"study_id" uuid NOT NULL,
 	"revision" integer NOT NULL,
 	"source" text NOT NULL,
+	"complete" boolean NOT NULL,
+	"reason" text,
 	"file_id" uuid,
 	"values" double precision[] NOT NULL,
 	"texts" text[] NOT NULL,
+	"left_out" jsonb DEFAULT '[]'::jsonb NOT NULL,
 	"appraiser" text NOT NULL,
 	"taken_by" uuid[] NOT NULL,
 	"collected_on" date NOT NULL,
@@ -385,6 +396,17 @@ CREATE TABLE "submission_files" (
 );
 --> statement-breakpoint
 ALTER TABLE "submission_files" ENABLE ROW LEVEL SECURITY;--> statement-breakpoint
+CREATE TABLE "submission_notes" (
+	"org_id" uuid NOT NULL,
+	"id" uuid PRIMARY KEY NOT NULL,
+	"relationship_id" uuid NOT NULL,
+	"submission_id" uuid NOT NULL,
+	"user_id" uuid NOT NULL,
+	"text" text NOT NULL,
+	"created_at" timestamp (3) with time zone NOT NULL
+);
+--> statement-breakpoint
+ALTER TABLE "submission_notes" ENABLE ROW LEVEL SECURITY;--> statement-breakpoint
 CREATE TABLE "submission_signatures" (
 	"id" uuid PRIMARY KEY NOT NULL,
 	"relationship_id" uuid NOT NULL,
@@ -410,23 +432,35 @@ CREATE TABLE "submission_studies" (
 );
 --> statement-breakpoint
 ALTER TABLE "submission_studies" ENABLE ROW LEVEL SECURITY;--> statement-breakpoint
+CREATE TABLE "submission_texts" (
+	"relationship_id" uuid NOT NULL,
+	"supplier_org_id" uuid NOT NULL,
+	"customer_org_id" uuid NOT NULL,
+	"submission_id" uuid NOT NULL,
+	"text" text NOT NULL,
+	"sha256" text NOT NULL,
+	"frozen_at" timestamp (3) with time zone NOT NULL,
+	CONSTRAINT "submission_texts_relationship_id_submission_id_pk" PRIMARY KEY("relationship_id","submission_id")
+);
+--> statement-breakpoint
+ALTER TABLE "submission_texts" ENABLE ROW LEVEL SECURITY;--> statement-breakpoint
 CREATE TABLE "submissions" (
 	"id" uuid PRIMARY KEY NOT NULL,
 	"relationship_id" uuid NOT NULL,
 	"supplier_org_id" uuid NOT NULL,
 	"customer_org_id" uuid NOT NULL,
-	"number" integer NOT NULL,
+	"number" integer,
 	"task_id" uuid NOT NULL,
 	"part_id" uuid NOT NULL,
 	"characteristic_id" uuid NOT NULL,
 	"state" text NOT NULL,
+	"state_since" timestamp (3) with time zone NOT NULL,
 	"created_at" timestamp (3) with time zone NOT NULL,
 	"created_by" uuid NOT NULL,
 	"sent_for_signature_at" timestamp (3) with time zone,
 	"submitted_at" timestamp (3) with time zone,
 	"decided_at" timestamp (3) with time zone,
-	"frozen_text" text,
-	"frozen_sha256" text,
+	"withdrawal_reason" text,
 	"verdict" text,
 	"clauses_met" integer,
 	"clauses_total" integer,
@@ -434,7 +468,8 @@ CREATE TABLE "submissions" (
 	"superseded_by" uuid,
 	"row_version" integer DEFAULT 1 NOT NULL,
 	CONSTRAINT "submissions_relationship_id" UNIQUE("relationship_id","id"),
-	CONSTRAINT "submissions_number" UNIQUE("relationship_id","number")
+	CONSTRAINT "submissions_number" UNIQUE("relationship_id","number"),
+	CONSTRAINT "submissions_signed_number" CHECK ((submitted_at is null) = (number is null))
 );
 --> statement-breakpoint
 ALTER TABLE "submissions" ENABLE ROW LEVEL SECURITY;--> statement-breakpoint
@@ -463,6 +498,7 @@ CREATE TABLE "challenges" (
 	"state" text NOT NULL,
 	"opened_by" uuid NOT NULL,
 	"opened_at" timestamp (3) with time zone NOT NULL,
+	"answered_at" timestamp (3) with time zone,
 	"closed_by" uuid,
 	"closed_at" timestamp (3) with time zone,
 	"row_version" integer DEFAULT 1 NOT NULL,
@@ -485,7 +521,8 @@ CREATE TABLE "decisions" (
 	"decided_by" uuid NOT NULL,
 	"decided_at" timestamp (3) with time zone NOT NULL,
 	"second_by" uuid,
-	"second_at" timestamp (3) with time zone
+	"second_at" timestamp (3) with time zone,
+	"sent_back_reason" text
 );
 --> statement-breakpoint
 ALTER TABLE "decisions" ENABLE ROW LEVEL SECURITY;--> statement-breakpoint
@@ -594,11 +631,14 @@ ALTER TABLE "submission_clauses" ADD CONSTRAINT "submission_clauses_submission_f
 ALTER TABLE "submission_clauses" ADD CONSTRAINT "submission_clauses_relationship_fk" FOREIGN KEY ("relationship_id","supplier_org_id","customer_org_id") REFERENCES "public"."relationships"("id","supplier_org_id","customer_org_id") ON DELETE no action ON UPDATE no action;--> statement-breakpoint
 ALTER TABLE "submission_files" ADD CONSTRAINT "submission_files_submission_fk" FOREIGN KEY ("relationship_id","submission_id") REFERENCES "public"."submissions"("relationship_id","id") ON DELETE no action ON UPDATE no action;--> statement-breakpoint
 ALTER TABLE "submission_files" ADD CONSTRAINT "submission_files_relationship_fk" FOREIGN KEY ("relationship_id","supplier_org_id","customer_org_id") REFERENCES "public"."relationships"("id","supplier_org_id","customer_org_id") ON DELETE no action ON UPDATE no action;--> statement-breakpoint
+ALTER TABLE "submission_notes" ADD CONSTRAINT "submission_notes_submission_fk" FOREIGN KEY ("relationship_id","submission_id") REFERENCES "public"."submissions"("relationship_id","id") ON DELETE no action ON UPDATE no action;--> statement-breakpoint
 ALTER TABLE "submission_signatures" ADD CONSTRAINT "submission_signatures_submission_fk" FOREIGN KEY ("relationship_id","submission_id") REFERENCES "public"."submissions"("relationship_id","id") ON DELETE no action ON UPDATE no action;--> statement-breakpoint
 ALTER TABLE "submission_signatures" ADD CONSTRAINT "submission_signatures_relationship_fk" FOREIGN KEY ("relationship_id","supplier_org_id","customer_org_id") REFERENCES "public"."relationships"("id","supplier_org_id","customer_org_id") ON DELETE no action ON UPDATE no action;--> statement-breakpoint
 ALTER TABLE "submission_studies" ADD CONSTRAINT "submission_studies_submission_fk" FOREIGN KEY ("relationship_id","submission_id") REFERENCES "public"."submissions"("relationship_id","id") ON DELETE no action ON UPDATE no action;--> statement-breakpoint
 ALTER TABLE "submission_studies" ADD CONSTRAINT "submission_studies_study_fk" FOREIGN KEY ("org_id","study_id") REFERENCES "public"."studies"("org_id","id") ON DELETE no action ON UPDATE no action;--> statement-breakpoint
 ALTER TABLE "submission_studies" ADD CONSTRAINT "submission_studies_data_fk" FOREIGN KEY ("org_id","data_id") REFERENCES "public"."study_data"("org_id","id") ON DELETE no action ON UPDATE no action;--> statement-breakpoint
+ALTER TABLE "submission_texts" ADD CONSTRAINT "submission_texts_submission_fk" FOREIGN KEY ("relationship_id","submission_id") REFERENCES "public"."submissions"("relationship_id","id") ON DELETE no action ON UPDATE no action;--> statement-breakpoint
+ALTER TABLE "submission_texts" ADD CONSTRAINT "submission_texts_relationship_fk" FOREIGN KEY ("relationship_id","supplier_org_id","customer_org_id") REFERENCES "public"."relationships"("id","supplier_org_id","customer_org_id") ON DELETE no action ON UPDATE no action;--> statement-breakpoint
 ALTER TABLE "submissions" ADD CONSTRAINT "submissions_task_fk" FOREIGN KEY ("relationship_id","task_id") REFERENCES "public"."measuring_tasks"("relationship_id","id") ON DELETE no action ON UPDATE no action;--> statement-breakpoint
 ALTER TABLE "submissions" ADD CONSTRAINT "submissions_relationship_fk" FOREIGN KEY ("relationship_id","supplier_org_id","customer_org_id") REFERENCES "public"."relationships"("id","supplier_org_id","customer_org_id") ON DELETE no action ON UPDATE no action;--> statement-breakpoint
 ALTER TABLE "challenge_messages" ADD CONSTRAINT "challenge_messages_challenge_fk" FOREIGN KEY ("relationship_id","challenge_id") REFERENCES "public"."challenges"("relationship_id","id") ON DELETE no action ON UPDATE no action;--> statement-breakpoint
@@ -618,13 +658,19 @@ CREATE INDEX "measuring_tasks_characteristic" ON "measuring_tasks" USING btree (
 CREATE INDEX "measuring_tasks_gauge" ON "measuring_tasks" USING btree ("supplier_org_id","gauge_id");--> statement-breakpoint
 CREATE INDEX "parts_supplier" ON "parts" USING btree ("supplier_org_id","number");--> statement-breakpoint
 CREATE INDEX "parts_customer" ON "parts" USING btree ("customer_org_id","number");--> statement-breakpoint
-CREATE UNIQUE INDEX "agreement_versions_one_open" ON "agreement_versions" USING btree ("relationship_id","agreement_id") WHERE state in ('draft', 'proposed', 'countered', 'agreed');--> statement-breakpoint
+CREATE UNIQUE INDEX "agreement_versions_one_open" ON "agreement_versions" USING btree ("relationship_id","agreement_id") WHERE state in ('proposed', 'countered');--> statement-breakpoint
+CREATE UNIQUE INDEX "agreement_versions_one_draft" ON "agreement_versions" USING btree ("relationship_id","agreement_id","begun_by") WHERE state = 'draft';--> statement-breakpoint
 CREATE INDEX "agreement_versions_supplier" ON "agreement_versions" USING btree ("supplier_org_id","state");--> statement-breakpoint
 CREATE INDEX "agreement_versions_customer" ON "agreement_versions" USING btree ("customer_org_id","state");--> statement-breakpoint
-CREATE UNIQUE INDEX "agreements_scope" ON "agreements" USING btree ("relationship_id",coalesce(part_id, '00000000-0000-0000-0000-000000000000'::uuid),coalesce(characteristic_id, '00000000-0000-0000-0000-000000000000'::uuid));--> statement-breakpoint
+CREATE UNIQUE INDEX "agreements_scope" ON "agreements" USING btree ("relationship_id",coalesce(part_id, '00000000-0000-0000-0000-000000000000'::uuid),coalesce(characteristic_id, '00000000-0000-0000-0000-000000000000'::uuid)) WHERE number is not null;--> statement-breakpoint
+CREATE UNIQUE INDEX "agreements_draft_scope" ON "agreements" USING btree ("relationship_id","begun_by",coalesce(part_id, '00000000-0000-0000-0000-000000000000'::uuid),coalesce(characteristic_id, '00000000-0000-0000-0000-000000000000'::uuid)) WHERE number is null;--> statement-breakpoint
+CREATE INDEX "agreements_supplier" ON "agreements" USING btree ("supplier_org_id","number");--> statement-breakpoint
+CREATE INDEX "agreements_customer" ON "agreements" USING btree ("customer_org_id","number");--> statement-breakpoint
 CREATE INDEX "studies_org_state" ON "studies" USING btree ("org_id","state","registered_at");--> statement-breakpoint
 CREATE INDEX "study_evaluations_study" ON "study_evaluations" USING btree ("org_id","study_id");--> statement-breakpoint
 CREATE INDEX "study_tasks_task" ON "study_tasks" USING btree ("org_id","task_id");--> statement-breakpoint
+CREATE INDEX "submission_notes_submission" ON "submission_notes" USING btree ("org_id","submission_id","created_at");--> statement-breakpoint
+CREATE UNIQUE INDEX "submissions_one_draft" ON "submissions" USING btree ("relationship_id","task_id") WHERE state in ('draft', 'for-signature');--> statement-breakpoint
 CREATE INDEX "submissions_supplier_state" ON "submissions" USING btree ("supplier_org_id","state","submitted_at");--> statement-breakpoint
 CREATE INDEX "submissions_customer_state" ON "submissions" USING btree ("customer_org_id","state","submitted_at");--> statement-breakpoint
 CREATE INDEX "submissions_task" ON "submissions" USING btree ("relationship_id","task_id");--> statement-breakpoint
@@ -656,19 +702,27 @@ CREATE POLICY "agreement_signatures_own_side" ON "agreement_signatures" AS RESTR
 CREATE POLICY "agreement_versions_parties" ON "agreement_versions" AS PERMISSIVE FOR ALL TO "evenrule_app" USING ((supplier_org_id = nullif(current_setting('app.org_id', true), '')::uuid or customer_org_id = nullif(current_setting('app.org_id', true), '')::uuid)) WITH CHECK ((supplier_org_id = nullif(current_setting('app.org_id', true), '')::uuid or customer_org_id = nullif(current_setting('app.org_id', true), '')::uuid));--> statement-breakpoint
 CREATE POLICY "agreement_versions_drafts" ON "agreement_versions" AS RESTRICTIVE FOR ALL TO "evenrule_app" USING (state <> 'draft' or ((begun_by = 'supplier' and supplier_org_id = nullif(current_setting('app.org_id', true), '')::uuid) or (begun_by = 'customer' and customer_org_id = nullif(current_setting('app.org_id', true), '')::uuid))) WITH CHECK (state <> 'draft' or ((begun_by = 'supplier' and supplier_org_id = nullif(current_setting('app.org_id', true), '')::uuid) or (begun_by = 'customer' and customer_org_id = nullif(current_setting('app.org_id', true), '')::uuid)));--> statement-breakpoint
 CREATE POLICY "agreements_parties" ON "agreements" AS PERMISSIVE FOR ALL TO "evenrule_app" USING ((supplier_org_id = nullif(current_setting('app.org_id', true), '')::uuid or customer_org_id = nullif(current_setting('app.org_id', true), '')::uuid)) WITH CHECK ((supplier_org_id = nullif(current_setting('app.org_id', true), '')::uuid or customer_org_id = nullif(current_setting('app.org_id', true), '')::uuid));--> statement-breakpoint
+CREATE POLICY "agreements_drafts" ON "agreements" AS RESTRICTIVE FOR ALL TO "evenrule_app" USING (number is not null or ((begun_by = 'supplier' and supplier_org_id = nullif(current_setting('app.org_id', true), '')::uuid) or (begun_by = 'customer' and customer_org_id = nullif(current_setting('app.org_id', true), '')::uuid))) WITH CHECK (number is not null or ((begun_by = 'supplier' and supplier_org_id = nullif(current_setting('app.org_id', true), '')::uuid) or (begun_by = 'customer' and customer_org_id = nullif(current_setting('app.org_id', true), '')::uuid)));--> statement-breakpoint
 CREATE POLICY "studies_owner" ON "studies" AS PERMISSIVE FOR ALL TO "evenrule_app" USING (org_id = nullif(current_setting('app.org_id', true), '')::uuid) WITH CHECK (org_id = nullif(current_setting('app.org_id', true), '')::uuid);--> statement-breakpoint
 CREATE POLICY "study_data_owner" ON "study_data" AS PERMISSIVE FOR ALL TO "evenrule_app" USING (org_id = nullif(current_setting('app.org_id', true), '')::uuid) WITH CHECK (org_id = nullif(current_setting('app.org_id', true), '')::uuid);--> statement-breakpoint
 CREATE POLICY "study_evaluations_owner" ON "study_evaluations" AS PERMISSIVE FOR ALL TO "evenrule_app" USING (org_id = nullif(current_setting('app.org_id', true), '')::uuid) WITH CHECK (org_id = nullif(current_setting('app.org_id', true), '')::uuid);--> statement-breakpoint
 CREATE POLICY "study_tasks_owner" ON "study_tasks" AS PERMISSIVE FOR ALL TO "evenrule_app" USING (org_id = nullif(current_setting('app.org_id', true), '')::uuid) WITH CHECK (org_id = nullif(current_setting('app.org_id', true), '')::uuid);--> statement-breakpoint
 CREATE POLICY "submission_clauses_parties" ON "submission_clauses" AS PERMISSIVE FOR ALL TO "evenrule_app" USING ((supplier_org_id = nullif(current_setting('app.org_id', true), '')::uuid or customer_org_id = nullif(current_setting('app.org_id', true), '')::uuid)) WITH CHECK ((supplier_org_id = nullif(current_setting('app.org_id', true), '')::uuid or customer_org_id = nullif(current_setting('app.org_id', true), '')::uuid));--> statement-breakpoint
 CREATE POLICY "submission_clauses_visible" ON "submission_clauses" AS RESTRICTIVE FOR ALL TO "evenrule_app" USING (exists (select 1 from submissions s where s.id = submission_id)) WITH CHECK (exists (select 1 from submissions s where s.id = submission_id));--> statement-breakpoint
+CREATE POLICY "submission_clauses_frozen" ON "submission_clauses" AS RESTRICTIVE FOR INSERT TO "evenrule_app" WITH CHECK (supplier_org_id = nullif(current_setting('app.org_id', true), '')::uuid and not exists (select 1 from submission_texts f where f.submission_id = submission_clauses.submission_id));--> statement-breakpoint
 CREATE POLICY "submission_files_parties" ON "submission_files" AS PERMISSIVE FOR ALL TO "evenrule_app" USING ((supplier_org_id = nullif(current_setting('app.org_id', true), '')::uuid or customer_org_id = nullif(current_setting('app.org_id', true), '')::uuid)) WITH CHECK ((supplier_org_id = nullif(current_setting('app.org_id', true), '')::uuid or customer_org_id = nullif(current_setting('app.org_id', true), '')::uuid));--> statement-breakpoint
 CREATE POLICY "submission_files_visible" ON "submission_files" AS RESTRICTIVE FOR ALL TO "evenrule_app" USING (exists (select 1 from submissions s where s.id = submission_id)) WITH CHECK (exists (select 1 from submissions s where s.id = submission_id));--> statement-breakpoint
+CREATE POLICY "submission_files_frozen" ON "submission_files" AS RESTRICTIVE FOR INSERT TO "evenrule_app" WITH CHECK (supplier_org_id = nullif(current_setting('app.org_id', true), '')::uuid and not exists (select 1 from submission_texts f where f.submission_id = submission_files.submission_id));--> statement-breakpoint
+CREATE POLICY "submission_notes_owner" ON "submission_notes" AS PERMISSIVE FOR ALL TO "evenrule_app" USING (org_id = nullif(current_setting('app.org_id', true), '')::uuid) WITH CHECK (org_id = nullif(current_setting('app.org_id', true), '')::uuid);--> statement-breakpoint
 CREATE POLICY "submission_signatures_parties" ON "submission_signatures" AS PERMISSIVE FOR ALL TO "evenrule_app" USING ((supplier_org_id = nullif(current_setting('app.org_id', true), '')::uuid or customer_org_id = nullif(current_setting('app.org_id', true), '')::uuid)) WITH CHECK ((supplier_org_id = nullif(current_setting('app.org_id', true), '')::uuid or customer_org_id = nullif(current_setting('app.org_id', true), '')::uuid));--> statement-breakpoint
 CREATE POLICY "submission_signatures_visible" ON "submission_signatures" AS RESTRICTIVE FOR ALL TO "evenrule_app" USING (exists (select 1 from submissions s where s.id = submission_id)) WITH CHECK (exists (select 1 from submissions s where s.id = submission_id));--> statement-breakpoint
 CREATE POLICY "submission_signatures_own_side" ON "submission_signatures" AS RESTRICTIVE FOR INSERT TO "evenrule_app" WITH CHECK (((side = 'supplier' and supplier_org_id = nullif(current_setting('app.org_id', true), '')::uuid) or (side = 'customer' and customer_org_id = nullif(current_setting('app.org_id', true), '')::uuid)));--> statement-breakpoint
 CREATE POLICY "submission_studies_owner" ON "submission_studies" AS PERMISSIVE FOR ALL TO "evenrule_app" USING (org_id = nullif(current_setting('app.org_id', true), '')::uuid) WITH CHECK (org_id = nullif(current_setting('app.org_id', true), '')::uuid);--> statement-breakpoint
+CREATE POLICY "submission_texts_parties" ON "submission_texts" AS PERMISSIVE FOR ALL TO "evenrule_app" USING ((supplier_org_id = nullif(current_setting('app.org_id', true), '')::uuid or customer_org_id = nullif(current_setting('app.org_id', true), '')::uuid)) WITH CHECK ((supplier_org_id = nullif(current_setting('app.org_id', true), '')::uuid or customer_org_id = nullif(current_setting('app.org_id', true), '')::uuid));--> statement-breakpoint
+CREATE POLICY "submission_texts_visible" ON "submission_texts" AS RESTRICTIVE FOR ALL TO "evenrule_app" USING (exists (select 1 from submissions s where s.id = submission_id)) WITH CHECK (exists (select 1 from submissions s where s.id = submission_id));--> statement-breakpoint
+CREATE POLICY "submission_texts_by_supplier" ON "submission_texts" AS RESTRICTIVE FOR INSERT TO "evenrule_app" WITH CHECK (supplier_org_id = nullif(current_setting('app.org_id', true), '')::uuid);--> statement-breakpoint
 CREATE POLICY "submissions_parties" ON "submissions" AS PERMISSIVE FOR ALL TO "evenrule_app" USING ((supplier_org_id = nullif(current_setting('app.org_id', true), '')::uuid or customer_org_id = nullif(current_setting('app.org_id', true), '')::uuid)) WITH CHECK ((supplier_org_id = nullif(current_setting('app.org_id', true), '')::uuid or customer_org_id = nullif(current_setting('app.org_id', true), '')::uuid));--> statement-breakpoint
+CREATE POLICY "submissions_by_supplier" ON "submissions" AS RESTRICTIVE FOR INSERT TO "evenrule_app" WITH CHECK (supplier_org_id = nullif(current_setting('app.org_id', true), '')::uuid);--> statement-breakpoint
 CREATE POLICY "submissions_drafts" ON "submissions" AS RESTRICTIVE FOR ALL TO "evenrule_app" USING (submitted_at is not null or supplier_org_id = nullif(current_setting('app.org_id', true), '')::uuid) WITH CHECK (submitted_at is not null or supplier_org_id = nullif(current_setting('app.org_id', true), '')::uuid);--> statement-breakpoint
 CREATE POLICY "challenge_messages_parties" ON "challenge_messages" AS PERMISSIVE FOR ALL TO "evenrule_app" USING ((supplier_org_id = nullif(current_setting('app.org_id', true), '')::uuid or customer_org_id = nullif(current_setting('app.org_id', true), '')::uuid)) WITH CHECK ((supplier_org_id = nullif(current_setting('app.org_id', true), '')::uuid or customer_org_id = nullif(current_setting('app.org_id', true), '')::uuid));--> statement-breakpoint
 CREATE POLICY "challenge_messages_own_side" ON "challenge_messages" AS RESTRICTIVE FOR INSERT TO "evenrule_app" WITH CHECK (((side = 'supplier' and supplier_org_id = nullif(current_setting('app.org_id', true), '')::uuid) or (side = 'customer' and customer_org_id = nullif(current_setting('app.org_id', true), '')::uuid)));--> statement-breakpoint

@@ -17,18 +17,28 @@ GRANT SELECT, INSERT, UPDATE ON
   sites, memberships, parts, part_revisions, characteristics, measuring_tasks,
   gauges, reference_standards, calibrations,
   agreements, agreement_versions, agreement_rounds,
-  studies, study_tasks, submissions, submission_studies, decisions, challenges, record_heads
+  studies, study_tasks, submission_studies, record_heads
   TO evenrule_app;
 --> statement-breakpoint
 -- What is written once and never changed.
 GRANT SELECT, INSERT ON
-  files, agreement_signatures, study_data, study_evaluations, submission_clauses, submission_files,
-  submission_signatures, challenge_messages, record_events
+  files, agreement_signatures, study_data, study_evaluations, submission_texts, submission_clauses,
+  submission_files, submission_signatures, submission_notes, challenge_messages, record_events
   TO evenrule_app;
+--> statement-breakpoint
+-- What these rows are about never changes, only where they stand.
+GRANT SELECT, INSERT, UPDATE (
+  number, state, state_since, sent_for_signature_at, submitted_at, decided_at, withdrawal_reason, verdict,
+  clauses_met, clauses_total, safety, superseded_by, row_version
+) ON submissions TO evenrule_app;
+--> statement-breakpoint
+GRANT SELECT, INSERT, UPDATE (state, second_by, second_at, sent_back_reason) ON decisions TO evenrule_app;
+--> statement-breakpoint
+GRANT SELECT, INSERT, UPDATE (state, answered_at, closed_by, closed_at, row_version) ON challenges TO evenrule_app;
 --> statement-breakpoint
 GRANT SELECT ON organisations, relationships TO evenrule_app;
 --> statement-breakpoint
-GRANT UPDATE (name, time_zone) ON organisations TO evenrule_app;
+GRANT UPDATE (name, time_zone, row_version) ON organisations TO evenrule_app;
 --> statement-breakpoint
 GRANT SELECT, UPDATE (name, muted_mail) ON users TO evenrule_app;
 --> statement-breakpoint
@@ -36,7 +46,7 @@ GRANT SELECT, UPDATE (read_at) ON messages TO evenrule_app;
 --> statement-breakpoint
 GRANT INSERT ON security_events TO evenrule_app;
 --> statement-breakpoint
-GRANT DELETE ON memberships, agreement_rounds, agreement_versions, submission_studies TO evenrule_app;
+GRANT DELETE ON memberships, agreements, agreement_rounds, agreement_versions, submission_studies TO evenrule_app;
 --> statement-breakpoint
 GRANT SELECT ON messages, users TO evenrule_system;
 --> statement-breakpoint

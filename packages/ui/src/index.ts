@@ -1,5 +1,6 @@
 export * from './charts'
 export * from './clauses'
+export * from './coverage'
 export * from './format'
 export * from './forms'
 export * from './margin-rule'

@@ -48,7 +48,10 @@ export function judgeClause(clause: Clause, facts: JudgementFacts): Judgement {
 /** Reads a clause; the first thing wrong with it is an `InvalidInput`. */
 export function readClause(reader: Reader): Clause {
   const { type, parameters, fields } = openClause(reader)
-  return assembled(type, collect(fields, (field) => readField(field, parameters)))
+  return assembled(
+    type,
+    collect(fields, (field) => readField(field, parameters)),
+  )
 }
 
 /** Reads a clause from unknown data, such as a request body or a stored agreement. */

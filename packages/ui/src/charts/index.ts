@@ -1,2 +1,8 @@
+export { default as AllowedBiasPlot } from './AllowedBiasPlot.vue'
+export { default as ChanceCurve } from './ChanceCurve.vue'
+export { default as CurvePlot } from './CurvePlot.vue'
+export { default as PlotFrame } from './PlotFrame.vue'
+export { default as RunPlot } from './RunPlot.vue'
 export * from './calendar'
+export type { CurveInput, CurveSeries, CurveStyle } from './curves'
 export * from './scales'

@@ -1,2 +1,10 @@
+export { default as ClauseForm } from './ClauseForm.vue'
 export { default as ClauseResultRow } from './ClauseResultRow.vue'
+export {
+  draftOf,
+  readDraftParameters,
+  type ClauseDraft,
+  type MarginDraft,
+  type ReadDraft,
+} from './clauseDraft'
 export { ruleFigures, type RuleFigures } from './ruleFigures'

@@ -49,8 +49,10 @@ const grouped = (text: string): string => {
   return fraction === undefined ? digits : `${digits}.${fraction}`
 }
 
+const closeUnits = new Set(['°', '′', '″'])
+
 /** A unit with the space that belongs before it; degrees of angle stand close. */
-export const unitText = (unit: Unit): string => (!unit ? '' : unit === '°' ? unit : thinSpace + unit)
+export const unitText = (unit: Unit): string => (!unit ? '' : closeUnits.has(unit) ? unit : thinSpace + unit)
 
 /**
  * A number for reading: true minus, the places asked for (or those of the resolution, or at most five

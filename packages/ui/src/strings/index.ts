@@ -8,9 +8,10 @@ export {
   subjectOf,
   subjectWords,
 } from './clauses'
+export { choiceWords, clauseFieldWords, marginBaseWords } from './fields'
 export { describeIncentive, incentiveWords, type IncentiveSentence } from './incentives'
 export { numberProblemWords, problemWords } from './problems'
-export { reasonWords, settleWords, type ReasonWords } from './reasons'
+export { describeReason, describeSettling, reasonWords, settleWords, type ReasonWords } from './reasons'
 export { roleWords, sideWords } from './roles'
 export { describeRule } from './rules'
 export {

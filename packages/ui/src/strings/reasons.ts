@@ -1,4 +1,5 @@
-import type { ReasonCode, SettleCode } from '@evenrule/metrology'
+import type { Reason, ReasonCode, SettleCode, Settling } from '@evenrule/metrology'
+import { formatChance, formatCount, formatDate } from '../format'
 
 export interface ReasonWords {
   /** Why the verdict is what it is. */
@@ -121,4 +122,48 @@ export const settleWords: Record<SettleCode, string> = {
     'The estimate lies so near the margin that no practical number of readings settles it.',
   'margin-undefined': 'A margin must be agreed first.',
   'not-an-equivalence': 'This clause has no number of readings that makes it surer.',
+}
+
+const numberOf = (reason: Reason, name: string): number | undefined => {
+  const value = reason[name]
+  return typeof value === 'number' ? value : undefined
+}
+const dayOf = (reason: Reason, name: string): string => {
+  const value = reason[name]
+  return formatDate(typeof value === 'string' ? value : null)
+}
+
+/** Sentences that name their figures, where the judgement gave them. */
+const detailed: Partial<Record<ReasonCode, (reason: Reason) => string | undefined>> = {
+  'too-few-readings': (reason) => {
+    const [readings, least] = [numberOf(reason, 'readings'), numberOf(reason, 'least')]
+    if (readings === undefined || least === undefined) return undefined
+    return `The study has ${formatCount(readings, 'reading')}; at least ${least} are agreed.`
+  },
+  'too-many-attempts': (reason) => {
+    const [attempts, most] = [numberOf(reason, 'attempts'), numberOf(reason, 'most')]
+    if (attempts === undefined || most === undefined) return undefined
+    return `This is attempt ${attempts} on the task; at most ${most} are agreed.`
+  },
+  'gauge-out-of-calibration': (reason) =>
+    'dueOn' in reason
+      ? `The gauge was calibrated ${dayOf(reason, 'calibratedOn')}, due ${dayOf(reason, 'dueOn')}; the readings were taken ${dayOf(reason, 'collectedOn')}.`
+      : undefined,
+  'standard-out-of-calibration': (reason) =>
+    'dueOn' in reason
+      ? `The reference standard was calibrated ${dayOf(reason, 'calibratedOn')}, due ${dayOf(reason, 'dueOn')}; the readings were taken ${dayOf(reason, 'collectedOn')}.`
+      : undefined,
+}
+
+/** Why a clause was judged as it was, with its figures where there are any, and what would mend it. */
+export function describeReason(reason: Reason): ReasonWords {
+  const words = reasonWords[reason.code]
+  return { ...words, sentence: detailed[reason.code]?.(reason) ?? words.sentence }
+}
+
+/** What would likely settle a clause that is not shown: "19 readings in all would show it with a chance of 90 %." */
+export function describeSettling({ reason, readings, chance }: Settling): string {
+  if (reason !== 'more-readings' || readings === null) return settleWords[reason]
+  const likely = chance === null ? '' : ` with a chance of ${formatChance(chance)}`
+  return `${formatCount(readings, 'reading')} in all would show it${likely}, if bias and spread stay as they are.`
 }

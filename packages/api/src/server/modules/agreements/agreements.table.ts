@@ -25,7 +25,15 @@ import {
 import { characteristics, parts } from '../parts/parts.table'
 import { relationships } from '../relationships/relationships.table'
 
-/** The thread of criteria for one scope: the whole relationship, one part number, or one characteristic. */
+const nobody = `'00000000-0000-0000-0000-000000000000'::uuid`
+const partOrNone = sql.raw(`coalesce(part_id, ${nobody})`)
+const characteristicOrNone = sql.raw(`coalesce(characteristic_id, ${nobody})`)
+
+/**
+ * The thread of criteria for one scope: the whole relationship, one part number, or one characteristic. It gets
+ * its number when the first proposal is sent; until then it is the draft of one side and the other side must not
+ * learn of it, not even through a number left out or a scope that is taken.
+ */
 export const agreements = pgTable(
   'agreements',
   {
@@ -33,18 +41,22 @@ export const agreements = pgTable(
     ...sharedColumns,
     partId: uuid(),
     characteristicId: uuid(),
-    /** Counts the agreements of this relationship, so that people can name them. */
-    number: integer().notNull(),
+    /** Counts the agreements of this relationship, so that people can name them; null until one is sent. */
+    number: integer(),
+    begunBy: text().$type<Side>().notNull(),
     createdAt: instant().notNull(),
   },
   (t) => [
     unique('agreements_relationship_id').on(t.relationshipId, t.id),
     unique('agreements_number').on(t.relationshipId, t.number),
-    uniqueIndex('agreements_scope').on(
-      t.relationshipId,
-      sql`coalesce(part_id, '00000000-0000-0000-0000-000000000000'::uuid)`,
-      sql`coalesce(characteristic_id, '00000000-0000-0000-0000-000000000000'::uuid)`,
-    ),
+    uniqueIndex('agreements_scope')
+      .on(t.relationshipId, partOrNone, characteristicOrNone)
+      .where(sql`number is not null`),
+    uniqueIndex('agreements_draft_scope')
+      .on(t.relationshipId, t.begunBy, partOrNone, characteristicOrNone)
+      .where(sql`number is null`),
+    index('agreements_supplier').on(t.supplierOrgId, t.number),
+    index('agreements_customer').on(t.customerOrgId, t.number),
     foreignKey({
       name: 'agreements_part_fk',
       columns: [t.relationshipId, t.partId],
@@ -57,6 +69,7 @@ export const agreements = pgTable(
     }),
     relationshipKey('agreements', t, () => relationships),
     sharedPolicy('agreements'),
+    restrictPolicy('agreements_drafts', `number is not null or ${ownSideOnly('begun_by')}`),
   ],
 )
 
@@ -69,7 +82,8 @@ export const agreementVersions = pgTable(
     id: primaryId(),
     ...sharedColumns,
     agreementId: uuid().notNull(),
-    number: integer().notNull(),
+    /** Counts the versions of the agreement that were sent; null for a draft. */
+    number: integer(),
     state: text().$type<StoredVersionState>().notNull(),
     /** The side that began it; a draft is seen by that side alone. */
     begunBy: text().$type<Side>().notNull(),
@@ -77,17 +91,26 @@ export const agreementVersions = pgTable(
     effectiveOn: date({ mode: 'string' }),
     text: text(),
     sha256: text(),
+    agreedAt: instant(),
     signedAt: instant(),
+    /** Set when it is withdrawn: when, by which side, and why. */
+    withdrawnAt: instant(),
+    withdrawnBy: text().$type<Side>(),
+    withdrawnReason: text(),
     createdAt: instant().notNull(),
     rowVersion: integer().notNull().default(1),
   },
   (t) => [
     unique('agreement_versions_relationship_id').on(t.relationshipId, t.id),
     unique('agreement_versions_number').on(t.relationshipId, t.agreementId, t.number),
-    // Only one version of a scope can be under negotiation at a time.
+    // Only one version of a scope can be under negotiation at a time, beside one unsent draft of each side.
+    // An agreed one that was not signed in time lapses by the calendar, so the service judges that case.
     uniqueIndex('agreement_versions_one_open')
       .on(t.relationshipId, t.agreementId)
-      .where(sql`state in ('draft', 'proposed', 'countered', 'agreed')`),
+      .where(sql`state in ('proposed', 'countered')`),
+    uniqueIndex('agreement_versions_one_draft')
+      .on(t.relationshipId, t.agreementId, t.begunBy)
+      .where(sql`state = 'draft'`),
     index('agreement_versions_supplier').on(t.supplierOrgId, t.state),
     index('agreement_versions_customer').on(t.customerOrgId, t.state),
     foreignKey({

@@ -1,5 +1,15 @@
 import { sql } from 'drizzle-orm'
-import { date, foreignKey, pgPolicy, pgTable, primaryKey, text, unique, uuid } from 'drizzle-orm/pg-core'
+import {
+  date,
+  foreignKey,
+  integer,
+  pgPolicy,
+  pgTable,
+  primaryKey,
+  text,
+  unique,
+  uuid,
+} from 'drizzle-orm/pg-core'
 import type { Role } from '../../../contract/access'
 import { instant, ownerColumn, ownerPolicy, primaryId } from '../../db/columns'
 import { users } from '../sign-in/sign-in.table'
@@ -12,6 +22,7 @@ export const organisations = pgTable(
     name: text().notNull(),
     timeZone: text().notNull(),
     createdAt: instant().notNull(),
+    rowVersion: integer().notNull().default(1),
   },
   () => [
     pgPolicy('organisations_self', {
@@ -41,6 +52,7 @@ export const memberships = pgTable(
     createdAt: instant().notNull(),
     /** Last day of the membership, for outside auditors; null for no end. */
     endsOn: date({ mode: 'string' }),
+    rowVersion: integer().notNull().default(1),
   },
   (t) => [
     primaryKey({ columns: [t.orgId, t.userId] }),

@@ -1,0 +1,66 @@
+import type { ClauseParameters, ClauseType, Margin } from '@evenrule/metrology'
+
+export interface FieldWords {
+  label: string
+  hint?: string
+  /** After the number, where the field has no unit of its own. */
+  suffix?: string
+}
+
+type Words = { [T in ClauseType]: { [F in keyof Required<ClauseParameters[T]>]: FieldWords } }
+
+/** Labels of the fields of every clause type; the forms are made from their descriptors. */
+export const clauseFieldWords: Words = {
+  'design-minimum': {
+    readings: { label: 'Least number of readings' },
+    registeredBeforehand: {
+      label: 'Registered before its first reading',
+      hint: 'So that a study cannot be chosen after its readings are seen.',
+    },
+    attempts: {
+      label: 'Most attempts',
+      hint: 'On one measuring task since the agreement came into force. Empty: any number, all of them named.',
+    },
+  },
+  'resolution-share': {
+    share: { label: 'Resolution at most' },
+    base: { label: 'Of', hint: 'What the smallest step of the gauge is compared with.' },
+  },
+  'calibration-in-date': {
+    gauge: { label: 'Gauge in calibration on the day of collection' },
+    standard: { label: 'Reference standard in calibration on the day of collection' },
+  },
+  'bias-equivalence': {
+    margin: { label: 'Margin either way', hint: 'The bias must be shown to lie within plus or minus this.' },
+    confidence: { label: 'Shown at', hint: 'Confidence of each of the two one-sided tests.' },
+  },
+  'bias-zero-test': {
+    alpha: {
+      label: 'Risk level α',
+      hint: 'Chance that a gauge without any bias is refused. A stricter level passes more gauges with a bias.',
+    },
+  },
+}
+
+export const marginBaseWords: Record<Margin['base'], string> = {
+  tolerance: '% of tolerance',
+  process: '% of process variation',
+  absolute: 'a value with its unit',
+}
+
+/** Entries of choice fields. */
+export const choiceWords: Record<string, string> = {
+  tolerance: 'tolerance',
+  process: 'process variation',
+}
+
+export const marginWords = { base: 'Given as', unit: 'Unit' } as const
+
+/** What is wrong with a number that lies outside the field's bounds. */
+export const boundsWords = {
+  whole: 'Enter a whole number.',
+  least: (bound: string) => `Enter ${bound} or more.`,
+  above: (bound: string) => `Enter more than ${bound}.`,
+  most: (bound: string) => `Enter ${bound} or less.`,
+  below: (bound: string) => `Enter less than ${bound}.`,
+} as const
