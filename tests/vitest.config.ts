@@ -1,0 +1,42 @@
+import vue from '@vitejs/plugin-vue'
+import vuetify from 'vite-plugin-vuetify'
+import { fileURLToPath } from 'node:url'
+import { defineConfig } from 'vitest/config'
+
+/** The projects that `npm test` runs in the order of infra/tests/stages.mjs. */
+const root = fileURLToPath(new URL('..', import.meta.url))
+const uiTests = ['packages/ui/**/*.test.ts', 'apps/**/*.test.ts']
+const never = ['**/node_modules/**', '.data/**']
+
+const project = (name: string, include: string[], test: object = {}) => ({
+  root,
+  test: { name, include, exclude: never, testTimeout: 30_000, hookTimeout: 60_000, ...test },
+})
+
+export default defineConfig({
+  root,
+  test: {
+    projects: [
+      project('unit', ['packages/**/*.test.ts', 'fakes/**/*.test.ts', 'infra/**/*.test.mjs'], {
+        exclude: [...never, ...uiTests],
+      }),
+      {
+        ...project('ui', uiTests, { environment: 'happy-dom', server: { deps: { inline: ['vuetify'] } } }),
+        plugins: [vue(), vuetify()],
+      },
+      project('reference', ['tests/reference/**/*.test.ts'], { testTimeout: 120_000 }),
+      project('api', ['tests/api/**/*.test.ts']),
+      project('security', ['tests/security/**/*.test.ts'], { testTimeout: 120_000 }),
+      project('browser', ['tests/browser/**/*.test.ts'], {
+        fileParallelism: false,
+        testTimeout: 300_000,
+        hookTimeout: 120_000,
+      }),
+      project('faults', ['tests/faults/**/*.test.ts'], {
+        fileParallelism: false,
+        testTimeout: 300_000,
+        hookTimeout: 120_000,
+      }),
+    ],
+  },
+})
