@@ -167,6 +167,8 @@ export async function startHarness() {
   return {
     database: database as Database,
     owner,
+    /** The address of this test's database for one of the product's roles. */
+    urlAs,
     services,
     routes,
     apps,

@@ -1,7 +1,6 @@
 /** What a process reads from its environment; every name is set by infra/start.mjs. */
 export interface Config {
   databaseUrl: string
-  systemDatabaseUrl: string
   sessionDatabaseUrl: string
   sessionSecret: string
   oidc: { issuer: string; supplier: OidcClient; customer: OidcClient }
@@ -9,13 +8,21 @@ export interface Config {
   ports: { supplier: number; customer: number }
   dist: { supplier: string; customer: string }
   s3: { endpoint: string; bucket: string; accessKeyId: string; secretAccessKey: string; region: string }
-  smtpUrl: string
   enginesDir: string
   logLevel: string
 }
 export interface OidcClient {
   id: string
   secret: string
+}
+
+/** What the worker reads: not the app's database role, and no secret of the sign-in or the files. */
+export interface WorkerConfig {
+  systemDatabaseUrl: string
+  origins: { supplier: string; customer: string }
+  smtpUrl: string
+  mailFrom: string
+  logLevel: string
 }
 
 function need(env: NodeJS.ProcessEnv, name: string): string {
@@ -28,7 +35,6 @@ function need(env: NodeJS.ProcessEnv, name: string): string {
 export function readConfig(env: NodeJS.ProcessEnv): Config {
   return {
     databaseUrl: need(env, 'DATABASE_URL'),
-    systemDatabaseUrl: need(env, 'SYSTEM_DATABASE_URL'),
     sessionDatabaseUrl: need(env, 'SESSION_DATABASE_URL'),
     sessionSecret: need(env, 'SESSION_SECRET'),
     oidc: {
@@ -42,7 +48,7 @@ export function readConfig(env: NodeJS.ProcessEnv): Config {
         secret: need(env, 'OIDC_CUSTOMER_CLIENT_SECRET'),
       },
     },
-    origins: { supplier: need(env, 'SUPPLIER_ORIGIN'), customer: need(env, 'CUSTOMER_ORIGIN') },
+    origins: readOrigins(env),
     ports: {
       supplier: Number(env.EVENRULE_SUPPLIER_PORT ?? 4310),
       customer: Number(env.EVENRULE_CUSTOMER_PORT ?? 4320),
@@ -55,8 +61,24 @@ export function readConfig(env: NodeJS.ProcessEnv): Config {
       secretAccessKey: need(env, 'S3_SECRET_ACCESS_KEY'),
       region: env.S3_REGION ?? 'us-east-1',
     },
-    smtpUrl: need(env, 'SMTP_URL'),
     enginesDir: need(env, 'ENGINES_DIR'),
     logLevel: env.LOG_LEVEL ?? 'info',
   }
 }
+
+/** Reads the worker's part of the environment. */
+export function readWorkerConfig(env: NodeJS.ProcessEnv): WorkerConfig {
+  const origins = readOrigins(env)
+  return {
+    systemDatabaseUrl: need(env, 'SYSTEM_DATABASE_URL'),
+    origins,
+    smtpUrl: need(env, 'SMTP_URL'),
+    mailFrom: env.MAIL_FROM ?? `Evenrule <evenrule@${new URL(origins.supplier).hostname}>`,
+    logLevel: env.LOG_LEVEL ?? 'info',
+  }
+}
+
+const readOrigins = (env: NodeJS.ProcessEnv) => ({
+  supplier: need(env, 'SUPPLIER_ORIGIN'),
+  customer: need(env, 'CUSTOMER_ORIGIN'),
+})

@@ -1,0 +1,46 @@
+import { pino } from 'pino'
+import { readWorkerConfig } from './config'
+import { openDatabase } from './db/database'
+import { openMail } from './integrations/mail'
+import { sendDueMail } from './modules/notifications/mail.service'
+
+/** How often to look for mail that is due, milliseconds. */
+const interval = 1_000
+
+const config = readWorkerConfig(process.env)
+const logger = pino({ level: config.logLevel, base: { process: 'worker' } })
+const { database, pool } = openDatabase(config.systemDatabaseUrl, 2)
+const transport = openMail({ url: config.smtpUrl, from: config.mailFrom })
+const stopping = new AbortController()
+for (const signal of ['SIGTERM', 'SIGINT'] as const) process.once(signal, () => stopping.abort())
+
+logger.info('worker ready')
+while (!stopping.signal.aborted) {
+  try {
+    await sendDueMail(
+      { database, transport, origins: config.origins, logger, clock: () => new Date() },
+      () => stopping.signal.aborted,
+    )
+  } catch (error) {
+    // The database may be away for a while; the mail waits in it and is looked for again.
+    logger.error({ err: error }, 'mail could not be looked for')
+  }
+  await pause(interval)
+}
+transport.close()
+await pool.end()
+logger.info('worker stopped')
+
+/** Waits, or not any longer once asked to stop. */
+function pause(milliseconds: number): Promise<void> {
+  return new Promise((resolve) => {
+    if (stopping.signal.aborted) return resolve()
+    const timer = setTimeout(done, milliseconds)
+    stopping.signal.addEventListener('abort', done, { once: true })
+    function done() {
+      clearTimeout(timer)
+      stopping.signal.removeEventListener('abort', done)
+      resolve()
+    }
+  })
+}
