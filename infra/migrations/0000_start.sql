@@ -417,6 +417,7 @@ CREATE TABLE "submission_signatures" (
 	"user_id" uuid NOT NULL,
 	"meaning" text NOT NULL,
 	"sha256" text NOT NULL,
+	"decision_id" uuid,
 	"signed_at" timestamp (3) with time zone NOT NULL,
 	"authenticated_at" timestamp (3) with time zone NOT NULL
 );
@@ -522,7 +523,8 @@ CREATE TABLE "decisions" (
 	"decided_at" timestamp (3) with time zone NOT NULL,
 	"second_by" uuid,
 	"second_at" timestamp (3) with time zone,
-	"sent_back_reason" text
+	"sent_back_reason" text,
+	CONSTRAINT "decisions_relationship_id" UNIQUE("relationship_id","id")
 );
 --> statement-breakpoint
 ALTER TABLE "decisions" ENABLE ROW LEVEL SECURITY;--> statement-breakpoint
@@ -632,6 +634,7 @@ ALTER TABLE "submission_clauses" ADD CONSTRAINT "submission_clauses_relationship
 ALTER TABLE "submission_files" ADD CONSTRAINT "submission_files_submission_fk" FOREIGN KEY ("relationship_id","submission_id") REFERENCES "public"."submissions"("relationship_id","id") ON DELETE no action ON UPDATE no action;--> statement-breakpoint
 ALTER TABLE "submission_files" ADD CONSTRAINT "submission_files_relationship_fk" FOREIGN KEY ("relationship_id","supplier_org_id","customer_org_id") REFERENCES "public"."relationships"("id","supplier_org_id","customer_org_id") ON DELETE no action ON UPDATE no action;--> statement-breakpoint
 ALTER TABLE "submission_notes" ADD CONSTRAINT "submission_notes_submission_fk" FOREIGN KEY ("relationship_id","submission_id") REFERENCES "public"."submissions"("relationship_id","id") ON DELETE no action ON UPDATE no action;--> statement-breakpoint
+ALTER TABLE "submission_signatures" ADD CONSTRAINT "submission_signatures_decision_fk" FOREIGN KEY ("relationship_id","decision_id") REFERENCES "public"."decisions"("relationship_id","id") ON DELETE no action ON UPDATE no action;--> statement-breakpoint
 ALTER TABLE "submission_signatures" ADD CONSTRAINT "submission_signatures_submission_fk" FOREIGN KEY ("relationship_id","submission_id") REFERENCES "public"."submissions"("relationship_id","id") ON DELETE no action ON UPDATE no action;--> statement-breakpoint
 ALTER TABLE "submission_signatures" ADD CONSTRAINT "submission_signatures_relationship_fk" FOREIGN KEY ("relationship_id","supplier_org_id","customer_org_id") REFERENCES "public"."relationships"("id","supplier_org_id","customer_org_id") ON DELETE no action ON UPDATE no action;--> statement-breakpoint
 ALTER TABLE "submission_studies" ADD CONSTRAINT "submission_studies_submission_fk" FOREIGN KEY ("relationship_id","submission_id") REFERENCES "public"."submissions"("relationship_id","id") ON DELETE no action ON UPDATE no action;--> statement-breakpoint
@@ -669,13 +672,17 @@ CREATE INDEX "agreements_customer" ON "agreements" USING btree ("customer_org_id
 CREATE INDEX "studies_org_state" ON "studies" USING btree ("org_id","state","registered_at");--> statement-breakpoint
 CREATE INDEX "study_evaluations_study" ON "study_evaluations" USING btree ("org_id","study_id");--> statement-breakpoint
 CREATE INDEX "study_tasks_task" ON "study_tasks" USING btree ("org_id","task_id");--> statement-breakpoint
+CREATE INDEX "submission_files_submission" ON "submission_files" USING btree ("relationship_id","submission_id");--> statement-breakpoint
 CREATE INDEX "submission_notes_submission" ON "submission_notes" USING btree ("org_id","submission_id","created_at");--> statement-breakpoint
+CREATE INDEX "submission_signatures_submission" ON "submission_signatures" USING btree ("relationship_id","submission_id");--> statement-breakpoint
 CREATE UNIQUE INDEX "submissions_one_draft" ON "submissions" USING btree ("relationship_id","task_id") WHERE state in ('draft', 'for-signature');--> statement-breakpoint
-CREATE INDEX "submissions_supplier_state" ON "submissions" USING btree ("supplier_org_id","state","submitted_at");--> statement-breakpoint
-CREATE INDEX "submissions_customer_state" ON "submissions" USING btree ("customer_org_id","state","submitted_at");--> statement-breakpoint
+CREATE INDEX "submissions_supplier_state" ON "submissions" USING btree ("supplier_org_id","state","state_since");--> statement-breakpoint
+CREATE INDEX "submissions_customer_state" ON "submissions" USING btree ("customer_org_id","state","state_since");--> statement-breakpoint
 CREATE INDEX "submissions_task" ON "submissions" USING btree ("relationship_id","task_id");--> statement-breakpoint
 CREATE INDEX "challenge_messages_challenge" ON "challenge_messages" USING btree ("relationship_id","challenge_id","created_at");--> statement-breakpoint
 CREATE INDEX "decisions_submission" ON "decisions" USING btree ("relationship_id","submission_id");--> statement-breakpoint
+CREATE UNIQUE INDEX "decisions_one_final" ON "decisions" USING btree ("relationship_id","submission_id") WHERE state = 'final';--> statement-breakpoint
+CREATE UNIQUE INDEX "decisions_one_proposed" ON "decisions" USING btree ("relationship_id","submission_id") WHERE state = 'awaiting-second-person';--> statement-breakpoint
 CREATE INDEX "record_events_subject" ON "record_events" USING btree ("chain_id","subject_type","subject_id");--> statement-breakpoint
 CREATE INDEX "messages_person" ON "messages" USING btree ("org_id","user_id","created_at");--> statement-breakpoint
 CREATE INDEX "outbox_due" ON "outbox" USING btree ("next_attempt_at") WHERE sent_at is null;--> statement-breakpoint
@@ -717,6 +724,7 @@ CREATE POLICY "submission_notes_owner" ON "submission_notes" AS PERMISSIVE FOR A
 CREATE POLICY "submission_signatures_parties" ON "submission_signatures" AS PERMISSIVE FOR ALL TO "evenrule_app" USING ((supplier_org_id = nullif(current_setting('app.org_id', true), '')::uuid or customer_org_id = nullif(current_setting('app.org_id', true), '')::uuid)) WITH CHECK ((supplier_org_id = nullif(current_setting('app.org_id', true), '')::uuid or customer_org_id = nullif(current_setting('app.org_id', true), '')::uuid));--> statement-breakpoint
 CREATE POLICY "submission_signatures_visible" ON "submission_signatures" AS RESTRICTIVE FOR ALL TO "evenrule_app" USING (exists (select 1 from submissions s where s.id = submission_id)) WITH CHECK (exists (select 1 from submissions s where s.id = submission_id));--> statement-breakpoint
 CREATE POLICY "submission_signatures_own_side" ON "submission_signatures" AS RESTRICTIVE FOR INSERT TO "evenrule_app" WITH CHECK (((side = 'supplier' and supplier_org_id = nullif(current_setting('app.org_id', true), '')::uuid) or (side = 'customer' and customer_org_id = nullif(current_setting('app.org_id', true), '')::uuid)));--> statement-breakpoint
+CREATE POLICY "submission_signatures_decided" ON "submission_signatures" AS RESTRICTIVE FOR SELECT TO "evenrule_app" USING (decision_id is null or exists (select 1 from decisions d where d.id = decision_id));--> statement-breakpoint
 CREATE POLICY "submission_studies_owner" ON "submission_studies" AS PERMISSIVE FOR ALL TO "evenrule_app" USING (org_id = nullif(current_setting('app.org_id', true), '')::uuid) WITH CHECK (org_id = nullif(current_setting('app.org_id', true), '')::uuid);--> statement-breakpoint
 CREATE POLICY "submission_texts_parties" ON "submission_texts" AS PERMISSIVE FOR ALL TO "evenrule_app" USING ((supplier_org_id = nullif(current_setting('app.org_id', true), '')::uuid or customer_org_id = nullif(current_setting('app.org_id', true), '')::uuid)) WITH CHECK ((supplier_org_id = nullif(current_setting('app.org_id', true), '')::uuid or customer_org_id = nullif(current_setting('app.org_id', true), '')::uuid));--> statement-breakpoint
 CREATE POLICY "submission_texts_visible" ON "submission_texts" AS RESTRICTIVE FOR ALL TO "evenrule_app" USING (exists (select 1 from submissions s where s.id = submission_id)) WITH CHECK (exists (select 1 from submissions s where s.id = submission_id));--> statement-breakpoint

@@ -1,4 +1,15 @@
-import { date, foreignKey, index, integer, pgTable, text, unique, uuid } from 'drizzle-orm/pg-core'
+import { sql } from 'drizzle-orm'
+import {
+  date,
+  foreignKey,
+  index,
+  integer,
+  pgTable,
+  text,
+  unique,
+  uniqueIndex,
+  uuid,
+} from 'drizzle-orm/pg-core'
 import type { Side } from '../../../contract/access'
 import type { ChallengeState } from '../../../contract/moves/challenge'
 import type { ChallengeReason } from '../../../contract/reviews'
@@ -35,7 +46,14 @@ export const decisions = pgTable(
     sentBackReason: text(),
   },
   (t) => [
+    unique('decisions_relationship_id').on(t.relationshipId, t.id),
     index('decisions_submission').on(t.relationshipId, t.submissionId),
+    uniqueIndex('decisions_one_final')
+      .on(t.relationshipId, t.submissionId)
+      .where(sql`state = 'final'`),
+    uniqueIndex('decisions_one_proposed')
+      .on(t.relationshipId, t.submissionId)
+      .where(sql`state = 'awaiting-second-person'`),
     foreignKey({
       name: 'decisions_submission_fk',
       columns: [t.relationshipId, t.submissionId],

@@ -28,6 +28,7 @@ import {
 } from '../../db/columns'
 import { measuringTasks } from '../parts/parts.table'
 import { relationships } from '../relationships/relationships.table'
+import { decisions } from '../reviews/reviews.table'
 import { studies, studyData } from '../studies/studies.table'
 
 /** What a supplier puts before one customer for one measuring task. The customer sees it once it is submitted. */
@@ -70,8 +71,8 @@ export const submissions = pgTable(
       .on(t.relationshipId, t.taskId)
       .where(sql`state in ('draft', 'for-signature')`),
     check('submissions_signed_number', sql`(submitted_at is null) = (number is null)`),
-    index('submissions_supplier_state').on(t.supplierOrgId, t.state, t.submittedAt),
-    index('submissions_customer_state').on(t.customerOrgId, t.state, t.submittedAt),
+    index('submissions_supplier_state').on(t.supplierOrgId, t.state, t.stateSince),
+    index('submissions_customer_state').on(t.customerOrgId, t.state, t.stateSince),
     index('submissions_task').on(t.relationshipId, t.taskId),
     foreignKey({
       name: 'submissions_task_fk',
@@ -217,6 +218,7 @@ export const submissionFiles = pgTable(
     storageKey: text().notNull(),
   },
   (t) => [
+    index('submission_files_submission').on(t.relationshipId, t.submissionId),
     foreignKey({
       name: 'submission_files_submission_fk',
       columns: [t.relationshipId, t.submissionId],
@@ -242,10 +244,18 @@ export const submissionSignatures = pgTable(
     userId: uuid().notNull(),
     meaning: text().$type<SignatureMeaning>().notNull(),
     sha256: text().notNull(),
+    /** The decision it is part of; null under the submission itself. */
+    decisionId: uuid(),
     signedAt: instant().notNull(),
     authenticatedAt: instant().notNull(),
   },
   (t) => [
+    index('submission_signatures_submission').on(t.relationshipId, t.submissionId),
+    foreignKey({
+      name: 'submission_signatures_decision_fk',
+      columns: [t.relationshipId, t.decisionId],
+      foreignColumns: [decisions.relationshipId, decisions.id],
+    }),
     foreignKey({
       name: 'submission_signatures_submission_fk',
       columns: [t.relationshipId, t.submissionId],
@@ -255,5 +265,11 @@ export const submissionSignatures = pgTable(
     sharedPolicy('submission_signatures'),
     restrictPolicy('submission_signatures_visible', ofVisibleSubmission),
     restrictPolicy('submission_signatures_own_side', ownSideOnly('side'), 'insert'),
+    // A signature under a decision that waits for its second person is as little the supplier's to see as that is.
+    restrictPolicy(
+      'submission_signatures_decided',
+      'decision_id is null or exists (select 1 from decisions d where d.id = decision_id)',
+      'select',
+    ),
   ],
 )
