@@ -27,28 +27,52 @@ export interface Base {
   relationships: SeededRelationship[]
 }
 
+const begun = 'demonstration begun'
+const complete = 'demonstration complete'
+
 /**
  * What has no service yet because it comes by invitation: organisations, people, memberships, relationships.
  * Written by the owner of the database in one transaction; undefined when the demonstration is there already.
+ * One that was cut off is begun anew: nothing but it can be in the database then.
  */
 export async function seedBase(ownerUrl: string, issuer: string, at: string): Promise<Base | undefined> {
+  return asOwner(ownerUrl, async (client) => {
+    // Two starts at once must not seed twice.
+    await client.query('select pg_advisory_xact_lock(4310)')
+    const { rows } = await client.query<{ mark: string | null; there: boolean }>(
+      "select obj_description('public'::regnamespace, 'pg_namespace') as mark, exists (select 1 from organisations) as there",
+    )
+    if (rows[0]?.mark === begun) await emptyAll(client)
+    else if (rows[0]?.there) return undefined
+    await client.query(`comment on schema public is '${begun}'`)
+    return insertBase(client, issuer, at)
+  })
+}
+
+/** Notes that the demonstration is whole. */
+export async function finishSeed(ownerUrl: string): Promise<void> {
+  await asOwner(ownerUrl, (client) => client.query(`comment on schema public is '${complete}'`))
+}
+
+async function asOwner<T>(ownerUrl: string, work: (client: pg.Client) => Promise<T>): Promise<T> {
   const client = new pg.Client({ connectionString: ownerUrl })
   await client.connect()
   try {
     await client.query('begin')
-    // Two starts at once must not seed twice.
-    await client.query('select pg_advisory_xact_lock(4310)')
-    const there = await client.query('select 1 from organisations limit 1')
-    if (there.rowCount) {
-      await client.query('rollback')
-      return undefined
-    }
-    const base = await insertBase(client, issuer, at)
+    const result = await work(client)
     await client.query('commit')
-    return base
+    return result
   } finally {
+    // Closing without a commit rolls back.
     await client.end()
   }
+}
+
+async function emptyAll(client: pg.Client): Promise<void> {
+  const { rows } = await client.query<{ name: string }>(
+    "select quote_ident(tablename) as name from pg_tables where schemaname = 'public'",
+  )
+  await client.query(`truncate ${rows.map(({ name }) => name).join(', ')} cascade`)
 }
 
 async function insertBase(client: pg.Client, issuer: string, at: string): Promise<Base> {

@@ -172,3 +172,6 @@ export const parts: DemoPart[] = [
     ],
   },
 ]
+
+/** Entered by the supplier and waiting for the customer's confirmation. */
+export const unconfirmed: readonly string[] = ['3310-417/2', 'NV-55-322/2']
