@@ -31,3 +31,30 @@ export const possibleMoves = <M extends Move<string>>(
     (move) =>
       (move.from as readonly string[]).includes(state) && move.side === side && holds(move.permission),
   )
+
+/** What a service knows of the named conditions; one that is not named does not hold. */
+export type Facts<Precondition extends string> = Partial<Record<Precondition, boolean>>
+
+/** The conditions of a move that do not hold. */
+export const unmet = <P extends string>(move: Pick<Move<string, P>, 'preconditions'>, facts: Facts<P>): P[] =>
+  move.preconditions.filter((each) => !facts[each])
+
+/**
+ * Of moves that may start from where the aggregate stands, the one whose conditions hold, the most particular where
+ * several do. Where none may be made, the first condition that keeps the nearest one back.
+ */
+export function chooseMove<P extends string, M extends Move<string, P>>(
+  candidates: readonly M[],
+  facts: Facts<P>,
+): { move: M; refused: null } | { move: null; refused: P } | { move: null; refused: null } {
+  const nearestFirst = candidates
+    .map((move) => ({ move, lacking: unmet(move, facts) }))
+    .sort(
+      (a, b) =>
+        a.lacking.length - b.lacking.length || b.move.preconditions.length - a.move.preconditions.length,
+    )
+  const [nearest] = nearestFirst
+  if (!nearest) return { move: null, refused: null }
+  const [refused] = nearest.lacking
+  return refused === undefined ? { move: nearest.move, refused: null } : { move: null, refused }
+}

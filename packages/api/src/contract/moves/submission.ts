@@ -248,19 +248,19 @@ export const submissionMove = (
   name: SubmissionMoveName,
   from: SubmissionState | null,
   to: SubmissionState,
-): SubmissionMove | undefined =>
-  submissionMoves.find(
+): SubmissionMove | undefined => movesNamed(name, from).find((move) => move.to === to)
+
+/** Every row of that name that may start from the state; null where there is no submission yet. */
+export const movesNamed = (name: SubmissionMoveName, from: SubmissionState | null): SubmissionMove[] =>
+  submissionMoves.filter(
     (move) =>
       move.name === name &&
-      move.to === to &&
       (from === null ? move.from.length === 0 : (move.from as readonly SubmissionState[]).includes(from)),
   )
 
 /** Whether a move of that name may start from the state. */
 export const mayStart = (name: SubmissionMoveName, from: SubmissionState): boolean =>
-  submissionMoves.some(
-    (move) => move.name === name && (move.from as readonly SubmissionState[]).includes(from),
-  )
+  movesNamed(name, from).length > 0
 
 /** Which side the next step is up to; null where nothing waits. */
 export const waitsOn: Record<SubmissionState, Side | null> = {

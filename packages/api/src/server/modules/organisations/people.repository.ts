@@ -1,0 +1,18 @@
+import { sql } from 'drizzle-orm'
+import type { Tenant } from '../../db/tenant'
+
+/**
+ * Names of people by id, of those who are members of this organisation or of one it has a relationship with. Who is
+ * not in the map (erased, or a stranger by now) may not be named.
+ */
+export async function namesOfPeople(
+  { tx }: Tenant,
+  ids: readonly (string | null)[],
+): Promise<Map<string, string>> {
+  const wanted = [...new Set(ids.filter((id) => id !== null))]
+  if (wanted.length === 0) return new Map()
+  const { rows } = await tx.execute<{ id: string; name: string }>(
+    sql`select id, name from names_of_people(${sql.param(wanted)}::uuid[])`,
+  )
+  return new Map(rows.map(({ id, name }) => [id, name]))
+}
