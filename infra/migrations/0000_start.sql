@@ -289,6 +289,7 @@ CREATE TABLE "studies" (
 	"code" text NOT NULL,
 	"kind" text NOT NULL,
 	"gauge_id" uuid NOT NULL,
+	"gauge" jsonb NOT NULL,
 	"standard_id" uuid NOT NULL,
 	"state" text NOT NULL,
 	"registered_at" timestamp (3) with time zone NOT NULL,
@@ -318,6 +319,8 @@ CREATE TABLE "study_data" (
 	"complete" boolean NOT NULL,
 	"reason" text,
 	"file_id" uuid,
+	"read_as" jsonb NOT NULL,
+	"standard" jsonb NOT NULL,
 	"values" double precision[] NOT NULL,
 	"texts" text[] NOT NULL,
 	"left_out" jsonb DEFAULT '[]'::jsonb NOT NULL,
@@ -359,7 +362,8 @@ CREATE TABLE "study_tasks" (
 	"attempt" integer NOT NULL,
 	"criteria" jsonb NOT NULL,
 	"characteristic" jsonb NOT NULL,
-	CONSTRAINT "study_tasks_org_id_study_id_task_id_pk" PRIMARY KEY("org_id","study_id","task_id")
+	CONSTRAINT "study_tasks_org_id_study_id_task_id_pk" PRIMARY KEY("org_id","study_id","task_id"),
+	CONSTRAINT "study_tasks_attempt" UNIQUE("org_id","task_id","attempt")
 );
 --> statement-breakpoint
 ALTER TABLE "study_tasks" ENABLE ROW LEVEL SECURITY;--> statement-breakpoint
@@ -671,7 +675,6 @@ CREATE INDEX "agreements_supplier" ON "agreements" USING btree ("supplier_org_id
 CREATE INDEX "agreements_customer" ON "agreements" USING btree ("customer_org_id","number");--> statement-breakpoint
 CREATE INDEX "studies_org_state" ON "studies" USING btree ("org_id","state","registered_at");--> statement-breakpoint
 CREATE INDEX "study_evaluations_study" ON "study_evaluations" USING btree ("org_id","study_id");--> statement-breakpoint
-CREATE INDEX "study_tasks_task" ON "study_tasks" USING btree ("org_id","task_id");--> statement-breakpoint
 CREATE INDEX "submission_files_submission" ON "submission_files" USING btree ("relationship_id","submission_id");--> statement-breakpoint
 CREATE INDEX "submission_notes_submission" ON "submission_notes" USING btree ("org_id","submission_id","created_at");--> statement-breakpoint
 CREATE INDEX "submission_signatures_submission" ON "submission_signatures" USING btree ("relationship_id","submission_id");--> statement-breakpoint

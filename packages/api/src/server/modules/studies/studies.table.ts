@@ -14,6 +14,7 @@ import {
   uuid,
 } from 'drizzle-orm/pg-core'
 import type { StudyState } from '../../../contract/moves/study'
+import type { ReadAs } from '../../../contract/readings'
 import { instant, ownerColumn, ownerPolicy, primaryId } from '../../db/columns'
 import { files } from '../files/files.table'
 import { gauges, referenceStandards } from '../gauges/gauges.table'
@@ -48,6 +49,24 @@ export interface FrozenCharacteristic {
   processStandardDeviation: string | null
 }
 
+/** The gauge as it stood at registration; decimal text as entered. */
+export interface FrozenGauge {
+  code: string
+  name: string
+  resolution: string
+  unit: string
+}
+
+/** The reference standard as it stood when readings were stored; decimal text as entered. */
+export interface FrozenStandard {
+  code: string
+  name: string
+  certifiedValue: string
+  unit: string
+  expandedUncertainty: string | null
+  coverageFactor: string
+}
+
 /** A row of a file that held no number where a reading was expected, left out by the person who stored it. */
 export interface LeftOutRow {
   row: number
@@ -65,6 +84,7 @@ export const studies = pgTable(
     code: text().notNull(),
     kind: text().$type<'bias'>().notNull(),
     gaugeId: uuid().notNull(),
+    gauge: jsonb().$type<FrozenGauge>().notNull(),
     standardId: uuid().notNull(),
     state: text().$type<StudyState>().notNull(),
     registeredAt: instant().notNull(),
@@ -120,7 +140,7 @@ export const studyTasks = pgTable(
   },
   (t) => [
     primaryKey({ columns: [t.orgId, t.studyId, t.taskId] }),
-    index('study_tasks_task').on(t.orgId, t.taskId),
+    unique('study_tasks_attempt').on(t.orgId, t.taskId, t.attempt),
     foreignKey({
       name: 'study_tasks_study_fk',
       columns: [t.orgId, t.studyId],
@@ -154,6 +174,10 @@ export const studyData = pgTable(
     /** Why readings that were judged before were replaced. */
     reason: text(),
     fileId: uuid(),
+    /** How the text was read: encoding, separator, decimal mark, column. */
+    readAs: jsonb().$type<ReadAs>().notNull(),
+    /** The standard in use, with its values of the day of storing. */
+    standard: jsonb().$type<FrozenStandard>().notNull(),
     values: doublePrecision().array().notNull(),
     /** Each reading as it was entered. */
     texts: text().array().notNull(),

@@ -1,0 +1,131 @@
+import { z } from 'zod'
+import { line } from './common'
+
+/** Largest file of readings, in bytes, and the most readings one study holds. */
+export const largestReadingsFile = 5_000_000
+export const mostReadings = 100_000
+
+export const encodings = ['utf-8', 'windows-1252', 'utf-16'] as const
+export const separators = ['comma', 'semicolon', 'tab', 'none'] as const
+export const decimalMarks = ['point', 'comma'] as const
+/** Down one column, or, where there is a single row of numbers, across it. */
+export const directions = ['down', 'across'] as const
+
+/** How a text or a file was read. */
+export const readAsSchema = z.object({
+  encoding: z.enum(encodings),
+  byteOrderMark: z.boolean(),
+  separator: z.enum(separators),
+  decimal: z.enum(decimalMarks),
+  direction: z.enum(directions),
+  /** Rows above the first reading that name the columns or tell something else. */
+  headerRows: z.number().int(),
+  /** Letter of the column with the readings, as spreadsheets name it; null where they lie across a row. */
+  column: z.string().nullable(),
+  columnName: z.string().nullable(),
+})
+export type ReadAs = z.output<typeof readAsSchema>
+
+const detected = 'Leave it out to have it detected.'
+/** What to read and how; every part of the how that is left out is detected and named in the answer. */
+export const readingsInput = z.object({
+  /** Typed readings (one per line) or what was pasted; left out when a file is sent. */
+  text: z
+    .string()
+    .max(4_000_000, 'This is too much to paste. Save it as a CSV file and upload it.')
+    .optional(),
+  /** How the text came about. Typed lines hold one reading each and are never split at commas. */
+  source: z.enum(['typed', 'pasted', 'uploaded']),
+  encoding: z.enum(encodings, `Choose one of ${encodings.join(', ')}. ${detected}`).optional(),
+  separator: z.enum(separators, `Choose one of ${separators.join(', ')}. ${detected}`).optional(),
+  decimal: z.enum(decimalMarks, `Choose point or comma. ${detected}`).optional(),
+  direction: z.enum(directions, `Choose down or across. ${detected}`).optional(),
+  /** Rows to pass over at the top. */
+  headerRows: z.number().int().min(0).max(1000).optional(),
+  /** Letter of the column that holds the readings. */
+  column: z
+    .string()
+    .regex(/^[A-Z]{1,3}$/, 'Name the column by its letter, such as B.')
+    .optional(),
+})
+export type ReadingsInput = z.output<typeof readingsInput>
+
+export const cellProblems = [
+  'empty',
+  'not-a-number',
+  'thousands-separator',
+  'other-decimal-mark',
+  'unit-in-cell',
+  'too-long',
+  'too-large',
+  'unstorable-character',
+  'broken-quotes',
+] as const
+export type CellProblem = (typeof cellProblems)[number]
+
+export const cellErrorSchema = z.object({
+  code: z.enum(cellProblems),
+  row: z.number().int(),
+  column: z.string(),
+  /** The cell as it stands there. */
+  text: z.string(),
+  /** What is wrong and how to mend it. */
+  message: z.string(),
+})
+export type CellError = z.output<typeof cellErrorSchema>
+
+export const noteCodes = [
+  /** About how it was read. */
+  'comma-read-as-decimal',
+  'comma-read-as-separator',
+  'comma-both',
+  'column-chosen',
+  'read-across',
+  'rows-passed-over',
+  'bare-latin-1',
+  /** About the readings against the study. */
+  'more-than-planned',
+  'fewer-than-planned',
+  'finer-than-resolution',
+  'far-from-reference',
+  'looks-like-values',
+  'looks-like-deviations',
+] as const
+export type NoteCode = (typeof noteCodes)[number]
+
+export const readingsNoteSchema = z.object({
+  code: z.enum(noteCodes),
+  message: z.string(),
+  /** Numbers of the readings it is about, counted from 1 (the first few); empty where it is about all. */
+  readings: z.array(z.number().int()),
+})
+export type ReadingsNote = z.output<typeof readingsNoteSchema>
+
+export const readingsPreviewSchema = z.object({
+  readAs: readAsSchema,
+  /** How many columns hold numbers, and which was taken. */
+  columns: z.array(
+    z.object({
+      letter: z.string(),
+      name: z.string().nullable(),
+      numbers: z.number().int(),
+      chosen: z.boolean(),
+    }),
+  ),
+  /** The first rows as they were split, headers included. */
+  firstRows: z.array(z.object({ row: z.number().int(), cells: z.array(z.string()) })),
+  rows: z.number().int(),
+  readings: z.array(z.object({ row: z.number().int(), text: z.string(), value: z.number() })),
+  /** Cells without a number where a reading belongs: the first 200, and how many there are. */
+  errors: z.array(cellErrorSchema),
+  errorCount: z.number().int(),
+  /** Whether what is wrong is only cells that may be left out. */
+  mayLeaveOut: z.boolean(),
+  notes: z.array(readingsNoteSchema),
+  warnings: z.array(readingsNoteSchema),
+  file: z.object({ name: z.string(), size: z.number().int(), sha256: z.string() }).nullable(),
+})
+export type ReadingsPreview = z.output<typeof readingsPreviewSchema>
+
+/** Code of the person who took the readings, as the other side sees it. */
+export const appraiserCode = line(20)
