@@ -7,6 +7,7 @@ import { filesRoutes } from './modules/files/files.routes'
 import { calibrationsRoutes } from './modules/gauges/calibrations.routes'
 import { gaugesRoutes } from './modules/gauges/gauges.routes'
 import { standardsRoutes } from './modules/gauges/standards.routes'
+import { messagesRoutes } from './modules/notifications/messages.routes'
 import { characteristicsRoutes } from './modules/parts/characteristics.routes'
 import { partsRoutes } from './modules/parts/parts.routes'
 import { tasksRoutes } from './modules/parts/tasks.routes'
@@ -34,5 +35,6 @@ export function allRoutes({ database, config, identity, sessions }: RouteDepende
     ...standardsRoutes,
     ...calibrationsRoutes,
     ...filesRoutes,
+    ...messagesRoutes,
   ]
 }

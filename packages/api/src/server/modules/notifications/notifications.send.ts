@@ -1,5 +1,6 @@
 import { sql } from 'drizzle-orm'
 import type { Role, Side } from '../../../contract/access'
+import type { MessageKind } from '../../../contract/messages'
 import type { Tenant } from '../../db/tenant'
 
 /** A message to the members of one organisation who hold one of the roles. */
@@ -8,8 +9,8 @@ export interface Notice {
   /** The side they act on, which names the app the link leads into. */
   side: Side
   roles: readonly Role[]
-  /** What it is about, so that a person can mute it: `submission`, `agreement`, `challenge`, `decision`. */
-  kind: 'agreement' | 'submission' | 'challenge' | 'decision'
+  /** What it is about, so that a person can keep it out of their mail. */
+  kind: MessageKind
   subject: string
   body: string
   /** Path in that side's app below the organisation, such as `submissions/<id>`. */

@@ -1,5 +1,6 @@
 import { sql } from 'drizzle-orm'
 import { foreignKey, index, integer, pgPolicy, pgTable, text, unique, uuid } from 'drizzle-orm/pg-core'
+import type { MessageKind } from '../../../contract/messages'
 import { instant, ownerColumn, primaryId } from '../../db/columns'
 import { organisations } from '../organisations/organisations.table'
 import { users } from '../sign-in/sign-in.table'
@@ -14,7 +15,7 @@ export const messages = pgTable(
     id: primaryId(),
     userId: uuid().notNull(),
     side: text().$type<'supplier' | 'customer'>().notNull(),
-    kind: text().notNull(),
+    kind: text().$type<MessageKind>().notNull(),
     subject: text().notNull(),
     body: text().notNull(),
     /** Path in the app of that side, such as `/organisations/…/submissions/…`. */
