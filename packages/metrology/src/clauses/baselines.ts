@@ -38,17 +38,22 @@ export function baselineProblems(base: Baseline, of: Characteristic, path: strin
 
 /** A margin in the characteristic's unit; null where it cannot be formed there (see `marginProblems`). */
 export function marginInUnit(margin: Margin, of: Characteristic): number | null {
-  if (margin.base === 'absolute') {
-    const converted = convertExactly(rational(margin.value), margin.unit, of.unit)
-    return converted && toNumber(converted)
-  }
+  const exact = exactMargin(margin, of)
+  const value = exact && toNumber(exact)
+  return value !== null && value > 0 && Number.isFinite(value) ? value : null
+}
+
+function exactMargin(margin: Margin, of: Characteristic): Rational | null {
+  if (margin.base === 'absolute') return convertExactly(rational(margin.value), margin.unit, of.unit)
   const width = baselineWidth(margin.base, of)
-  return width && toNumber(multiply(rational(margin.share), width))
+  return width && multiply(rational(margin.share), width)
 }
 
 export function marginProblems(margin: Margin, of: Characteristic, path: string): Problem[] {
+  const exact = exactMargin(margin, of)
+  if (exact)
+    return sizeProblems(toNumber(exact), of, `${path}.${margin.base === 'absolute' ? 'value' : 'share'}`)
   if (margin.base !== 'absolute') return baselineProblems(margin.base, of, `${path}.base`)
-  if (marginInUnit(margin, of) !== null) return []
   const unitPath = `${path}.unit`
   return findUnit(margin.unit)
     ? [
@@ -65,4 +70,17 @@ export function marginProblems(margin: Margin, of: Characteristic, path: string)
           message: `The unit ${margin.unit} is not in the list of units.`,
         },
       ]
+}
+
+/** A margin so small or large in the characteristic's unit that no number holds it. */
+function sizeProblems(value: number, of: Characteristic, path: string): Problem[] {
+  if (value > 0 && Number.isFinite(value)) return []
+  const code = value > 0 ? 'too-large' : 'too-small'
+  return [
+    {
+      code,
+      path,
+      message: `The margin is ${code === 'too-large' ? 'too large' : 'too small'} to be written in ${of.unit}.`,
+    },
+  ]
 }

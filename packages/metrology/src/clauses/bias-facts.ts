@@ -18,7 +18,8 @@ export function biasFacts(study: BiasFigures | null): BiasFacts | Reason {
   const { n, bias, standardDeviation, reference } = study
   if (n < 2) return { code: 'one-reading' }
   if (standardDeviation === 0) return { code: 'zero-spread' }
-  if (standardDeviation === null || bias === null) return { code: 'not-representable' }
+  if (standardDeviation === null || bias === null || !Number.isFinite(bias))
+    return { code: 'not-representable' }
   return {
     n,
     bias,

@@ -1,5 +1,6 @@
 import exp from '@stdlib/math-base-special-exp'
 import gammainc from '@stdlib/math-base-special-gammainc'
+import ln from '@stdlib/math-base-special-ln'
 import log1pmx from '@stdlib/math-base-special-log1pmx'
 import { scaledGamma } from './scaled-gamma'
 
@@ -35,7 +36,10 @@ export function gammaTails(a: number, x: number): Tails {
 
 /** x^a·e^(−x)/Γ(a) */
 function gammaPrefix(a: number, x: number): number {
-  return (Math.sqrt(a / twoPi) * exp(a * log1pmx((x - a) / a))) / scaledGamma(a)
+  const ratio = x / a
+  // ln(x/a) − (x/a − 1): where x is far below a nothing cancels, and (x − a)/a could be rounded to −1.
+  const exponent = ratio < 0.25 ? ln(ratio) - (ratio - 1) : log1pmx((x - a) / a)
+  return (Math.sqrt(a / twoPi) * exp(a * exponent)) / scaledGamma(a)
 }
 
 /** Σ x^k / (a(a+1)…(a+k)) */

@@ -35,6 +35,8 @@ function below(t: number, df: number, shift: number): number {
   }
   const peak = findRisingRoot((u) => -slope(u), 0, 0.5, 1e-3)
   const top = height(peak)
+  // Far below the smallest number, also where the peak itself is found only roughly.
+  if (top < -2000) return 0
   const left = fallPoint(height, peak, -1 / Math.sqrt(df))
   const right = fallPoint(height, peak, 1 / Math.sqrt(df))
   const points = [...panels(left, peak, 7), ...panels(peak, right, 5), right]

@@ -68,7 +68,9 @@ export function bias(input: BiasArguments): BiasOutput {
   const degreesOfFreedom = n - 1
   const alpha = complement(confidence)
   const estimate = toNumber(subtract(of.mean, rational(reference.value)))
-  const spread = standardDeviation === null || standardDeviation === 0 ? null : standardDeviation
+  const varies = standardDeviation !== null && standardDeviation !== 0
+  // A difference beyond the range of numbers is told by a warning of `finish`; nothing is decided on it.
+  const spread = varies && Number.isFinite(estimate) ? standardDeviation : null
   const standardError = standardDeviation === null ? null : standardDeviation / Math.sqrt(n)
   const t = spread !== null && standardError ? estimate / standardError : null
   const critical = n > 1 ? twoSidedCritical(alpha, degreesOfFreedom) : null
@@ -112,7 +114,7 @@ export function bias(input: BiasArguments): BiasOutput {
     lag1Autocorrelation: of.lag1Autocorrelation,
     warnings: [
       ...inputWarnings(input),
-      ...(spread === null ? [noSpread(n)] : dataChecks(readings, of, resolution)),
+      ...(!varies ? [noSpread(n)] : dataChecks(readings, of, resolution)),
       ...referenceWarnings(reference.standardUncertainty, coverageFactor, margin),
     ],
   }
@@ -171,7 +173,7 @@ function withUncertainty(
   const total = add(divide(repeatability, rational(n)), multiply(u, u))
   const standardUncertainty = squareRoot(total)
   const insideMargin = (): boolean | null => {
-    if (margin === undefined || repeatability.numerator === 0n) return null
+    if (margin === undefined || repeatability.numerator === 0n || !Number.isFinite(estimate)) return null
     const room = divide(subtract(rational(margin), absolute(rational(estimate))), rational(coverageFactor))
     return room.numerator >= 0n && compare(total, multiply(room, room)) <= 0
   }
@@ -186,13 +188,14 @@ function withUncertainty(
 }
 
 function shareOfTolerance(estimate: number, { tolerance }: BiasArguments): number | null {
-  if (tolerance?.lower === undefined || tolerance.upper === undefined) return null
+  if (tolerance?.lower === undefined || tolerance.upper === undefined || !Number.isFinite(estimate))
+    return null
   const width = subtract(rational(tolerance.upper), rational(tolerance.lower))
   return toNumber(divide(absolute(rational(estimate)), width))
 }
 
 function shareOfProcess(estimate: number, input: BiasArguments): number | null {
-  if (input.processStandardDeviation === undefined) return null
+  if (input.processStandardDeviation === undefined || !Number.isFinite(estimate)) return null
   const variation = multiply(rational(input.sigmas), rational(input.processStandardDeviation))
   return toNumber(divide(absolute(rational(estimate)), variation))
 }

@@ -24,7 +24,7 @@ interface Distribution {
   support: [number, number]
 }
 
-const positive: Bounds = { above: 0, most: 1e8 }
+const positive: Bounds = { above: 0, least: 1e-3, most: 1e8 }
 
 const readers: Record<string, (parameters: Reader) => Distribution> = {
   normal: () => ({
@@ -37,7 +37,7 @@ const readers: Record<string, (parameters: Reader) => Distribution> = {
     return { tails: (t) => tTails(t, df), quantile: (p) => tQuantile(p, df), support: [-Infinity, Infinity] }
   },
   'noncentral-t': (parameters) => {
-    const df = parameters.number('df', positive)
+    const df = parameters.number('df', { least: 0.1, most: 1e8 })
     const shift = parameters.number('noncentrality', { least: -1e5, most: 1e5 })
     return {
       tails: (t) => noncentralTTails(t, df, shift),

@@ -1,6 +1,6 @@
 import type { Reader } from '../input/reader'
 import { readRule, ruleDescriptor } from '../rules'
-import { chancesOf } from '../rules/chances'
+import { chanceToMeet } from '../rules/chances'
 import type { IncentiveChange, IncentivesOutput, Rule, Truth } from '../types'
 import { readDesign, readTruth } from './operating-characteristic'
 
@@ -15,8 +15,8 @@ const threshold = 1e-9
 export function incentives(rule: Rule, n: number, truth?: Truth): IncentivesOutput {
   const truths = truth ? [truth] : truthsMeantToBeAccepted(rule)
   const stricterRule = ruleDescriptor(rule).stricter(rule) as Rule | null
-  const now = chancesOf(rule, n)
-  const before = truths.map((at) => now(at).meets)
+  const now = chanceToMeet(rule, n)
+  const before = truths.map(now)
   const strongest = (change: IncentiveChange, rises: boolean, changed: (at: Truth) => number) => {
     let worst = { change, truth: truths[0] as Truth, before: 0, after: 0 }
     let largest = -Infinity
@@ -27,11 +27,11 @@ export function incentives(rule: Rule, n: number, truth?: Truth): IncentivesOutp
     })
     return { shown: worst, wrong: largest > threshold }
   }
-  const worse = strongest('worse-repeatability', true, (at) => now(doubled(at)).meets)
-  const moreReadings = chancesOf(rule, 2 * n)
-  const more = strongest('more-readings', false, (at) => moreReadings(at).meets)
-  const atHalfTheRisk = stricterRule && chancesOf(stricterRule, n)
-  const stricter = atHalfTheRisk && strongest('stricter-risk', true, (at) => atHalfTheRisk(at).meets)
+  const worse = strongest('worse-repeatability', true, (at) => now(doubled(at)))
+  const moreReadings = chanceToMeet(rule, 2 * n)
+  const more = strongest('more-readings', false, moreReadings)
+  const atHalfTheRisk = stricterRule && chanceToMeet(stricterRule, n)
+  const stricter = atHalfTheRisk && strongest('stricter-risk', true, atHalfTheRisk)
   return {
     kind: 'incentives',
     worseRepeatabilityHelps: worse.wrong,
@@ -48,6 +48,7 @@ const doubled = ({ bias, standardDeviation }: Truth): Truth => ({
 })
 
 /**
+ * Truths by spread, so that those that share one follow each other and share its integration points (see `chancesOf`).
  * Biases from zero to just inside the margin, each with spreads up to the largest the rule is meant to accept; for a
  * rule without a margin biases up to three standard deviations, whose size does not matter then.
  */
@@ -59,10 +60,10 @@ function truthsMeantToBeAccepted(rule: Rule): Truth[] {
     return Array.from({ length: 3 * steps + 1 }, (_, i) => ({ bias: i / steps, standardDeviation: 1 }))
   }
   const shares = [0.02, 0.05, 0.1, 0.2, 0.3, 0.4, 0.5, 0.65, 0.8, 1]
-  return Array.from({ length: steps }, (_, i) => (inside * i) / steps).flatMap((bias) => {
-    const largest = largestSpread(rule, bias) ?? inside
-    return shares.map((share) => ({ bias, standardDeviation: share * largest }))
-  })
+  const biases = Array.from({ length: steps }, (_, i) => (inside * i) / steps)
+  return shares.flatMap((share) =>
+    biases.map((bias) => ({ bias, standardDeviation: share * (largestSpread(rule, bias) ?? inside) })),
+  )
 }
 
 export function readIncentives(reader: Reader): IncentivesOutput {

@@ -1,3 +1,4 @@
+import { anySize, positiveSize } from '../input/bounds'
 import type { Reader } from '../input/reader'
 import { readRule } from '../rules'
 import { chancesOf } from '../rules/chances'
@@ -31,7 +32,7 @@ export function readDesign(reader: Reader): number {
 
 export function readTruth(reader: Reader): Truth {
   return {
-    bias: reader.number('bias'),
-    standardDeviation: reader.number('standardDeviation', { above: 0 }),
+    bias: reader.number('bias', anySize),
+    standardDeviation: reader.number('standardDeviation', positiveSize),
   }
 }

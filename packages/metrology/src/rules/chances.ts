@@ -16,14 +16,27 @@ export function chancesOf(rule: Rule, n: number): (truth: Truth) => Chances {
   const refused = descriptor.refusesOutside(rule, n)
   const notRefused = refused ? chanceInside(refused, n) : null
   const reference = descriptor.referenceUncertainty(rule)
-  return ({ bias, standardDeviation }) => {
-    const spreadOfMean = rootSumOfSquares(standardDeviation / Math.sqrt(n), reference)
-    const at = { bias: Math.abs(bias), standardDeviation, spreadOfMean }
+  return (truth) => {
+    const at = located(truth, n, reference)
     const meets = accepted(at)
     const fallsShort = notRefused ? Math.max(0, 1 - notRefused(at)) : 1 - meets
     return { meets, fallsShort, notShown: notRefused ? Math.max(0, 1 - meets - fallsShort) : 0 }
   }
 }
+
+/** The chance to meet alone, as `chancesOf` gives it: half the work where nothing else is asked. */
+export function chanceToMeet(rule: Rule, n: number): (truth: Truth) => number {
+  const descriptor = ruleDescriptor(rule)
+  const accepted = chanceInside(descriptor.accepts(rule, n), n)
+  const reference = descriptor.referenceUncertainty(rule)
+  return (truth) => accepted(located(truth, n, reference))
+}
+
+const located = ({ bias, standardDeviation }: Truth, n: number, reference: number): At => ({
+  bias: Math.abs(bias),
+  standardDeviation,
+  spreadOfMean: rootSumOfSquares(standardDeviation / Math.sqrt(n), reference),
+})
 
 interface At {
   bias: number

@@ -1,10 +1,11 @@
+import { positiveSize } from '../input/bounds'
 import { linearBand } from './band'
 import type { RuleDescriptor } from './descriptor'
 
 /** Point limit: |bias| ≤ margin on the estimate alone. */
 export const point: RuleDescriptor<'point'> = {
   type: 'point',
-  read: (reader) => ({ type: 'point', margin: reader.number('margin', { above: 0 }) }),
+  read: (reader) => ({ type: 'point', margin: reader.number('margin', positiveSize) }),
   accepts: ({ margin }) => linearBand(margin, 0),
   refusesOutside: () => null,
   referenceUncertainty: () => 0,
@@ -22,10 +23,10 @@ export const index: RuleDescriptor<'index'> = {
   type: 'index',
   read: (reader) => ({
     type: 'index',
-    share: reader.number('share', { above: 0 }),
-    sigmas: reader.number('sigmas', { above: 0 }),
-    least: reader.number('least', { above: 0 }),
-    toleranceWidth: reader.number('toleranceWidth', { above: 0 }),
+    share: reader.number('share', positiveSize),
+    sigmas: reader.number('sigmas', positiveSize),
+    least: reader.number('least', positiveSize),
+    toleranceWidth: reader.number('toleranceWidth', positiveSize),
   }),
   accepts: (rule) => linearBand((rule.share * rule.toleranceWidth) / 2, -(rule.least * rule.sigmas) / 2),
   refusesOutside: () => null,

@@ -1,5 +1,6 @@
-import { tQuantile } from '../distributions'
+import { positiveSize } from '../input/bounds'
 import type { Bounds, Reader } from '../input/reader'
+import { oneSidedCritical, twoSidedCritical } from '../statistics/mean-interval'
 import { linearBand, type Band } from './band'
 import type { RuleDescriptor } from './descriptor'
 
@@ -14,11 +15,11 @@ const outside = (margin: number, factor: number): Band => linearBand(margin, fac
 
 const readInterval = (reader: Reader, bounds: Bounds): Interval => ({
   alpha: reader.number('alpha', { above: 0, ...bounds }),
-  margin: reader.number('margin', { above: 0 }),
+  margin: reader.number('margin', positiveSize),
 })
 
-const equivalenceFactor = (alpha: number, n: number) => tQuantile(1 - alpha, n - 1) / Math.sqrt(n)
-const intervalFactor = (alpha: number, n: number) => tQuantile(1 - alpha / 2, n - 1) / Math.sqrt(n)
+const equivalenceFactor = (alpha: number, n: number) => oneSidedCritical(alpha, n - 1) / Math.sqrt(n)
+const intervalFactor = (alpha: number, n: number) => twoSidedCritical(alpha, n - 1) / Math.sqrt(n)
 
 /** What both rules share: a margin, and the chance to meet as their power. */
 const common = {

@@ -1,3 +1,4 @@
+import { notNegativeSize, positiveSize } from '../input/bounds'
 import { uncertaintyBand } from './band'
 import type { RuleDescriptor } from './descriptor'
 
@@ -9,9 +10,9 @@ export const withUncertainty: RuleDescriptor<'with-uncertainty'> = {
   type: 'with-uncertainty',
   read: (reader) => ({
     type: 'with-uncertainty',
-    margin: reader.number('margin', { above: 0 }),
-    referenceStandardUncertainty: reader.number('referenceStandardUncertainty', { least: 0 }),
-    coverageFactor: reader.optionalNumber('coverageFactor', { above: 0 }) ?? 2,
+    margin: reader.number('margin', positiveSize),
+    referenceStandardUncertainty: reader.number('referenceStandardUncertainty', notNegativeSize),
+    coverageFactor: reader.optionalNumber('coverageFactor', positiveSize) ?? 2,
   }),
   accepts: (rule, n) =>
     uncertaintyBand(rule.margin, -rule.coverageFactor, n, rule.referenceStandardUncertainty),

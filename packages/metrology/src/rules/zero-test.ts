@@ -1,4 +1,4 @@
-import { tQuantile } from '../distributions'
+import { twoSidedCritical } from '../statistics/mean-interval'
 import { linearBand } from './band'
 import type { RuleDescriptor } from './descriptor'
 
@@ -9,7 +9,7 @@ import type { RuleDescriptor } from './descriptor'
 export const zeroTest: RuleDescriptor<'zero-test'> = {
   type: 'zero-test',
   read: (reader) => ({ type: 'zero-test', alpha: reader.number('alpha', { above: 0, below: 1 }) }),
-  accepts: ({ alpha }, n) => linearBand(0, tQuantile(1 - alpha / 2, n - 1) / Math.sqrt(n)),
+  accepts: ({ alpha }, n) => linearBand(0, twoSidedCritical(alpha, n - 1) / Math.sqrt(n)),
   refusesOutside: () => null,
   referenceUncertainty: () => 0,
   margin: () => null,

@@ -9,11 +9,15 @@ export const complement = (value: number): number => toNumber(subtract(rational(
 export const complementOfTwice = (value: number): number =>
   toNumber(subtract(rational(1), multiply(rational(2), rational(value))))
 
-/** t quantile of the two-sided interval at confidence 1 − alpha. */
-export const twoSidedCritical = (alpha: number, df: number): number => -tQuantile(alpha / 2, df)
+/** t(1 − alpha/2, df): the two-sided interval at confidence 1 − alpha. Domain: 0 < alpha < 1, df > 0. */
+export const twoSidedCritical = (alpha: number, df: number): number => oneSidedCritical(alpha / 2, df)
 
-/** t quantile of each of two one-sided tests at alpha, and of the two-sided interval at 1 − 2·alpha. */
-export const oneSidedCritical = (alpha: number, df: number): number => -tQuantile(alpha, df)
+/**
+ * t(1 − alpha, df): each of two one-sided tests at alpha, and the two-sided interval at 1 − 2·alpha. Taken from the
+ * lower tail, because 1 − alpha would lose the digits of a small alpha. Domain: 0 < alpha < 1, df > 0.
+ */
+export const oneSidedCritical = (alpha: number, df: number): number =>
+  -tQuantile(Math.max(alpha, Number.MIN_VALUE), df)
 
 export const intervalAround = (center: number, halfWidth: number): Interval => ({
   lower: center - halfWidth,

@@ -4783,7 +4783,7 @@ var require_main66 = __commonJS({
     var HIGH_MAX_NORMAL_EXP = 2146435072 | 0;
     var HIGH_MIN_NORMAL_EXP = 1048576 | 0;
     var HIGH_BIASED_EXP_0 = 1072693248 | 0;
-    function ln7(x) {
+    function ln8(x) {
       var hfsq;
       var hx;
       var t2;
@@ -4852,7 +4852,7 @@ var require_main66 = __commonJS({
       }
       return k * LN2_HI - (s * (f - R) - k * LN2_LO - f);
     }
-    module.exports = ln7;
+    module.exports = ln8;
   }
 });
 
@@ -5120,7 +5120,7 @@ var require_main69 = __commonJS({
     var isnan = require_lib6();
     var isInfinite = require_lib48();
     var abs = require_lib42();
-    var ln7 = require_lib95();
+    var ln8 = require_lib95();
     var trunc = require_lib44();
     var sinpi = require_lib97();
     var PI = require_lib78();
@@ -5179,7 +5179,7 @@ var require_main69 = __commonJS({
         isNegative = false;
       }
       if (x < TINY) {
-        return -ln7(x);
+        return -ln8(x);
       }
       if (isNegative) {
         if (x >= TWO52) {
@@ -5189,14 +5189,14 @@ var require_main69 = __commonJS({
         if (t === 0) {
           return PINF;
         }
-        nadj = ln7(PI / abs(t * x));
+        nadj = ln8(PI / abs(t * x));
       }
       if (x === 1 || x === 2) {
         return 0;
       }
       if (x < 2) {
         if (x <= 0.9) {
-          r = -ln7(x);
+          r = -ln8(x);
           if (x >= YMIN - 1 + 0.27) {
             y = 1 - x;
             flg = 0;
@@ -5267,16 +5267,16 @@ var require_main69 = __commonJS({
           /* Falls through */
           case 3:
             z *= y + 2;
-            r += ln7(z);
+            r += ln8(z);
         }
       } else if (x < TWO56) {
-        t = ln7(x);
+        t = ln8(x);
         z = 1 / x;
         y = z * z;
         w = WC + z * polyvalW(y);
         r = (x - 0.5) * (t - 1) + w;
       } else {
-        r = x * (ln7(x) - 1);
+        r = x * (ln8(x) - 1);
       }
       if (isNegative) {
         r = nadj - r;
@@ -5780,13 +5780,13 @@ var require_full_igamma_prefix = __commonJS({
     "use strict";
     var exp8 = require_lib58();
     var pow = require_lib67();
-    var ln7 = require_lib95();
+    var ln8 = require_lib95();
     var MAX_LN = require_lib99();
     var MIN_LN = require_lib105();
     function fullIGammaPrefix(a, z) {
       var prefix;
       var alz;
-      alz = a * ln7(z);
+      alz = a * ln8(z);
       if (z >= 1) {
         if (alz < MAX_LN && -z > MIN_LN) {
           prefix = pow(z, a) * exp8(-z);
@@ -5938,7 +5938,7 @@ var require_main74 = __commonJS({
   "node_modules/@stdlib/math-base-special-log1pmx/lib/main.js"(exports, module) {
     "use strict";
     var abs = require_lib42();
-    var ln7 = require_lib95();
+    var ln8 = require_lib95();
     var FLOAT_EPS = require_lib69();
     var sumSeries = require_lib103();
     var log1pSeries = require_log1p_series();
@@ -5950,7 +5950,7 @@ var require_main74 = __commonJS({
       }
       ax = abs(x);
       if (ax > 0.95) {
-        return ln7(1 + x) - x;
+        return ln8(1 + x) - x;
       }
       if (ax < FLOAT_EPS) {
         return -x * x / 2;
@@ -6265,7 +6265,7 @@ var require_regularised_gamma_prefix = __commonJS({
     var pow = require_lib67();
     var max = require_lib72();
     var min = require_lib74();
-    var ln7 = require_lib95();
+    var ln8 = require_lib95();
     var FLOAT64_MAX = require_lib75();
     var MAX_LN = require_lib99();
     var MIN_LN = require_lib105();
@@ -6283,7 +6283,7 @@ var require_regularised_gamma_prefix = __commonJS({
       d = (z - a - G + 0.5) / agh;
       if (a < 1) {
         if (z <= MIN_LN || a < 1 / FLOAT64_MAX) {
-          return exp8(a * ln7(z) - z - gammaln(a));
+          return exp8(a * ln8(z) - z - gammaln(a));
         }
         return pow(z, a) * exp8(-z) / gamma2(a);
       }
@@ -6291,7 +6291,7 @@ var require_regularised_gamma_prefix = __commonJS({
         prefix = a * log1pmx2(d) + z * (0.5 - G) / agh;
         prefix = exp8(prefix);
       } else {
-        alz = a * ln7(z / agh);
+        alz = a * ln8(z / agh);
         amz = a - z;
         if (min(alz, amz) <= MIN_LN || max(alz, amz) >= MAX_LN) {
           amza = amz / a;
@@ -6326,7 +6326,7 @@ var require_main76 = __commonJS({
     var isinfinite = require_lib48();
     var abs = require_lib42();
     var expm1 = require_lib36();
-    var ln7 = require_lib95();
+    var ln8 = require_lib95();
     var pow = require_lib67();
     var trunc = require_lib44();
     function powm1(b, x) {
@@ -6346,7 +6346,7 @@ var require_main76 = __commonJS({
       }
       if (b > 0) {
         if (abs(x * (b - 1)) < 0.5 || abs(x) < 0.2) {
-          y = ln7(b) * x;
+          y = ln8(b) * x;
           if (y < 0.5) {
             return expm1(y);
           }
@@ -6467,7 +6467,7 @@ var require_rational_p3q3 = __commonJS({
 var require_lgamma_small_imp = __commonJS({
   "node_modules/@stdlib/math-base-special-gamma1pm1/lib/lgamma_small_imp.js"(exports, module) {
     "use strict";
-    var ln7 = require_lib95();
+    var ln8 = require_lib95();
     var EPS = require_lib69();
     var rateval1 = require_rational_p1q1();
     var rateval2 = require_rational_p2q2();
@@ -6481,7 +6481,7 @@ var require_lgamma_small_imp = __commonJS({
       var r;
       var R;
       if (z < EPS) {
-        return -ln7(z);
+        return -ln8(z);
       }
       if (zm1 === 0 || zm2 === 0) {
         return 0;
@@ -6492,7 +6492,7 @@ var require_lgamma_small_imp = __commonJS({
           do {
             z -= 1;
             zm2 -= 1;
-            result += ln7(z);
+            result += ln8(z);
           } while (z >= 3);
           zm2 = z - 2;
         }
@@ -6502,7 +6502,7 @@ var require_lgamma_small_imp = __commonJS({
         return result;
       }
       if (z < 1) {
-        result += -ln7(z);
+        result += -ln8(z);
         zm2 = zm1;
         zm1 = z;
         z += 1;
@@ -6914,7 +6914,7 @@ var require_igamma_final = __commonJS({
     var gamma2 = require_lib89();
     var abs = require_lib42();
     var pow = require_lib67();
-    var ln7 = require_lib95();
+    var ln8 = require_lib95();
     var SQRT_EPSILON = require_lib100();
     var FLOAT64_MAX = require_lib75();
     var MAX_LN = require_lib99();
@@ -6965,7 +6965,7 @@ var require_igamma_final = __commonJS({
         invert = !invert;
         evalMethod = 7;
       } else if (x < 0.5) {
-        if (-0.4 / ln7(x) < a) {
+        if (-0.4 / ln8(x) < a) {
           evalMethod = 2;
         } else {
           evalMethod = 3;
@@ -7089,7 +7089,7 @@ var require_main78 = __commonJS({
     "use strict";
     var gammaln = require_lib98();
     var exp8 = require_lib58();
-    var ln7 = require_lib95();
+    var ln8 = require_lib95();
     var SQRT_TWO_PI = require_lib87();
     var MAX_LN = require_lib99();
     var PINF = require_lib31();
@@ -7109,26 +7109,26 @@ var require_main78 = __commonJS({
       invert = upper;
       if (a >= FLOAT64_MAX_NTH_FACTORIAL && !normalized) {
         if (invert && a * 4 < x) {
-          result = a * ln7(x) - x;
-          result += ln7(upperGammaFraction(a, x));
+          result = a * ln8(x) - x;
+          result += ln8(upperGammaFraction(a, x));
         } else if (!invert && a > 4 * x) {
-          result = a * ln7(x) - x;
+          result = a * ln8(x) - x;
           initValue = 0;
-          result += ln7(lowerGammaSeries(a, x, initValue) / a);
+          result += ln8(lowerGammaSeries(a, x, initValue) / a);
         } else {
           result = igammaFinal(x, a, true, invert);
           if (result === 0) {
             if (invert) {
               result = 1 + 1 / (12 * a) + 1 / (288 * a * a);
-              result = ln7(result) - a + (a - 0.5) * ln7(a);
-              result += ln7(SQRT_TWO_PI);
+              result = ln8(result) - a + (a - 0.5) * ln8(a);
+              result += ln8(SQRT_TWO_PI);
             } else {
-              result = a * ln7(x) - x;
+              result = a * ln8(x) - x;
               initValue = 0;
-              result += ln7(lowerGammaSeries(a, x, initValue) / a);
+              result += ln8(lowerGammaSeries(a, x, initValue) / a);
             }
           } else {
-            result = ln7(result) + gammaln(a);
+            result = ln8(result) + gammaln(a);
           }
         }
         if (result > MAX_LN) {
@@ -7157,13 +7157,13 @@ var require_full_igamma_prefix2 = __commonJS({
     "use strict";
     var exp8 = require_lib58();
     var pow = require_lib67();
-    var ln7 = require_lib95();
+    var ln8 = require_lib95();
     var MAX_LN = require_lib99();
     var MIN_LN = require_lib105();
     function fullIGammaPrefix(a, z) {
       var prefix;
       var alz;
-      alz = a * ln7(z);
+      alz = a * ln8(z);
       if (z >= 1) {
         if (alz < MAX_LN && -z > MIN_LN) {
           prefix = pow(z, a) * exp8(-z);
@@ -7199,7 +7199,7 @@ var require_regularized_gamma_prefix = __commonJS({
     var pow = require_lib67();
     var max = require_lib72();
     var min = require_lib74();
-    var ln7 = require_lib95();
+    var ln8 = require_lib95();
     var MAX_LN = require_lib99();
     var MIN_LN = require_lib105();
     var G = require_lib93();
@@ -7216,7 +7216,7 @@ var require_regularized_gamma_prefix = __commonJS({
       d = (z - a - G + 0.5) / agh;
       if (a < 1) {
         if (z <= MIN_LN) {
-          return exp8(a * ln7(z) - z - gammaln(a));
+          return exp8(a * ln8(z) - z - gammaln(a));
         }
         return pow(z, a) * exp8(-z) / gamma2(a);
       }
@@ -7224,7 +7224,7 @@ var require_regularized_gamma_prefix = __commonJS({
         prefix = a * (log1p(d) - d) + z * (0.5 - G) / agh;
         prefix = exp8(prefix);
       } else {
-        alz = a * ln7(z / agh);
+        alz = a * ln8(z / agh);
         amz = a - z;
         if (min(alz, amz) <= MIN_LN || max(alz, amz) >= MAX_LN) {
           amza = amz / a;
@@ -7261,7 +7261,7 @@ var require_beta_small_b_large_a_series = __commonJS({
     var log1p = require_lib38();
     var abs = require_lib42();
     var pow = require_lib67();
-    var ln7 = require_lib95();
+    var ln8 = require_lib95();
     var MIN_VALUE = require_lib53();
     var EPSILON = require_lib69();
     var fullIGammaPrefix = require_full_igamma_prefix2();
@@ -7291,7 +7291,7 @@ var require_beta_small_b_large_a_series = __commonJS({
       if (y < 0.35) {
         lx = log1p(-y);
       } else {
-        lx = ln7(x);
+        lx = ln8(x);
       }
       u = -t * lx;
       h = regularizedGammaPrefix(b, u);
@@ -7424,7 +7424,7 @@ var require_ibeta_power_terms = __commonJS({
     var exp8 = require_lib58();
     var pow = require_lib67();
     var min = require_lib74();
-    var ln7 = require_lib95();
+    var ln8 = require_lib95();
     var MAX_LN = require_lib99();
     var MIN_LN = require_lib105();
     var G = require_lib93();
@@ -7484,9 +7484,9 @@ var require_ibeta_power_terms = __commonJS({
             result *= exp8(l3);
           }
         } else if (abs(l1) < abs(l2)) {
-          l = a * log1p(l1) + b * ln7(y * cgh / bgh);
+          l = a * log1p(l1) + b * ln8(y * cgh / bgh);
           if (l <= MIN_LN || l >= MAX_LN) {
-            l += ln7(result);
+            l += ln8(result);
             if (l >= MAX_LN) {
               return NaN;
             }
@@ -7495,9 +7495,9 @@ var require_ibeta_power_terms = __commonJS({
             result *= exp8(l);
           }
         } else {
-          l = b * log1p(l2) + a * ln7(x * cgh / agh);
+          l = b * log1p(l2) + a * ln8(x * cgh / agh);
           if (l <= MIN_LN || l >= MAX_LN) {
-            l += ln7(result);
+            l += ln8(result);
             if (l >= MAX_LN) {
               return NaN;
             }
@@ -7509,16 +7509,16 @@ var require_ibeta_power_terms = __commonJS({
       } else {
         b1 = x * cgh / agh;
         b2 = y * cgh / bgh;
-        l1 = a * ln7(b1);
-        l2 = b * ln7(b2);
+        l1 = a * ln8(b1);
+        l2 = b * ln8(b2);
         if (l1 >= MAX_LN || l1 <= MIN_LN || l2 >= MAX_LN || l2 <= MIN_LN) {
           if (a < b) {
             p1 = pow(b2, b / a);
-            l3 = a * (ln7(b1) + ln7(p1));
+            l3 = a * (ln8(b1) + ln8(p1));
             if (l3 < MAX_LN && l3 > MIN_LN) {
               result *= pow(p1 * b1, a);
             } else {
-              l2 += l1 + ln7(result);
+              l2 += l1 + ln8(result);
               if (l2 >= MAX_LN) {
                 return NaN;
               }
@@ -7526,11 +7526,11 @@ var require_ibeta_power_terms = __commonJS({
             }
           } else {
             p1 = pow(b1, a / b);
-            l3 = (ln7(p1) + ln7(b2)) * b;
+            l3 = (ln8(p1) + ln8(b2)) * b;
             if (l3 < MAX_LN && l3 > MIN_LN) {
               result *= pow(p1 * b2, b);
             } else {
-              l2 += l1 + ln7(result);
+              l2 += l1 + ln8(result);
               if (l2 >= MAX_LN) {
                 return NaN;
               }
@@ -7901,7 +7901,7 @@ var require_ibeta_series = __commonJS({
     var sqrt = require_lib39();
     var exp8 = require_lib58();
     var pow = require_lib67();
-    var ln7 = require_lib95();
+    var ln8 = require_lib95();
     var MIN_VALUE = require_lib53();
     var MAX_LN = require_lib99();
     var MIN_LN = require_lib105();
@@ -7938,8 +7938,8 @@ var require_ibeta_series = __commonJS({
         bgh = b + G - 0.5;
         cgh = c + G - 0.5;
         result = lanczosSumExpGScaled(c) / (lanczosSumExpGScaled(a) * lanczosSumExpGScaled(b));
-        l1 = ln7(cgh / bgh) * (b - 0.5);
-        l2 = ln7(x * cgh / agh) * a;
+        l1 = ln8(cgh / bgh) * (b - 0.5);
+        l2 = ln8(x * cgh / agh) * a;
         if (l1 > MIN_LN && l1 < MAX_LN && l2 > MIN_LN && l2 < MAX_LN) {
           if (a * b < bgh * 10) {
             result *= exp8((b - 0.5) * log1p(a / bgh));
@@ -7952,9 +7952,9 @@ var require_ibeta_series = __commonJS({
             out[1] = result * pow(y, b);
           }
         } else {
-          result = ln7(result) + l1 + l2 + (ln7(agh) - 1) / 2;
+          result = ln8(result) + l1 + l2 + (ln8(agh) - 1) / 2;
           if (out) {
-            out[1] = exp8(result + b * ln7(y));
+            out[1] = exp8(result + b * ln8(y));
           }
           result = exp8(result);
         }
@@ -8503,7 +8503,7 @@ var require_main85 = __commonJS({
     "use strict";
     var isnan = require_lib6();
     var sqrt = require_lib39();
-    var ln7 = require_lib95();
+    var ln8 = require_lib95();
     var PINF = require_lib31();
     var NINF = require_lib33();
     var rationalFcnR1 = require_rational_p1q12();
@@ -8551,12 +8551,12 @@ var require_main85 = __commonJS({
         return sign * (g * Y1 + g * r);
       }
       if (q >= 0.25) {
-        g = sqrt(-2 * ln7(q));
+        g = sqrt(-2 * ln8(q));
         q -= 0.25;
         r = rationalFcnR2(q);
         return sign * (g / (Y2 + r));
       }
-      q = sqrt(-ln7(q));
+      q = sqrt(-ln8(q));
       if (q < 3) {
         qs = q - 1.125;
         r = rationalFcnR3(qs);
@@ -9476,11 +9476,12 @@ var pi = 3.141592653589793;
 
 // packages/metrology/src/distributions/chi-square.ts
 var import_math_base_special_exp5 = __toESM(require_lib58(), 1);
-var import_math_base_special_ln5 = __toESM(require_lib95(), 1);
+var import_math_base_special_ln6 = __toESM(require_lib95(), 1);
 
 // packages/metrology/src/distributions/incomplete-gamma.ts
 var import_math_base_special_exp4 = __toESM(require_lib58(), 1);
 var import_math_base_special_gammainc = __toESM(require_lib115(), 1);
+var import_math_base_special_ln5 = __toESM(require_lib95(), 1);
 var import_math_base_special_log1pmx = __toESM(require_lib108(), 1);
 var ownFrom = 100;
 function gammaTails(a, x) {
@@ -9496,7 +9497,9 @@ function gammaTails(a, x) {
   return { lower: 1 - upper, upper };
 }
 function gammaPrefix(a, x) {
-  return Math.sqrt(a / twoPi2) * (0, import_math_base_special_exp4.default)(a * (0, import_math_base_special_log1pmx.default)((x - a) / a)) / scaledGamma(a);
+  const ratio = x / a;
+  const exponent = ratio < 0.25 ? (0, import_math_base_special_ln5.default)(ratio) - (ratio - 1) : (0, import_math_base_special_log1pmx.default)((x - a) / a);
+  return Math.sqrt(a / twoPi2) * (0, import_math_base_special_exp4.default)(a * exponent) / scaledGamma(a);
 }
 function lowerSeries(a, x) {
   let term = 1 / a;
@@ -9531,14 +9534,14 @@ function chiSquareTails(x, df) {
 }
 function chiSquareQuantile(p, df) {
   const useLower = p <= 0.5;
-  const target = (0, import_math_base_special_ln5.default)(useLower ? p : 1 - p);
+  const target = (0, import_math_base_special_ln6.default)(useLower ? p : 1 - p);
   const gap = (logX) => {
     const tails = chiSquareTails((0, import_math_base_special_exp5.default)(logX), df);
-    return useLower ? (0, import_math_base_special_ln5.default)(tails.lower) - target : target - (0, import_math_base_special_ln5.default)(tails.upper);
+    return useLower ? (0, import_math_base_special_ln6.default)(tails.lower) - target : target - (0, import_math_base_special_ln6.default)(tails.upper);
   };
   const spread = 2 / (9 * df);
   const root = 1 - spread + normalQuantile(p) * Math.sqrt(spread);
-  const guess = (0, import_math_base_special_ln5.default)(df) + 3 * (0, import_math_base_special_ln5.default)(Math.max(root, 0.05));
+  const guess = (0, import_math_base_special_ln6.default)(df) + 3 * (0, import_math_base_special_ln6.default)(Math.max(root, 0.05));
   return (0, import_math_base_special_exp5.default)(findRisingRoot(gap, guess, 0.01 * Math.sqrt(2 / df)));
 }
 
@@ -9552,7 +9555,7 @@ function fQuantile(p, df1, df2) {
 
 // packages/metrology/src/distributions/noncentral-t.ts
 var import_math_base_special_exp6 = __toESM(require_lib58(), 1);
-var import_math_base_special_ln6 = __toESM(require_lib95(), 1);
+var import_math_base_special_ln7 = __toESM(require_lib95(), 1);
 
 // packages/metrology/src/distributions/gauss-legendre.ts
 var nodes = [
@@ -9617,6 +9620,7 @@ function below(t, df, shift) {
   };
   const peak = findRisingRoot((u) => -slope(u), 0, 0.5, 1e-3);
   const top = height(peak);
+  if (top < -2e3) return 0;
   const left = fallPoint(height, peak, -1 / Math.sqrt(df));
   const right = fallPoint(height, peak, 1 / Math.sqrt(df));
   const points = [...panels(left, peak, 7), ...panels(peak, right, 5), right];
@@ -9624,7 +9628,7 @@ function below(t, df, shift) {
   const sharp = transitionPoints(t, shift, left, right, width);
   const ascending = [...points, ...sharp].sort((a, b) => a - b);
   const area = integrate((u) => (0, import_math_base_special_exp6.default)(height(u) - top), ascending);
-  return (0, import_math_base_special_exp6.default)(top + (0, import_math_base_special_ln6.default)(area * chiConstant(df)));
+  return (0, import_math_base_special_exp6.default)(top + (0, import_math_base_special_ln7.default)(area * chiConstant(df)));
 }
 function fallPoint(height, peak, step) {
   const floor = height(peak) - 42;
@@ -9649,7 +9653,7 @@ function transitionPoints(t, shift, left, right, width) {
   for (let x = -9; x <= 9; x += 1.5) {
     const v = (x + shift) / t;
     if (!(v > 0)) continue;
-    const u = (0, import_math_base_special_ln6.default)(v);
+    const u = (0, import_math_base_special_ln7.default)(v);
     if (u > left && u < right && 1.5 / Math.abs(t * v) < width) points.push(u);
   }
   return points;
@@ -9657,10 +9661,10 @@ function transitionPoints(t, shift, left, right, width) {
 function noncentralTQuantile(p, df, noncentrality) {
   if (noncentrality === 0) return tQuantile(p, df);
   const useLower = p <= 0.5;
-  const target = (0, import_math_base_special_ln6.default)(useLower ? p : 1 - p);
+  const target = (0, import_math_base_special_ln7.default)(useLower ? p : 1 - p);
   const gap = (t) => {
     const tails = noncentralTTails(t, df, noncentrality);
-    return useLower ? (0, import_math_base_special_ln6.default)(tails.lower) - target : target - (0, import_math_base_special_ln6.default)(tails.upper);
+    return useLower ? (0, import_math_base_special_ln7.default)(tails.lower) - target : target - (0, import_math_base_special_ln7.default)(tails.upper);
   };
   const width = Math.sqrt(1 + 0.5 * noncentrality * noncentrality / df);
   return findRisingRoot(gap, noncentrality + normalQuantile(p) * width, 0.2 * width);
@@ -9668,10 +9672,10 @@ function noncentralTQuantile(p, df, noncentrality) {
 function noncentralityAt(t, df, p) {
   if (Math.abs(t) > 1e7) return t * Math.sqrt(chiSquareQuantile(t > 0 ? 1 - p : p, df) / df);
   const useLower = p <= 0.5;
-  const target = (0, import_math_base_special_ln6.default)(useLower ? p : 1 - p);
+  const target = (0, import_math_base_special_ln7.default)(useLower ? p : 1 - p);
   const gap = (noncentrality) => {
     const tails = noncentralTTails(t, df, noncentrality);
-    return useLower ? target - (0, import_math_base_special_ln6.default)(tails.lower) : (0, import_math_base_special_ln6.default)(tails.upper) - target;
+    return useLower ? target - (0, import_math_base_special_ln7.default)(tails.lower) : (0, import_math_base_special_ln7.default)(tails.upper) - target;
   };
   const width = Math.sqrt(1 + 0.5 * t * t / df);
   return findRisingRoot(gap, t - normalQuantile(p) * width, 0.2 * width, 1e-13);
@@ -9766,8 +9770,8 @@ function drift(deviations) {
 
 // packages/metrology/src/statistics/mean-interval.ts
 var complement = (value) => toNumber(subtract(rational(1), rational(value)));
-var twoSidedCritical = (alpha, df) => -tQuantile(alpha / 2, df);
-var oneSidedCritical = (alpha, df) => -tQuantile(alpha, df);
+var twoSidedCritical = (alpha, df) => oneSidedCritical(alpha / 2, df);
+var oneSidedCritical = (alpha, df) => -tQuantile(Math.max(alpha, Number.MIN_VALUE), df);
 var intervalAround = (center, halfWidth) => ({
   lower: center - halfWidth,
   upper: center + halfWidth
@@ -9884,7 +9888,8 @@ function bias(input) {
   const degreesOfFreedom = n - 1;
   const alpha = complement(confidence);
   const estimate = toNumber(subtract(of.mean, rational(reference.value)));
-  const spread = standardDeviation === null || standardDeviation === 0 ? null : standardDeviation;
+  const varies = standardDeviation !== null && standardDeviation !== 0;
+  const spread = varies && Number.isFinite(estimate) ? standardDeviation : null;
   const standardError = standardDeviation === null ? null : standardDeviation / Math.sqrt(n);
   const t = spread !== null && standardError ? estimate / standardError : null;
   const critical = n > 1 ? twoSidedCritical(alpha, degreesOfFreedom) : null;
@@ -9925,7 +9930,7 @@ function bias(input) {
     lag1Autocorrelation: of.lag1Autocorrelation,
     warnings: [
       ...inputWarnings(input),
-      ...spread === null ? [noSpread(n)] : dataChecks(readings, of, resolution),
+      ...!varies ? [noSpread(n)] : dataChecks(readings, of, resolution),
       ...referenceWarnings(reference.standardUncertainty, coverageFactor, margin)
     ]
   };
@@ -9965,7 +9970,7 @@ function withUncertainty({ reference, coverageFactor, margin, resolution }, vari
   const total = add(divide(repeatability, rational(n)), multiply(u, u));
   const standardUncertainty = squareRoot(total);
   const insideMargin = () => {
-    if (margin === void 0 || repeatability.numerator === 0n) return null;
+    if (margin === void 0 || repeatability.numerator === 0n || !Number.isFinite(estimate)) return null;
     const room = divide(subtract(rational(margin), absolute(rational(estimate))), rational(coverageFactor));
     return room.numerator >= 0n && compare(total, multiply(room, room)) <= 0;
   };
@@ -9979,12 +9984,13 @@ function withUncertainty({ reference, coverageFactor, margin, resolution }, vari
   };
 }
 function shareOfTolerance(estimate, { tolerance }) {
-  if (tolerance?.lower === void 0 || tolerance.upper === void 0) return null;
+  if (tolerance?.lower === void 0 || tolerance.upper === void 0 || !Number.isFinite(estimate))
+    return null;
   const width = subtract(rational(tolerance.upper), rational(tolerance.lower));
   return toNumber(divide(absolute(rational(estimate)), width));
 }
 function shareOfProcess(estimate, input) {
-  if (input.processStandardDeviation === void 0) return null;
+  if (input.processStandardDeviation === void 0 || !Number.isFinite(estimate)) return null;
   const variation = multiply(rational(input.sigmas), rational(input.processStandardDeviation));
   return toNumber(divide(absolute(rational(estimate)), variation));
 }
@@ -10029,6 +10035,12 @@ function referenceWarnings(u, factor, margin) {
   ];
 }
 
+// packages/metrology/src/input/bounds.ts
+var [smallest, largest] = [1e-100, 1e100];
+var positiveSize = { above: 0, least: smallest, most: largest };
+var notNegativeSize = { least: 0, most: largest };
+var anySize = { least: -largest, most: largest };
+
 // packages/metrology/src/rules/band.ts
 function linearBand(offset, slope) {
   return {
@@ -10062,7 +10074,7 @@ function rootSumOfSquares(a, b) {
 // packages/metrology/src/rules/estimate-rules.ts
 var point = {
   type: "point",
-  read: (reader) => ({ type: "point", margin: reader.number("margin", { above: 0 }) }),
+  read: (reader) => ({ type: "point", margin: reader.number("margin", positiveSize) }),
   accepts: ({ margin }) => linearBand(margin, 0),
   refusesOutside: () => null,
   referenceUncertainty: () => 0,
@@ -10075,10 +10087,10 @@ var index = {
   type: "index",
   read: (reader) => ({
     type: "index",
-    share: reader.number("share", { above: 0 }),
-    sigmas: reader.number("sigmas", { above: 0 }),
-    least: reader.number("least", { above: 0 }),
-    toleranceWidth: reader.number("toleranceWidth", { above: 0 })
+    share: reader.number("share", positiveSize),
+    sigmas: reader.number("sigmas", positiveSize),
+    least: reader.number("least", positiveSize),
+    toleranceWidth: reader.number("toleranceWidth", positiveSize)
   }),
   accepts: (rule) => linearBand(rule.share * rule.toleranceWidth / 2, -(rule.least * rule.sigmas) / 2),
   refusesOutside: () => null,
@@ -10095,10 +10107,10 @@ var inside = (margin, factor) => linearBand(margin, -factor);
 var outside2 = (margin, factor) => linearBand(margin, factor);
 var readInterval = (reader, bounds) => ({
   alpha: reader.number("alpha", { above: 0, ...bounds }),
-  margin: reader.number("margin", { above: 0 })
+  margin: reader.number("margin", positiveSize)
 });
-var equivalenceFactor = (alpha, n) => tQuantile(1 - alpha, n - 1) / Math.sqrt(n);
-var intervalFactor = (alpha, n) => tQuantile(1 - alpha / 2, n - 1) / Math.sqrt(n);
+var equivalenceFactor = (alpha, n) => oneSidedCritical(alpha, n - 1) / Math.sqrt(n);
+var intervalFactor = (alpha, n) => twoSidedCritical(alpha, n - 1) / Math.sqrt(n);
 var common = {
   referenceUncertainty: () => 0,
   margin: ({ margin }) => margin,
@@ -10128,9 +10140,9 @@ var withUncertainty2 = {
   type: "with-uncertainty",
   read: (reader) => ({
     type: "with-uncertainty",
-    margin: reader.number("margin", { above: 0 }),
-    referenceStandardUncertainty: reader.number("referenceStandardUncertainty", { least: 0 }),
-    coverageFactor: reader.optionalNumber("coverageFactor", { above: 0 }) ?? 2
+    margin: reader.number("margin", positiveSize),
+    referenceStandardUncertainty: reader.number("referenceStandardUncertainty", notNegativeSize),
+    coverageFactor: reader.optionalNumber("coverageFactor", positiveSize) ?? 2
   }),
   accepts: (rule, n) => uncertaintyBand(rule.margin, -rule.coverageFactor, n, rule.referenceStandardUncertainty),
   refusesOutside: (rule, n) => uncertaintyBand(rule.margin, rule.coverageFactor, n, rule.referenceStandardUncertainty),
@@ -10145,7 +10157,7 @@ var withUncertainty2 = {
 var zeroTest = {
   type: "zero-test",
   read: (reader) => ({ type: "zero-test", alpha: reader.number("alpha", { above: 0, below: 1 }) }),
-  accepts: ({ alpha }, n) => linearBand(0, tQuantile(1 - alpha / 2, n - 1) / Math.sqrt(n)),
+  accepts: ({ alpha }, n) => linearBand(0, twoSidedCritical(alpha, n - 1) / Math.sqrt(n)),
   refusesOutside: () => null,
   referenceUncertainty: () => 0,
   margin: () => null,
@@ -10223,14 +10235,24 @@ function chancesOf(rule, n) {
   const refused = descriptor.refusesOutside(rule, n);
   const notRefused = refused ? chanceInside(refused, n) : null;
   const reference = descriptor.referenceUncertainty(rule);
-  return ({ bias: bias2, standardDeviation }) => {
-    const spreadOfMean = rootSumOfSquares(standardDeviation / Math.sqrt(n), reference);
-    const at = { bias: Math.abs(bias2), standardDeviation, spreadOfMean };
+  return (truth) => {
+    const at = located(truth, n, reference);
     const meets = accepted(at);
     const fallsShort = notRefused ? Math.max(0, 1 - notRefused(at)) : 1 - meets;
     return { meets, fallsShort, notShown: notRefused ? Math.max(0, 1 - meets - fallsShort) : 0 };
   };
 }
+function chanceToMeet(rule, n) {
+  const descriptor = ruleDescriptor(rule);
+  const accepted = chanceInside(descriptor.accepts(rule, n), n);
+  const reference = descriptor.referenceUncertainty(rule);
+  return (truth) => accepted(located(truth, n, reference));
+}
+var located = ({ bias: bias2, standardDeviation }, n, reference) => ({
+  bias: Math.abs(bias2),
+  standardDeviation,
+  spreadOfMean: rootSumOfSquares(standardDeviation / Math.sqrt(n), reference)
+});
 var reach = 9;
 function chanceInside(band, n) {
   const df = n - 1;
@@ -10301,8 +10323,8 @@ function readDesign(reader) {
 }
 function readTruth(reader) {
   return {
-    bias: reader.number("bias"),
-    standardDeviation: reader.number("standardDeviation", { above: 0 })
+    bias: reader.number("bias", anySize),
+    standardDeviation: reader.number("standardDeviation", positiveSize)
   };
 }
 
@@ -10441,16 +10463,20 @@ function baselineProblems(base, of, path) {
   ];
 }
 function marginInUnit(margin, of) {
-  if (margin.base === "absolute") {
-    const converted = convertExactly(rational(margin.value), margin.unit, of.unit);
-    return converted && toNumber(converted);
-  }
+  const exact = exactMargin(margin, of);
+  const value = exact && toNumber(exact);
+  return value !== null && value > 0 && Number.isFinite(value) ? value : null;
+}
+function exactMargin(margin, of) {
+  if (margin.base === "absolute") return convertExactly(rational(margin.value), margin.unit, of.unit);
   const width = baselineWidth(margin.base, of);
-  return width && toNumber(multiply(rational(margin.share), width));
+  return width && multiply(rational(margin.share), width);
 }
 function marginProblems(margin, of, path) {
+  const exact = exactMargin(margin, of);
+  if (exact)
+    return sizeProblems(toNumber(exact), of, `${path}.${margin.base === "absolute" ? "value" : "share"}`);
   if (margin.base !== "absolute") return baselineProblems(margin.base, of, `${path}.base`);
-  if (marginInUnit(margin, of) !== null) return [];
   const unitPath = `${path}.unit`;
   return findUnit(margin.unit) ? [
     {
@@ -10466,6 +10492,17 @@ function marginProblems(margin, of, path) {
     }
   ];
 }
+function sizeProblems(value, of, path) {
+  if (value > 0 && Number.isFinite(value)) return [];
+  const code = value > 0 ? "too-large" : "too-small";
+  return [
+    {
+      code,
+      path,
+      message: `The margin is ${code === "too-large" ? "too large" : "too small"} to be written in ${of.unit}.`
+    }
+  ];
+}
 
 // packages/metrology/src/clauses/bias-facts.ts
 function biasFacts(study) {
@@ -10473,7 +10510,8 @@ function biasFacts(study) {
   const { n, bias: bias2, standardDeviation, reference } = study;
   if (n < 2) return { code: "one-reading" };
   if (standardDeviation === 0) return { code: "zero-spread" };
-  if (standardDeviation === null || bias2 === null) return { code: "not-representable" };
+  if (standardDeviation === null || bias2 === null || !Number.isFinite(bias2))
+    return { code: "not-representable" };
   return {
     n,
     bias: bias2,
@@ -10899,7 +10937,7 @@ function readStudy(reader, common2, options) {
 }
 
 // packages/metrology/src/kinds/distribution.ts
-var positive = { above: 0, most: 1e8 };
+var positive = { above: 0, least: 1e-3, most: 1e8 };
 var readers = {
   normal: () => ({
     tails: (z) => ({ lower: normalCdf(z), upper: normalUpperTail(z) }),
@@ -10911,7 +10949,7 @@ var readers = {
     return { tails: (t) => tTails(t, df), quantile: (p) => tQuantile(p, df), support: [-Infinity, Infinity] };
   },
   "noncentral-t": (parameters) => {
-    const df = parameters.number("df", positive);
+    const df = parameters.number("df", { least: 0.1, most: 1e8 });
     const shift = parameters.number("noncentrality", { least: -1e5, most: 1e5 });
     return {
       tails: (t) => noncentralTTails(t, df, shift),
@@ -10970,23 +11008,23 @@ var threshold = 1e-9;
 function incentives(rule, n, truth) {
   const truths = truth ? [truth] : truthsMeantToBeAccepted(rule);
   const stricterRule = ruleDescriptor(rule).stricter(rule);
-  const now = chancesOf(rule, n);
-  const before = truths.map((at) => now(at).meets);
+  const now = chanceToMeet(rule, n);
+  const before = truths.map(now);
   const strongest = (change, rises, changed) => {
     let worst = { change, truth: truths[0], before: 0, after: 0 };
-    let largest = -Infinity;
+    let largest2 = -Infinity;
     truths.forEach((at, index2) => {
       const shown = { change, truth: at, before: before[index2] ?? 0, after: changed(at) };
       const wrong = rises ? shown.after - shown.before : shown.before - shown.after;
-      if (wrong > largest) [worst, largest] = [shown, wrong];
+      if (wrong > largest2) [worst, largest2] = [shown, wrong];
     });
-    return { shown: worst, wrong: largest > threshold };
+    return { shown: worst, wrong: largest2 > threshold };
   };
-  const worse = strongest("worse-repeatability", true, (at) => now(doubled(at)).meets);
-  const moreReadings = chancesOf(rule, 2 * n);
-  const more = strongest("more-readings", false, (at) => moreReadings(at).meets);
-  const atHalfTheRisk = stricterRule && chancesOf(stricterRule, n);
-  const stricter = atHalfTheRisk && strongest("stricter-risk", true, (at) => atHalfTheRisk(at).meets);
+  const worse = strongest("worse-repeatability", true, (at) => now(doubled(at)));
+  const moreReadings = chanceToMeet(rule, 2 * n);
+  const more = strongest("more-readings", false, moreReadings);
+  const atHalfTheRisk = stricterRule && chanceToMeet(stricterRule, n);
+  const stricter = atHalfTheRisk && strongest("stricter-risk", true, atHalfTheRisk);
   return {
     kind: "incentives",
     worseRepeatabilityHelps: worse.wrong,
@@ -11008,10 +11046,10 @@ function truthsMeantToBeAccepted(rule) {
     return Array.from({ length: 3 * steps + 1 }, (_, i) => ({ bias: i / steps, standardDeviation: 1 }));
   }
   const shares = [0.02, 0.05, 0.1, 0.2, 0.3, 0.4, 0.5, 0.65, 0.8, 1];
-  return Array.from({ length: steps }, (_, i) => inside2 * i / steps).flatMap((bias2) => {
-    const largest = largestSpread(rule, bias2) ?? inside2;
-    return shares.map((share) => ({ bias: bias2, standardDeviation: share * largest }));
-  });
+  const biases = Array.from({ length: steps }, (_, i) => inside2 * i / steps);
+  return shares.flatMap(
+    (share) => biases.map((bias2) => ({ bias: bias2, standardDeviation: share * (largestSpread(rule, bias2) ?? inside2) }))
+  );
 }
 function readIncentives(reader) {
   const rule = readRule(reader);
