@@ -24,3 +24,18 @@ export async function selectRelationships(tenant: Tenant, query: QueryOf<typeof 
     .limit(windowOf(query).limit)
     .offset(windowOf(query).offset)
 }
+
+export type RelationshipRow = typeof relationships.$inferSelect
+
+/** One relationship in which this organisation stands on its side. */
+export async function selectRelationship(
+  tenant: Tenant,
+  relationshipId: string,
+): Promise<RelationshipRow | undefined> {
+  const own = tenant.side === 'supplier' ? relationships.supplierOrgId : relationships.customerOrgId
+  const [row] = await tenant.tx
+    .select()
+    .from(relationships)
+    .where(and(eq(own, tenant.organisationId), eq(relationships.id, relationshipId)))
+  return row
+}
