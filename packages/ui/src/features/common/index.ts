@@ -1,5 +1,6 @@
 export { default as ConfirmAction } from './ConfirmAction.vue'
 export { default as FieldRow } from './FieldRow.vue'
+export { default as FilterSelect } from './FilterSelect.vue'
 export { default as FormDialog } from './FormDialog.vue'
 export { default as ListBar } from './ListBar.vue'
 export { default as NothingFound } from './NothingFound.vue'

@@ -1,0 +1,1 @@
+export { default as MessagesPage } from './MessagesPage.vue'
