@@ -6,6 +6,8 @@ export interface RunInput {
   readings: readonly number[]
   reference?: number | null
   mean?: number | null
+  /** Interval of the mean, as values: a pale band behind the readings. */
+  band?: Ends | null
   /** Limits of the readings' mean as values: the reference value plus and minus the margin. */
   margin?: Ends | null
   /** Zero-based places of readings to mark. */
@@ -27,12 +29,13 @@ export interface RunLayout {
   radius: number
   points: { x: number; y: number; marked: boolean; number: number }[]
   zone: { y: number; height: number } | null
+  band: { y: number; height: number } | null
   lines: { kind: 'limit' | 'reference' | 'mean'; y: number; label: string; labelY: number }[]
 }
 
 /** Readings in the order taken, with the lines they are judged against, in pixels. Null without readings. */
 export function layoutRun(input: RunInput): RunLayout | null {
-  const { readings, margin, words } = input
+  const { readings, margin, band, words } = input
   if (!readings.length) return null
   const lines = (
     [
@@ -44,7 +47,8 @@ export function layoutRun(input: RunInput): RunLayout | null {
   ).flatMap(([kind, value, label]) => (value == null ? [] : [{ kind, value, label }]))
   const top = 26
   const bottom = input.height - 42
-  const values = [...readings, ...lines.map(({ value }) => value)]
+  const ofBand = [band?.lower, band?.upper].filter((end) => end != null)
+  const values = [...readings, ...ofBand, ...lines.map(({ value }) => value)]
   const low = values.reduce((a, b) => Math.min(a, b))
   const high = values.reduce((a, b) => Math.max(a, b))
   const room = (high - low || Math.abs(high) || 1) * 0.05
@@ -79,6 +83,10 @@ export function layoutRun(input: RunInput): RunLayout | null {
     })),
     zone:
       margin && (margin.lower != null || margin.upper != null) ? { y: upper, height: lower - upper } : null,
+    band:
+      band?.lower == null || band.upper == null
+        ? null
+        : { y: y.scale.at(band.upper), height: y.scale.at(band.lower) - y.scale.at(band.upper) },
     lines: lines.map(({ kind, label }, index) => ({ kind, label, y: at[index]!, labelY: labelY[index]! })),
   }
 }

@@ -82,6 +82,8 @@ export const plotWords = {
   reading: 'reading',
   readings: 'number of readings',
   value: 'value',
+  entered: 'as entered',
+  band: 'interval of the mean',
   order: 'in the order taken',
   trueBias: 'true bias',
   allowedBias: 'allowed bias',
