@@ -4,6 +4,7 @@ import type { Route } from './http/route'
 import type { Identity } from './integrations/oidc'
 import type { Sessions } from './integrations/sessions'
 import { filesRoutes } from './modules/files/files.routes'
+import { frontRoutes } from './modules/front/front.routes'
 import { calibrationsRoutes } from './modules/gauges/calibrations.routes'
 import { gaugesRoutes } from './modules/gauges/gauges.routes'
 import { standardsRoutes } from './modules/gauges/standards.routes'
@@ -27,6 +28,7 @@ export function allRoutes({ database, config, identity, sessions }: RouteDepende
   return [
     ...systemRoutes(database),
     ...signInRoutes({ database, identity, sessions, origins: config.origins }),
+    ...frontRoutes,
     ...relationshipsRoutes,
     ...partsRoutes,
     ...characteristicsRoutes,

@@ -1,4 +1,4 @@
-import { and, eq, isNull, sql } from 'drizzle-orm'
+import { and, asc, eq, inArray, isNull, sql } from 'drizzle-orm'
 import type { listCharacteristics } from '../../../contract/characteristics'
 import type { QueryOf } from '../../../contract/define'
 import { archivedIs, containing, orderOf, totalOverPages, windowOf } from '../../db/paging'
@@ -82,21 +82,23 @@ export async function selectCharacteristics(tenant: Tenant, query: QueryOf<typeo
     .offset(windowOf(query).offset)
 }
 
-/** Every active characteristic of a revision. */
-export async function selectActiveOfRevision(
+/** Every active characteristic of some revisions, by number on the drawing. */
+export async function selectActiveOfRevisions(
   tenant: Tenant,
-  revisionId: string,
+  revisionIds: readonly string[],
 ): Promise<CharacteristicRow[]> {
+  if (revisionIds.length === 0) return []
   return tenant.tx
     .select()
     .from(characteristics)
     .where(
       and(
         ownCharacteristics(tenant),
-        eq(characteristics.revisionId, revisionId),
+        inArray(characteristics.revisionId, [...revisionIds]),
         isNull(characteristics.archivedAt),
       ),
     )
+    .orderBy(asc(characteristics.number))
 }
 
 export async function selectCharacteristic(

@@ -195,7 +195,7 @@ function recordCharacteristic(
 
 function asAnswer(
   { characteristic, part, revision, isCurrent, frozenBy }: CharacteristicInPart,
-  proof: ProofOfCharacteristic = { tasks: 0, proof: 'no-task' },
+  proof: ProofOfCharacteristic = { tasks: 0, proof: 'no-task', leastFar: null },
 ): CharacteristicAnswer {
   return {
     ...characteristic,

@@ -20,6 +20,8 @@ export interface ProofOfCharacteristic {
   /** Active measuring tasks. */
   tasks: number
   proof: ProofState
+  /** The task whose proof is least far; null where there is none. */
+  leastFar: string | null
 }
 
 /** The proof of each characteristic: that of the task that is least far. */
@@ -35,13 +37,10 @@ export async function proofOfCharacteristics(
   return new Map(
     characteristicIds.map((characteristicId) => {
       const own = tasks.filter((task) => task.characteristicId === characteristicId)
-      return [
-        characteristicId,
-        {
-          tasks: own.length,
-          proof: proofOfCharacteristic(own.map(({ id }) => proofs.get(id) ?? 'missing')),
-        },
-      ]
+      const proofOf = ({ id }: { id: string }) => proofs.get(id) ?? 'missing'
+      const proof = proofOfCharacteristic(own.map(proofOf))
+      const leastFar = own.find((task) => proofOf(task) === proof)?.id ?? null
+      return [characteristicId, { tasks: own.length, proof, leastFar }]
     }),
   )
 }

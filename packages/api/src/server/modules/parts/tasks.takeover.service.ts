@@ -1,6 +1,6 @@
 import { areCompatible } from '@evenrule/metrology'
 import type { Tenant } from '../../db/tenant'
-import { selectActiveOfRevision } from './characteristics.repository'
+import { selectActiveOfRevisions } from './characteristics.repository'
 import { isArchived, noEarlierRevision } from './parts.errors'
 import { partRow } from './parts.service'
 import { selectNewestRevisions } from './revisions.repository'
@@ -20,7 +20,9 @@ export async function takeOverTasksOf(
   if (part.archivedAt) throw isArchived('part')
   const [current, before] = await selectNewestRevisions(tenant, part, 2)
   if (!current || !before) throw noEarlierRevision()
-  const targets = new Map((await selectActiveOfRevision(tenant, current.id)).map((row) => [row.number, row]))
+  const targets = new Map(
+    (await selectActiveOfRevisions(tenant, [current.id])).map((row) => [row.number, row]),
+  )
   const tasks = await selectTasksOfRevision(tenant, before.id)
   let taken = 0
   for (const { task, characteristic } of tasks) {
