@@ -216,6 +216,43 @@ describe('checking a submission', () => {
       ['design.minimum', 'not-in-text'],
     ])
   })
+  it('finds a stored verdict that is not the signed one, and names it', async () => {
+    const check = await checkSubmission(
+      { ...frozen(), evaluations: [{ ...evaluation, verdict: 'falls-short' }] },
+      recompute,
+    )
+    expect(check.clauses[0]).toMatchObject({
+      problem: 'verdict-altered',
+      difference: { path: 'verdict', stored: '"falls-short"', recomputed: '"meets"' },
+    })
+  })
+  it('finds a stored hash that is not that of its output', async () => {
+    const check = await checkSubmission(
+      { ...frozen(), evaluations: [{ ...evaluation, outputSha256: hashOf('other') }] },
+      recompute,
+    )
+    expect(check.clauses[0]).toMatchObject({
+      problem: 'output-altered',
+      difference: { path: 'outputSha256', recomputed: JSON.stringify(hashOf(outputText)) },
+    })
+  })
+  it('finds counts in the list that are not those of the text', async () => {
+    const listed = { verdict: 'meets', clausesMet: 1, clausesTotal: 1 }
+    expect((await checkSubmission({ ...frozen(), listed }, recompute)).listed).toMatchObject({ equal: true })
+    const check = await checkSubmission({ ...frozen(), listed: { ...listed, clausesMet: 2 } }, recompute)
+    expect(check).toMatchObject({
+      equal: false,
+      listed: { equal: false, difference: { path: 'clausesMet', stored: '2', recomputed: '1' } },
+    })
+  })
+  it.each(['oops', '{}', '{"format":"evenrule.submission/1"}'])(
+    'finds a text that is no submission any more: %s',
+    async (text) => {
+      const check = await checkSubmission({ ...frozen(), text, sha256: hashOf(text) }, recompute)
+      expect(check).toMatchObject({ equal: false, text: { equal: false } })
+      expect(check.clauses[0]).toMatchObject({ problem: 'not-in-text' })
+    },
+  )
   it('says so when the engine is not the one named', async () => {
     const check = await checkSubmission(frozen(), async () => {
       throw new EngineProblem('engine-altered')

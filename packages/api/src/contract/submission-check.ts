@@ -1,6 +1,11 @@
 import canonicalize from 'canonicalize'
 import { z } from 'zod'
-import { submissionContentSchema, type FrozenClauseResult } from './submission-content'
+import {
+  submissionContentSchema,
+  summaryOf,
+  type FrozenClauseResult,
+  type SubmissionContent,
+} from './submission-content'
 
 export const clauseProblems = [
   /** The frozen text names a clause whose evaluation is not there. */
@@ -49,6 +54,8 @@ export const submissionCheckSchema = z.object({
     z.object({ study: z.string(), equal: z.boolean(), stored: z.string(), recomputed: z.string() }),
   ),
   clauses: z.array(clauseCheckSchema),
+  /** Verdict and counts that lists show are those of the frozen text; null where they were not given. */
+  listed: z.object({ equal: z.boolean(), difference: differenceSchema.nullable() }).nullable(),
 })
 export type SubmissionCheck = z.output<typeof submissionCheckSchema>
 
@@ -59,6 +66,8 @@ export interface CheckedEvaluation {
   outputSha256: string
   engineVersion: string
   engineSha256: string
+  /** The verdict stored beside the output, where there is one. */
+  verdict?: string
 }
 
 /** The engine that an evaluation names could not be had, or is not the one with that hash. */
@@ -139,24 +148,47 @@ async function checkClause(
     return { ...base, equal: false, problem, difference: null, recomputedSha256: null }
   }
   const recomputedSha256 = await sha256Of(recomputed)
-  const difference = firstDifference(evaluation.outputText, recomputed)
-  const problem = await problemOf(clause, evaluation, recomputedSha256, difference)
+  const found = await problemOf(clause, evaluation, recomputed)
+  const { problem = null, difference = null } = found ?? {}
   return { ...base, equal: problem === null, problem, difference, recomputedSha256 }
 }
+
+interface Found {
+  problem: ClauseProblem
+  difference: Difference | null
+}
+
+const differs = (path: string, stored: string, recomputed: string): Difference => ({
+  path,
+  stored: JSON.stringify(stored),
+  recomputed: JSON.stringify(recomputed),
+})
 
 async function problemOf(
   clause: FrozenClauseResult,
   evaluation: CheckedEvaluation,
-  recomputedSha256: string,
-  difference: Difference | null,
-): Promise<ClauseProblem | null> {
-  if ((await sha256Of(evaluation.inputText)) !== clause.inputSha256) return 'input-altered'
-  if ((await sha256Of(evaluation.outputText)) !== clause.outputSha256) return 'output-altered'
-  if (evaluation.outputSha256 !== clause.outputSha256) return 'output-altered'
-  if (evaluation.engineSha256 !== clause.engineSha256) return 'engine-altered'
-  if (difference || recomputedSha256 !== clause.outputSha256) return 'recomputed-differs'
-  const output = parse(evaluation.outputText)
-  return isObject(output) && output.verdict === clause.verdict ? null : 'verdict-altered'
+  recomputed: string,
+): Promise<Found | null> {
+  const difference = firstDifference(evaluation.outputText, recomputed)
+  const found = (problem: ClauseProblem, fallback: Difference | null = null): Found => ({
+    problem,
+    difference: difference ?? fallback,
+  })
+  const inputSha256 = await sha256Of(evaluation.inputText)
+  if (inputSha256 !== clause.inputSha256)
+    return found('input-altered', differs('inputSha256', clause.inputSha256, inputSha256))
+  const outputSha256 = await sha256Of(evaluation.outputText)
+  for (const hash of [outputSha256, evaluation.outputSha256])
+    if (hash !== clause.outputSha256)
+      return found('output-altered', differs('outputSha256', hash, clause.outputSha256))
+  if (evaluation.engineSha256 !== clause.engineSha256)
+    return found('engine-altered', differs('engineSha256', evaluation.engineSha256, clause.engineSha256))
+  if (difference) return found('recomputed-differs')
+  const output = parse(recomputed)
+  const verdict = isObject(output) && typeof output.verdict === 'string' ? output.verdict : ''
+  for (const stored of [clause.verdict, evaluation.verdict ?? clause.verdict])
+    if (stored !== verdict) return found('verdict-altered', differs('verdict', stored, verdict))
+  return null
 }
 
 /** Computes the canonical output text of an evaluation's input on the engine it names, or throws `EngineProblem`. */
@@ -173,31 +205,48 @@ export async function checkSubmission(
     sha256: string
     signatures: readonly { meaning: string; sha256: string }[]
     evaluations: readonly CheckedEvaluation[]
+    /** What lists show of it; given where it is stored beside the text. */
+    listed?: { verdict: string | null; clausesMet: number | null; clausesTotal: number | null }
   },
   recompute: Recompute,
 ): Promise<SubmissionCheck> {
-  const content = submissionContentSchema.parse(JSON.parse(submission.text))
+  const content = contentOf(submission.text)
   const recomputed = await sha256Of(submission.text)
-  const canonical = canonicalize(JSON.parse(submission.text)) === submission.text
+  const canonical = content !== null && canonicalize(JSON.parse(submission.text)) === submission.text
   const text = { equal: canonical && recomputed === submission.sha256, stored: submission.sha256, recomputed }
   const signatures = submission.signatures.map(({ meaning, sha256 }) => ({
     meaning,
     equal: sha256 === recomputed,
   }))
   const data = await Promise.all(
-    content.studies.map(async ({ code, data: { readings, sha256 } }) => {
+    (content?.studies ?? []).map(async ({ code, data: { readings, sha256 } }) => {
       const again = await sha256Of(canonicalize(readings) ?? '')
       return { study: code, equal: again === sha256, stored: sha256, recomputed: again }
     }),
   )
+  const named = content?.clauses ?? []
   const clauses: ClauseCheck[] = []
-  for (const clause of content.clauses) {
+  for (const clause of named) {
     const evaluation = submission.evaluations.find((each) => each.clauseKey === clause.clauseKey)
     clauses.push(await checkClause(clause, evaluation, recompute))
   }
-  clauses.push(...strangers(content.clauses, submission.evaluations))
-  const equal = [text, ...signatures, ...data, ...clauses].every((each) => each.equal)
-  return { equal, text, signatures, data, clauses }
+  clauses.push(...strangers(named, submission.evaluations))
+  const listed = submission.listed && content ? checkListed(submission.listed, content) : null
+  const equal = [text, ...signatures, ...data, ...clauses, ...(listed ? [listed] : [])].every(
+    (each) => each.equal,
+  )
+  return { equal, text, signatures, data, clauses, listed }
+}
+
+/** The content of a frozen text; null where it is no such text any more. */
+function contentOf(text: string): SubmissionContent | null {
+  const parsed = submissionContentSchema.safeParse(parse(text))
+  return parsed.success ? parsed.data : null
+}
+
+function checkListed(stored: object, content: SubmissionContent): NonNullable<SubmissionCheck['listed']> {
+  const difference = firstDifference(canonicalize(stored) ?? '', canonicalize(summaryOf(content)) ?? '')
+  return { equal: difference === null, difference }
 }
 
 const strangers = (

@@ -155,3 +155,16 @@ export function overallVerdict(verdicts: readonly Verdict[]): Verdict {
 }
 
 export const isMet = (verdict: Verdict): boolean => verdict === 'meets' || verdict === 'meets-with-conditions'
+
+/** The verdict of the whole and how many clauses are met, from the clauses of the frozen text. */
+export function summaryOf({ clauses }: Pick<SubmissionContent, 'clauses'>): {
+  verdict: Verdict
+  clausesMet: number
+  clausesTotal: number
+} {
+  return {
+    verdict: overallVerdict(clauses.map(({ verdict }) => verdict)),
+    clausesMet: clauses.filter(({ verdict }) => isMet(verdict)).length,
+    clausesTotal: clauses.length,
+  }
+}
