@@ -6,6 +6,7 @@ import {
   index,
   integer,
   jsonb,
+  pgPolicy,
   pgTable,
   text,
   unique,
@@ -13,6 +14,7 @@ import {
   uuid,
 } from 'drizzle-orm/pg-core'
 import type { Side } from '../../../contract/access'
+import type { StoredVersionState } from '../../../contract/moves/agreement-version'
 import {
   instant,
   ownSideOnly,
@@ -24,6 +26,9 @@ import {
 } from '../../db/columns'
 import { characteristics, parts } from '../parts/parts.table'
 import { relationships } from '../relationships/relationships.table'
+
+/** Only what was never sent can be deleted: of what the other side has seen, nothing disappears. */
+const unsentOnly = (name: string, unsent: string) => restrictPolicy(name, unsent, 'delete')
 
 const nobody = `'00000000-0000-0000-0000-000000000000'::uuid`
 const partOrNone = sql.raw(`coalesce(part_id, ${nobody})`)
@@ -70,11 +75,9 @@ export const agreements = pgTable(
     relationshipKey('agreements', t, () => relationships),
     sharedPolicy('agreements'),
     restrictPolicy('agreements_drafts', `number is not null or ${ownSideOnly('begun_by')}`),
+    unsentOnly('agreements_sent_stay', 'number is null'),
   ],
 )
-
-/** What is stored of a version's state; in force, superseded and lapsed follow from dates and are derived. */
-export type StoredVersionState = 'draft' | 'proposed' | 'countered' | 'agreed' | 'signed' | 'withdrawn'
 
 export const agreementVersions = pgTable(
   'agreement_versions',
@@ -121,6 +124,15 @@ export const agreementVersions = pgTable(
     relationshipKey('agreement_versions', t, () => relationships),
     sharedPolicy('agreement_versions'),
     restrictPolicy('agreement_versions_drafts', `state <> 'draft' or ${ownSideOnly('begun_by')}`),
+    unsentOnly('agreement_versions_sent_stay', "state = 'draft'"),
+    // What both sides have signed never changes; the move to it may be made once.
+    pgPolicy('agreement_versions_signed_stay', {
+      as: 'restrictive',
+      for: 'update',
+      to: 'evenrule_app',
+      using: sql`state <> 'signed'`,
+      withCheck: sql`true`,
+    }),
   ],
 )
 
@@ -152,6 +164,7 @@ export const agreementRounds = pgTable(
     relationshipKey('agreement_rounds', t, () => relationships),
     sharedPolicy('agreement_rounds'),
     restrictPolicy('agreement_rounds_drafts', `state <> 'draft' or ${ownSideOnly('side')}`),
+    unsentOnly('agreement_rounds_sent_stay', "state = 'draft'"),
   ],
 )
 

@@ -111,6 +111,74 @@ export async function selectCharacteristic(
   return row
 }
 
+/** What an agreement is about: the whole relationship, one part, or one characteristic of it. */
+export interface ScopeOfCharacteristics {
+  relationshipId: string
+  partId: string | null
+  characteristicId: string | null
+}
+
+/** The one characteristic of the scope, or the active ones of the current revision of each active part in it. */
+export async function selectInScope(
+  tenant: Tenant,
+  { relationshipId, partId, characteristicId }: ScopeOfCharacteristics,
+): Promise<CharacteristicInPart[]> {
+  return fromCharacteristics(tenant)
+    .where(
+      and(
+        ownCharacteristics(tenant),
+        eq(characteristics.relationshipId, relationshipId),
+        partId ? eq(characteristics.partId, partId) : isNull(parts.archivedAt),
+        characteristicId
+          ? eq(characteristics.id, characteristicId)
+          : and(isCurrentRevision, isNull(characteristics.archivedAt)),
+      ),
+    )
+    .orderBy(asc(parts.number), asc(characteristics.number), asc(characteristics.id))
+}
+
+/**
+ * Keeps the characteristics of a scope from being changed, added or archived until the transaction ends. Parts are
+ * locked before characteristics, and both before any agreement, always in the order of their ids; the lock of a part
+ * excludes new characteristics, because their foreign key asks for one on it.
+ */
+export async function lockInScope(
+  { tx }: Tenant,
+  { relationshipId, partId, characteristicId }: ScopeOfCharacteristics,
+): Promise<void> {
+  if (characteristicId === null)
+    await tx
+      .select({ id: parts.id })
+      .from(parts)
+      .where(and(eq(parts.relationshipId, relationshipId), partId ? eq(parts.id, partId) : undefined))
+      .orderBy(parts.id)
+      .for('update')
+  await tx
+    .select({ id: characteristics.id })
+    .from(characteristics)
+    .where(
+      and(
+        eq(characteristics.relationshipId, relationshipId),
+        partId ? eq(characteristics.partId, partId) : undefined,
+        characteristicId ? eq(characteristics.id, characteristicId) : undefined,
+      ),
+    )
+    .orderBy(characteristics.id)
+    .for('share')
+}
+
+/**
+ * Locks a characteristic for a change. What a signature freezes is read after it, so that an agreement signed at the
+ * same instant is seen.
+ */
+export async function lockCharacteristic(tenant: Tenant, characteristicId: string): Promise<void> {
+  await tenant.tx
+    .select({ id: characteristics.id })
+    .from(characteristics)
+    .where(and(ownCharacteristics(tenant), eq(characteristics.id, characteristicId)))
+    .for('no key update')
+}
+
 /** What people enter of a characteristic. */
 export type EnteredCharacteristic = Pick<
   CharacteristicRow,

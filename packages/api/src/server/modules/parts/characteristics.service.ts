@@ -12,6 +12,7 @@ import { uniqueOr409 } from '../../db/unique'
 import { changedMeanwhile, notFound } from '../../errors'
 import {
   insertCharacteristic,
+  lockCharacteristic,
   selectCharacteristic,
   selectCharacteristics,
   updateCharacteristic,
@@ -90,6 +91,7 @@ export async function changeCharacteristicOf(
   characteristicId: string,
   { expectedVersion, ...entered }: BodyOf<typeof changeCharacteristic>,
 ): Promise<CharacteristicAnswer> {
+  await lockCharacteristic(tenant, characteristicId)
   const { characteristic, part, frozenBy } = await loaded(tenant, characteristicId)
   if (part.archivedAt) throw isArchived('part')
   if (characteristic.archivedAt) throw isArchived('characteristic')

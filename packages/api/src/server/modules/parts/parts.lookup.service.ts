@@ -1,8 +1,16 @@
 import { convert, type Characteristic } from '@evenrule/metrology'
+import { computedCharacteristic } from '../../../contract/agreement-check'
+import type { ScopedCharacteristic } from '../../../contract/agreements'
 import type { Tenant } from '../../db/tenant'
 import { notFound } from '../../errors'
 import type { FrozenCharacteristic } from '../studies/studies.table'
-import { selectCharacteristic } from './characteristics.repository'
+import {
+  lockInScope,
+  selectCharacteristic,
+  selectInScope,
+  type CharacteristicInPart,
+  type ScopeOfCharacteristics,
+} from './characteristics.repository'
 import { selectTask, type TaskRow } from './tasks.repository'
 
 /** One measuring task that this organisation may see, archived or not; 404 otherwise. */
@@ -19,21 +27,36 @@ export async function frozenCharacteristic(
 ): Promise<FrozenCharacteristic> {
   const row = await selectCharacteristic(tenant, characteristicId)
   if (!row) throw notFound('characteristic')
-  const { characteristic, part, revision } = row
-  return {
-    characteristicId: characteristic.id,
-    partNumber: part.number,
-    revision: revision.label,
-    number: characteristic.number,
-    name: characteristic.name,
-    nominal: characteristic.nominal,
-    lowerLimit: characteristic.lowerLimit,
-    upperLimit: characteristic.upperLimit,
-    unit: characteristic.unit,
-    class: characteristic.class,
-    processStandardDeviation: characteristic.processStandardDeviation,
-  }
+  return asFrozen(row)
 }
+
+/**
+ * Every characteristic that an agreement of this scope covers now: the one it is about, or the active ones of the
+ * current revisions. `locked` keeps their limits, and the list of them, as they are until the transaction ends.
+ */
+export async function characteristicsInScope(
+  tenant: Tenant,
+  scope: ScopeOfCharacteristics,
+  { locked = false } = {},
+): Promise<ScopedCharacteristic[]> {
+  if (locked) await lockInScope(tenant, scope)
+  const rows = await selectInScope(tenant, scope)
+  return rows.map((row) => ({ ...asFrozen(row), partId: row.part.id }))
+}
+
+const asFrozen = ({ characteristic, part, revision }: CharacteristicInPart): FrozenCharacteristic => ({
+  characteristicId: characteristic.id,
+  partNumber: part.number,
+  revision: revision.label,
+  number: characteristic.number,
+  name: characteristic.name,
+  nominal: characteristic.nominal,
+  lowerLimit: characteristic.lowerLimit,
+  upperLimit: characteristic.upperLimit,
+  unit: characteristic.unit,
+  class: characteristic.class,
+  processStandardDeviation: characteristic.processStandardDeviation,
+})
 
 /**
  * The characteristic as the computation takes it, in its own unit. A gauge's resolution is given in the gauge's
@@ -43,17 +66,10 @@ export function toCharacteristic(
   frozen: FrozenCharacteristic,
   { resolution, gaugeUnit }: { resolution?: string; gaugeUnit?: string } = {},
 ): Characteristic {
-  const { lowerLimit, upperLimit, processStandardDeviation, unit } = frozen
+  const { unit } = frozen
   const converted = resolution === undefined ? null : convert(Number(resolution), gaugeUnit ?? unit, unit)
   return {
-    unit,
-    tolerance: {
-      ...(lowerLimit === null ? {} : { lower: Number(lowerLimit) }),
-      ...(upperLimit === null ? {} : { upper: Number(upperLimit) }),
-    },
-    ...(processStandardDeviation === null
-      ? {}
-      : { processStandardDeviation: Number(processStandardDeviation) }),
+    ...computedCharacteristic(frozen),
     ...(converted === null ? {} : { resolution: converted }),
   }
 }
