@@ -12,8 +12,11 @@ import { messagesRoutes } from './modules/notifications/messages.routes'
 import { characteristicsRoutes } from './modules/parts/characteristics.routes'
 import { partsRoutes } from './modules/parts/parts.routes'
 import { tasksRoutes } from './modules/parts/tasks.routes'
+import { recordRoutes } from './modules/record/record.routes'
 import { relationshipsRoutes } from './modules/relationships/relationships.routes'
+import { reviewsRoutes } from './modules/reviews/reviews.routes'
 import { signInRoutes } from './modules/sign-in/sign-in.routes'
+import { submissionsRoutes } from './modules/submissions/submissions.routes'
 import { systemRoutes } from './modules/system/system.routes'
 
 export interface RouteDependencies {
@@ -38,5 +41,8 @@ export function allRoutes({ database, config, identity, sessions }: RouteDepende
     ...calibrationsRoutes,
     ...filesRoutes,
     ...messagesRoutes,
+    ...recordRoutes,
+    ...submissionsRoutes,
+    ...reviewsRoutes,
   ]
 }

@@ -1,21 +1,11 @@
 import { createHash } from 'node:crypto'
 import canonicalize from 'canonicalize'
 import { sql } from 'drizzle-orm'
+import type { RecordSubject } from '../../../contract/record'
 import type { Tenant } from '../../db/tenant'
 import { recordEvents, recordHeads } from './record.table'
 
-export type EventSubject =
-  | 'agreement-version'
-  | 'study'
-  | 'submission'
-  | 'challenge'
-  | 'part'
-  | 'characteristic'
-  | 'measuring-task'
-  | 'gauge'
-  | 'reference-standard'
-  | 'member'
-  | 'organisation'
+export type EventSubject = RecordSubject
 
 /** An event that a service asks for. People appear by id only, so that a person can be erased later. */
 export interface PendingEvent {

@@ -1,0 +1,8 @@
+import { listEvents, verifyRecord } from '../../../contract/record'
+import { tenantRoute, type Route } from '../../http/route'
+import { checkChain, listOfEvents } from './record.service'
+
+export const recordRoutes: Route[] = [
+  tenantRoute(listEvents, ({ tenant, query }) => listOfEvents(tenant, query)),
+  tenantRoute(verifyRecord, ({ tenant, params, query }) => checkChain(tenant, params.chainId, query.hash)),
+]
