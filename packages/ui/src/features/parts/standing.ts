@@ -4,6 +4,7 @@ import { characteristicWords as words } from '../../strings/parts'
 import { toleranceText } from './tolerance'
 
 type Row = characteristics.Characteristic
+type TickRow = Pick<Row, 'number' | 'name' | 'nominal' | 'lowerLimit' | 'upperLimit' | 'unit' | 'proof'>
 
 const coverageOf: Record<proof.ProofState, CoverageState> = {
   'no-task': 'missing',
@@ -16,7 +17,7 @@ const coverageOf: Record<proof.ProofState, CoverageState> = {
 }
 
 /** The ticks of a revision's coverage rule, by number on the drawing. */
-export const coverageTicks = (rows: readonly Row[]): CoverageTick[] =>
+export const coverageTicks = (rows: readonly TickRow[]): CoverageTick[] =>
   [...rows]
     .sort((a, b) => a.number - b.number)
     .map((row) => ({
@@ -24,6 +25,10 @@ export const coverageTicks = (rows: readonly Row[]): CoverageTick[] =>
       label: `${row.name} ${toleranceText(row)}`,
       state: coverageOf[row.proof],
     }))
+
+/** Whether accepted proof covers it, with conditions or without. */
+export const isCovered = (proof: proof.ProofState): boolean =>
+  proof === 'accepted' || proof === 'accepted-with-conditions'
 
 export interface PartAnswer {
   /** The plain part of the answer, and the decisive one. */

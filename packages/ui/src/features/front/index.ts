@@ -1,0 +1,1 @@
+export { default as FrontPage } from './FrontPage.vue'

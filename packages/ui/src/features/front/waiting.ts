@@ -1,0 +1,48 @@
+import type { front } from '@evenrule/api/contract'
+import { frontWords as words } from '../../strings/front'
+import { characteristicText } from '../parts/tolerance'
+
+type Waiting = front.Waiting
+
+const pageOf: Record<front.WaitingAct, string> = {
+  decide: 'submissions',
+  'confirm-as-second-person': 'submissions',
+  'answer-challenge': 'submissions',
+  'sign-submission': 'submissions',
+  'finish-submission': 'submissions',
+  'sign-criteria': 'agreements',
+  'answer-proposal': 'agreements',
+  'take-readings': 'studies',
+  'confirm-characteristics': 'parts',
+}
+
+/** Page of the thing that waits, below the organisation. */
+export const pathOf = ({ act, id }: Waiting): string => `${pageOf[act]}/${id}`
+
+/** What is asked and of what, in words: "Sign the submission, bore gauge BG-14". */
+export function whatWaits({ act, gauge, name }: Waiting): { act: string; of: string } {
+  const page = pageOf[act]
+  const of =
+    page === 'agreements'
+      ? words.agreement(name ?? '')
+      : page === 'studies'
+        ? [words.study(name ?? ''), gauge?.code].filter(Boolean).join(', ')
+        : gauge
+          ? `${gauge.name} ${gauge.code}`
+          : ''
+  return { act: words.act[act], of }
+}
+
+/** The characteristic, part or relationship it is about, in words. */
+export function subjectOf({ act, partNumber, characteristic }: Waiting): string {
+  const text = characteristic ? characteristicText(characteristic) : null
+  if (text) return partNumber ? `${partNumber} / ${text}` : text
+  if (!partNumber) return act === 'take-readings' ? '' : words.everything
+  return act === 'confirm-characteristics' ? partNumber : words.all(partNumber)
+}
+
+/** Clauses met, or what else is counted for the act. */
+export function countOf({ act, clausesMet, clausesTotal, count }: Waiting): string {
+  if (clausesMet !== null && clausesTotal !== null) return words.ofClauses(clausesMet, clausesTotal)
+  return count === null ? '' : (words.counted[act]?.(count) ?? '')
+}

@@ -1,0 +1,1 @@
+export { default as RelationshipsPage } from './RelationshipsPage.vue'
