@@ -60,6 +60,8 @@ export const cellProblems = [
   'too-large',
   'unstorable-character',
   'broken-quotes',
+  /** A mean or a sum below the readings. */
+  'summary-row',
 ] as const
 export type CellProblem = (typeof cellProblems)[number]
 
@@ -82,7 +84,7 @@ export const noteCodes = [
   'column-chosen',
   'read-across',
   'rows-passed-over',
-  'bare-latin-1',
+  'read-as-latin-1',
   /** About the readings against the study. */
   'more-than-planned',
   'fewer-than-planned',
