@@ -42,7 +42,8 @@ export const actWords: Record<ActName, ActWords> = {
   },
   return: {
     title: 'Return it to its draft?',
-    text: () => 'Whoever prepared it sees your note and can change the studies. The customer sees nothing of it.',
+    text: () =>
+      'Whoever prepared it sees your note and can change the studies. The customer sees nothing of it.',
     submit: 'Return with a note',
     cannot: 'You cannot return it:',
   },
@@ -107,15 +108,23 @@ export const actWords: Record<ActName, ActWords> = {
 }
 
 export const decisionWords = {
-  fresh:
-    'A signature needs a sign-in of the last five minutes. Where yours is older you are asked to sign in again, and come back to this question.',
+  stale:
+    'A signature needs a sign-in of the last five minutes, and yours is older. You are asked to sign in again and come back to this question.',
+  fresh: 'You have signed in afresh, so the signature can be given now.',
   signsText: 'You sign the text with this SHA-256:',
-  note: 'Note for the approvers',
-  returnNote: 'What should change',
-  withdrawReason: 'Why it is withdrawn',
-  acceptReason: 'Remark for the supplier',
-  refuseReason: 'Why it is refused',
-  sendBackReason: 'Why it is not confirmed',
+  /** What the words of a move are. */
+  wordsOf: {
+    'send-for-signature': 'Note for the approvers',
+    return: 'What should change',
+    withdraw: 'Why it is withdrawn',
+    accept: 'Remark for the supplier',
+    'accept-with-conditions': 'Remark for the supplier',
+    refuse: 'Why it is refused',
+    'send-back': 'Why it is not confirmed',
+    sign: '',
+    discard: '',
+    confirm: '',
+  } satisfies Record<ActName, string>,
   conditions: 'What must follow',
   conditionsHint: 'Such as “Repeat the study with 30 readings on the new fixture”.',
   dueOn: 'Until when',
@@ -142,6 +151,12 @@ export const decisionWords = {
   conditionsUntil: (day: string) => `Until ${day}:`,
   secondBy: (name: string | null) => (name === null ? 'a second person' : name),
   sentBack: 'Not confirmed:',
+  safetyTitle: 'Safety class: two people decide.',
+  safetyText:
+    'Whoever accepts it first only proposes; the acceptance counts once somebody else of the customer confirms it, signed in afresh.',
+  /** Beside a clause that an estimate or a zero-difference test decides. */
+  weakOnSafety:
+    'Safety class: this clause is met by an estimate, or by failing to find a difference. It proves little by itself.',
   somebody: 'Somebody of the customer',
 } as const
 
@@ -158,6 +173,7 @@ export const challengeWords = {
   chooseReason: 'Choose what is in doubt.',
   words: 'What is wrong with it',
   wordsMissing: 'Say what is wrong, so that it can be answered.',
+  sayMissing: 'Say it in words.',
   reasons: {
     result: 'The result',
     readings: 'The readings',
@@ -177,7 +193,10 @@ export const challengeWords = {
   mark: (number: number) => `challenge ${number}`,
   states: {
     open: { supplier: 'waits for your answer', customer: 'waits for the supplier’s answer' },
-    answered: { supplier: 'answered; the customer has the next word', customer: 'answered; your word is next' },
+    answered: {
+      supplier: 'answered; the customer has the next word',
+      customer: 'answered; your word is next',
+    },
     'resolved-by-evidence': { supplier: 'settled by the answer', customer: 'settled by the answer' },
     withdrawn: { supplier: 'withdrawn by the customer', customer: 'withdrawn' },
     unresolved: { supplier: 'left unresolved', customer: 'left unresolved' },
@@ -203,7 +222,8 @@ export const challengeWords = {
     settle: {
       act: 'The answer settles it',
       title: 'Does the answer settle it?',
-      text: () => 'The challenge ends as resolved by evidence. The decision on the submission is still yours to make.',
+      text: () =>
+        'The challenge ends as resolved by evidence. The decision on the submission is still yours to make.',
       field: 'Closing words',
       submit: 'The answer settles it',
       required: false,
@@ -211,14 +231,13 @@ export const challengeWords = {
     withdraw: {
       act: 'Withdraw the challenge',
       title: 'Withdraw the challenge?',
-      text: () => 'The challenge ends as withdrawn and stays on the page. The decision is still yours to make.',
+      text: () =>
+        'The challenge ends as withdrawn and stays on the page. The decision is still yours to make.',
       field: 'Closing words',
       submit: 'Withdraw the challenge',
       required: false,
     },
   },
-  notifiedSupplier: 'from the supplier',
-  notifiedCustomer: 'from the customer',
 } as const
 
 /** The recompute: what this browser found. */
@@ -255,7 +274,8 @@ export const recomputeWords = {
     'input-altered': 'The stored input is not the one the text names.',
     'output-altered': 'The stored result is not the one the text names.',
     'verdict-altered': 'The verdict in the text is not the one of its evaluation.',
-    'engine-unavailable': 'The computation named could not be fetched. Try again, or verify it from the evidence.',
+    'engine-unavailable':
+      'The computation named could not be fetched. Try again, or verify it from the evidence.',
     'engine-altered': 'The computation fetched is not the one with the hash named, so it was not run.',
     'recomputed-differs': 'Computing again gives another result.',
   } satisfies Record<ClauseProblem, string>,
@@ -275,10 +295,7 @@ export const printWords = {
   class: 'Class',
   gauge: 'Measuring system',
   state: 'State',
-  challenges: 'Challenges',
-  hashes: 'Hashes',
-  hashOf: 'Of',
+  resultHashes: 'SHA-256 of each clause result',
   readingsText: (unit: string) => `As entered, in ${unit}, in the order taken.`,
   readingsDeviation: (unit: string) => `As entered, as deviations in ${unit}, in the order taken.`,
-  clauseResult: (clause: string) => `Result: ${clause}`,
 } as const

@@ -1,4 +1,5 @@
-import type { Side, submissions, SubmissionState } from '@evenrule/api/contract'
+import type { Side, submissions } from '@evenrule/api/contract'
+import type { SubmissionState } from '@evenrule/api/contract/moves/submission'
 import { formatCount, formatDate } from '../format'
 
 /** Who stands on either side of a submission, and on which side the reader is. */
@@ -14,7 +15,8 @@ const whose = (parties: Parties, side: Side): string =>
 
 /** How long something has stood still: "today", "1 day", "6 days". */
 export const ageText = (days: number): string => (days <= 0 ? 'today' : formatCount(days, 'day'))
-const since = (days: number): string => (days <= 0 ? 'since today' : `for ${formatCount(days, 'day')}`)
+const waits = (days: number, what: string): string =>
+  days <= 0 ? `It waits for ${what}.` : `It has waited ${formatCount(days, 'day')} for ${what}.`
 
 /** Where a submission stands and whose step is next: the decisive part, and the rest. */
 export const standingWords: Record<
@@ -23,20 +25,20 @@ export const standingWords: Record<
 > = {
   draft: () => ['A draft.', 'Choose the studies that count, then send it for signature.'],
   'for-signature': (_parties, days) => [
-    `It waits for a signature ${since(days)}.`,
+    waits(days, 'a signature'),
     'An approver who took none of the readings signs it.',
   ],
-  submitted: (parties, days) => [`It waits for ${whose(parties, 'customer')} decision ${since(days)}.`, ''],
+  submitted: (parties, days) => [waits(days, `${whose(parties, 'customer')} decision`), ''],
   challenged: (parties, days) => [
-    `It waits for ${whose(parties, 'supplier')} answer ${since(days)}.`,
+    waits(days, `${whose(parties, 'supplier')} answer`),
     parties.side === 'customer' ? 'You challenge a result.' : `${parties.customer} challenges a result.`,
   ],
   answered: (parties, days) => [
-    `It waits for ${whose(parties, 'customer')} decision ${since(days)}.`,
+    waits(days, `${whose(parties, 'customer')} decision`),
     parties.side === 'supplier' ? 'You have answered.' : `${parties.supplier} has answered.`,
   ],
   'awaiting-second-person': (parties, days) => [
-    `It waits for a second person ${since(days)}.`,
+    waits(days, 'a second person'),
     `Somebody else of ${parties.customer} must confirm the acceptance.`,
   ],
   accepted: (parties, _days, decidedAt) => [
@@ -82,7 +84,14 @@ export const submissionWords = {
   draft: 'draft',
   numbered: (number: number) => `submission ${number}`,
   waitsOn: 'Waits for',
-  waitsOnChoices: { us: 'us', them: { supplier: 'the customer', customer: 'the supplier' } },
+  waitsOnChoices: {
+    us: 'us',
+    them: { supplier: 'the customer', customer: 'the supplier' },
+    all: 'anybody, or decided',
+  },
+  nothingWaitsTitle: { us: 'Nothing waits for us', them: 'Nothing waits for the other side' },
+  nothingWaitsText: 'What is decided, or waits for somebody else, is in the whole list.',
+  showAll: 'Show all submissions',
   nothingWaits: '–',
   emptyTitle: 'No submission yet',
   emptyText: {
@@ -137,7 +146,9 @@ export const sectionWords = {
   engine: (version: string) => `Engine ${version}`,
   data: (study: string) => `Readings of study ${study}`,
   dataText: (readings: number, revision: number) =>
-    revision > 1 ? `${formatCount(readings, 'reading')}, revision ${revision}` : formatCount(readings, 'reading'),
+    revision > 1
+      ? `${formatCount(readings, 'reading')}, revision ${revision}`
+      : formatCount(readings, 'reading'),
   standard: (study: string) => `Reference standard of study ${study}`,
   standardText: (code: string, name: string, value: string, uncertainty: string | null, factor: string) =>
     `${code} ${name}, certified ${value}${uncertainty === null ? '' : `, expanded uncertainty ${uncertainty} (coverage factor ${factor})`}`,
@@ -185,7 +196,8 @@ export const sectionWords = {
   choices: 'Which studies count',
   choicesText:
     'Each clause is judged on the newest of the studies chosen. All attempts are named to the customer whatever you choose.',
-  noChoices: 'No computed study of this measuring task is there yet. Register one and take its readings first.',
+  noChoices:
+    'No computed study of this measuring task is there yet. Register one and take its readings first.',
   chooseStudies: 'Use these studies',
   studyHint: (readings: number, collected: string) =>
     `${formatCount(readings, 'reading')}, collected ${collected}`,

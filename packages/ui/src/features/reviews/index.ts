@@ -1,0 +1,5 @@
+export { challengesOf, isUnderChallenge, mayChallenge, possibleSayings, type Saying } from './challenges'
+export { default as ChallengeDialog } from './ChallengeDialog.vue'
+export { default as ChallengesSection } from './ChallengesSection.vue'
+export { default as MessageList } from './MessageList.vue'
+export { default as ResultActs } from './ResultActs.vue'

@@ -1,0 +1,59 @@
+import type { Difference, SubmissionCheck } from '@evenrule/api/contract/submission-check'
+import { describeClause } from '../../strings/clauses'
+import { recomputeWords as words } from '../../strings/reviews'
+import { sectionWords } from '../../strings/submissions'
+import type { ReadSubmission } from './reading'
+
+/** One thing that was checked, as a line of the answer. */
+export interface CheckLine {
+  key: string
+  label: string
+  equal: boolean
+  /** Hashes; null where there is none to show. */
+  stored: string | null
+  recomputed: string | null
+  problem?: string
+  difference?: Difference
+  engine?: string
+}
+
+/** A check of a submission as lines: the text, its signatures, the readings, and every clause. */
+export function checkLines(
+  check: SubmissionCheck,
+  { results }: Pick<ReadSubmission, 'results'>,
+): CheckLine[] {
+  const nameOf = (clauseKey: string) => {
+    const result = results.find((each) => each.clauseKey === clauseKey)
+    return result ? describeClause(result.clause, result.input) : clauseKey
+  }
+  return [
+    { key: 'text', label: words.theText, ...check.text },
+    ...check.signatures.map(({ meaning, equal }, at) => ({
+      key: `signature-${at}`,
+      label: `${words.signature}: ${meaningOf(meaning)}`,
+      equal,
+      stored: null,
+      recomputed: null,
+    })),
+    ...check.data.map(({ study, ...each }) => ({
+      key: `data-${study}`,
+      label: words.readingsOf(study),
+      ...each,
+    })),
+    ...check.clauses.map((clause) => ({
+      key: `clause-${clause.clauseKey}`,
+      label: nameOf(clause.clauseKey),
+      equal: clause.equal,
+      stored: clause.outputSha256,
+      recomputed: clause.recomputedSha256,
+      ...(clause.problem ? { problem: words.problems[clause.problem] } : {}),
+      ...(clause.difference ? { difference: clause.difference } : {}),
+      engine: `${words.engineIs(clause.engineVersion)}, ${clause.engineSha256}`,
+    })),
+  ]
+}
+
+const meaningOf = (meaning: string): string =>
+  meaning in sectionWords.meanings
+    ? sectionWords.meanings[meaning as keyof typeof sectionWords.meanings]
+    : meaning

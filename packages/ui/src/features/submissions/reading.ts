@@ -1,0 +1,65 @@
+import { submissions, type Side } from '@evenrule/api/contract'
+import { waitsOn } from '@evenrule/api/contract/moves/submission'
+import { clauseDescriptor } from '@evenrule/metrology'
+import type { Parties } from '../../strings/submissions'
+import { resultOf, type ClauseResult } from '../results/types'
+
+export type Content = submissions.SubmissionContent
+export type FrozenStudy = submissions.FrozenStudy
+
+/** A submission with its frozen text read, made ready to be shown. */
+export interface ReadSubmission {
+  submission: submissions.Submission
+  content: Content
+  results: ClauseResult[]
+}
+
+/** Reads the frozen text and the evaluations of a submission; clauses stand in the order of the text. */
+export function readContent(submission: submissions.Submission): ReadSubmission {
+  const content = submissions.submissionContentSchema.parse(JSON.parse(submission.text))
+  const results = content.clauses.flatMap((clause) => {
+    const evaluation = submission.evaluations.find(({ clauseKey }) => clauseKey === clause.clauseKey)
+    const { agreementNumber, versionNumber, scope } = clause
+    return evaluation ? [resultOf(evaluation, { agreementNumber, versionNumber, scope })] : []
+  })
+  return { submission, content, results }
+}
+
+/** Both organisations by name, and on which side the reader is. */
+export const partiesOf = ({ relationship }: Content, side: Side): Parties => ({
+  side,
+  supplier: relationship.supplier.name,
+  customer: relationship.customer.name,
+})
+
+/** The results that rest on the readings of one study. */
+export const resultsOfStudy = ({ content, results }: ReadSubmission, code: string): ClauseResult[] => {
+  const keys = content.clauses.filter(({ study }) => study === code).map(({ clauseKey }) => clauseKey)
+  return results.filter(({ clauseKey }) => keys.includes(clauseKey))
+}
+
+/**
+ * On a safety-class characteristic: a clause that an estimate decides, or one that is met by failing to find a
+ * difference, proves little by itself.
+ */
+export const isWeakOnSafety = ({ clause }: Pick<ClauseResult, 'clause'>, content: Content): boolean =>
+  content.characteristic.class === 'safety' &&
+  (clause.type === 'bias-zero-test' ||
+    (clauseDescriptor(clause).basis === 'estimate' && clauseDescriptor(clause).studyKind !== null))
+
+export type WaitsFor = 'us' | 'them' | null
+
+/** Whose step is next, seen from the reader's side. */
+export const waitsFor = (state: submissions.Submission['state'], side: Side): WaitsFor =>
+  waitsOn[state] === null ? null : waitsOn[state] === side ? 'us' : 'them'
+
+/** The first digits of a hash, enough to tell it apart when read aloud. */
+export const shortHash = (hash: string): string => hash.slice(0, 12)
+
+const kilo = 1000
+/** The size of a file: "312 B", "4.1 kB", "2.0 MB". */
+export function sizeParts(bytes: number): { value: number; unit: 'B' | 'kB' | 'MB'; digits: number } {
+  if (bytes < kilo) return { value: bytes, unit: 'B', digits: 0 }
+  if (bytes < kilo * kilo) return { value: bytes / kilo, unit: 'kB', digits: 1 }
+  return { value: bytes / kilo / kilo, unit: 'MB', digits: 1 }
+}

@@ -1,0 +1,30 @@
+import { submissions } from '@evenrule/api/contract'
+import { computed } from 'vue'
+import { useRoute } from 'vue-router'
+import { useApi } from '../../session/client'
+import { useHere, useLoaded } from '../common'
+import { useCountsStore } from '../shell/useCountsStore'
+import { partiesOf, readContent } from './reading'
+
+/** The submission that the address names, read and ready to be shown, and how to load it again after a move. */
+export function useSubmission() {
+  const api = useApi()
+  const here = useHere()
+  const route = useRoute()
+  const counts = useCountsStore()
+  const { data, error, reload } = useLoaded(
+    () => ({ submissionId: String(route.params.submissionId) }),
+    async (at) => readContent(await api.call(submissions.readSubmission, { params: here.params(at) })),
+  )
+  return {
+    read: data,
+    error,
+    reload,
+    parties: computed(() => data.value && partiesOf(data.value.content, here.side)),
+    /** After a move: the page and the counts beside the navigation. */
+    async moved() {
+      await reload()
+      await counts.refresh(here.organisationId.value)
+    },
+  }
+}
