@@ -84,10 +84,17 @@ export const challengeMoves = [
 export type ChallengeMove = (typeof challengeMoves)[number]
 export type ChallengeMoveName = ChallengeMove['name']
 
-/** The move of that name where the state allows it. */
-export const challengeMove = (name: ChallengeMoveName, state: ChallengeState): ChallengeMove | undefined =>
+type NamedMove<N extends ChallengeMoveName> = Extract<ChallengeMove, { name: N }>
+
+/** The move of that name where the state allows it; null where there is no challenge yet. */
+export const challengeMove = <N extends ChallengeMoveName>(
+  name: N,
+  state: ChallengeState | null,
+): NamedMove<N> | undefined =>
   challengeMoves.find(
-    (move) => move.name === name && (move.from as readonly ChallengeState[]).includes(state),
+    (move): move is NamedMove<N> =>
+      move.name === name &&
+      (state === null ? move.from.length === 0 : (move.from as readonly ChallengeState[]).includes(state)),
   )
 
 /** A challenge that still asks for something: the decision waits for it. */
