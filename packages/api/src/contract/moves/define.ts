@@ -41,20 +41,19 @@ export const unmet = <P extends string>(move: Pick<Move<string, P>, 'preconditio
 
 /**
  * Of moves that may start from where the aggregate stands, the one whose conditions hold, the most particular where
- * several do. Where none may be made, the first condition that keeps the nearest one back.
+ * several do. Where none may be made, what keeps the nearest one back: the first condition, and all of them.
  */
 export function chooseMove<P extends string, M extends Move<string, P>>(
   candidates: readonly M[],
   facts: Facts<P>,
-): { move: M; refused: null } | { move: null; refused: P } | { move: null; refused: null } {
-  const nearestFirst = candidates
+): { move: M | null; refused: P | null; lacking: readonly P[] } {
+  const [nearest] = candidates
     .map((move) => ({ move, lacking: unmet(move, facts) }))
     .sort(
       (a, b) =>
         a.lacking.length - b.lacking.length || b.move.preconditions.length - a.move.preconditions.length,
     )
-  const [nearest] = nearestFirst
-  if (!nearest) return { move: null, refused: null }
-  const [refused] = nearest.lacking
-  return refused === undefined ? { move: nearest.move, refused: null } : { move: null, refused }
+  if (!nearest) return { move: null, refused: null, lacking: [] }
+  const { move, lacking } = nearest
+  return { move: lacking.length === 0 ? move : null, refused: lacking[0] ?? null, lacking }
 }

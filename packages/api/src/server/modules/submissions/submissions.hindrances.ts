@@ -30,8 +30,10 @@ export function hindrancesOf(
     const candidates = movesNamed(move, state).filter(
       ({ side, permission }) => side === here && allows(permission, side, roles),
     )
-    const { refused } = chooseMove<SubmissionPrecondition, SubmissionMove>(candidates, given)
-    const code = refused ? codes[refused] : undefined
-    return code ? [{ move, code }] : []
+    const { lacking } = chooseMove<SubmissionPrecondition, SubmissionMove>(candidates, given)
+    return lacking.flatMap((each) => {
+      const code = codes[each]
+      return code ? [{ move, code }] : []
+    })
   })
 }

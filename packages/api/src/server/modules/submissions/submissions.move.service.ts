@@ -62,9 +62,10 @@ export function permittedMove(
   const candidates = movesNamed(name, from).filter(
     ({ side, permission }) => side === tenant.side && allows(permission, side, tenant.roles),
   )
-  const { move, refused } = chooseMove<SubmissionPrecondition, SubmissionMove>(candidates, facts)
+  const { move, lacking } = chooseMove<SubmissionPrecondition, SubmissionMove>(candidates, facts)
   if (move) return move
-  throw (refused && refusals[refused]?.()) ?? wrongSubmissionState(from ?? 'draft')
+  const said = lacking.map((each) => refusals[each]).find((each) => each !== null)
+  throw said?.() ?? wrongSubmissionState(from ?? 'draft')
 }
 
 /** Makes a permitted move: the new state, and its event in the record. */
