@@ -13,3 +13,4 @@ export {
 } from './numbers'
 export { parseNumber, type NumberProblem, type ParsedNumber } from './parseNumber'
 export type { Unit } from './units'
+export { capital, countWord, inSentence, joinWords } from './words'

@@ -1,4 +1,6 @@
-import type { ClauseParameters, ClauseType, Margin } from '@evenrule/metrology'
+import type { ClauseParameters, ClauseType, FieldDescriptor, Margin } from '@evenrule/metrology'
+import { formatNumber, formatShare } from '../format'
+import { describeMargin } from './clauses'
 
 export interface FieldWords {
   label: string
@@ -64,3 +66,15 @@ export const boundsWords = {
   most: (bound: string) => `Enter ${bound} or less.`,
   below: (bound: string) => `Enter less than ${bound}.`,
 } as const
+
+const yesNo = (value: unknown): string => (value === true ? 'yes' : 'no')
+
+/** The value of one parameter for reading: "±5 % of tolerance", "95 %", "yes", "15"; "any" where it is left open. */
+export function describeParameter(field: FieldDescriptor, value: unknown): string {
+  if (value === undefined || value === null) return 'any'
+  if (field.kind === 'margin') return `±${describeMargin(value as Margin)}`
+  if (field.kind === 'boolean') return yesNo(value)
+  if (field.kind === 'choice') return choiceWords[String(value)] ?? String(value)
+  const number = Number(value)
+  return field.kind === 'share' || field.kind === 'confidence' ? formatShare(number) : formatNumber(number)
+}

@@ -8,7 +8,7 @@ export {
   subjectOf,
   subjectWords,
 } from './clauses'
-export { choiceWords, clauseFieldWords, marginBaseWords } from './fields'
+export { choiceWords, clauseFieldWords, describeParameter, marginBaseWords } from './fields'
 export { describeIncentive, incentiveWords, type IncentiveSentence } from './incentives'
 export { numberProblemWords, problemWords } from './problems'
 export { describeReason, describeSettling, reasonWords, settleWords, type ReasonWords } from './reasons'

@@ -1,0 +1,2 @@
+export { default as AgreementPage } from './AgreementPage.vue'
+export { default as AgreementsPage } from './AgreementsPage.vue'

@@ -1,0 +1,139 @@
+import { clauseWarnings, safetyFlags, type agreements, type Side } from '@evenrule/api/contract'
+import type { Clause } from '@evenrule/metrology'
+import { computed, ref } from 'vue'
+import { comparisonWords as words } from '../../strings/agreements'
+import type { ComparisonRow } from './ClauseComparison.vue'
+import { comparisonNotes } from './comparisonRows'
+import { compareClauses } from './differences'
+import { effectText } from './effectText'
+import {
+  effectiveClauses,
+  otherOf,
+  roundsBefore,
+  standingRound,
+  versionInForce,
+  type WiderClause,
+} from './negotiation'
+import { useConsequences } from './useConsequences'
+
+interface Compared {
+  agreement: agreements.Agreement | undefined
+  version: agreements.AgreementVersion | undefined
+  wider: readonly WiderClause[]
+  side: Side
+  /** The clauses being typed, where a proposal is being written. */
+  typed: readonly Clause[] | undefined
+}
+
+/** The clauses at hand beside those they are held against, and what they do. */
+export function useComparison(source: () => Compared) {
+  /** Number of the earlier round to compare with; empty for what is in force. */
+  const against = ref('')
+  const round = computed(() => {
+    const { version } = source()
+    return version && standingRound(version)
+  })
+  const earlier = computed(() => {
+    const { version, typed } = source()
+    if (!version) return []
+    return typed
+      ? version.rounds.filter(({ state }) => state !== 'draft').reverse()
+      : roundsBefore(version, round.value)
+  })
+  const other = computed(() => {
+    const { agreement, side } = source()
+    return agreement ? otherOf(agreement, side) : ''
+  })
+  const inForce = computed(() => {
+    const { agreement, version } = source()
+    const of = agreement && versionInForce(agreement)
+    return of && of.id !== version?.id ? of : undefined
+  })
+  const anythingInForce = computed(() => Boolean(inForce.value) || (isNew.value && source().wider.length > 0))
+  /** A version that is not in force itself can be held against what is. */
+  const isNew = computed(() => {
+    const { version, typed } = source()
+    return Boolean(typed) || version?.state !== 'in-force'
+  })
+
+  const bases = computed(() => [
+    ...(anythingInForce.value && isNew.value ? [{ value: '', title: words.inForce }] : []),
+    ...earlier.value.map(({ number, side }) => ({
+      value: String(number),
+      title: words.round(number, side, source().side, other.value),
+    })),
+  ])
+  const base = computed(() => bases.value.find(({ value }) => value === against.value) ?? bases.value[0])
+  const baseRound = computed(() => earlier.value.find(({ number }) => String(number) === base.value?.value))
+  const before = computed<Clause[]>(() => {
+    const { wider } = source()
+    if (!base.value) return []
+    const own = baseRound.value?.clauses ?? (inForce.value && standingRound(inForce.value)?.clauses) ?? []
+    return effectiveClauses(own, wider)
+  })
+  const after = computed<Clause[]>(() => {
+    const { typed, wider } = source()
+    return effectiveClauses(typed ?? round.value?.clauses ?? [], wider)
+  })
+  const differences = computed(() => compareClauses(before.value, after.value))
+  const characteristics = computed(() => source().agreement?.characteristics ?? [])
+  const consequences = useConsequences(() => ({
+    rows: differences.value,
+    before: before.value,
+    after: after.value,
+    characteristics: characteristics.value,
+  }))
+
+  const notes = computed(() =>
+    comparisonNotes(
+      clauseWarnings(after.value, characteristics.value),
+      safetyFlags(after.value, characteristics.value),
+    ),
+  )
+  const noteOf = (clause: Clause | null) => {
+    const from = source().wider.find((each) => each.clause === clause)
+    return from ? words.wider(from.agreementNumber, from.scope) : ''
+  }
+  const rows = computed<ComparisonRow[]>(() =>
+    differences.value.map((row) => ({
+      ...row,
+      beforeNote: noteOf(row.before),
+      afterNote: row.change === 'same' && base.value ? '' : noteOf(row.after),
+      effect: effectText(row, consequences.effects.value?.get(row.key), consequences.unit.value),
+      ...notes.value(row.after ? after.value.indexOf(row.after) : -1),
+    })),
+  )
+  const beforeLabel = computed(() => {
+    const { agreement } = source()
+    if (!base.value || baseRound.value) return base.value?.title ?? ''
+    return inForce.value
+      ? words.inForceOf(agreement?.number ?? null, inForce.value.number ?? 0)
+      : words.inForce
+  })
+  const afterLabel = computed(() => {
+    const { version, side, typed } = source()
+    if (typed) return words.draft
+    if (version?.state === 'in-force') return words.inForce
+    return round.value ? words.round(round.value.number, round.value.side, side, other.value) : words.draft
+  })
+  return {
+    against,
+    bases,
+    base,
+    rows,
+    differences,
+    consequences,
+    beforeLabel,
+    afterLabel,
+    after,
+    /** Short names for the curves. */
+    names: computed(() => ({
+      before: baseRound.value ? words.roundShort(baseRound.value.number) : words.inForce.toLowerCase(),
+      after: source().typed
+        ? words.draft.toLowerCase()
+        : source().version?.state === 'in-force'
+          ? words.inForce.toLowerCase()
+          : words.roundShort(round.value?.number ?? 1),
+    })),
+  }
+}
