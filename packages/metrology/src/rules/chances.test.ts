@@ -283,10 +283,11 @@ function plainSum(rule: Rule, { bias, standardDeviation }: Truth, n: number): nu
   const constant = Math.log(2) + (df / 2) * Math.log(df / 2) - jStat.gammaln(df / 2)
   const most = 1 + 12 / Math.sqrt(df)
   const steps = 200_000
+  const halfWidth = halfWidthOf(rule, n)
   let sum = 0
   for (let i = 0; i < steps; i++) {
     const v = ((i + 0.5) * most) / steps
-    const half = halfWidth(rule, v * standardDeviation, n)
+    const half = halfWidth(v * standardDeviation)
     if (half < 0) continue
     const density = Math.exp(constant + (df - 1) * Math.log(v) - (df * v * v) / 2)
     sum += density * (normalCdf((half - bias) / ofMean) - normalCdf((-half - bias) / ofMean))
@@ -294,21 +295,28 @@ function plainSum(rule: Rule, { bias, standardDeviation }: Truth, n: number): nu
   return (sum * most) / steps
 }
 
-function halfWidth(rule: Rule, s: number, n: number): number {
+/** The largest |bias| each rule accepts at a sample spread, as the contract words it. */
+function halfWidthOf(rule: Rule, n: number): (s: number) => number {
+  const rootN = Math.sqrt(n)
   switch (rule.type) {
-    case 'zero-test':
-      return (twoSidedCritical(rule.alpha, n - 1) * s) / Math.sqrt(n)
-    case 'equivalence':
-      return rule.margin - (oneSidedCritical(rule.alpha, n - 1) * s) / Math.sqrt(n)
-    case 'interval-inside':
-      return rule.margin - (twoSidedCritical(rule.alpha, n - 1) * s) / Math.sqrt(n)
+    case 'zero-test': {
+      const t = twoSidedCritical(rule.alpha, n - 1)
+      return (s) => (t * s) / rootN
+    }
+    case 'equivalence': {
+      const t = oneSidedCritical(rule.alpha, n - 1)
+      return (s) => rule.margin - (t * s) / rootN
+    }
+    case 'interval-inside': {
+      const t = twoSidedCritical(rule.alpha, n - 1)
+      return (s) => rule.margin - (t * s) / rootN
+    }
     case 'point':
-      return rule.margin
+      return () => rule.margin
     case 'index':
-      return (rule.share * rule.toleranceWidth) / 2 - ((rule.least * rule.sigmas) / 2) * s
+      return (s) => (rule.share * rule.toleranceWidth) / 2 - ((rule.least * rule.sigmas) / 2) * s
     case 'with-uncertainty':
-      return (
-        rule.margin - rule.coverageFactor * Math.hypot(s / Math.sqrt(n), rule.referenceStandardUncertainty)
-      )
+      return (s) =>
+        rule.margin - rule.coverageFactor * Math.hypot(s / rootN, rule.referenceStandardUncertainty)
   }
 }
