@@ -1,0 +1,67 @@
+import { readdirSync, readFileSync } from 'node:fs'
+import { join } from 'node:path'
+import { agreementMoves } from '@evenrule/api/contract/moves/agreement-version'
+import { challengeMoves } from '@evenrule/api/contract/moves/challenge'
+import { studyMoves } from '@evenrule/api/contract/moves/study'
+import { submissionMoves } from '@evenrule/api/contract/moves/submission'
+import { describe, expect, it } from 'vitest'
+import { eventDetail, eventSentence, eventWords, faultWords } from './record'
+
+const modules = join(process.cwd(), 'packages/api/src/server/modules')
+/** Types of events that services name themselves, beside those of the tables of moves. */
+const namedInServices = (): string[] => {
+  const files = readdirSync(modules, { recursive: true, encoding: 'utf8' }).filter((file) =>
+    file.endsWith('.service.ts'),
+  )
+  const kind =
+    /'((?:agreement|study|submission|challenge|part|characteristic|measuring-task|gauge|reference-standard|calibration|member|organisation)\.[a-z-]+)'/g
+  return files.flatMap((file) =>
+    [...readFileSync(join(modules, file), 'utf8').matchAll(kind)].map(([, type]) => type ?? ''),
+  )
+}
+const ofMoves = [...agreementMoves, ...challengeMoves, ...studyMoves, ...submissionMoves].map(
+  ({ event }) => event as string,
+)
+
+describe('the sentence of an event', () => {
+  it('is there for every move of every table', () => {
+    expect(ofMoves.length).toBeGreaterThan(40)
+    expect(ofMoves.filter((type) => !eventWords[type])).toEqual([])
+  })
+
+  it('is there for every event that a service names', () => {
+    const named = namedInServices()
+    expect(named).toContain('calibration.entered')
+    expect(named.filter((type) => !eventWords[type])).toEqual([])
+  })
+
+  it('always has a place for the thing', () => {
+    for (const words of Object.values(eventWords)) expect(words.split('*')).toHaveLength(2)
+  })
+
+  it('can be read even for a type without words', () => {
+    expect(eventSentence('submission.second-thoughts-had')).toEqual([
+      'recorded “second thoughts had” for ',
+      '',
+    ])
+    expect(eventSentence('submission.signed')).toEqual(['signed ', ' and submitted it'])
+  })
+})
+
+describe('what an event adds', () => {
+  it.each([
+    ['submission.refused', { reason: 'Bias too large.' }, '“Bias too large.”'],
+    ['part.revision-added', { label: 'C' }, 'Revision C.'],
+    ['calibration.entered', { dueOn: '2027-10-14' }, 'Due 14 Oct 2027.'],
+    [
+      'member.changed',
+      { roles: ['admin', 'reader'], endsOn: '2027-01-31' },
+      'Organisation admin, Reader. Until 31 Jan 2027.',
+    ],
+    ['part.changed', { label: 'C', reason: '' }, ''],
+  ])('for %s with %j is “%s”', (type, data, words) => expect(eventDetail({ type, data })).toBe(words))
+})
+
+it('every fault names the event', () => {
+  for (const words of Object.values(faultWords)) expect(words(37)[0]).toMatch(/\b37\b/)
+})

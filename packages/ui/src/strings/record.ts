@@ -1,0 +1,213 @@
+import type { record, Role } from '@evenrule/api/contract'
+import { formatDate, formatDateTime, formatNumber } from '../format'
+import { roleWords } from './roles'
+
+/** What a subject is called before its name; without a name the second form. */
+export const recordSubjectWords: Record<record.RecordSubject, [named: string, unnamed: string]> = {
+  'agreement-version': ['agreement', 'an agreement'],
+  study: ['study', 'a study'],
+  submission: ['submission', 'a submission'],
+  challenge: ['challenge', 'a challenge'],
+  part: ['part', 'a part'],
+  characteristic: ['characteristic', 'a characteristic'],
+  'measuring-task': ['measuring task', 'a measuring task'],
+  gauge: ['gauge', 'a gauge'],
+  'reference-standard': ['reference standard', 'a reference standard'],
+  member: ['member', 'a former member'],
+  organisation: ['organisation', 'the organisation'],
+}
+
+/** Kinds of subject in the filter. */
+export const recordFilterWords: Record<record.RecordSubject, string> = {
+  'agreement-version': 'agreements',
+  submission: 'submissions',
+  challenge: 'challenges',
+  study: 'studies',
+  part: 'parts',
+  characteristic: 'characteristics',
+  'measuring-task': 'measuring tasks',
+  gauge: 'gauges',
+  'reference-standard': 'reference standards',
+  member: 'members',
+  organisation: 'organisation',
+}
+
+/** What somebody did, in the past tense; `*` stands for the thing it was done to. */
+export const eventWords: Record<string, string> = {
+  'agreement.drafted': 'began a draft of *',
+  'agreement.draft-kept': 'went on with a draft of *',
+  'agreement.draft-discarded': 'discarded a draft of *',
+  'agreement.proposed': 'proposed *',
+  'agreement.countered': 'answered with a changed proposal for *',
+  'agreement.accepted': 'accepted the proposal of *',
+  'agreement.withdrawn': 'withdrew *',
+  'agreement.signature-given': 'signed * for one side',
+  'agreement.signed': 'signed *; both sides have signed',
+  'study.registered': 'registered * before its first reading',
+  'study.readings-kept': 'kept readings of *',
+  'study.computed': 'finished the readings of * and had it computed',
+  'study.corrected': 'stored corrected readings of *',
+  'study.abandoned': 'abandoned *',
+  'submission.prepared': 'prepared *',
+  'submission.studies-chosen': 'chose the studies of *',
+  'submission.sent-for-signature': 'sent * for signature',
+  'submission.returned': 'returned * with a note',
+  'submission.signed': 'signed * and submitted it',
+  'submission.discarded': 'discarded *',
+  'submission.withdrawn': 'withdrew *',
+  'submission.challenged': 'challenged *',
+  'submission.answered': 'answered the challenges of *',
+  'submission.review-resumed': 'went on with the review of *',
+  'submission.accepted': 'accepted *',
+  'submission.accepted-with-conditions': 'accepted * with conditions',
+  'submission.second-person-asked': 'decided on * and asked for a second person',
+  'submission.second-person-declined': 'sent * back to review as second person',
+  'submission.refused': 'refused *',
+  'submission.superseded': 'replaced * by a newer acceptance',
+  'challenge.opened': 'opened *',
+  'challenge.answered': 'answered *',
+  'challenge.replied': 'replied to the answer to * and kept it open',
+  'challenge.settled': 'took the answer as settling *',
+  'challenge.withdrawn': 'withdrew *',
+  'challenge.left-unresolved': 'left * unresolved',
+  'part.created': 'entered *',
+  'part.changed': 'changed *',
+  'part.revision-added': 'added a revision to *',
+  'part.archived': 'archived *',
+  'part.restored': 'restored *',
+  'characteristic.created': 'entered *',
+  'characteristic.changed': 'changed *',
+  'characteristic.confirmed': 'confirmed *',
+  'characteristic.archived': 'archived *',
+  'characteristic.restored': 'restored *',
+  'measuring-task.created': 'set up *',
+  'measuring-task.changed': 'changed *',
+  'measuring-task.archived': 'archived *',
+  'measuring-task.restored': 'restored *',
+  'gauge.created': 'registered *',
+  'gauge.changed': 'changed *',
+  'gauge.archived': 'archived *',
+  'gauge.restored': 'restored *',
+  'reference-standard.created': 'registered *',
+  'reference-standard.changed': 'changed *',
+  'reference-standard.archived': 'archived *',
+  'reference-standard.restored': 'restored *',
+  'calibration.entered': 'entered a calibration of *',
+  'member.changed': 'changed the membership of *',
+  'organisation.changed': 'changed the details of *',
+}
+
+/** The sentence around the thing of an event; one of a kind that has no words yet is told by its type. */
+export function eventSentence(type: string): [before: string, after: string] {
+  const words = eventWords[type] ?? `recorded “${type.replace(/^[^.]*\./, '').replaceAll('-', ' ')}” for *`
+  const [before = '', after = ''] = words.split('*')
+  return [before, after]
+}
+
+const isText = (value: unknown): value is string => typeof value === 'string' && value.trim() !== ''
+
+/** What an event adds in words: the reason given, the revision's label, the roles, the last day. */
+export function eventDetail({ type, data }: Pick<record.RecordEvent, 'type' | 'data'>): string {
+  const parts = [
+    isText(data.reason) ? `“${data.reason}”` : '',
+    type === 'part.revision-added' && isText(data.label) ? `Revision ${data.label}.` : '',
+    type === 'calibration.entered' && isText(data.dueOn) ? `Due ${formatDate(data.dueOn)}.` : '',
+    Array.isArray(data.roles)
+      ? `${data.roles.map((role) => roleWords[role as Role] ?? String(role)).join(', ')}.`
+      : '',
+    isText(data.endsOn) ? `Until ${formatDate(data.endsOn)}.` : '',
+  ]
+  return parts.filter(Boolean).join(' ')
+}
+
+/** How the chain is broken, and what that means. */
+export const faultWords: Record<record.RecordFault, (sequence: number) => [what: string, means: string]> = {
+  missing: (n) => [`Event ${n} is missing.`, 'It was there: later events, or the end of the chain, say so.'],
+  'text-changed': (n) => [
+    `Event ${n} was changed.`,
+    'Its text and its hash do not belong together; one of them was altered after it was written.',
+  ],
+  misplaced: (n) => [
+    `Event ${n} does not belong in this place.`,
+    'Its own text names another place: events were taken out, put in or exchanged.',
+  ],
+  'link-broken': (n) => [
+    `Event ${n} does not follow from the one before.`,
+    'One of the two was changed and given a new hash.',
+  ],
+  'columns-changed': (n) => [
+    `Event ${n} is not listed as it was written.`,
+    'Its text is whole, but its day, person or subject in the list was altered.',
+  ],
+  added: (n) => [
+    `Event ${n} was put in past the end.`,
+    'The chain ends before it; it was not written by this program.',
+  ],
+  'end-changed': (n) => [
+    `The end of the chain was altered, after event ${n}.`,
+    'The end no longer names the last event: later ones may have been cut off.',
+  ],
+  'end-missing': (n) => [
+    `The end of the chain is gone, after event ${n}.`,
+    'Nothing says any more whether later events were cut off.',
+  ],
+}
+
+export const recordWords = {
+  question: (partner: string) => `What happened between us and ${partner}?`,
+  journalQuestion: 'What happened in our own house?',
+  answer: (total: number, latest: string) =>
+    `${formatNumber(total)} ${total === 1 ? 'event' : 'events'}, the latest on ${formatDateTime(latest)}.`,
+  filteredAnswer: (total: number) =>
+    `${formatNumber(total)} ${total === 1 ? 'event matches' : 'events match'} the filters.`,
+  nothing: 'Nothing yet.',
+  shared: 'Both sides read the same record, and neither can change it unseen.',
+  own: 'Only your organisation reads it: drafts, gauges, members.',
+  chain: 'Record',
+  journal: 'Our own journal',
+  findChain: 'Find a record',
+  noChain: 'No record by that name',
+  about: 'About',
+  everything: 'everything',
+  onlyBy: (name: string) => `Only what ${name} did.`,
+  onlyTask: 'Only what concerns one measuring task.',
+  onlySubject: 'Only what concerns one thing.',
+  showAll: 'Show everything',
+  somebody: 'Somebody who may not be named',
+  otherPerson: 'this person',
+  filterPerson: (name: string) => `Only what ${name} did`,
+  list: 'Events',
+  proof: 'Exact text',
+  proofTitle: (sequence: number) => `Event ${sequence}, as it was written`,
+  proofText: 'The hash is the SHA-256 of exactly this text, which holds the hash of the event before.',
+  hash: 'Hash',
+  emptyTitle: 'Nothing has happened yet',
+  emptyText: {
+    shared: 'Once one of you enters a part, proposes criteria or submits proof, it stands here for both.',
+    own: 'Once somebody registers a gauge, drafts or changes members, it stands here.',
+  },
+  ofSubject: 'What happened so far',
+  moreEvents: (total: number) => `Show all ${formatNumber(total)} events`,
+} as const
+
+export const checkWords = {
+  action: 'Check the record',
+  checking: 'Checking …',
+  title: 'Is this record unbroken?',
+  whole: 'Yes, unbroken.',
+  wholeText: (count: number, at: string) =>
+    `${formatNumber(count)} ${count === 1 ? 'event was' : 'events were'} recomputed from the first; each follows from the one before, up to the latest of ${formatDateTime(at)}.`,
+  empty: 'There is nothing to check yet.',
+  broken: 'No, broken.',
+  brokenText: (sound: number) =>
+    sound === 0
+      ? 'No event of this record can be relied on. Ask who runs this service for the last backup in which the check succeeds.'
+      : `Events 1 to ${formatNumber(sound)} stand. What comes after cannot be relied on. Ask who runs this service for the last backup in which the check succeeds.`,
+  keep: 'Keep this hash where nobody else can change it. Whoever rewrites the whole record later cannot give it back.',
+  kept: 'Hash you kept from an earlier check',
+  keptHint: 'Optional. Paste it, and the check says whether this record still holds it.',
+  keptFound: (sequence: number, at: string) =>
+    `The hash you kept is that of event ${formatNumber(sequence)}, ${formatDateTime(at)}. Up to there the record is the one you saw.`,
+  keptMissing:
+    'The hash you kept is nowhere in this record. It was rewritten since then, or the hash is of another record.',
+} as const
