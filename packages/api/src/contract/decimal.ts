@@ -39,3 +39,11 @@ export function subtractDecimals(a: string, b: string): string {
   const text = to === 0 ? digits : `${digits.slice(0, to)}.${digits.slice(to)}`
   return difference < 0n ? `-${text}` : text
 }
+
+/** Whether the number in `a` is a whole multiple of the one in `step`, exactly; every number is one of zero's. */
+export function isMultipleOf(a: string, step: string): boolean {
+  const [value, unit] = [partsOf(a), partsOf(step)]
+  const to = Math.min(value.exponent, unit.exponent)
+  const divisor = scaled(unit, to)
+  return divisor === 0n || scaled(value, to) % divisor === 0n
+}

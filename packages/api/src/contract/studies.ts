@@ -281,6 +281,8 @@ export const studySchema = z.object({
       characteristic: characteristicSchema,
       /** Clauses in force on the day of registration. */
       criteria: z.array(frozenClauseSchema),
+      /** Estimates where no clause was in force, as JSON of a BiasOutput; null otherwise: evaluations hold them. */
+      figuresText: z.string().nullable(),
       /** Every study registered on this task, the newest first; this one included. */
       attempts: z.array(
         z.object({

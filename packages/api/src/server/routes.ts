@@ -17,6 +17,7 @@ import { relationshipsRoutes } from './modules/relationships/relationships.route
 import { reviewsRoutes } from './modules/reviews/reviews.routes'
 import { signInRoutes } from './modules/sign-in/sign-in.routes'
 import { submissionsRoutes } from './modules/submissions/submissions.routes'
+import { studiesRoutes } from './modules/studies/studies.routes'
 import { systemRoutes } from './modules/system/system.routes'
 
 export interface RouteDependencies {
@@ -40,6 +41,7 @@ export function allRoutes({ database, config, identity, sessions }: RouteDepende
     ...standardsRoutes,
     ...calibrationsRoutes,
     ...filesRoutes,
+    ...studiesRoutes,
     ...messagesRoutes,
     ...recordRoutes,
     ...submissionsRoutes,

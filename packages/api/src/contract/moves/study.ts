@@ -71,3 +71,6 @@ export type StudyMoveName = StudyMove['name']
 /** The move of that name where the state allows it. */
 export const studyMove = (name: StudyMoveName, state: StudyState): StudyMove | undefined =>
   studyMoves.find((move) => move.name === name && (move.from as readonly StudyState[]).includes(state))
+
+/** The move that makes a study. */
+export const registration = studyMoves[0]

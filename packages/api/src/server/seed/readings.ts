@@ -1,14 +1,4 @@
-/** A small seeded generator (mulberry32): the same demonstration on every machine. Uniform in [0, 1). */
-export function seededRandom(seed: number): () => number {
-  let state = seed >>> 0
-  return () => {
-    state = (state + 0x6d2b79f5) >>> 0
-    let mixed = state
-    mixed = Math.imul(mixed ^ (mixed >>> 15), mixed | 1)
-    mixed ^= mixed + Math.imul(mixed ^ (mixed >>> 7), mixed | 61)
-    return ((mixed ^ (mixed >>> 14)) >>> 0) / 4_294_967_296
-  }
-}
+import { seededRandom } from '../seeded-random'
 
 /** A seed from a name, so that each study of the demonstration has its own readings. */
 export function seedOf(name: string): number {

@@ -1,4 +1,4 @@
-import { and, eq } from 'drizzle-orm'
+import { and, eq, inArray } from 'drizzle-orm'
 import type { QueryOf } from '../../../contract/define'
 import type { listRelationships } from '../../../contract/relationships'
 import { containing, orderOf, totalOverPages, windowOf } from '../../db/paging'
@@ -38,4 +38,25 @@ export async function selectRelationship(
     .from(relationships)
     .where(and(eq(own, tenant.organisationId), eq(relationships.id, relationshipId)))
   return row
+}
+
+/** Names of the two parties of a relationship. */
+export async function selectPartyNames(
+  { tx }: Tenant,
+  { supplierOrgId, customerOrgId }: RelationshipRow,
+): Promise<{ id: string; name: string }[]> {
+  return tx
+    .select({ id: organisations.id, name: organisations.name })
+    .from(organisations)
+    .where(inArray(organisations.id, [supplierOrgId, customerOrgId]))
+}
+
+/** Names of this organisation's partners by id. */
+export async function selectNames({ tx }: Tenant, ids: readonly string[]): Promise<Map<string, string>> {
+  if (ids.length === 0) return new Map()
+  const rows = await tx
+    .select({ id: organisations.id, name: organisations.name })
+    .from(organisations)
+    .where(inArray(organisations.id, [...ids]))
+  return new Map(rows.map(({ id, name }) => [id, name]))
 }

@@ -47,18 +47,24 @@ export async function asStudyOfTask(
   tenant: Tenant,
   { study, task, data }: Pick<StudyOfTask, 'study' | 'task' | 'data'>,
 ): Promise<StudyOfTask> {
-  const { gaugeId, standardId } = study
   return {
     study,
     task,
     data,
-    standard: { ...(await standardById(tenant, standardId)), ...data.standard },
-    calibration: {
-      gauge: await calibrationOn(tenant, { gaugeId }, data.collectedOn),
-      standard: await calibrationOn(tenant, { standardId }, data.collectedOn),
-    },
+    standard: { ...(await standardById(tenant, study.standardId)), ...data.standard },
+    calibration: await calibrationsOn(tenant, study, data.collectedOn),
   }
 }
+
+/** The calibrations of a study's gauge and reference standard that counted on a day. */
+export const calibrationsOn = async (
+  tenant: Tenant,
+  { gaugeId, standardId }: Pick<StudyRow, 'gaugeId' | 'standardId'>,
+  day: string,
+): Promise<StudyOfTask['calibration']> => ({
+  gauge: await calibrationOn(tenant, { gaugeId }, day),
+  standard: await calibrationOn(tenant, { standardId }, day),
+})
 
 /**
  * Every study registered on a task on or after a day of the relationship's calendar, abandoned ones included, in the

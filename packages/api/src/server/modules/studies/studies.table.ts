@@ -1,4 +1,4 @@
-import type { Clause } from '@evenrule/metrology'
+import type { Clause, Verdict } from '@evenrule/metrology'
 import {
   boolean,
   date,
@@ -222,7 +222,7 @@ export const studyEvaluations = pgTable(
     inputText: text().notNull(),
     outputText: text().notNull(),
     outputSha256: text().notNull(),
-    verdict: text().notNull(),
+    verdict: text().$type<Verdict>().notNull(),
     engineVersion: text().notNull(),
     engineSha256: text().notNull(),
     createdAt: instant().notNull(),
