@@ -1,6 +1,7 @@
 import { and, asc, desc, eq, isNull, lte, or } from 'drizzle-orm'
+import { ownSide } from '../../db/own-side'
 import type { Tenant } from '../../db/tenant'
-import { agreementRounds, agreements, agreementVersions } from './agreements.table'
+import { agreements, agreementVersions } from './agreements.table'
 
 /** Where criteria are asked for: one characteristic, on one calendar day of the relationship. */
 export interface CriteriaScope {
@@ -13,10 +14,7 @@ export interface CriteriaScope {
 /** Versions signed by both sides whose first day has come, of every agreement that covers the characteristic. */
 const signedAndBegun = (tenant: Tenant, { relationshipId, partId, characteristicId, on }: CriteriaScope) =>
   and(
-    eq(
-      tenant.side === 'supplier' ? agreements.supplierOrgId : agreements.customerOrgId,
-      tenant.organisationId,
-    ),
+    ownSide(tenant, agreements),
     eq(agreements.relationshipId, relationshipId),
     or(isNull(agreements.partId), eq(agreements.partId, partId)),
     or(isNull(agreements.characteristicId), eq(agreements.characteristicId, characteristicId)),
@@ -30,26 +28,14 @@ const ofAgreement = and(
 )
 
 /**
- * Of every agreement that covers the characteristic the one version in force on the day, with the clauses both sides
- * accepted: a later signed version that has taken effect replaces an earlier one.
+ * Of every agreement that covers the characteristic the one version in force on the day: a later signed version that
+ * has taken effect replaces an earlier one.
  */
 export async function selectInForce(tenant: Tenant, scope: CriteriaScope) {
   return tenant.tx
-    .selectDistinctOn([agreements.id], {
-      agreement: agreements,
-      version: agreementVersions,
-      clauses: agreementRounds.clauses,
-    })
+    .selectDistinctOn([agreements.id], { agreement: agreements, version: agreementVersions })
     .from(agreements)
     .innerJoin(agreementVersions, ofAgreement)
-    .innerJoin(
-      agreementRounds,
-      and(
-        eq(agreementRounds.relationshipId, agreementVersions.relationshipId),
-        eq(agreementRounds.versionId, agreementVersions.id),
-        eq(agreementRounds.state, 'accepted'),
-      ),
-    )
     .where(signedAndBegun(tenant, scope))
     .orderBy(agreements.id, desc(agreementVersions.number))
 }

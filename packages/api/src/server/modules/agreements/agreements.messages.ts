@@ -1,0 +1,74 @@
+import { otherSide, type Role, type Side } from '../../../contract/access'
+import type { Tenant } from '../../db/tenant'
+import { workingRoles } from '../notifications/notifications.send'
+import type { Negotiation } from './agreements.negotiation.service'
+import { scopeWords } from './agreements.scope'
+
+export interface AgreementMessage {
+  subject: string
+  body: readonly string[]
+}
+
+/** Those who sign for a side. */
+const approver: Record<Side, Role> = { supplier: 'supplier-approver', customer: 'customer-approver' }
+
+/** What messages say; `comment` and `reason` are what a person wrote. */
+export const agreementMessages = {
+  proposed: (effectiveOn: string, comment: string): AgreementMessage => ({
+    subject: 'Criteria are proposed to you',
+    body: [
+      `They would be in force from ${effectiveOn}. Accept them, or answer with a changed proposal.`,
+      comment,
+    ],
+  }),
+  countered: (effectiveOn: string, comment: string): AgreementMessage => ({
+    subject: 'Your proposal was answered with a changed one',
+    body: [
+      `It would be in force from ${effectiveOn}. Accept it, or answer with a changed proposal.`,
+      comment,
+    ],
+  }),
+  accepted: (effectiveOn: string): AgreementMessage => ({
+    subject: 'Criteria are agreed and wait for signatures',
+    body: [
+      `An approver of each side signs them by ${effectiveOn}, the first day in force; otherwise they lapse.`,
+    ],
+  }),
+  withdrawn: (reason: string): AgreementMessage => ({
+    subject: 'Proposed criteria were withdrawn',
+    body: ['What was in force stays in force. The reason given:', reason],
+  }),
+  signedByOne: (effectiveOn: string): AgreementMessage => ({
+    subject: 'Criteria wait for the signature of your side',
+    body: [
+      `The other side has signed. Sign by ${effectiveOn}, the first day in force; otherwise they lapse.`,
+    ],
+  }),
+  signed: (effectiveOn: string): AgreementMessage => ({
+    subject: 'Criteria are signed by both sides',
+    body: [
+      `They are in force from ${effectiveOn}. Studies registered before are judged by what was in force then.`,
+    ],
+  }),
+}
+
+/** Tells the working members of a side, or its approvers alone, of what happened to an agreement. */
+export function tell(
+  tenant: Tenant,
+  { agreement, parties, scope }: Negotiation,
+  version: { number: number | null },
+  to: { side: 'own' | 'other'; approversOnly?: boolean },
+  { subject, body }: AgreementMessage,
+): void {
+  const side = to.side === 'own' ? tenant.side : otherSide(tenant.side)
+  const title = `Agreement ${agreement.number}, version ${version.number}: ${scopeWords(scope)}`
+  tenant.notify({
+    organisationId: parties[side].id,
+    side,
+    roles: to.approversOnly ? [approver[side]] : workingRoles[side],
+    kind: 'agreement',
+    subject: `${subject}. ${title}`,
+    body: [`From ${parties[tenant.side].name}.`, ...body].filter((line) => line !== '').join('\n\n'),
+    path: `agreements/${agreement.id}`,
+  })
+}

@@ -1,0 +1,143 @@
+import { otherSide, allows, type Role, type Side } from '../../../contract/access'
+import { blockingWarnings, clauseWarnings } from '../../../contract/agreement-check'
+import {
+  agreementHindranceSchema,
+  type AgreementHindrance,
+  type ScopedCharacteristic,
+} from '../../../contract/agreements'
+import {
+  agreementMoves,
+  type AgreementMove,
+  type AgreementMoveName,
+  type AgreementPrecondition,
+  type AgreementVersionState,
+} from '../../../contract/moves/agreement-version'
+import { chooseMove, type Facts } from '../../../contract/moves/define'
+import type { Tenant } from '../../db/tenant'
+import { refusals, wrongVersionState } from './agreements.errors'
+import {
+  draftVersion,
+  openVersion,
+  type Negotiation,
+  type VersionAtHand,
+} from './agreements.negotiation.service'
+import type { AgreementRow, RoundRow, VersionRow } from './agreements.repository'
+import { limitsAreThoseOf } from './agreements.text'
+
+export type AgreementFacts = Facts<AgreementPrecondition>
+type Actor = Pick<Tenant, 'side' | 'roles'>
+
+/** Rows of the table that this person may use from the state. */
+const candidates = (
+  { side, roles }: { side: Side; roles: readonly Role[] },
+  name: AgreementMoveName,
+  from: AgreementVersionState | null,
+): AgreementMove[] =>
+  agreementMoves.filter(
+    (move) =>
+      move.name === name &&
+      move.side === side &&
+      allows(move.permission, side, roles) &&
+      (from === null ? move.from.length === 0 : (move.from as readonly string[]).includes(from)),
+  )
+
+/** Whether a proposal can be agreed as it stands, for the characteristics in scope as they are now. */
+export const canBeAgreed = (
+  { clauses }: Pick<RoundRow, 'clauses'>,
+  characteristics: readonly ScopedCharacteristic[],
+): boolean =>
+  clauses.length > 0 &&
+  blockingWarnings(clauseWarnings(clauses, characteristics), characteristics).length === 0
+
+/** What is known, before anybody acts, of the conditions of moves from a version. */
+export function factsOf({ side }: Pick<Tenant, 'side'>, negotiation: Negotiation, version: VersionAtHand) {
+  const { characteristics, today } = negotiation
+  const { row, standing, draft, signatures } = version
+  const hasSigned = (who: Side) => signatures.some((each) => each.side === who)
+  return {
+    'no-own-draft': draftVersion(negotiation) === undefined,
+    'no-open-version': openVersion(negotiation) === undefined && !negotiation.openElsewhere,
+    'own-draft': draft !== undefined,
+    'answering-side': standing.side !== side,
+    'clauses-can-be-agreed': canBeAgreed(standing, characteristics),
+    'effective-date-not-past': (row.effectiveOn ?? standing.effectiveOn) >= today,
+    'limits-unchanged': row.text !== null && limitsAreThoseOf(row.text, characteristics),
+    'own-side-has-not-signed': !hasSigned(side),
+    'other-side-has-signed': hasSigned(otherSide(side)),
+    'other-side-has-not-signed': !hasSigned(otherSide(side)),
+  } satisfies AgreementFacts
+}
+
+/** The row of the table of moves that may be made here and now; refuses with the condition that does not hold. */
+export function permittedMove(
+  actor: Actor,
+  name: AgreementMoveName,
+  from: AgreementVersionState | null,
+  facts: AgreementFacts,
+): AgreementMove {
+  const { move, refused } = chooseMove<AgreementPrecondition, AgreementMove>(
+    candidates(actor, name, from),
+    facts,
+  )
+  if (move) return move
+  throw (refused && refusals[refused]?.()) ?? wrongVersionState(from ?? 'draft')
+}
+
+/** Conditions that a person should know of before trying; where another fails, the move is not offered at all. */
+const codes: Partial<Record<AgreementPrecondition, AgreementHindrance['code']>> = {
+  'no-open-version': 'negotiation-open',
+  'clauses-can-be-agreed': 'clauses-cannot-be-agreed',
+  'effective-date-not-past': 'effective-date-past',
+  'limits-unchanged': 'limits-changed',
+  'own-side-has-not-signed': 'own-side-has-signed',
+}
+
+/** What the person may do with a version, and what keeps them from it now. */
+export function offersOf(
+  actor: Actor,
+  negotiation: Negotiation,
+  version: VersionAtHand,
+): { moves: AgreementMoveName[]; hindrances: AgreementHindrance[] } {
+  const known = { ...factsOf(actor, negotiation, version), 'reason-given': true, 'as-seen': true }
+  // A changed proposal is judged when it is sent; an answer not yet written cannot be at fault.
+  const unwritten = { 'clauses-can-be-agreed': true, 'effective-date-not-past': true }
+  const moves: AgreementMoveName[] = []
+  const hindrances: AgreementHindrance[] = []
+  for (const name of agreementHindranceSchema.shape.move.options) {
+    const facts = name === 'counter' ? { ...known, ...unwritten } : known
+    const { move, refused } = chooseMove<AgreementPrecondition, AgreementMove>(
+      candidates(actor, name, version.state),
+      facts,
+    )
+    const code = refused ? codeOf(refused, version.standing) : undefined
+    if (move || code) moves.push(name)
+    if (code) hindrances.push({ move: name, code })
+  }
+  return { moves, hindrances }
+}
+
+const codeOf = (refused: AgreementPrecondition, { clauses }: RoundRow) =>
+  refused === 'clauses-can-be-agreed' && clauses.length === 0 ? 'no-clauses' : codes[refused]
+
+/** Writes the event of a move: what was sent stands in the relationship's chain, drafts in one's own journal. */
+export function recordMove(
+  tenant: Tenant,
+  move: Pick<AgreementMove, 'event' | 'name'>,
+  {
+    id,
+    relationshipId,
+    supplierOrgId,
+    customerOrgId,
+    number,
+  }: Pick<AgreementRow, 'id' | 'relationshipId' | 'supplierOrgId' | 'customerOrgId' | 'number'>,
+  version: Pick<VersionRow, 'id' | 'number'>,
+  data: Record<string, unknown> = {},
+): void {
+  const isPrivate = move.name === 'keep-draft' || move.name === 'discard-draft'
+  tenant.record({
+    type: move.event,
+    ...(isPrivate ? {} : { relationship: { id: relationshipId, supplierOrgId, customerOrgId } }),
+    subject: { type: 'agreement-version', id: version.id },
+    data: { agreementId: id, agreement: number, version: version.number, ...data },
+  })
+}
