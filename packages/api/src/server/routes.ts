@@ -3,6 +3,7 @@ import type { Config } from './config'
 import type { Route } from './http/route'
 import type { Identity } from './integrations/oidc'
 import type { Sessions } from './integrations/sessions'
+import { agreementsRoutes } from './modules/agreements/agreements.routes'
 import { filesRoutes } from './modules/files/files.routes'
 import { frontRoutes } from './modules/front/front.routes'
 import { calibrationsRoutes } from './modules/gauges/calibrations.routes'
@@ -41,6 +42,7 @@ export function allRoutes({ database, config, identity, sessions }: RouteDepende
     ...standardsRoutes,
     ...calibrationsRoutes,
     ...filesRoutes,
+    ...agreementsRoutes,
     ...studiesRoutes,
     ...messagesRoutes,
     ...recordRoutes,
