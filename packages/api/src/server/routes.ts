@@ -13,6 +13,7 @@ import { messagesRoutes } from './modules/notifications/messages.routes'
 import { characteristicsRoutes } from './modules/parts/characteristics.routes'
 import { partsRoutes } from './modules/parts/parts.routes'
 import { tasksRoutes } from './modules/parts/tasks.routes'
+import { organisationsRoutes } from './modules/organisations/organisations.routes'
 import { recordRoutes } from './modules/record/record.routes'
 import { relationshipsRoutes } from './modules/relationships/relationships.routes'
 import { reviewsRoutes } from './modules/reviews/reviews.routes'
@@ -45,6 +46,7 @@ export function allRoutes({ database, config, identity, sessions }: RouteDepende
     ...agreementsRoutes,
     ...studiesRoutes,
     ...messagesRoutes,
+    ...organisationsRoutes,
     ...recordRoutes,
     ...submissionsRoutes,
     ...reviewsRoutes,
