@@ -8,6 +8,7 @@ import type { Stage } from './stage'
 
 export interface SeededCharacteristic {
   id: string
+  partId: string
   partNumber: string
   number: number
   relationship: SeededRelationship
@@ -64,7 +65,14 @@ export async function seedParts(stage: Stage, base: Base): Promise<SeededCharact
         },
       })
       const key = characteristicKey(part.number, number)
-      seeded.set(key, { id: characteristic.id, partNumber: part.number, number, relationship, limits })
+      seeded.set(key, {
+        id: characteristic.id,
+        partId,
+        partNumber: part.number,
+        number,
+        relationship,
+        limits,
+      })
       if (unconfirmed.includes(key)) continue
       stage.pass(90)
       await confirm(confirmCharacteristic, {
