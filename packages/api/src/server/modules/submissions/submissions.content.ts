@@ -28,9 +28,9 @@ export function whatJudges(inForce: readonly FrozenClause[], studies: readonly S
   })
 }
 
-/** Order of registration; codes decide where two studies were registered in the same millisecond. */
+/** Order of registration; ids, which rise with time, decide within one millisecond. */
 export const byRegistration = ({ study: a }: StudyOfTask, { study: b }: StudyOfTask): number =>
-  a.registeredAt.localeCompare(b.registeredAt) || a.code.localeCompare(b.code)
+  a.registeredAt.localeCompare(b.registeredAt) || a.id.localeCompare(b.id)
 
 /** A clause result as the frozen text names it. */
 export function frozenResult(
