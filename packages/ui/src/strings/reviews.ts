@@ -164,6 +164,7 @@ export const challengeWords = {
   heading: 'Challenges',
   challenge: 'Challenge this result',
   challengeAny: 'Challenge a result',
+  toAnswer: (number: number) => `Answer challenge ${number}`,
   title: 'Challenge a result?',
   text: (supplier: string) =>
     `${supplier} is told what you doubt and answers in words. Nothing is decided while the challenge is open.`,
@@ -256,9 +257,15 @@ export const recomputeWords = {
   differs: 'No. Something differs.',
   differsText: (count: number) =>
     `${formatCount(count, 'check does', 'checks do')} not agree. Do not decide on it before the reason is known.`,
-  checked: 'Checked',
-  stored: 'stored',
-  recomputed: 'recomputed here',
+  stored: 'stored hash',
+  recomputed: 'hash computed here',
+  storedValue: 'stored',
+  recomputedValue: 'computed here',
+  show: (count: number) =>
+    count === 1
+      ? 'Show the check that agrees, with its hashes'
+      : `Show the ${count} checks that agree, with their hashes`,
+  hide: 'Hide the checks that agree',
   same: 'equal',
   different: 'differs',
   path: 'First difference at',

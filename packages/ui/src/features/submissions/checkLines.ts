@@ -14,7 +14,7 @@ export interface CheckLine {
   recomputed: string | null
   problem?: string
   difference?: Difference
-  engine?: string
+  engine?: { version: string; sha256: string }
 }
 
 /** A check of a submission as lines: the text, its signatures, the readings, and every clause. */
@@ -47,8 +47,8 @@ export function checkLines(
       stored: clause.outputSha256,
       recomputed: clause.recomputedSha256,
       ...(clause.problem ? { problem: words.problems[clause.problem] } : {}),
-      ...(clause.difference ? { difference: clause.difference } : {}),
-      engine: `${words.engineIs(clause.engineVersion)}, ${clause.engineSha256}`,
+      ...(clause.difference ? { difference: shortened(clause.difference) } : {}),
+      engine: { version: words.engineIs(clause.engineVersion), sha256: clause.engineSha256 },
     })),
   ]
 }
@@ -57,3 +57,14 @@ const meaningOf = (meaning: string): string =>
   meaning in sectionWords.meanings
     ? sectionWords.meanings[meaning as keyof typeof sectionWords.meanings]
     : meaning
+
+const longest = 160
+const short = (text: string | null): string | null =>
+  text !== null && text.length > longest ? `${text.slice(0, longest)} …` : text
+
+/** Where the whole text differs, its beginning is enough to see that. */
+const shortened = ({ path, stored, recomputed }: Difference): Difference => ({
+  path,
+  stored: short(stored),
+  recomputed: short(recomputed),
+})

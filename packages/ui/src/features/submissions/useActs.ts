@@ -3,7 +3,7 @@ import { useRoute, useRouter } from 'vue-router'
 import { signInAfresh } from '../../session/freshSignIn'
 import type { ActName } from '../../strings/reviews'
 import { useHere } from '../common'
-import { mayChallenge } from '../reviews/challenges'
+import { mayChallenge, possibleSayings } from '../reviews/challenges'
 import { inOrder, possibleActs } from './acts'
 import type { ReadSubmission } from './reading'
 
@@ -26,6 +26,15 @@ export function useActs(read: Ref<ReadSubmission | undefined>, moved: () => Prom
   const mayOpen = computed(
     () => read.value !== undefined && mayChallenge(read.value.submission.state, here.side, here.allows),
   )
+
+  /** The first challenge that waits for this person's answer. */
+  const toAnswer = computed(() => {
+    const { state, challenges } = read.value?.submission ?? { challenges: [] }
+    return challenges.find(
+      (each) =>
+        state !== undefined && possibleSayings(state, each.state, here.side, here.allows).includes('answer'),
+    )?.number
+  })
 
   /** Leaves for the sign-in; the dialog goes first, so that its unsaved words hold nobody back. They are kept. */
   async function askAfresh() {
@@ -56,5 +65,5 @@ export function useActs(read: Ref<ReadSubmission | undefined>, moved: () => Prom
     await moved()
   }
 
-  return { possible, asked, askAfresh, done, challenging, mayOpen }
+  return { possible, asked, askAfresh, done, challenging, mayOpen, toAnswer }
 }
