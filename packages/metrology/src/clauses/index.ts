@@ -75,7 +75,9 @@ export function clauseProblems(value: unknown, characteristic: Characteristic): 
   if (!opened) return problems
   const { type, parameters, fields } = opened
   const values = collect(fields, (field) => attempt(() => readField(field, parameters)))
-  for (const path of parameters.unknownFields()) {
+  // Reading a field stops at its first fault: what is left unread inside it is not therefore unknown.
+  const faulty = problems.map(({ path }) => path.split('.', 2).join('.') + '.')
+  for (const path of parameters.unknownFields().filter((each) => !faulty.some((of) => each.startsWith(of)))) {
     problems.push({ code: 'unknown-field', path, message: 'This field is not part of the clause.' })
   }
   if (problems.length > 0) return problems
