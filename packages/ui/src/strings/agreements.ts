@@ -128,7 +128,7 @@ export const roomWords = {
     if (changed + added + removed === 0) return 'No clause changes.'
     return `Of the clauses, ${joinWords(what)}.`
   },
-  answer: 'Answer with a changed proposal',
+  answer: 'Answer with changes',
   newVersion: 'Propose a new version',
   edit: 'Edit the draft',
   accept: 'Accept the proposal',

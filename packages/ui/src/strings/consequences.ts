@@ -1,5 +1,6 @@
 import type { ClauseType } from '@evenrule/metrology'
 import { formatNumber, type Unit } from '../format'
+import { placesFor } from '../format/numbers'
 
 /** Short names of rules, for the ends of curves and rows of words. */
 export const ruleNames: Record<ClauseType, string> = {
@@ -9,6 +10,10 @@ export const ruleNames: Record<ClauseType, string> = {
   'bias-equivalence': 'equivalence',
   'bias-zero-test': 'zero test',
 }
+
+/** A bias of the plots, to two significant digits. */
+export const biasText = (bias: number, unit: Unit): string =>
+  formatNumber(bias, { unit, digits: placesFor(bias, 2) })
 
 export const consequenceWords = {
   heading: (subject: string) => `What the ${subject.toLowerCase()} clause does`,
@@ -21,7 +26,7 @@ export const consequenceWords = {
     `${formatNumber(readings)} readings, spread ${formatNumber(spread, { unit })}`,
   spread: (spread: number, unit: Unit) => `spread ${formatNumber(spread, { unit })}`,
   rewards: 'Does the clause reward the right thing?',
-  atBias: (bias: number, unit: Unit) => `at a true bias of ${formatNumber(bias, { unit })}`,
+  atBias: (bias: number, unit: Unit) => `at a true bias of ${biasText(bias, unit)}`,
   perverse: 'Rewards the wrong thing.',
   sound: 'Rewards better work: nothing to gain from a worse gauge, fewer readings or a stricter risk level.',
   readings: 'Planned readings',

@@ -1,6 +1,6 @@
 import type { Clause } from '@evenrule/metrology'
 import { describe, expect, it } from 'vitest'
-import { anyTolerance, assumedSpread, plannedReadings } from './assumptions'
+import { anyTolerance, assumedSpread, inReadableUnit, plannedReadings } from './assumptions'
 
 const twoSided = { unit: 'mm', tolerance: { lower: 23.975, upper: 24.025 } }
 const absolute: Clause = {
@@ -30,5 +30,16 @@ describe('what consequences are computed for', () => {
     expect(assumedSpread(withProcess, [absolute])).toBe(0.0005)
     expect(assumedSpread(oneSided, [absolute])).toBe(0.002)
     expect(assumedSpread(oneSided, [])).toBe(1)
+  })
+
+  it('is shown in a finer unit where figures would begin with zeros', () => {
+    expect(inReadableUnit({ ...twoSided, processStandardDeviation: 0.004 }, [])).toEqual({
+      unit: 'µm',
+      tolerance: { lower: 23975, upper: 24025 },
+      processStandardDeviation: 4,
+    })
+    const wide = { unit: 'mm', tolerance: { lower: 0, upper: 5 } }
+    expect(inReadableUnit(wide, [])).toBe(wide)
+    expect(inReadableUnit(anyTolerance, [])).toBe(anyTolerance)
   })
 })

@@ -1,4 +1,4 @@
-import { marginInUnit, type Characteristic, type Clause } from '@evenrule/metrology'
+import { convert, marginInUnit, type Characteristic, type Clause } from '@evenrule/metrology'
 import { shiftDecimal } from '../../format/numbers'
 
 /** What consequences are computed for. */
@@ -40,4 +40,42 @@ export function assumedSpread(characteristic: Characteristic, clauses: readonly 
       if (margin) return short(margin / 3)
     }
   return 1
+}
+
+/** The next finer unit, for figures that would begin with several zeros. */
+const finer: Partial<Record<string, string>> = {
+  m: 'mm',
+  cm: 'mm',
+  mm: 'µm',
+  kg: 'g',
+  g: 'mg',
+  kN: 'N',
+  N: 'mN',
+  'N·m': 'N·mm',
+  MPa: 'kPa',
+  kPa: 'Pa',
+  bar: 'mbar',
+  'l/min': 'ml/min',
+  s: 'ms',
+  V: 'mV',
+  A: 'mA',
+  Ω: 'mΩ',
+  kΩ: 'Ω',
+}
+
+/** The characteristic in a unit in which spreads and biases are easy to read: 0.8 µm rather than 0.0008 mm. */
+export function inReadableUnit(characteristic: Characteristic, clauses: readonly Clause[]): Characteristic {
+  const { unit, tolerance, processStandardDeviation } = characteristic
+  const to = finer[unit]
+  if (!to || assumedSpread(characteristic, clauses) >= 0.01) return characteristic
+  const converted = (value: number | undefined) =>
+    value === undefined ? undefined : convert(value, unit, to)
+  const lower = converted(tolerance?.lower)
+  const upper = converted(tolerance?.upper)
+  const spread = converted(processStandardDeviation)
+  return {
+    unit: to,
+    tolerance: { ...(lower == null ? {} : { lower }), ...(upper == null ? {} : { upper }) },
+    ...(spread == null ? {} : { processStandardDeviation: spread }),
+  }
 }

@@ -82,6 +82,15 @@ function sharedBiases(
   return Array.from({ length: 101 }, (_, at) => (most * at) / 100)
 }
 
+/** Numbers of readings from a few to four times the planned one; with two or three the zero test allows anything. */
+function numbersOfReadings(planned: number): number[] {
+  const sizes = new Set([planned])
+  const most = Math.max(50, 4 * planned)
+  for (let size = Math.min(5, planned); size <= most; size = Math.max(size + 1, Math.round(size * 1.1)))
+    sizes.add(size)
+  return [...sizes].sort((a, b) => a - b)
+}
+
 /** The effects of the clause in force and of the one proposed for it, on the same biases; null without a rule. */
 export function clauseEffects(
   pair: { before: Clause | null; after: Clause | null },
@@ -90,8 +99,9 @@ export function clauseEffects(
 ): { before: ClauseEffect | null; after: ClauseEffect | null } {
   const clauses = [pair.before, pair.after].filter((clause) => clause !== null)
   const biases = sharedBiases(clauses, characteristic, assumptions.standardDeviation)
+  const sizes = numbersOfReadings(assumptions.readings)
   const effect = (clause: Clause | null): ClauseEffect | null => {
-    const computed = clause && consequences({ clause, characteristic, biases, ...assumptions })
+    const computed = clause && consequences({ clause, characteristic, biases, sizes, ...assumptions })
     if (!computed) return null
     const rows = incentiveRows(computed, assumptions)
     return { clause, computed, incentives: rows, perverse: rows.some(({ wrong }) => wrong) }

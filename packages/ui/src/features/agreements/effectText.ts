@@ -1,6 +1,6 @@
-import { formatChance, formatNumber, type Unit } from '../../format'
+import { formatChance, type Unit } from '../../format'
 import { comparisonWords as words } from '../../strings/agreements'
-import { ruleNames } from '../../strings/consequences'
+import { biasText, ruleNames } from '../../strings/consequences'
 import type { ClauseEffect, clauseEffects } from './consequenceRows'
 import type { ClauseDifference } from './differences'
 
@@ -14,7 +14,7 @@ const wrongOf = (effect: ClauseEffect | null, unit: Unit): string | undefined =>
         ruleNames[effect.clause.type],
         formatChance(shown.before),
         formatChance(shown.after),
-        formatNumber(worse.bias, { unit, digits: undefined }),
+        biasText(worse.bias, unit),
       )
     : undefined
 }

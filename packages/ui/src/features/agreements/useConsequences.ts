@@ -2,7 +2,7 @@ import { computedCharacteristic, type agreements } from '@evenrule/api/contract'
 import type { Clause } from '@evenrule/metrology'
 import { computed, ref } from 'vue'
 import { consequenceWords as words } from '../../strings/consequences'
-import { anyTolerance } from './assumptions'
+import { anyTolerance, inReadableUnit } from './assumptions'
 import { hasConsequences } from './consequenceRows'
 import type { ClauseDifference } from './differences'
 import { useAssumptions } from './useAssumptions'
@@ -40,7 +40,12 @@ export function useConsequences(
       telling(characteristics)
     )
   })
-  const characteristic = computed(() => (chosen.value ? computedCharacteristic(chosen.value) : anyTolerance))
+  const characteristic = computed(() => {
+    const { before, after } = source()
+    return chosen.value
+      ? inReadableUnit(computedCharacteristic(chosen.value), [...after, ...before])
+      : anyTolerance
+  })
   const unit = computed(() => (chosen.value ? characteristic.value.unit : words.anyUnit))
   const entered = useAssumptions(() => {
     const { before, after } = source()
