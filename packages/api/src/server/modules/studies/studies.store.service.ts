@@ -64,8 +64,8 @@ export async function storeReadingsOf(
   { read, file }: { read: ReadReadings; file: FileToKeep | null },
 ): Promise<AnswerInputOf<typeof readStudy>> {
   const study = await studyById(tenant, studyId)
-  const move = moveFor(study, body)
   if (study.rowVersion !== body.expectedVersion) throw changedMeanwhile('study')
+  const move = moveFor(study, body)
   const revisions = await selectRevisions(tenant, studyId)
   const takenBy = [...new Set(body.takenBy)]
   await refuseWrongFields(tenant, study, body, takenBy)

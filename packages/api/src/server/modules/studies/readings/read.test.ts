@@ -144,6 +144,12 @@ describe('several columns', () => {
     ])
     expect(problem(() => paste(text, { column: 'D' }))).toMatchObject({ path: 'body.column' })
   })
+  it('are taken from beside a column that counts, also where most of them are wrong', () => {
+    const read = paste('Nr;Wert\n1;24,001\n2;lost\n3;1.024,5\n4;-')
+    expect(read.readAs.column).toBe('B')
+    expect(places(read)).toEqual(['B3 not-a-number', 'B4 thousands-separator', 'B5 not-a-number'])
+    expect(paste('Nr;x\n1;24,001\n3;24,002').readAs.column).toBe('B')
+  })
   it('may stand under a title, a day and units, which are passed over', () => {
     const read = upload('Bore gauge BG-14\nDay;2026-11-02\nNr;Reading\n;mm\n1;24,001\n2;24,002\n')
     expect(values(read)).toEqual([24.001, 24.002])

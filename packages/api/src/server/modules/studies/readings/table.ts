@@ -17,7 +17,7 @@ export interface Column {
   letter: string
   name: string | null
   numbers: number
-  /** Counts the rows 1, 2, 3, … */
+  /** Counts the rows 1, 2, 3, …, or is called a number of them. */
   running: boolean
   fractions: boolean
 }
@@ -38,7 +38,7 @@ export function columnsOf(rows: readonly string[][], headerRows: number): Column
       letter: letterOf(index),
       name: names[index]?.trim() || null,
       numbers: written.length,
-      running: counts(cells, 2),
+      running: counts(cells, 2) || numberWords.test(names[index]?.trim() ?? ''),
       fractions: written.some(({ mark }) => mark !== null),
     }
   })
@@ -54,14 +54,17 @@ function namesIn(header: readonly string[][]): string[] {
 const readingWords =
   /reading|measure|value|actual|deviation|result|messwert|istwert|wert|abweichung|mesure|valeur|lectura|valor|lettura|misura|pomiar|wartość/i
 
+/** Words that name a column which counts the rows. */
+const numberWords = /^(n[or]\.?|no|#|id|index|pos\.?|number|row|zeile|lfd\.? ?nr\.?)$/i
+
 /** The column to take the readings from, the first of the best; undefined where no column holds numbers. */
 export function readingColumn(columns: readonly Column[]): { column?: Column; note: ReadingsNote | null } {
   const candidates = columns.filter(({ numbers }) => numbers > 0)
-  const most = Math.max(...candidates.map(({ numbers }) => numbers), 0)
+  const most = Math.max(...candidates.filter(({ running }) => !running).map(({ numbers }) => numbers), 0)
   const rank = ({ name, running, fractions, numbers }: Column): number =>
-    (numbers * 2 >= most ? 16 : 0) +
-    (name !== null && readingWords.test(name) ? 8 : 0) +
-    (running ? 0 : 4) +
+    (running ? 0 : 16) +
+    (numbers * 2 >= most ? 8 : 0) +
+    (name !== null && readingWords.test(name) ? 4 : 0) +
     (fractions ? 2 : 0)
   const column = candidates.reduce<Column | undefined>(
     (best, each) => (best === undefined || rank(each) > rank(best) ? each : best),
