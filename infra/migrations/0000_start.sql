@@ -549,7 +549,7 @@ CREATE TABLE "record_events" (
 	"previous_hash" text NOT NULL,
 	"hash" text NOT NULL,
 	CONSTRAINT "record_events_chain_id_sequence_pk" PRIMARY KEY("chain_id","sequence"),
-	CONSTRAINT "record_events_kind" CHECK ((org_id is not null) <> (supplier_org_id is not null and customer_org_id is not null))
+	CONSTRAINT "record_events_kind" CHECK ((org_id is not null) <> (supplier_org_id is not null and customer_org_id is not null) and (org_id is null or org_id = chain_id))
 );
 --> statement-breakpoint
 ALTER TABLE "record_events" ENABLE ROW LEVEL SECURITY;--> statement-breakpoint
@@ -561,7 +561,7 @@ CREATE TABLE "record_heads" (
 	"sequence" integer NOT NULL,
 	"hash" text NOT NULL,
 	CONSTRAINT "record_heads_chain_id_pk" PRIMARY KEY("chain_id"),
-	CONSTRAINT "record_heads_kind" CHECK ((org_id is not null) <> (supplier_org_id is not null and customer_org_id is not null))
+	CONSTRAINT "record_heads_kind" CHECK ((org_id is not null) <> (supplier_org_id is not null and customer_org_id is not null) and (org_id is null or org_id = chain_id))
 );
 --> statement-breakpoint
 ALTER TABLE "record_heads" ENABLE ROW LEVEL SECURITY;--> statement-breakpoint
@@ -654,6 +654,8 @@ ALTER TABLE "challenges" ADD CONSTRAINT "challenges_submission_fk" FOREIGN KEY (
 ALTER TABLE "challenges" ADD CONSTRAINT "challenges_relationship_fk" FOREIGN KEY ("relationship_id","supplier_org_id","customer_org_id") REFERENCES "public"."relationships"("id","supplier_org_id","customer_org_id") ON DELETE no action ON UPDATE no action;--> statement-breakpoint
 ALTER TABLE "decisions" ADD CONSTRAINT "decisions_submission_fk" FOREIGN KEY ("relationship_id","submission_id") REFERENCES "public"."submissions"("relationship_id","id") ON DELETE no action ON UPDATE no action;--> statement-breakpoint
 ALTER TABLE "decisions" ADD CONSTRAINT "decisions_relationship_fk" FOREIGN KEY ("relationship_id","supplier_org_id","customer_org_id") REFERENCES "public"."relationships"("id","supplier_org_id","customer_org_id") ON DELETE no action ON UPDATE no action;--> statement-breakpoint
+ALTER TABLE "record_events" ADD CONSTRAINT "record_events_relationship_fk" FOREIGN KEY ("chain_id","supplier_org_id","customer_org_id") REFERENCES "public"."relationships"("id","supplier_org_id","customer_org_id") ON DELETE no action ON UPDATE no action;--> statement-breakpoint
+ALTER TABLE "record_heads" ADD CONSTRAINT "record_heads_relationship_fk" FOREIGN KEY ("chain_id","supplier_org_id","customer_org_id") REFERENCES "public"."relationships"("id","supplier_org_id","customer_org_id") ON DELETE no action ON UPDATE no action;--> statement-breakpoint
 ALTER TABLE "messages" ADD CONSTRAINT "messages_org_fk" FOREIGN KEY ("org_id") REFERENCES "public"."organisations"("id") ON DELETE no action ON UPDATE no action;--> statement-breakpoint
 ALTER TABLE "messages" ADD CONSTRAINT "messages_user_fk" FOREIGN KEY ("user_id") REFERENCES "public"."users"("id") ON DELETE no action ON UPDATE no action;--> statement-breakpoint
 ALTER TABLE "outbox" ADD CONSTRAINT "outbox_message_fk" FOREIGN KEY ("org_id","message_id") REFERENCES "public"."messages"("org_id","id") ON DELETE no action ON UPDATE no action;--> statement-breakpoint

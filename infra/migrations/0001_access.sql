@@ -17,7 +17,7 @@ GRANT SELECT, INSERT, UPDATE ON
   sites, memberships, parts, part_revisions, characteristics, measuring_tasks,
   gauges, reference_standards, calibrations,
   agreements, agreement_versions, agreement_rounds,
-  studies, study_tasks, submission_studies, record_heads
+  studies, study_tasks, submission_studies
   TO evenrule_app;
 --> statement-breakpoint
 -- What is written once and never changed.
@@ -31,6 +31,8 @@ GRANT SELECT, INSERT, UPDATE (
   number, state, state_since, sent_for_signature_at, submitted_at, decided_at, withdrawal_reason, verdict,
   clauses_met, clauses_total, safety, superseded_by, row_version
 ) ON submissions TO evenrule_app;
+--> statement-breakpoint
+GRANT SELECT, INSERT, UPDATE (sequence, hash) ON record_heads TO evenrule_app;
 --> statement-breakpoint
 GRANT SELECT, INSERT, UPDATE (state, second_by, second_at, sent_back_reason) ON decisions TO evenrule_app;
 --> statement-breakpoint

@@ -1,6 +1,18 @@
 import { sql } from 'drizzle-orm'
-import { check, index, integer, pgPolicy, pgTable, primaryKey, text, uuid } from 'drizzle-orm/pg-core'
+import {
+  check,
+  foreignKey,
+  index,
+  integer,
+  pgPolicy,
+  pgTable,
+  primaryKey,
+  text,
+  uuid,
+  type AnyPgColumn,
+} from 'drizzle-orm/pg-core'
 import { instant } from '../../db/columns'
+import { relationships } from '../relationships/relationships.table'
 
 const owner = `org_id = nullif(current_setting('app.org_id', true), '')::uuid`
 const party = `supplier_org_id = nullif(current_setting('app.org_id', true), '')::uuid or customer_org_id = nullif(current_setting('app.org_id', true), '')::uuid`
@@ -13,16 +25,31 @@ const chainColumns = {
   customerOrgId: uuid(),
 }
 
+type ChainTable = Record<'chainId' | 'supplierOrgId' | 'customerOrgId', AnyPgColumn>
+
+/**
+ * A journal bears its organisation's id, a shared chain that of the relationship of the very parties named: nobody
+ * can put a row into the chain of others by naming themselves as a party.
+ */
+const chainBelongs = (name: string, t: ChainTable) => [
+  check(
+    `${name}_kind`,
+    sql`(org_id is not null) <> (supplier_org_id is not null and customer_org_id is not null) and (org_id is null or org_id = chain_id)`,
+  ),
+  foreignKey({
+    name: `${name}_relationship_fk`,
+    columns: [t.chainId, t.supplierOrgId, t.customerOrgId],
+    foreignColumns: [relationships.id, relationships.supplierOrgId, relationships.customerOrgId],
+  }),
+]
+
 /** The last link of every chain; locked last and in id order when events are appended. */
 export const recordHeads = pgTable(
   'record_heads',
   { ...chainColumns, sequence: integer().notNull(), hash: text().notNull() },
   (t) => [
     primaryKey({ columns: [t.chainId] }),
-    check(
-      'record_heads_kind',
-      sql`(org_id is not null) <> (supplier_org_id is not null and customer_org_id is not null)`,
-    ),
+    ...chainBelongs('record_heads', t),
     pgPolicy('record_heads_visible', {
       as: 'permissive',
       for: 'all',
@@ -55,10 +82,7 @@ export const recordEvents = pgTable(
   (t) => [
     primaryKey({ columns: [t.chainId, t.sequence] }),
     index('record_events_subject').on(t.chainId, t.subjectType, t.subjectId),
-    check(
-      'record_events_kind',
-      sql`(org_id is not null) <> (supplier_org_id is not null and customer_org_id is not null)`,
-    ),
+    ...chainBelongs('record_events', t),
     pgPolicy('record_events_visible', {
       as: 'permissive',
       for: 'all',
