@@ -1,5 +1,5 @@
 import type { Subject } from '@evenrule/metrology'
-import { formatCount } from '../format'
+import { countWord, formatCount, joinWords } from '../format'
 import { subjectWords } from './clauses'
 
 /** Where an agreed clause stands: for everything between two parties, one part, or one characteristic. */
@@ -19,16 +19,12 @@ export const sourceText = (source: {
 }): string =>
   `Agreement ${source.agreementNumber}, version ${source.versionNumber}, ${scopeWords[source.scope]}`
 
-const smallNumbers = ['no', 'one', 'two', 'three', 'four', 'five', 'six', 'seven', 'eight', 'nine', 'ten']
-const inWords = (count: number): string => smallNumbers[count] ?? String(count)
-
 /** "Bias", "Bias and resolution", "Bias, resolution and calibration". */
 export function listSubjects(subjects: readonly Subject[]): string {
   const names = [...new Set(subjects)].map((subject, at) =>
     at === 0 ? subjectWords[subject] : subjectWords[subject].toLowerCase(),
   )
-  const last = names.pop() ?? ''
-  return names.length ? `${names.join(', ')} and ${last}` : last
+  return joinWords(names)
 }
 
 /** The answer to "is it fit?", in words; the counts and reasons come from the results. */
@@ -38,17 +34,17 @@ export const answerWords = {
   allMeet: (count: number) =>
     count === 1
       ? 'Yes, the one clause meets.'
-      : `Yes, ${count === 2 ? 'both' : `all ${inWords(count)}`} clauses meet.`,
+      : `Yes, ${count === 2 ? 'both' : `all ${countWord(count)}`} clauses meet.`,
   fallsShort: (count: number, total: number) =>
     total === 1
       ? 'No, the one clause falls short.'
       : count === total
-        ? `No, ${total === 2 ? 'both' : `all ${inWords(total)}`} clauses fall short.`
-        : `No, ${inWords(count)} of ${inWords(total)} clauses ${count === 1 ? 'falls' : 'fall'} short.`,
+        ? `No, ${total === 2 ? 'both' : `all ${countWord(total)}`} clauses fall short.`
+        : `No, ${countWord(count)} of ${countWord(total)} clauses ${count === 1 ? 'falls' : 'fall'} short.`,
   notShown: (met: number, total: number) =>
     total === 1
       ? 'Not shown yet.'
-      : `Not shown yet: ${inWords(met)} of ${inWords(total)} clauses ${met === 1 ? 'meets' : 'meet'}.`,
+      : `Not shown yet: ${countWord(met)} of ${countWord(total)} clauses ${met === 1 ? 'meets' : 'meet'}.`,
   subjectsFallShort: (subjects: readonly Subject[]) =>
     `${listSubjects(subjects)} ${new Set(subjects).size > 1 ? 'fall' : 'falls'} short`,
   subjectsNotShown: (subjects: readonly Subject[]) =>
