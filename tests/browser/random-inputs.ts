@@ -185,7 +185,10 @@ const makers: { [K in Kind]: (random: Random, scale: Scale) => object } = {
     const chance = () => random.of([1e-12, 1e-6, 0.025, 0.5, 0.9, 0.975, 1 - 1e-9, random.next()])
     const place = () => random.of([random.size(1e-6, 1e3), random.between(-10, 10)])
     return {
-      name: random.of(['normal', 't', 'noncentral-t', 'chi-square', 'f', 'beta']),
+      // A studentised range costs a thousand times as much as the others.
+      name: random.chance(0.02)
+        ? 'studentized-range'
+        : random.of(['normal', 't', 'noncentral-t', 'chi-square', 'f', 'beta']),
       function: wanted,
       parameters: {
         df: degrees(),
@@ -194,6 +197,7 @@ const makers: { [K in Kind]: (random: Random, scale: Scale) => object } = {
         a: degrees(),
         b: degrees(),
         noncentrality: random.between(-60, 60),
+        groups: random.whole(2, 12),
       },
       at: Array.from({ length: random.whole(1, 4) }, wanted === 'quantile' ? chance : place),
     }

@@ -9,6 +9,7 @@ export interface CurvePoint extends Chances {
   bias: number
 }
 
+/** What a clause encourages and discourages; biases and spreads in the characteristic’s unit, chances from 0 to 1. */
 export interface Consequences {
   rule: Rule
   /** Chances against the true bias, at the planned number of readings and the assumed spread. */

@@ -22,6 +22,7 @@ export function missingBaseline(base: Baseline): ProblemCode & ReasonCode {
   return base === 'process' ? 'no-process-spread' : 'no-tolerance-width'
 }
 
+/** What keeps a share of a baseline from being formed for a characteristic, at `path`; empty where nothing does. */
 export function baselineProblems(base: Baseline, of: Characteristic, path: string): Problem[] {
   if (baselineWidth(base, of)) return []
   return [
@@ -49,6 +50,7 @@ function exactMargin(margin: Margin, of: Characteristic): Rational | null {
   return width && multiply(rational(margin.share), width)
 }
 
+/** What keeps a margin from being formed in the characteristic’s unit, with paths below `path`; empty where nothing does. */
 export function marginProblems(margin: Margin, of: Characteristic, path: string): Problem[] {
   const exact = exactMargin(margin, of)
   if (exact)

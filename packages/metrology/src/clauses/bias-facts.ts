@@ -29,6 +29,7 @@ export function biasFacts(study: BiasFigures | null): BiasFacts | Reason {
   }
 }
 
+/** Whether the facts of a study are a reason why there are none. */
 export const isReason = (value: object): value is Reason => 'code' in value
 
 /** A bias clause that cannot be judged: the figure is shown where there is one. */

@@ -28,8 +28,10 @@ export const clauseDescriptors: { [T in ClauseType]: ClauseDescriptor<T> } = {
   'bias-zero-test': biasZeroTest,
 }
 
+/** Every clause type there is, in the order of the catalogue. */
 export const clauseTypes = Object.keys(clauseDescriptors) as ClauseType[]
 
+/** The descriptor of a clause’s own type. */
 export function clauseDescriptor<T extends ClauseType>(clause: ClauseOf<T>): ClauseDescriptor<T> {
   return clauseDescriptors[clause.type as T]
 }

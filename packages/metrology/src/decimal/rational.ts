@@ -6,6 +6,7 @@ export interface Rational {
   denominator: bigint
 }
 
+/** Nothing, as a fraction. */
 export const zero: Rational = { numerator: 0n, denominator: 1n }
 
 /** Ten to a whole, non-negative power. */
@@ -31,17 +32,22 @@ export function rational(value: number): Rational {
     : { numerator: coefficient, denominator: powerOfTen(-exponent) }
 }
 
+/** Exact sum. */
 export const add = (a: Rational, b: Rational): Rational => ({
   numerator: a.numerator * b.denominator + b.numerator * a.denominator,
   denominator: a.denominator * b.denominator,
 })
 
+/** Exact difference a − b. */
 export const subtract = (a: Rational, b: Rational): Rational => add(a, negate(b))
 
+/** −a */
 export const negate = (a: Rational): Rational => ({ numerator: -a.numerator, denominator: a.denominator })
 
+/** |a| */
 export const absolute = (a: Rational): Rational => (a.numerator < 0n ? negate(a) : a)
 
+/** Exact product. */
 export const multiply = (a: Rational, b: Rational): Rational => ({
   numerator: a.numerator * b.numerator,
   denominator: a.denominator * b.denominator,

@@ -15,6 +15,8 @@ import {
   normalCdf,
   normalQuantile,
   normalUpperTail,
+  studentizedRangeQuantile,
+  studentizedRangeTails,
   tQuantile,
   tTails,
   tTwoSided,
@@ -211,6 +213,47 @@ describe('relations between distributions', () => {
     }
     expect(chiSquareTails(1e-300, 1e6)).toEqual({ lower: 0, upper: 1 })
     expect(chiSquareTails(1e9, 300)).toEqual({ lower: 1, upper: 0 })
+  })
+})
+
+describe('the studentised range', () => {
+  it('of two groups is |t|·√2, in both tails', () => {
+    for (const df of [1, 2, 5, 30, 1e6]) {
+      for (const q of [1e-4, 0.1, 1, 5, 15, 100]) {
+        const { lower, upper } = studentizedRangeTails(q, 2, df)
+        const beyond = tTwoSided(q / Math.SQRT2, df)
+        if (beyond > 0) expect(Math.abs(upper / beyond - 1), `${q} on ${df}`).toBeLessThan(1e-10)
+        expect(lower).toBeCloseTo(1 - beyond, 12)
+      }
+    }
+  })
+
+  it.each([
+    [3.5, 3, 20],
+    [4, 10, 60],
+    [1, 5, 5],
+    [0.5, 4, 10],
+  ])('at %d with %d groups on %d degrees of freedom agrees with jstat', (q, groups, df) => {
+    expect(studentizedRangeTails(q, groups, df).lower).toBeCloseTo(jStat.tukey.cdf(q, groups, df), 8)
+  })
+
+  it('has quantiles at which its chances are the ones asked for', () => {
+    for (const [groups, df] of [
+      [3, 1],
+      [5, 60],
+    ] as const) {
+      for (const p of [1e-9, 0.05, 0.95, 1 - 1e-6]) {
+        const { lower, upper } = studentizedRangeTails(studentizedRangeQuantile(p, groups, df), groups, df)
+        expect(Math.abs(p <= 0.5 ? lower / p - 1 : upper / (1 - p) - 1), `p ${p}`).toBeLessThan(1e-9)
+      }
+    }
+    // Every table of the studentised range: 3.58 for three groups on 20 degrees of freedom at 5 %.
+    expect(studentizedRangeQuantile(0.95, 3, 20)).toBeCloseTo(3.578, 3)
+  })
+
+  it('is nothing at zero and everything far away', () => {
+    expect(studentizedRangeTails(0, 3, 10)).toEqual({ lower: 0, upper: 1 })
+    expect(studentizedRangeTails(1e300, 3, 1000)).toEqual({ lower: 1, upper: 0 })
   })
 })
 

@@ -15,6 +15,7 @@ export interface CommonFields {
   sigmas: number
 }
 
+/** Reads the fields every kind understands. Throws `InvalidInput` where one is out of bounds or limits are inverted. */
 export function readCommon(reader: Reader): CommonFields {
   return {
     ...given('unit', reader.optionalText('unit')),

@@ -157,6 +157,7 @@ function asList(value: unknown, path: string, least: number): unknown[] {
   return Array.from(value as unknown[])
 }
 
+/** A finite number within bounds; throws `InvalidInput` with the path otherwise. */
 export function asNumber(value: unknown, path: string, bounds: Bounds = {}): number {
   if (typeof value !== 'number') {
     throw new InvalidInput('not-a-number', `Write a number here, not ${describe(value)}.`, path)

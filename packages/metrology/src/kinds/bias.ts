@@ -33,6 +33,7 @@ export interface BiasArguments extends CommonFields {
   index: { share: number; sigmas: number }
 }
 
+/** Reads the input of `bias`. Throws `InvalidInput` with the path of what is missing or out of bounds. */
 export function readBias(reader: Reader): BiasArguments {
   const common = readCommon(reader)
   const readings = reader.numbers('readings', 1)
@@ -48,6 +49,7 @@ export function readBias(reader: Reader): BiasArguments {
   }
 }
 
+/** Reads `reference`: its value and, where given, its standard uncertainty (at least 0), in the unit of the readings. */
 export function readReference(reader: Reader): BiasArguments['reference'] {
   const source = reader.object('reference')
   return {

@@ -10,6 +10,8 @@ import {
   normalCdf,
   normalQuantile,
   normalUpperTail,
+  studentizedRangeQuantile,
+  studentizedRangeTails,
   tQuantile,
   tTails,
   type Tails,
@@ -69,6 +71,15 @@ const readers: Record<string, (parameters: Reader) => Distribution> = {
       tails: (x) => betaDistributionTails(x, a, b),
       quantile: (p) => betaQuantile(p, a, b),
       support: [0, 1],
+    }
+  },
+  'studentized-range': (parameters) => {
+    const groups = parameters.integer('groups', { least: 2, most: 1000 })
+    const df = parameters.number('df', { least: 1, most: 1e8 })
+    return {
+      tails: (q) => studentizedRangeTails(q, groups, df),
+      quantile: (p) => studentizedRangeQuantile(p, groups, df),
+      support: [0, Infinity],
     }
   },
 }

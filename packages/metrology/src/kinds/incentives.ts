@@ -10,7 +10,8 @@ const threshold = 1e-9
 /**
  * Whether the chance to meet a rule rises with twice the spread, falls with twice the readings, or rises at half the
  * risk level. Computed from the exact chances, at the truth given or, without one, at the truth among those the rule
- * is meant to accept where the wrong incentive is strongest.
+ * is meant to accept where the wrong incentive is strongest. Domain: n ≥ 2, a truth with a standard deviation above 0 in
+ * the unit of the rule. The flaws it looks for are those of the zero-difference test (see `zeroTest`).
  */
 export function incentives(rule: Rule, n: number, truth?: Truth): IncentivesOutput {
   const truths = truth ? [truth] : truthsMeantToBeAccepted(rule)
@@ -66,6 +67,7 @@ function truthsMeantToBeAccepted(rule: Rule): Truth[] {
   )
 }
 
+/** Reads the input of `incentives` and answers it. Throws `InvalidInput` with the path of what is wrong. */
 export function readIncentives(reader: Reader): IncentivesOutput {
   const rule = readRule(reader)
   const n = readDesign(reader)

@@ -38,6 +38,7 @@ function readResult(reader: Reader): BiasFigures | null {
   }
 }
 
+/** Reads `design`, how the study came about; null where it is not given. */
 export function readDesignFacts(reader: Reader): DesignFacts | null {
   const source = reader.optionalObject('design')
   if (!source) return null
@@ -47,6 +48,7 @@ export function readDesignFacts(reader: Reader): DesignFacts | null {
   }
 }
 
+/** Reads `calibration`: ISO 8601 days, each window from calibration to due day; null where it is not given. */
 export function readCalibration(reader: Reader): CalibrationFacts | null {
   const source = reader.optionalObject('calibration')
   if (!source) return null

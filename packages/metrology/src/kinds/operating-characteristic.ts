@@ -20,16 +20,19 @@ export function operatingCharacteristic(
   }
 }
 
+/** Reads the input of `operatingCharacteristic` and answers it; at least one truth. */
 export function readOperatingCharacteristic(reader: Reader): OperatingCharacteristicOutput {
   const rule = readRule(reader)
   const n = readDesign(reader)
   return operatingCharacteristic(rule, n, reader.objects('truth', 1).map(readTruth))
 }
 
+/** Reads `design.n`, a whole number of readings from 2 to a million. */
 export function readDesign(reader: Reader): number {
   return reader.object('design').integer('n', { least: 2, most: 1_000_000 })
 }
 
+/** Reads an assumed truth: bias and standard deviation (above 0) in the unit of the rule. */
 export function readTruth(reader: Reader): Truth {
   return {
     bias: reader.number('bias', anySize),

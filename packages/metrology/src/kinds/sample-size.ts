@@ -5,6 +5,7 @@ import { chancesOf } from '../rules/chances'
 import type { Rule, SampleSizeOutput, Truth } from '../types'
 import { readTruth } from './operating-characteristic'
 
+/** The largest number of readings a study is planned for. */
 export const mostReadings = 100_000
 
 /**
@@ -51,6 +52,7 @@ function* searchedDownwards(): Generator<number> {
   for (; n >= 2; n--) yield n
 }
 
+/** Reads the input of `sampleSize` and answers it. Throws `InvalidInput` `no-sample-size` where no number suffices. */
 export function readSampleSize(reader: Reader): SampleSizeOutput {
   const rule = readRule(reader)
   const truth = readTruth(reader.object('truth'))

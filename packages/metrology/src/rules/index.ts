@@ -15,6 +15,7 @@ const descriptors: { [T in RuleType]: RuleDescriptor<T> } = {
   'with-uncertainty': withUncertainty,
 }
 
+/** Every type of rule there is. */
 export const ruleTypes = Object.keys(descriptors) as RuleType[]
 
 /** The descriptor of a rule's own type. */

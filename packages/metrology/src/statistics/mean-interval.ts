@@ -19,6 +19,7 @@ export const twoSidedCritical = (alpha: number, df: number): number => oneSidedC
 export const oneSidedCritical = (alpha: number, df: number): number =>
   -tQuantile(Math.max(alpha, Number.MIN_VALUE), df)
 
+/** The interval center ± halfWidth. */
 export const intervalAround = (center: number, halfWidth: number): Interval => ({
   lower: center - halfWidth,
   upper: center + halfWidth,

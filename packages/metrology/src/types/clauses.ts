@@ -66,6 +66,7 @@ export interface Problem {
   message: string
 }
 
+/** A verdict with what it rests on; figure, interval and limits are of `quantity`. */
 export interface Judgement {
   verdict: Verdict
   figure: number | string | null
@@ -113,6 +114,7 @@ export interface StudyOptions {
   margin?: number
 }
 
+/** Everything forms, checks, consequences and verdicts need to know of one clause type. */
 export interface ClauseDescriptor<T extends ClauseType = ClauseType> {
   type: T
   subject: Subject

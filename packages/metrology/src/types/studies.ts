@@ -17,12 +17,14 @@ export interface StudyFigure {
   quantity: 'value' | 'share' | 'count' | 'ratio'
 }
 
+/** Readings needed for all clauses together and for each. */
 export interface StudyPlan {
   /** Least readings for every clause at the wanted chance; null where a clause has none. */
   readings: number | null
   byClause: ({ clauseKey: string } & ReadingsNeeded)[]
 }
 
+/** Everything forms, uploads, plans and result pages need to know of one kind of study. */
 export interface StudyKindDescriptor<K extends StudyKind = StudyKind> {
   kind: K
   columns: readonly StudyColumn[]

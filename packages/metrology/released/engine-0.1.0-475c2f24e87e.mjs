@@ -2322,28 +2322,28 @@ var require_main41 = __commonJS({
     var CLEAR_EXP_MASK = 2148532223 >>> 0;
     var FRAC = [0, 0];
     var WORDS = [0, 0];
-    function ldexp(frac, exp8) {
+    function ldexp(frac, exp9) {
       var high;
       var m;
-      if (exp8 === 0 || frac === 0 || // handles +-0
+      if (exp9 === 0 || frac === 0 || // handles +-0
       isnan(frac) || isInfinite(frac)) {
         return frac;
       }
       normalize(frac, FRAC, 1, 0);
       frac = FRAC[0];
-      exp8 += FRAC[1];
-      exp8 += floatExp(frac);
-      if (exp8 < MIN_SUBNORMAL_EXPONENT) {
+      exp9 += FRAC[1];
+      exp9 += floatExp(frac);
+      if (exp9 < MIN_SUBNORMAL_EXPONENT) {
         return copysign(0, frac);
       }
-      if (exp8 > MAX_EXPONENT) {
+      if (exp9 > MAX_EXPONENT) {
         if (frac < 0) {
           return NINF;
         }
         return PINF;
       }
-      if (exp8 <= MAX_SUBNORMAL_EXPONENT) {
-        exp8 += 52;
+      if (exp9 <= MAX_SUBNORMAL_EXPONENT) {
+        exp9 += 52;
         m = TWO52_INV;
       } else {
         m = 1;
@@ -2351,7 +2351,7 @@ var require_main41 = __commonJS({
       toWords.assign(frac, WORDS, 1, 0);
       high = WORDS[0];
       high &= CLEAR_EXP_MASK;
-      high |= exp8 + BIAS << 20;
+      high |= exp9 + BIAS << 20;
       return m * fromWords(high, WORDS[1]);
     }
     module.exports = ldexp;
@@ -2418,7 +2418,7 @@ var require_main42 = __commonJS({
     var UNDERFLOW = -745.1332191019411;
     var NEARZERO = 1 / (1 << 28);
     var NEG_NEARZERO = -NEARZERO;
-    function exp8(x) {
+    function exp9(x) {
       var hi;
       var lo;
       var k;
@@ -2446,7 +2446,7 @@ var require_main42 = __commonJS({
       lo = k * LN2_LO;
       return expmulti(hi, lo, k);
     }
-    module.exports = exp8;
+    module.exports = exp9;
   }
 });
 
@@ -3187,7 +3187,7 @@ var require_main49 = __commonJS({
     var log1p = require_lib38();
     var sqrt = require_lib39();
     var abs = require_lib42();
-    var exp8 = require_lib58();
+    var exp9 = require_lib58();
     var pow = require_lib67();
     var E = require_lib68();
     var EPSILON = require_lib69();
@@ -3236,7 +3236,7 @@ var require_main49 = __commonJS({
       res = lanczosSumExpGScaled(a) * (lanczosSumExpGScaled(b) / lanczosSumExpGScaled(c));
       ambh = a - 0.5 - b;
       if (abs(b * ambh) < cgh * 100 && a > 100) {
-        res *= exp8(ambh * log1p(-b / cgh));
+        res *= exp9(ambh * log1p(-b / cgh));
       } else {
         res *= pow(agh / cgh, ambh);
       }
@@ -4172,7 +4172,7 @@ var require_stirling_approximation = __commonJS({
     "use strict";
     var SQRT_TWO_PI = require_lib87();
     var pow = require_lib67();
-    var exp8 = require_lib58();
+    var exp9 = require_lib58();
     var polyval = require_polyval_s();
     var MAX_STIRLING = 143.01608;
     function gamma2(x) {
@@ -4181,7 +4181,7 @@ var require_stirling_approximation = __commonJS({
       var v;
       w = 1 / x;
       w = 1 + w * polyval(w);
-      y = exp8(x);
+      y = exp9(x);
       if (x > MAX_STIRLING) {
         v = pow(x, 0.5 * x - 0.25);
         y = v * (v / y);
@@ -4629,7 +4629,7 @@ var require_gamma_delta_ratio_lanczos = __commonJS({
     var gamma2 = require_lib89();
     var log1p = require_lib38();
     var abs = require_lib42();
-    var exp8 = require_lib58();
+    var exp9 = require_lib58();
     var pow = require_lib67();
     var EPSILON = require_lib69();
     var E = require_lib68();
@@ -4652,13 +4652,13 @@ var require_gamma_delta_ratio_lanczos = __commonJS({
       zgh = z + G - 0.5;
       if (z + delta === z) {
         if (abs(delta / zgh) < EPSILON) {
-          result = exp8(-delta);
+          result = exp9(-delta);
         } else {
           result = 1;
         }
       } else {
         if (abs(delta) < 10) {
-          result = exp8((0.5 - z) * log1p(delta / zgh));
+          result = exp9((0.5 - z) * log1p(delta / zgh));
         } else {
           result = pow(zgh / (zgh + delta), z - 0.5);
         }
@@ -4783,7 +4783,7 @@ var require_main66 = __commonJS({
     var HIGH_MAX_NORMAL_EXP = 2146435072 | 0;
     var HIGH_MIN_NORMAL_EXP = 1048576 | 0;
     var HIGH_BIASED_EXP_0 = 1072693248 | 0;
-    function ln8(x) {
+    function ln9(x) {
       var hfsq;
       var hx;
       var t2;
@@ -4852,7 +4852,7 @@ var require_main66 = __commonJS({
       }
       return k * LN2_HI - (s * (f - R) - k * LN2_LO - f);
     }
-    module.exports = ln8;
+    module.exports = ln9;
   }
 });
 
@@ -5120,7 +5120,7 @@ var require_main69 = __commonJS({
     var isnan = require_lib6();
     var isInfinite = require_lib48();
     var abs = require_lib42();
-    var ln8 = require_lib95();
+    var ln9 = require_lib95();
     var trunc = require_lib44();
     var sinpi = require_lib97();
     var PI = require_lib78();
@@ -5179,7 +5179,7 @@ var require_main69 = __commonJS({
         isNegative = false;
       }
       if (x < TINY) {
-        return -ln8(x);
+        return -ln9(x);
       }
       if (isNegative) {
         if (x >= TWO52) {
@@ -5189,14 +5189,14 @@ var require_main69 = __commonJS({
         if (t === 0) {
           return PINF;
         }
-        nadj = ln8(PI / abs(t * x));
+        nadj = ln9(PI / abs(t * x));
       }
       if (x === 1 || x === 2) {
         return 0;
       }
       if (x < 2) {
         if (x <= 0.9) {
-          r = -ln8(x);
+          r = -ln9(x);
           if (x >= YMIN - 1 + 0.27) {
             y = 1 - x;
             flg = 0;
@@ -5267,16 +5267,16 @@ var require_main69 = __commonJS({
           /* Falls through */
           case 3:
             z *= y + 2;
-            r += ln8(z);
+            r += ln9(z);
         }
       } else if (x < TWO56) {
-        t = ln8(x);
+        t = ln9(x);
         z = 1 / x;
         y = z * z;
         w = WC + z * polyvalW(y);
         r = (x - 0.5) * (t - 1) + w;
       } else {
-        r = x * (ln8(x) - 1);
+        r = x * (ln9(x) - 1);
       }
       if (isNegative) {
         r = nadj - r;
@@ -5480,13 +5480,13 @@ var require_tgamma_i_large_x = __commonJS({
 var require_finite_gamma_q = __commonJS({
   "node_modules/@stdlib/math-base-special-gammainc/lib/finite_gamma_q.js"(exports, module) {
     "use strict";
-    var exp8 = require_lib58();
+    var exp9 = require_lib58();
     function finiteGammaQ(a, x) {
       var term;
       var sum;
       var e;
       var n;
-      e = exp8(-x);
+      e = exp9(-x);
       sum = e;
       if (sum !== 0) {
         term = sum;
@@ -5619,7 +5619,7 @@ var require_main71 = __commonJS({
   "node_modules/@stdlib/math-base-special-erfc/lib/main.js"(exports, module) {
     "use strict";
     var isnan = require_lib6();
-    var exp8 = require_lib58();
+    var exp9 = require_lib58();
     var setLowWord = require_lib62();
     var PINF = require_lib31();
     var NINF = require_lib33();
@@ -5707,7 +5707,7 @@ var require_main71 = __commonJS({
           s = SBC + s * polyvalSB(s);
         }
         z = setLowWord(ax, 0);
-        r = exp8(-(z * z) - 0.5625) * exp8((z - ax) * (z + ax) + r / s);
+        r = exp9(-(z * z) - 0.5625) * exp9((z - ax) * (z + ax) + r / s);
         if (sign) {
           return 2 - r / ax;
         }
@@ -5737,7 +5737,7 @@ var require_finite_half_gamma_q = __commonJS({
     "use strict";
     var erfc2 = require_lib104();
     var sqrt = require_lib39();
-    var exp8 = require_lib58();
+    var exp9 = require_lib58();
     var PI = require_lib78();
     function finiteHalfGammaQ(a, x) {
       var half;
@@ -5747,7 +5747,7 @@ var require_finite_half_gamma_q = __commonJS({
       var n;
       e = erfc2(sqrt(x));
       if (e !== 0 && a > 1) {
-        term = exp8(-x) / sqrt(PI * x);
+        term = exp9(-x) / sqrt(PI * x);
         term *= x;
         half = 0.5;
         term /= half;
@@ -5778,30 +5778,30 @@ var require_lib105 = __commonJS({
 var require_full_igamma_prefix = __commonJS({
   "node_modules/@stdlib/math-base-special-gammainc/lib/full_igamma_prefix.js"(exports, module) {
     "use strict";
-    var exp8 = require_lib58();
+    var exp9 = require_lib58();
     var pow = require_lib67();
-    var ln8 = require_lib95();
+    var ln9 = require_lib95();
     var MAX_LN = require_lib99();
     var MIN_LN = require_lib105();
     function fullIGammaPrefix(a, z) {
       var prefix;
       var alz;
-      alz = a * ln8(z);
+      alz = a * ln9(z);
       if (z >= 1) {
         if (alz < MAX_LN && -z > MIN_LN) {
-          prefix = pow(z, a) * exp8(-z);
+          prefix = pow(z, a) * exp9(-z);
         } else if (a >= 1) {
-          prefix = pow(z / exp8(z / a), a);
+          prefix = pow(z / exp9(z / a), a);
         } else {
-          prefix = exp8(alz - z);
+          prefix = exp9(alz - z);
         }
       } else {
         if (alz > MIN_LN) {
-          prefix = pow(z, a) * exp8(-z);
+          prefix = pow(z, a) * exp9(-z);
         } else if (z / a < MAX_LN) {
-          prefix = pow(z / exp8(z / a), a);
+          prefix = pow(z / exp9(z / a), a);
         } else {
-          prefix = exp8(alz - z);
+          prefix = exp9(alz - z);
         }
       }
       return prefix;
@@ -5938,7 +5938,7 @@ var require_main74 = __commonJS({
   "node_modules/@stdlib/math-base-special-log1pmx/lib/main.js"(exports, module) {
     "use strict";
     var abs = require_lib42();
-    var ln8 = require_lib95();
+    var ln9 = require_lib95();
     var FLOAT_EPS = require_lib69();
     var sumSeries = require_lib103();
     var log1pSeries = require_log1p_series();
@@ -5950,7 +5950,7 @@ var require_main74 = __commonJS({
       }
       ax = abs(x);
       if (ax > 0.95) {
-        return ln8(1 + x) - x;
+        return ln9(1 + x) - x;
       }
       if (ax < FLOAT_EPS) {
         return -x * x / 2;
@@ -6116,7 +6116,7 @@ var require_igamma_temme_large = __commonJS({
     var log1pmx2 = require_lib108();
     var erfc2 = require_lib104();
     var sqrt = require_lib39();
-    var exp8 = require_lib58();
+    var exp9 = require_lib58();
     var TWO_PI = require_lib109();
     var polyvalC0 = require_polyval_c0();
     var polyvalC1 = require_polyval_c1();
@@ -6152,7 +6152,7 @@ var require_igamma_temme_large = __commonJS({
       workspace[8] = polyvalC8(z);
       workspace[9] = -5967612901927463e-19;
       result = evalpoly(workspace, 1 / a);
-      result *= exp8(-y) / sqrt(TWO_PI * a);
+      result *= exp9(-y) / sqrt(TWO_PI * a);
       if (x < a) {
         result = -result;
       }
@@ -6261,11 +6261,11 @@ var require_regularised_gamma_prefix = __commonJS({
     var log1pmx2 = require_lib108();
     var sqrt = require_lib39();
     var abs = require_lib42();
-    var exp8 = require_lib58();
+    var exp9 = require_lib58();
     var pow = require_lib67();
     var max = require_lib72();
     var min = require_lib74();
-    var ln8 = require_lib95();
+    var ln9 = require_lib95();
     var FLOAT64_MAX = require_lib75();
     var MAX_LN = require_lib99();
     var MIN_LN = require_lib105();
@@ -6283,32 +6283,32 @@ var require_regularised_gamma_prefix = __commonJS({
       d = (z - a - G + 0.5) / agh;
       if (a < 1) {
         if (z <= MIN_LN || a < 1 / FLOAT64_MAX) {
-          return exp8(a * ln8(z) - z - gammaln(a));
+          return exp9(a * ln9(z) - z - gammaln(a));
         }
-        return pow(z, a) * exp8(-z) / gamma2(a);
+        return pow(z, a) * exp9(-z) / gamma2(a);
       }
       if (abs(d * d * a) <= 100 && a > 150) {
         prefix = a * log1pmx2(d) + z * (0.5 - G) / agh;
-        prefix = exp8(prefix);
+        prefix = exp9(prefix);
       } else {
-        alz = a * ln8(z / agh);
+        alz = a * ln9(z / agh);
         amz = a - z;
         if (min(alz, amz) <= MIN_LN || max(alz, amz) >= MAX_LN) {
           amza = amz / a;
           if (min(alz, amz) / 2 > MIN_LN && max(alz, amz) / 2 < MAX_LN) {
-            sq = pow(z / agh, a / 2) * exp8(amz / 2);
+            sq = pow(z / agh, a / 2) * exp9(amz / 2);
             prefix = sq * sq;
           } else if (min(alz, amz) / 4 > MIN_LN && max(alz, amz) / 4 < MAX_LN && z > a) {
-            sq = pow(z / agh, a / 4) * exp8(amz / 4);
+            sq = pow(z / agh, a / 4) * exp9(amz / 4);
             prefix = sq * sq;
             prefix *= prefix;
           } else if (amza > MIN_LN && amza < MAX_LN) {
-            prefix = pow(z * exp8(amza) / agh, a);
+            prefix = pow(z * exp9(amza) / agh, a);
           } else {
-            prefix = exp8(alz + amz);
+            prefix = exp9(alz + amz);
           }
         } else {
-          prefix = pow(z / agh, a) * exp8(amz);
+          prefix = pow(z / agh, a) * exp9(amz);
         }
       }
       prefix *= sqrt(agh / E) / lanczosSumExpGScaled(a);
@@ -6326,7 +6326,7 @@ var require_main76 = __commonJS({
     var isinfinite = require_lib48();
     var abs = require_lib42();
     var expm1 = require_lib36();
-    var ln8 = require_lib95();
+    var ln9 = require_lib95();
     var pow = require_lib67();
     var trunc = require_lib44();
     function powm1(b, x) {
@@ -6346,7 +6346,7 @@ var require_main76 = __commonJS({
       }
       if (b > 0) {
         if (abs(x * (b - 1)) < 0.5 || abs(x) < 0.2) {
-          y = ln8(b) * x;
+          y = ln9(b) * x;
           if (y < 0.5) {
             return expm1(y);
           }
@@ -6467,7 +6467,7 @@ var require_rational_p3q3 = __commonJS({
 var require_lgamma_small_imp = __commonJS({
   "node_modules/@stdlib/math-base-special-gamma1pm1/lib/lgamma_small_imp.js"(exports, module) {
     "use strict";
-    var ln8 = require_lib95();
+    var ln9 = require_lib95();
     var EPS = require_lib69();
     var rateval1 = require_rational_p1q1();
     var rateval2 = require_rational_p2q2();
@@ -6481,7 +6481,7 @@ var require_lgamma_small_imp = __commonJS({
       var r;
       var R;
       if (z < EPS) {
-        return -ln8(z);
+        return -ln9(z);
       }
       if (zm1 === 0 || zm2 === 0) {
         return 0;
@@ -6492,7 +6492,7 @@ var require_lgamma_small_imp = __commonJS({
           do {
             z -= 1;
             zm2 -= 1;
-            result += ln8(z);
+            result += ln9(z);
           } while (z >= 3);
           zm2 = z - 2;
         }
@@ -6502,7 +6502,7 @@ var require_lgamma_small_imp = __commonJS({
         return result;
       }
       if (z < 1) {
-        result += -ln8(z);
+        result += -ln9(z);
         zm2 = zm1;
         zm1 = z;
         z += 1;
@@ -6914,7 +6914,7 @@ var require_igamma_final = __commonJS({
     var gamma2 = require_lib89();
     var abs = require_lib42();
     var pow = require_lib67();
-    var ln8 = require_lib95();
+    var ln9 = require_lib95();
     var SQRT_EPSILON = require_lib100();
     var FLOAT64_MAX = require_lib75();
     var MAX_LN = require_lib99();
@@ -6965,7 +6965,7 @@ var require_igamma_final = __commonJS({
         invert = !invert;
         evalMethod = 7;
       } else if (x < 0.5) {
-        if (-0.4 / ln8(x) < a) {
+        if (-0.4 / ln9(x) < a) {
           evalMethod = 2;
         } else {
           evalMethod = 3;
@@ -7088,8 +7088,8 @@ var require_main78 = __commonJS({
   "node_modules/@stdlib/math-base-special-gammainc/lib/main.js"(exports, module) {
     "use strict";
     var gammaln = require_lib98();
-    var exp8 = require_lib58();
-    var ln8 = require_lib95();
+    var exp9 = require_lib58();
+    var ln9 = require_lib95();
     var SQRT_TWO_PI = require_lib87();
     var MAX_LN = require_lib99();
     var PINF = require_lib31();
@@ -7109,32 +7109,32 @@ var require_main78 = __commonJS({
       invert = upper;
       if (a >= FLOAT64_MAX_NTH_FACTORIAL && !normalized) {
         if (invert && a * 4 < x) {
-          result = a * ln8(x) - x;
-          result += ln8(upperGammaFraction(a, x));
+          result = a * ln9(x) - x;
+          result += ln9(upperGammaFraction(a, x));
         } else if (!invert && a > 4 * x) {
-          result = a * ln8(x) - x;
+          result = a * ln9(x) - x;
           initValue = 0;
-          result += ln8(lowerGammaSeries(a, x, initValue) / a);
+          result += ln9(lowerGammaSeries(a, x, initValue) / a);
         } else {
           result = igammaFinal(x, a, true, invert);
           if (result === 0) {
             if (invert) {
               result = 1 + 1 / (12 * a) + 1 / (288 * a * a);
-              result = ln8(result) - a + (a - 0.5) * ln8(a);
-              result += ln8(SQRT_TWO_PI);
+              result = ln9(result) - a + (a - 0.5) * ln9(a);
+              result += ln9(SQRT_TWO_PI);
             } else {
-              result = a * ln8(x) - x;
+              result = a * ln9(x) - x;
               initValue = 0;
-              result += ln8(lowerGammaSeries(a, x, initValue) / a);
+              result += ln9(lowerGammaSeries(a, x, initValue) / a);
             }
           } else {
-            result = ln8(result) + gammaln(a);
+            result = ln9(result) + gammaln(a);
           }
         }
         if (result > MAX_LN) {
           return PINF;
         }
-        return exp8(result);
+        return exp9(result);
       }
       return igammaFinal(x, a, normalized, invert);
     }
@@ -7155,29 +7155,29 @@ var require_lib115 = __commonJS({
 var require_full_igamma_prefix2 = __commonJS({
   "node_modules/@stdlib/math-base-special-kernel-betainc/lib/full_igamma_prefix.js"(exports, module) {
     "use strict";
-    var exp8 = require_lib58();
+    var exp9 = require_lib58();
     var pow = require_lib67();
-    var ln8 = require_lib95();
+    var ln9 = require_lib95();
     var MAX_LN = require_lib99();
     var MIN_LN = require_lib105();
     function fullIGammaPrefix(a, z) {
       var prefix;
       var alz;
-      alz = a * ln8(z);
+      alz = a * ln9(z);
       if (z >= 1) {
         if (alz < MAX_LN && -z > MIN_LN) {
-          prefix = pow(z, a) * exp8(-z);
+          prefix = pow(z, a) * exp9(-z);
         } else if (a >= 1) {
-          prefix = pow(z / exp8(z / a), a);
+          prefix = pow(z / exp9(z / a), a);
         } else {
-          prefix = exp8(alz - z);
+          prefix = exp9(alz - z);
         }
       } else if (alz > MIN_LN) {
-        prefix = pow(z, a) * exp8(-z);
+        prefix = pow(z, a) * exp9(-z);
       } else if (z / a < MAX_LN) {
-        prefix = pow(z / exp8(z / a), a);
+        prefix = pow(z / exp9(z / a), a);
       } else {
-        prefix = exp8(alz - z);
+        prefix = exp9(alz - z);
       }
       return prefix;
     }
@@ -7195,11 +7195,11 @@ var require_regularized_gamma_prefix = __commonJS({
     var log1p = require_lib38();
     var sqrt = require_lib39();
     var abs = require_lib42();
-    var exp8 = require_lib58();
+    var exp9 = require_lib58();
     var pow = require_lib67();
     var max = require_lib72();
     var min = require_lib74();
-    var ln8 = require_lib95();
+    var ln9 = require_lib95();
     var MAX_LN = require_lib99();
     var MIN_LN = require_lib105();
     var G = require_lib93();
@@ -7216,32 +7216,32 @@ var require_regularized_gamma_prefix = __commonJS({
       d = (z - a - G + 0.5) / agh;
       if (a < 1) {
         if (z <= MIN_LN) {
-          return exp8(a * ln8(z) - z - gammaln(a));
+          return exp9(a * ln9(z) - z - gammaln(a));
         }
-        return pow(z, a) * exp8(-z) / gamma2(a);
+        return pow(z, a) * exp9(-z) / gamma2(a);
       }
       if (abs(d * d * a) <= 100 && a > 150) {
         prefix = a * (log1p(d) - d) + z * (0.5 - G) / agh;
-        prefix = exp8(prefix);
+        prefix = exp9(prefix);
       } else {
-        alz = a * ln8(z / agh);
+        alz = a * ln9(z / agh);
         amz = a - z;
         if (min(alz, amz) <= MIN_LN || max(alz, amz) >= MAX_LN) {
           amza = amz / a;
           if (min(alz, amz) / 2 > MIN_LN && max(alz, amz) / 2 < MAX_LN) {
-            sq = pow(z / agh, a / 2) * exp8(amz / 2);
+            sq = pow(z / agh, a / 2) * exp9(amz / 2);
             prefix = sq * sq;
           } else if (min(alz, amz) / 4 > MIN_LN && max(alz, amz) / 4 < MAX_LN && z > a) {
-            sq = pow(z / agh, a / 4) * exp8(amz / 4);
+            sq = pow(z / agh, a / 4) * exp9(amz / 4);
             prefix = sq * sq;
             prefix *= prefix;
           } else if (amza > MIN_LN && amza < MAX_LN) {
-            prefix = pow(z * exp8(amza) / agh, a);
+            prefix = pow(z * exp9(amza) / agh, a);
           } else {
-            prefix = exp8(alz + amz);
+            prefix = exp9(alz + amz);
           }
         } else {
-          prefix = pow(z / agh, a) * exp8(amz);
+          prefix = pow(z / agh, a) * exp9(amz);
         }
       }
       prefix *= sqrt(agh / E) / lanczosSumExpGScaled(a);
@@ -7261,7 +7261,7 @@ var require_beta_small_b_large_a_series = __commonJS({
     var log1p = require_lib38();
     var abs = require_lib42();
     var pow = require_lib67();
-    var ln8 = require_lib95();
+    var ln9 = require_lib95();
     var MIN_VALUE = require_lib53();
     var EPSILON = require_lib69();
     var fullIGammaPrefix = require_full_igamma_prefix2();
@@ -7291,7 +7291,7 @@ var require_beta_small_b_large_a_series = __commonJS({
       if (y < 0.35) {
         lx = log1p(-y);
       } else {
-        lx = ln8(x);
+        lx = ln9(x);
       }
       u = -t * lx;
       h = regularizedGammaPrefix(b, u);
@@ -7421,10 +7421,10 @@ var require_ibeta_power_terms = __commonJS({
     var log1p = require_lib38();
     var sqrt = require_lib39();
     var abs = require_lib42();
-    var exp8 = require_lib58();
+    var exp9 = require_lib58();
     var pow = require_lib67();
     var min = require_lib74();
-    var ln8 = require_lib95();
+    var ln9 = require_lib95();
     var MAX_LN = require_lib99();
     var MIN_LN = require_lib105();
     var G = require_lib93();
@@ -7460,12 +7460,12 @@ var require_ibeta_power_terms = __commonJS({
       if (minabs(l1, l2) < 0.2) {
         if (l1 * l2 > 0 || min(a, b) < 1) {
           if (abs(l1) < 0.1) {
-            result *= exp8(a * log1p(l1));
+            result *= exp9(a * log1p(l1));
           } else {
             result *= pow(x * cgh / agh, a);
           }
           if (abs(l2) < 0.1) {
-            result *= exp8(b * log1p(l2));
+            result *= exp9(b * log1p(l2));
           } else {
             result *= pow(y * cgh / bgh, b);
           }
@@ -7476,65 +7476,65 @@ var require_ibeta_power_terms = __commonJS({
             l3 = expm1(ratio * log1p(l2));
             l3 = l1 + l3 + l3 * l1;
             l3 = a * log1p(l3);
-            result *= exp8(l3);
+            result *= exp9(l3);
           } else {
             l3 = expm1(log1p(l1) / ratio);
             l3 = l2 + l3 + l3 * l2;
             l3 = b * log1p(l3);
-            result *= exp8(l3);
+            result *= exp9(l3);
           }
         } else if (abs(l1) < abs(l2)) {
-          l = a * log1p(l1) + b * ln8(y * cgh / bgh);
+          l = a * log1p(l1) + b * ln9(y * cgh / bgh);
           if (l <= MIN_LN || l >= MAX_LN) {
-            l += ln8(result);
+            l += ln9(result);
             if (l >= MAX_LN) {
               return NaN;
             }
-            result = exp8(l);
+            result = exp9(l);
           } else {
-            result *= exp8(l);
+            result *= exp9(l);
           }
         } else {
-          l = b * log1p(l2) + a * ln8(x * cgh / agh);
+          l = b * log1p(l2) + a * ln9(x * cgh / agh);
           if (l <= MIN_LN || l >= MAX_LN) {
-            l += ln8(result);
+            l += ln9(result);
             if (l >= MAX_LN) {
               return NaN;
             }
-            result = exp8(l);
+            result = exp9(l);
           } else {
-            result *= exp8(l);
+            result *= exp9(l);
           }
         }
       } else {
         b1 = x * cgh / agh;
         b2 = y * cgh / bgh;
-        l1 = a * ln8(b1);
-        l2 = b * ln8(b2);
+        l1 = a * ln9(b1);
+        l2 = b * ln9(b2);
         if (l1 >= MAX_LN || l1 <= MIN_LN || l2 >= MAX_LN || l2 <= MIN_LN) {
           if (a < b) {
             p1 = pow(b2, b / a);
-            l3 = a * (ln8(b1) + ln8(p1));
+            l3 = a * (ln9(b1) + ln9(p1));
             if (l3 < MAX_LN && l3 > MIN_LN) {
               result *= pow(p1 * b1, a);
             } else {
-              l2 += l1 + ln8(result);
+              l2 += l1 + ln9(result);
               if (l2 >= MAX_LN) {
                 return NaN;
               }
-              result = exp8(l2);
+              result = exp9(l2);
             }
           } else {
             p1 = pow(b1, a / b);
-            l3 = (ln8(p1) + ln8(b2)) * b;
+            l3 = (ln9(p1) + ln9(b2)) * b;
             if (l3 < MAX_LN && l3 > MIN_LN) {
               result *= pow(p1 * b2, b);
             } else {
-              l2 += l1 + ln8(result);
+              l2 += l1 + ln9(result);
               if (l2 >= MAX_LN) {
                 return NaN;
               }
-              result = exp8(l2);
+              result = exp9(l2);
             }
           }
         } else {
@@ -7899,9 +7899,9 @@ var require_ibeta_series = __commonJS({
     var sumSeries = require_lib103();
     var log1p = require_lib38();
     var sqrt = require_lib39();
-    var exp8 = require_lib58();
+    var exp9 = require_lib58();
     var pow = require_lib67();
-    var ln8 = require_lib95();
+    var ln9 = require_lib95();
     var MIN_VALUE = require_lib53();
     var MAX_LN = require_lib99();
     var MIN_LN = require_lib105();
@@ -7938,11 +7938,11 @@ var require_ibeta_series = __commonJS({
         bgh = b + G - 0.5;
         cgh = c + G - 0.5;
         result = lanczosSumExpGScaled(c) / (lanczosSumExpGScaled(a) * lanczosSumExpGScaled(b));
-        l1 = ln8(cgh / bgh) * (b - 0.5);
-        l2 = ln8(x * cgh / agh) * a;
+        l1 = ln9(cgh / bgh) * (b - 0.5);
+        l2 = ln9(x * cgh / agh) * a;
         if (l1 > MIN_LN && l1 < MAX_LN && l2 > MIN_LN && l2 < MAX_LN) {
           if (a * b < bgh * 10) {
-            result *= exp8((b - 0.5) * log1p(a / bgh));
+            result *= exp9((b - 0.5) * log1p(a / bgh));
           } else {
             result *= pow(cgh / bgh, b - 0.5);
           }
@@ -7952,11 +7952,11 @@ var require_ibeta_series = __commonJS({
             out[1] = result * pow(y, b);
           }
         } else {
-          result = ln8(result) + l1 + l2 + (ln8(agh) - 1) / 2;
+          result = ln9(result) + l1 + l2 + (ln9(agh) - 1) / 2;
           if (out) {
-            out[1] = exp8(result + b * ln8(y));
+            out[1] = exp9(result + b * ln9(y));
           }
-          result = exp8(result);
+          result = exp9(result);
         }
       } else {
         result = pow(x, a);
@@ -7983,7 +7983,7 @@ var require_assign3 = __commonJS({
     var asin = require_lib41();
     var beta = require_lib70();
     var sqrt = require_lib39();
-    var exp8 = require_lib58();
+    var exp9 = require_lib58();
     var pow = require_lib67();
     var max = require_lib72();
     var min = require_lib74();
@@ -8102,7 +8102,7 @@ var require_assign3 = __commonJS({
         }
         out[i1] = a * pow(x, a - 1);
         if (y < 0.5) {
-          p = upper ? -expm1(a * log1p(-y)) : exp8(a * log1p(-y));
+          p = upper ? -expm1(a * log1p(-y)) : exp9(a * log1p(-y));
         } else {
           p = upper ? -(pow(x, a) - 1) : pow(x, a);
         }
@@ -8503,7 +8503,7 @@ var require_main85 = __commonJS({
     "use strict";
     var isnan = require_lib6();
     var sqrt = require_lib39();
-    var ln8 = require_lib95();
+    var ln9 = require_lib95();
     var PINF = require_lib31();
     var NINF = require_lib33();
     var rationalFcnR1 = require_rational_p1q12();
@@ -8551,12 +8551,12 @@ var require_main85 = __commonJS({
         return sign * (g * Y1 + g * r);
       }
       if (q >= 0.25) {
-        g = sqrt(-2 * ln8(q));
+        g = sqrt(-2 * ln9(q));
         q -= 0.25;
         r = rationalFcnR2(q);
         return sign * (g / (Y2 + r));
       }
-      q = sqrt(-ln8(q));
+      q = sqrt(-ln9(q));
       if (q < 3) {
         qs = q - 1.125;
         r = rationalFcnR3(qs);
@@ -8906,7 +8906,7 @@ var require_erfcx_y100 = __commonJS({
 var require_main86 = __commonJS({
   "node_modules/@stdlib/math-base-special-erfcx/lib/main.js"(exports, module) {
     "use strict";
-    var exp8 = require_lib58();
+    var exp9 = require_lib58();
     var PINF = require_lib31();
     var isnan = require_lib6();
     var erfcxY100 = require_erfcx_y100();
@@ -8931,9 +8931,9 @@ var require_main86 = __commonJS({
       }
       x2 = x * x;
       if (x < -6.1) {
-        return 2 * exp8(x2);
+        return 2 * exp9(x2);
       }
-      return 2 * exp8(x2) - erfcxY100(400 / (4 - x));
+      return 2 * exp9(x2) - erfcxY100(400 / (4 - x));
     }
     module.exports = erfcx2;
   }
@@ -9681,6 +9681,113 @@ function noncentralityAt(t, df, p) {
   return findRisingRoot(gap, t - normalQuantile(p) * width, 0.2 * width, 1e-13);
 }
 
+// packages/metrology/src/distributions/studentized-range.ts
+var import_math_base_special_exp7 = __toESM(require_lib58(), 1);
+var import_math_base_special_ln8 = __toESM(require_lib95(), 1);
+function studentizedRangeTails(q, groups, df) {
+  if (!(q > 0)) return { lower: 0, upper: 1 };
+  const upper = overSpread((w) => rangeUpperTail(w, groups), q, df);
+  if (upper <= 0.5) return { lower: 1 - upper, upper };
+  const lower = overSpread((w) => rangeCdf(w, groups), q, df);
+  return { lower, upper: 1 - lower };
+}
+function studentizedRangeQuantile(p, groups, df) {
+  const useLower = p <= 0.5;
+  const target = (0, import_math_base_special_ln8.default)(useLower ? p : 1 - p);
+  const gap = (logQ) => {
+    const tails = studentizedRangeTails((0, import_math_base_special_exp7.default)(logQ), groups, df);
+    return useLower ? (0, import_math_base_special_ln8.default)(tails.lower) - target : target - (0, import_math_base_special_ln8.default)(tails.upper);
+  };
+  return (0, import_math_base_special_exp7.default)(findRisingRoot(gap, 1, 0.5, 1e-11));
+}
+function overSpread(tail, q, df) {
+  const height = (u) => {
+    const v = (0, import_math_base_special_exp7.default)(u);
+    const chance = tail(q * v);
+    return chance > 0 ? logChiShape(v, df) + u + (0, import_math_base_special_ln8.default)(chance) : -Infinity;
+  };
+  const step = 1 / Math.sqrt(df);
+  const { peak, top } = climb(height, Math.min(0, (0, import_math_base_special_ln8.default)(10 / q)), step);
+  if (!(top > -700)) return 0;
+  const left = fall(height, peak, top, -step);
+  const right = fall(height, peak, top, step);
+  const towards = (end, count) => Array.from({ length: count }, (_, i) => peak + (end - peak) * squared((i + 1) / count));
+  const points = [...towards(left, 8).reverse(), peak, ...towards(right, 6)];
+  return chiConstant(df) * (0, import_math_base_special_exp7.default)(top) * integrate((u) => (0, import_math_base_special_exp7.default)(height(u) - top), points);
+}
+function climb(height, from, width) {
+  let peak = from;
+  let top = height(from);
+  for (let step = width; step > 0.05 * width; ) {
+    const next = [peak - step, peak + step].map((u) => ({ u, height: height(u) }));
+    const best = next.reduce((a, b) => b.height > a.height ? b : a);
+    if (best.height > top) {
+      peak = best.u;
+      top = best.height;
+      step *= 2;
+    } else {
+      step /= 2;
+    }
+    if (Math.abs(peak) > 700) break;
+  }
+  return { peak, top };
+}
+function fall(height, peak, top, step) {
+  let inner = 0;
+  let outer = step;
+  for (let i = 0; i < 60 && height(peak + outer) > top - 30; i++) {
+    inner = outer;
+    outer *= 2;
+  }
+  for (let i = 0; i < 6; i++) {
+    const middle = 0.5 * (inner + outer);
+    if (height(peak + middle) > top - 30) inner = middle;
+    else outer = middle;
+  }
+  return peak + outer;
+}
+function rangeCdf(w, groups) {
+  const inner = (z) => density(z) * wholePower(between(z, w), groups - 1);
+  return Math.min(1, groups * integrate(inner, largestValue(w)));
+}
+function rangeUpperTail(w, groups) {
+  const inner = (z) => {
+    const all = normalCdf(z);
+    const below2 = normalCdf(z - w);
+    const near = between(z, w);
+    let sum = 0;
+    for (let i = 0, power = 1; i < groups - 1; i++) {
+      sum = sum * near + power;
+      power *= all;
+    }
+    return density(z) * below2 * sum;
+  };
+  return Math.min(1, groups * integrate(inner, largestValue(w)));
+}
+function between(z, w) {
+  if (w < 1e-3) {
+    const middle = z - 0.5 * w;
+    return w * density(middle) * (1 + w * w * (middle * middle - 1) / 24);
+  }
+  return z - w > 0 ? normalCdf(w - z) - normalCdf(-z) : normalCdf(z) - normalCdf(z - w);
+}
+function largestValue(w) {
+  const from = Math.min(-9, 0.5 * w - 9);
+  const to = Math.max(9, 0.5 * w + 9);
+  const count = Math.ceil((to - from) / 1.5);
+  return Array.from({ length: count + 1 }, (_, i) => from + (to - from) * i / count);
+}
+function wholePower(base, power) {
+  let result = 1;
+  for (let square = base, left = power; left > 0; left = Math.floor(left / 2)) {
+    if (left % 2 === 1) result *= square;
+    square *= square;
+  }
+  return result;
+}
+var density = (z) => 0.3989422804014327 * (0, import_math_base_special_exp7.default)(-0.5 * z * z);
+var squared = (value) => value * value;
+
 // packages/metrology/src/statistics/data-checks.ts
 function dataChecks(readings, of, resolution) {
   const deviations = of.deviations();
@@ -10186,7 +10293,7 @@ function readRule(reader) {
 }
 
 // packages/metrology/src/rules/spread-nodes.ts
-var import_math_base_special_exp7 = __toESM(require_lib58(), 1);
+var import_math_base_special_exp8 = __toESM(require_lib58(), 1);
 var panelCount = 8;
 function spreadSupport(df) {
   const peak = Math.sqrt((df - 1) / df);
@@ -10221,7 +10328,7 @@ function spreadNodes(df, support, breakPoints) {
     if (half <= 0) continue;
     for (const [node, weight] of nodes) {
       for (const v of [center - half * node, center + half * node]) {
-        result.push({ v, weight: half * weight * constant * (0, import_math_base_special_exp7.default)(logChiShape(v, df)) });
+        result.push({ v, weight: half * weight * constant * (0, import_math_base_special_exp8.default)(logChiShape(v, df)) });
       }
     }
   }
@@ -10981,6 +11088,15 @@ var readers = {
       tails: (x) => betaDistributionTails(x, a, b),
       quantile: (p) => betaQuantile(p, a, b),
       support: [0, 1]
+    };
+  },
+  "studentized-range": (parameters) => {
+    const groups = parameters.integer("groups", { least: 2, most: 1e3 });
+    const df = parameters.number("df", { least: 1, most: 1e8 });
+    return {
+      tails: (q) => studentizedRangeTails(q, groups, df),
+      quantile: (p) => studentizedRangeQuantile(p, groups, df),
+      support: [0, Infinity]
     };
   }
 };
