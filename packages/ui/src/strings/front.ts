@@ -47,8 +47,8 @@ export const frontWords = {
   partner: { supplier: 'Customer', customer: 'Supplier' },
   characteristic: 'Characteristic',
   result: 'Result',
-  clauses: 'Clauses',
-  ofClauses: (met: number, total: number) => `${met} of ${total}`,
+  extent: 'Extent',
+  ofClauses: (met: number, total: number) => `${met} of ${formatCount(total, 'clause')}`,
   safetyClass: 'safety',
   all: (part: string) => `${part}, all characteristics`,
   everything: 'the whole relationship',
@@ -64,7 +64,8 @@ export const frontWords = {
     'confirm-characteristics': 'Confirm characteristics',
   } satisfies Record<front.WaitingAct, string>,
   agreement: (number: string) => `agreement ${number}`,
-  study: (code: string) => `study ${code}`,
+  study: (code: string, gauge: string) =>
+    code.includes(gauge) ? `study ${code}` : `study ${code}, ${gauge}`,
   counted: {
     'take-readings': (count: number) => formatCount(count, 'reading'),
     'confirm-characteristics': (count: number) => formatCount(count, 'characteristic'),

@@ -6,23 +6,23 @@ import {
   withdrawVersion,
   type Agreement,
 } from '../../contract/agreements'
-import { approverOf, memberWith, workerOf, type Base } from './base'
-import { characteristicKey, relationshipOf, type SeededCharacteristics } from './parts'
+import { approverOf, memberWith, relationshipOf, workerOf, type Base } from './base'
+import { characteristicName, type Ids } from './ids'
 import type { DemoAgreement, DemoStep, DemoVersion } from './scenario.agreements'
 import { agreements } from './scenario.agreements'
 import type { Stage } from './stage'
 import type { Scene } from './scenes'
 
 /** The scenes of every negotiation, to be played in the order of their days. */
-export function agreementScenes(stage: Stage, base: Base, characteristics: SeededCharacteristics): Scene[] {
+export function agreementScenes(stage: Stage, base: Base, ids: Ids): Scene[] {
   return agreements.flatMap((agreement) => {
-    const scope = scopeOf(base, characteristics, agreement)
     // The answer of each act carries what the next one needs.
     let current: Agreement | undefined
     return agreement.versions.flatMap((version) =>
       version.steps.map((step): Scene => ({
         daysAgo: step.daysAgo,
         play: async () => {
+          const scope = scopeOf(base, ids, agreement)
           current = await playStep(stage, base, { agreement, version, step, scope, current })
         },
       })),
@@ -74,16 +74,14 @@ async function playStep(
 
 function scopeOf(
   base: Base,
-  characteristics: SeededCharacteristics,
+  ids: Ids,
   { supplier, customer, part, characteristic }: DemoAgreement,
 ): Played['scope'] {
   const relationshipId = relationshipOf(base, supplier, customer).id
-  if (!part) return { relationshipId, partId: null, characteristicId: null }
-  const inPart = characteristics.get(characteristicKey(part, characteristic ?? 1))
-  if (!inPart) throw new Error(`${part} has no characteristic ${characteristic ?? 1}.`)
   return {
     relationshipId,
-    partId: inPart.partId,
-    characteristicId: characteristic === undefined ? null : inPart.id,
+    partId: part ? ids.get('part', part) : null,
+    characteristicId:
+      part && characteristic ? ids.get('characteristic', characteristicName(part, characteristic)) : null,
   }
 }

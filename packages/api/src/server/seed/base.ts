@@ -126,3 +126,14 @@ export function memberWith(organisation: SeededOrganisation, ...roles: Role[]): 
 
 export const approverOf: Record<Side, Role> = { supplier: 'supplier-approver', customer: 'customer-approver' }
 export const workerOf: Record<Side, Role> = { supplier: 'gauge-engineer', customer: 'quality-representative' }
+
+/** The relationship of two organisations of the scenario. */
+export function relationshipOf(
+  base: Base,
+  supplier: OrganisationKey,
+  customer: OrganisationKey,
+): SeededRelationship {
+  const found = base.relationships.find((each) => each.supplier === supplier && each.customer === customer)
+  if (!found) throw new Error(`${supplier} does not supply ${customer}.`)
+  return found
+}

@@ -1,112 +1,93 @@
 import { addGaugeCalibration, addStandardCalibration } from '../../contract/calibrations'
 import { createGauge } from '../../contract/gauges'
 import { createStandard } from '../../contract/standards'
-import { createTask } from '../../contract/tasks'
-import { memberWith, type Base, type SeededOrganisation } from './base'
+import { memberWith, type Base } from './base'
 import { certificate } from './certificate'
-import { characteristicKey, type SeededCharacteristic, type SeededCharacteristics } from './parts'
-import { gauges, tasks, type DemoGauge } from './scenario.gauges'
+import { characteristicName, type Ids } from './ids'
+import type { OrganisationKey } from './scenario.organisations'
+import { gauges, type DemoGauge } from './scenario.gauges'
 import { standardFor } from './scenario.standards'
-import type { Stage } from './stage'
-
-export interface SeededTask {
-  id: string
-  characteristic: SeededCharacteristic
-  gauge: DemoGauge & { id: string }
-  /** The reference standard that studies of this task use. */
-  standard: { id: string; certifiedValue: string }
-}
-
-/** Tasks by `part number/drawing number/gauge code`. */
-export type SeededTasks = ReadonlyMap<string, SeededTask>
+import type { Scene } from './scenes'
+import type { Act, Stage } from './stage'
+import { demoTasks, type DemoTask } from './tasks'
 
 const laboratory = 'Harrowgate Calibration Laboratory'
+/** Gauges and standards are entered on this day with the calibrations they had; later ones when they come. */
+const entered = 345
 
-/** Gauges and reference standards with calibrations and certificates, and the measuring tasks they serve. */
-export async function seedGauges(
-  stage: Stage,
-  base: Base,
-  characteristics: SeededCharacteristics,
-): Promise<SeededTasks> {
-  const ids = new Map<string, DemoGauge & { id: string }>()
-  for (const gauge of gauges) ids.set(gauge.code, { ...gauge, id: await seedGauge(stage, base, gauge) })
-  const seeded = new Map<string, SeededTask>()
-  const standards = new Map<string, { id: string; certifiedValue: string }>()
-  for (const [partNumber, number, gaugeCode, processStep] of tasks) {
-    const characteristic = characteristics.get(characteristicKey(partNumber, number))
-    const gauge = ids.get(gaugeCode)
-    if (!characteristic || !gauge) throw new Error(`${partNumber}/${number}/${gaugeCode} names nothing.`)
-    const owner = base.organisations[gauge.owner]
-    const act = stage.as('supplier', owner, memberWith(owner, 'gauge-engineer'))
-    stage.daysAgo(320, 10)
-    const { id } = await act(createTask, {
-      body: {
-        characteristicId: characteristic.id,
-        gaugeId: gauge.id,
-        site: owner.name === 'Tarnfield Turned Parts' ? 'Turning shop' : null,
-        processStep,
-      },
-    })
-    const key = `${owner.id}/${characteristicKey(partNumber, number)}`
-    const standard = standards.get(key) ?? (await seedStandard(stage, owner, characteristic))
-    standards.set(key, standard)
-    seeded.set(taskKey(partNumber, number, gaugeCode), { id, characteristic, gauge, standard })
-  }
-  return seeded
+const engineerOf = (stage: Stage, base: Base, key: OrganisationKey): Act => {
+  const owner = base.organisations[key]
+  return stage.as('supplier', owner, memberWith(owner, 'gauge-engineer'))
 }
 
-export const taskKey = (partNumber: string, number: number, gaugeCode: string): string =>
-  `${characteristicKey(partNumber, number)}/${gaugeCode}`
-
-async function seedGauge(stage: Stage, base: Base, gauge: DemoGauge): Promise<string> {
-  const owner = base.organisations[gauge.owner]
-  const act = stage.as('supplier', owner, memberWith(owner, 'gauge-engineer'))
-  stage.daysAgo(350, 9)
-  const { id } = await act(createGauge, {
-    body: {
-      code: gauge.code,
-      name: gauge.name,
-      resolution: gauge.resolution,
-      unit: gauge.unit,
-      site: Object.keys(owner.sites)[0] ?? null,
-    },
+/** Gauges with their calibrations and certificates. */
+export const gaugeScenes = (stage: Stage, base: Base, ids: Ids): Scene[] =>
+  gauges.flatMap((gauge) => {
+    const act = engineerOf(stage, base, gauge.owner)
+    const { code, name, resolution, unit, site } = gauge
+    const register = async () => {
+      const { id } = await act(createGauge, { body: { code, name, resolution, unit, site } })
+      ids.set('gauge', code, id)
+    }
+    return [
+      { daysAgo: entered, play: register },
+      ...calibrations(stage, code, calibratedDaysAgo(gauge), gauge.intervalDays, (input) =>
+        act(addGaugeCalibration, { params: { gaugeId: ids.get('gauge', code) }, ...input }),
+      ),
+    ]
   })
-  // The one before, so that what was measured in between was in calibration too, and the one that counts.
-  for (const ago of [gauge.calibratedDaysAgo + gauge.intervalDays, gauge.calibratedDaysAgo])
-    await act(addGaugeCalibration, {
-      params: { gaugeId: id },
-      ...calibration(stage, gauge.code, ago, gauge.intervalDays),
-    })
-  return id
+
+/** As many as reach back to the first study, so that what was measured in between was in calibration too. */
+function calibratedDaysAgo({ calibratedDaysAgo: last, intervalDays }: DemoGauge): number[] {
+  const all = [last]
+  while ((all[0] ?? 0) < entered) all.unshift((all[0] ?? 0) + intervalDays)
+  return all
 }
 
-async function seedStandard(
+/** One reference standard for each characteristic that is measured, with its calibrations. */
+export function standardScenes(stage: Stage, base: Base, ids: Ids): Scene[] {
+  const byCharacteristic = new Map(demoTasks(base).map((task) => [standardName(task), task]))
+  return [...byCharacteristic].flatMap(([name, task]): Scene[] => {
+    const act = engineerOf(stage, base, task.gauge.owner)
+    const standard = standardFor(task)
+    const register = async () => {
+      const { id } = await act(createStandard, { body: standard })
+      ids.set('standard', name, id)
+    }
+    return [
+      { daysAgo: entered, play: register },
+      ...calibrations(stage, standard.code, [700, 180], 730, (input) =>
+        act(addStandardCalibration, { params: { standardId: ids.get('standard', name) }, ...input }),
+      ),
+    ]
+  })
+}
+
+export const standardName = ({ partNumber, limits: [number] }: DemoTask): string =>
+  characteristicName(partNumber, number)
+
+/** Calibrations, each with a certificate of one page, entered on the day they came back. */
+const calibrations = (
   stage: Stage,
-  owner: SeededOrganisation,
-  characteristic: SeededCharacteristic,
-): Promise<{ id: string; certifiedValue: string }> {
-  const act = stage.as('supplier', owner, memberWith(owner, 'gauge-engineer'))
-  const standard = standardFor(characteristic)
-  const { id } = await act(createStandard, { body: standard })
-  for (const ago of [700, 180])
-    await act(addStandardCalibration, {
-      params: { standardId: id },
-      ...calibration(stage, standard.code, ago, 730),
-    })
-  return { id, certifiedValue: standard.certifiedValue }
-}
-
-/** A calibration with a certificate of one page. */
-function calibration(stage: Stage, code: string, daysAgo: number, intervalDays: number) {
-  const number = `HCL ${stage.day(daysAgo).replaceAll('-', '')} ${code}`
-  // Entered on the day it came back, or with the gauge where that was earlier.
-  stage.daysAgo(Math.min(daysAgo, 340), 15)
-  const body = {
-    certificateNumber: number,
-    laboratory,
-    calibratedOn: stage.day(daysAgo),
-    dueOn: stage.day(daysAgo - intervalDays),
-    foundWithinLimits: true,
-  }
-  return { body, file: { name: `certificate ${code}.pdf`, bytes: certificate(number, laboratory, body) } }
-}
+  code: string,
+  daysAgo: readonly number[],
+  intervalDays: number,
+  enter: (input: { body: unknown; file: { name: string; bytes: Buffer } }) => Promise<unknown>,
+): Scene[] =>
+  daysAgo.map((ago) => ({
+    daysAgo: Math.min(ago, entered),
+    play: async () => {
+      const certificateNumber = `HCL ${stage.day(ago).replaceAll('-', '')} ${code}`
+      const body = {
+        certificateNumber,
+        laboratory,
+        calibratedOn: stage.day(ago),
+        dueOn: stage.day(ago - intervalDays),
+        foundWithinLimits: true,
+      }
+      await enter({
+        body,
+        file: { name: `certificate ${code}.pdf`, bytes: certificate(certificateNumber, laboratory, body) },
+      })
+    },
+  }))

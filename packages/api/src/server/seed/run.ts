@@ -1,19 +1,22 @@
 import { agreementScenes } from './agreements'
 import type { Base } from './base'
-import { seedGauges } from './gauges'
-import { seedParts } from './parts'
+import { gaugeScenes, standardScenes } from './gauges'
+import { Ids } from './ids'
+import { partScenes } from './parts'
 import { inOrder } from './scenes'
 import type { Stage } from './stage'
 import { studyScenes } from './studies'
+import { taskScenes } from './tasks'
 
-/** Plays the demonstration from its beginning a year ago to today. */
+/** Plays the demonstration from its beginning a year ago to today, in the order of its days. */
 export async function playDemonstration(stage: Stage, base: Base): Promise<void> {
-  const characteristics = await seedParts(stage, base)
-  const tasks = await seedGauges(stage, base, characteristics)
-  const scenes = [...agreementScenes(stage, base, characteristics), ...studyScenes(stage, base, tasks)]
+  const ids = new Ids()
+  const scenes = [partScenes, gaugeScenes, standardScenes, taskScenes, agreementScenes, studyScenes].flatMap(
+    (scenesOf) => scenesOf(stage, base, ids),
+  )
   let day = Infinity
   for (const scene of inOrder(scenes)) {
-    if (scene.daysAgo === day) stage.pass(20)
+    if (scene.daysAgo === day) stage.pass(5)
     else stage.daysAgo(scene.daysAgo)
     day = scene.daysAgo
     await scene.play()

@@ -6,6 +6,8 @@ export interface DemoGauge {
   name: string
   resolution: string
   unit: string
+  /** Where it stands. */
+  site: string
   /** True values of the demonstration, in the gauge's unit: what its readings are drawn from. */
   bias: number
   standardDeviation: number
@@ -19,6 +21,7 @@ export const gauges: DemoGauge[] = [
   {
     owner: 'tarnfield',
     code: 'BG-14',
+    site: 'Turning shop',
     name: 'Bore gauge',
     resolution: '0.0005',
     unit: 'mm',
@@ -30,6 +33,7 @@ export const gauges: DemoGauge[] = [
   {
     owner: 'tarnfield',
     code: 'BG-11',
+    site: 'Turning shop',
     name: 'Bore gauge',
     resolution: '0.001',
     unit: 'mm',
@@ -41,6 +45,7 @@ export const gauges: DemoGauge[] = [
   {
     owner: 'tarnfield',
     code: 'AG-02',
+    site: 'Grinding shop',
     name: 'Air gauge',
     resolution: '0.0001',
     unit: 'mm',
@@ -52,6 +57,7 @@ export const gauges: DemoGauge[] = [
   {
     owner: 'tarnfield',
     code: 'MM-31',
+    site: 'Turning shop',
     name: 'Micrometer 25–50 mm',
     resolution: '0.001',
     unit: 'mm',
@@ -63,6 +69,7 @@ export const gauges: DemoGauge[] = [
   {
     owner: 'tarnfield',
     code: 'MM-07',
+    site: 'Turning shop',
     name: 'Micrometer 0–25 mm',
     resolution: '0.001',
     unit: 'mm',
@@ -74,6 +81,7 @@ export const gauges: DemoGauge[] = [
   {
     owner: 'tarnfield',
     code: 'VC-22',
+    site: 'Turning shop',
     name: 'Vernier caliper 200 mm',
     resolution: '0.01',
     unit: 'mm',
@@ -85,6 +93,7 @@ export const gauges: DemoGauge[] = [
   {
     owner: 'tarnfield',
     code: 'CM-1',
+    site: 'Measuring room',
     name: 'Coordinate measuring machine',
     resolution: '0.0001',
     unit: 'mm',
@@ -96,6 +105,7 @@ export const gauges: DemoGauge[] = [
   {
     owner: 'tarnfield',
     code: 'SP-4',
+    site: 'Turning shop',
     name: 'Spline fixture with pins',
     resolution: '0.001',
     unit: 'mm',
@@ -107,6 +117,7 @@ export const gauges: DemoGauge[] = [
   {
     owner: 'tarnfield',
     code: 'SR-2',
+    site: 'Measuring room',
     name: 'Surface roughness tester',
     resolution: '0.01',
     unit: 'µm',
@@ -118,6 +129,7 @@ export const gauges: DemoGauge[] = [
   {
     owner: 'tarnfield',
     code: 'BA-3',
+    site: 'Measuring room',
     name: 'Laboratory balance',
     resolution: '0.01',
     unit: 'g',
@@ -129,6 +141,7 @@ export const gauges: DemoGauge[] = [
   {
     owner: 'tarnfield',
     code: 'TW-5',
+    site: 'Measuring room',
     name: 'Torque transducer',
     resolution: '0.05',
     unit: 'N·m',
@@ -140,6 +153,7 @@ export const gauges: DemoGauge[] = [
   {
     owner: 'osmere',
     code: 'LT-2',
+    site: 'Machining line 1',
     name: 'Leak tester',
     resolution: '0.01',
     unit: 'ml/min',
@@ -151,6 +165,7 @@ export const gauges: DemoGauge[] = [
   {
     owner: 'osmere',
     code: 'BG-7',
+    site: 'Machining line 1',
     name: 'Three-point bore gauge',
     resolution: '0.001',
     unit: 'mm',
@@ -162,6 +177,7 @@ export const gauges: DemoGauge[] = [
   {
     owner: 'osmere',
     code: 'CM-3',
+    site: 'Machining line 2',
     name: 'Coordinate measuring machine',
     resolution: '0.0001',
     unit: 'mm',
@@ -173,6 +189,7 @@ export const gauges: DemoGauge[] = [
   {
     owner: 'osmere',
     code: 'DG-9',
+    site: 'Machining line 2',
     name: 'Depth gauge',
     resolution: '0.01',
     unit: 'mm',
@@ -184,6 +201,7 @@ export const gauges: DemoGauge[] = [
   {
     owner: 'osmere',
     code: 'VC-3',
+    site: 'Machining line 2',
     name: 'Vernier caliper 150 mm',
     resolution: '0.01',
     unit: 'mm',
@@ -195,6 +213,7 @@ export const gauges: DemoGauge[] = [
   {
     owner: 'velloy',
     code: 'FT-1',
+    site: 'Testing',
     name: 'Spring force tester 500 N',
     resolution: '0.1',
     unit: 'N',
@@ -206,6 +225,7 @@ export const gauges: DemoGauge[] = [
   {
     owner: 'velloy',
     code: 'FT-4',
+    site: 'Testing',
     name: 'Spring force tester 50 N',
     resolution: '0.01',
     unit: 'N',
@@ -217,6 +237,7 @@ export const gauges: DemoGauge[] = [
   {
     owner: 'velloy',
     code: 'HG-6',
+    site: 'Coiling',
     name: 'Height gauge',
     resolution: '0.01',
     unit: 'mm',
@@ -228,6 +249,7 @@ export const gauges: DemoGauge[] = [
   {
     owner: 'velloy',
     code: 'MM-2',
+    site: 'Coiling',
     name: 'Micrometer 0–25 mm',
     resolution: '0.001',
     unit: 'mm',

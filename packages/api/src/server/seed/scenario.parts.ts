@@ -33,8 +33,8 @@ export const parts: DemoPart[] = [
     name: 'Output shaft',
     revision: 'C',
     characteristics: [
-      [1, 'Bore Ø 24.000', '24.000', '23.975', '24.025', 'mm', 'significant'],
-      [2, 'Bearing seat Ø 35.000', '35.000', '34.989', '35.011', 'mm', 'safety'],
+      [1, 'Bore Ø', '24.000', '23.975', '24.025', 'mm', 'significant'],
+      [2, 'Bearing seat Ø', '35.000', '34.989', '35.011', 'mm', 'safety'],
       [3, 'Overall length', '182.50', '182.35', '182.65', 'mm', 'ordinary'],
       [4, 'Spline over pins', '28.640', '28.600', '28.680', 'mm', 'significant'],
       [5, 'Shoulder width', '12.00', '11.95', '12.05', 'mm', 'ordinary'],
@@ -48,7 +48,7 @@ export const parts: DemoPart[] = [
     name: 'Spacer ring',
     revision: 'A',
     characteristics: [
-      [1, 'Bore Ø 31.500', '31.500', '31.480', '31.520', 'mm', 'significant'],
+      [1, 'Bore Ø', '31.500', '31.480', '31.520', 'mm', 'significant'],
       [2, 'Width', '8.000', '7.990', '8.010', 'mm', 'ordinary'],
       [3, 'Roughness Ra', '', '', '1.6', 'µm', 'ordinary'],
     ],
@@ -61,8 +61,8 @@ export const parts: DemoPart[] = [
     name: 'Bearing carrier',
     revision: 'B',
     characteristics: [
-      [1, 'Bearing bore Ø 52.000', '52.000', '51.985', '52.015', 'mm', 'safety'],
-      [2, 'Bolt circle Ø 88', '88.00', '87.90', '88.10', 'mm', 'ordinary'],
+      [1, 'Bearing bore Ø', '52.000', '51.985', '52.015', 'mm', 'safety'],
+      [2, 'Bolt circle Ø', '88.00', '87.90', '88.10', 'mm', 'ordinary'],
       [3, 'Flange thickness', '14.20', '14.10', '14.30', 'mm', 'ordinary'],
     ],
   },
@@ -75,7 +75,7 @@ export const parts: DemoPart[] = [
     revision: 'D',
     characteristics: [
       [1, 'Leak rate', '', '', '2.0', 'ml/min', 'safety'],
-      [2, 'Bearing bore Ø 72.000', '72.000', '71.985', '72.015', 'mm', 'significant'],
+      [2, 'Bearing bore Ø', '72.000', '71.985', '72.015', 'mm', 'significant'],
       [3, 'Dowel distance', '164.00', '163.96', '164.04', 'mm', 'ordinary'],
     ],
   },
@@ -121,8 +121,8 @@ export const parts: DemoPart[] = [
     name: 'Rotor shaft',
     revision: '02',
     characteristics: [
-      [1, 'Seat Ø 30.000', '30.000', '29.993', '30.007', 'mm', 'safety'],
-      [2, 'Seat Ø 25.000', '25.000', '24.993', '25.007', 'mm', 'significant'],
+      [1, 'Seat Ø', '30.000', '29.993', '30.007', 'mm', 'safety'],
+      [2, 'Seat Ø', '25.000', '24.993', '25.007', 'mm', 'significant'],
       [3, 'Thread length', '22.0', '21.8', '22.2', 'mm', 'ordinary'],
     ],
   },
@@ -134,7 +134,7 @@ export const parts: DemoPart[] = [
     name: 'Balance disc',
     revision: '01',
     characteristics: [
-      [1, 'Bore Ø 30.020', '30.020', '30.010', '30.030', 'mm', 'significant'],
+      [1, 'Bore Ø', '30.020', '30.010', '30.030', 'mm', 'significant'],
       [2, 'Mass', '412.0', '410.0', '414.0', 'g', 'ordinary'],
     ],
   },
@@ -155,7 +155,7 @@ export const parts: DemoPart[] = [
     name: 'Dowel sleeve',
     revision: 'A',
     characteristics: [
-      [1, 'Outside Ø 10.000', '10.000', '9.994', '10.006', 'mm', 'significant'],
+      [1, 'Outside Ø', '10.000', '9.994', '10.006', 'mm', 'significant'],
       [2, 'Length', '16.00', '15.90', '16.10', 'mm', 'ordinary'],
     ],
   },
@@ -167,11 +167,22 @@ export const parts: DemoPart[] = [
     name: 'Plug',
     revision: 'B',
     characteristics: [
-      [1, 'Head Ø 18.00', '18.00', '17.95', '18.05', 'mm', 'ordinary'],
+      [1, 'Head Ø', '18.00', '17.95', '18.05', 'mm', 'ordinary'],
       [2, 'Tightening torque', '24.0', '22.0', '26.0', 'N·m', 'safety'],
     ],
   },
 ]
 
-/** Entered by the supplier and waiting for the customer's confirmation. */
-export const unconfirmed: readonly string[] = ['3310-417/2', 'NV-55-322/2']
+/** Entered by the supplier a few days ago and waiting for the customer's confirmation. */
+export const lately: readonly { number: string; daysAgo: number; characteristic: DemoCharacteristic }[] = [
+  {
+    number: '7741-220',
+    daysAgo: 6,
+    characteristic: [6, 'Chamfer 2 × 45°', '2.0', '1.8', '2.2', 'mm', 'ordinary'],
+  },
+  {
+    number: 'NV-55-310',
+    daysAgo: 3,
+    characteristic: [4, 'Runout of seat', '', '', '0.02', 'mm', 'significant'],
+  },
+]

@@ -101,7 +101,7 @@ export const studies: readonly (readonly [string, number, string, readonly DemoS
     3,
     'SR-2',
     [
-      [160, 25, 'answered'],
+      [26, 25, 'answered'],
       [1, 20, 'registered'],
     ],
   ],
@@ -203,7 +203,7 @@ export const studies: readonly (readonly [string, number, string, readonly DemoS
     'MM-2',
     [
       [195, 25, 'accepted'],
-      [85, 10, 'answered'],
+      [24, 10, 'answered'],
     ],
   ],
   [
@@ -222,7 +222,7 @@ export const studies: readonly (readonly [string, number, string, readonly DemoS
     'AG-02',
     [
       [255, 12, 'refused'],
-      [170, 12, 'submitted'],
+      [27, 12, 'submitted'],
     ],
   ],
   [
@@ -230,7 +230,7 @@ export const studies: readonly (readonly [string, number, string, readonly DemoS
     2,
     'CM-1',
     [
-      [245, 10, 'accepted'],
+      [245, 10, 'answered'],
       [40, 10, 'computed'],
     ],
   ],

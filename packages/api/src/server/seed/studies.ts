@@ -1,22 +1,27 @@
 import { abandonStudy, registerStudy, storeReadings, type Study } from '../../contract/studies'
 import { memberWith, type Base } from './base'
-import { taskKey, type SeededTask, type SeededTasks } from './gauges'
+import { standardName } from './gauges'
+import { taskName, type Ids } from './ids'
 import { asBrought } from './readings-file'
 import { demoReadings } from './readings'
 import { abandonReason, studies, type DemoEnd } from './scenario.studies'
 import type { Scene } from './scenes'
 import type { Stage } from './stage'
+import { standardFor } from './scenario.standards'
 import { submissionScenes } from './submissions'
+import { demoTasks, type DemoTask } from './tasks'
 
 /** The scenes of every study and of the submissions that rest on them. */
-export function studyScenes(stage: Stage, base: Base, tasks: SeededTasks): Scene[] {
+export function studyScenes(stage: Stage, base: Base, ids: Ids): Scene[] {
+  const tasks = new Map(demoTasks(base).map((task) => [task.name, task]))
+  const counts = new Map<string, number>()
   return studies.flatMap(([part, number, gauge, row], at) => {
-    const task = tasks.get(taskKey(part, number, gauge))
+    const task = tasks.get(taskName(part, number, gauge))
     if (!task) throw new Error(`${part}/${number}/${gauge} is no measuring task.`)
     return row.flatMap(([daysAgo, readings, end], nth) =>
-      scenesOfStudy(stage, base, {
+      scenesOfStudy(stage, base, ids, {
         task,
-        code: `${gauge}/${part}-${number}/${nth + 1}`,
+        code: nextCode(counts, gauge),
         dialect: at + nth,
         daysAgo,
         readings,
@@ -26,8 +31,15 @@ export function studyScenes(stage: Stage, base: Base, tasks: SeededTasks): Scene
   })
 }
 
+/** `BG-14 S1`, `BG-14 S2` …: people number the studies of a gauge. */
+function nextCode(counts: Map<string, number>, gauge: string): string {
+  const count = (counts.get(gauge) ?? 0) + 1
+  counts.set(gauge, count)
+  return `${gauge} S${count}`
+}
+
 interface Planned {
-  task: SeededTask
+  task: DemoTask
   code: string
   dialect: number
   daysAgo: number
@@ -35,7 +47,7 @@ interface Planned {
   end: DemoEnd
 }
 
-function scenesOfStudy(stage: Stage, base: Base, planned: Planned): Scene[] {
+function scenesOfStudy(stage: Stage, base: Base, ids: Ids, planned: Planned): Scene[] {
   const { task, code, daysAgo, end } = planned
   const owner = base.organisations[task.gauge.owner]
   const engineer = memberWith(owner, 'gauge-engineer')
@@ -51,8 +63,8 @@ function scenesOfStudy(stage: Stage, base: Base, planned: Planned): Scene[] {
       study = await act(registerStudy, {
         body: {
           code,
-          taskIds: [task.id],
-          standardId: task.standard.id,
+          taskIds: [ids.get('task', task.name)],
+          standardId: ids.get('standard', standardName(task)),
           plannedReadings: planned.readings,
           unit: task.gauge.unit,
           measuredAs: 'value',
@@ -81,12 +93,7 @@ function scenesOfStudy(stage: Stage, base: Base, planned: Planned): Scene[] {
     daysAgo: collectedDaysAgo,
     play: async () => {
       const { id, rowVersion } = known()
-      const { input, file } = asBrought(
-        planned.dialect,
-        code.replaceAll('/', ' '),
-        takenReadings(planned),
-        task.gauge.unit,
-      )
+      const { input, file } = asBrought(planned.dialect, code, takenReadings(planned), task.gauge.unit)
       await act(storeReadings, {
         params: { studyId: id },
         body: {
@@ -101,7 +108,7 @@ function scenesOfStudy(stage: Stage, base: Base, planned: Planned): Scene[] {
       })
     },
   }
-  return [register, collect, ...submissionScenes(stage, base, { task, end, collectedDaysAgo })]
+  return [register, collect, ...submissionScenes(stage, base, ids, { task, end, collectedDaysAgo })]
 }
 
 /** Readings of the gauge's known bias and spread; half of them where more will follow. */
@@ -109,7 +116,7 @@ const takenReadings = ({ task, code, readings, end }: Planned): string[] =>
   demoReadings({
     name: code,
     count: end === 'collecting' ? Math.ceil(readings / 2) : readings,
-    reference: task.standard.certifiedValue,
+    reference: standardFor(task).certifiedValue,
     resolution: task.gauge.resolution,
     bias: task.gauge.bias,
     standardDeviation: task.gauge.standardDeviation,

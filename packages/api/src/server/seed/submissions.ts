@@ -15,7 +15,7 @@ import {
   withdrawSubmission,
 } from '../../contract/submissions'
 import { memberWith, type Base, type SeededOrganisation, type SeededPerson } from './base'
-import type { SeededTask } from './gauges'
+import type { Ids } from './ids'
 import {
   answerText,
   challengeText,
@@ -26,9 +26,10 @@ import {
 } from './scenario.studies'
 import type { Scene } from './scenes'
 import type { Act, Stage } from './stage'
+import type { DemoTask } from './tasks'
 
 interface Planned {
-  task: SeededTask
+  task: DemoTask
   end: DemoEnd
   collectedDaysAgo: number
 }
@@ -66,9 +67,10 @@ const deeds: Partial<Record<DemoEnd, Deed[]>> = {
 export function submissionScenes(
   stage: Stage,
   base: Base,
+  ids: Ids,
   { task, end, collectedDaysAgo }: Planned,
 ): Scene[] {
-  const { relationship, limits } = task.characteristic
+  const { relationship, limits } = task
   const supplier = base.organisations[relationship.supplier]
   const customer = base.organisations[relationship.customer]
   const isSafety = limits[6] === 'safety'
@@ -84,7 +86,9 @@ export function submissionScenes(
   const challengeParams = async () => ({ ...params(), challengeId: (await seen()).challenges[0]?.id ?? '' })
   const play: Record<Deed, () => Promise<unknown>> = {
     prepare: async () => {
-      submissionId = (await cast.engineer(prepareSubmission, { body: { taskId: task.id } })).id
+      submissionId = (
+        await cast.engineer(prepareSubmission, { body: { taskId: ids.get('task', task.name) } })
+      ).id
     },
     send: async () => {
       const { expectedVersion } = await seen()

@@ -26,7 +26,7 @@ export function whatWaits({ act, gauge, name }: Waiting): { act: string; of: str
     page === 'agreements'
       ? words.agreement(name ?? '')
       : page === 'studies'
-        ? [words.study(name ?? ''), gauge?.code].filter(Boolean).join(', ')
+        ? words.study(name ?? '', gauge?.code ?? '')
         : gauge
           ? `${gauge.name} ${gauge.code}`
           : ''
