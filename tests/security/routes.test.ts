@@ -59,6 +59,25 @@ async function call(
   return request.field('data', JSON.stringify(body)).attach('file', bytes, name)
 }
 
+/** Everything the victims have, in one number for each table. */
+async function fingerprint() {
+  const { rows: tables } = await world.harness.owner.query<{ table: string; columns: string[] }>(
+    `select table_name as table, array_agg(column_name::text) as columns from information_schema.columns
+     where table_schema = 'public' and column_name in ('org_id', 'supplier_org_id', 'customer_org_id')
+       and table_name <> 'security_events' group by 1 order by 1`,
+  )
+  const result: Record<string, string> = {}
+  for (const { table, columns } of tables) {
+    const mine = columns.map((each) => `${each} = any($1)`).join(' or ')
+    const { rows } = await world.harness.owner.query<{ hash: string }>(
+      `select md5(coalesce(string_agg(t::text, '|' order by t::text), '')) as hash from "${table}" t where ${mine}`,
+      [[world.victims.supplier.id, world.victims.customer.id]],
+    )
+    result[table] = rows[0]?.hash ?? ''
+  }
+  return result
+}
+
 describe('the list of routes', () => {
   it('has no public route but those named', () => {
     const open = world.harness.routes.filter(({ scope }) => scope === 'public')
@@ -106,7 +125,8 @@ describe('a stranger without a session', () => {
 })
 
 describe('a member of the organisation', () => {
-  it('with every role reads everything that the samples name, on a side that may', async () => {
+  it('with every role reads everything that the samples name, on a side that may, and changes nothing by it', async () => {
+    const before = await fingerprint()
     for (const endpoint of tenantRoutes.filter(({ method }) => method === 'get')) {
       const statuses = []
       for (const side of sides) {
@@ -115,6 +135,7 @@ describe('a member of the organisation', () => {
       }
       expect([nameOf(endpoint), statuses.includes(200), statuses]).toEqual([nameOf(endpoint), true, statuses])
     }
+    expect(await fingerprint()).toEqual(before)
   })
 
   it('is refused on the side that has no such work', async () => {
@@ -230,23 +251,4 @@ describe.each(['a competitor', 'a foreigner'])('%s', (name) => {
       }
     expect(await fingerprint()).toEqual(before)
   })
-
-  /** Everything the victims have, in one number for each table. */
-  async function fingerprint() {
-    const { rows: tables } = await world.harness.owner.query<{ table: string; columns: string[] }>(
-      `select table_name as table, array_agg(column_name::text) as columns from information_schema.columns
-       where table_schema = 'public' and column_name in ('org_id', 'supplier_org_id', 'customer_org_id')
-         and table_name <> 'security_events' group by 1 order by 1`,
-    )
-    const result: Record<string, string> = {}
-    for (const { table, columns } of tables) {
-      const mine = columns.map((each) => `${each} = any($1)`).join(' or ')
-      const { rows } = await world.harness.owner.query<{ hash: string }>(
-        `select md5(coalesce(string_agg(t::text, '|' order by t::text), '')) as hash from "${table}" t where ${mine}`,
-        [[world.victims.supplier.id, world.victims.customer.id]],
-      )
-      result[table] = rows[0]?.hash ?? ''
-    }
-    return result
-  }
 })
