@@ -167,6 +167,7 @@ export async function startHarness() {
   return {
     database: database as Database,
     owner,
+    ownerUrl: urlAs('evenrule_migrator'),
     /** The address of this test's database for one of the product's roles. */
     urlAs,
     services,
@@ -192,6 +193,11 @@ export async function startHarness() {
         signedInAt: now.toISOString(),
       })
       return { id, name, email }
+    },
+    /** Lets a person in who is in the database already. */
+    admit({ id, name }: { id: string; name: string }) {
+      const at = now.toISOString()
+      people.set(id, { userId: id, name, email: '', authenticatedAt: at, signedInAt: at })
     },
     /** The person signs in afresh at the harness's clock. */
     signInAfresh(person: Person) {
