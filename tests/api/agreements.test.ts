@@ -496,7 +496,7 @@ describe('who may do what', () => {
       const refused = await world
         .as(quality)
         .send('post', world.path(quality, proposed, newest(proposed), act))
-        .send({ expectedVersion: 1, ...body, ...{ expectedVersion: newest(proposed).rowVersion } })
+        .send({ ...body, expectedVersion: newest(proposed).rowVersion })
       expect(refused.body, act).toMatchObject({ status: 409, code: 'not-your-turn' })
     }
   })

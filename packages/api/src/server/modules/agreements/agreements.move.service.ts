@@ -99,17 +99,21 @@ export function offersOf(
   version: VersionAtHand,
 ): { moves: AgreementMoveName[]; hindrances: AgreementHindrance[] } {
   const known = { ...factsOf(actor, negotiation, version), 'reason-given': true, 'as-seen': true }
-  // A changed proposal is judged when it is sent; an answer not yet written cannot be at fault.
-  const unwritten = { 'clauses-can-be-agreed': true, 'effective-date-not-past': true }
+  // An answer is judged as it is drafted; one not yet written cannot be at fault.
+  const ofAnswer = {
+    'clauses-can-be-agreed': !version.draft || canBeAgreed(version.draft, negotiation.characteristics),
+    'effective-date-not-past': !version.draft || version.draft.effectiveOn >= negotiation.today,
+  }
   const moves: AgreementMoveName[] = []
   const hindrances: AgreementHindrance[] = []
   for (const name of agreementHindranceSchema.shape.move.options) {
-    const facts = name === 'counter' ? { ...known, ...unwritten } : known
+    const facts = name === 'counter' ? { ...known, ...ofAnswer } : known
     const { move, refused } = chooseMove<AgreementPrecondition, AgreementMove>(
       candidates(actor, name, version.state),
       facts,
     )
-    const code = refused ? codeOf(refused, version.standing) : undefined
+    const judged = name === 'counter' ? (version.draft ?? version.standing) : version.standing
+    const code = refused ? codeOf(refused, judged) : undefined
     if (move || code) moves.push(name)
     if (code) hindrances.push({ move: name, code })
   }
