@@ -242,7 +242,7 @@ describe('the studentised range', () => {
       [3, 1],
       [5, 60],
     ] as const) {
-      for (const p of [1e-9, 0.05, 0.95, 1 - 1e-6]) {
+      for (const p of [1e-9, 1 - 1e-6]) {
         const { lower, upper } = studentizedRangeTails(studentizedRangeQuantile(p, groups, df), groups, df)
         expect(Math.abs(p <= 0.5 ? lower / p - 1 : upper / (1 - p) - 1), `p ${p}`).toBeLessThan(1e-9)
       }

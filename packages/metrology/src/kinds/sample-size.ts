@@ -1,7 +1,7 @@
 import { InvalidInput } from '../input/invalid-input'
 import type { Reader } from '../input/reader'
 import { readRule, ruleDescriptor } from '../rules'
-import { chancesOf } from '../rules/chances'
+import { chancesOf, chanceToMeet } from '../rules/chances'
 import type { Rule, SampleSizeOutput, Truth } from '../types'
 import { readTruth } from './operating-characteristic'
 
@@ -16,7 +16,8 @@ export const mostReadings = 100_000
  */
 export function sampleSize(rule: Rule, truth: Truth, power: number): { n: number; power: number } | null {
   const { powerOf } = ruleDescriptor(rule)
-  const chance = (n: number) => chancesOf(rule, n)(truth)[powerOf]
+  const chance = (n: number) =>
+    powerOf === 'meets' ? chanceToMeet(rule, n)(truth) : chancesOf(rule, n)(truth)[powerOf]
   let held: { n: number; power: number } | null = null
   for (const n of searchedDownwards()) {
     const here = chance(n)

@@ -10439,7 +10439,7 @@ function readTruth(reader) {
 var mostReadings = 1e5;
 function sampleSize(rule, truth, power) {
   const { powerOf } = ruleDescriptor(rule);
-  const chance = (n) => chancesOf(rule, n)(truth)[powerOf];
+  const chance = (n) => powerOf === "meets" ? chanceToMeet(rule, n)(truth) : chancesOf(rule, n)(truth)[powerOf];
   let held = null;
   for (const n of searchedDownwards()) {
     const here = chance(n);
