@@ -41,6 +41,7 @@ export const memberWords = {
   endsOnHint: 'Leave it empty for no end. The person stays named in the record.',
   save: 'Save roles',
   end: 'End at once',
+  endNamed: (name: string) => `End at once: ${name}`,
   endTitle: (name: string) => `End the membership of ${name}?`,
   endText:
     'The very next request of this person is refused. What they signed and did stays in the record under their name. You can give the membership back.',
