@@ -465,7 +465,7 @@ describe('storing readings', () => {
   })
   it.each([
     [{ collectedOn: '2026-11-03' }, 'body.collectedOn', 'still to come'],
-    [{ collectedOn: '2026-11-01' }, 'body.collectedOn', 'registered on 2026-11-02'],
+    [{ collectedOn: '2026-11-01' }, 'body.collectedOn', 'registered on 2 Nov 2026'],
     [{ takenBy: [] }, 'body.takenBy', 'Say who took the readings'],
     [{ appraiser: '' }, 'body.appraiser', 'Enter something here'],
     [{ text: ' \n' }, 'body.text', 'no readings'],

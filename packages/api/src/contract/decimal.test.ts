@@ -1,6 +1,6 @@
 import fc from 'fast-check'
 import { describe, expect, it } from 'vitest'
-import { compareDecimals, subtractDecimals } from './decimal'
+import { compareDecimals, isMultipleOf, subtractDecimals } from './decimal'
 
 describe('comparing decimals as entered', () => {
   it.each([
@@ -40,4 +40,17 @@ describe('the difference of decimals', () => {
   ])('%s − %s is %s, exactly and with the finer places', (a, b, difference) =>
     expect(subtractDecimals(a, b)).toBe(difference),
   )
+})
+
+describe('a whole multiple', () => {
+  it.each([
+    ['24.001', '0.001', true],
+    ['24.0005', '0.001', false],
+    ['-0.015', '0.005', true],
+    ['0.3', '0.1', true],
+    ['25', '0.05', true],
+    ['1e-4', '0.0001', true],
+    ['0', '0.001', true],
+    ['24', '0', true],
+  ])('is %s of %s: %s', (a, step, whole) => expect(isMultipleOf(a, step)).toBe(whole))
 })

@@ -84,6 +84,8 @@ export const noteCodes = [
   'column-chosen',
   'read-across',
   'rows-passed-over',
+  /** Rows at the end whose reading is not taken yet, as on a run sheet half filled. */
+  'empty-at-end',
   'read-as-latin-1',
   /** About the readings against the study. */
   'more-than-planned',

@@ -20,3 +20,9 @@ export function addDays(day: string, days: number): string {
 /** Calendar days from one day to a later one (negative where it is an earlier one). */
 export const daysBetween = (from: string, to: string): number =>
   Math.round((Date.parse(`${to}T00:00:00Z`) - Date.parse(`${from}T00:00:00Z`)) / 86_400_000)
+
+const months = ['Jan', 'Feb', 'Mar', 'Apr', 'May', 'Jun', 'Jul', 'Aug', 'Sep', 'Oct', 'Nov', 'Dec']
+
+/** A calendar day in words for messages, such as 2 Nov 2026. */
+export const dayInWords = (day: string): string =>
+  `${Number(day.slice(8, 10))} ${months[Number(day.slice(5, 7)) - 1] ?? ''} ${day.slice(0, 4)}`

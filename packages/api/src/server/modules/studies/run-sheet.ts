@@ -2,6 +2,7 @@ import type { AnswerInputOf } from '../../../contract/define'
 import type { readStudy } from '../../../contract/studies'
 import { csvText } from '../../csv-export'
 import { seededRandom } from '../../seeded-random'
+import { cleanFileName } from '../files/files.content'
 import type { StudyRow } from './studies.repository'
 
 type RunSheet = AnswerInputOf<typeof readStudy>['runSheet']
@@ -44,7 +45,7 @@ export function runSheetFile(study: StudyRow, separator: 'comma' | 'semicolon' |
     '',
   ])
   return {
-    name: `${study.code} run sheet.csv`,
+    name: cleanFileName(`${study.code} run sheet.csv`),
     contentType: 'text/csv; charset=utf-8',
     bytes: csvText([header, ...rows], separator),
   }

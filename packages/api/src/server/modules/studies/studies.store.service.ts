@@ -2,7 +2,7 @@ import { areCompatible } from '@evenrule/metrology'
 import { studyMove, type StudyMove } from '../../../contract/moves/study'
 import type { AnswerInputOf, BodyOf } from '../../../contract/define'
 import type { readStudy, storeReadings } from '../../../contract/studies'
-import { dayIn } from '../../calendar'
+import { dayIn, dayInWords } from '../../calendar'
 import { newId } from '../../db/columns'
 import type { Tenant } from '../../db/tenant'
 import { changedMeanwhile, invalidInput, wrongState, type FieldError } from '../../errors'
@@ -140,7 +140,7 @@ async function refuseWrongFields(
   else if (study.registeredBeforehand && collectedOn < registeredOn)
     errors.push({
       path: 'body.collectedOn',
-      message: `This study was registered on ${registeredOn}, before its first reading, so its readings cannot be older. Register older readings as a study that was not registered beforehand.`,
+      message: `This study was registered on ${dayInWords(registeredOn)}, before its first reading, so its readings cannot be older. Register older readings as a study that was not registered beforehand.`,
     })
   const members = await selectMembersAmong(tenant, takenBy)
   for (const [at, id] of takenBy.entries())

@@ -131,7 +131,7 @@ describe('several columns', () => {
   })
   it('keep their places when the first cell of a row is empty', () => {
     expect(values(paste('Reading\tNote\n\tlost\n24.001\t\n24.002\tok'))).toEqual([24.001, 24.002])
-    expect(places(paste('\t24.001\n\t24.002\nx\t\n'))).toEqual(['B3 empty'])
+    expect(places(paste('\t24.001\nx\t\n\t24.002\n'))).toEqual(['B2 empty'])
   })
   it('without names offer a choice, which is obeyed', () => {
     const text = '24.001;24.101\n24.002;24.102'
@@ -159,6 +159,13 @@ describe('several columns', () => {
   it('may have empty cells and rows at the end', () => {
     const read = upload('Nr;Reading;;;\r\n1;24,001;;;\r\n2;24,002;;;\r\n;;;;\r\n;;;;\r\n')
     expect([values(read), read.errors, read.rows]).toEqual([[24.001, 24.002], [], 3])
+  })
+  it('may be a run sheet of which the last rows are still empty', () => {
+    const read = upload('No.;Position;Reading (mm)\n1;90°;24,001\n2;0°;24,002\n3;270°;\n4;180°;\n')
+    expect([values(read), read.errors]).toEqual([[24.001, 24.002], []])
+    expect(read.notes).toMatchObject([
+      { code: 'empty-at-end', message: expect.stringContaining('last 2 rows') },
+    ])
   })
   it('may say their separator in a first line', () => {
     const read = upload('sep=;\nReading;Note\n24,001;a\n24,002;b')

@@ -45,7 +45,7 @@ export function readReadings(input: ReadingsInput, file: UploadedFile | undefine
   const columns = columnsOf(rows, headerRows)
   const direction = input.direction ?? directionOf(input, rows, headerRows)
   const chosen = direction === 'across' ? { note: null } : chosenColumn(input, columns)
-  const cells = cellsOf(rows, headerRows, chosen.column?.index)
+  const { cells, emptyAtEnd } = untilLast(cellsOf(rows, headerRows, chosen.column?.index))
   const decimal = input.decimal ?? decimalOf(cells)
   const { readings, errors } = unreadable
     ? { readings: [], errors: [unreadable] }
@@ -78,6 +78,7 @@ export function readReadings(input: ReadingsInput, file: UploadedFile | undefine
     notes: [
       ...encodingNotes(decoded),
       ...passedOver(headerRows),
+      ...notTaken(emptyAtEnd),
       ...(direction === 'across' ? [acrossNote] : []),
       ...[note, joined ? commaBoth : null, chosen.note].filter((each) => each !== null),
     ],
@@ -155,6 +156,12 @@ function cellsOf(rows: readonly string[][], headerRows: number, column: number |
       if (index > 0 || !labelled) cells.push({ row: at + 1, column: index, text: cell.trim() })
   }
   return cells
+}
+
+/** Cells up to the last that is filled; the rest of a run sheet has not been taken yet. */
+function untilLast(cells: readonly Cell[]): { cells: Cell[]; emptyAtEnd: number } {
+  const end = cells.findLastIndex(({ text }) => text !== '') + 1
+  return { cells: cells.slice(0, end), emptyAtEnd: cells.length - end }
 }
 
 /** The decimal mark that most of the readings were written with. */
@@ -235,6 +242,17 @@ const passedOver = (headerRows: number): ReadingsNote[] =>
         {
           code: 'rows-passed-over',
           message: `The first ${headerRows} rows hold no numbers and were passed over.`,
+          readings: [],
+        },
+      ]
+    : []
+
+const notTaken = (rows: number): ReadingsNote[] =>
+  rows > 0
+    ? [
+        {
+          code: 'empty-at-end',
+          message: `${rows === 1 ? 'The last row holds' : `The last ${rows} rows hold`} no reading yet and ${rows === 1 ? 'was' : 'were'} passed over.`,
           readings: [],
         },
       ]
