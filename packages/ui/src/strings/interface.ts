@@ -45,6 +45,7 @@ export const problemNoticeWords = {
     'limits-frozen': 'These limits are agreed',
     'confirmed-by-customer': 'The customer stands behind this',
     'gauge-in-use': 'This gauge is in use',
+    'last-admin': 'An admin must stay',
     'file-too-large': 'This file is too large',
     'too-many': 'Too many requests',
   } as Record<string, string>,
