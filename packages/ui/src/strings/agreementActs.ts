@@ -1,4 +1,4 @@
-import type { agreements, AgreementVersionState, Side } from '@evenrule/api/contract'
+import type { agreements, Side } from '@evenrule/api/contract'
 import { formatCount, formatDate } from '../format'
 import { several, whose } from './agreements'
 
@@ -6,7 +6,6 @@ export const editorWords = {
   heading: { draft: 'Our proposal', answer: 'Our answer', begin: 'Our proposal for a new version' },
   clause: (at: number) => `Clause ${at + 1}`,
   add: 'Add a clause',
-  addHint: 'Of clauses about the same thing a proposal holds one.',
   remove: 'Remove',
   removeLabel: (name: string) => `Remove: ${name}`,
   replace: 'Kind',
@@ -33,9 +32,6 @@ export const actWords = {
   reasonHint: 'Both sides read it in the record.',
   discardTitle: 'Discard this draft?',
   discardText: 'Nobody else has seen it. It cannot be brought back.',
-  sendTitle: (other: string) => `Send this draft to ${other}?`,
-  sendText: (other: string) =>
-    `${other} sees the proposal and its comment, and can accept it, answer with a proposal of its own, or leave it. You can withdraw it until both sides have signed.`,
 } as const
 
 /** Why a move is allowed but cannot be made now, with the mend. */
@@ -64,7 +60,6 @@ export const signWords = {
   sign: 'Sign',
   afresh: 'Signing needs a fresh sign-in, so that it is surely you.',
   afreshAct: 'Sign in afresh',
-  back: 'You signed in afresh. Sign below.',
   hash: 'SHA-256 of the text',
   showText: 'Show the exact text',
   hideText: 'Hide the exact text',
@@ -105,23 +100,10 @@ export const roundsWords = {
 export const versionsWords = {
   heading: 'Versions',
   version: (number: number | null) => (number === null ? 'Draft' : `Version ${number}`),
-  state: (state: AgreementVersionState): string => stateNames[state],
   from: (day: string | null) => (day ? `from ${formatDate(day)}` : ''),
   shown: 'shown above',
   show: 'Show',
 } as const
-
-const stateNames: Record<AgreementVersionState, string> = {
-  draft: 'our draft',
-  proposed: 'proposed',
-  countered: 'answered with a changed proposal',
-  agreed: 'agreed, waits for signatures',
-  signed: 'signed, not yet in force',
-  withdrawn: 'withdrawn',
-  'in-force': 'in force',
-  superseded: 'superseded',
-  lapsed: 'lapsed',
-}
 
 export const proposeWords = {
   title: 'What do you want to agree on?',
@@ -152,7 +134,6 @@ export const taskCriteriaWords = {
   why: 'Why it applies',
   from: (agreement: number, version: number) => `Agreement ${agreement}, version ${version}`,
   scope: { relationship: 'for all parts', part: 'for this part', characteristic: 'for this characteristic' },
-  inForceSince: (day: string) => `in force since ${formatDate(day)}`,
   caption: 'Clauses that apply to this measuring task',
   propose: 'Go to agreements',
 } as const

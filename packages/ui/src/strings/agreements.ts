@@ -98,7 +98,6 @@ export const roomWords = {
     [number === null ? 'Draft' : `Agreement ${number}`, version === null ? '' : `version ${version}`]
       .filter(Boolean)
       .join(', ') + `, with ${other}`,
-  clausesAndDate: (count: number, day: string) => `${formatCount(count, 'clause')}, from ${formatDate(day)}`,
   draft: 'Our draft, not sent yet.',
   draftRest: (other: string) => `Nobody at ${other} sees it.`,
   waitsForUs: (round: number, other: string) => `Round ${round}, from ${other}, waits for our answer.`,
@@ -135,13 +134,10 @@ export const roomWords = {
   sign: 'Read and sign',
   withdraw: 'Withdraw',
   send: (other: string) => `Send to ${other}`,
-  sendNow: 'Send as it stands',
   goOn: 'Go on with our answer',
   saveDraft: 'Save draft',
   stopEditing: 'Stop editing',
   discard: 'Discard the draft',
-  openDraft: 'Open our draft',
-  backToNegotiation: 'Show the one under negotiation',
 } as const
 
 export const comparisonWords = {
@@ -170,8 +166,6 @@ export const comparisonWords = {
   was: (before: string) => `was ${before}`,
   base: { none: 'nothing' },
   noClauses: 'No clause is in this proposal yet.',
-  safety: 'safety class',
-  safetyCount: (count: number) => `${formatCount(count, 'characteristic')} of class safety`,
   notFor: (count: number) => `Cannot be computed for ${formatCount(count, 'characteristic')} of the scope:`,
   effects: {
     worse: (rule: string, before: string, after: string, bias: string) =>

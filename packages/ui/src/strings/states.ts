@@ -1,16 +1,18 @@
+import type { AgreementVersionState } from '@evenrule/api/contract'
+
 /** States as people read them. Codes are those of the state tables; derived ones (in force, expired) are among them. */
 
-export const agreementStateWords = {
-  draft: 'draft',
+export const agreementStateWords: Record<AgreementVersionState, string> = {
+  draft: 'our draft',
   proposed: 'proposed',
-  countered: 'countered',
+  countered: 'answered with changes',
   agreed: 'agreed, waits for signatures',
-  signed: 'signed',
+  signed: 'signed, not yet in force',
   'in-force': 'in force',
   superseded: 'superseded',
   withdrawn: 'withdrawn',
   lapsed: 'lapsed',
-} as const
+}
 
 export const studyStateWords = {
   registered: 'registered',
