@@ -57,7 +57,7 @@ describe('accepting', () => {
     expect(await events(id)).toEqual(['submission.signed', 'submission.accepted'])
     const told = await story.by('engineer').call(messages.listMessages, {}, { query: { size: 100 } })
     expect(told.items.find(({ link, kind }) => kind === 'decision' && link.endsWith(id))?.subject).toContain(
-      'It is accepted',
+      'Accepted: submission',
     )
     expect(await story.by('quality').call(submissions.verifySubmission, { submissionId: id })).toMatchObject({
       equal: true,

@@ -1,5 +1,6 @@
 import { createHash } from 'node:crypto'
 import type { Clause, ClauseOutput } from '@evenrule/metrology'
+import type pg from 'pg'
 import { afterAll, beforeAll, describe, expect, it } from 'vitest'
 import { agreements, studies, submissions, type SubmissionCheck } from '@evenrule/api/contract'
 import { withTenant } from '../../packages/api/src/server/db/tenant'
@@ -267,7 +268,7 @@ describe('signing', () => {
     )
     expect(told.rows[0].link).toBe(`/organisations/${story.organisations.customer.id}/submissions/${id}`)
     expect(told.rows[0].subject).toContain(
-      `Submission ${theirs.number}: ${task.gauge.code} for ${task.part.number} A`,
+      `Waits for your decision: submission ${theirs.number}, ${task.gauge.code} for ${task.part.number} A no. 5 bore`,
     )
   })
 
@@ -288,7 +289,8 @@ describe('signing', () => {
     expect(event.data.clauses.map((each: { outputSha256: string }) => each.outputSha256)).toEqual(
       seen.evaluations.map(({ outputSha256 }) => outputSha256),
     )
-    expect(rows[0].text).not.toMatch(/Falk|Holt/)
+    // People stand in neither by name.
+    for (const text of [rows[0].text, seen.text]) expect(text).not.toMatch(/Falk|Holt/)
   })
 
   it('sends the customer every file byte for byte, though the originals are the supplier’s alone', async () => {
@@ -532,10 +534,18 @@ describe('what is frozen', () => {
     expect(check.data[0]?.equal).toBe(false)
   })
 
-  it('finds a text that is none any more, and a verdict in the lists that nobody signed', async () => {
-    expect(
-      (await tampered(`update submission_texts set text = 'gone' where submission_id = $1`)).text.equal,
-    ).toBe(false)
+  it('finds a text that is none any more, and shows nothing as met', async () => {
+    const id = await story.submission((await story.ready()).id, 'submitted')
+    await owner(`update submission_texts set text = 'gone' where submission_id = $1`, [id])
+    expect(await verify('engineer', id)).toMatchObject({ equal: false, text: { equal: false } })
+    expect(await story.read('quality', id)).toMatchObject({
+      verdict: 'not-shown',
+      clausesMet: 0,
+      text: 'gone',
+    })
+  })
+
+  it('finds a verdict in the lists that nobody signed', async () => {
     const check = await tampered(`update submissions set verdict = 'falls-short' where id = $1`)
     expect(check.listed).toMatchObject({ equal: false, difference: { path: 'verdict' } })
   })
@@ -617,8 +627,8 @@ describe('the list of submissions', () => {
 /** Texts of the statements that the product sends while something runs. */
 async function queriesOf(work: () => Promise<unknown>): Promise<string[]> {
   const sent: string[] = []
-  const pool = (story.harness.database as unknown as { $client: import('pg').Pool }).$client
-  const watch = (client: import('pg').PoolClient) => {
+  const pool = (story.harness.database as unknown as { $client: pg.Pool }).$client
+  const watch = (client: pg.PoolClient) => {
     const query = client.query.bind(client)
     Object.assign(client, {
       query: (...input: Parameters<typeof query>) => {
@@ -677,4 +687,32 @@ it('takes criteria from the agreement of the whole relationship where a part has
   })
   const criteria = await story.by('engineer').call(agreements.readCriteria, { taskId: task.id })
   expect(criteria.criteria).toHaveLength(2)
+})
+
+it('has no move of the supplier for a stranger, who finds nothing there', async () => {
+  const id = await story.submission((await story.ready()).id, 'for-signature')
+  const { rivals } = story.organisations
+  story.harness.signInAfresh(story.people.stranger)
+  const stranger = story.harness.as('supplier', story.people.stranger)
+  const body = { expectedVersion: 2, sha256: '0'.repeat(64), note: 'x', reason: 'x', studyIds: [] }
+  for (const [method, path] of [
+    ['get', ''],
+    ['get', '/verify'],
+    ['put', '/studies'],
+    ['post', '/send-for-signature'],
+    ['post', '/return'],
+    ['post', '/sign'],
+    ['post', '/discard'],
+    ['post', '/withdraw'],
+  ] as const) {
+    const answer = await stranger
+      .send(method, `/organisations/${rivals.id}/submissions/${id}${path}`)
+      .send(body)
+    expect([path, answer.status]).toEqual([path, 404])
+    const foreign = await stranger
+      .send(method, `/organisations/${story.organisations.supplier.id}/submissions/${id}${path}`)
+      .send(body)
+    expect([path, foreign.status]).toEqual([path, 404])
+  }
+  expect((await story.read('engineer', id)).state).toBe('for-signature')
 })

@@ -1,11 +1,6 @@
 import canonicalize from 'canonicalize'
 import { z } from 'zod'
-import {
-  submissionContentSchema,
-  summaryOf,
-  type FrozenClauseResult,
-  type SubmissionContent,
-} from './submission-content'
+import { contentOf, summaryOf, type FrozenClauseResult, type SubmissionContent } from './submission-content'
 
 export const clauseProblems = [
   /** The frozen text names a clause whose evaluation is not there. */
@@ -236,12 +231,6 @@ export async function checkSubmission(
     (each) => each.equal,
   )
   return { equal, text, signatures, data, clauses, listed }
-}
-
-/** The content of a frozen text; null where it is no such text any more. */
-function contentOf(text: string): SubmissionContent | null {
-  const parsed = submissionContentSchema.safeParse(parse(text))
-  return parsed.success ? parsed.data : null
 }
 
 function checkListed(stored: object, content: SubmissionContent): NonNullable<SubmissionCheck['listed']> {

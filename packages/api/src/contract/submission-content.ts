@@ -144,6 +144,15 @@ export const submissionContentSchema = z.object({
 })
 export type SubmissionContent = z.output<typeof submissionContentSchema>
 
+/** The content of a frozen text; null where it is no such text any more. */
+export function contentOf(text: string): SubmissionContent | null {
+  try {
+    return submissionContentSchema.safeParse(JSON.parse(text)).data ?? null
+  } catch {
+    return null
+  }
+}
+
 /**
  * The verdict of a whole submission: it meets only where every clause does; one that falls short decides, then
  * one that is not shown. Without clauses nothing is shown.

@@ -7,7 +7,7 @@ import type { SubmissionRow } from './submissions.repository'
 
 /** What a message can speak of. */
 export interface MessageContext {
-  /** "Submission 12: BG-14 for 7741-220 C, no. 5 bore", without the number while it has none. */
+  /** "submission 12, BG-14 for 7741-220 C no. 5 bore"; without the number while it has none. */
   title: string
   supplier: string
   customer: string
@@ -47,8 +47,8 @@ async function contextOf(tenant: Tenant, submission: SubmissionRow): Promise<Mes
     tenant,
     submission.characteristicId,
   )
-  const what = `${gaugeCode} for ${partNumber} ${revision}, no. ${number} ${name}`
-  const title = submission.number === null ? what : `Submission ${submission.number}: ${what}`
+  const what = `${gaugeCode} for ${partNumber} ${revision} no. ${number} ${name}`
+  const title = submission.number === null ? what : `submission ${submission.number}, ${what}`
   return { title, supplier: supplier.name, customer: customer.name }
 }
 
@@ -58,16 +58,16 @@ const countOfClauses = (met: number, total: number): string =>
 /** What messages about the making of a submission say; `note` is what a person wrote. */
 export const submissionMessages = {
   waitsForSignature: (note: string) => ({
-    subject: 'It waits for your signature',
+    subject: 'Waits for your signature',
     body: ['Read it, then sign it or return it with a note. Whoever took the readings may not sign.', note],
   }),
-  returned: (note: string) => ({ subject: 'It came back with a note', body: [note] }),
+  returned: (note: string) => ({ subject: 'Returned with a note', body: [note] }),
   signed: (met: number, total: number) => ({
-    subject: 'It waits for your decision',
+    subject: 'Waits for your decision',
     body: [countOfClauses(met, total), 'Accept it, accept it with conditions, or challenge a result.'],
   }),
   withdrawn: (reason: string) => ({
-    subject: 'It was taken back',
+    subject: 'Taken back',
     body: ['It asks for no decision any more. The reason given:', reason],
   }),
 }
@@ -76,6 +76,6 @@ export const submissionMessages = {
 export const about =
   (by: 'supplier' | 'customer', { subject, body }: { subject: string; body: readonly string[] }) =>
   (context: MessageContext): Words => ({
-    subject: `${subject}. ${context.title}`,
+    subject: `${subject}: ${context.title}`,
     body: [`From ${context[by]}.`, ...body].filter((line) => line !== '').join('\n\n'),
   })

@@ -1,4 +1,4 @@
-import { submissionContentSchema, summaryOf } from '../../../contract/submission-content'
+import { contentOf, summaryOf } from '../../../contract/submission-content'
 import type { Submission } from '../../../contract/submissions'
 import type { Tenant } from '../../db/tenant'
 import { namesOfPeople } from '../organisations/people.repository'
@@ -97,19 +97,14 @@ async function asFrozen(tenant: Tenant, submission: SubmissionRow): Promise<Cont
   if (!frozen) throw new Error(`The signed submission ${submission.id} has no text.`)
   return {
     ...frozen,
-    ...summaryIn(frozen.text),
+    // Nothing counts as met where the text is no submission any more; the check says so loudly.
+    ...summaryOf(contentOf(frozen.text) ?? { clauses: [] }),
     safety: submission.safety,
     evaluations: await selectClauses(tenant, submission),
     files: await selectFiles(tenant, submission),
     choices: [],
     facts: tenant.side === 'customer' ? await reviewFacts(tenant, submission) : {},
   }
-}
-
-/** Nothing is shown where the text is no submission any more; the check says so loudly. */
-function summaryIn(text: string): ReturnType<typeof summaryOf> {
-  const parsed = submissionContentSchema.safeParse(JSON.parse(text))
-  return summaryOf(parsed.success ? parsed.data : { clauses: [] })
 }
 
 const choicesOf = ({ studies, chosen }: Prepared): Submission['choices'] =>
