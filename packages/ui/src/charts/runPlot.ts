@@ -95,7 +95,7 @@ export function layoutRun(input: RunInput): RunLayout | null {
 function firstAnd(axis: Axis, count: number): Axis['ticks'] {
   const first = { value: 1, at: axis.scale.at(1), label: '1' }
   const rest = axis.ticks.filter(
-    ({ value, at }) => Number.isInteger(value) && value > 1 && value <= count && at - first.at > 18,
+    ({ value, at }) => Number.isInteger(value) && value > 1 && value <= count && at - first.at > 34,
   )
   return [first, ...rest]
 }

@@ -1,6 +1,6 @@
 import type { studies } from '@evenrule/api/contract'
 import type { StudyState } from '@evenrule/api/contract/moves/study'
-import { formatChance, formatCount, formatNumber } from '../format'
+import { formatChance, formatCount, formatNumber, joinWords } from '../format'
 
 const ordinals = ['', 'first', 'second', 'third', 'fourth', 'fifth', 'sixth', 'seventh', 'eighth', 'ninth']
 /** "first attempt", "12th attempt". */
@@ -134,6 +134,7 @@ export const collectWords = {
   registered: (day: string, name: string | null) => `registered ${day}${name ? ` by ${name}` : ''}`,
   notBeforehand: 'not registered before its first reading',
   on: (standard: string) => `standard ${standard}`,
+  gaugeFor: (gauge: string, characteristic: string) => `${gauge} for ${characteristic}`,
   runSheet: 'Run sheet',
   runSheetText: 'Take the readings in this order; the slots were dealt at random.',
   runSheetPlain: 'Take the readings one after the other, without looking for a pattern.',
@@ -261,7 +262,8 @@ export const studyResultWords = {
     `${characteristic}, ${part}, ${customer}`,
   registered: (day: string, agreements: string) =>
     `Registered ${day}${agreements ? ` under ${agreements}` : ''}`,
-  agreement: (number: number) => `agreement ${number}`,
+  agreements: (numbers: readonly number[]) =>
+    `agreement${numbers.length > 1 ? 's' : ''} ${joinWords(numbers.map(String))}`,
   taken: (count: number, appraiser: string, day: string) =>
     `${formatCount(count, 'reading')} by ${appraiser} on ${day}`,
   revision: (number: number) => `corrected, revision ${number}`,
@@ -287,12 +289,11 @@ export const studyResultWords = {
   leftOutRow: (row: number, text: string) => `row ${row} “${text}”`,
   engine: 'Computed by',
   engineText: (version: string, hash: string) => `engine ${version}, ${hash.slice(0, 12)}…`,
-  calibration: 'Calibration on that day',
-  calibrationOf: (what: string, from: string, until: string, certificate: string) =>
-    `${what} ${from} to ${until}, certificate ${certificate}`,
-  calibrationNone: (what: string) => `${what} not on record`,
-  gaugeWord: 'gauge',
-  standardWord: 'standard',
+  gaugeCalibration: 'Gauge in calibration',
+  standardCalibration: 'Standard in calibration',
+  calibrationOf: (from: string, until: string, certificate: string) =>
+    `${from} to ${until}, certificate ${certificate}`,
+  calibrationNone: 'not on record for that day',
   revisions: 'Earlier readings',
   revisionsText: 'Replaced by a correction, or kept while more were to follow.',
   revisionNumber: 'Revision',
@@ -311,7 +312,7 @@ export const studyResultWords = {
 /** What can be told of a study in one cell of a list, where it is not computed. */
 export const studyStepWords: Record<StudyState, string> = {
   registered: 'waits for readings',
-  collecting: 'more readings to come',
+  collecting: 'more to come',
   computed: 'computed',
   abandoned: 'abandoned',
 }

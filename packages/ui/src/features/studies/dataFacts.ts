@@ -13,13 +13,10 @@ export interface DataFact {
 const namesText = (people: studies.StudyRevision['takenBy']): string =>
   people.map(({ name }) => name ?? words.erased).join(', ')
 
-function calibrationText({ calibration }: studies.Study): string {
-  const say = (what: string, of: studies.Study['calibration']['gauge']) =>
-    of
-      ? words.calibrationOf(what, formatDate(of.calibratedOn), formatDate(of.dueOn), of.certificateNumber)
-      : words.calibrationNone(what)
-  return [say(words.gaugeWord, calibration.gauge), say(words.standardWord, calibration.standard)].join('; ')
-}
+const calibrationText = (of: studies.Study['calibration']['gauge']): string =>
+  of
+    ? words.calibrationOf(formatDate(of.calibratedOn), formatDate(of.dueOn), of.certificateNumber)
+    : words.calibrationNone
 
 /** Where the readings of a study come from and what they were compared with; files and hashes stand beside it. */
 export function dataFacts(study: studies.Study, data: studies.StudyRevision): DataFact[] {
@@ -32,7 +29,8 @@ export function dataFacts(study: studies.Study, data: studies.StudyRevision): Da
     [words.leftOut, data.leftOut.map(({ row, text }) => words.leftOutRow(row, text)).join(', ')],
     [words.measuredAs, `${words.measuredAsWords[study.measuredAs]}, ${study.unit}`],
     [words.standard, `${standard.code} ${standard.name}, ${standardText(standard)}`],
-    [words.calibration, calibrationText(study)],
+    [words.gaugeCalibration, calibrationText(study.calibration.gauge)],
+    [words.standardCalibration, calibrationText(study.calibration.standard)],
     [words.engine, engine ? words.engineText(engine.engineVersion, engine.engineSha256) : ''],
   ]
   return facts.flatMap(([label, text]) => (text ? [{ label, text }] : []))

@@ -27,6 +27,6 @@ export const slotsOf = (text: string): string[] =>
     .map((line) => line.trim())
     .filter(Boolean)
 
-/** A short name for the next study of a gauge: "BG-14/03". */
+/** A short name for the next study of a gauge: "BG-14 S3". */
 export const suggestedCode = (gaugeCode: string, studiesBefore: number): string =>
-  `${gaugeCode.slice(0, 34)}/${String(studiesBefore + 1).padStart(2, '0')}`
+  `${gaugeCode.slice(0, 34)} S${studiesBefore + 1}`

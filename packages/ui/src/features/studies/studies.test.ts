@@ -154,7 +154,7 @@ describe('planning', () => {
     )
   })
   it('names the next study of a gauge and reads slots line by line', () => {
-    expect(suggestedCode('BG-14', 2)).toBe('BG-14/03')
+    expect(suggestedCode('BG-14', 2)).toBe('BG-14 S3')
     expect(slotsOf(' 08:00 \n\n12:00\n')).toEqual(['08:00', '12:00'])
   })
 })

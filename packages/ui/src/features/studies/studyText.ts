@@ -46,7 +46,7 @@ function agreementsText(study: Study): string {
   const numbers = [
     ...new Set(study.tasks.flatMap(({ criteria }) => criteria.map(({ agreementNumber }) => agreementNumber))),
   ].sort((a, b) => a - b)
-  return numbers.map(studyResultWords.agreement).join(' and ')
+  return numbers.length ? studyResultWords.agreements(numbers) : ''
 }
 
 const attemptOf = ({ tasks }: Study): string => {
@@ -73,8 +73,14 @@ export function resultMeta(study: Study): string {
 
 /** The quiet line of a study that still waits for readings. */
 export function collectMeta(study: Study): string {
+  const [only, ...others] = study.tasks
   return [
-    gaugeText(study),
+    only && others.length === 0
+      ? collectWords.gaugeFor(
+          `${study.gauge.name} ${study.gauge.code}`,
+          inSentence(characteristicText(only.characteristic)),
+        )
+      : `${study.gauge.name} ${study.gauge.code}`,
     collectWords.on(study.standard.code),
     [collectWords.registered(formatDate(study.registeredAt), study.registeredBy.name), attemptOf(study)]
       .filter(Boolean)
