@@ -1,5 +1,6 @@
 import { afterAll, beforeAll, describe, expect, it } from 'vitest'
 import { agreements, characteristics, gauges, tasks, type parts, type Role } from '@evenrule/api/contract'
+import type { Clause } from '@evenrule/metrology'
 import type { Tenant } from '../../packages/api/src/server/db/tenant'
 import {
   criteriaFor,
@@ -372,6 +373,34 @@ describe('limits', () => {
       status: 409,
       code: 'limits-frozen',
     })
+  })
+
+  it('take the spread of the process with them where a clause takes a share of it', async () => {
+    const part = await world.part('spread')
+    const spread = { processStandardDeviation: '0.004' }
+    const [one, two] = [
+      await world.characteristic(part, 1, spread),
+      await world.characteristic(part, 2, spread),
+    ]
+    const ofProcess: Clause = { type: 'resolution-share', parameters: { share: 0.1, base: 'process' } }
+    const body = { effectiveOn: '2027-03-01' }
+    const agreed = await world.agree({ ...body, characteristicId: one.id, clauses: [ofProcess] })
+    await world.agree({ ...body, characteristicId: two.id, clauses: [equivalence()] })
+    const widen = (id: string, number: number) =>
+      world
+        .as(engineer)
+        .send('put', `/organisations/${world.supplier.id}/characteristics/${id}`)
+        .send({
+          ...limits,
+          number,
+          upperLimit: '24.025',
+          processStandardDeviation: '0.040',
+          expectedVersion: 1,
+        })
+    const refused = await widen(one.id, 1)
+    expect(refused.body).toMatchObject({ status: 409, code: 'spread-frozen' })
+    expect(refused.body.detail).toContain(`Agreement ${agreed.number} `)
+    expect((await widen(two.id, 2)).status).toBe(200)
   })
 
   /** Work in a transaction of the customer that stays open until `release`. */

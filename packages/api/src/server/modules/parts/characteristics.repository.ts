@@ -18,16 +18,24 @@ const ownCharacteristics = (tenant: Tenant) =>
 export const isCurrentRevision = sql<boolean>`${partRevisions.sequence} = (select max(r.sequence) from part_revisions r where r.relationship_id = ${parts.relationshipId} and r.part_id = ${parts.id})`
 
 /**
- * The number of the signed agreement that rests on the limits: one that covers the characteristic and was signed
- * when it already stood there. What a later revision brings is reopened by it.
+ * The number of the signed agreement that rests on a characteristic: one that covers it and was signed when it already
+ * stood there. What a later revision brings is reopened by it.
  */
-const frozenBy = sql<number | null>`(
+const signedFor = (resting = sql`true`) => sql<number | null>`(
   select min(a.number) from agreements a
   join agreement_versions v on v.relationship_id = a.relationship_id and v.agreement_id = a.id
   where a.relationship_id = ${characteristics.relationshipId}
     and v.state = 'signed' and v.signed_at >= ${characteristics.createdAt}
     and (a.part_id is null or a.part_id = ${characteristics.partId})
-    and (a.characteristic_id is null or a.characteristic_id = ${characteristics.id}))`
+    and (a.characteristic_id is null or a.characteristic_id = ${characteristics.id})
+    and ${resting})`
+
+/** Every signed agreement rests on the limits. */
+const frozenBy = signedFor()
+/** On the spread of the process those rest of which a clause takes a share of it. */
+const spreadFrozenBy = signedFor(
+  sql`jsonb_path_exists(v.text::jsonb, '$.clauses[*].parameters.** ? (@.base == "process")')`,
+)
 
 const fields = {
   characteristic: characteristics,
@@ -35,6 +43,7 @@ const fields = {
   revision: partRevisions,
   isCurrent: isCurrentRevision,
   frozenBy,
+  spreadFrozenBy,
   total: totalOverPages,
 }
 

@@ -26,6 +26,7 @@ import {
   isNotArchived,
   limitsFrozen,
   otherQuantity,
+  spreadFrozen,
 } from './parts.errors'
 import { partRow } from './parts.service'
 import { proofOfCharacteristics, type ProofOfCharacteristic } from './proof.service'
@@ -92,10 +93,14 @@ export async function changeCharacteristicOf(
   { expectedVersion, ...entered }: BodyOf<typeof changeCharacteristic>,
 ): Promise<CharacteristicAnswer> {
   await lockCharacteristic(tenant, characteristicId)
-  const { characteristic, part, frozenBy } = await loaded(tenant, characteristicId)
+  const { characteristic, part, frozenBy, spreadFrozenBy } = await loaded(tenant, characteristicId)
   if (part.archivedAt) throw isArchived('part')
   if (characteristic.archivedAt) throw isArchived('characteristic')
   if (frozenBy !== null && !sameLimits(characteristic, entered)) throw limitsFrozen(`Agreement ${frozenBy}`)
+  const { processStandardDeviation: spread } = characteristic
+  // A margin that is a share of the process variation would grow with it.
+  if (spreadFrozenBy !== null && spread !== null && spread !== entered.processStandardDeviation)
+    throw spreadFrozen(`Agreement ${spreadFrozenBy}`)
   if (!areCompatible(characteristic.unit, entered.unit)) {
     const measured = (await proofOfCharacteristics(tenant, [characteristicId])).get(characteristicId)
     if (measured && measured.tasks > 0) throw otherQuantity(entered.unit)

@@ -16,6 +16,12 @@ export const limitsFrozen = defineError(
   (agreement: string) =>
     `${agreement} rests on these limits, so nominal, limits, unit and class can no longer change here. Add a new revision of the part and change them there.`,
 )
+export const spreadFrozen = defineError(
+  'spread-frozen',
+  409,
+  (agreement: string) =>
+    `${agreement} has a clause that takes a share of the process variation, so the standard deviation of the process can no longer change here. Add a new revision of the part and change it there.`,
+)
 export const customerStandsBehind = defineError(
   'confirmed-by-customer',
   409,
