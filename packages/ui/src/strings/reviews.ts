@@ -190,7 +190,7 @@ export const challengeWords = {
     calculation: 'the way from the readings to the figure',
   } satisfies Record<reviews.ChallengeReason, string>,
   numbered: (number: number) => `Challenge ${number}`,
-  about: (reason: string) => `${reason} is in doubt`,
+  about: (reason: string) => `in doubt: ${reason.charAt(0).toLowerCase()}${reason.slice(1)}`,
   mark: (number: number) => `challenge ${number}`,
   states: {
     open: { supplier: 'waits for your answer', customer: 'waits for the supplier’s answer' },
@@ -244,8 +244,7 @@ export const challengeWords = {
 /** The recompute: what this browser found. */
 export const recomputeWords = {
   heading: 'Does it compute again?',
-  text: 'This browser fetches the computation that the signed text names, checks its hash, computes every clause from the readings and compares the results byte for byte.',
-  before: 'What signing would freeze is computed again in the same way.',
+  text: 'This browser fetches the computation that the text names, checks its hash, computes every clause from the readings and compares the results byte for byte.',
   act: 'Recompute',
   again: 'Recompute again',
   busy: 'Computing …',
@@ -257,7 +256,7 @@ export const recomputeWords = {
   differs: 'No. Something differs.',
   differsText: (count: number) =>
     `${formatCount(count, 'check does', 'checks do')} not agree. Do not decide on it before the reason is known.`,
-  stored: 'stored hash',
+  stored: 'hash named',
   recomputed: 'hash computed here',
   storedValue: 'stored',
   recomputedValue: 'computed here',
@@ -266,8 +265,12 @@ export const recomputeWords = {
       ? 'Show the check that agrees, with its hashes'
       : `Show the ${count} checks that agree, with their hashes`,
   hide: 'Hide the checks that agree',
+  unchecked: 'Not computed.',
+  uncheckedText:
+    'The computation that the text names could not be fetched, so this proves nothing either way. What needs no computing agrees.',
   same: 'equal',
   different: 'differs',
+  untold: 'not computed',
   path: 'First difference at',
   whole: 'the whole text',
   absent: 'not there',
@@ -281,8 +284,7 @@ export const recomputeWords = {
     'input-altered': 'The stored input is not the one the text names.',
     'output-altered': 'The stored result is not the one the text names.',
     'verdict-altered': 'The verdict in the text is not the one of its evaluation.',
-    'engine-unavailable':
-      'The computation named could not be fetched. Try again, or verify it from the evidence.',
+    'engine-unavailable': 'The computation named could not be fetched. Try again.',
     'engine-altered': 'The computation fetched is not the one with the hash named, so it was not run.',
     'recomputed-differs': 'Computing again gives another result.',
   } satisfies Record<ClauseProblem, string>,

@@ -1,6 +1,6 @@
 import type { Side, submissions } from '@evenrule/api/contract'
 import type { SubmissionState } from '@evenrule/api/contract/moves/submission'
-import { formatCount, formatDate } from '../format'
+import { capital, countWord, formatCount, formatDate } from '../format'
 
 /** Who stands on either side of a submission, and on which side the reader is. */
 export interface Parties {
@@ -62,12 +62,14 @@ export const submissionWords = {
     supplier: 'What have we put before our customers?',
     customer: 'Which submissions wait for our decision?',
   },
-  waitForUs: (count: number) => (count === 1 ? 'One waits for us' : `${count} wait for us`),
+  waitForUs: (count: number) => `${capital(countWord(count))} ${count === 1 ? 'waits' : 'wait'} for us`,
   noneForUs: 'Nothing waits for us',
   oldest: (days: number) => (days <= 0 ? ', the oldest since today' : `, the oldest for ${ageText(days)}`),
   waitForThem: {
-    supplier: (count: number) => (count === 1 ? 'one waits for a customer' : `${count} wait for customers`),
-    customer: (count: number) => (count === 1 ? 'one waits for a supplier' : `${count} wait for suppliers`),
+    supplier: (count: number) =>
+      count === 1 ? 'one waits for a customer' : `${countWord(count)} wait for customers`,
+    customer: (count: number) =>
+      count === 1 ? 'one waits for a supplier' : `${countWord(count)} wait for suppliers`,
   },
   search: 'Search gauge, part or characteristic',
   caption: 'Submissions',
@@ -137,7 +139,7 @@ export const sectionWords = {
     characteristic: 'the characteristic',
   },
   inForce: (day: string, scope: string) => `in force from ${day} for ${scope}`,
-  criteriaOn: 'Criteria of',
+  criteriaOn: 'Criteria as of',
   limits: 'Limits',
   process: 'Process standard deviation',
   gauge: 'Gauge',
@@ -198,8 +200,8 @@ export const sectionWords = {
   noChoices:
     'No computed study of this measuring task is there yet. Register one and take its readings first.',
   chooseStudies: 'Use these studies',
-  studyHint: (readings: number, collected: string) =>
-    `${formatCount(readings, 'reading')}, collected ${collected}`,
+  study: (code: string, readings: number, collected: string) =>
+    `${code}: ${formatCount(readings, 'reading')}, collected ${collected}`,
   notCollected: 'on no known day',
   warnings: 'What a reader of the figures should know',
   readings: (study: string) => `Readings of study ${study}`,

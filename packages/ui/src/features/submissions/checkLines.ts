@@ -9,6 +9,8 @@ export interface CheckLine {
   key: string
   label: string
   equal: boolean
+  /** It could not be computed, so it neither agrees nor differs. */
+  untold?: boolean
   /** Hashes; null where there is none to show. */
   stored: string | null
   recomputed: string | null
@@ -44,6 +46,7 @@ export function checkLines(
       key: `clause-${clause.clauseKey}`,
       label: nameOf(clause.clauseKey),
       equal: clause.equal,
+      untold: clause.problem === 'engine-unavailable',
       stored: clause.outputSha256,
       recomputed: clause.recomputedSha256,
       ...(clause.problem ? { problem: words.problems[clause.problem] } : {}),
@@ -51,6 +54,14 @@ export function checkLines(
       engine: { version: words.engineIs(clause.engineVersion), sha256: clause.engineSha256 },
     })),
   ]
+}
+
+/** What a check says as a whole. */
+export type CheckOutcome = 'equal' | 'differs' | 'unchecked'
+export function outcomeOf(lines: readonly CheckLine[]): CheckOutcome {
+  const open = lines.filter(({ equal }) => !equal)
+  if (!open.length) return 'equal'
+  return open.every(({ untold }) => untold) ? 'unchecked' : 'differs'
 }
 
 const meaningOf = (meaning: string): string =>

@@ -6,7 +6,7 @@ import { canonicalText, evaluate } from '@evenrule/metrology'
 import { describe, expect, it, vi } from 'vitest'
 import { actNames } from '../../strings/reviews'
 import { inOrder, isFresh, possibleActs } from './acts'
-import { checkLines } from './checkLines'
+import { checkLines, outcomeOf } from './checkLines'
 import { submissionOf } from './fixture'
 import { isWeakOnSafety, partiesOf, readContent, resultsOfStudy, sizeParts, waitsFor } from './reading'
 import { integrityOf, recomputeWith, type EngineSource } from './recompute'
@@ -168,6 +168,7 @@ describe('the recompute', () => {
     expect(text).toHaveBeenCalledTimes(1)
     const lines = checkLines(check, readContent(submission))
     expect(lines.map(({ equal }) => equal)).toEqual([true, true, true, true, true])
+    expect(outcomeOf(lines)).toBe('equal')
     expect(seen(lines[3]!.label)).toBe('Bias within ±5_% of tolerance, shown at 95_%')
   })
   it('names the field of a result that was changed', async () => {
@@ -181,6 +182,7 @@ describe('the recompute', () => {
     const line = checkLines(check, readContent(submission)).find(({ difference }) => difference)
     expect(line).toMatchObject({ equal: false, difference: { path: 'study.bias', stored: '0.25' } })
     expect(line?.problem).toMatch(/stored result/)
+    expect(outcomeOf(checkLines(check, readContent(submission)))).toBe('differs')
   })
   it('does not run an engine whose bytes have another hash', async () => {
     const submission = await submissionOf({ texts: fitting, engineSha256 })
@@ -196,6 +198,7 @@ describe('the recompute', () => {
     const check = await checkSubmission(submission, recomputeWith({ ...engine, text: async () => undefined }))
     expect(check.equal).toBe(false)
     expect(check.clauses[0]?.problem).toBe('engine-unavailable')
+    expect(outcomeOf(checkLines(check, readContent(submission)))).toBe('unchecked')
   })
   it('asks the browser for the very hash', () =>
     expect(integrityOf(engineSha256)).toBe(

@@ -33,7 +33,7 @@ export function useActs(read: Ref<ReadSubmission | undefined>, moved: () => Prom
     return challenges.find(
       (each) =>
         state !== undefined && possibleSayings(state, each.state, here.side, here.allows).includes('answer'),
-    )?.number
+    )
   })
 
   /** Leaves for the sign-in; the dialog goes first, so that its unsaved words hold nobody back. They are kept. */
