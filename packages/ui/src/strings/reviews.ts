@@ -1,5 +1,5 @@
 import type { ClauseProblem, reviews } from '@evenrule/api/contract'
-import { formatCount } from '../format'
+import { capital, formatCount } from '../format'
 import type { Parties } from './submissions'
 
 /** What can be done with a submission by a button; challenges have acts of their own. */
@@ -73,7 +73,7 @@ export const actWords: Record<ActName, ActWords> = {
     text: ({ supplier, gauge, safety }) =>
       safety
         ? `The characteristic is of class safety: a second person of your organisation must confirm before ${gauge} counts as accepted. ${supplier} is told then.`
-        : `${gauge} counts as accepted proof for this characteristic. ${supplier} is told at once, and the decision stands in the record of both sides.`,
+        : `${capital(gauge)} counts as accepted proof for this characteristic. ${supplier} is told at once, and the decision stands in the record of both sides.`,
     submit: 'Accept',
     cannot: 'You cannot accept it:',
   },
@@ -94,7 +94,7 @@ export const actWords: Record<ActName, ActWords> = {
   confirm: {
     title: 'Confirm the acceptance as second person?',
     text: ({ supplier, gauge }) =>
-      `${gauge} counts as accepted proof for this safety characteristic. ${supplier} is told at once, and both names stand in the record.`,
+      `${capital(gauge)} counts as accepted proof for this safety characteristic. ${supplier} is told at once, and both names stand in the record.`,
     submit: 'Confirm as second person',
     cannot: 'You cannot confirm it:',
   },

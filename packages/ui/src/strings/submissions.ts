@@ -9,9 +9,8 @@ export interface Parties {
   customer: string
 }
 
-const you = (parties: Parties, side: Side): string => (parties.side === side ? 'you' : parties[side])
 const whose = (parties: Parties, side: Side): string =>
-  parties.side === side ? 'your' : `${parties[side]}’s`
+  parties.side === side ? 'your' : `${parties[side]}${parties[side].endsWith('s') ? '’' : '’s'}`
 
 /** How long something has stood still: "today", "1 day", "6 days". */
 export const ageText = (days: number): string => (days <= 0 ? 'today' : formatCount(days, 'day'))
@@ -42,18 +41,15 @@ export const standingWords: Record<
     `Somebody else of ${parties.customer} must confirm the acceptance.`,
   ],
   accepted: (parties, _days, decidedAt) => [
-    `Accepted by ${you(parties, 'customer')} on ${formatDate(decidedAt)}.`,
+    `Accepted by ${parties.customer} on ${formatDate(decidedAt)}.`,
     '',
   ],
   'accepted-with-conditions': (parties, _days, decidedAt) => [
-    `Accepted with conditions by ${you(parties, 'customer')} on ${formatDate(decidedAt)}.`,
+    `Accepted with conditions by ${parties.customer} on ${formatDate(decidedAt)}.`,
     '',
   ],
-  refused: (parties, _days, decidedAt) => [
-    `Refused by ${you(parties, 'customer')} on ${formatDate(decidedAt)}.`,
-    '',
-  ],
-  withdrawn: (parties) => [`Taken back by ${you(parties, 'supplier')}.`, 'It asks for nothing any more.'],
+  refused: (parties, _days, decidedAt) => [`Refused by ${parties.customer} on ${formatDate(decidedAt)}.`, ''],
+  withdrawn: (parties) => [`Taken back by ${parties.supplier}.`, 'It asks for nothing any more.'],
   superseded: () => ['A later submission takes its place.', ''],
 }
 
@@ -172,7 +168,7 @@ export const sectionWords = {
   no: 'no',
   files: 'Files',
   filesText: 'Kept byte for byte; the hash of each stands in the frozen text.',
-  noFiles: 'No file belongs to it: the readings were typed or pasted, and no certificate is attached.',
+  noFiles: 'No file belongs to it: nothing was uploaded, and no certificate is attached.',
   fileRoles: {
     readings: 'readings as uploaded',
     'gauge-certificate': 'calibration certificate of the gauge',

@@ -35,7 +35,7 @@ describe('the question and its answer', () => {
     expect(shown?.strong).toMatch(/^Yes, .*clauses meet\.$/)
     expect(stands?.strong).toBe('It has waited 6 days for your decision.')
     const [, supplierReads] = answerOf(read, partiesOf(read.content, 'supplier'))
-    expect(supplierReads?.strong).toBe('It has waited 6 days for Brackwell Drivelines’s decision.')
+    expect(supplierReads?.strong).toBe('It has waited 6 days for Brackwell Drivelines’ decision.')
   })
   it('put the decision first once there is one', async () => {
     const submission = await submissionOf({ texts: biased, engineSha256 })

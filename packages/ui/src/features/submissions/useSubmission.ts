@@ -12,13 +12,14 @@ export function useSubmission() {
   const here = useHere()
   const route = useRoute()
   const counts = useCountsStore()
-  const { data, error, reload } = useLoaded(
+  const { data, error, loading, reload } = useLoaded(
     () => ({ submissionId: String(route.params.submissionId) }),
     async (at) => readContent(await api.call(submissions.readSubmission, { params: here.params(at) })),
   )
   return {
     read: data,
     error,
+    loading,
     reload,
     parties: computed(() => data.value && partiesOf(data.value.content, here.side)),
     /** After a move: the page and the counts beside the navigation. */
