@@ -56,6 +56,19 @@ const extent = (values: number[]): [number, number] =>
 const pathOf = (points: { x: number; y: number }[]): string =>
   points.map(({ x, y }, at) => `${at === 0 ? 'M' : 'L'}${x.toFixed(1)} ${y.toFixed(1)}`).join('')
 
+/** The points of a curve with more between them where they stand apart, so that labels keep off the whole line. */
+function followed(points: { x: number; y: number }[], step = 8): { x: number; y: number }[] {
+  return points.flatMap((point, at) => {
+    const next = points[at + 1]
+    if (!next) return [point]
+    const count = Math.max(1, Math.ceil(Math.hypot(next.x - point.x, next.y - point.y) / step))
+    return Array.from({ length: count }, (_, part) => ({
+      x: point.x + ((next.x - point.x) * part) / count,
+      y: point.y + ((next.y - point.y) * part) / count,
+    }))
+  })
+}
+
 /** Where everything of a plot of curves stands, in pixels. Null without a single defined point. */
 export function layoutCurves(input: CurveInput): CurveLayout | null {
   const series = input.series.map((each) => ({
@@ -91,10 +104,17 @@ export function layoutCurves(input: CurveInput): CurveLayout | null {
   const limit = input.limit && { y: y.scale.at(input.limit.y), label: input.limit.label }
   if (limit) {
     const width = textWidth(limit.label, 11)
-    taken.push({ x: right - width - 4, y: limit.y - 17, width: width + 4, height: 17 })
+    taken.push(
+      { x: right - width - 4, y: limit.y - 17, width: width + 4, height: 17 },
+      { x: left, y: limit.y - 1, width: right - left, height: 2 },
+    )
   }
   const frame = { x: left + 4, y: top, width: right - left - 4, height: bottom - top - 4 }
-  const labels = placeCurveLabels(pixels, frame, taken)
+  const labels = placeCurveLabels(
+    pixels.map(({ label, points }) => ({ label, points: followed(points) })),
+    frame,
+    taken,
+  )
   const zoneStart = input.pointer && xs[0] < 0 ? x.scale.at(-Math.abs(input.pointer.x)) : left
   return {
     left,

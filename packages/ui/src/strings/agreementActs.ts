@@ -134,6 +134,7 @@ export const taskCriteriaWords = {
   why: 'Why it applies',
   from: (agreement: number, version: number) => `Agreement ${agreement}, version ${version}`,
   scope: { relationship: 'for all parts', part: 'for this part', characteristic: 'for this characteristic' },
+  inForceSince: (day: string) => `in force since ${formatDate(day)}`,
   caption: 'Clauses that apply to this measuring task',
   propose: 'Go to agreements',
 } as const

@@ -43,6 +43,7 @@ export const listPageWords = {
   none: 'Nothing is agreed or proposed yet.',
   waiting: (count: number) => `${several(count, 'agreement')} ${count === 1 ? 'waits' : 'wait'} for us.`,
   nothingWaits: 'Nothing waits for us.',
+  drafts: (count: number) => `${several(count, 'draft')} of ours ${count === 1 ? 'is' : 'are'} not sent.`,
   total: (count: number) => `${formatCount(count, 'agreement')} in all.`,
   waitingHeading: 'Waits for us',
   allHeading: 'All agreements',
@@ -58,7 +59,8 @@ export const listPageWords = {
   changed: 'Last step',
   state: 'Standing',
   everyState: 'all',
-  versionSince: (version: number, day: string) => `version ${version}, since ${formatDate(day)}`,
+  version: (version: number) => `version ${version}`,
+  since: (day: string) => `since ${formatDate(day)}`,
   notYet: 'none yet',
   number: (number: number | null) => (number === null ? 'draft' : `agreement ${number}`),
   emptyTitle: 'No criteria yet',
@@ -70,13 +72,12 @@ export const listPageWords = {
 /** What a row of the list waits for, from one's own side. */
 export function standingText(row: agreements.AgreementRow, side: Side): string {
   const { state, rounds, proposedBy } = row.newest
-  const other = row.other.name
   if (state === 'draft') return 'our draft, not sent'
   if (state === 'proposed' || state === 'countered')
     return proposedBy === side
-      ? `round ${rounds}, ours: waits for ${other}`
-      : `round ${rounds} from ${other}: waits for our answer`
-  if (state === 'agreed') return `agreed: waits for ${signaturesOf(row.waitsOn, side, other)}`
+      ? `our round ${rounds} waits for their answer`
+      : `their round ${rounds} waits for our answer`
+  if (state === 'agreed') return `agreed, waits for ${signaturesOf(row.waitsOn, side)}`
   return {
     signed: `signed, in force from ${formatDate(row.newest.effectiveOn)}`,
     'in-force': 'in force',
@@ -86,9 +87,10 @@ export function standingText(row: agreements.AgreementRow, side: Side): string {
   }[state]
 }
 
-function signaturesOf(waitsOn: readonly Side[], side: Side, other: string): string {
+function signaturesOf(waitsOn: readonly Side[], side: Side, other?: string): string {
   if (waitsOn.length > 1) return 'both signatures'
-  return waitsOn[0] === side ? 'our signature' : `the signature of ${other}`
+  if (waitsOn[0] === side) return 'our signature'
+  return other ? `the signature of ${other}` : 'their signature'
 }
 
 export const roomWords = {
@@ -163,10 +165,11 @@ export const comparisonWords = {
   changed: 'changed',
   nothing: 'none',
   compareWith: 'Compare with',
-  was: (before: string) => `was ${before}`,
-  base: { none: 'nothing' },
+  was: (before: string) => `(was ${before})`,
+  alone: 'nothing',
   noClauses: 'No clause is in this proposal yet.',
-  notFor: (count: number) => `Cannot be computed for ${formatCount(count, 'characteristic')} of the scope:`,
+  notFor: (count: number, why: string) =>
+    `Cannot be computed for ${formatCount(count, 'characteristic')} of the scope. ${why}`,
   effects: {
     worse: (rule: string, before: string, after: string, bias: string) =>
       `A worse gauge passes the ${rule} more easily: at a bias of ${bias} ${before} → ${after} when its spread doubles.`,

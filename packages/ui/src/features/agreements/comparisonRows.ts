@@ -1,5 +1,6 @@
 import type { agreements } from '@evenrule/api/contract'
 import { comparisonWords as words } from '../../strings/agreements'
+import { problemWords } from '../../strings/problems'
 import { safetyFlagWords } from '../../strings/agreementActs'
 
 type Notes = Pick<agreements.AgreementRound, 'warnings' | 'flags'>
@@ -15,7 +16,7 @@ export function comparisonNotes(
       flag: flag ? safetyFlagWords[flag.code](flag.characteristicIds.length) : '',
       warnings: warnings
         .filter(({ clause }) => clause === place)
-        .map(({ message, characteristicIds }) => `${words.notFor(characteristicIds.length)} ${message}`),
+        .map(({ code, characteristicIds }) => words.notFor(characteristicIds.length, problemWords[code])),
     }
   }
 }

@@ -30,6 +30,12 @@ export interface ClauseDifference {
 /** The decisive subject first; within a subject the order of the catalogue. */
 const subjectOrder: readonly Subject[] = ['bias', 'resolution', 'calibration', 'design']
 
+/** Clauses in the order in which the room names subjects. */
+export const bySubject = <C extends { type: ClauseType }>(clauses: readonly C[]): C[] =>
+  [...clauses].sort(
+    (a, b) => subjectOrder.indexOf(subjectOf[a.type]) - subjectOrder.indexOf(subjectOf[b.type]),
+  )
+
 const typeOf = ({ before, after }: Pick<ClauseDifference, 'before' | 'after'>): ClauseType =>
   (after ?? before)!.type
 

@@ -7,6 +7,7 @@ import {
   type Clause,
   type ClauseType,
 } from '@evenrule/metrology'
+import { bySubject } from './differences'
 import { draftOf, readDraftParameters, type ClauseDraft } from '../../clauses/clauseDraft'
 
 /** A clause as typed. */
@@ -45,7 +46,7 @@ export const typedClause = (type: ClauseType, unit?: string, parameters?: object
 
 /** A set of clauses as it is offered for typing. */
 export const typedClauses = (clauses: readonly Clause[], unit?: string): TypedClause[] =>
-  clauses.map(({ type, parameters }) => typedClause(type, unit, parameters))
+  bySubject(clauses).map(({ type, parameters }) => typedClause(type, unit, parameters))
 
 /** Where a first proposal for everything starts: one clause of each subject, with the usual figures. */
 export const startingTypes: readonly ClauseType[] = [

@@ -50,14 +50,16 @@ export function useComparison(source: () => Compared) {
     return of && of.id !== version?.id ? of : undefined
   })
   const anythingInForce = computed(() => Boolean(inForce.value) || (isNew.value && source().wider.length > 0))
-  /** A version that is not in force itself can be held against what is. */
+  /** A version that is or was in force stands for itself; any other is held against what is. */
   const isNew = computed(() => {
     const { version, typed } = source()
-    return Boolean(typed) || version?.state !== 'in-force'
+    return Boolean(typed) || (version?.state !== 'in-force' && version?.state !== 'superseded')
   })
 
   const bases = computed(() => [
-    ...(anythingInForce.value && isNew.value ? [{ value: '', title: words.inForce }] : []),
+    ...(!isNew.value || anythingInForce.value
+      ? [{ value: '', title: isNew.value ? words.inForce : words.alone }]
+      : []),
     ...earlier.value.map(({ number, side }) => ({
       value: String(number),
       title: words.round(number, side, source().side, other.value),
@@ -67,7 +69,7 @@ export function useComparison(source: () => Compared) {
   const baseRound = computed(() => earlier.value.find(({ number }) => String(number) === base.value?.value))
   const before = computed<Clause[]>(() => {
     const { wider } = source()
-    if (!base.value) return []
+    if (!base.value || (!isNew.value && !baseRound.value)) return []
     const own = baseRound.value?.clauses ?? (inForce.value && standingRound(inForce.value)?.clauses) ?? []
     return effectiveClauses(own, wider)
   })
@@ -94,22 +96,23 @@ export function useComparison(source: () => Compared) {
     const from = source().wider.find((each) => each.clause === clause)
     return from ? words.wider(from.agreementNumber, from.scope) : ''
   }
-  const rows = computed<ComparisonRow[]>(() =>
-    differences.value.map((row) => ({
-      ...row,
-      beforeNote: noteOf(row.before),
-      afterNote: row.change === 'same' && base.value ? '' : noteOf(row.after),
-      effect: effectText(row, consequences.effects.value?.get(row.key), consequences.unit.value),
-      ...notes.value(row.after ? after.value.indexOf(row.after) : -1),
-    })),
-  )
   const beforeLabel = computed(() => {
     const { agreement } = source()
     if (!base.value || baseRound.value) return base.value?.title ?? ''
+    if (!isNew.value) return ''
     return inForce.value
       ? words.inForceOf(agreement?.number ?? null, inForce.value.number ?? 0)
       : words.inForce
   })
+  const rows = computed<ComparisonRow[]>(() =>
+    differences.value.map((row) => ({
+      ...row,
+      beforeNote: noteOf(row.before),
+      afterNote: row.change === 'same' && beforeLabel.value ? '' : noteOf(row.after),
+      effect: effectText(row, consequences.effects.value?.get(row.key), consequences.unit.value),
+      ...notes.value(row.after ? after.value.indexOf(row.after) : -1),
+    })),
+  )
   const afterLabel = computed(() => {
     const { version, side, typed } = source()
     if (typed) return words.draft
