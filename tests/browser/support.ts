@@ -81,8 +81,7 @@ export async function picture(page: Page, name: string): Promise<void> {
 }
 
 /** Errors a page wrote to its console or threw; a test expects none. */
-export function watchErrors(context: BrowserContext): string[] {
-  const errors: string[] = []
+export function watchErrors(context: BrowserContext, errors: string[] = []): string[] {
   context.on('page', (page) => {
     page.on('pageerror', (error) => errors.push(`${page.url()}: ${error.message}`))
     page.on('console', (message) => {

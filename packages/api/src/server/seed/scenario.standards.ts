@@ -18,7 +18,7 @@ export function standardFor({ partNumber, limits }: Pick<DemoTask, 'partNumber' 
   const width = lowerLimit && upperLimit ? Number(upperLimit) - Number(lowerLimit) : Number(upperLimit)
   return {
     code: `RS ${partNumber}-${number}`,
-    name: `Master for ${name.toLowerCase()}`,
+    name: `Master for ${name.charAt(0).toLowerCase()}${name.slice(1)}`,
     certifiedValue: (Number(base) + offset).toFixed(digits),
     unit,
     expandedUncertainty: (width / 40).toPrecision(2),

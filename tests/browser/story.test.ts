@@ -1,0 +1,237 @@
+import type { Browser, BrowserContext, Locator, Page } from 'playwright-core'
+import { afterAll, afterEach, beforeAll, describe, expect, it } from 'vitest'
+import { addresses, axeFaults, launch, picture, signIn, watchErrors } from './support'
+
+const part = '9022-005'
+const gauge = 'HG-6'
+const studyCode = `HG-6 story ${Date.now().toString(36)}`
+
+/** Picks an entry of a drop-down list, typing first where it searches. */
+async function choose(
+  within: Page | Locator,
+  label: string | RegExp,
+  entry: string | RegExp,
+  typed?: string,
+) {
+  const field = within.getByRole('combobox', { name: label })
+  // By keyboard, as the field offers it.
+  await field.focus()
+  if (typed) await field.pressSequentially(typed)
+  else await field.press('ArrowDown')
+  const page = 'mouse' in within ? within : within.page()
+  await page.getByRole('option', { name: entry }).first().click()
+}
+
+const clauseForms = (page: Page, subject: string): Locator =>
+  page.locator('fieldset').filter({ has: page.getByText(subject, { exact: true }) })
+
+/** Today as an address bar or a date field writes it. */
+const today = (): string => new Date().toLocaleDateString('sv-SE', { timeZone: 'Europe/Berlin' })
+
+/** Readings on a master of 61.49 mm, as a spreadsheet with a decimal comma saves them. */
+const csv = (): Buffer => {
+  const offsets = [1, 0, 2, -1, 1, 3, 0, 1, -2, 1, 2, 0, 1, -1, 0, 2, 1, 0, 3, 1, -1, 1, 0, 2, 1]
+  const rows = offsets.map((offset, at) => `${at + 1};${(61.49 + offset / 100).toFixed(2).replace('.', ',')}`)
+  return Buffer.from(`\uFEFFNo.;Reading [mm]\r\n${rows.join('\r\n')}\r\n`, 'utf8')
+}
+
+describe('the main job, from the first proposal to the acceptance', () => {
+  let browser: Browser
+  let supplier: BrowserContext
+  let customer: BrowserContext
+  let supplierPage: Page
+  let customerPage: Page
+  let errors: string[]
+  const app = addresses()
+
+  beforeAll(async () => {
+    browser = await launch()
+    const options = { viewport: { width: 1280, height: 860 }, locale: 'en-GB', timezoneId: 'Europe/Berlin' }
+    supplier = await browser.newContext(options)
+    customer = await browser.newContext(options)
+    errors = watchErrors(supplier, watchErrors(customer))
+    supplierPage = await supplier.newPage()
+    customerPage = await customer.newPage()
+    for (const page of [supplierPage, customerPage]) page.setDefaultTimeout(20_000)
+  })
+  afterAll(() => browser.close())
+  afterEach(async ({ task }) => {
+    if (task.result?.state !== 'fail') return
+    await picture(supplierPage, 'story-failed-supplier')
+    await picture(customerPage, 'story-failed-customer')
+  })
+
+  const as = async (page: Page, side: 'supplier' | 'customer', name: string) => {
+    await page.context().clearCookies()
+    await signIn(page, app[side], name)
+  }
+  const open = (page: Page, link: string) => page.getByRole('link', { name: link }).first().click()
+  const heading = (page: Page) => page.getByRole('heading', { level: 1 })
+
+  it('the customer proposes criteria for a part', async () => {
+    await as(customerPage, 'customer', 'Mara Lindqvist')
+    await open(customerPage, 'Agreements')
+    await customerPage.getByRole('button', { name: 'Propose criteria' }).first().click()
+    const dialog = customerPage.getByRole('dialog')
+    await choose(dialog, /Supplier/, /Velloy Springs/)
+    await choose(dialog, /Criteria for/, /One part number/)
+    await choose(dialog, /Part number/, new RegExp(part), part)
+    await dialog.getByRole('button', { name: /Begin|Open|Go on/ }).click()
+    await customerPage.getByRole('heading', { name: 'Our proposal' }).waitFor()
+    await customerPage.getByRole('button', { name: /^Bias: equivalence/ }).click()
+    await customerPage.getByLabel('Margin either way').fill('5')
+    await customerPage.getByLabel(/First day in force/).fill(today())
+    await customerPage.getByLabel('Comment to the other side').fill('Half the usual margin for the spring.')
+    await picture(customerPage, 'story-1-proposal')
+    await customerPage.getByRole('button', { name: /Send to Velloy Springs/ }).click()
+    await customerPage.getByText(/waits for an answer from Velloy Springs/).waitFor()
+  })
+
+  it('the supplier sees what the clause does and answers with a change', async () => {
+    await as(supplierPage, 'supplier', 'Nadia Ferro')
+    await supplierPage.getByRole('link', { name: /Answer the proposal/ }).first().click()
+    await supplierPage.getByRole('button', { name: 'Answer with changes' }).click()
+    await supplierPage.getByRole('heading', { name: 'Our answer' }).waitFor()
+    await supplierPage.getByText('Chance to meet the clause, by true bias').first().waitFor()
+    await supplierPage.getByLabel('Margin either way').fill('8')
+    await supplierPage
+      .getByLabel('Comment to the other side')
+      .fill('Eight per cent can be shown with 25 readings.')
+    await picture(supplierPage, 'story-2-answer')
+    await supplierPage.getByRole('button', { name: /Send to Brackwell/ }).click()
+    await supplierPage.getByText(/waits for an answer from Brackwell/).waitFor()
+  })
+
+  it('the customer accepts the answer, and an approver of each side signs the same text', async () => {
+    await customerPage.reload()
+    await customerPage.getByRole('button', { name: 'Accept the proposal' }).click()
+    await customerPage.getByRole('dialog').getByRole('button', { name: 'Accept the proposal' }).click()
+    await customerPage.getByText(/waits for both signatures/).waitFor()
+    const signedHashes: string[] = []
+    for (const [page, side, name] of [
+      [customerPage, 'customer', 'Joren Vask'],
+      [supplierPage, 'supplier', 'Ulf Rask'],
+    ] as const) {
+      const address = new URL(page.url()).pathname
+      await as(page, side, name)
+      await page.goto(app[side] + address)
+      await page.getByText('Chance to meet the clause, by true bias').first().waitFor()
+      await page.getByRole('button', { name: 'Read and sign' }).click()
+      signedHashes.push(await page.locator('#sign code').innerText())
+      await page.getByLabel(/I have seen what these clauses reward/).check()
+      await picture(page, `story-3-sign-${side}`)
+      await page.getByRole('button', { name: 'Sign', exact: true }).click()
+    }
+    await supplierPage.getByText(/signed by both sides, in force since/).waitFor()
+    expect(signedHashes[0]).toMatch(/^[0-9a-f]{64}$/)
+    expect(signedHashes[1]).toBe(signedHashes[0])
+  })
+
+  it('the supplier plans and registers a study before its first reading', async () => {
+    await as(supplierPage, 'supplier', 'Nadia Ferro')
+    await open(supplierPage, 'Studies')
+    await supplierPage
+      .getByRole('link', { name: 'Plan a study' })
+      .or(supplierPage.getByRole('button', { name: 'Plan a study' }))
+      .first()
+      .click()
+    await choose(supplierPage, /Measuring task/, new RegExp(`${gauge}.*${part}|${part}.*${gauge}`), gauge)
+    await supplierPage.getByLabel('Assumed spread').waitFor()
+    await choose(supplierPage, /Reference standard/, new RegExp(`RS ${part}-2`), `RS ${part}-2`)
+    await supplierPage.getByLabel('Assumed spread').fill('0,02')
+    await supplierPage.getByLabel('Planned readings').fill('25')
+    await supplierPage.getByLabel('Code of the study').fill(studyCode)
+    await picture(supplierPage, 'story-4-plan')
+    await supplierPage.getByRole('button', { name: 'Register the study' }).click()
+    await supplierPage
+      .getByRole('heading', { name: `Which readings does ${studyCode} still need?` })
+      .waitFor()
+  })
+
+  it('uploads a file with a decimal comma, sees how it was read, and computes', async () => {
+    await supplierPage.getByText('Upload a file').click()
+    await supplierPage
+      .locator('input[type=file]')
+      .setInputFiles({ name: 'height.csv', mimeType: 'text/csv', buffer: csv() })
+    await supplierPage.getByText('decimal comma', { exact: false }).first().waitFor()
+    await supplierPage.getByText('25 readings').first().waitFor()
+    await choose(supplierPage, 'Who took the readings', 'Nadia Ferro')
+    await supplierPage.keyboard.press('Escape')
+    await supplierPage.getByLabel('Appraiser code').fill('A1')
+    await supplierPage.getByLabel('Day of collection').fill(today())
+    await picture(supplierPage, 'story-5-readings')
+    await supplierPage.getByRole('button', { name: 'Store and compute' }).click()
+    await supplierPage.getByRole('dialog').getByRole('button', { name: 'Store and compute' }).click()
+    await supplierPage.getByRole('button', { name: /Prepare a submission/ }).waitFor()
+    await picture(supplierPage, 'story-6-result')
+    expect(await heading(supplierPage).innerText()).toContain(gauge)
+  })
+
+  it('sends the submission for signature, and an approver who took no reading signs it', async () => {
+    await supplierPage.getByRole('button', { name: /Prepare a submission/ }).click()
+    await supplierPage.getByRole('button', { name: 'Send for signature' }).click()
+    await supplierPage.getByRole('dialog').getByRole('button', { name: 'Send for signature' }).click()
+    await supplierPage.getByText(/waits for a signature/).waitFor()
+    const address = new URL(supplierPage.url()).pathname
+    await as(supplierPage, 'supplier', 'Ulf Rask')
+    await supplierPage.goto(app.supplier + address)
+    await supplierPage.getByRole('button', { name: 'Sign and submit' }).click()
+    await supplierPage.getByRole('dialog').getByRole('button', { name: 'Sign and submit' }).click()
+    await supplierPage.getByText(/waits for Brackwell Drivelines’s decision/).waitFor()
+    await picture(supplierPage, 'story-7-submitted')
+  })
+
+  it('the customer recomputes it in the browser, byte for byte, and accepts', async () => {
+    await as(customerPage, 'customer', 'Mara Lindqvist')
+    await open(customerPage, 'Submissions')
+    await customerPage
+      .getByRole('link', { name: new RegExp(gauge) })
+      .first()
+      .click()
+    await customerPage.getByRole('button', { name: 'Recompute' }).click()
+    await customerPage
+      .getByText(/byte for byte/)
+      .last()
+      .waitFor()
+    await customerPage.getByText(/Equal/).first().waitFor()
+    await picture(customerPage, 'story-8-recomputed')
+    await customerPage.getByRole('button', { name: 'Accept', exact: true }).click()
+    await customerPage.getByRole('dialog').getByRole('button', { name: 'Accept', exact: true }).click()
+    await customerPage.getByText(/Accepted by you on/).waitFor()
+    await picture(customerPage, 'story-9-accepted')
+  })
+
+  it('both sides see the same record, and its check finds it whole', async () => {
+    const seen: string[] = []
+    for (const [page, partner] of [
+      [supplierPage, 'Brackwell Drivelines'],
+      [customerPage, 'Velloy Springs'],
+    ] as const) {
+      await open(page, 'Record')
+      await choose(page, 'Record', partner)
+      await page.getByRole('button', { name: 'Check the record' }).click()
+      await page
+        .getByText(/unbroken|whole/i)
+        .last()
+        .waitFor()
+      await picture(page, `story-10-record-${partner.slice(0, 3)}`)
+      seen.push(await page.locator('main').innerText())
+    }
+    const accepted = seen.map((text) => /accepted submission \d+/.exec(text)?.[0])
+    expect(accepted[0]).toBeDefined()
+    expect(accepted[1]).toBe(accepted[0])
+    const hashes = seen.map((text) => /[0-9a-f]{64}/.exec(text)?.[0])
+    expect(hashes[0]).toBeDefined()
+    expect(hashes[1]).toBe(hashes[0])
+  })
+
+  it('tells those concerned by mail', async () => {
+    const answer = await supplierPage.request.get(`${app.mail}/messages.json`)
+    expect(await answer.text()).toContain('nadia.ferro@velloy.example')
+  })
+
+  it('leaves no error in either console, and no fault that axe finds', async () => {
+    expect(errors).toEqual([])
+    for (const page of [supplierPage, customerPage]) expect(await axeFaults(page)).toEqual([])
+  })
+})
