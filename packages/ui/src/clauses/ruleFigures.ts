@@ -52,6 +52,11 @@ export function ruleFigures(
       quantity === 'date'
         ? (value) => formatDate(dayIso(value))
         : (value, places) =>
-            formatNumber(value, { digits: places ?? (quantity === 'value' ? digits : undefined) }),
+            // There is no half reading: between whole numbers a scale of counts stays blank.
+            quantity === 'count' && !Number.isInteger(value)
+              ? ''
+              : formatNumber(value, {
+                  digits: quantity === 'count' ? 0 : (places ?? (quantity === 'value' ? digits : undefined)),
+                }),
   }
 }

@@ -42,7 +42,7 @@ export const planWords = {
   questionOf: (gauge: string) => `How many readings will show that ${gauge} is fit?`,
   answerWith: (readings: number) => `${formatCount(readings, 'reading')}`,
   answerRest: (chance: string) =>
-    `give a chance of ${chance} to meet every clause, if bias and spread are as assumed.`,
+    `give each clause a chance of at least ${chance} to be met, if bias and spread are as assumed.`,
   noSize: 'No number of readings does, as assumed.',
   noSizeRest: 'Assume a smaller bias or spread, use a better gauge, or ask for another criterion.',
   noNeed: 'No clause asks for a number.',
@@ -77,7 +77,7 @@ export const planWords = {
   spread: 'Assumed spread',
   spreadHint: 'Standard deviation of repeated readings, from an earlier study. The resolution is the least.',
   chance: 'Wanted chance',
-  chanceHint: 'To meet every clause, if bias and spread are as assumed.',
+  chanceHint: 'To meet each clause, if bias and spread are as assumed.',
   planned: 'Planned readings',
   plannedHint: (least: number) => `${formatNumber(least)} is the least for the wanted chance.`,
   plannedBelow: (least: number) =>
@@ -211,9 +211,13 @@ export const entryWords = {
   column: 'Column with the readings',
   columnChoice: (letter: string, name: string | null) => (name ? `${letter}, ${name}` : letter),
   columnNumbers: (count: number) => formatCount(count, 'number'),
+  separators: { comma: 'comma', semicolon: 'semicolon', tab: 'tab', none: 'nothing' } satisfies Record<
+    studies.ReadAs['separator'],
+    string
+  >,
+  decimals: { point: 'point', comma: 'comma' } satisfies Record<studies.ReadAs['decimal'], string>,
   separator: 'Between cells',
   decimal: 'Decimal sign',
-  detected: 'as found',
   row: 'Row',
   firstRows: 'First rows of the table',
   toRow: (rows: number) => `${formatCount(rows, 'row')} in all`,

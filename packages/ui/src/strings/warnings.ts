@@ -28,8 +28,19 @@ export function nameReadings(places: readonly number[]): string {
   return numbers.length ? `Readings ${numbers.join(', ')} and ${last}` : `Reading ${last}`
 }
 
+/** Sentences that take a direction from the warning's figures. */
+const directed: Partial<Record<WarningCode, (figures: Record<string, number>) => string | undefined>> = {
+  autocorrelation: ({ lag1Autocorrelation = 0 }) =>
+    lag1Autocorrelation < 0
+      ? 'Neighbouring readings lie on opposite sides more often than by chance, so the interval may be too wide.'
+      : undefined,
+  drift: ({ direction }) =>
+    direction === undefined ? undefined : `The readings ${direction > 0 ? 'rise' : 'fall'} with time.`,
+}
+
 /** A warning as a sentence that names the readings it is about. */
-export function describeWarning(warning: Pick<Warning, 'code' | 'readings'>): string {
+export function describeWarning(warning: Pick<Warning, 'code' | 'readings' | 'figures'>): string {
   const about = warning.readings?.length ? `${nameReadings(warning.readings)}: ` : ''
-  return about + warningWords[warning.code]
+  const sentence = warning.figures && directed[warning.code]?.(warning.figures)
+  return about + (sentence ?? warningWords[warning.code])
 }

@@ -137,7 +137,7 @@ describe('planning', () => {
       }) as unknown as studies.StudyPlanned
     expect(planAnswer(plan(14, 'size-found'), 0.9).map(seen)).toEqual([
       '14 readings',
-      'give a chance of 90 % to meet every clause, if bias and spread are as assumed.',
+      'give each clause a chance of at least 90 % to be met, if bias and spread are as assumed.',
     ])
     expect(planAnswer(plan(null, 'size-found', 'no-size-suffices'), 0.9)[0]).toBe(
       'No number of readings does, as assumed.',

@@ -15,6 +15,8 @@ export interface Entry {
   /** True computes, false keeps. */
   complete: Ref<boolean>
   kept: ComputedRef<number>
+  /** Readings that stand before those entered here. */
+  before(): number
   /** Takes the file to read. */
   choose(file: File): void
   /** Whether everything that can be checked here is in order. */
@@ -98,6 +100,7 @@ export function useEntry(
     preview,
     complete,
     kept,
+    before: () => (form.values.append ? kept.value : 0),
     choose(chosen) {
       file.value = chosen
       form.field('file')['onUpdate:modelValue'](chosen.name)
