@@ -135,7 +135,7 @@ export const roomWords = {
   accept: 'Accept the proposal',
   sign: 'Read and sign',
   withdraw: 'Withdraw',
-  send: (other: string) => `Send to ${other}`,
+  send: 'Send the proposal',
   goOn: 'Go on with our answer',
   saveDraft: 'Save draft',
   stopEditing: 'Stop editing',
