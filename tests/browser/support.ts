@@ -43,6 +43,17 @@ export async function signIn(page: Page, app: string, name: string): Promise<voi
   await page.waitForURL((url) => url.href.startsWith(app) && url.pathname.includes('/organisations/'))
 }
 
+/** Signs out by the account menu, where somebody is signed in. */
+export async function signOut(page: Page): Promise<void> {
+  if (page.url() === 'about:blank') return
+  await page.getByRole('button', { name: /^Account/ }).click()
+  await page.getByRole('button', { name: 'Sign out', exact: true }).click()
+  await page
+    .getByText(/signed out/i)
+    .first()
+    .waitFor()
+}
+
 /** Picks a person on the provider's page; also used when a signature asks for a fresh sign-in. */
 export async function chooseAtProvider(page: Page, name: string): Promise<void> {
   await page
