@@ -193,14 +193,27 @@ export const challengeWords = {
   about: (reason: string) => `in doubt: ${reason.charAt(0).toLowerCase()}${reason.slice(1)}`,
   mark: (number: number) => `challenge ${number}`,
   states: {
-    open: { supplier: 'waits for your answer', customer: 'waits for the supplier’s answer' },
+    open: {
+      supplier: 'waits for your answer',
+      customer: 'waits for the supplier’s answer',
+      anybody: 'waits for the supplier’s answer',
+    },
     answered: {
       supplier: 'answered; the customer has the next word',
       customer: 'answered; your word is next',
+      anybody: 'answered; the customer has the next word',
     },
-    'resolved-by-evidence': { supplier: 'settled by the answer', customer: 'settled by the answer' },
-    withdrawn: { supplier: 'withdrawn by the customer', customer: 'withdrawn' },
-    unresolved: { supplier: 'left unresolved', customer: 'left unresolved' },
+    'resolved-by-evidence': {
+      supplier: 'settled by the answer',
+      customer: 'settled by the answer',
+      anybody: 'settled by the answer',
+    },
+    withdrawn: {
+      supplier: 'withdrawn by the customer',
+      customer: 'withdrawn',
+      anybody: 'withdrawn by the customer',
+    },
+    unresolved: { supplier: 'left unresolved', customer: 'left unresolved', anybody: 'left unresolved' },
   },
   closed: (day: string, name: string | null) => (name === null ? day : `${day} by ${name}`),
   say: {

@@ -2,9 +2,9 @@ import type { Side, submissions } from '@evenrule/api/contract'
 import type { SubmissionState } from '@evenrule/api/contract/moves/submission'
 import { capital, countWord, formatCount, formatDate } from '../format'
 
-/** Who stands on either side of a submission, and on which side the reader is. */
+/** Who stands on either side of a submission, and on which side the reader is; null for anybody, as on paper. */
 export interface Parties {
-  side: Side
+  side: Side | null
   supplier: string
   customer: string
 }

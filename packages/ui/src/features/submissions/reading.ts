@@ -25,8 +25,8 @@ export function readContent(submission: submissions.Submission): ReadSubmission 
   return { submission, content, results }
 }
 
-/** Both organisations by name, and on which side the reader is. */
-export const partiesOf = ({ relationship }: Content, side: Side): Parties => ({
+/** Both organisations by name, and on which side the reader is; null for a reader of either or none. */
+export const partiesOf = ({ relationship }: Content, side: Side | null): Parties => ({
   side,
   supplier: relationship.supplier.name,
   customer: relationship.customer.name,

@@ -37,6 +37,17 @@ describe('the question and its answer', () => {
     const [, supplierReads] = answerOf(read, partiesOf(read.content, 'supplier'))
     expect(supplierReads?.strong).toBe('It has waited 6 days for Brackwell Drivelines’ decision.')
   })
+  it('name both sides on paper, which anybody may read', async () => {
+    const read = readContent(await submissionOf({ texts: fitting, engineSha256 }))
+    const sentences = answerOf(
+      readContent({ ...read.submission, state: 'challenged' }),
+      partiesOf(read.content, null),
+    )
+    expect(sentences[1]).toEqual({
+      strong: 'It has waited 6 days for Tarnfield Turned Parts’ answer.',
+      rest: 'Brackwell Drivelines challenges a result.',
+    })
+  })
   it('put the decision first once there is one', async () => {
     const submission = await submissionOf({ texts: biased, engineSha256 })
     const read = readContent({ ...submission, state: 'refused', decidedAt: '2026-11-08T09:00:00.000Z' })
