@@ -178,7 +178,7 @@ describe('the main job, from the first proposal to the acceptance', () => {
     await supplierPage.goto(app.supplier + address)
     await supplierPage.getByRole('button', { name: 'Sign and submit' }).click()
     await supplierPage.getByRole('dialog').getByRole('button', { name: 'Sign and submit' }).click()
-    await supplierPage.getByText(/waits for Brackwell Drivelines’s decision/).waitFor()
+    await supplierPage.getByText(/waits for Brackwell Drivelines’ decision/).waitFor()
     await picture(supplierPage, 'story-7-submitted')
   })
 
