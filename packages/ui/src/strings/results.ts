@@ -30,7 +30,9 @@ export function listSubjects(subjects: readonly Subject[]): string {
 /** The answer to "is it fit?", in words; the counts and reasons come from the results. */
 export const answerWords = {
   noCriteria: 'Nothing is judged.',
-  noCriteriaRest: 'No criteria were agreed when the study was registered; the figures stand for themselves.',
+  noCriteriaRest: 'No criteria were agreed when the study was registered.',
+  unjudged: (bias: string, interval: string, confidence: string) =>
+    `The bias is ${bias}${interval ? `, its ${confidence} interval ${interval}` : ''}.`,
   allMeet: (count: number) =>
     count === 1
       ? 'Yes, the one clause meets.'

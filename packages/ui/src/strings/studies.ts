@@ -153,6 +153,7 @@ export const collectWords = {
   criteriaNone:
     'No criteria were in force at registration: the readings are computed, and no clause judges them.',
   abandon: 'Abandon study',
+  abandonHint: 'When it cannot be finished. It still counts as an attempt.',
   abandonTitle: (code: string) => `Abandon ${code}?`,
   abandonText:
     'It ends without a result. It still counts as an attempt, and whoever sees the attempts sees the reason.',

@@ -5,6 +5,7 @@ import { entryInput, entryProblems, entryStart, readAsText } from './entry'
 import { chanceOf, planAnswer, slotsOf, suggestedCode } from './planFacts'
 import { verdictOf } from './studyText'
 import { emptyGrid, pastedCells, spreadPaste, typedText } from './typedGrid'
+import { unjudgedStudy, unjudgedText } from './unjudged'
 import { planBody } from './usePlan'
 
 /** Thin spaces made plain, so that expectations can be read. */
@@ -169,4 +170,27 @@ describe('a study in a list', () => {
     expect(verdictOf(null)).toBeNull()
     expect(verdictOf({})).toBeNull()
   })
+})
+
+describe('a study that no clause judges', () => {
+  const standard = {
+    id: '',
+    code: 'RS',
+    name: '',
+    certifiedValue: '1.000',
+    unit: 'cm',
+    expandedUncertainty: null,
+    coverageFactor: null,
+  }
+  const text = (measuredAs: 'value' | 'deviation', values: number[]) => {
+    const study = unjudgedStudy({ standard, measuredAs, unit: 'mm' }, { values })
+    return study && seen(unjudgedText(study, 'mm'))
+  }
+  it('still tells its bias, against the standard in the unit of the readings', () =>
+    expect(text('value', [10.01, 10.02, 10.03])).toBe(
+      'The bias is 0.020 mm, its 95 % interval −0.005 to 0.045 mm.',
+    ))
+  it('takes deviations as they are', () =>
+    expect(text('deviation', [0.01, 0.03])).toMatch(/^The bias is 0\.020 mm/))
+  it('has nothing to tell without readings', () => expect(text('value', [])).toBeNull())
 })
