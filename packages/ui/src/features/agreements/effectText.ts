@@ -25,13 +25,14 @@ export function effectText(
   effects: ReturnType<typeof clauseEffects> | undefined,
   unit: Unit,
 ): { text: string; wrong: boolean } {
+  if (!row.after) return { text: '', wrong: false }
   if (effects?.before ?? effects?.after) {
     const wrong = wrongOf(effects?.after ?? null, unit)
     if (wrong) return { text: wrong, wrong: true }
-    const replaced = row.after && row.change !== 'same' ? wrongOf(effects?.before ?? null, unit) : undefined
+    const replaced = row.change !== 'same' ? wrongOf(effects?.before ?? null, unit) : undefined
     return { text: replaced ?? words.effects.sound, wrong: false }
   }
-  if (row.before?.type === 'design-minimum' && row.after?.type === 'design-minimum') {
+  if (row.before?.type === 'design-minimum' && row.after.type === 'design-minimum') {
     const [before, after] = [row.before.parameters.readings, row.after.parameters.readings]
     if (before !== after) return { text: words.effects.readings(before, after), wrong: false }
   }

@@ -1,8 +1,9 @@
 import type { agreements, Side } from '@evenrule/api/contract'
 import { ref, shallowRef, watch } from 'vue'
+import { writeDraft } from '../../forms/drafts'
 import { ownDraft, standingRound, versionInForce, type WiderClause } from './negotiation'
 import { dayAfter, startingTypes, typedClause, typedClauses } from './proposalDraft'
-import type { ProposalTarget } from './useProposalForm'
+import { proposalKey, type ProposalTarget } from './useProposalForm'
 
 interface Edited {
   agreement: agreements.Agreement | undefined
@@ -62,6 +63,13 @@ export function useEditing(source: () => Edited) {
     target.value = undefined
   }
 
+  /** After a draft was discarded: closes the form, and forgets what was typed into it. */
+  function forget() {
+    const { agreement, version } = source()
+    stop()
+    for (const id of [agreement?.id, version?.id]) if (id) writeDraft(proposalKey(id), undefined)
+  }
+
   /** After a draft was kept: the same form goes on with the draft as the server has it now. */
   function goOn() {
     const next = targetOf(source())
@@ -76,5 +84,5 @@ export function useEditing(source: () => Edited) {
     },
     { immediate: true },
   )
-  return { target, start, begin, stop, goOn }
+  return { target, start, begin, stop, forget, goOn }
 }

@@ -13,6 +13,9 @@ export type ProposalTarget = { initial: TypedProposal } & (
   | { kind: 'begin' }
 )
 
+/** Where what is typed is kept, by the version or, for one that is not begun, the agreement. */
+export const proposalKey = (id: string): string => `agreement.proposal.${id}`
+
 /** The form of a proposal; `save(true)` sends it to the other side. */
 export function useProposalForm(
   source: () => { agreement: agreements.Agreement; target: ProposalTarget },
@@ -52,7 +55,7 @@ export function useProposalForm(
 
   const form = useForm<TypedProposal, agreements.Agreement>({
     initial: target.initial,
-    storageKey: `agreement.proposal.${target.kind === 'begin' ? agreement.id : target.version.id}`,
+    storageKey: proposalKey(target.kind === 'begin' ? agreement.id : target.version.id),
     validate: ({ clauses, effectiveOn }) => ({
       ...readTyped(clauses).problems,
       clauses: sending.value && clauses.length === 0 ? words.noClauses : undefined,
