@@ -1,6 +1,6 @@
 import type { studies } from '@evenrule/api/contract'
 import type { StudyState } from '@evenrule/api/contract/moves/study'
-import { formatChance, formatCount, formatNumber, joinWords } from '../format'
+import { countWord, formatChance, formatCount, formatNumber, joinWords } from '../format'
 
 const ordinals = ['', 'first', 'second', 'third', 'fourth', 'fifth', 'sixth', 'seventh', 'eighth', 'ninth']
 /** "first attempt", "12th attempt". */
@@ -43,6 +43,8 @@ export const planWords = {
   answerWith: (readings: number) => `${formatCount(readings, 'reading')}`,
   answerRest: (chance: string) =>
     `give each clause a chance of at least ${chance} to be met, if bias and spread are as assumed.`,
+  answerSome: (chance: string) =>
+    `give each clause that more readings make surer a chance of at least ${chance} to be met, if bias and spread are as assumed.`,
   noSize: 'No number of readings does, as assumed.',
   noSizeRest: 'Assume a smaller bias or spread, use a better gauge, or ask for another criterion.',
   noNeed: 'No clause asks for a number.',
@@ -259,7 +261,8 @@ export const entryWords = {
 } as const
 
 export const studyResultWords = {
-  question: (gauge: string, count: number) => `Is ${gauge} fit for these ${count} characteristics?`,
+  question: (gauge: string, count: number) =>
+    `Is ${gauge} fit for these ${countWord(count)} characteristics?`,
   prepare: 'Prepare a submission',
   prepareFor: (customer: string) => `Prepare a submission for ${customer}`,
   correct: 'Correct readings',
