@@ -1,6 +1,6 @@
 import type { Difference, SubmissionCheck } from '@evenrule/api/contract/submission-check'
 import { describeClause } from '../../strings/clauses'
-import { recomputeWords as words } from '../../strings/reviews'
+import { recomputeWords as words } from '../../strings/proofs'
 import { sectionWords } from '../../strings/submissions'
 import type { ReadSubmission } from './reading'
 
