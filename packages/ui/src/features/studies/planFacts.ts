@@ -6,7 +6,12 @@ import { planWords as words } from '../../strings/studies'
 export function planAnswer(plan: studies.StudyPlanned, chance: number): [string, string] {
   const clauses = plan.tasks.flatMap((task) => task.clauses)
   if (clauses.length === 0) return [words.noCriteria, words.noCriteriaRest]
-  if (plan.readings !== null) return [words.answerWith(plan.readings), words.answerRest(formatChance(chance))]
+  if (plan.readings !== null) {
+    const rest = clauses.some(({ reason }) => reason === 'size-does-not-help')
+      ? words.answerSome
+      : words.answerRest
+    return [words.answerWith(plan.readings), rest(formatChance(chance))]
+  }
   return clauses.some(({ reason }) => reason === 'no-size-suffices')
     ? [words.noSize, words.noSizeRest]
     : [words.noNeed, words.noNeedRest]

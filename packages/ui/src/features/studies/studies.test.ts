@@ -140,6 +140,9 @@ describe('planning', () => {
       '14 readings',
       'give each clause a chance of at least 90 % to be met, if bias and spread are as assumed.',
     ])
+    expect(planAnswer(plan(14, 'size-found', 'size-does-not-help'), 0.9)[1]).toMatch(
+      /^give each clause that more readings make surer/,
+    )
     expect(planAnswer(plan(null, 'size-found', 'no-size-suffices'), 0.9)[0]).toBe(
       'No number of readings does, as assumed.',
     )
