@@ -22,9 +22,6 @@ async function choose(
   await page.getByRole('option', { name: entry }).first().click()
 }
 
-const clauseForms = (page: Page, subject: string): Locator =>
-  page.locator('fieldset').filter({ has: page.getByText(subject, { exact: true }) })
-
 /** Today as an address bar or a date field writes it. */
 const today = (): string => new Date().toLocaleDateString('sv-SE', { timeZone: 'Europe/Berlin' })
 

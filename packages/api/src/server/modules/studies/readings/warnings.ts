@@ -38,9 +38,10 @@ export function warningsOf(readings: readonly Reading[], against: ReadAgainst): 
 
 function againstPlan(count: number, planned: number): ReadingsNote[] {
   if (count === planned) return []
+  const these = count === 1 ? 'This is one reading' : `These are ${count} readings`
   return count > planned
-    ? [warning('more-than-planned', `These are ${count} readings; the study planned ${planned}.`)]
-    : [warning('fewer-than-planned', `These are ${count} readings of the ${planned} planned.`)]
+    ? [warning('more-than-planned', `${these}; the study planned ${planned}.`)]
+    : [warning('fewer-than-planned', `${these} of the ${planned} planned.`)]
 }
 
 /** Numbers, from 1, of the readings for which something holds. */
