@@ -111,6 +111,8 @@ export const roomWords = {
   signed: (day: string) => `Signed by both sides, in force from ${formatDate(day)}.`,
   inForce: (count: number, day: string) =>
     `${several(count, 'clause')}, signed by both sides, in force since ${formatDate(day)}.`,
+  fromWider: (count: number) =>
+    `${several(count, 'more applies', 'more apply')} by agreements for a wider scope.`,
   superseded: 'No longer in force: a later version has taken its place.',
   withdrawn: (by: string, day: string) => `Withdrawn by ${by} on ${formatDate(day)}.`,
   lapsed: (day: string) => `Lapsed: both sides had not signed by ${formatDate(day)}.`,

@@ -173,6 +173,14 @@ describe('the answer of the room', () => {
     expect(answer.rest).toContain('Unless both sides sign by 1 Jan 2027, it lapses.')
   })
 
+  it('counts what applies by wider agreements beside what is in force', () => {
+    const applies = compareClauses([], [zeroTest, design(15), resolution(0.1)])
+    expect(roomAnswer(agreement([old], { inForce }), old, 'supplier', applies)).toEqual({
+      strong: 'Two clauses, signed by both sides, in force since 1 Jan 2027.',
+      rest: ['One more applies by agreements for a wider scope.'],
+    })
+  })
+
   it('asks from a first day that is still to come only', () => {
     expect(askedFrom({ today: '2026-12-01' }, open)).toBe('2027-01-01')
     expect(askedFrom({ today: '2026-12-01' }, old)).toBeNull()

@@ -38,8 +38,11 @@ export function roomAnswer(
       }
     case 'signed':
       return { strong: words.signed(effectiveOn), rest: changes }
-    case 'in-force':
-      return { strong: words.inForce(round?.clauses.length ?? 0, effectiveOn), rest: [] }
+    case 'in-force': {
+      const own = round?.clauses.length ?? 0
+      const wider = rows.filter(({ after }) => after).length - own
+      return { strong: words.inForce(own, effectiveOn), rest: wider > 0 ? [words.fromWider(wider)] : [] }
+    }
     case 'superseded':
       return { strong: words.superseded, rest: [] }
     case 'withdrawn':
