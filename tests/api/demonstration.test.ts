@@ -98,7 +98,13 @@ describe('the demonstration', () => {
       { query: { size: 100 } },
     )
     expect(new Set(customer.items.map(({ act }) => act))).toEqual(
-      new Set(['decide', 'confirm-as-second-person', 'answer-proposal', 'confirm-characteristics']),
+      new Set([
+        'decide',
+        'confirm-as-second-person',
+        'answer-proposal',
+        'finish-proposal',
+        'confirm-characteristics',
+      ]),
     )
   })
 

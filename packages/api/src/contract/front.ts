@@ -32,6 +32,7 @@ export const waitingActs = [
   'finish-submission',
   'sign-criteria',
   'answer-proposal',
+  'finish-proposal',
   'take-readings',
   'confirm-characteristics',
 ] as const

@@ -12,6 +12,7 @@ const pageOf: Record<front.WaitingAct, string> = {
   'finish-submission': 'submissions',
   'sign-criteria': 'agreements',
   'answer-proposal': 'agreements',
+  'finish-proposal': 'agreements',
   'take-readings': 'studies',
   'confirm-characteristics': 'parts',
 }
@@ -24,7 +25,7 @@ export function whatWaits({ act, gauge, name }: Waiting): { act: string; of: str
   const page = pageOf[act]
   const of =
     page === 'agreements'
-      ? words.agreement(name ?? '')
+      ? words.agreement(name)
       : page === 'studies'
         ? words.study(name ?? '', gauge?.code ?? '')
         : gauge

@@ -3,6 +3,7 @@ import type { WaitingAct } from '../../../contract/front'
 import type { Verdict } from '@evenrule/metrology'
 import type { Side } from '../../../contract/access'
 import type { Tenant } from '../../db/tenant'
+import { stateToday, waitsOnSide } from '../agreements/agreements.states'
 
 /** One row of what waits, as the database answers it. */
 export interface WaitingRow {
@@ -50,27 +51,30 @@ const waitingSubmissions = ({ side, organisationId }: Tenant): SQL => sql`
   join parts p on p.relationship_id = s.relationship_id and p.id = s.part_id
   where s.${ownColumn(side)} = ${organisationId}::uuid`
 
-/** The other side's newest proposal wants an answer; what both agreed wants this side's signature, until it lapses. */
-const waitingAgreements = ({ side, organisationId, now }: Tenant): SQL => sql`
-  select case v.state when 'agreed' then 'sign-criteria' else 'answer-proposal' end as act, a.id,
-    coalesce(v.agreed_at, r.sent_at) as since, v.${otherColumn(side)} as partner_id, a.number::text as name,
+/** Versions that wait for this side by the one rule of agreements: its draft, its answer or its signature. */
+function waitingAgreements(tenant: Tenant): SQL {
+  const { side, organisationId } = tenant
+  const state = stateToday(tenant)
+  return sql`
+  select case ${state} when 'agreed' then 'sign-criteria' when 'draft' then 'finish-proposal'
+      else 'answer-proposal' end as act, a.id,
+    coalesce(agreement_versions.agreed_at, r.sent_at, agreement_versions.created_at) as since,
+    a.${otherColumn(side)} as partner_id, a.number::text as name,
     null::text as gauge_code, null::text as gauge_name, p.number as part_number, a.characteristic_id,
     exists (select 1 from characteristics c where c.relationship_id = a.relationship_id and c.class = 'safety'
       and c.archived_at is null and (a.part_id is null or c.part_id = a.part_id)
       and (a.characteristic_id is null or c.id = a.characteristic_id)) as safety,
     null::text as verdict, null::integer as clauses_met, null::integer as clauses_total,
     jsonb_array_length(r.clauses) as count
-  from agreement_versions v
-  join agreements a on a.relationship_id = v.relationship_id and a.id = v.agreement_id
-  join relationships l on l.id = v.relationship_id
-  join lateral (select r.side, r.sent_at, r.clauses from agreement_rounds r where r.relationship_id = v.relationship_id
-    and r.version_id = v.id and r.state <> 'draft' order by r.number desc limit 1) r on true
+  from agreement_versions
+  join agreements a on a.relationship_id = agreement_versions.relationship_id and a.id = agreement_versions.agreement_id
+  join relationships on relationships.id = agreement_versions.relationship_id
+  join lateral (select r.side, r.sent_at, r.clauses from agreement_rounds r
+    where r.relationship_id = agreement_versions.relationship_id and r.version_id = agreement_versions.id
+    order by (r.state = 'draft'), r.number desc limit 1) r on true
   left join parts p on p.relationship_id = a.relationship_id and p.id = a.part_id
-  where v.${ownColumn(side)} = ${organisationId}::uuid and (
-    (v.state in ('proposed', 'countered') and r.side <> ${side})
-    or (v.state = 'agreed' and v.effective_on >= (${now}::timestamptz at time zone l.time_zone)::date
-      and not exists (select 1 from agreement_signatures g where g.relationship_id = v.relationship_id
-        and g.version_id = v.id and g.side = ${side})))`
+  where a.${ownColumn(side)} = ${organisationId}::uuid and ${waitsOnSide(state, sql`r.side`, side)}`
+}
 
 /** Studies of the supplier that were registered and have no result yet. */
 const waitingStudies = ({ organisationId }: Tenant): SQL => sql`
@@ -119,18 +123,14 @@ export async function selectWaiting(
 }
 
 /** Numbers for the navigation. */
-export async function selectCounts(
-  tenant: Tenant,
-): Promise<{ waiting: number; agreements: number; messages: number }> {
+export async function selectCounts(tenant: Tenant): Promise<{ waiting: number; agreements: number }> {
   const own = tenant.side === 'supplier' ? waitingStudies(tenant) : waitingCharacteristics(tenant)
-  const { rows } = await tenant.tx.execute<{ waiting: number; agreements: number; messages: number }>(sql`
+  const { rows } = await tenant.tx.execute<{ waiting: number; agreements: number }>(sql`
     with submissions_waiting as (${waitingSubmissions(tenant)}), agreements_waiting as (${waitingAgreements(tenant)}),
       own_waiting as (${own}), agreed as (select count(*)::integer as n from agreements_waiting)
     select ((select count(*) from submissions_waiting) + agreed.n + (select count(*) from own_waiting))::integer
         as waiting,
-      agreed.n as agreements,
-      (select count(*)::integer from messages m where m.org_id = ${tenant.organisationId}::uuid
-        and m.user_id = ${tenant.userId}::uuid and m.side = ${tenant.side} and m.read_at is null) as messages
+      agreed.n as agreements
     from agreed`)
   const [counts] = rows
   if (!counts) throw new Error('The counts were not answered.')

@@ -4,7 +4,14 @@ import { windowOf } from '../../db/paging'
 import type { Tenant } from '../../db/tenant'
 import { selectTimeZone } from '../gauges/sites.repository'
 import { ageInDays } from '../submissions/submissions.list.service'
-import { selectWaiting, type WaitingRow } from './waiting.repository'
+import { countUnread } from '../notifications/messages.repository'
+import { selectCounts, selectWaiting, type WaitingRow } from './waiting.repository'
+
+/** What waits for this side and what this person has not read, in numbers. */
+export const countsOf = async (tenant: Tenant) => ({
+  ...(await selectCounts(tenant)),
+  messages: await countUnread(tenant),
+})
 
 /** One page of what waits for this side, with how long the oldest has waited. */
 export async function listOfWaiting(tenant: Tenant, query: QueryOf<typeof listWaiting>) {
