@@ -111,3 +111,18 @@ describe.each(['supplier', 'customer'] as const)('the pages of the %s app', (sid
     expect(errors).toEqual([])
   })
 })
+
+describe('an empty organisation', () => {
+  it('is told on its front page what to do first', async () => {
+    const context = await browser.newContext({ viewport: { width: 390, height: 844 }, locale: 'en-GB' })
+    const page = await context.newPage()
+    page.setDefaultTimeout(20_000)
+    await signIn(page, addresses().supplier, 'Ada Pell')
+    await settle(page)
+    await page.getByRole('heading', { name: 'Begin here' }).waitFor()
+    await page.getByRole('link', { name: 'Open gauges' }).waitFor()
+    await picture(page, 'supplier-empty')
+    expect(await axeFaults(page)).toEqual([])
+    await context.close()
+  })
+})

@@ -78,7 +78,10 @@ async function run(
 function sendDownload(response: Response, download: Download): void {
   response.setHeader('Content-Type', download.contentType)
   response.setHeader('X-Content-Type-Options', 'nosniff')
-  if (!download.inline) {
+  if (download.inline) {
+    // Named by the hash of its content: it can never come to mean anything else.
+    response.setHeader('Cache-Control', 'private, max-age=31536000, immutable')
+  } else {
     const plain = download.name.replace(/[^\x20-\x7e]|["\\%]/g, '_')
     response.setHeader(
       'Content-Disposition',
