@@ -100,6 +100,7 @@ function servePages(app: Express, dist: string): void {
   app.use(express.static(dist, { index: false, maxAge: '1h' }))
   app.get('/{*page}', (_request, response) => {
     response.setHeader('Cache-Control', 'no-cache')
-    response.sendFile(join(dist, 'index.html'))
+    // By its root: the folder itself may lie under a name with a dot, such as `.data`.
+    response.sendFile('index.html', { root: dist })
   })
 }
