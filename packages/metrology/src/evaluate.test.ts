@@ -191,7 +191,7 @@ describe('the one entry of the computation', () => {
     [{}, 'missing', 'kind'],
     [{ kind: 5 }, 'not-text', 'kind'],
     [{ kind: 'summary', readings: 'five' }, 'not-a-list', 'readings'],
-    [{ kind: 'summary', readings: [1, , 2] }, 'not-a-number', 'readings[1]'], // eslint-disable-line no-sparse-arrays
+    [{ kind: 'summary', readings: [1, , 2] }, 'not-a-number', 'readings[1]'], // eslint-disable-line no-sparse-arrays -- the hole is the bad input
     [{ kind: 'summary', readings: [1, Infinity] }, 'not-finite', 'readings[1]'],
     [{ kind: 'summary', readings: [1], confidence: 1 }, 'too-large', 'confidence'],
     [{ kind: 'summary', readings: [1], tolerance: {} }, 'missing', 'tolerance'],

@@ -7,6 +7,7 @@ import { gaugeById } from '../gauges/gauges.lookup.service'
 import { frozenCharacteristic, taskById } from '../parts/parts.lookup.service'
 import { partRow } from '../parts/parts.service'
 import { canonicalText, sha256 } from '../record/record.append'
+import { partiesOf as partyNames, relationshipById } from '../relationships/relationships.lookup.service'
 import { clauseInputOf } from '../studies/clause-input'
 import { attemptsOn, resultsForTask, type StudyOfTask } from '../studies/studies.results.service'
 import {
@@ -17,12 +18,7 @@ import {
   whatJudges,
   type ToJudge,
 } from './submissions.content'
-import {
-  selectChosen,
-  selectEffectiveDays,
-  selectParties,
-  type ChosenStudy,
-} from './submissions.draft.repository'
+import { selectChosen, selectEffectiveDays, type ChosenStudy } from './submissions.draft.repository'
 import type { insertFrozen } from './submissions.frozen.repository'
 import { nextNumber, type SubmissionRow } from './submissions.repository'
 
@@ -124,11 +120,14 @@ export async function whatSigningFreezes(tenant: Tenant, submission: SubmissionR
   }
 }
 
-/** The relationship with the names of its parties; it is there, for the submission refers to it. */
+/** The relationship of a submission with the names of its parties, as the text freezes it. */
 export async function partiesOf(tenant: Tenant, relationshipId: string) {
-  const parties = await selectParties(tenant, relationshipId)
-  if (!parties) throw new Error('The relationship of a submission is not visible to this organisation.')
-  return parties
+  const relationship = await relationshipById(tenant, relationshipId)
+  return {
+    id: relationship.id,
+    ...(await partyNames(tenant, relationship)),
+    timeZone: relationship.timeZone,
+  }
 }
 
 const effectiveDays = (tenant: Tenant, relationshipId: string, judged: readonly ToJudge[]) =>

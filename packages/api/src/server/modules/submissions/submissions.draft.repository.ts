@@ -1,8 +1,6 @@
 import { and, asc, eq, inArray } from 'drizzle-orm'
 import type { Tenant } from '../../db/tenant'
 import { agreementVersions } from '../agreements/agreements.table'
-import { organisations } from '../organisations/organisations.table'
-import { relationships } from '../relationships/relationships.table'
 import type { SubmissionRow } from './submissions.repository'
 import { submissionNotes, submissionStudies } from './submissions.table'
 
@@ -55,24 +53,6 @@ export async function insertNote(tenant: Tenant, { relationshipId, id }: Key, te
   await tenant.tx
     .insert(submissionNotes)
     .values({ orgId, relationshipId, submissionId: id, userId, text, createdAt })
-}
-
-/** The relationship with the names of its parties. */
-export async function selectParties({ tx }: Tenant, relationshipId: string) {
-  const [relationship] = await tx.select().from(relationships).where(eq(relationships.id, relationshipId))
-  if (!relationship) return undefined
-  const { supplierOrgId, customerOrgId } = relationship
-  const named = await tx
-    .select({ id: organisations.id, name: organisations.name })
-    .from(organisations)
-    .where(inArray(organisations.id, [supplierOrgId, customerOrgId]))
-  const party = (id: string) => ({ id, name: named.find((each) => each.id === id)?.name ?? '' })
-  return {
-    id: relationship.id,
-    supplier: party(supplierOrgId),
-    customer: party(customerOrgId),
-    timeZone: relationship.timeZone,
-  }
 }
 
 /** The first day in force of each version. */
