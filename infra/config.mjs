@@ -64,6 +64,7 @@ export function readConfig(env = process.env) {
     data,
     port,
     logLevel: env.LOG_LEVEL || 'info',
+    clockFile: env.EVENRULE_CLOCK_FILE ? resolve(env.EVENRULE_CLOCK_FILE) : undefined,
     address: {
       supplier: `http://localhost:${port.supplier}`,
       customer: `http://localhost:${port.customer}`,
@@ -116,6 +117,7 @@ export function childEnvironment(config, secrets) {
     NODE_ENV: 'production',
     LOG_LEVEL: config.logLevel,
     EVENRULE_ROOT: config.root,
+    ...(config.clockFile ? { EVENRULE_CLOCK_FILE: config.clockFile } : {}),
     EVENRULE_HOST: host,
     ...Object.fromEntries(
       Object.entries(ports).map(([name, { variable }]) => [variable, `${config.port[name]}`]),

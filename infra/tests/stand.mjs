@@ -53,7 +53,12 @@ export class TestStand {
     const environment = Object.fromEntries(
       Object.values(ports).map(({ variable }, at) => [variable, `${free[at]}`]),
     )
-    this.#config = readConfig({ ...environment, EVENRULE_DATA: data, LOG_LEVEL: process.env.LOG_LEVEL })
+    this.#config = readConfig({
+      ...environment,
+      EVENRULE_DATA: data,
+      EVENRULE_CLOCK_FILE: join(data, 'clock-days'),
+      LOG_LEVEL: process.env.LOG_LEVEL,
+    })
     this.#instance = new Instance(this.#config, { say: this.#say, durable: false })
     this.#signal.addEventListener('abort', () => this.#instance.stop())
     await this.#instance.claim()
@@ -143,6 +148,7 @@ export class TestStand {
       E2E_CUSTOMER_URL: address.customer,
       E2E_OIDC_URL: address.oidc,
       E2E_MAIL_URL: address.mail,
+      E2E_CLOCK_FILE: this.#config.clockFile,
       CHROMIUM_PATH: chromium,
       // What was built for this run, so that a further instance need not build it again.
       TEST_BUILD_FOLDER: this.#config.folder.build,

@@ -1,5 +1,4 @@
-import { mkdirSync } from 'node:fs'
-import { readFileSync } from 'node:fs'
+import { mkdirSync, readFileSync, writeFileSync } from 'node:fs'
 import { createRequire } from 'node:module'
 import { chromium, type Browser, type BrowserContext, type Page } from 'playwright-core'
 
@@ -15,6 +14,12 @@ export const addresses = () => ({
   customer: need('E2E_CUSTOMER_URL'),
   mail: need('E2E_MAIL_URL'),
 })
+
+/**
+ * Lets the running instance’s clock go so many days ahead of the machine’s; 0 puts it back. The browser’s own clock
+ * stays, so let pages say what the server says.
+ */
+export const moveClock = (days: number): void => writeFileSync(need('E2E_CLOCK_FILE'), `${days}`)
 
 /** Debian's Chromium, headless, with nothing that reaches for the network by itself. */
 export const launch = (): Promise<Browser> =>

@@ -10,6 +10,8 @@ export interface Config {
   s3: { endpoint: string; bucket: string; accessKeyId: string; secretAccessKey: string; region: string }
   enginesDir: string
   logLevel: string
+  /** A file that says how many days ahead the clock runs; only where somebody moves it on purpose. */
+  clockFile: string | undefined
 }
 export interface OidcClient {
   id: string
@@ -23,6 +25,7 @@ export interface WorkerConfig {
   smtpUrl: string
   mailFrom: string
   logLevel: string
+  clockFile: string | undefined
 }
 
 function need(env: NodeJS.ProcessEnv, name: string): string {
@@ -63,6 +66,7 @@ export function readConfig(env: NodeJS.ProcessEnv): Config {
     },
     enginesDir: need(env, 'ENGINES_DIR'),
     logLevel: env.LOG_LEVEL ?? 'info',
+    clockFile: env.EVENRULE_CLOCK_FILE,
   }
 }
 
@@ -75,6 +79,7 @@ export function readWorkerConfig(env: NodeJS.ProcessEnv): WorkerConfig {
     smtpUrl: need(env, 'SMTP_URL'),
     mailFrom: env.MAIL_FROM ?? `Evenrule <evenrule@${new URL(origins.supplier).hostname}>`,
     logLevel: env.LOG_LEVEL ?? 'info',
+    clockFile: env.EVENRULE_CLOCK_FILE,
   }
 }
 

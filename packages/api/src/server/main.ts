@@ -2,6 +2,7 @@ import type { Server } from 'node:http'
 import { pino } from 'pino'
 import { sides, type Side } from '../contract/access'
 import { createApp } from './app'
+import { openClock } from './clock'
 import { readConfig } from './config'
 import { openDatabase } from './db/database'
 import { openEngines } from './integrations/engines'
@@ -16,7 +17,7 @@ const logger = pino({ level: config.logLevel, redact: ['req.headers', 'res.heade
 const { database, pool } = openDatabase(config.databaseUrl)
 const sessions = openSessions(config)
 const services: Services = {
-  clock: () => new Date(),
+  clock: openClock(config.clockFile),
   files: openFileStore(config.s3),
   engines: await openEngines(config.enginesDir),
   logger,
@@ -24,6 +25,7 @@ const services: Services = {
 const routes = allRoutes({ database, config, identity: openIdentity(config), sessions })
 
 const servers = sides.map((side) => listen(side))
+if (config.clockFile) logger.warn({ file: config.clockFile }, 'the clock follows a file')
 logger.info({ ports: config.ports, engine: services.engines.current.version }, 'api ready')
 for (const signal of ['SIGTERM', 'SIGINT'] as const) process.once(signal, () => void stop())
 

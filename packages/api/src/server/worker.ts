@@ -1,4 +1,5 @@
 import { pino } from 'pino'
+import { openClock } from './clock'
 import { readWorkerConfig } from './config'
 import { openDatabase } from './db/database'
 import { openMail } from './integrations/mail'
@@ -10,6 +11,7 @@ const interval = 1_000
 const config = readWorkerConfig(process.env)
 const logger = pino({ level: config.logLevel, base: { process: 'worker' } })
 const { database, pool } = openDatabase(config.systemDatabaseUrl, 2)
+const clock = openClock(config.clockFile)
 const transport = openMail({ url: config.smtpUrl, from: config.mailFrom })
 const stopping = new AbortController()
 for (const signal of ['SIGTERM', 'SIGINT'] as const) process.once(signal, () => stopping.abort())
@@ -18,7 +20,7 @@ logger.info('worker ready')
 while (!stopping.signal.aborted) {
   try {
     await sendDueMail(
-      { database, transport, origins: config.origins, logger, clock: () => new Date() },
+      { database, transport, origins: config.origins, logger, clock },
       () => stopping.signal.aborted,
     )
   } catch (error) {
