@@ -27,7 +27,14 @@ export default defineConfig({
       project('reference', ['tests/reference/**/*.test.ts'], { testTimeout: 120_000 }),
       project('api', ['tests/api/**/*.test.ts']),
       project('security', ['tests/security/**/*.test.ts'], { testTimeout: 120_000 }),
+      // Two files at a time share the instance: each works on parts, tasks and agreements of its own.
       project('browser', ['tests/browser/**/*.test.ts'], {
+        maxWorkers: 2,
+        testTimeout: 300_000,
+        hookTimeout: 120_000,
+      }),
+      // What moves the clock of the instance, one file after the other.
+      project('calendar', ['tests/calendar/**/*.test.ts'], {
         fileParallelism: false,
         testTimeout: 300_000,
         hookTimeout: 120_000,

@@ -13,6 +13,7 @@ export const stages = [
   { name: 'api', needs: 'database' },
   { name: 'security', needs: 'database' },
   { name: 'browser', needs: 'product' },
+  { name: 'calendar', needs: 'product' },
   { name: 'faults', needs: 'product' },
 ]
 

@@ -81,7 +81,8 @@ async function open(page: Page, base: string, path: string): Promise<void> {
 }
 
 describe.each(['supplier', 'customer'] as const)('the pages of the %s app', (side) => {
-  it.each(looks)('are sound at $width px in $colorScheme', async ({ width, height, colorScheme }) => {
+  // Two windows at once: a page mostly waits for its data.
+  it.concurrent.each(looks)('are sound at $width px in $colorScheme', async ({ width, height, colorScheme }) => {
     const context = await browser.newContext({
       viewport: { width, height },
       colorScheme,

@@ -17,7 +17,8 @@ export const addresses = () => ({
 
 /**
  * Lets the running instance’s clock go so many days ahead of the machine’s; 0 puts it back. The browser’s own clock
- * stays, so let pages say what the server says.
+ * stays, so let pages say what the server says; and a fresh sign-in is judged by it, so nobody signs while it is moved.
+ * Only for tests in tests/calendar, which run one after the other.
  */
 export const moveClock = (days: number): void => writeFileSync(need('E2E_CLOCK_FILE'), `${days}`)
 
