@@ -12,6 +12,8 @@ export interface RunInput {
   margin?: Ends | null
   /** Zero-based places of readings to mark. */
   marked?: readonly number[]
+  /** Zero-based places of readings that are chosen, or in question. */
+  framed?: readonly number[]
   width: number
   height: number
   yFormat?: (value: number, places: number) => string
@@ -27,7 +29,7 @@ export interface RunLayout {
   x: Axis
   y: Axis
   radius: number
-  points: { x: number; y: number; marked: boolean; number: number }[]
+  points: { x: number; y: number; marked: boolean; framed: boolean; number: number }[]
   zone: { y: number; height: number } | null
   band: { y: number; height: number } | null
   lines: { kind: 'limit' | 'reference' | 'mean'; y: number; label: string; labelY: number }[]
@@ -63,6 +65,7 @@ export function layoutRun(input: RunInput): RunLayout | null {
     format: (value) => (Number.isInteger(value) ? String(value) : ''),
   })
   const marked = new Set(input.marked)
+  const framed = new Set(input.framed)
   const upper = margin?.upper == null ? top : y.scale.at(margin.upper)
   const lower = margin?.lower == null ? bottom : y.scale.at(margin.lower)
   const at = lines.map(({ value }) => y.scale.at(value))
@@ -79,6 +82,7 @@ export function layoutRun(input: RunInput): RunLayout | null {
       x: x.scale.at(index + 1),
       y: y.scale.at(value),
       marked: marked.has(index),
+      framed: framed.has(index),
       number: index + 1,
     })),
     zone:

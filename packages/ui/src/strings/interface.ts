@@ -106,6 +106,7 @@ export const plotWords = {
   allowedBias: 'allowed bias',
   planned: (count: number) => `planned, ${count} readings`,
   marked: (readings: string) => `marked: ${readings.toLowerCase()}`,
+  framed: (readings: string) => `in a frame: ${readings.toLowerCase()}`,
   runTitle: (count: number) => `${count} readings in the order taken`,
   runRange: (low: string, high: string) => `, from ${low} to ${high}`,
   chanceTitle: 'Chance to meet the clause, by true bias',
