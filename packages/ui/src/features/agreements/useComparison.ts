@@ -5,7 +5,7 @@ import { comparisonWords as words } from '../../strings/agreements'
 import type { ComparisonRow } from './ClauseComparison.vue'
 import { comparisonNotes } from './comparisonRows'
 import { compareClauses } from './differences'
-import { effectText } from './effectText'
+import { effectText } from '../consequences/effectText'
 import {
   effectiveClauses,
   otherOf,
@@ -14,7 +14,7 @@ import {
   versionInForce,
   type WiderClause,
 } from './negotiation'
-import { useConsequences } from './useConsequences'
+import { useConsequences } from '../consequences/useConsequences'
 
 interface Compared {
   agreement: agreements.Agreement | undefined

@@ -4,7 +4,7 @@ import { computed, ref } from 'vue'
 import { consequenceWords as words } from '../../strings/consequences'
 import { anyTolerance, inReadableUnit } from './assumptions'
 import { hasConsequences } from './consequenceRows'
-import type { ClauseDifference } from './differences'
+import type { ClauseDifference } from '../agreements/differences'
 import { useAssumptions } from './useAssumptions'
 import { useEffects } from './useEffects'
 

@@ -2,7 +2,7 @@ import { formatChance, type Unit } from '../../format'
 import { comparisonWords as words } from '../../strings/agreements'
 import { biasText, ruleNames } from '../../strings/consequences'
 import type { ClauseEffect, clauseEffects } from './consequenceRows'
-import type { ClauseDifference } from './differences'
+import type { ClauseDifference } from '../agreements/differences'
 
 const wrongOf = (effect: ClauseEffect | null, unit: Unit): string | undefined => {
   const worse = effect?.computed.incentives.worseRepeatabilityHelps

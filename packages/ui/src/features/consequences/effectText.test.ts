@@ -1,7 +1,7 @@
 import type { Clause } from '@evenrule/metrology'
 import { describe, expect, it } from 'vitest'
 import { clauseEffects } from './consequenceRows'
-import { compareClauses } from './differences'
+import { compareClauses } from '../agreements/differences'
 import { effectText } from './effectText'
 
 const characteristic = { unit: 'µm', tolerance: { lower: -25, upper: 25 } }
