@@ -131,6 +131,26 @@ CREATE TABLE "reference_standards" (
 );
 --> statement-breakpoint
 ALTER TABLE "reference_standards" ENABLE ROW LEVEL SECURITY;--> statement-breakpoint
+CREATE TABLE "gauge_events" (
+	"org_id" uuid NOT NULL,
+	"id" uuid PRIMARY KEY NOT NULL,
+	"gauge_id" uuid,
+	"standard_id" uuid,
+	"kind" text NOT NULL,
+	"happened_on" date NOT NULL,
+	"words" text NOT NULL,
+	"last_good_on" date,
+	"calibration_id" uuid,
+	"file_id" uuid,
+	"suspended" integer NOT NULL,
+	"stays" integer NOT NULL,
+	"created_at" timestamp (3) with time zone NOT NULL,
+	"created_by" uuid NOT NULL,
+	CONSTRAINT "gauge_events_org_id" UNIQUE("org_id","id"),
+	CONSTRAINT "gauge_events_of_one_thing" CHECK ((gauge_id is null) <> (standard_id is null))
+);
+--> statement-breakpoint
+ALTER TABLE "gauge_events" ENABLE ROW LEVEL SECURITY;--> statement-breakpoint
 CREATE TABLE "characteristics" (
 	"id" uuid PRIMARY KEY NOT NULL,
 	"relationship_id" uuid NOT NULL,
@@ -209,6 +229,39 @@ CREATE TABLE "parts" (
 );
 --> statement-breakpoint
 ALTER TABLE "parts" ENABLE ROW LEVEL SECURITY;--> statement-breakpoint
+CREATE TABLE "agreement_comments" (
+	"id" uuid PRIMARY KEY NOT NULL,
+	"relationship_id" uuid NOT NULL,
+	"supplier_org_id" uuid NOT NULL,
+	"customer_org_id" uuid NOT NULL,
+	"version_id" uuid NOT NULL,
+	"round_id" uuid NOT NULL,
+	"about" text NOT NULL,
+	"clause_key" text,
+	"side" text NOT NULL,
+	"user_id" uuid NOT NULL,
+	"at" timestamp (3) with time zone NOT NULL,
+	"text" text NOT NULL
+);
+--> statement-breakpoint
+ALTER TABLE "agreement_comments" ENABLE ROW LEVEL SECURITY;--> statement-breakpoint
+CREATE TABLE "agreement_marks" (
+	"id" uuid PRIMARY KEY NOT NULL,
+	"relationship_id" uuid NOT NULL,
+	"supplier_org_id" uuid NOT NULL,
+	"customer_org_id" uuid NOT NULL,
+	"version_id" uuid NOT NULL,
+	"round_id" uuid NOT NULL,
+	"about" text NOT NULL,
+	"clause_key" text,
+	"side" text NOT NULL,
+	"user_id" uuid NOT NULL,
+	"at" timestamp (3) with time zone NOT NULL,
+	"sha256" text NOT NULL,
+	"accepted" boolean NOT NULL
+);
+--> statement-breakpoint
+ALTER TABLE "agreement_marks" ENABLE ROW LEVEL SECURITY;--> statement-breakpoint
 CREATE TABLE "agreement_rounds" (
 	"id" uuid PRIMARY KEY NOT NULL,
 	"relationship_id" uuid NOT NULL,
@@ -219,13 +272,21 @@ CREATE TABLE "agreement_rounds" (
 	"side" text NOT NULL,
 	"state" text NOT NULL,
 	"clauses" jsonb NOT NULL,
+	"terms" jsonb NOT NULL,
 	"effective_on" date NOT NULL,
 	"comment" text DEFAULT '' NOT NULL,
+	"answers_round" integer,
+	"withdrawn_clauses" text[] DEFAULT '{}' NOT NULL,
+	"house_terms_id" uuid,
+	"house_terms_number" integer,
+	"case_submission_id" uuid,
+	"case_challenge_id" uuid,
 	"created_at" timestamp (3) with time zone NOT NULL,
 	"created_by" uuid NOT NULL,
+	"saved_at" timestamp (3) with time zone NOT NULL,
 	"sent_at" timestamp (3) with time zone,
 	"row_version" integer DEFAULT 1 NOT NULL,
-	CONSTRAINT "agreement_rounds_number" UNIQUE("relationship_id","version_id","number")
+	CONSTRAINT "agreement_rounds_relationship_id" UNIQUE("relationship_id","id")
 );
 --> statement-breakpoint
 ALTER TABLE "agreement_rounds" ENABLE ROW LEVEL SECURITY;--> statement-breakpoint
@@ -532,6 +593,123 @@ CREATE TABLE "decisions" (
 );
 --> statement-breakpoint
 ALTER TABLE "decisions" ENABLE ROW LEVEL SECURITY;--> statement-breakpoint
+CREATE TABLE "request_answers" (
+	"relationship_id" uuid NOT NULL,
+	"supplier_org_id" uuid NOT NULL,
+	"customer_org_id" uuid NOT NULL,
+	"request_id" uuid NOT NULL,
+	"task_id" uuid NOT NULL,
+	"submission_id" uuid NOT NULL,
+	CONSTRAINT "request_answers_relationship_id_request_id_submission_id_pk" PRIMARY KEY("relationship_id","request_id","submission_id")
+);
+--> statement-breakpoint
+ALTER TABLE "request_answers" ENABLE ROW LEVEL SECURITY;--> statement-breakpoint
+CREATE TABLE "request_tasks" (
+	"relationship_id" uuid NOT NULL,
+	"supplier_org_id" uuid NOT NULL,
+	"customer_org_id" uuid NOT NULL,
+	"request_id" uuid NOT NULL,
+	"task_id" uuid NOT NULL,
+	"position" integer NOT NULL,
+	CONSTRAINT "request_tasks_relationship_id_request_id_task_id_pk" PRIMARY KEY("relationship_id","request_id","task_id")
+);
+--> statement-breakpoint
+ALTER TABLE "request_tasks" ENABLE ROW LEVEL SECURITY;--> statement-breakpoint
+CREATE TABLE "requests" (
+	"id" uuid PRIMARY KEY NOT NULL,
+	"relationship_id" uuid NOT NULL,
+	"supplier_org_id" uuid NOT NULL,
+	"customer_org_id" uuid NOT NULL,
+	"number" integer NOT NULL,
+	"occasion" text NOT NULL,
+	"words" text NOT NULL,
+	"due_on" date NOT NULL,
+	"asked_by" uuid NOT NULL,
+	"asked_at" timestamp (3) with time zone NOT NULL,
+	"withdrawn_by" uuid,
+	"withdrawn_at" timestamp (3) with time zone,
+	"withdrawal_reason" text,
+	"row_version" integer DEFAULT 1 NOT NULL,
+	CONSTRAINT "requests_relationship_id" UNIQUE("relationship_id","id"),
+	CONSTRAINT "requests_number" UNIQUE("relationship_id","number"),
+	CONSTRAINT "requests_withdrawn_whole" CHECK ((withdrawn_at is null) = (withdrawn_by is null) and (withdrawn_at is null) = (withdrawal_reason is null))
+);
+--> statement-breakpoint
+ALTER TABLE "requests" ENABLE ROW LEVEL SECURITY;--> statement-breakpoint
+CREATE TABLE "reminders" (
+	"org_id" uuid NOT NULL,
+	"kind" text NOT NULL,
+	"subject_id" uuid NOT NULL,
+	"day" date NOT NULL,
+	"told_at" timestamp (3) with time zone NOT NULL,
+	CONSTRAINT "reminders_org_id_kind_subject_id_day_pk" PRIMARY KEY("org_id","kind","subject_id","day")
+);
+--> statement-breakpoint
+ALTER TABLE "reminders" ENABLE ROW LEVEL SECURITY;--> statement-breakpoint
+CREATE TABLE "carry_overs" (
+	"id" uuid PRIMARY KEY NOT NULL,
+	"relationship_id" uuid NOT NULL,
+	"supplier_org_id" uuid NOT NULL,
+	"customer_org_id" uuid NOT NULL,
+	"submission_id" uuid NOT NULL,
+	"revision_id" uuid NOT NULL,
+	"characteristic_id" uuid NOT NULL,
+	"carried_by" uuid NOT NULL,
+	"carried_at" timestamp (3) with time zone NOT NULL,
+	"authenticated_at" timestamp (3) with time zone NOT NULL,
+	CONSTRAINT "carry_overs_once" UNIQUE("relationship_id","submission_id","revision_id")
+);
+--> statement-breakpoint
+ALTER TABLE "carry_overs" ENABLE ROW LEVEL SECURITY;--> statement-breakpoint
+CREATE TABLE "reinstatements" (
+	"id" uuid PRIMARY KEY NOT NULL,
+	"relationship_id" uuid NOT NULL,
+	"supplier_org_id" uuid NOT NULL,
+	"customer_org_id" uuid NOT NULL,
+	"submission_id" uuid NOT NULL,
+	"words" text NOT NULL,
+	"reinstated_by" uuid NOT NULL,
+	"reinstated_at" timestamp (3) with time zone NOT NULL,
+	"authenticated_at" timestamp (3) with time zone NOT NULL
+);
+--> statement-breakpoint
+ALTER TABLE "reinstatements" ENABLE ROW LEVEL SECURITY;--> statement-breakpoint
+CREATE TABLE "standing_calibrations" (
+	"id" uuid PRIMARY KEY NOT NULL,
+	"relationship_id" uuid NOT NULL,
+	"supplier_org_id" uuid NOT NULL,
+	"customer_org_id" uuid NOT NULL,
+	"submission_id" uuid NOT NULL,
+	"of" text NOT NULL,
+	"thing_id" uuid NOT NULL,
+	"code" text NOT NULL,
+	"calibration_id" uuid NOT NULL,
+	"calibrated_on" date NOT NULL,
+	"due_on" date NOT NULL,
+	"entered_at" timestamp (3) with time zone NOT NULL,
+	CONSTRAINT "standing_calibrations_once" UNIQUE("relationship_id","submission_id","calibration_id")
+);
+--> statement-breakpoint
+ALTER TABLE "standing_calibrations" ENABLE ROW LEVEL SECURITY;--> statement-breakpoint
+CREATE TABLE "standing_events" (
+	"id" uuid PRIMARY KEY NOT NULL,
+	"relationship_id" uuid NOT NULL,
+	"supplier_org_id" uuid NOT NULL,
+	"customer_org_id" uuid NOT NULL,
+	"submission_id" uuid NOT NULL,
+	"of" text NOT NULL,
+	"thing_id" uuid NOT NULL,
+	"code" text NOT NULL,
+	"event_id" uuid NOT NULL,
+	"kind" text NOT NULL,
+	"happened_on" date NOT NULL,
+	"in_doubt_since" date,
+	"words" text NOT NULL,
+	"entered_at" timestamp (3) with time zone NOT NULL,
+	CONSTRAINT "standing_events_once" UNIQUE("relationship_id","submission_id","event_id")
+);
+--> statement-breakpoint
+ALTER TABLE "standing_events" ENABLE ROW LEVEL SECURITY;--> statement-breakpoint
 CREATE TABLE "record_events" (
 	"chain_id" uuid NOT NULL,
 	"org_id" uuid,
@@ -604,6 +782,10 @@ ALTER TABLE "calibrations" ADD CONSTRAINT "calibrations_file_fk" FOREIGN KEY ("o
 ALTER TABLE "gauges" ADD CONSTRAINT "gauges_org_fk" FOREIGN KEY ("org_id") REFERENCES "public"."organisations"("id") ON DELETE no action ON UPDATE no action;--> statement-breakpoint
 ALTER TABLE "gauges" ADD CONSTRAINT "gauges_site_fk" FOREIGN KEY ("org_id","site_id") REFERENCES "public"."sites"("org_id","id") ON DELETE no action ON UPDATE no action;--> statement-breakpoint
 ALTER TABLE "reference_standards" ADD CONSTRAINT "reference_standards_org_fk" FOREIGN KEY ("org_id") REFERENCES "public"."organisations"("id") ON DELETE no action ON UPDATE no action;--> statement-breakpoint
+ALTER TABLE "gauge_events" ADD CONSTRAINT "gauge_events_gauge_fk" FOREIGN KEY ("org_id","gauge_id") REFERENCES "public"."gauges"("org_id","id") ON DELETE no action ON UPDATE no action;--> statement-breakpoint
+ALTER TABLE "gauge_events" ADD CONSTRAINT "gauge_events_standard_fk" FOREIGN KEY ("org_id","standard_id") REFERENCES "public"."reference_standards"("org_id","id") ON DELETE no action ON UPDATE no action;--> statement-breakpoint
+ALTER TABLE "gauge_events" ADD CONSTRAINT "gauge_events_calibration_fk" FOREIGN KEY ("org_id","calibration_id") REFERENCES "public"."calibrations"("org_id","id") ON DELETE no action ON UPDATE no action;--> statement-breakpoint
+ALTER TABLE "gauge_events" ADD CONSTRAINT "gauge_events_file_fk" FOREIGN KEY ("org_id","file_id") REFERENCES "public"."files"("org_id","id") ON DELETE no action ON UPDATE no action;--> statement-breakpoint
 ALTER TABLE "characteristics" ADD CONSTRAINT "characteristics_part_fk" FOREIGN KEY ("relationship_id","part_id") REFERENCES "public"."parts"("relationship_id","id") ON DELETE no action ON UPDATE no action;--> statement-breakpoint
 ALTER TABLE "characteristics" ADD CONSTRAINT "characteristics_revision_fk" FOREIGN KEY ("relationship_id","revision_id") REFERENCES "public"."part_revisions"("relationship_id","id") ON DELETE no action ON UPDATE no action;--> statement-breakpoint
 ALTER TABLE "characteristics" ADD CONSTRAINT "characteristics_relationship_fk" FOREIGN KEY ("relationship_id","supplier_org_id","customer_org_id") REFERENCES "public"."relationships"("id","supplier_org_id","customer_org_id") ON DELETE no action ON UPDATE no action;--> statement-breakpoint
@@ -614,7 +796,14 @@ ALTER TABLE "measuring_tasks" ADD CONSTRAINT "measuring_tasks_relationship_fk" F
 ALTER TABLE "part_revisions" ADD CONSTRAINT "part_revisions_part_fk" FOREIGN KEY ("relationship_id","part_id") REFERENCES "public"."parts"("relationship_id","id") ON DELETE no action ON UPDATE no action;--> statement-breakpoint
 ALTER TABLE "part_revisions" ADD CONSTRAINT "part_revisions_relationship_fk" FOREIGN KEY ("relationship_id","supplier_org_id","customer_org_id") REFERENCES "public"."relationships"("id","supplier_org_id","customer_org_id") ON DELETE no action ON UPDATE no action;--> statement-breakpoint
 ALTER TABLE "parts" ADD CONSTRAINT "parts_relationship_fk" FOREIGN KEY ("relationship_id","supplier_org_id","customer_org_id") REFERENCES "public"."relationships"("id","supplier_org_id","customer_org_id") ON DELETE no action ON UPDATE no action;--> statement-breakpoint
+ALTER TABLE "agreement_comments" ADD CONSTRAINT "agreement_comments_round_fk" FOREIGN KEY ("relationship_id","round_id") REFERENCES "public"."agreement_rounds"("relationship_id","id") ON DELETE no action ON UPDATE no action;--> statement-breakpoint
+ALTER TABLE "agreement_comments" ADD CONSTRAINT "agreement_comments_relationship_fk" FOREIGN KEY ("relationship_id","supplier_org_id","customer_org_id") REFERENCES "public"."relationships"("id","supplier_org_id","customer_org_id") ON DELETE no action ON UPDATE no action;--> statement-breakpoint
+ALTER TABLE "agreement_marks" ADD CONSTRAINT "agreement_marks_round_fk" FOREIGN KEY ("relationship_id","round_id") REFERENCES "public"."agreement_rounds"("relationship_id","id") ON DELETE no action ON UPDATE no action;--> statement-breakpoint
+ALTER TABLE "agreement_marks" ADD CONSTRAINT "agreement_marks_relationship_fk" FOREIGN KEY ("relationship_id","supplier_org_id","customer_org_id") REFERENCES "public"."relationships"("id","supplier_org_id","customer_org_id") ON DELETE no action ON UPDATE no action;--> statement-breakpoint
 ALTER TABLE "agreement_rounds" ADD CONSTRAINT "agreement_rounds_version_fk" FOREIGN KEY ("relationship_id","version_id") REFERENCES "public"."agreement_versions"("relationship_id","id") ON DELETE no action ON UPDATE no action;--> statement-breakpoint
+ALTER TABLE "agreement_rounds" ADD CONSTRAINT "agreement_rounds_house_terms_fk" FOREIGN KEY ("customer_org_id","house_terms_id") REFERENCES "public"."house_terms"("org_id","id") ON DELETE no action ON UPDATE no action;--> statement-breakpoint
+ALTER TABLE "agreement_rounds" ADD CONSTRAINT "agreement_rounds_case_submission_fk" FOREIGN KEY ("relationship_id","case_submission_id") REFERENCES "public"."submissions"("relationship_id","id") ON DELETE no action ON UPDATE no action;--> statement-breakpoint
+ALTER TABLE "agreement_rounds" ADD CONSTRAINT "agreement_rounds_case_challenge_fk" FOREIGN KEY ("relationship_id","case_challenge_id") REFERENCES "public"."challenges"("relationship_id","id") ON DELETE no action ON UPDATE no action;--> statement-breakpoint
 ALTER TABLE "agreement_rounds" ADD CONSTRAINT "agreement_rounds_relationship_fk" FOREIGN KEY ("relationship_id","supplier_org_id","customer_org_id") REFERENCES "public"."relationships"("id","supplier_org_id","customer_org_id") ON DELETE no action ON UPDATE no action;--> statement-breakpoint
 ALTER TABLE "agreement_signatures" ADD CONSTRAINT "agreement_signatures_version_fk" FOREIGN KEY ("relationship_id","version_id") REFERENCES "public"."agreement_versions"("relationship_id","id") ON DELETE no action ON UPDATE no action;--> statement-breakpoint
 ALTER TABLE "agreement_signatures" ADD CONSTRAINT "agreement_signatures_relationship_fk" FOREIGN KEY ("relationship_id","supplier_org_id","customer_org_id") REFERENCES "public"."relationships"("id","supplier_org_id","customer_org_id") ON DELETE no action ON UPDATE no action;--> statement-breakpoint
@@ -654,6 +843,24 @@ ALTER TABLE "challenges" ADD CONSTRAINT "challenges_submission_fk" FOREIGN KEY (
 ALTER TABLE "challenges" ADD CONSTRAINT "challenges_relationship_fk" FOREIGN KEY ("relationship_id","supplier_org_id","customer_org_id") REFERENCES "public"."relationships"("id","supplier_org_id","customer_org_id") ON DELETE no action ON UPDATE no action;--> statement-breakpoint
 ALTER TABLE "decisions" ADD CONSTRAINT "decisions_submission_fk" FOREIGN KEY ("relationship_id","submission_id") REFERENCES "public"."submissions"("relationship_id","id") ON DELETE no action ON UPDATE no action;--> statement-breakpoint
 ALTER TABLE "decisions" ADD CONSTRAINT "decisions_relationship_fk" FOREIGN KEY ("relationship_id","supplier_org_id","customer_org_id") REFERENCES "public"."relationships"("id","supplier_org_id","customer_org_id") ON DELETE no action ON UPDATE no action;--> statement-breakpoint
+ALTER TABLE "request_answers" ADD CONSTRAINT "request_answers_task_fk" FOREIGN KEY ("relationship_id","request_id","task_id") REFERENCES "public"."request_tasks"("relationship_id","request_id","task_id") ON DELETE no action ON UPDATE no action;--> statement-breakpoint
+ALTER TABLE "request_answers" ADD CONSTRAINT "request_answers_submission_fk" FOREIGN KEY ("relationship_id","submission_id") REFERENCES "public"."submissions"("relationship_id","id") ON DELETE no action ON UPDATE no action;--> statement-breakpoint
+ALTER TABLE "request_answers" ADD CONSTRAINT "request_answers_relationship_fk" FOREIGN KEY ("relationship_id","supplier_org_id","customer_org_id") REFERENCES "public"."relationships"("id","supplier_org_id","customer_org_id") ON DELETE no action ON UPDATE no action;--> statement-breakpoint
+ALTER TABLE "request_tasks" ADD CONSTRAINT "request_tasks_request_fk" FOREIGN KEY ("relationship_id","request_id") REFERENCES "public"."requests"("relationship_id","id") ON DELETE no action ON UPDATE no action;--> statement-breakpoint
+ALTER TABLE "request_tasks" ADD CONSTRAINT "request_tasks_task_fk" FOREIGN KEY ("relationship_id","task_id") REFERENCES "public"."measuring_tasks"("relationship_id","id") ON DELETE no action ON UPDATE no action;--> statement-breakpoint
+ALTER TABLE "request_tasks" ADD CONSTRAINT "request_tasks_relationship_fk" FOREIGN KEY ("relationship_id","supplier_org_id","customer_org_id") REFERENCES "public"."relationships"("id","supplier_org_id","customer_org_id") ON DELETE no action ON UPDATE no action;--> statement-breakpoint
+ALTER TABLE "requests" ADD CONSTRAINT "requests_relationship_fk" FOREIGN KEY ("relationship_id","supplier_org_id","customer_org_id") REFERENCES "public"."relationships"("id","supplier_org_id","customer_org_id") ON DELETE no action ON UPDATE no action;--> statement-breakpoint
+ALTER TABLE "reminders" ADD CONSTRAINT "reminders_org_fk" FOREIGN KEY ("org_id") REFERENCES "public"."organisations"("id") ON DELETE no action ON UPDATE no action;--> statement-breakpoint
+ALTER TABLE "carry_overs" ADD CONSTRAINT "carry_overs_revision_fk" FOREIGN KEY ("relationship_id","revision_id") REFERENCES "public"."part_revisions"("relationship_id","id") ON DELETE no action ON UPDATE no action;--> statement-breakpoint
+ALTER TABLE "carry_overs" ADD CONSTRAINT "carry_overs_characteristic_fk" FOREIGN KEY ("relationship_id","characteristic_id") REFERENCES "public"."characteristics"("relationship_id","id") ON DELETE no action ON UPDATE no action;--> statement-breakpoint
+ALTER TABLE "carry_overs" ADD CONSTRAINT "carry_overs_submission_fk" FOREIGN KEY ("relationship_id","submission_id") REFERENCES "public"."submissions"("relationship_id","id") ON DELETE no action ON UPDATE no action;--> statement-breakpoint
+ALTER TABLE "carry_overs" ADD CONSTRAINT "carry_overs_relationship_fk" FOREIGN KEY ("relationship_id","supplier_org_id","customer_org_id") REFERENCES "public"."relationships"("id","supplier_org_id","customer_org_id") ON DELETE no action ON UPDATE no action;--> statement-breakpoint
+ALTER TABLE "reinstatements" ADD CONSTRAINT "reinstatements_submission_fk" FOREIGN KEY ("relationship_id","submission_id") REFERENCES "public"."submissions"("relationship_id","id") ON DELETE no action ON UPDATE no action;--> statement-breakpoint
+ALTER TABLE "reinstatements" ADD CONSTRAINT "reinstatements_relationship_fk" FOREIGN KEY ("relationship_id","supplier_org_id","customer_org_id") REFERENCES "public"."relationships"("id","supplier_org_id","customer_org_id") ON DELETE no action ON UPDATE no action;--> statement-breakpoint
+ALTER TABLE "standing_calibrations" ADD CONSTRAINT "standing_calibrations_submission_fk" FOREIGN KEY ("relationship_id","submission_id") REFERENCES "public"."submissions"("relationship_id","id") ON DELETE no action ON UPDATE no action;--> statement-breakpoint
+ALTER TABLE "standing_calibrations" ADD CONSTRAINT "standing_calibrations_relationship_fk" FOREIGN KEY ("relationship_id","supplier_org_id","customer_org_id") REFERENCES "public"."relationships"("id","supplier_org_id","customer_org_id") ON DELETE no action ON UPDATE no action;--> statement-breakpoint
+ALTER TABLE "standing_events" ADD CONSTRAINT "standing_events_submission_fk" FOREIGN KEY ("relationship_id","submission_id") REFERENCES "public"."submissions"("relationship_id","id") ON DELETE no action ON UPDATE no action;--> statement-breakpoint
+ALTER TABLE "standing_events" ADD CONSTRAINT "standing_events_relationship_fk" FOREIGN KEY ("relationship_id","supplier_org_id","customer_org_id") REFERENCES "public"."relationships"("id","supplier_org_id","customer_org_id") ON DELETE no action ON UPDATE no action;--> statement-breakpoint
 ALTER TABLE "record_events" ADD CONSTRAINT "record_events_relationship_fk" FOREIGN KEY ("chain_id","supplier_org_id","customer_org_id") REFERENCES "public"."relationships"("id","supplier_org_id","customer_org_id") ON DELETE no action ON UPDATE no action;--> statement-breakpoint
 ALTER TABLE "record_heads" ADD CONSTRAINT "record_heads_relationship_fk" FOREIGN KEY ("chain_id","supplier_org_id","customer_org_id") REFERENCES "public"."relationships"("id","supplier_org_id","customer_org_id") ON DELETE no action ON UPDATE no action;--> statement-breakpoint
 ALTER TABLE "messages" ADD CONSTRAINT "messages_org_fk" FOREIGN KEY ("org_id") REFERENCES "public"."organisations"("id") ON DELETE no action ON UPDATE no action;--> statement-breakpoint
@@ -662,11 +869,17 @@ ALTER TABLE "outbox" ADD CONSTRAINT "outbox_message_fk" FOREIGN KEY ("org_id","m
 CREATE INDEX "relationships_customer" ON "relationships" USING btree ("customer_org_id");--> statement-breakpoint
 CREATE INDEX "calibrations_gauge" ON "calibrations" USING btree ("org_id","gauge_id","calibrated_on");--> statement-breakpoint
 CREATE INDEX "calibrations_standard" ON "calibrations" USING btree ("org_id","standard_id","calibrated_on");--> statement-breakpoint
+CREATE INDEX "gauge_events_gauge" ON "gauge_events" USING btree ("org_id","gauge_id","happened_on");--> statement-breakpoint
+CREATE INDEX "gauge_events_standard" ON "gauge_events" USING btree ("org_id","standard_id","happened_on");--> statement-breakpoint
 CREATE INDEX "characteristics_part" ON "characteristics" USING btree ("relationship_id","part_id");--> statement-breakpoint
 CREATE INDEX "measuring_tasks_characteristic" ON "measuring_tasks" USING btree ("relationship_id","characteristic_id");--> statement-breakpoint
 CREATE INDEX "measuring_tasks_gauge" ON "measuring_tasks" USING btree ("supplier_org_id","gauge_id");--> statement-breakpoint
 CREATE INDEX "parts_supplier" ON "parts" USING btree ("supplier_org_id","number");--> statement-breakpoint
 CREATE INDEX "parts_customer" ON "parts" USING btree ("customer_org_id","number");--> statement-breakpoint
+CREATE INDEX "agreement_comments_version" ON "agreement_comments" USING btree ("relationship_id","version_id","at");--> statement-breakpoint
+CREATE INDEX "agreement_marks_version" ON "agreement_marks" USING btree ("relationship_id","version_id","at");--> statement-breakpoint
+CREATE UNIQUE INDEX "agreement_rounds_number" ON "agreement_rounds" USING btree ("relationship_id","version_id","number") WHERE state <> 'draft';--> statement-breakpoint
+CREATE UNIQUE INDEX "agreement_rounds_one_draft" ON "agreement_rounds" USING btree ("relationship_id","version_id","side") WHERE state = 'draft';--> statement-breakpoint
 CREATE UNIQUE INDEX "agreement_versions_one_open" ON "agreement_versions" USING btree ("relationship_id","agreement_id") WHERE state in ('proposed', 'countered');--> statement-breakpoint
 CREATE UNIQUE INDEX "agreement_versions_one_draft" ON "agreement_versions" USING btree ("relationship_id","agreement_id","begun_by") WHERE state = 'draft';--> statement-breakpoint
 CREATE INDEX "agreement_versions_supplier" ON "agreement_versions" USING btree ("supplier_org_id","state");--> statement-breakpoint
@@ -688,6 +901,15 @@ CREATE INDEX "challenge_messages_challenge" ON "challenge_messages" USING btree 
 CREATE INDEX "decisions_submission" ON "decisions" USING btree ("relationship_id","submission_id");--> statement-breakpoint
 CREATE UNIQUE INDEX "decisions_one_final" ON "decisions" USING btree ("relationship_id","submission_id") WHERE state = 'final';--> statement-breakpoint
 CREATE UNIQUE INDEX "decisions_one_proposed" ON "decisions" USING btree ("relationship_id","submission_id") WHERE state = 'awaiting-second-person';--> statement-breakpoint
+CREATE INDEX "request_answers_submission" ON "request_answers" USING btree ("relationship_id","submission_id");--> statement-breakpoint
+CREATE INDEX "request_tasks_task" ON "request_tasks" USING btree ("relationship_id","task_id");--> statement-breakpoint
+CREATE INDEX "requests_supplier_due" ON "requests" USING btree ("supplier_org_id","due_on");--> statement-breakpoint
+CREATE INDEX "requests_customer_due" ON "requests" USING btree ("customer_org_id","due_on");--> statement-breakpoint
+CREATE INDEX "carry_overs_characteristic" ON "carry_overs" USING btree ("relationship_id","characteristic_id");--> statement-breakpoint
+CREATE INDEX "carry_overs_submission" ON "carry_overs" USING btree ("relationship_id","submission_id");--> statement-breakpoint
+CREATE INDEX "reinstatements_submission" ON "reinstatements" USING btree ("relationship_id","submission_id");--> statement-breakpoint
+CREATE INDEX "standing_calibrations_submission" ON "standing_calibrations" USING btree ("relationship_id","submission_id");--> statement-breakpoint
+CREATE INDEX "standing_events_submission" ON "standing_events" USING btree ("relationship_id","submission_id");--> statement-breakpoint
 CREATE INDEX "record_events_subject" ON "record_events" USING btree ("chain_id","subject_type","subject_id");--> statement-breakpoint
 CREATE INDEX "messages_person" ON "messages" USING btree ("org_id","user_id","created_at");--> statement-breakpoint
 CREATE INDEX "outbox_due" ON "outbox" USING btree ("next_attempt_at") WHERE sent_at is null;--> statement-breakpoint
@@ -703,10 +925,17 @@ CREATE POLICY "files_owner" ON "files" AS PERMISSIVE FOR ALL TO "evenrule_app" U
 CREATE POLICY "calibrations_owner" ON "calibrations" AS PERMISSIVE FOR ALL TO "evenrule_app" USING (org_id = nullif(current_setting('app.org_id', true), '')::uuid) WITH CHECK (org_id = nullif(current_setting('app.org_id', true), '')::uuid);--> statement-breakpoint
 CREATE POLICY "gauges_owner" ON "gauges" AS PERMISSIVE FOR ALL TO "evenrule_app" USING (org_id = nullif(current_setting('app.org_id', true), '')::uuid) WITH CHECK (org_id = nullif(current_setting('app.org_id', true), '')::uuid);--> statement-breakpoint
 CREATE POLICY "reference_standards_owner" ON "reference_standards" AS PERMISSIVE FOR ALL TO "evenrule_app" USING (org_id = nullif(current_setting('app.org_id', true), '')::uuid) WITH CHECK (org_id = nullif(current_setting('app.org_id', true), '')::uuid);--> statement-breakpoint
+CREATE POLICY "gauge_events_owner" ON "gauge_events" AS PERMISSIVE FOR ALL TO "evenrule_app" USING (org_id = nullif(current_setting('app.org_id', true), '')::uuid) WITH CHECK (org_id = nullif(current_setting('app.org_id', true), '')::uuid);--> statement-breakpoint
 CREATE POLICY "characteristics_parties" ON "characteristics" AS PERMISSIVE FOR ALL TO "evenrule_app" USING ((supplier_org_id = nullif(current_setting('app.org_id', true), '')::uuid or customer_org_id = nullif(current_setting('app.org_id', true), '')::uuid)) WITH CHECK ((supplier_org_id = nullif(current_setting('app.org_id', true), '')::uuid or customer_org_id = nullif(current_setting('app.org_id', true), '')::uuid));--> statement-breakpoint
 CREATE POLICY "measuring_tasks_parties" ON "measuring_tasks" AS PERMISSIVE FOR ALL TO "evenrule_app" USING ((supplier_org_id = nullif(current_setting('app.org_id', true), '')::uuid or customer_org_id = nullif(current_setting('app.org_id', true), '')::uuid)) WITH CHECK ((supplier_org_id = nullif(current_setting('app.org_id', true), '')::uuid or customer_org_id = nullif(current_setting('app.org_id', true), '')::uuid));--> statement-breakpoint
 CREATE POLICY "part_revisions_parties" ON "part_revisions" AS PERMISSIVE FOR ALL TO "evenrule_app" USING ((supplier_org_id = nullif(current_setting('app.org_id', true), '')::uuid or customer_org_id = nullif(current_setting('app.org_id', true), '')::uuid)) WITH CHECK ((supplier_org_id = nullif(current_setting('app.org_id', true), '')::uuid or customer_org_id = nullif(current_setting('app.org_id', true), '')::uuid));--> statement-breakpoint
 CREATE POLICY "parts_parties" ON "parts" AS PERMISSIVE FOR ALL TO "evenrule_app" USING ((supplier_org_id = nullif(current_setting('app.org_id', true), '')::uuid or customer_org_id = nullif(current_setting('app.org_id', true), '')::uuid)) WITH CHECK ((supplier_org_id = nullif(current_setting('app.org_id', true), '')::uuid or customer_org_id = nullif(current_setting('app.org_id', true), '')::uuid));--> statement-breakpoint
+CREATE POLICY "agreement_comments_parties" ON "agreement_comments" AS PERMISSIVE FOR ALL TO "evenrule_app" USING ((supplier_org_id = nullif(current_setting('app.org_id', true), '')::uuid or customer_org_id = nullif(current_setting('app.org_id', true), '')::uuid)) WITH CHECK ((supplier_org_id = nullif(current_setting('app.org_id', true), '')::uuid or customer_org_id = nullif(current_setting('app.org_id', true), '')::uuid));--> statement-breakpoint
+CREATE POLICY "agreement_comments_own_side" ON "agreement_comments" AS RESTRICTIVE FOR INSERT TO "evenrule_app" WITH CHECK (((side = 'supplier' and supplier_org_id = nullif(current_setting('app.org_id', true), '')::uuid) or (side = 'customer' and customer_org_id = nullif(current_setting('app.org_id', true), '')::uuid)));--> statement-breakpoint
+CREATE POLICY "agreement_comments_sent_rounds" ON "agreement_comments" AS RESTRICTIVE FOR INSERT TO "evenrule_app" WITH CHECK (exists (select 1 from agreement_rounds r where r.relationship_id = agreement_comments.relationship_id and r.id = agreement_comments.round_id and r.state <> 'draft'));--> statement-breakpoint
+CREATE POLICY "agreement_marks_parties" ON "agreement_marks" AS PERMISSIVE FOR ALL TO "evenrule_app" USING ((supplier_org_id = nullif(current_setting('app.org_id', true), '')::uuid or customer_org_id = nullif(current_setting('app.org_id', true), '')::uuid)) WITH CHECK ((supplier_org_id = nullif(current_setting('app.org_id', true), '')::uuid or customer_org_id = nullif(current_setting('app.org_id', true), '')::uuid));--> statement-breakpoint
+CREATE POLICY "agreement_marks_own_side" ON "agreement_marks" AS RESTRICTIVE FOR INSERT TO "evenrule_app" WITH CHECK (((side = 'supplier' and supplier_org_id = nullif(current_setting('app.org_id', true), '')::uuid) or (side = 'customer' and customer_org_id = nullif(current_setting('app.org_id', true), '')::uuid)));--> statement-breakpoint
+CREATE POLICY "agreement_marks_sent_rounds" ON "agreement_marks" AS RESTRICTIVE FOR INSERT TO "evenrule_app" WITH CHECK (exists (select 1 from agreement_rounds r where r.relationship_id = agreement_marks.relationship_id and r.id = agreement_marks.round_id and r.state <> 'draft'));--> statement-breakpoint
 CREATE POLICY "agreement_rounds_parties" ON "agreement_rounds" AS PERMISSIVE FOR ALL TO "evenrule_app" USING ((supplier_org_id = nullif(current_setting('app.org_id', true), '')::uuid or customer_org_id = nullif(current_setting('app.org_id', true), '')::uuid)) WITH CHECK ((supplier_org_id = nullif(current_setting('app.org_id', true), '')::uuid or customer_org_id = nullif(current_setting('app.org_id', true), '')::uuid));--> statement-breakpoint
 CREATE POLICY "agreement_rounds_drafts" ON "agreement_rounds" AS RESTRICTIVE FOR ALL TO "evenrule_app" USING (state <> 'draft' or ((side = 'supplier' and supplier_org_id = nullif(current_setting('app.org_id', true), '')::uuid) or (side = 'customer' and customer_org_id = nullif(current_setting('app.org_id', true), '')::uuid))) WITH CHECK (state <> 'draft' or ((side = 'supplier' and supplier_org_id = nullif(current_setting('app.org_id', true), '')::uuid) or (side = 'customer' and customer_org_id = nullif(current_setting('app.org_id', true), '')::uuid)));--> statement-breakpoint
 CREATE POLICY "agreement_rounds_sent_stay" ON "agreement_rounds" AS RESTRICTIVE FOR DELETE TO "evenrule_app" USING (state = 'draft');--> statement-breakpoint
@@ -749,6 +978,26 @@ CREATE POLICY "decisions_parties" ON "decisions" AS PERMISSIVE FOR ALL TO "evenr
 CREATE POLICY "decisions_by_customer" ON "decisions" AS RESTRICTIVE FOR INSERT TO "evenrule_app" WITH CHECK (customer_org_id = nullif(current_setting('app.org_id', true), '')::uuid);--> statement-breakpoint
 CREATE POLICY "decisions_changed_by_customer" ON "decisions" AS RESTRICTIVE FOR UPDATE TO "evenrule_app" USING (customer_org_id = nullif(current_setting('app.org_id', true), '')::uuid) WITH CHECK (customer_org_id = nullif(current_setting('app.org_id', true), '')::uuid);--> statement-breakpoint
 CREATE POLICY "decisions_final" ON "decisions" AS RESTRICTIVE FOR SELECT TO "evenrule_app" USING (state = 'final' or customer_org_id = nullif(current_setting('app.org_id', true), '')::uuid);--> statement-breakpoint
+CREATE POLICY "request_answers_parties" ON "request_answers" AS PERMISSIVE FOR ALL TO "evenrule_app" USING ((supplier_org_id = nullif(current_setting('app.org_id', true), '')::uuid or customer_org_id = nullif(current_setting('app.org_id', true), '')::uuid)) WITH CHECK ((supplier_org_id = nullif(current_setting('app.org_id', true), '')::uuid or customer_org_id = nullif(current_setting('app.org_id', true), '')::uuid));--> statement-breakpoint
+CREATE POLICY "request_answers_by_supplier" ON "request_answers" AS RESTRICTIVE FOR INSERT TO "evenrule_app" WITH CHECK (supplier_org_id = nullif(current_setting('app.org_id', true), '')::uuid);--> statement-breakpoint
+CREATE POLICY "request_tasks_parties" ON "request_tasks" AS PERMISSIVE FOR ALL TO "evenrule_app" USING ((supplier_org_id = nullif(current_setting('app.org_id', true), '')::uuid or customer_org_id = nullif(current_setting('app.org_id', true), '')::uuid)) WITH CHECK ((supplier_org_id = nullif(current_setting('app.org_id', true), '')::uuid or customer_org_id = nullif(current_setting('app.org_id', true), '')::uuid));--> statement-breakpoint
+CREATE POLICY "request_tasks_by_customer" ON "request_tasks" AS RESTRICTIVE FOR INSERT TO "evenrule_app" WITH CHECK (customer_org_id = nullif(current_setting('app.org_id', true), '')::uuid);--> statement-breakpoint
+CREATE POLICY "requests_parties" ON "requests" AS PERMISSIVE FOR ALL TO "evenrule_app" USING ((supplier_org_id = nullif(current_setting('app.org_id', true), '')::uuid or customer_org_id = nullif(current_setting('app.org_id', true), '')::uuid)) WITH CHECK ((supplier_org_id = nullif(current_setting('app.org_id', true), '')::uuid or customer_org_id = nullif(current_setting('app.org_id', true), '')::uuid));--> statement-breakpoint
+CREATE POLICY "requests_by_customer" ON "requests" AS RESTRICTIVE FOR INSERT TO "evenrule_app" WITH CHECK (customer_org_id = nullif(current_setting('app.org_id', true), '')::uuid);--> statement-breakpoint
+CREATE POLICY "requests_changed_by_customer" ON "requests" AS RESTRICTIVE FOR UPDATE TO "evenrule_app" USING (customer_org_id = nullif(current_setting('app.org_id', true), '')::uuid) WITH CHECK (customer_org_id = nullif(current_setting('app.org_id', true), '')::uuid);--> statement-breakpoint
+CREATE POLICY "reminders_owner" ON "reminders" AS PERMISSIVE FOR ALL TO "evenrule_app" USING (org_id = nullif(current_setting('app.org_id', true), '')::uuid) WITH CHECK (org_id = nullif(current_setting('app.org_id', true), '')::uuid);--> statement-breakpoint
+CREATE POLICY "carry_overs_parties" ON "carry_overs" AS PERMISSIVE FOR ALL TO "evenrule_app" USING ((supplier_org_id = nullif(current_setting('app.org_id', true), '')::uuid or customer_org_id = nullif(current_setting('app.org_id', true), '')::uuid)) WITH CHECK ((supplier_org_id = nullif(current_setting('app.org_id', true), '')::uuid or customer_org_id = nullif(current_setting('app.org_id', true), '')::uuid));--> statement-breakpoint
+CREATE POLICY "carry_overs_visible" ON "carry_overs" AS RESTRICTIVE FOR ALL TO "evenrule_app" USING (exists (select 1 from submissions s where s.id = submission_id)) WITH CHECK (exists (select 1 from submissions s where s.id = submission_id));--> statement-breakpoint
+CREATE POLICY "carry_overs_writer" ON "carry_overs" AS RESTRICTIVE FOR INSERT TO "evenrule_app" WITH CHECK (customer_org_id = nullif(current_setting('app.org_id', true), '')::uuid);--> statement-breakpoint
+CREATE POLICY "reinstatements_parties" ON "reinstatements" AS PERMISSIVE FOR ALL TO "evenrule_app" USING ((supplier_org_id = nullif(current_setting('app.org_id', true), '')::uuid or customer_org_id = nullif(current_setting('app.org_id', true), '')::uuid)) WITH CHECK ((supplier_org_id = nullif(current_setting('app.org_id', true), '')::uuid or customer_org_id = nullif(current_setting('app.org_id', true), '')::uuid));--> statement-breakpoint
+CREATE POLICY "reinstatements_visible" ON "reinstatements" AS RESTRICTIVE FOR ALL TO "evenrule_app" USING (exists (select 1 from submissions s where s.id = submission_id)) WITH CHECK (exists (select 1 from submissions s where s.id = submission_id));--> statement-breakpoint
+CREATE POLICY "reinstatements_writer" ON "reinstatements" AS RESTRICTIVE FOR INSERT TO "evenrule_app" WITH CHECK (customer_org_id = nullif(current_setting('app.org_id', true), '')::uuid);--> statement-breakpoint
+CREATE POLICY "standing_calibrations_parties" ON "standing_calibrations" AS PERMISSIVE FOR ALL TO "evenrule_app" USING ((supplier_org_id = nullif(current_setting('app.org_id', true), '')::uuid or customer_org_id = nullif(current_setting('app.org_id', true), '')::uuid)) WITH CHECK ((supplier_org_id = nullif(current_setting('app.org_id', true), '')::uuid or customer_org_id = nullif(current_setting('app.org_id', true), '')::uuid));--> statement-breakpoint
+CREATE POLICY "standing_calibrations_visible" ON "standing_calibrations" AS RESTRICTIVE FOR ALL TO "evenrule_app" USING (exists (select 1 from submissions s where s.id = submission_id)) WITH CHECK (exists (select 1 from submissions s where s.id = submission_id));--> statement-breakpoint
+CREATE POLICY "standing_calibrations_writer" ON "standing_calibrations" AS RESTRICTIVE FOR INSERT TO "evenrule_app" WITH CHECK (supplier_org_id = nullif(current_setting('app.org_id', true), '')::uuid);--> statement-breakpoint
+CREATE POLICY "standing_events_parties" ON "standing_events" AS PERMISSIVE FOR ALL TO "evenrule_app" USING ((supplier_org_id = nullif(current_setting('app.org_id', true), '')::uuid or customer_org_id = nullif(current_setting('app.org_id', true), '')::uuid)) WITH CHECK ((supplier_org_id = nullif(current_setting('app.org_id', true), '')::uuid or customer_org_id = nullif(current_setting('app.org_id', true), '')::uuid));--> statement-breakpoint
+CREATE POLICY "standing_events_visible" ON "standing_events" AS RESTRICTIVE FOR ALL TO "evenrule_app" USING (exists (select 1 from submissions s where s.id = submission_id)) WITH CHECK (exists (select 1 from submissions s where s.id = submission_id));--> statement-breakpoint
+CREATE POLICY "standing_events_writer" ON "standing_events" AS RESTRICTIVE FOR INSERT TO "evenrule_app" WITH CHECK (supplier_org_id = nullif(current_setting('app.org_id', true), '')::uuid);--> statement-breakpoint
 CREATE POLICY "record_events_visible" ON "record_events" AS PERMISSIVE FOR ALL TO "evenrule_app" USING (org_id = nullif(current_setting('app.org_id', true), '')::uuid or supplier_org_id = nullif(current_setting('app.org_id', true), '')::uuid or customer_org_id = nullif(current_setting('app.org_id', true), '')::uuid) WITH CHECK (org_id = nullif(current_setting('app.org_id', true), '')::uuid or supplier_org_id = nullif(current_setting('app.org_id', true), '')::uuid or customer_org_id = nullif(current_setting('app.org_id', true), '')::uuid);--> statement-breakpoint
 CREATE POLICY "record_heads_visible" ON "record_heads" AS PERMISSIVE FOR ALL TO "evenrule_app" USING (org_id = nullif(current_setting('app.org_id', true), '')::uuid or supplier_org_id = nullif(current_setting('app.org_id', true), '')::uuid or customer_org_id = nullif(current_setting('app.org_id', true), '')::uuid) WITH CHECK (org_id = nullif(current_setting('app.org_id', true), '')::uuid or supplier_org_id = nullif(current_setting('app.org_id', true), '')::uuid or customer_org_id = nullif(current_setting('app.org_id', true), '')::uuid);--> statement-breakpoint
 CREATE POLICY "messages_own" ON "messages" AS PERMISSIVE FOR SELECT TO "evenrule_app" USING (org_id = nullif(current_setting('app.org_id', true), '')::uuid and user_id = nullif(current_setting('app.user_id', true), '')::uuid);--> statement-breakpoint

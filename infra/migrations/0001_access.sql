@@ -23,7 +23,8 @@ GRANT SELECT, INSERT, UPDATE ON
 -- What is written once and never changed.
 GRANT SELECT, INSERT ON
   files, agreement_signatures, study_data, study_evaluations, submission_texts, submission_clauses,
-  submission_files, submission_signatures, submission_notes, challenge_messages, record_events
+  submission_files, submission_signatures, submission_notes, challenge_messages, request_tasks, request_answers, reminders,
+  record_events
   TO evenrule_app;
 --> statement-breakpoint
 -- What these rows are about never changes, only where they stand.
@@ -31,6 +32,9 @@ GRANT SELECT, INSERT, UPDATE (
   number, state, state_since, sent_for_signature_at, submitted_at, decided_at, withdrawal_reason, verdict,
   clauses_met, clauses_total, safety, superseded_by, row_version
 ) ON submissions TO evenrule_app;
+--> statement-breakpoint
+GRANT SELECT, INSERT, UPDATE (due_on, withdrawn_by, withdrawn_at, withdrawal_reason, row_version) ON requests
+  TO evenrule_app;
 --> statement-breakpoint
 GRANT SELECT, INSERT, UPDATE (sequence, hash) ON record_heads TO evenrule_app;
 --> statement-breakpoint

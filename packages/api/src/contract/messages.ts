@@ -3,7 +3,15 @@ import { instant, organisationParams, pageOf, pageQuery, paramsWith, sortBy, uui
 import { defineEndpoint } from './define'
 
 /** What a message is about, so that a person can choose which kinds come by mail too. */
-export const messageKinds = ['agreement', 'submission', 'challenge', 'decision'] as const
+export const messageKinds = [
+  'agreement',
+  'request',
+  'submission',
+  'challenge',
+  'decision',
+  'standing',
+  'reminder',
+] as const
 export type MessageKind = (typeof messageKinds)[number]
 const messageKind = z.enum(messageKinds)
 

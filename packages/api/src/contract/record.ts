@@ -17,6 +17,7 @@ export const recordSubjects = [
   'study',
   'submission',
   'challenge',
+  'request',
   'part',
   'characteristic',
   'measuring-task',

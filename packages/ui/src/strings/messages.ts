@@ -4,17 +4,23 @@ import { formatCount } from '../format'
 /** What a message is about. */
 export const messageKindWords: Record<messages.MessageKind, string> = {
   agreement: 'Agreement',
+  request: 'Request',
   submission: 'Submission',
   challenge: 'Challenge',
   decision: 'Decision',
+  standing: 'Standing',
+  reminder: 'Reminder',
 }
 
 /** What mail of each kind tells. */
 export const messageKindHints: Record<messages.MessageKind, string> = {
   agreement: 'Proposals, answers and signatures on criteria.',
+  request: 'Proof asked for by a date, moved, withdrawn or answered.',
   submission: 'Proof that waits for a signature or a decision, or was withdrawn.',
   challenge: 'Objections to a named result, and their answers.',
   decision: 'Proof accepted, accepted with conditions or refused.',
+  standing: 'Accepted proof that does not stand any more, or stands again.',
+  reminder: 'Days that come near or are over: requests, challenges, conditions, calibrations, agreements.',
 }
 
 export const messageWords = {

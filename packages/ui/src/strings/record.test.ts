@@ -2,6 +2,7 @@ import { readdirSync, readFileSync } from 'node:fs'
 import { join } from 'node:path'
 import { agreementMoves } from '@evenrule/api/contract/moves/agreement-version'
 import { challengeMoves } from '@evenrule/api/contract/moves/challenge'
+import { requestMoves } from '@evenrule/api/contract/moves/request'
 import { studyMoves } from '@evenrule/api/contract/moves/study'
 import { submissionMoves } from '@evenrule/api/contract/moves/submission'
 import { describe, expect, it } from 'vitest'
@@ -14,14 +15,18 @@ const namedInServices = (): string[] => {
     file.endsWith('.service.ts'),
   )
   const kind =
-    /'((?:agreement|study|submission|challenge|part|characteristic|measuring-task|gauge|reference-standard|calibration|member|organisation)\.[a-z-]+)'/g
+    /'((?:agreement|study|submission|challenge|request|part|characteristic|measuring-task|gauge|reference-standard|calibration|member|organisation)\.[a-z-]+)'/g
   return files.flatMap((file) =>
     [...readFileSync(join(modules, file), 'utf8').matchAll(kind)].map(([, type]) => type ?? ''),
   )
 }
-const ofMoves = [...agreementMoves, ...challengeMoves, ...studyMoves, ...submissionMoves].map(
-  ({ event }) => event as string,
-)
+const ofMoves = [
+  ...agreementMoves,
+  ...challengeMoves,
+  ...requestMoves,
+  ...studyMoves,
+  ...submissionMoves,
+].map(({ event }) => event as string)
 
 describe('the sentence of an event', () => {
   it('is there for every move of every table', () => {

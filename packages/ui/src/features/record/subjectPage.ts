@@ -5,6 +5,7 @@ const pages: Record<record.RecordSubject, { path: (id: string) => string; side?:
   study: { path: (id) => `studies/${id}`, side: 'supplier' },
   submission: { path: (id) => `submissions/${id}` },
   challenge: { path: (id) => `submissions/${id}` },
+  request: { path: (id) => `requests/${id}` },
   part: { path: (id) => `parts/${id}` },
   characteristic: { path: (id) => `parts/${id}` },
   'measuring-task': { path: (id) => `tasks/${id}` },

@@ -6,6 +6,7 @@ import { gauges, referenceStandards } from '../gauges/gauges.table'
 import { namesOfPeople } from '../organisations/people.repository'
 import { organisations } from '../organisations/organisations.table'
 import { characteristics, measuringTasks, parts } from '../parts/parts.table'
+import { requests } from '../requests/requests.table'
 import { challenges } from '../reviews/reviews.table'
 import { studies } from '../studies/studies.table'
 import { submissions } from '../submissions/submissions.table'
@@ -133,6 +134,13 @@ const finders: Record<RecordSubject, Finder> = {
       label: `${number} of submission ${submission ?? '–'}`,
       pageId,
     }))
+  },
+  request: async ({ tx }, ids) => {
+    const rows = await tx
+      .select({ id: requests.id, number: requests.number })
+      .from(requests)
+      .where(inArray(requests.id, ids))
+    return rows.map(({ id, number }) => ({ id, label: `${number}`, pageId: id }))
   },
   gauge: async ({ tx }, ids) => {
     const rows = await tx
