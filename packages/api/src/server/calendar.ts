@@ -1,3 +1,5 @@
+export { addDays } from '../contract/days'
+
 /** The calendar day, such as `2026-11-02`, on which an instant falls in a time zone (IANA name). */
 export function dayIn(timeZone: string, instant: string): string {
   const parts = new Intl.DateTimeFormat('en-GB', {
@@ -8,13 +10,6 @@ export function dayIn(timeZone: string, instant: string): string {
   }).formatToParts(new Date(instant))
   const read = (type: Intl.DateTimeFormatPartTypes) => parts.find((part) => part.type === type)?.value ?? ''
   return `${read('year')}-${read('month')}-${read('day')}`
-}
-
-/** The day a number of days later (earlier when negative). */
-export function addDays(day: string, days: number): string {
-  const date = new Date(`${day}T00:00:00Z`)
-  date.setUTCDate(date.getUTCDate() + days)
-  return date.toISOString().slice(0, 10)
 }
 
 /** Calendar days from one day to a later one (negative where it is an earlier one). */

@@ -69,6 +69,7 @@ export const ownSideOnly = (sideColumn: string): string =>
   `((${sideColumn} = 'supplier' and supplier_org_id = nullif(current_setting('app.org_id', true), '')::uuid) or (${sideColumn} = 'customer' and customer_org_id = nullif(current_setting('app.org_id', true), '')::uuid))`
 
 export const supplierOnly = `supplier_org_id = nullif(current_setting('app.org_id', true), '')::uuid`
+export const customerOnly = `customer_org_id = nullif(current_setting('app.org_id', true), '')::uuid`
 
 interface SharedTable {
   relationshipId: AnyPgColumn

@@ -1,0 +1,21 @@
+import { standingOf, type Standing } from '../../../contract/standing'
+import { dayIn } from '../../calendar'
+import type { Tenant } from '../../db/tenant'
+import { standingFactsOf } from './standing.facts'
+
+/**
+ * How accepted submissions stand today, each in its relationship's calendar. Submissions that are not accepted, and
+ * those of others, are not in the answer.
+ */
+export async function standingsOf(
+  tenant: Tenant,
+  submissionIds: readonly string[],
+): Promise<Map<string, Standing>> {
+  const found = await standingFactsOf(tenant, submissionIds)
+  return new Map(
+    found.map(({ submissionId, timeZone, facts }) => [
+      submissionId,
+      standingOf(facts, dayIn(timeZone, tenant.now)),
+    ]),
+  )
+}
