@@ -82,35 +82,38 @@ async function open(page: Page, base: string, path: string): Promise<void> {
 
 describe.each(['supplier', 'customer'] as const)('the pages of the %s app', (side) => {
   // Two windows at once: a page mostly waits for its data.
-  it.concurrent.each(looks)('are sound at $width px in $colorScheme', async ({ width, height, colorScheme }) => {
-    const context = await browser.newContext({
-      viewport: { width, height },
-      colorScheme,
-      locale: 'en-GB',
-      timezoneId: 'Europe/Berlin',
-      reducedMotion: 'reduce',
-    })
-    const errors = watchErrors(context)
-    const page = await context.newPage()
-    page.setDefaultTimeout(20_000)
-    const { person, paths } = pages[side]
-    const app = addresses()[side]
-    await signIn(page, app, person)
-    const base = /^.*\/organisations\/[^/?#]+/.exec(page.url())?.[0] ?? ''
-    const faults: string[] = []
-    for (const path of paths) {
-      await open(page, base, path)
-      const overflow = await page.evaluate(
-        () => document.documentElement.scrollWidth - document.documentElement.clientWidth,
-      )
-      if (overflow > 0) faults.push(`${path}: ${overflow} px wider than the window`)
-      faults.push(...(await axeFaults(page)).map((fault) => `${path}: ${fault}`))
-      await picture(page, `${side}-${path.replace(/\W+/g, '-') || 'front'}-${width}-${colorScheme}`)
-    }
-    await context.close()
-    expect(faults).toEqual([])
-    expect(errors).toEqual([])
-  })
+  it.concurrent.each(looks)(
+    'are sound at $width px in $colorScheme',
+    async ({ width, height, colorScheme }) => {
+      const context = await browser.newContext({
+        viewport: { width, height },
+        colorScheme,
+        locale: 'en-GB',
+        timezoneId: 'Europe/Berlin',
+        reducedMotion: 'reduce',
+      })
+      const errors = watchErrors(context)
+      const page = await context.newPage()
+      page.setDefaultTimeout(20_000)
+      const { person, paths } = pages[side]
+      const app = addresses()[side]
+      await signIn(page, app, person)
+      const base = /^.*\/organisations\/[^/?#]+/.exec(page.url())?.[0] ?? ''
+      const faults: string[] = []
+      for (const path of paths) {
+        await open(page, base, path)
+        const overflow = await page.evaluate(
+          () => document.documentElement.scrollWidth - document.documentElement.clientWidth,
+        )
+        if (overflow > 0) faults.push(`${path}: ${overflow} px wider than the window`)
+        faults.push(...(await axeFaults(page)).map((fault) => `${path}: ${fault}`))
+        await picture(page, `${side}-${path.replace(/\W+/g, '-') || 'front'}-${width}-${colorScheme}`)
+      }
+      await context.close()
+      expect(faults).toEqual([])
+      expect(errors).toEqual([])
+    },
+  )
 })
 
 describe('an empty organisation', () => {
