@@ -1,6 +1,6 @@
 import canonicalize from 'canonicalize'
 import { z } from 'zod'
-import { contentOf, summaryOf, type FrozenClauseResult, type SubmissionContent } from './submission-content'
+import { contentOf, summaryOf, type JudgedClause, type SubmissionContent } from './submission-content'
 
 export const clauseProblems = [
   /** The frozen text names a clause whose evaluation is not there. */
@@ -49,6 +49,8 @@ export const submissionCheckSchema = z.object({
     z.object({ study: z.string(), equal: z.boolean(), stored: z.string(), recomputed: z.string() }),
   ),
   clauses: z.array(clauseCheckSchema),
+  /** A correction names the text that it takes the place of; null for the first text, or where that was not given. */
+  corrects: z.object({ equal: z.boolean(), stored: z.string(), recomputed: z.string() }).nullable(),
   /** Verdict and counts that lists show are those of the frozen text; null where they were not given. */
   listed: z.object({ equal: z.boolean(), difference: differenceSchema.nullable() }).nullable(),
 })
@@ -122,7 +124,7 @@ export function firstDifference(stored: string, recomputed: string): Difference 
 }
 
 async function checkClause(
-  clause: FrozenClauseResult,
+  clause: JudgedClause,
   evaluation: CheckedEvaluation | undefined,
   recompute: Recompute,
 ): Promise<ClauseCheck> {
@@ -160,7 +162,7 @@ const differs = (path: string, stored: string, recomputed: string): Difference =
 })
 
 async function problemOf(
-  clause: FrozenClauseResult,
+  clause: JudgedClause,
   evaluation: CheckedEvaluation,
   recomputed: string,
 ): Promise<Found | null> {
@@ -200,6 +202,8 @@ export async function checkSubmission(
     sha256: string
     signatures: readonly { meaning: string; sha256: string }[]
     evaluations: readonly CheckedEvaluation[]
+    /** The text of the revision before this one; given where there is one. */
+    previousText?: string | undefined
     /** What lists show of it; given where it is stored beside the text. */
     listed?: { verdict: string | null; clausesMet: number | null; clausesTotal: number | null }
   },
@@ -219,7 +223,7 @@ export async function checkSubmission(
       return { study: code, equal: again === sha256, stored: sha256, recomputed: again }
     }),
   )
-  const named = content?.clauses ?? []
+  const named: JudgedClause[] = [...(content?.clauses ?? []), ...(content?.advisory ?? [])]
   const clauses: ClauseCheck[] = []
   for (const clause of named) {
     const evaluation = submission.evaluations.find((each) => each.clauseKey === clause.clauseKey)
@@ -227,10 +231,28 @@ export async function checkSubmission(
   }
   clauses.push(...strangers(named, submission.evaluations))
   const listed = submission.listed && content ? checkListed(submission.listed, content) : null
-  const equal = [text, ...signatures, ...data, ...clauses, ...(listed ? [listed] : [])].every(
-    (each) => each.equal,
-  )
-  return { equal, text, signatures, data, clauses, listed }
+  const corrects = await checkPrevious(content, submission.previousText)
+  const parts = [
+    text,
+    ...signatures,
+    ...data,
+    ...clauses,
+    ...(listed ? [listed] : []),
+    ...(corrects ? [corrects] : []),
+  ]
+  const equal = parts.every((each) => each.equal)
+  return { equal, text, signatures, data, clauses, corrects, listed }
+}
+
+/** A first text corrects nothing; every later one names the hash of the one before. */
+async function checkPrevious(
+  content: SubmissionContent | null,
+  previousText: string | undefined,
+): Promise<SubmissionCheck['corrects']> {
+  const stored = content?.corrects?.sha256 ?? ''
+  if (previousText === undefined && stored === '') return null
+  const recomputed = previousText === undefined ? '' : await sha256Of(previousText)
+  return { equal: stored === recomputed, stored, recomputed }
 }
 
 function checkListed(stored: object, content: SubmissionContent): NonNullable<SubmissionCheck['listed']> {
@@ -239,7 +261,7 @@ function checkListed(stored: object, content: SubmissionContent): NonNullable<Su
 }
 
 const strangers = (
-  clauses: readonly FrozenClauseResult[],
+  clauses: readonly JudgedClause[],
   evaluations: readonly CheckedEvaluation[],
 ): ClauseCheck[] =>
   evaluations

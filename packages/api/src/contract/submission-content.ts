@@ -1,6 +1,8 @@
 import type { Clause, Verdict } from '@evenrule/metrology'
 import { z } from 'zod'
+import { byHandVerdicts } from './by-hand-verdicts'
 import { calendarDate, instant, uuid } from './common'
+import { resolvedTermsSchema } from './terms'
 
 const hash = z.string().regex(/^[0-9a-f]{64}$/)
 export const verdictSchema = z.enum([
@@ -44,6 +46,8 @@ const frozenStudySchema = z.object({
   plannedReadings: z.number().int(),
   unit: z.string(),
   measuredAs: z.enum(['value', 'deviation']),
+  /** The gauge as it stood at registration; its resolution is the one that clauses judge. */
+  gauge: z.object({ code: z.string(), name: z.string(), resolution: z.string(), unit: z.string() }),
   standard: z.object({
     code: z.string(),
     name: z.string(),
@@ -55,12 +59,16 @@ const frozenStudySchema = z.object({
   calibration: z.object({ gauge: calibrationSchema, standard: calibrationSchema }),
   data: z.object({
     revision: z.number().int(),
+    /** Why readings that were judged before were replaced; null for the first. */
+    reason: z.string().nullable(),
     source: z.enum(['typed', 'pasted', 'uploaded']),
     collectedOn: calendarDate,
     /** Code of the person who took the readings; the name stays with the supplier. */
     appraiser: z.string(),
     /** Each reading as it was entered, in the study's unit. */
     readings: z.array(z.string()),
+    /** Rows of the file that held no number where a reading was expected, left out by the supplier. */
+    leftOut: z.array(z.object({ row: z.number().int(), column: z.string(), text: z.string() })),
     /** SHA-256 of the canonical JSON of `readings`. */
     sha256: hash,
     /** SHA-256 of the file they were read from, where there is one. */
@@ -69,13 +77,10 @@ const frozenStudySchema = z.object({
 })
 export type FrozenStudy = z.output<typeof frozenStudySchema>
 
-const frozenClauseSchema = z.object({
+/** How a clause was judged: on which study, with what result, by which engine. */
+const judgedFields = {
   clauseKey: z.string(),
   clause: clauseSchema,
-  agreementNumber: z.number().int(),
-  versionNumber: z.number().int(),
-  versionId: uuid,
-  scope: z.enum(['relationship', 'part', 'characteristic']),
   /** Code of the study it is judged on; null where none answers it. */
   study: z.string().nullable(),
   verdict: verdictSchema,
@@ -83,15 +88,35 @@ const frozenClauseSchema = z.object({
   outputSha256: hash,
   engineVersion: z.string(),
   engineSha256: hash,
+}
+const frozenClauseSchema = z.object({
+  ...judgedFields,
+  agreementNumber: z.number().int(),
+  versionNumber: z.number().int(),
+  versionId: uuid,
+  scope: z.enum(['relationship', 'part', 'characteristic']),
 })
 export type FrozenClauseResult = z.output<typeof frozenClauseSchema>
 
-export const fileRoleSchema = z.enum(['readings', 'gauge-certificate', 'standard-certificate'])
+/** A clause of the customer's house terms: judged for information where no criteria are agreed. */
+const advisoryClauseSchema = z.object(judgedFields)
+export type AdvisoryClauseResult = z.output<typeof advisoryClauseSchema>
+/** What both kinds have in common. */
+export type JudgedClause = AdvisoryClauseResult
+
+export const fileRoleSchema = z.enum(['readings', 'gauge-certificate', 'standard-certificate', 'document'])
+export type FileRole = z.output<typeof fileRoleSchema>
 
 /** Everything a submission freezes at signing; the signatures name the SHA-256 of its canonical JSON. */
 export const submissionContentSchema = z.object({
   format: z.literal('evenrule.submission/1'),
   number: z.number().int(),
+  /** Counts the signed texts of the submission, from one; a correction adds one. */
+  revision: z.number().int(),
+  /** Of a correction: the text it takes the place of, and the challenge it answers. */
+  corrects: z.object({ sha256: hash, challenge: z.number().int() }).nullable(),
+  /** Whether signed criteria applied on the day; `none`: an approver of each side decides. */
+  criteria: z.enum(['agreed', 'none']),
   /** The calendar day, in the relationship's time zone, whose criteria it answers. */
   criteriaOn: calendarDate,
   relationship: z.object({ id: uuid, supplier: partySchema, customer: partySchema, timeZone: z.string() }),
@@ -101,7 +126,7 @@ export const submissionContentSchema = z.object({
     id: uuid,
     gaugeCode: z.string(),
     gaugeName: z.string(),
-    /** As entered with the gauge, in the gauge's unit. */
+    /** As it stood at the registration of the newest study, in the gauge's unit. */
     gaugeResolution: z.string(),
     gaugeUnit: z.string(),
     site: z.string().nullable(),
@@ -118,6 +143,22 @@ export const submissionContentSchema = z.object({
     }),
   ),
   clauses: z.array(frozenClauseSchema),
+  /** The terms that the agreements set for the day, or the defaults. */
+  terms: resolvedTermsSchema,
+  /** The customer's house terms, judged for information only; null and empty where criteria are agreed. */
+  houseTerms: z.object({ id: uuid, number: z.number().int(), sha256: hash }).nullable(),
+  advisory: z.array(advisoryClauseSchema),
+  /** Clauses that were judged by hand, each on a document among the files. */
+  byHand: z.array(
+    z.object({
+      clauseKey: z.string(),
+      verdict: z.enum(byHandVerdicts),
+      reason: z.string(),
+      document: z.object({ name: z.string(), sha256: hash }),
+    }),
+  ),
+  /** The customer's open requests that it answers. */
+  requests: z.array(z.object({ id: uuid, number: z.number().int() })),
   studies: z.array(frozenStudySchema),
   /** The day from which attempts count: the first on which criteria for this scope were in force. */
   attemptsSince: calendarDate.nullable(),
@@ -152,6 +193,19 @@ export function contentOf(text: string): SubmissionContent | null {
     return null
   }
 }
+
+/** One evaluation as stored: the canonical texts are the original. */
+export const evaluationSchema = z.object({
+  clauseKey: z.string(),
+  /** Of a clause of house terms, judged for information. */
+  advisory: z.boolean(),
+  inputText: z.string(),
+  outputText: z.string(),
+  outputSha256: hash,
+  engineVersion: z.string(),
+  engineSha256: hash,
+})
+export type SubmissionEvaluation = z.output<typeof evaluationSchema>
 
 /**
  * The verdict of a whole submission: it meets only where every clause does; one that falls short decides, then

@@ -12,14 +12,19 @@ import {
   uuid,
 } from './common'
 import { defineEndpoint } from './define'
+import { byHandAskedSchema } from './by-hand'
+import { movedSchema, textHash } from './moved'
 import { submissionStates } from './moves/submission'
-import { challengeSchema, decisionSchema, movedSchema } from './reviews'
-import { fileRoleSchema, verdictSchema } from './submission-content'
+import { challengeSchema, decisionSchema } from './reviews'
+import { standingSchema, standingStates } from './standing'
+import { evaluationSchema, fileRoleSchema, verdictSchema } from './submission-content'
 import { submissionCheckSchema } from './submission-check'
 
+export * from './by-hand'
+export * from './data-difference'
 export * from './submission-content'
 
-const hash = z.string().regex(/^[0-9a-f]{64}$/, 'This is not a SHA-256 hash.')
+const hash = textHash
 const words = paragraph().min(1, 'Say why.')
 const state = z.enum(submissionStates)
 
@@ -48,8 +53,12 @@ export const submissionRowSchema = z.object({
   /** The organisation on the other side. */
   other: z.object({ id: uuid, name: z.string() }),
   verdict: verdictSchema.nullable(),
+  /** Null while it is not signed; `none`: no criteria are agreed, an approver of each side decides. */
+  criteria: z.enum(['agreed', 'none']).nullable(),
   clausesMet: z.number().int().nullable(),
   clausesTotal: z.number().int().nullable(),
+  /** How an accepted one stands today; null for others. */
+  standing: standingSchema.nullable(),
   createdAt: instant,
   submittedAt: instant.nullable(),
 })
@@ -77,6 +86,9 @@ export const submissionQuery = pageQuery.extend({
   waitsOn: sideSchema.optional(),
   verdict: verdictSchema.optional(),
   safety: z.enum(['true', 'false']).optional(),
+  criteria: z.enum(['agreed', 'none']).optional(),
+  /** Accepted ones that stand so today. */
+  standing: z.enum(standingStates).optional(),
   taskId: uuid.optional(),
   partId: uuid.optional(),
   relationshipId: uuid.optional(),
@@ -93,22 +105,21 @@ export const listSubmissions = defineEndpoint({
   summary: 'Submissions of this organisation on its side; the customer sees those that are signed.',
 })
 
-/** One evaluation as stored: the canonical texts are the original. */
-export const evaluationSchema = z.object({
-  clauseKey: z.string(),
-  inputText: z.string(),
-  outputText: z.string(),
-  outputSha256: hash,
-  engineVersion: z.string(),
-  engineSha256: hash,
-})
-export type SubmissionEvaluation = z.output<typeof evaluationSchema>
-
 /** Why a move that the state and the role allow is still not this person's to make. */
 export const hindranceSchema = z.object({
-  move: z.enum(['send-for-signature', 'sign', 'accept', 'accept-with-conditions', 'refuse', 'confirm']),
+  move: z.enum([
+    'send-for-signature',
+    'sign',
+    'accept',
+    'accept-with-conditions',
+    'refuse',
+    'confirm',
+    'agree-one-off',
+  ]),
   code: z.enum([
-    'no-criteria',
+    'nothing-to-judge',
+    'task-archived',
+    'needs-approver',
     'took-the-readings',
     'same-person',
     'challenge-open',
@@ -117,6 +128,17 @@ export const hindranceSchema = z.object({
   ]),
 })
 export type Hindrance = z.output<typeof hindranceSchema>
+
+export const signatureMeanings = [
+  'submits',
+  'corrects',
+  'accepts',
+  'accepts-with-conditions',
+  'refuses',
+  'second-person',
+  'agrees-one-off',
+] as const
+export type SignatureMeaning = (typeof signatureMeanings)[number]
 
 export const submissionSchema = z.object({
   id: uuid,
@@ -132,12 +154,29 @@ export const submissionSchema = z.object({
   verdict: verdictSchema,
   clausesMet: z.number().int(),
   clausesTotal: z.number().int(),
+  criteria: z.enum(['agreed', 'none']),
+  /** How an accepted one stands today; null for others. */
+  standing: standingSchema.nullable(),
   createdAt: instant,
   sentForSignatureAt: instant.nullable(),
   submittedAt: instant.nullable(),
   decidedAt: instant.nullable(),
   withdrawalReason: z.string().nullable(),
   supersededBy: z.object({ id: uuid, number: z.number().int() }).nullable(),
+  /** The revision that is shown, and every one there is, the first first; before signing only what would be frozen. */
+  revision: z.number().int(),
+  revisions: z.array(
+    z.object({
+      revision: z.number().int(),
+      sha256: hash,
+      frozenAt: instant,
+      verdict: verdictSchema,
+      clausesMet: z.number().int(),
+      clausesTotal: z.number().int(),
+      /** Number of the challenge that it answers; null for the first. */
+      challenge: z.number().int().nullable(),
+    }),
+  ),
   /**
    * The frozen content as canonical JSON and its SHA-256; before signing, what signing today would freeze. Read it
    * with `submissionContentSchema`.
@@ -160,8 +199,10 @@ export const submissionSchema = z.object({
     z.object({
       side: sideSchema,
       name: z.string().nullable(),
-      meaning: z.enum(['submits', 'accepts', 'accepts-with-conditions', 'refuses', 'second-person']),
+      meaning: z.enum(signatureMeanings),
       sha256: hash,
+      /** The revision whose text it stands under. */
+      revision: z.number().int(),
       signedAt: instant,
     }),
   ),
@@ -180,6 +221,8 @@ export const submissionSchema = z.object({
       chosen: z.boolean(),
     }),
   ),
+  /** Clauses that ask for a judgement by hand, while it is a draft; empty otherwise and for the customer. */
+  byHand: z.array(byHandAskedSchema),
   hindrances: z.array(hindranceSchema),
 })
 export type Submission = z.output<typeof submissionSchema>
@@ -192,6 +235,10 @@ export const readSubmission = defineEndpoint({
   path: base,
   access: 'submissions.read',
   params,
+  query: z.object({
+    /** An earlier signed text to read instead of the newest. */
+    revision: z.coerce.number().int().min(1).max(1_000_000).optional(),
+  }),
   response: submissionSchema,
   summary: 'One submission with everything frozen in it, its signatures, decisions and challenges.',
 })
@@ -276,8 +323,14 @@ export const verifySubmission = defineEndpoint({
   path: `${base}/verify`,
   access: 'submissions.read',
   params,
-  response: submissionCheckSchema,
-  summary: 'Recomputes every clause on the engine it names and compares everything frozen byte for byte.',
+  response: submissionCheckSchema.extend({
+    /** The newest revision is checked above; `equal` there is about all of them. */
+    revision: z.number().int(),
+    /** The signed texts before it, the first first. */
+    earlier: z.array(submissionCheckSchema.extend({ revision: z.number().int() })),
+  }),
+  summary:
+    'Recomputes every clause of every revision on the engine it names and compares everything frozen byte for byte.',
 })
 
 export const downloadSubmissionFile = defineEndpoint({

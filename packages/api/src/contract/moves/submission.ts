@@ -8,6 +8,8 @@ export const submissionStates = [
   'challenged',
   'answered',
   'awaiting-second-person',
+  /** Accepted without agreed criteria by the customer; an approver of the supplier has to agree. */
+  'awaiting-other-side',
   'accepted',
   'accepted-with-conditions',
   'refused',
@@ -17,13 +19,15 @@ export const submissionStates = [
 export type SubmissionState = (typeof submissionStates)[number]
 
 export type SubmissionPrecondition =
-  /** At least one signed clause applies to the task today. */
-  | 'criteria-in-force'
+  /** The measuring task is in use; one that was archived needs no proof. */
+  | 'task-in-use'
+  /** The studies it rests on: at least one where there are no criteria, or it would show nothing at all. */
+  | 'something-to-judge'
   /** One unsigned submission per measuring task at a time. */
   | 'no-other-draft'
   /** A sentence that says why. */
   | 'reason-given'
-  /** The signer is not among those who took the readings. */
+  /** The signer is not among those who took the readings, or the agreement lets them sign. */
   | 'did-not-take-readings'
   /** The hash that the person saw is the hash of what is signed. */
   | 'as-seen'
@@ -35,6 +39,9 @@ export type SubmissionPrecondition =
   | 'challenges-settled'
   | 'safety-class'
   | 'not-safety-class'
+  /** Whether signed criteria judged it; without them an approver of each side decides. */
+  | 'criteria-agreed'
+  | 'no-criteria-agreed'
   /** No submission of the same task that was signed later is accepted already. */
   | 'no-newer-accepted'
   | 'newer-accepted'
@@ -49,8 +56,17 @@ const signer = { side: 'supplier', permission: 'submissions.sign' } as const
 const reviewer = { side: 'customer', permission: 'reviews.decide' } as const
 const approver = { side: 'customer', permission: 'reviews.approve' } as const
 
-const undecided = ['submitted', 'challenged', 'answered', 'awaiting-second-person'] as const
+const undecided = [
+  'submitted',
+  'challenged',
+  'answered',
+  'awaiting-second-person',
+  'awaiting-other-side',
+] as const
 const decidable = ['submitted', 'answered'] as const
+/** What every acceptance rests on. */
+const ready = ['as-seen', 'challenges-settled', 'no-newer-accepted'] as const
+const confirmable = ['as-seen', 'another-person', 'no-newer-accepted'] as const
 
 /**
  * The life of a submission. A name with several rows leads to several states; the preconditions tell which.
@@ -62,7 +78,7 @@ export const submissionMoves = [
     from: [],
     to: 'draft',
     ...engineer,
-    preconditions: ['criteria-in-force', 'no-other-draft'],
+    preconditions: ['task-in-use', 'no-other-draft'],
     event: 'submission.prepared',
     words: 'Prepare a submission',
   },
@@ -71,7 +87,7 @@ export const submissionMoves = [
     from: ['draft'],
     to: 'for-signature',
     ...engineer,
-    preconditions: ['criteria-in-force'],
+    preconditions: ['task-in-use', 'something-to-judge'],
     event: 'submission.sent-for-signature',
     words: 'Send for signature',
   },
@@ -89,7 +105,7 @@ export const submissionMoves = [
     from: ['for-signature'],
     to: 'submitted',
     ...signer,
-    preconditions: ['criteria-in-force', 'did-not-take-readings', 'as-seen'],
+    preconditions: ['task-in-use', 'something-to-judge', 'did-not-take-readings', 'as-seen'],
     event: 'submission.signed',
     words: 'Sign and submit',
   },
@@ -153,7 +169,7 @@ export const submissionMoves = [
     from: decidable,
     to: 'accepted',
     ...reviewer,
-    preconditions: ['as-seen', 'challenges-settled', 'no-newer-accepted', 'not-safety-class'],
+    preconditions: [...ready, 'criteria-agreed', 'not-safety-class'],
     event: 'submission.accepted',
     words: 'Accept',
   },
@@ -162,7 +178,25 @@ export const submissionMoves = [
     from: decidable,
     to: 'awaiting-second-person',
     ...reviewer,
-    preconditions: ['as-seen', 'challenges-settled', 'no-newer-accepted', 'safety-class'],
+    preconditions: [...ready, 'criteria-agreed', 'safety-class'],
+    event: 'submission.second-person-asked',
+    words: 'Accept',
+  },
+  {
+    name: 'accept',
+    from: decidable,
+    to: 'awaiting-other-side',
+    ...approver,
+    preconditions: [...ready, 'no-criteria-agreed', 'not-safety-class'],
+    event: 'submission.one-off-proposed',
+    words: 'Accept',
+  },
+  {
+    name: 'accept',
+    from: decidable,
+    to: 'awaiting-second-person',
+    ...approver,
+    preconditions: [...ready, 'no-criteria-agreed', 'safety-class'],
     event: 'submission.second-person-asked',
     words: 'Accept',
   },
@@ -171,8 +205,17 @@ export const submissionMoves = [
     from: decidable,
     to: 'accepted-with-conditions',
     ...approver,
-    preconditions: ['as-seen', 'challenges-settled', 'no-newer-accepted', 'not-safety-class'],
+    preconditions: [...ready, 'criteria-agreed', 'not-safety-class'],
     event: 'submission.accepted-with-conditions',
+    words: 'Accept with conditions',
+  },
+  {
+    name: 'accept-with-conditions',
+    from: decidable,
+    to: 'awaiting-other-side',
+    ...approver,
+    preconditions: [...ready, 'no-criteria-agreed', 'not-safety-class'],
+    event: 'submission.one-off-proposed',
     words: 'Accept with conditions',
   },
   {
@@ -180,7 +223,7 @@ export const submissionMoves = [
     from: decidable,
     to: 'awaiting-second-person',
     ...approver,
-    preconditions: ['as-seen', 'challenges-settled', 'no-newer-accepted', 'safety-class'],
+    preconditions: [...ready, 'safety-class'],
     event: 'submission.second-person-asked',
     words: 'Accept with conditions',
   },
@@ -189,7 +232,16 @@ export const submissionMoves = [
     from: decidable,
     to: 'refused',
     ...reviewer,
-    preconditions: ['as-seen', 'no-challenge-open', 'reason-given'],
+    preconditions: ['as-seen', 'no-challenge-open', 'reason-given', 'criteria-agreed'],
+    event: 'submission.refused',
+    words: 'Refuse',
+  },
+  {
+    name: 'refuse',
+    from: decidable,
+    to: 'refused',
+    ...approver,
+    preconditions: ['as-seen', 'no-challenge-open', 'reason-given', 'no-criteria-agreed'],
     event: 'submission.refused',
     words: 'Refuse',
   },
@@ -198,7 +250,7 @@ export const submissionMoves = [
     from: ['awaiting-second-person'],
     to: 'accepted',
     ...reviewer,
-    preconditions: ['as-seen', 'another-person', 'no-newer-accepted', 'without-conditions'],
+    preconditions: [...confirmable, 'criteria-agreed', 'without-conditions'],
     event: 'submission.accepted',
     words: 'Confirm as second person',
   },
@@ -207,9 +259,54 @@ export const submissionMoves = [
     from: ['awaiting-second-person'],
     to: 'accepted-with-conditions',
     ...reviewer,
-    preconditions: ['as-seen', 'another-person', 'no-newer-accepted', 'with-conditions'],
+    preconditions: [...confirmable, 'criteria-agreed', 'with-conditions'],
     event: 'submission.accepted-with-conditions',
     words: 'Confirm as second person',
+  },
+  {
+    name: 'confirm',
+    from: ['awaiting-second-person'],
+    to: 'awaiting-other-side',
+    ...reviewer,
+    preconditions: [...confirmable, 'no-criteria-agreed'],
+    event: 'submission.one-off-proposed',
+    words: 'Confirm as second person',
+  },
+  {
+    name: 'agree-one-off',
+    from: ['awaiting-other-side'],
+    to: 'accepted',
+    ...signer,
+    preconditions: ['as-seen', 'no-newer-accepted', 'without-conditions'],
+    event: 'submission.one-off-agreed',
+    words: 'Agree and sign',
+  },
+  {
+    name: 'agree-one-off',
+    from: ['awaiting-other-side'],
+    to: 'accepted-with-conditions',
+    ...signer,
+    preconditions: ['as-seen', 'no-newer-accepted', 'with-conditions'],
+    event: 'submission.one-off-agreed',
+    words: 'Agree and sign',
+  },
+  {
+    name: 'decline-one-off',
+    from: ['awaiting-other-side'],
+    to: 'submitted',
+    ...signer,
+    preconditions: ['reason-given', 'no-challenge-was-answered'],
+    event: 'submission.one-off-declined',
+    words: 'Do not agree',
+  },
+  {
+    name: 'decline-one-off',
+    from: ['awaiting-other-side'],
+    to: 'answered',
+    ...signer,
+    preconditions: ['reason-given'],
+    event: 'submission.one-off-declined',
+    words: 'Do not agree',
   },
   {
     name: 'send-back',
@@ -270,6 +367,7 @@ export const waitsOn: Record<SubmissionState, Side | null> = {
   challenged: 'supplier',
   answered: 'customer',
   'awaiting-second-person': 'customer',
+  'awaiting-other-side': 'supplier',
   accepted: null,
   'accepted-with-conditions': null,
   refused: null,
@@ -277,7 +375,9 @@ export const waitsOn: Record<SubmissionState, Side | null> = {
   superseded: null,
 }
 
-/** States in which the customer still has to decide. */
+/** States in which the decision is still to come. */
 export const underReview: readonly SubmissionState[] = undecided
+/** States in which the customer reviews and the supplier answers; nobody's decision waits for a second one. */
+export const openToChallenge: readonly SubmissionState[] = ['submitted', 'challenged', 'answered']
 /** States that count as accepted proof. */
 export const acceptedStates: readonly SubmissionState[] = ['accepted', 'accepted-with-conditions']
