@@ -229,6 +229,26 @@ CREATE TABLE "parts" (
 );
 --> statement-breakpoint
 ALTER TABLE "parts" ENABLE ROW LEVEL SECURITY;--> statement-breakpoint
+CREATE TABLE "house_terms" (
+	"org_id" uuid NOT NULL,
+	"id" uuid PRIMARY KEY NOT NULL,
+	"number" integer,
+	"state" text NOT NULL,
+	"clauses" jsonb NOT NULL,
+	"terms" jsonb NOT NULL,
+	"words" text DEFAULT '' NOT NULL,
+	"text" text,
+	"sha256" text,
+	"created_at" timestamp (3) with time zone NOT NULL,
+	"saved_at" timestamp (3) with time zone NOT NULL,
+	"saved_by" uuid NOT NULL,
+	"published_at" timestamp (3) with time zone,
+	"row_version" integer DEFAULT 1 NOT NULL,
+	CONSTRAINT "house_terms_org_id" UNIQUE("org_id","id"),
+	CONSTRAINT "house_terms_number" UNIQUE("org_id","number")
+);
+--> statement-breakpoint
+ALTER TABLE "house_terms" ENABLE ROW LEVEL SECURITY;--> statement-breakpoint
 CREATE TABLE "agreement_comments" (
 	"id" uuid PRIMARY KEY NOT NULL,
 	"relationship_id" uuid NOT NULL,
@@ -796,6 +816,7 @@ ALTER TABLE "measuring_tasks" ADD CONSTRAINT "measuring_tasks_relationship_fk" F
 ALTER TABLE "part_revisions" ADD CONSTRAINT "part_revisions_part_fk" FOREIGN KEY ("relationship_id","part_id") REFERENCES "public"."parts"("relationship_id","id") ON DELETE no action ON UPDATE no action;--> statement-breakpoint
 ALTER TABLE "part_revisions" ADD CONSTRAINT "part_revisions_relationship_fk" FOREIGN KEY ("relationship_id","supplier_org_id","customer_org_id") REFERENCES "public"."relationships"("id","supplier_org_id","customer_org_id") ON DELETE no action ON UPDATE no action;--> statement-breakpoint
 ALTER TABLE "parts" ADD CONSTRAINT "parts_relationship_fk" FOREIGN KEY ("relationship_id","supplier_org_id","customer_org_id") REFERENCES "public"."relationships"("id","supplier_org_id","customer_org_id") ON DELETE no action ON UPDATE no action;--> statement-breakpoint
+ALTER TABLE "house_terms" ADD CONSTRAINT "house_terms_org_fk" FOREIGN KEY ("org_id") REFERENCES "public"."organisations"("id") ON DELETE no action ON UPDATE no action;--> statement-breakpoint
 ALTER TABLE "agreement_comments" ADD CONSTRAINT "agreement_comments_round_fk" FOREIGN KEY ("relationship_id","round_id") REFERENCES "public"."agreement_rounds"("relationship_id","id") ON DELETE no action ON UPDATE no action;--> statement-breakpoint
 ALTER TABLE "agreement_comments" ADD CONSTRAINT "agreement_comments_relationship_fk" FOREIGN KEY ("relationship_id","supplier_org_id","customer_org_id") REFERENCES "public"."relationships"("id","supplier_org_id","customer_org_id") ON DELETE no action ON UPDATE no action;--> statement-breakpoint
 ALTER TABLE "agreement_marks" ADD CONSTRAINT "agreement_marks_round_fk" FOREIGN KEY ("relationship_id","round_id") REFERENCES "public"."agreement_rounds"("relationship_id","id") ON DELETE no action ON UPDATE no action;--> statement-breakpoint
@@ -876,6 +897,7 @@ CREATE INDEX "measuring_tasks_characteristic" ON "measuring_tasks" USING btree (
 CREATE INDEX "measuring_tasks_gauge" ON "measuring_tasks" USING btree ("supplier_org_id","gauge_id");--> statement-breakpoint
 CREATE INDEX "parts_supplier" ON "parts" USING btree ("supplier_org_id","number");--> statement-breakpoint
 CREATE INDEX "parts_customer" ON "parts" USING btree ("customer_org_id","number");--> statement-breakpoint
+CREATE UNIQUE INDEX "house_terms_one_draft" ON "house_terms" USING btree ("org_id") WHERE state = 'draft';--> statement-breakpoint
 CREATE INDEX "agreement_comments_version" ON "agreement_comments" USING btree ("relationship_id","version_id","at");--> statement-breakpoint
 CREATE INDEX "agreement_marks_version" ON "agreement_marks" USING btree ("relationship_id","version_id","at");--> statement-breakpoint
 CREATE UNIQUE INDEX "agreement_rounds_number" ON "agreement_rounds" USING btree ("relationship_id","version_id","number") WHERE state <> 'draft';--> statement-breakpoint
@@ -930,6 +952,10 @@ CREATE POLICY "characteristics_parties" ON "characteristics" AS PERMISSIVE FOR A
 CREATE POLICY "measuring_tasks_parties" ON "measuring_tasks" AS PERMISSIVE FOR ALL TO "evenrule_app" USING ((supplier_org_id = nullif(current_setting('app.org_id', true), '')::uuid or customer_org_id = nullif(current_setting('app.org_id', true), '')::uuid)) WITH CHECK ((supplier_org_id = nullif(current_setting('app.org_id', true), '')::uuid or customer_org_id = nullif(current_setting('app.org_id', true), '')::uuid));--> statement-breakpoint
 CREATE POLICY "part_revisions_parties" ON "part_revisions" AS PERMISSIVE FOR ALL TO "evenrule_app" USING ((supplier_org_id = nullif(current_setting('app.org_id', true), '')::uuid or customer_org_id = nullif(current_setting('app.org_id', true), '')::uuid)) WITH CHECK ((supplier_org_id = nullif(current_setting('app.org_id', true), '')::uuid or customer_org_id = nullif(current_setting('app.org_id', true), '')::uuid));--> statement-breakpoint
 CREATE POLICY "parts_parties" ON "parts" AS PERMISSIVE FOR ALL TO "evenrule_app" USING ((supplier_org_id = nullif(current_setting('app.org_id', true), '')::uuid or customer_org_id = nullif(current_setting('app.org_id', true), '')::uuid)) WITH CHECK ((supplier_org_id = nullif(current_setting('app.org_id', true), '')::uuid or customer_org_id = nullif(current_setting('app.org_id', true), '')::uuid));--> statement-breakpoint
+CREATE POLICY "house_terms_owner" ON "house_terms" AS PERMISSIVE FOR ALL TO "evenrule_app" USING (org_id = nullif(current_setting('app.org_id', true), '')::uuid) WITH CHECK (org_id = nullif(current_setting('app.org_id', true), '')::uuid);--> statement-breakpoint
+CREATE POLICY "house_terms_suppliers" ON "house_terms" AS PERMISSIVE FOR SELECT TO "evenrule_app" USING (state = 'published' and exists (select 1 from relationships r where r.customer_org_id = house_terms.org_id and r.supplier_org_id = nullif(current_setting('app.org_id', true), '')::uuid));--> statement-breakpoint
+CREATE POLICY "house_terms_published_stay" ON "house_terms" AS RESTRICTIVE FOR DELETE TO "evenrule_app" USING (state = 'draft');--> statement-breakpoint
+CREATE POLICY "house_terms_published_unchanged" ON "house_terms" AS RESTRICTIVE FOR UPDATE TO "evenrule_app" USING (state = 'draft') WITH CHECK (true);--> statement-breakpoint
 CREATE POLICY "agreement_comments_parties" ON "agreement_comments" AS PERMISSIVE FOR ALL TO "evenrule_app" USING ((supplier_org_id = nullif(current_setting('app.org_id', true), '')::uuid or customer_org_id = nullif(current_setting('app.org_id', true), '')::uuid)) WITH CHECK ((supplier_org_id = nullif(current_setting('app.org_id', true), '')::uuid or customer_org_id = nullif(current_setting('app.org_id', true), '')::uuid));--> statement-breakpoint
 CREATE POLICY "agreement_comments_own_side" ON "agreement_comments" AS RESTRICTIVE FOR INSERT TO "evenrule_app" WITH CHECK (((side = 'supplier' and supplier_org_id = nullif(current_setting('app.org_id', true), '')::uuid) or (side = 'customer' and customer_org_id = nullif(current_setting('app.org_id', true), '')::uuid)));--> statement-breakpoint
 CREATE POLICY "agreement_comments_sent_rounds" ON "agreement_comments" AS RESTRICTIVE FOR INSERT TO "evenrule_app" WITH CHECK (exists (select 1 from agreement_rounds r where r.relationship_id = agreement_comments.relationship_id and r.id = agreement_comments.round_id and r.state <> 'draft'));--> statement-breakpoint

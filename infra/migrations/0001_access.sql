@@ -16,15 +16,15 @@ GRANT USAGE ON SCHEMA public TO evenrule_app, evenrule_system;
 GRANT SELECT, INSERT, UPDATE ON
   sites, memberships, parts, part_revisions, characteristics, measuring_tasks,
   gauges, reference_standards, calibrations,
-  agreements, agreement_versions, agreement_rounds,
+  agreements, agreement_versions, agreement_rounds, house_terms,
   studies, study_tasks, submission_studies
   TO evenrule_app;
 --> statement-breakpoint
 -- What is written once and never changed.
 GRANT SELECT, INSERT ON
-  files, agreement_signatures, study_data, study_evaluations, submission_texts, submission_clauses,
+  files, agreement_signatures, agreement_comments, agreement_marks, study_data, study_evaluations, submission_texts, submission_clauses,
   submission_files, submission_signatures, submission_notes, challenge_messages, request_tasks, request_answers, reminders,
-  record_events
+  gauge_events, standing_calibrations, standing_events, reinstatements, carry_overs, record_events
   TO evenrule_app;
 --> statement-breakpoint
 -- What these rows are about never changes, only where they stand.
@@ -52,7 +52,7 @@ GRANT SELECT, UPDATE (read_at) ON messages TO evenrule_app;
 --> statement-breakpoint
 GRANT INSERT ON security_events TO evenrule_app;
 --> statement-breakpoint
-GRANT DELETE ON memberships, agreements, agreement_rounds, agreement_versions, submission_studies TO evenrule_app;
+GRANT DELETE ON memberships, agreements, agreement_rounds, agreement_versions, house_terms, submission_studies TO evenrule_app;
 --> statement-breakpoint
 GRANT SELECT ON messages, users TO evenrule_system;
 --> statement-breakpoint
@@ -91,14 +91,14 @@ RETURNS uuid LANGUAGE sql VOLATILE SECURITY DEFINER SET search_path = public, pg
 $$;
 --> statement-breakpoint
 -- The organisations of one person, for sign-in and the switcher, with the sides each has.
-CREATE FUNCTION memberships_of_person(p_user uuid, p_today date)
+CREATE FUNCTION memberships_of_person(p_user uuid, p_now timestamptz)
 RETURNS TABLE (org_id uuid, org_name text, time_zone text, roles text[], supplies boolean, buys boolean)
 LANGUAGE sql STABLE SECURITY DEFINER SET search_path = public, pg_temp AS $$
   SELECT o.id, o.name, o.time_zone, m.roles,
     EXISTS (SELECT 1 FROM relationships r WHERE r.supplier_org_id = o.id),
     EXISTS (SELECT 1 FROM relationships r WHERE r.customer_org_id = o.id)
   FROM memberships m JOIN organisations o ON o.id = m.org_id
-  WHERE m.user_id = p_user AND (m.ends_on IS NULL OR m.ends_on >= p_today)
+  WHERE m.user_id = p_user AND (m.ends_on IS NULL OR m.ends_on >= (p_now AT TIME ZONE o.time_zone)::date)
   ORDER BY o.name
 $$;
 --> statement-breakpoint
@@ -159,7 +159,7 @@ END $$;
 REVOKE ALL ON ALL FUNCTIONS IN SCHEMA public FROM PUBLIC;
 --> statement-breakpoint
 GRANT EXECUTE ON FUNCTION
-  sign_in_person(text, text, text, boolean, text, timestamptz), memberships_of_person(uuid, date),
+  sign_in_person(text, text, text, boolean, text, timestamptz), memberships_of_person(uuid, timestamptz),
   names_of_people(uuid[]), members_of_current(),
   notify_party(uuid, text, text[], uuid, text, text, text, text, timestamptz)
   TO evenrule_app;

@@ -7,7 +7,7 @@ import { fileById, keepFile, type FileToKeep } from '../files/files.service'
 import { isArchived } from '../parts/parts.errors'
 import { insertCalibration, selectCalibrations, type CalibratedThing } from './calibrations.repository'
 import { gaugeById, standardById } from './gauges.lookup.service'
-import { todayOf } from './gauges.service'
+import { todayOf } from '../organisations/organisations.lookup.service'
 
 type CalibrationAnswer = AnswerInputOf<typeof addGaugeCalibration>
 

@@ -2,11 +2,11 @@ import { areCompatible } from '@evenrule/metrology'
 import { standingOn } from '../../../contract/calibrations'
 import type { AnswerInputOf, BodyOf, QueryOf } from '../../../contract/define'
 import type { changeGauge, createGauge, listGauges, listSites, readGauge } from '../../../contract/gauges'
-import { dayIn } from '../../calendar'
 import { paged } from '../../db/paging'
 import type { Tenant } from '../../db/tenant'
 import { uniqueOr409 } from '../../db/unique'
 import { changedMeanwhile, invalidInput, notFound } from '../../errors'
+import { todayOf } from '../organisations/organisations.lookup.service'
 import { isArchived, isNotArchived } from '../parts/parts.errors'
 import { recordTask } from '../parts/tasks.service'
 import { stillServes } from './gauges.errors'
@@ -21,7 +21,7 @@ import {
   type GaugeListed,
   type GaugeRow,
 } from './gauges.repository'
-import { selectSites, selectTimeZone, siteNamed } from './sites.repository'
+import { selectSites, siteNamed } from './sites.repository'
 
 type GaugeAnswer = AnswerInputOf<typeof readGauge>
 
@@ -31,10 +31,6 @@ const taken = {
     message: 'Another gauge has this code. Look among the archived ones too, or enter another code.',
   },
 }
-
-/** Today as this organisation's calendar has it; calibrations are judged by it. */
-export const todayOf = async (tenant: Tenant): Promise<string> =>
-  dayIn(await selectTimeZone(tenant), tenant.now)
 
 /** One page of gauges with the calibration that counts today. */
 export async function listOfGauges(tenant: Tenant, query: QueryOf<typeof listGauges>) {

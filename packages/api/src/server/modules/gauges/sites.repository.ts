@@ -3,7 +3,7 @@ import type { QueryOf } from '../../../contract/define'
 import type { listSites } from '../../../contract/gauges'
 import { containing, orderOf, totalOverPages, windowOf } from '../../db/paging'
 import type { Tenant } from '../../db/tenant'
-import { organisations, sites } from '../organisations/organisations.table'
+import { sites } from '../organisations/organisations.table'
 
 /** One page of this organisation's sites; every row carries the total. */
 export async function selectSites({ tx, organisationId }: Tenant, query: QueryOf<typeof listSites>) {
@@ -25,14 +25,4 @@ export async function siteNamed({ tx, organisationId }: Tenant, name: string): P
     .returning({ id: sites.id })
   if (!row) throw new Error('The site was not stored.')
   return row.id
-}
-
-/** The time zone in which this organisation's own days are judged. */
-export async function selectTimeZone({ tx, organisationId }: Tenant): Promise<string> {
-  const [row] = await tx
-    .select({ timeZone: organisations.timeZone })
-    .from(organisations)
-    .where(eq(organisations.id, organisationId))
-  if (!row) throw new Error('The organisation is not visible to itself.')
-  return row.timeZone
 }

@@ -7,7 +7,7 @@ import { uniqueOr409 } from '../../db/unique'
 import { changedMeanwhile, notFound } from '../../errors'
 import { isArchived, isNotArchived } from '../parts/parts.errors'
 import { standardById } from './gauges.lookup.service'
-import { todayOf } from './gauges.service'
+import { todayOf } from '../organisations/organisations.lookup.service'
 import {
   insertStandard,
   selectListedStandard,
