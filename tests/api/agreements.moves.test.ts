@@ -5,6 +5,7 @@ import {
   agreementMoveNames,
   agreementMoves,
   allows,
+  noTerms,
   sides,
   type AgreementMoveName,
   type AgreementVersionState,
@@ -113,11 +114,12 @@ async function attempt(tenant: Tenant, act: Act, at: Answer, version: Version): 
     clauses: choices[act.clauses] ?? [],
     effectiveOn: dayAfter(world.harness.now(), act.inDays),
     comment: '',
+    terms: noTerms,
   }
   switch (act.name) {
     case 'keep-draft':
       if (draft) await save(tenant, ids, { ...written, send: false, expectedVersion: draft.rowVersion })
-      else await answer(tenant, ids, { ...written, send: false, expectedVersion })
+      else await answer(tenant, ids, { ...written, caseOf: null, send: false, expectedVersion })
       return
     case 'discard-draft':
       await discard(tenant, ids, draft?.rowVersion ?? 1)
@@ -127,7 +129,7 @@ async function attempt(tenant: Tenant, act: Act, at: Answer, version: Version): 
       return
     case 'counter':
       if (draft) await send(tenant, ids, draft.rowVersion)
-      else await answer(tenant, ids, { ...written, send: true, expectedVersion })
+      else await answer(tenant, ids, { ...written, caseOf: null, send: true, expectedVersion })
       return
     case 'accept':
       await accept(tenant, ids, expectedVersion)
@@ -248,6 +250,9 @@ async function tryToBegin(act: Act, scope: Scope, seen: readonly Answer[], reach
         clauses: choices[act.clauses] ?? [],
         effectiveOn: dayAfter(world.harness.now(), act.inDays),
         comment: '',
+        terms: noTerms,
+        houseTermsId: null,
+        caseOf: null,
         send: !act.draft,
       }),
     ),

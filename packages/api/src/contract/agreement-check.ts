@@ -27,6 +27,8 @@ export interface ClauseWarning {
   /** Field of the clause: `parameters.margin.base`. */
   path: string
   message: string
+  /** How many characteristics it concerns. */
+  count: number
   characteristicIds: string[]
 }
 
@@ -34,6 +36,7 @@ export interface ClauseWarning {
 export interface SafetyFlag {
   clause: number
   code: 'zero-difference' | 'point-estimate'
+  count: number
   characteristicIds: string[]
 }
 
@@ -77,8 +80,16 @@ export function clauseWarnings(
     for (const of of characteristics) {
       for (const { code, path, message } of clauseProblems(clause, computedCharacteristic(of))) {
         const key = `${place} ${code} ${path} ${message}`
-        const warning = found.get(key) ?? { clause: place, code, path, message, characteristicIds: [] }
+        const warning = found.get(key) ?? {
+          clause: place,
+          code,
+          path,
+          message,
+          count: 0,
+          characteristicIds: [],
+        }
         warning.characteristicIds.push(of.characteristicId)
+        warning.count += 1
         found.set(key, warning)
       }
     }
@@ -110,9 +121,9 @@ export function safetyFlags(
   return clauses.flatMap((clause, place): SafetyFlag[] => {
     const descriptor = clauseDescriptor(clause)
     if (descriptor.rule?.(clause, complete)?.type === 'zero-test')
-      return [{ clause: place, code: 'zero-difference', characteristicIds }]
+      return [{ clause: place, code: 'zero-difference', count: characteristicIds.length, characteristicIds }]
     return descriptor.basis === 'estimate'
-      ? [{ clause: place, code: 'point-estimate', characteristicIds }]
+      ? [{ clause: place, code: 'point-estimate', count: characteristicIds.length, characteristicIds }]
       : []
   })
 }

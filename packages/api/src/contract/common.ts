@@ -95,6 +95,8 @@ export const problemSchema = z.object({
   detail: z.string().optional(),
   /** Present on unexpected errors: the id under which the log has the details. */
   id: z.string().optional(),
+  /** What stands now, where somebody else changed it meanwhile; the endpoint's contract says in what shape. */
+  current: z.record(z.string(), z.unknown()).optional(),
   errors: z
     .array(
       z.object({

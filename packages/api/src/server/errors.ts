@@ -13,6 +13,8 @@ export class ProblemError extends Error {
     readonly status: number,
     message: string,
     readonly errors?: readonly FieldError[],
+    /** What stands now where somebody else changed it; in the shape that the endpoint's contract names. */
+    readonly current?: Readonly<Record<string, unknown>>,
   ) {
     super(message)
     this.name = 'ProblemError'
@@ -24,6 +26,12 @@ export const defineError =
   <A extends unknown[]>(code: string, status: number, message: string | ((...args: A) => string)) =>
   (...args: A): ProblemError =>
     new ProblemError(code, status, typeof message === 'string' ? message : message(...args))
+
+/** The same error, with what stands now, so that what was typed and what is stored can be put together. */
+export const withCurrent = (
+  { code, status, message, errors }: ProblemError,
+  current: Readonly<Record<string, unknown>>,
+): ProblemError => new ProblemError(code, status, message, errors, current)
 
 export const notFound = defineError(
   'not-found',

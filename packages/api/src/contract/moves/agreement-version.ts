@@ -29,7 +29,15 @@ export type AgreementPrecondition =
   | 'own-draft'
   /** The standing proposal is the other side's. */
   | 'answering-side'
-  /** At least one clause, at most one for each subject and measure, each computable for the scope. */
+  /** The standing proposal is this side's own. */
+  | 'own-side-stands'
+  /** An answer is to the round that stands, and a mark names exactly what stands there. */
+  | 'round-stands'
+  /** What is to be taken out is in the standing proposal, and something is left of it. */
+  | 'clauses-remain'
+  /** What a comment is about stands in a round that was sent. */
+  | 'sent-round'
+  /** Something is said; at most one clause for each subject and measure, each computable for the scope. */
   | 'clauses-can-be-agreed'
   /** The first day in force is today or later, in the relationship's time zone. */
   | 'effective-date-not-past'
@@ -48,6 +56,9 @@ export const agreementMoveNames = [
   'discard-draft',
   'propose',
   'counter',
+  'withdraw-clauses',
+  'comment',
+  'mark',
   'accept',
   'withdraw',
   'sign',
@@ -104,10 +115,43 @@ const rows: Omit<AgreementMove, 'side'>[] = [
     from: ['proposed', 'countered'],
     to: 'countered',
     permission: propose,
-    preconditions: ['answering-side', 'clauses-can-be-agreed', 'effective-date-not-past'],
+    preconditions: ['answering-side', 'round-stands', 'clauses-can-be-agreed', 'effective-date-not-past'],
     event: 'agreement.countered',
     words: 'Send a changed proposal',
   },
+  ...(['proposed', 'countered'] as const).map((state): Omit<AgreementMove, 'side'> => ({
+    name: 'withdraw-clauses',
+    from: [state],
+    to: state,
+    permission: propose,
+    preconditions: [
+      'own-side-stands',
+      'clauses-remain',
+      'clauses-can-be-agreed',
+      'effective-date-not-past',
+      'reason-given',
+    ],
+    event: 'agreement.clauses-withdrawn',
+    words: 'Take clauses out',
+  })),
+  ...(['proposed', 'countered', 'agreed'] as const).map((state): Omit<AgreementMove, 'side'> => ({
+    name: 'comment',
+    from: [state],
+    to: state,
+    permission: propose,
+    preconditions: ['sent-round'],
+    event: 'agreement.commented',
+    words: 'Comment',
+  })),
+  ...(['proposed', 'countered'] as const).map((state): Omit<AgreementMove, 'side'> => ({
+    name: 'mark',
+    from: [state],
+    to: state,
+    permission: propose,
+    preconditions: ['answering-side', 'round-stands'],
+    event: 'agreement.marked',
+    words: 'Mark as accepted',
+  })),
   {
     name: 'accept',
     from: ['proposed', 'countered'],

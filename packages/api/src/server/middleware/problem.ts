@@ -59,6 +59,7 @@ function toProblem(error: unknown): Problem {
       code: error.code,
       detail: error.message,
       ...(error.errors ? { errors: error.errors.map((each) => ({ ...each })) } : {}),
+      ...(error.current ? { current: error.current } : {}),
     }
   }
   const status = bodyParserStatus(error)

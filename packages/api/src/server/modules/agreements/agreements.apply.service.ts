@@ -23,8 +23,8 @@ const place = ({ clause }: { clause: Clause }): number => clauseTypes.indexOf(cl
 export async function criteriaFor(tenant: Tenant, scope: CriteriaScope): Promise<FrozenClause[]> {
   const found = new Map<string, FrozenClause>()
   for (const { agreement, version } of await selectInForce(tenant, scope)) {
-    const { text, sha256 } = version
-    if (agreement.number === null || version.number === null || text === null || sha256 === null)
+    const { text, sha256, effectiveOn } = version
+    if (agreement.number === null || version.number === null || !text || !sha256 || !effectiveOn)
       throw new Error('A signed version lacks its numbers or its text.')
     for (const clause of readAgreementText(text).clauses) {
       const frozen: FrozenClause = {
@@ -35,6 +35,7 @@ export async function criteriaFor(tenant: Tenant, scope: CriteriaScope): Promise
         versionId: version.id,
         versionNumber: version.number,
         versionSha256: sha256,
+        effectiveOn,
         scope: scopeKindOf(agreement),
       }
       const known = found.get(frozen.clauseKey)

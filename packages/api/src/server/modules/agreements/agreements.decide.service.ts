@@ -6,7 +6,8 @@ import { agreementMessages, tell } from './agreements.messages'
 import { factsOf, permittedMove, recordMove } from './agreements.move.service'
 import { openForMove } from './agreements.negotiation.service'
 import { readAgreementOf } from './agreements.read.service'
-import { deleteRound, updateRound, updateVersion } from './agreements.repository'
+import { updateVersion } from './agreements.repository'
+import { deleteRound, updateRound } from './agreements.rounds.repository'
 import { agreementTextOf } from './agreements.text'
 
 interface At {
@@ -22,7 +23,7 @@ export async function accept(tenant: Tenant, at: At, expectedVersion: number) {
   const move = permittedMove(tenant, 'accept', version.state, factsOf(tenant, negotiation, version))
   const { agreement, parties, timeZone, scope, characteristics } = negotiation
   if (agreement.number === null || row.number === null) throw new Error('A sent version lacks its numbers.')
-  const { clauses, effectiveOn } = standing
+  const { clauses, terms, effectiveOn } = standing
   const { text, sha256 } = agreementTextOf({
     agreement: agreement.number,
     version: row.number,
@@ -31,6 +32,7 @@ export async function accept(tenant: Tenant, at: At, expectedVersion: number) {
     scope,
     characteristics,
     clauses,
+    terms,
     effectiveOn,
   })
   if (draft) await deleteRound(tenant, draft)

@@ -1,7 +1,8 @@
 import type { answerRound, beginVersion, discardDraft, saveDraft } from '../../../contract/agreements'
 import type { AnswerInputOf, BodyOf } from '../../../contract/define'
 import type { Tenant } from '../../db/tenant'
-import { changedMeanwhile } from '../../errors'
+import { changedMeanwhile, withCurrent, type ProblemError } from '../../errors'
+import { conflictIn } from './agreements.conflict'
 import { draftExists } from './agreements.errors'
 import { factsOf, permittedMove, recordMove } from './agreements.move.service'
 import {
@@ -13,33 +14,34 @@ import {
 import { readAgreementOf } from './agreements.read.service'
 import {
   deleteAgreement,
-  deleteRound,
   deleteVersion,
   insertAgreement,
-  insertRound,
   insertVersion,
   lockAgreement,
   lockNumbering,
   selectByScope,
-  updateRound,
   type AgreementRow,
-  type RoundRow,
-  type VersionRow,
 } from './agreements.repository'
+import { deleteRound, updateRound, type RoundRow } from './agreements.rounds.repository'
 import { scopeAsEntered } from './agreements.scope.service'
 import { sendDraftAtHand } from './agreements.send.service'
+import { originOf, writeDraft } from './agreements.write.service'
 
-type Written = Pick<BodyOf<typeof answerRound>, 'clauses' | 'effectiveOn' | 'comment'>
 interface At {
   agreementId: string
   versionId: string
 }
 
 /** Begins a version for a scope, of a new agreement or of the one there is, and sends it where asked to. */
-export async function begin(tenant: Tenant, { send, ...body }: BodyOf<typeof beginVersion>) {
+export async function begin(
+  tenant: Tenant,
+  { send, houseTermsId, caseOf, ...body }: BodyOf<typeof beginVersion>,
+) {
   const { relationship, ...scope } = await scopeAsEntered(tenant, body)
   await lockNumbering(tenant, scope.relationshipId)
-  if (await selectByScope(tenant, scope, 'own draft')) throw draftExists()
+  const drafted = await selectByScope(tenant, scope, 'own draft')
+  if (drafted) throw await withDraftOf(tenant, draftExists(), drafted)
+  const origin = await originOf(tenant, relationship, { houseTermsId, caseOf })
   const known = await selectByScope(tenant, scope, 'sent')
   const agreement = known
     ? await mayFollow(tenant, known)
@@ -61,7 +63,7 @@ export async function begin(tenant: Tenant, { send, ...body }: BodyOf<typeof beg
     begunBy: tenant.side,
     createdAt: tenant.now,
   })
-  await writeRound(tenant, version, 1, body)
+  await writeDraft(tenant, version, { number: 1, answersRound: null }, { ...body, ...origin })
   if (!send) recordMove(tenant, move, agreement, version)
   return send ? sendNow(tenant, agreement, version.id) : readAgreementOf(tenant, agreement.id)
 }
@@ -71,24 +73,36 @@ async function mayFollow(tenant: Tenant, known: AgreementRow): Promise<Agreement
   const agreement = (await lockAgreement(tenant, known.id)) ?? known
   const negotiation = await negotiationOf(tenant, agreement)
   const [any] = negotiation.versions
+  const drafted = negotiation.versions.find(({ state }) => state === 'draft')
+  if (drafted) throw withCurrent(draftExists(), await conflictIn(tenant, negotiation, drafted))
   if (any) permittedMove(tenant, 'keep-draft', null, factsOf(tenant, negotiation, any))
   return agreement
+}
+
+async function withDraftOf(tenant: Tenant, error: ProblemError, drafted: AgreementRow) {
+  const negotiation = await negotiationOf(tenant, drafted)
+  const [version] = negotiation.versions
+  return version ? withCurrent(error, await conflictIn(tenant, negotiation, version)) : error
 }
 
 /** Answers the other side's proposal with a changed one, kept as a draft or sent at once. */
 export async function answer(
   tenant: Tenant,
   at: At,
-  { expectedVersion, send, ...written }: BodyOf<typeof answerRound>,
+  { expectedVersion, send, caseOf, ...written }: BodyOf<typeof answerRound>,
 ) {
   const { negotiation, version } = await openForMove(tenant, at)
-  if (version.row.rowVersion !== expectedVersion) throw changedMeanwhile('proposal')
-  if (version.draft) throw draftExists()
+  const { row, standing } = version
+  if (row.rowVersion !== expectedVersion)
+    throw withCurrent(changedMeanwhile('proposal'), await conflictIn(tenant, negotiation, version))
+  if (version.draft) throw withCurrent(draftExists(), await conflictIn(tenant, negotiation, version))
   const move = permittedMove(tenant, 'keep-draft', version.state, factsOf(tenant, negotiation, version))
-  const draft = await writeRound(tenant, version.row, version.standing.number + 1, written)
+  const origin = await originOf(tenant, row, { houseTermsId: null, caseOf })
+  const place = { number: standing.number + 1, answersRound: standing.number }
+  const draft = await writeDraft(tenant, row, place, { ...written, ...origin })
   if (send)
     return readAgreementOf(tenant, await sendDraftAtHand(tenant, negotiation, withDraft(version, draft)))
-  recordMove(tenant, move, negotiation.agreement, version.row)
+  recordMove(tenant, move, negotiation.agreement, row)
   return readAgreementOf(tenant, at.agreementId)
 }
 
@@ -96,12 +110,17 @@ export async function answer(
 export async function save(
   tenant: Tenant,
   at: At,
-  { expectedVersion, send, ...written }: BodyOf<typeof saveDraft>,
+  { expectedVersion, send, answersRound, ...written }: BodyOf<typeof saveDraft>,
 ) {
   const { negotiation, version } = await openDraft(tenant, at, expectedVersion, { sending: send })
   const facts = { ...factsOf(tenant, negotiation, version) }
   const move = permittedMove(tenant, 'keep-draft', version.state, facts)
-  const draft = await updateRound(tenant, version.draft, { ...written, createdBy: tenant.userId })
+  const draft = await updateRound(tenant, version.draft, {
+    ...written,
+    ...(answersRound === undefined || version.draft.answersRound === null ? {} : { answersRound }),
+    createdBy: tenant.userId,
+    savedAt: tenant.now,
+  })
   if (!draft) throw changedMeanwhile('draft')
   if (send)
     return readAgreementOf(tenant, await sendDraftAtHand(tenant, negotiation, withDraft(version, draft)))
@@ -143,7 +162,8 @@ async function openDraft(
 ): Promise<{ negotiation: Negotiation; version: WithDraft }> {
   const { negotiation, version } = await openForMove(tenant, at, { numbering: sending })
   const { draft } = version
-  if (!draft || draft.rowVersion !== expectedVersion) throw changedMeanwhile('draft')
+  if (!draft || draft.rowVersion !== expectedVersion)
+    throw withCurrent(changedMeanwhile('draft'), await conflictIn(tenant, negotiation, version))
   return { negotiation, version: { ...version, draft } }
 }
 
@@ -158,26 +178,4 @@ async function sendNow(tenant: Tenant, agreement: AgreementRow, versionId: strin
   const version = negotiation.versions.find(({ row }) => row.id === versionId)
   if (!version) throw new Error('The version just written is not there.')
   return readAgreementOf(tenant, await sendDraftAtHand(tenant, negotiation, version))
-}
-
-async function writeRound(
-  tenant: Tenant,
-  { relationshipId, supplierOrgId, customerOrgId, id: versionId }: VersionRow,
-  number: number,
-  { clauses, effectiveOn, comment }: Written,
-): Promise<RoundRow> {
-  return insertRound(tenant, {
-    relationshipId,
-    supplierOrgId,
-    customerOrgId,
-    versionId,
-    number,
-    side: tenant.side,
-    state: 'draft',
-    clauses,
-    effectiveOn,
-    comment,
-    createdAt: tenant.now,
-    createdBy: tenant.userId,
-  })
 }

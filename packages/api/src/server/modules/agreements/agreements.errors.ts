@@ -42,6 +42,26 @@ const ownSideHasSigned = defineError(
   409,
   'Your side has signed this already; one signature of each side is enough.',
 )
+const ownSideDoesNotStand = defineError(
+  'own-side-does-not-stand',
+  409,
+  'The other side has answered meanwhile, so your proposal does not stand any more. Load it again.',
+)
+export const roundReplaced = defineError(
+  'round-replaced',
+  409,
+  'The proposal you had before you was replaced meanwhile. Look at the one that stands now, then go on.',
+)
+const clausesDoNotRemain = defineError(
+  'last-clause',
+  409,
+  'Nothing would be left of the proposal. Withdraw it as a whole instead.',
+)
+const notASentRound = defineError(
+  'not-a-sent-round',
+  409,
+  'Only what stands in a proposal that was sent can be commented on.',
+)
 const reasonMissing = defineError('reason-missing', 422, 'Say why, in words.')
 
 const stateWords: Record<AgreementVersionState, string> = {
@@ -65,6 +85,10 @@ export const refusals: Record<AgreementPrecondition, (() => ProblemError) | null
   'no-open-version': negotiationOpen,
   'own-draft': noDraft,
   'answering-side': notYourTurn,
+  'own-side-stands': ownSideDoesNotStand,
+  'round-stands': roundReplaced,
+  'clauses-remain': clausesDoNotRemain,
+  'sent-round': notASentRound,
   'clauses-can-be-agreed': clausesCannotBeAgreed,
   'effective-date-not-past': effectiveDatePast,
   'reason-given': reasonMissing,

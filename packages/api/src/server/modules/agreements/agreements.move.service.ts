@@ -1,10 +1,5 @@
 import { otherSide, allows, type Role, type Side } from '../../../contract/access'
-import { blockingWarnings, clauseWarnings } from '../../../contract/agreement-check'
-import {
-  agreementHindranceSchema,
-  type AgreementHindrance,
-  type ScopedCharacteristic,
-} from '../../../contract/agreements'
+import { agreementHindranceSchema, type AgreementHindrance } from '../../../contract/agreements'
 import {
   agreementMoves,
   type AgreementMove,
@@ -21,7 +16,9 @@ import {
   type Negotiation,
   type VersionAtHand,
 } from './agreements.negotiation.service'
-import type { AgreementRow, RoundRow, VersionRow } from './agreements.repository'
+import type { AgreementRow, VersionRow } from './agreements.repository'
+import type { RoundRow } from './agreements.rounds.repository'
+import { canBeAgreed, isEmpty } from './agreements.sendable'
 import { limitsAreThoseOf } from './agreements.text'
 
 export type AgreementFacts = Facts<AgreementPrecondition>
@@ -41,14 +38,6 @@ const candidates = (
       (from === null ? move.from.length === 0 : (move.from as readonly string[]).includes(from)),
   )
 
-/** Whether a proposal can be agreed as it stands, for the characteristics in scope as they are now. */
-export const canBeAgreed = (
-  { clauses }: Pick<RoundRow, 'clauses'>,
-  characteristics: readonly ScopedCharacteristic[],
-): boolean =>
-  clauses.length > 0 &&
-  blockingWarnings(clauseWarnings(clauses, characteristics), characteristics).length === 0
-
 /** What is known, before anybody acts, of the conditions of moves from a version. */
 export function factsOf({ side }: Pick<Tenant, 'side'>, negotiation: Negotiation, version: VersionAtHand) {
   const { characteristics, today } = negotiation
@@ -59,7 +48,12 @@ export function factsOf({ side }: Pick<Tenant, 'side'>, negotiation: Negotiation
     'no-open-version': openVersion(negotiation) === undefined && !negotiation.openElsewhere,
     'own-draft': draft !== undefined,
     'answering-side': standing.side !== side,
-    'clauses-can-be-agreed': canBeAgreed(standing, characteristics),
+    'own-side-stands': standing.state !== 'draft' && standing.side === side,
+    // An answer that was begun to a round that its writers have replaced since is to be looked at again.
+    'round-stands': !draft || draft.answersRound === null || draft.answersRound === standing.number,
+    'clauses-remain': standing.clauses.length > 1 || !isEmpty({ ...standing, clauses: [] }),
+    'sent-round': standing.state !== 'draft',
+    'clauses-can-be-agreed': canBeAgreed(standing, negotiation),
     'effective-date-not-past': (row.effectiveOn ?? standing.effectiveOn) >= today,
     'limits-unchanged': row.text !== null && limitsAreThoseOf(row.text, characteristics),
     'own-side-has-not-signed': !hasSigned(side),
@@ -90,6 +84,8 @@ const codes: Partial<Record<AgreementPrecondition, AgreementHindrance['code']>> 
   'effective-date-not-past': 'effective-date-past',
   'limits-unchanged': 'limits-changed',
   'own-side-has-not-signed': 'own-side-has-signed',
+  'round-stands': 'round-replaced',
+  'clauses-remain': 'last-clause',
 }
 
 /** What the person may do with a version, and what keeps them from it now. */
@@ -99,20 +95,26 @@ export function offersOf(
   version: VersionAtHand,
 ): { moves: AgreementMoveName[]; hindrances: AgreementHindrance[] } {
   const known = { ...factsOf(actor, negotiation, version), 'reason-given': true, 'as-seen': true }
-  // An answer is judged as it is drafted; one not yet written cannot be at fault.
-  const ofAnswer = {
-    'clauses-can-be-agreed': !version.draft || canBeAgreed(version.draft, negotiation.characteristics),
-    'effective-date-not-past': !version.draft || version.draft.effectiveOn >= negotiation.today,
+  const { draft } = version
+  const particular: Partial<Record<AgreementMoveName, AgreementFacts>> = {
+    // An answer is judged as it is drafted; one not yet written cannot be at fault.
+    counter: {
+      'clauses-can-be-agreed': !draft || canBeAgreed(draft, negotiation),
+      'effective-date-not-past': !draft || draft.effectiveOn >= negotiation.today,
+    },
+    // What is left is judged once it is known which clauses are taken out.
+    'withdraw-clauses': { 'clauses-can-be-agreed': true },
+    mark: { 'round-stands': true },
   }
   const moves: AgreementMoveName[] = []
   const hindrances: AgreementHindrance[] = []
   for (const name of agreementHindranceSchema.shape.move.options) {
-    const facts = name === 'counter' ? { ...known, ...ofAnswer } : known
+    const facts = { ...known, ...particular[name] }
     const { move, refused } = chooseMove<AgreementPrecondition, AgreementMove>(
       candidates(actor, name, version.state),
       facts,
     )
-    const judged = name === 'counter' ? (version.draft ?? version.standing) : version.standing
+    const judged = name === 'counter' ? (draft ?? version.standing) : version.standing
     const code = refused ? codeOf(refused, judged) : undefined
     if (move || code) moves.push(name)
     if (code) hindrances.push({ move: name, code })
@@ -120,8 +122,8 @@ export function offersOf(
   return { moves, hindrances }
 }
 
-const codeOf = (refused: AgreementPrecondition, { clauses }: RoundRow) =>
-  refused === 'clauses-can-be-agreed' && clauses.length === 0 ? 'no-clauses' : codes[refused]
+const codeOf = (refused: AgreementPrecondition, judged: RoundRow) =>
+  refused === 'clauses-can-be-agreed' && isEmpty(judged) ? 'no-clauses' : codes[refused]
 
 /** Writes the event of a move: what was sent stands in the relationship's chain, drafts in one's own journal. */
 export function recordMove(

@@ -16,14 +16,17 @@ import {
   lockNumbering,
   selectAgreement,
   selectByScope,
-  selectRounds,
-  selectSignatures,
   selectVersions,
   type AgreementRow,
-  type RoundRow,
-  type SignatureRow,
   type VersionRow,
 } from './agreements.repository'
+import { selectComments, selectMarks, type CommentRow, type MarkRow } from './agreements.remarks.repository'
+import {
+  selectRounds,
+  selectSignatures,
+  type RoundRow,
+  type SignatureRow,
+} from './agreements.rounds.repository'
 import { namedScope, type ScopeColumns } from './agreements.scope'
 
 /** One version with everything that belongs to it, as far as this side may see it. */
@@ -36,6 +39,9 @@ export interface VersionAtHand {
   standing: RoundRow
   /** This side's own unsent proposal or answer. */
   draft: RoundRow | undefined
+  /** In the order they were made. */
+  comments: CommentRow[]
+  marks: MarkRow[]
   signatures: SignatureRow[]
 }
 
@@ -77,6 +83,8 @@ export async function negotiationOf(tenant: Tenant, agreement: AgreementRow): Pr
   const rows = selected.map(({ version }) => version)
   const rounds = await selectRounds(tenant, rows)
   const signatures = await selectSignatures(tenant, rows)
+  const comments = await selectComments(tenant, rows)
+  const marks = await selectMarks(tenant, rows)
   const taken = agreement.number === null ? await selectByScope(tenant, agreement, 'sent') : undefined
   return {
     agreement,
@@ -89,11 +97,17 @@ export async function negotiationOf(tenant: Tenant, agreement: AgreementRow): Pr
       row: version,
       state,
       ...roundsOf(rounds.filter(({ versionId }) => versionId === version.id)),
+      comments: comments.filter(({ versionId }) => versionId === version.id),
+      marks: marks.filter(({ versionId }) => versionId === version.id),
       signatures: signatures.filter(({ versionId }) => versionId === version.id),
     })),
     openElsewhere: taken !== undefined && (await selectVersions(tenant, taken)).some(isOpen),
   }
 }
+
+/** Rounds of a version that were sent, in their order. */
+export const sentRounds = ({ rounds }: Pick<VersionAtHand, 'rounds'>): RoundRow[] =>
+  rounds.filter(({ state }) => state !== 'draft')
 
 function roundsOf(rounds: RoundRow[]): Pick<VersionAtHand, 'rounds' | 'standing' | 'draft'> {
   const standing = rounds.findLast(({ state }) => state !== 'draft') ?? rounds[0]

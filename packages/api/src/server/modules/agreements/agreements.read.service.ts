@@ -1,29 +1,22 @@
-import { clauseWarnings, safetyFlags } from '../../../contract/agreement-check'
 import { allows, sides, type Side } from '../../../contract/access'
-import type {
-  AgreementRow as ListedAgreement,
-  listAgreements,
-  readAgreement,
+import {
+  characteristicsPerAgreement,
+  type AgreementRow as ListedAgreement,
+  type listAgreements,
+  type listScoped,
+  type readAgreement,
 } from '../../../contract/agreements'
 import type { AnswerInputOf, QueryOf } from '../../../contract/define'
 import { paged } from '../../db/paging'
 import type { Tenant } from '../../db/tenant'
 import { namesOfPeople } from '../organisations/people.repository'
+import { pageOfCharacteristics } from '../parts/parts.lookup.service'
 import { selectAgreements, type AgreementListed } from './agreements.list.repository'
-import { factsOf, offersOf } from './agreements.move.service'
-import {
-  agreementById,
-  negotiationOf,
-  openVersion,
-  draftVersion,
-  type Negotiation,
-  type VersionAtHand,
-} from './agreements.negotiation.service'
+import { agreementById, negotiationOf, openVersion, draftVersion } from './agreements.negotiation.service'
 import { namedScope } from './agreements.scope'
+import { peopleIn, versionAnswer } from './agreements.version.read'
 
 type AgreementAnswer = AnswerInputOf<typeof readAgreement>
-type VersionAnswer = AgreementAnswer['versions'][number]
-type Names = Map<string, string>
 
 /** One page of this side's agreements and drafts. */
 export async function listOfAgreements(tenant: Tenant, query: QueryOf<typeof listAgreements>) {
@@ -74,14 +67,8 @@ const asInForce = ({
 /** One agreement with all that this side may see of it. */
 export async function readAgreementOf(tenant: Tenant, agreementId: string): Promise<AgreementAnswer> {
   const negotiation = await negotiationOf(tenant, await agreementById(tenant, agreementId))
-  const { agreement, parties, versions } = negotiation
-  const names = await namesOfPeople(
-    tenant,
-    versions.flatMap(({ rounds, signatures }) => [
-      ...rounds.map(({ createdBy }) => createdBy),
-      ...signatures.map(({ userId }) => userId),
-    ]),
-  )
+  const { agreement, parties, versions, characteristics } = negotiation
+  const names = await namesOfPeople(tenant, versions.flatMap(peopleIn))
   const inForce = versions.find(({ state }) => state === 'in-force')
   return {
     id: agreement.id,
@@ -96,46 +83,18 @@ export async function readAgreementOf(tenant: Tenant, agreementId: string): Prom
       allows('agreements.propose', tenant.side, tenant.roles) &&
       openVersion(negotiation) === undefined &&
       draftVersion(negotiation) === undefined,
-    versions: versions.map((version) => asVersion(tenant, negotiation, version, names)),
-    characteristics: negotiation.characteristics,
+    versions: versions.map((version) => versionAnswer(tenant, negotiation, version, names)),
+    characteristics: characteristics.slice(0, characteristicsPerAgreement),
+    characteristicsTotal: characteristics.length,
   }
 }
 
-function asVersion(
+/** One page of the characteristics that an agreement covers now. */
+export async function scopedCharacteristics(
   tenant: Tenant,
-  negotiation: Negotiation,
-  version: VersionAtHand,
-  names: Names,
-): VersionAnswer {
-  const { characteristics } = negotiation
-  const { row, state, rounds, signatures } = version
-  return {
-    ...row,
-    state,
-    waitsOn: sides.filter((side) => waitsOn(side, negotiation, version)),
-    ...offersOf(tenant, negotiation, version),
-    rounds: rounds.map((round) => ({
-      ...round,
-      by: names.get(round.createdBy) ?? null,
-      warnings: clauseWarnings(round.clauses, characteristics),
-      flags: safetyFlags(round.clauses, characteristics),
-    })),
-    signatures: signatures.map((each) => ({ ...each, name: names.get(each.userId) ?? null })),
-  }
-}
-
-/** Whose step is next, seen from each side: the answer, a missing signature, or the sending of its draft. */
-function waitsOn(side: Side, negotiation: Negotiation, version: VersionAtHand): boolean {
-  const facts = factsOf({ side }, negotiation, version)
-  switch (version.state) {
-    case 'draft':
-      return version.row.begunBy === side
-    case 'proposed':
-    case 'countered':
-      return facts['answering-side']
-    case 'agreed':
-      return facts['own-side-has-not-signed']
-    default:
-      return false
-  }
+  agreementId: string,
+  query: QueryOf<typeof listScoped>,
+): Promise<AnswerInputOf<typeof listScoped>> {
+  const { relationshipId, partId, characteristicId } = await agreementById(tenant, agreementId)
+  return pageOfCharacteristics(tenant, { relationshipId, partId, characteristicId }, query)
 }

@@ -1,16 +1,13 @@
-import { and, asc, desc, eq, inArray, isNotNull, isNull, sql } from 'drizzle-orm'
-import type { Side } from '../../../contract/access'
+import { and, desc, eq, isNotNull, isNull, sql } from 'drizzle-orm'
 import { ownSide } from '../../db/own-side'
 import type { Tenant } from '../../db/tenant'
 import type { ScopeOfCharacteristics } from '../parts/characteristics.repository'
 import { relationships } from '../relationships/relationships.table'
 import { stateToday } from './agreements.states'
-import { agreementRounds, agreements, agreementSignatures, agreementVersions } from './agreements.table'
+import { agreementRounds, agreements, agreementVersions } from './agreements.table'
 
 export type AgreementRow = typeof agreements.$inferSelect
 export type VersionRow = typeof agreementVersions.$inferSelect
-export type RoundRow = typeof agreementRounds.$inferSelect
-export type SignatureRow = typeof agreementSignatures.$inferSelect
 
 const theOne = (tenant: Tenant, agreementId: string) =>
   and(ownSide(tenant, agreements), eq(agreements.id, agreementId))
@@ -135,99 +132,4 @@ export async function deleteVersion(tenant: Tenant, { relationshipId, id }: Vers
   await tx
     .delete(agreementVersions)
     .where(and(eq(agreementVersions.relationshipId, relationshipId), eq(agreementVersions.id, id)))
-}
-
-/** Rounds of versions that this side may see, in the order they were made. */
-export async function selectRounds({ tx }: Tenant, versions: readonly VersionRow[]): Promise<RoundRow[]> {
-  const [first] = versions
-  if (!first) return []
-  return tx
-    .select()
-    .from(agreementRounds)
-    .where(
-      and(
-        eq(agreementRounds.relationshipId, first.relationshipId),
-        inArray(
-          agreementRounds.versionId,
-          versions.map(({ id }) => id),
-        ),
-      ),
-    )
-    .orderBy(asc(agreementRounds.number))
-}
-
-export async function insertRound(
-  { tx }: Tenant,
-  row: typeof agreementRounds.$inferInsert,
-): Promise<RoundRow> {
-  const [inserted] = await tx.insert(agreementRounds).values(row).returning()
-  if (!inserted) throw new Error('The proposal was not stored.')
-  return inserted
-}
-
-/** Changes a round that still is as it was loaded; undefined where it is not. */
-export async function updateRound(
-  { tx }: Tenant,
-  { relationshipId, id, rowVersion }: RoundRow,
-  values: Partial<RoundRow>,
-): Promise<RoundRow | undefined> {
-  const [updated] = await tx
-    .update(agreementRounds)
-    .set({ ...values, rowVersion: rowVersion + 1 })
-    .where(
-      and(
-        eq(agreementRounds.relationshipId, relationshipId),
-        eq(agreementRounds.id, id),
-        eq(agreementRounds.rowVersion, rowVersion),
-      ),
-    )
-    .returning()
-  return updated
-}
-
-export async function deleteRound({ tx }: Tenant, { relationshipId, id }: RoundRow): Promise<void> {
-  await tx
-    .delete(agreementRounds)
-    .where(and(eq(agreementRounds.relationshipId, relationshipId), eq(agreementRounds.id, id)))
-}
-
-/** Signatures of versions, in the order they were given. */
-export async function selectSignatures(
-  { tx }: Tenant,
-  versions: readonly VersionRow[],
-): Promise<SignatureRow[]> {
-  const [first] = versions
-  if (!first) return []
-  return tx
-    .select()
-    .from(agreementSignatures)
-    .where(
-      and(
-        eq(agreementSignatures.relationshipId, first.relationshipId),
-        inArray(
-          agreementSignatures.versionId,
-          versions.map(({ id }) => id),
-        ),
-      ),
-    )
-    .orderBy(asc(agreementSignatures.signedAt), asc(agreementSignatures.id))
-}
-
-/** The signature of one side under a version. */
-export async function insertSignature(
-  tenant: Tenant,
-  { relationshipId, supplierOrgId, customerOrgId, id: versionId }: VersionRow,
-  { side, sha256 }: { side: Side; sha256: string },
-): Promise<void> {
-  await tenant.tx.insert(agreementSignatures).values({
-    relationshipId,
-    supplierOrgId,
-    customerOrgId,
-    versionId,
-    side,
-    sha256,
-    userId: tenant.userId,
-    signedAt: tenant.now,
-    authenticatedAt: tenant.authenticatedAt,
-  })
 }

@@ -1,7 +1,5 @@
-import { blockingWarnings, clauseWarnings } from '../../../contract/agreement-check'
-import type { ScopedCharacteristic } from '../../../contract/agreements'
 import type { Tenant } from '../../db/tenant'
-import { changedMeanwhile, invalidInput, notFound, type FieldError } from '../../errors'
+import { changedMeanwhile, invalidInput, notFound } from '../../errors'
 import { agreementMessages, tell } from './agreements.messages'
 import { factsOf, permittedMove, recordMove } from './agreements.move.service'
 import { negotiationOf, type Negotiation, type VersionAtHand } from './agreements.negotiation.service'
@@ -10,10 +8,10 @@ import {
   lockAgreement,
   numberAgreement,
   selectByScope,
-  updateRound,
   updateVersion,
-  type RoundRow,
 } from './agreements.repository'
+import { updateRound, type RoundRow } from './agreements.rounds.repository'
+import { contentErrors } from './agreements.sendable'
 
 /** Sends this side's draft: as a proposal, or as the answer to the other side's. Gives the agreement it stands in. */
 export async function sendDraftAtHand(
@@ -32,7 +30,7 @@ async function propose(tenant: Tenant, negotiation: Negotiation, version: Versio
   const home = await numbered(tenant, negotiation)
   const { agreement, versions } = home
   const number = 1 + Math.max(0, ...versions.map(({ row }) => row.number ?? 0))
-  const round = await sent(tenant, version.standing)
+  const round = await sent(tenant, version.standing, 1)
   const updated = await updateVersion(tenant, version.row, {
     agreementId: agreement.id,
     number,
@@ -68,7 +66,7 @@ async function counter(tenant: Tenant, negotiation: Negotiation, version: Versio
   const facts = { ...factsOf(tenant, negotiation, version), ...sendable(draft, negotiation) }
   const move = permittedMove(tenant, 'counter', version.state, facts)
   if (!(await updateRound(tenant, standing, { state: 'answered' }))) throw changedMeanwhile('proposal')
-  const round = await sent(tenant, draft)
+  const round = await sent(tenant, draft, standing.number + 1)
   const updated = await updateVersion(tenant, row, { state: 'countered' })
   if (!updated) throw changedMeanwhile('proposal')
   recordMove(tenant, move, agreement, updated, roundData(round))
@@ -77,10 +75,12 @@ async function counter(tenant: Tenant, negotiation: Negotiation, version: Versio
   return agreement.id
 }
 
-async function sent(tenant: Tenant, draft: RoundRow): Promise<RoundRow> {
+async function sent(tenant: Tenant, draft: RoundRow, number: number): Promise<RoundRow> {
   const round = await updateRound(tenant, draft, {
     state: 'sent',
+    number,
     sentAt: tenant.now,
+    savedAt: tenant.now,
     createdBy: tenant.userId,
   })
   if (!round) throw changedMeanwhile('draft')
@@ -88,23 +88,30 @@ async function sent(tenant: Tenant, draft: RoundRow): Promise<RoundRow> {
 }
 
 /** What the record keeps of a proposal. */
-const roundData = ({ number, clauses, effectiveOn }: RoundRow) => ({ round: number, clauses, effectiveOn })
+export const roundData = ({
+  number,
+  clauses,
+  terms,
+  effectiveOn,
+  houseTermsNumber,
+  caseChallengeId,
+}: RoundRow) => ({
+  round: number,
+  clauses,
+  terms,
+  effectiveOn,
+  ...(houseTermsNumber === null ? {} : { houseTerms: houseTermsNumber }),
+  ...(caseChallengeId === null ? {} : { challengeId: caseChallengeId }),
+})
 
 /** The conditions of a sending that rest on what was written; where one does not hold, it is told at its field. */
-function sendable(round: RoundRow, { characteristics, today }: Negotiation) {
-  const errors = [...clauseErrors(round, characteristics)]
-  if (round.effectiveOn < today)
+function sendable(round: RoundRow, negotiation: Negotiation) {
+  const errors = contentErrors(round, negotiation)
+  if (round.effectiveOn < negotiation.today)
     errors.push({
       path: 'body.effectiveOn',
       message: 'This day has passed. Enter today or a later day as the first in force.',
     })
   if (errors.length > 0) throw invalidInput(errors)
   return { 'clauses-can-be-agreed': true, 'effective-date-not-past': true } as const
-}
-
-function clauseErrors({ clauses }: RoundRow, characteristics: readonly ScopedCharacteristic[]): FieldError[] {
-  if (clauses.length === 0) return [{ path: 'body.clauses', message: 'Add at least one clause.' }]
-  return blockingWarnings(clauseWarnings(clauses, characteristics), characteristics).map(
-    ({ clause, path, message }) => ({ path: `body.clauses.${clause}.${path}`, message }),
-  )
 }

@@ -7,7 +7,8 @@ import { agreementMessages, tell } from './agreements.messages'
 import { factsOf, permittedMove, recordMove } from './agreements.move.service'
 import { openForMove } from './agreements.negotiation.service'
 import { readAgreementOf } from './agreements.read.service'
-import { insertSignature, updateVersion } from './agreements.repository'
+import { updateVersion } from './agreements.repository'
+import { insertSignature } from './agreements.rounds.repository'
 
 /**
  * Signs the agreed text for this side. The limits in scope are locked first, so that none is changed at the same

@@ -1,6 +1,7 @@
 import type { Clause } from '@evenrule/metrology'
 import { sql } from 'drizzle-orm'
 import {
+  boolean,
   date,
   foreignKey,
   index,
@@ -14,7 +15,9 @@ import {
   uuid,
 } from 'drizzle-orm/pg-core'
 import type { Side } from '../../../contract/access'
+import type { About, RoundState } from '../../../contract/agreements-rounds'
 import type { StoredVersionState } from '../../../contract/moves/agreement-version'
+import type { Terms } from '../../../contract/terms'
 import {
   instant,
   ownSideOnly,
@@ -24,8 +27,11 @@ import {
   sharedColumns,
   sharedPolicy,
 } from '../../db/columns'
+import { houseTerms } from '../house-terms/house-terms.table'
 import { characteristics, parts } from '../parts/parts.table'
 import { relationships } from '../relationships/relationships.table'
+import { challenges } from '../reviews/reviews.table'
+import { submissions } from '../submissions/submissions.table'
 
 /** Only what was never sent can be deleted: of what the other side has seen, nothing disappears. */
 const unsentOnly = (name: string, unsent: string) => restrictPolicy(name, unsent, 'delete')
@@ -143,28 +149,119 @@ export const agreementRounds = pgTable(
     id: primaryId(),
     ...sharedColumns,
     versionId: uuid().notNull(),
+    /** Counts the rounds that were sent; a draft gets its own when it is sent, because others may come before it. */
     number: integer().notNull(),
     side: text().$type<Side>().notNull(),
-    state: text().$type<'draft' | 'sent' | 'accepted' | 'answered' | 'withdrawn'>().notNull(),
+    state: text().$type<RoundState>().notNull(),
     clauses: jsonb().$type<Clause[]>().notNull(),
+    terms: jsonb().$type<Terms>().notNull(),
     effectiveOn: date({ mode: 'string' }).notNull(),
     comment: text().notNull().default(''),
+    /** The round it answers; of a draft the one its writer saw. */
+    answersRound: integer(),
+    /** Clauses that its own side took out of the round before. */
+    withdrawnClauses: text().array().notNull().default([]),
+    /** The published house terms from which it was begun. */
+    houseTermsId: uuid(),
+    houseTermsNumber: integer(),
+    /** The challenge that asked for the change. */
+    caseSubmissionId: uuid(),
+    caseChallengeId: uuid(),
     createdAt: instant().notNull(),
+    /** Who wrote it last. */
     createdBy: uuid().notNull(),
+    savedAt: instant().notNull(),
     sentAt: instant(),
     rowVersion: integer().notNull().default(1),
   },
   (t) => [
-    unique('agreement_rounds_number').on(t.relationshipId, t.versionId, t.number),
+    unique('agreement_rounds_relationship_id').on(t.relationshipId, t.id),
+    uniqueIndex('agreement_rounds_number')
+      .on(t.relationshipId, t.versionId, t.number)
+      .where(sql`state <> 'draft'`),
+    uniqueIndex('agreement_rounds_one_draft')
+      .on(t.relationshipId, t.versionId, t.side)
+      .where(sql`state = 'draft'`),
     foreignKey({
       name: 'agreement_rounds_version_fk',
       columns: [t.relationshipId, t.versionId],
       foreignColumns: [agreementVersions.relationshipId, agreementVersions.id],
     }),
+    foreignKey({
+      name: 'agreement_rounds_house_terms_fk',
+      columns: [t.customerOrgId, t.houseTermsId],
+      foreignColumns: [houseTerms.orgId, houseTerms.id],
+    }),
+    foreignKey({
+      name: 'agreement_rounds_case_submission_fk',
+      columns: [t.relationshipId, t.caseSubmissionId],
+      foreignColumns: [submissions.relationshipId, submissions.id],
+    }),
+    foreignKey({
+      name: 'agreement_rounds_case_challenge_fk',
+      columns: [t.relationshipId, t.caseChallengeId],
+      foreignColumns: [challenges.relationshipId, challenges.id],
+    }),
     relationshipKey('agreement_rounds', t, () => relationships),
     sharedPolicy('agreement_rounds'),
     restrictPolicy('agreement_rounds_drafts', `state <> 'draft' or ${ownSideOnly('side')}`),
     unsentOnly('agreement_rounds_sent_stay', "state = 'draft'"),
+  ],
+)
+
+/** Only what was sent can be commented on or accepted, by one's own side. */
+const aboutSentRounds = (table: string) => [
+  restrictPolicy(`${table}_own_side`, ownSideOnly('side'), 'insert'),
+  restrictPolicy(
+    `${table}_sent_rounds`,
+    `exists (select 1 from agreement_rounds r where r.relationship_id = ${table}.relationship_id and r.id = ${table}.round_id and r.state <> 'draft')`,
+    'insert',
+  ),
+]
+
+const aboutColumns = {
+  id: primaryId(),
+  ...sharedColumns,
+  versionId: uuid().notNull(),
+  roundId: uuid().notNull(),
+  about: text().$type<About['kind']>().notNull(),
+  clauseKey: text(),
+  side: text().$type<Side>().notNull(),
+  userId: uuid().notNull(),
+  at: instant().notNull(),
+}
+
+/** What a side said about one thing in a round; appended only. */
+export const agreementComments = pgTable(
+  'agreement_comments',
+  { ...aboutColumns, text: text().notNull() },
+  (t) => [
+    index('agreement_comments_version').on(t.relationshipId, t.versionId, t.at),
+    foreignKey({
+      name: 'agreement_comments_round_fk',
+      columns: [t.relationshipId, t.roundId],
+      foreignColumns: [agreementRounds.relationshipId, agreementRounds.id],
+    }),
+    relationshipKey('agreement_comments', t, () => relationships),
+    sharedPolicy('agreement_comments'),
+    ...aboutSentRounds('agreement_comments'),
+  ],
+)
+
+/** Single things of a round that a side accepted, by the hash of exactly those bytes; the last one about them counts. */
+export const agreementMarks = pgTable(
+  'agreement_marks',
+  { ...aboutColumns, sha256: text().notNull(), accepted: boolean().notNull() },
+  (t) => [
+    index('agreement_marks_version').on(t.relationshipId, t.versionId, t.at),
+    foreignKey({
+      name: 'agreement_marks_round_fk',
+      columns: [t.relationshipId, t.roundId],
+      foreignColumns: [agreementRounds.relationshipId, agreementRounds.id],
+    }),
+    relationshipKey('agreement_marks', t, () => relationships),
+    sharedPolicy('agreement_marks'),
+    ...aboutSentRounds('agreement_marks'),
   ],
 )
 

@@ -5,6 +5,7 @@ import {
   type ScopedCharacteristic,
 } from '../../../contract/agreements'
 import type { Clause } from '@evenrule/metrology'
+import type { Terms } from '../../../contract/terms'
 import { canonicalText, sha256 } from '../record/record.append'
 import type { Parties } from '../relationships/relationships.lookup.service'
 
@@ -16,6 +17,7 @@ interface WhatIsAgreed extends Parties {
   /** Everything in scope now; frozen with its limits where the scope is narrower than the relationship. */
   characteristics: readonly ScopedCharacteristic[]
   clauses: readonly Clause[]
+  terms: Terms
   effectiveOn: string
 }
 

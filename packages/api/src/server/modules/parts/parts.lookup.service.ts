@@ -1,12 +1,15 @@
 import { convert, type Characteristic } from '@evenrule/metrology'
 import { computedCharacteristic } from '../../../contract/agreement-check'
-import type { ScopedCharacteristic } from '../../../contract/agreements'
+import type { listScoped, ScopedCharacteristic } from '../../../contract/agreements'
+import type { QueryOf } from '../../../contract/define'
+import { paged } from '../../db/paging'
 import type { Tenant } from '../../db/tenant'
 import { notFound } from '../../errors'
 import type { FrozenCharacteristic } from '../studies/studies.table'
 import {
   lockInScope,
   selectCharacteristic,
+  selectCharacteristics,
   selectInScope,
   type CharacteristicInPart,
   type ScopeOfCharacteristics,
@@ -42,6 +45,25 @@ export async function characteristicsInScope(
   if (locked) await lockInScope(tenant, scope)
   const rows = await selectInScope(tenant, scope)
   return rows.map((row) => ({ ...asFrozen(row), partId: row.part.id }))
+}
+
+/** One page of them. */
+export async function pageOfCharacteristics(
+  tenant: Tenant,
+  { relationshipId, partId, characteristicId }: ScopeOfCharacteristics,
+  query: QueryOf<typeof listScoped>,
+) {
+  const scope = { relationshipId, ...(partId ? { partId } : {}) }
+  return paged(
+    query,
+    async (page) => {
+      if (characteristicId === null)
+        return selectCharacteristics(tenant, { ...page, ...scope, archived: 'active' })
+      const one = await selectCharacteristic(tenant, characteristicId)
+      return one && page.page === 1 ? [{ ...one, total: 1 }] : []
+    },
+    (rows) => rows.map((row) => ({ ...asFrozen(row), partId: row.part.id })),
+  )
 }
 
 const asFrozen = ({ characteristic, part, revision }: CharacteristicInPart): FrozenCharacteristic => ({

@@ -31,6 +31,8 @@ export interface FrozenClause {
   versionId: string
   versionNumber: number
   versionSha256: string
+  /** First day of the version in force. */
+  effectiveOn: string
   scope: 'relationship' | 'part' | 'characteristic'
 }
 
