@@ -22,6 +22,8 @@ export interface MarginRuleInput {
   estimate: number | null
   interval: RuleEnds | null
   limits: RuleEnds
+  /** Further values that the scale must hold, so that two rules beside each other share it. */
+  holding?: readonly number[]
   /** Width of the drawing in pixels. */
   width: number
   /** A rule for a table cell: no numbers, little height. */
@@ -67,9 +69,9 @@ const defined = (values: (number | null | undefined)[]): number[] =>
  * The values a rule must hold, widened so that limits stand clear of its ends. Shares and counts, which cannot be
  * negative, start at zero when no lower limit says otherwise.
  */
-function extentOf({ estimate, interval, limits }: MarginRuleInput): [number, number] | null {
+function extentOf({ estimate, interval, limits, holding = [] }: MarginRuleInput): [number, number] | null {
   const bounds = defined([limits.lower, limits.upper])
-  const values = defined([estimate, interval?.lower, interval?.upper, ...bounds])
+  const values = defined([estimate, interval?.lower, interval?.upper, ...bounds, ...holding])
   if (!values.length) return null
   let low = Math.min(...values)
   let high = Math.max(...values)

@@ -1,7 +1,7 @@
 import type { Verdict } from '@evenrule/metrology'
 import type { Ends, Unit } from '../format'
 import { unitText } from '../format/numbers'
-import { verdictWords } from './verdicts'
+import { supposedWords, verdictWords } from './verdicts'
 
 interface RuleFigures {
   label?: string
@@ -10,6 +10,8 @@ interface RuleFigures {
   limits: Ends
   verdict: Verdict
   unit?: Unit
+  /** A what-if: told in words that no verdict has. */
+  supposed?: boolean
   write(value: number): string
 }
 
@@ -34,6 +36,7 @@ export function describeRule({
   limits,
   verdict,
   unit,
+  supposed,
   write,
 }: RuleFigures): string {
   const figure = estimate === null ? 'not defined' : `${write(estimate)}${unitText(unit)}`
@@ -43,7 +46,7 @@ export function describeRule({
     `${label} ${figure}`,
     range && `interval ${range}`,
     allowed && `limits ${allowed}`,
-    verdictWords[verdict],
+    (supposed ? supposedWords : verdictWords)[verdict],
   ]
     .filter(Boolean)
     .join(', ')
