@@ -1,10 +1,11 @@
 import { and, eq } from 'drizzle-orm'
 import { allows, type Permission, type Side } from '../../contract/access'
+import { dayIn } from '../calendar'
 import { newId } from '../db/columns'
 import type { Database } from '../db/database'
 import { withTenant, type Tenant } from '../db/tenant'
 import { defineError, notFound, ProblemError } from '../errors'
-import { memberships } from '../modules/organisations/organisations.table'
+import { memberships, organisations } from '../modules/organisations/organisations.table'
 import { securityEvents } from '../modules/sign-in/sign-in.table'
 import type { Services } from '../services'
 import type { Route, UploadedFile } from './route'
@@ -70,11 +71,13 @@ export async function callTenantRoute(
 /** The membership is read on every request: a role taken away, or a membership that ended, counts at once. */
 async function authorise(tenant: Tenant, permission: Permission): Promise<void> {
   const [membership] = await tenant.tx
-    .select({ roles: memberships.roles, endsOn: memberships.endsOn })
+    .select({ roles: memberships.roles, endsOn: memberships.endsOn, timeZone: organisations.timeZone })
     .from(memberships)
+    .innerJoin(organisations, eq(organisations.id, memberships.orgId))
     .where(and(eq(memberships.orgId, tenant.organisationId), eq(memberships.userId, tenant.userId)))
-  if (!membership || (membership.endsOn && membership.endsOn < tenant.now.slice(0, 10)))
-    throw notFound('organisation')
+  if (!membership) throw notFound('organisation')
+  const { endsOn, timeZone } = membership
+  if (endsOn && endsOn < dayIn(timeZone, tenant.now)) throw notFound('organisation')
   if (!allows(permission, tenant.side, membership.roles)) throw notAllowed()
   tenant.roles = membership.roles
 }

@@ -2,11 +2,19 @@ import type { addGaugeCalibration, listGaugeCalibrations } from '../../../contra
 import type { AnswerInputOf, BodyOf, QueryOf } from '../../../contract/define'
 import { paged } from '../../db/paging'
 import type { Tenant } from '../../db/tenant'
-import { invalidInput } from '../../errors'
+import { invalidInput, notFound } from '../../errors'
 import { fileById, keepFile, type FileToKeep } from '../files/files.service'
 import { isArchived } from '../parts/parts.errors'
-import { insertCalibration, selectCalibrations, type CalibratedThing } from './calibrations.repository'
-import { gaugeById, standardById } from './gauges.lookup.service'
+import { shareCalibration } from '../standing/standing.share.service'
+import {
+  insertCalibration,
+  selectCalibration,
+  selectCalibrations,
+  setCertificate,
+  type CalibratedThing,
+} from './calibrations.repository'
+import { reportCalibration, subjectOf, thingById as rowOf } from './gauge-events.service'
+import { hasCertificate } from './gauges.errors'
 import { todayOf } from '../organisations/organisations.lookup.service'
 
 type CalibrationAnswer = AnswerInputOf<typeof addGaugeCalibration>
@@ -39,14 +47,53 @@ export async function addCalibration(
       { path: 'body.calibratedOn', message: 'This day is still to come. Enter the day of the calibration.' },
     ])
   const fileId = certificate ? await keepFile(tenant, certificate) : null
-  const calibration = await insertCalibration(tenant, { ...body, ...thing, fileId })
+  const { words, ...entered } = body
+  const calibration = await insertCalibration(tenant, { ...entered, ...thing, fileId })
   tenant.record({
     type: 'calibration.entered',
-    subject: { type: 'gaugeId' in thing ? 'gauge' : 'reference-standard', id: row.id },
-    data: { ...body, calibrationId: calibration.id, certificateSha256: certificate?.stored.sha256 ?? null },
+    subject: subjectOf(thing),
+    data: {
+      ...entered,
+      calibrationId: calibration.id,
+      certificateSha256: certificate?.stored.sha256 ?? null,
+    },
   })
+  const named = { thing, code: row.code }
+  if (body.foundWithinLimits) await shareCalibration(tenant, named, calibration)
+  else
+    await reportCalibration(
+      tenant,
+      named,
+      { happenedOn: body.calibratedOn, words: words || foundOutOfLimits(body.certificateNumber) },
+      calibration.id,
+    )
   return { ...calibration, certificate: fileId ? await fileById(tenant, fileId) : null }
 }
 
-const rowOf = (tenant: Tenant, thing: CalibratedThing): Promise<{ id: string; archivedAt: string | null }> =>
-  'gaugeId' in thing ? gaugeById(tenant, thing.gaugeId) : standardById(tenant, thing.standardId)
+const foundOutOfLimits = (certificateNumber: string): string =>
+  `Found out of limits at its calibration, certificate ${certificateNumber}.`
+
+/** Adds the certificate to a calibration that was entered without one; one that is there is never replaced. */
+export async function attachCertificate(
+  tenant: Tenant,
+  thing: CalibratedThing,
+  calibrationId: string,
+  certificate: FileToKeep,
+): Promise<CalibrationAnswer> {
+  await rowOf(tenant, thing)
+  const calibration = await selectCalibration(tenant, thing, calibrationId)
+  if (!calibration) throw notFound('calibration')
+  const fileId = await keepFile(tenant, certificate)
+  const updated = await setCertificate(tenant, calibrationId, fileId)
+  if (!updated) throw hasCertificate()
+  tenant.record({
+    type: 'calibration.certificate-added',
+    subject: subjectOf(thing),
+    data: {
+      calibrationId,
+      certificateNumber: updated.certificateNumber,
+      certificateSha256: certificate.stored.sha256,
+    },
+  })
+  return { ...updated, certificate: await fileById(tenant, fileId) }
+}

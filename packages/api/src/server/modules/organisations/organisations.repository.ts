@@ -24,3 +24,13 @@ export async function updateOrganisation(
     .returning()
   return updated
 }
+
+/** The time zone in which this organisation's own days are judged. */
+export async function selectTimeZone({ tx, organisationId }: Tenant): Promise<string> {
+  const [row] = await tx
+    .select({ timeZone: organisations.timeZone })
+    .from(organisations)
+    .where(eq(organisations.id, organisationId))
+  if (!row) throw new Error('The organisation is not visible to itself.')
+  return row.timeZone
+}

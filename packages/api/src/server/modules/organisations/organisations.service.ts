@@ -19,17 +19,16 @@ import {
   type MemberListed,
 } from './members.repository'
 import { lastAdmin } from './organisations.errors'
+import { todayOf } from './organisations.lookup.service'
 import { selectOrganisation, updateOrganisation } from './organisations.repository'
-
-/** The day by which every request judges whether a membership has ended. */
-const todayOf = (tenant: Tenant): string => tenant.now.slice(0, 10)
 
 /** One page of this organisation's members. */
 export async function listOfMembers(tenant: Tenant, query: QueryOf<typeof listMembers>) {
+  const today = await todayOf(tenant)
   return paged(
     query,
-    (page) => selectMembers(tenant, page, todayOf(tenant)),
-    (rows) => rows.map((row) => asMember(tenant, row)),
+    (page) => selectMembers(tenant, page, today),
+    (rows) => rows.map((row) => asMember(row, today)),
   )
 }
 
@@ -39,7 +38,7 @@ export async function changeMemberOf(
   userId: string,
   { expectedVersion, ...values }: BodyOf<typeof changeMember>,
 ): Promise<Member> {
-  if (values.endsOn !== null && values.endsOn < todayOf(tenant))
+  if (values.endsOn !== null && values.endsOn < (await todayOf(tenant)))
     throw invalidInput([
       { path: 'body.endsOn', message: 'Enter today or a later day. To end it now, end it at once.' },
     ])
@@ -47,8 +46,8 @@ export async function changeMemberOf(
 }
 
 /** Ends a membership: the very next request of that person is refused. */
-export const endMemberOf = (tenant: Tenant, userId: string, expectedVersion: number): Promise<Member> =>
-  setMember(tenant, userId, expectedVersion, { endsOn: addDays(todayOf(tenant), -1) })
+export const endMemberOf = async (tenant: Tenant, userId: string, expectedVersion: number): Promise<Member> =>
+  setMember(tenant, userId, expectedVersion, { endsOn: addDays(await todayOf(tenant), -1) })
 
 async function setMember(
   tenant: Tenant,
@@ -64,7 +63,7 @@ async function setMember(
   const after = await memberById(tenant, userId)
   const { roles, endsOn } = after.membership
   tenant.record({ type: 'member.changed', subject: { type: 'member', id: userId }, data: { roles, endsOn } })
-  return asMember(tenant, after)
+  return asMember(after, await todayOf(tenant))
 }
 
 async function memberById(tenant: Tenant, userId: string): Promise<MemberListed> {
@@ -73,9 +72,9 @@ async function memberById(tenant: Tenant, userId: string): Promise<MemberListed>
   return row
 }
 
-function asMember(tenant: Tenant, { membership, name, email }: MemberListed): Member {
+function asMember({ membership, name, email }: MemberListed, today: string): Member {
   const { userId, roles, createdAt, endsOn, rowVersion } = membership
-  const ended = endsOn !== null && endsOn < todayOf(tenant)
+  const ended = endsOn !== null && endsOn < today
   return { id: userId, name, email, roles, createdAt, endsOn, ended, rowVersion }
 }
 

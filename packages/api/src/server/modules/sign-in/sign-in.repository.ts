@@ -28,15 +28,15 @@ export interface MembershipRow extends Record<string, unknown> {
   buys: boolean
 }
 
-/** The organisations of a person whose membership has not ended by `today` (a calendar date). */
+/** The organisations of a person whose membership has not ended by now, by each organisation's own calendar. */
 export async function membershipsOf(
   database: Database,
   userId: string,
-  today: string,
+  now: string,
 ): Promise<MembershipRow[]> {
   return withPerson(database, userId, async (tx) => {
     const { rows } = await tx.execute<MembershipRow>(
-      sql`select * from memberships_of_person(${userId}::uuid, ${today}::date)`,
+      sql`select * from memberships_of_person(${userId}::uuid, ${now}::timestamptz)`,
     )
     return rows
   })

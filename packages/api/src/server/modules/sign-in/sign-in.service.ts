@@ -153,8 +153,7 @@ export async function readSessionOf(
   services: Services,
   person: SignedIn,
 ) {
-  const today = services.clock().toISOString().slice(0, 10)
-  const memberships = await membershipsOf(database, person.userId, today)
+  const memberships = await membershipsOf(database, person.userId, services.clock().toISOString())
   return {
     person: { ...person, id: person.userId },
     endsAt: new Date(Date.parse(person.signedInAt) + absoluteLimit).toISOString(),

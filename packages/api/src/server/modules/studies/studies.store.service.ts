@@ -9,7 +9,7 @@ import { changedMeanwhile, invalidInput, wrongState, type FieldError } from '../
 import type { UploadedFile } from '../../http/route'
 import { keepFile, type FileToKeep } from '../files/files.service'
 import { standardById } from '../gauges/gauges.lookup.service'
-import { selectTimeZone } from '../gauges/sites.repository'
+import { selectTimeZone } from '../organisations/organisations.repository'
 import { selectMembersAmong } from '../organisations/people.repository'
 import { canonicalText, sha256 } from '../record/record.append'
 import { leftOutOf, readReadings, type ReadReadings } from './readings/read'

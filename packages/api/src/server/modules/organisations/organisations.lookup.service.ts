@@ -1,0 +1,7 @@
+import { dayIn } from '../../calendar'
+import type { Tenant } from '../../db/tenant'
+import { selectTimeZone } from './organisations.repository'
+
+/** Today as this organisation's calendar has it: its own due days, calibrations and memberships are judged by it. */
+export const todayOf = async (tenant: Tenant): Promise<string> =>
+  dayIn(await selectTimeZone(tenant), tenant.now)
