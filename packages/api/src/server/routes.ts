@@ -16,6 +16,7 @@ import { tasksRoutes } from './modules/parts/tasks.routes'
 import { organisationsRoutes } from './modules/organisations/organisations.routes'
 import { recordRoutes } from './modules/record/record.routes'
 import { relationshipsRoutes } from './modules/relationships/relationships.routes'
+import { requestsRoutes } from './modules/requests/requests.routes'
 import { reviewsRoutes } from './modules/reviews/reviews.routes'
 import { signInRoutes } from './modules/sign-in/sign-in.routes'
 import { submissionsRoutes } from './modules/submissions/submissions.routes'
@@ -45,6 +46,7 @@ export function allRoutes({ database, config, identity, sessions }: RouteDepende
     ...filesRoutes,
     ...agreementsRoutes,
     ...studiesRoutes,
+    ...requestsRoutes,
     ...messagesRoutes,
     ...organisationsRoutes,
     ...recordRoutes,

@@ -128,7 +128,7 @@ export const requestMovesNamed = <N extends RequestMoveName>(
  * What a submission that names the request says for its task; one that is not signed, or was taken back, says
  * nothing. One that was superseded was accepted before.
  */
-function saidBy(state: SubmissionState): Exclude<RequestTaskState, 'open'> | null {
+export function saidBy(state: SubmissionState): Exclude<RequestTaskState, 'open'> | null {
   if (acceptedStates.includes(state) || state === 'superseded') return 'accepted'
   if (underReview.includes(state)) return 'answered'
   return state === 'refused' ? 'refused' : null

@@ -1,4 +1,4 @@
-import { and, eq, isNull, ne, sql } from 'drizzle-orm'
+import { and, eq, inArray, isNull, ne, sql } from 'drizzle-orm'
 import { alias } from 'drizzle-orm/pg-core'
 import type { QueryOf } from '../../../contract/define'
 import type { listTasks } from '../../../contract/tasks'
@@ -14,7 +14,7 @@ const supplier = alias(organisations, 'supplier')
 const customer = alias(organisations, 'customer')
 
 /** Rows of the relationships in which this organisation stands on the side it acts on. */
-const ownTasks = (tenant: Tenant) =>
+export const ownTasks = (tenant: Tenant) =>
   eq(
     tenant.side === 'supplier' ? measuringTasks.supplierOrgId : measuringTasks.customerOrgId,
     tenant.organisationId,
@@ -32,7 +32,7 @@ const fields = {
 }
 
 /** A task with its characteristic, part and revision, and the names of both parties. */
-const fromTasks = (tenant: Tenant) =>
+export const fromTasks = (tenant: Tenant) =>
   tenant.tx
     .select(fields)
     .from(measuringTasks)
@@ -95,6 +95,12 @@ export async function selectTasks(tenant: Tenant, query: QueryOf<typeof listTask
 export async function selectListedTask(tenant: Tenant, taskId: string): Promise<TaskListed | undefined> {
   const [row] = await fromTasks(tenant).where(and(ownTasks(tenant), eq(measuringTasks.id, taskId)))
   return row
+}
+
+/** Tasks of this side by id, archived or not. */
+export async function selectListedTasks(tenant: Tenant, taskIds: readonly string[]): Promise<TaskListed[]> {
+  if (taskIds.length === 0) return []
+  return fromTasks(tenant).where(and(ownTasks(tenant), inArray(measuringTasks.id, [...taskIds])))
 }
 
 export async function selectTask(tenant: Tenant, taskId: string): Promise<TaskRow | undefined> {

@@ -6,18 +6,24 @@ import { requestAnswers, requests, requestTasks } from './requests.table'
 
 export type RequestRow = typeof requests.$inferSelect
 
-/** Requests that ask for the task and were not withdrawn, the one due first on top. */
-export async function selectAsking(tenant: Tenant, taskId: string): Promise<RequestRow[]> {
-  const rows = await tenant.tx
-    .select({ request: requests })
+/** Requests that ask for one of the tasks and were not withdrawn, the one due first on top. */
+export async function selectAsking(tenant: Tenant, taskIds: readonly string[]) {
+  if (taskIds.length === 0) return []
+  return tenant.tx
+    .select({ request: requests, taskId: requestTasks.taskId })
     .from(requestTasks)
     .innerJoin(
       requests,
       and(eq(requests.relationshipId, requestTasks.relationshipId), eq(requests.id, requestTasks.requestId)),
     )
-    .where(and(ownSide(tenant, requests), eq(requestTasks.taskId, taskId), isNull(requests.withdrawnAt)))
+    .where(
+      and(
+        ownSide(tenant, requests),
+        inArray(requestTasks.taskId, [...taskIds]),
+        isNull(requests.withdrawnAt),
+      ),
+    )
     .orderBy(asc(requests.dueOn), asc(requests.number))
-  return rows.map(({ request }) => request)
 }
 
 /** The signed submissions that name the requests, the newest first. */

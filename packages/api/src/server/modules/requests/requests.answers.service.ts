@@ -1,7 +1,18 @@
-import { isOwed, requestState, requestTaskState } from '../../../contract/moves/request'
+import {
+  isOwed,
+  requestState,
+  requestTaskState,
+  type RequestTaskState,
+} from '../../../contract/moves/request'
 import type { Tenant } from '../../db/tenant'
 import type { SubmissionRow } from '../submissions/submissions.repository'
-import { insertAnswers, selectAnswers, selectAsking, selectTasksOf } from './requests.answers.repository'
+import {
+  insertAnswers,
+  selectAnswers,
+  selectAsking,
+  selectTasksOf,
+  type Answer,
+} from './requests.answers.repository'
 import { requestMessages, tellCustomer } from './requests.messages'
 
 /** A request that a submission of the task would answer; a submission freezes id and number. */
@@ -11,25 +22,43 @@ export interface OpenRequest {
   dueOn: string
 }
 
-/**
- * The requests that a submission for the task signed now answers: those that ask for it, were not withdrawn, and have
- * no accepted answer yet. The one due first comes first.
- */
-export async function openRequestsOf(tenant: Tenant, taskId: string): Promise<OpenRequest[]> {
-  const asking = await selectAsking(tenant, taskId)
+/** The state of one task of a request, from the signed submissions that name requests, the newest first. */
+export const taskStateIn = (
+  answers: readonly Answer[],
+  { requestId, taskId }: { requestId: string; taskId: string },
+): RequestTaskState =>
+  requestTaskState(
+    answers
+      .filter((each) => each.requestId === requestId && each.taskId === taskId)
+      .map(({ state }) => state),
+  )
+
+/** Requests that ask for tasks, were not withdrawn, and have no accepted answer for them yet; by task. */
+export async function openRequestsOfTasks(
+  tenant: Tenant,
+  taskIds: readonly string[],
+): Promise<Map<string, OpenRequest[]>> {
+  const asking = await selectAsking(tenant, taskIds)
   const answers = await selectAnswers(
     tenant,
-    asking.map(({ id }) => id),
+    asking.map(({ request }) => request.id),
   )
-  return asking
-    .filter(
-      ({ id }) =>
-        requestTaskState(
-          answers.filter((each) => each.requestId === id && each.taskId === taskId).map(({ state }) => state),
-        ) !== 'accepted',
-    )
-    .map(({ id, number, dueOn }) => ({ id, number, dueOn }))
+  const open = asking.filter(
+    ({ request, taskId }) => taskStateIn(answers, { requestId: request.id, taskId }) !== 'accepted',
+  )
+  return new Map(
+    taskIds.map((taskId) => [
+      taskId,
+      open
+        .filter((each) => each.taskId === taskId)
+        .map(({ request: { id, number, dueOn } }) => ({ id, number, dueOn })),
+    ]),
+  )
 }
+
+/** The requests that a submission for the task signed now answers, the one due first on top. */
+export const openRequestsOf = async (tenant: Tenant, taskId: string): Promise<OpenRequest[]> =>
+  (await openRequestsOfTasks(tenant, [taskId])).get(taskId) ?? []
 
 /**
  * Notes that a submission just signed answers requests, each in the record. `named` are those its frozen text names;
@@ -41,7 +70,9 @@ export async function answerRequests(
   named: readonly Pick<OpenRequest, 'id'>[],
 ): Promise<void> {
   const { relationshipId, supplierOrgId, customerOrgId, taskId } = submission
-  const asking = (await selectAsking(tenant, taskId)).filter(({ id }) => named.some((each) => each.id === id))
+  const asking = (await selectAsking(tenant, [taskId]))
+    .map(({ request }) => request)
+    .filter(({ id }) => named.some((each) => each.id === id))
   await insertAnswers(
     tenant,
     asking.map(({ id }) => ({
@@ -51,18 +82,11 @@ export async function answerRequests(
     })),
   )
   const ids = asking.map(({ id }) => id)
-  const answers = await selectAnswers(tenant, ids)
-  const tasks = await selectTasksOf(tenant, ids)
+  const [answers, tasks] = [await selectAnswers(tenant, ids), await selectTasksOf(tenant, ids)]
   for (const request of asking) {
     const states = tasks
       .filter(({ requestId }) => requestId === request.id)
-      .map((task) =>
-        requestTaskState(
-          answers
-            .filter((each) => each.requestId === request.id && each.taskId === task.taskId)
-            .map(({ state }) => state),
-        ),
-      )
+      .map((task) => taskStateIn(answers, task))
     tenant.record({
       type: 'request.answered',
       relationship: { id: relationshipId, supplierOrgId, customerOrgId },
