@@ -103,6 +103,13 @@ export const plotWords = {
   band: 'interval of the mean',
   order: 'in the order taken',
   trueBias: 'true bias',
+  trueSpread: 'true spread (standard deviation)',
+  spreadTitle: 'Chance to meet the clause, by true spread',
+  spreadOf: (name: string, first: string, from: string, last: string, to: string) =>
+    `${name}: ${first} at ${from}, ${last} at ${to}`,
+  bandsTitle: (name: string) => `Chance of each verdict by true bias, ${name}`,
+  bandsOf: (meets: string, notShown: string, fallsShort: string) =>
+    `without bias: meets ${meets}, not shown ${notShown}, falls short ${fallsShort}`,
   allowedBias: 'allowed bias',
   planned: (count: number) => `planned, ${count} readings`,
   marked: (readings: string) => `marked: ${readings.toLowerCase()}`,
