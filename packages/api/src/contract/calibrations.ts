@@ -1,5 +1,5 @@
 import { z } from 'zod'
-import { calendarDate, instant, line, pageOf, pageQuery, paramsWith, sortBy, uuid } from './common'
+import { calendarDate, instant, line, pageOf, pageQuery, paragraph, paramsWith, sortBy, uuid } from './common'
 import { defineEndpoint } from './define'
 import { fileSchema, largestFile } from './files'
 
@@ -47,6 +47,8 @@ const body = z
     calibratedOn: calendarDate,
     dueOn: calendarDate,
     foundWithinLimits: z.boolean(),
+    /** Where it was found out of limits: what was found, as the customers concerned read it. */
+    words: paragraph(2000).default(''),
   })
   .superRefine(({ calibratedOn, dueOn }, context) => {
     if (dueOn < calibratedOn)
@@ -97,4 +99,26 @@ export const addStandardCalibration = defineEndpoint({
   upload: { maximumBytes: largestFile },
   response: calibrationSchema,
   summary: 'Enters a calibration of a reference standard, with its certificate where there is one.',
+})
+
+export const attachGaugeCertificate = defineEndpoint({
+  method: 'post',
+  path: '/organisations/:organisationId/gauges/:gaugeId/calibrations/:calibrationId/certificate',
+  access: 'gauges.change',
+  params: paramsWith('gaugeId', 'calibrationId'),
+  body: z.object({}),
+  upload: { maximumBytes: largestFile },
+  response: calibrationSchema,
+  summary: 'Adds the certificate to a calibration of a gauge that was entered without one.',
+})
+
+export const attachStandardCertificate = defineEndpoint({
+  method: 'post',
+  path: '/organisations/:organisationId/standards/:standardId/calibrations/:calibrationId/certificate',
+  access: 'gauges.change',
+  params: paramsWith('standardId', 'calibrationId'),
+  body: z.object({}),
+  upload: { maximumBytes: largestFile },
+  response: calibrationSchema,
+  summary: 'Adds the certificate to a calibration of a reference standard that was entered without one.',
 })

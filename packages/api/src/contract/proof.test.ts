@@ -1,5 +1,9 @@
 import { describe, expect, it } from 'vitest'
 import { proofOfCharacteristic, proofOfTask } from './proof'
+import type { StandingState } from './standing'
+
+const of = (states: readonly string[], standing: StandingState = 'stands') =>
+  states.map((state) => ({ state, standing: state.startsWith('accepted') ? standing : null }))
 
 describe('the proof of a measuring task', () => {
   it.each([
@@ -14,10 +18,28 @@ describe('the proof of a measuring task', () => {
     [['withdrawn', 'refused'], 'refused'],
     [['accepted'], 'accepted'],
     [['accepted-with-conditions', 'superseded'], 'accepted-with-conditions'],
-  ])('with submissions %j, newest first, is %s', (states, proof) => expect(proofOfTask(states)).toBe(proof))
+  ])('with submissions %j, newest first, is %s', (states, proof) =>
+    expect(proofOfTask(of(states))).toBe(proof),
+  )
 
   it('stays accepted while a newer submission is looked at', () =>
-    expect(proofOfTask(['submitted', 'accepted', 'superseded'])).toBe('accepted'))
+    expect(proofOfTask(of(['submitted', 'accepted', 'superseded']))).toBe('accepted'))
+
+  it.each(['on-hold', 'suspended', 'expired', 'lapsed', 'reopened'] as const)(
+    'is %s where the acceptance is, until something newer is put before the customer',
+    (standing) => {
+      expect(proofOfTask(of(['accepted', 'superseded'], standing))).toBe(standing)
+      expect(proofOfTask(of(['submitted', 'accepted'], standing))).toBe('waiting')
+    },
+  )
+
+  it('counts an older acceptance that still stands', () =>
+    expect(
+      proofOfTask([
+        { state: 'accepted', standing: 'suspended' },
+        { state: 'accepted-with-conditions', standing: 'stands' },
+      ]),
+    ).toBe('accepted-with-conditions'))
 })
 
 describe('the proof of a characteristic', () => {

@@ -7,8 +7,10 @@ import { agreementsRoutes } from './modules/agreements/agreements.routes'
 import { filesRoutes } from './modules/files/files.routes'
 import { frontRoutes } from './modules/front/front.routes'
 import { calibrationsRoutes } from './modules/gauges/calibrations.routes'
+import { gaugeEventsRoutes } from './modules/gauges/gauge-events.routes'
 import { gaugesRoutes } from './modules/gauges/gauges.routes'
 import { standardsRoutes } from './modules/gauges/standards.routes'
+import { houseTermsRoutes } from './modules/house-terms/house-terms.routes'
 import { messagesRoutes } from './modules/notifications/messages.routes'
 import { characteristicsRoutes } from './modules/parts/characteristics.routes'
 import { partsRoutes } from './modules/parts/parts.routes'
@@ -19,6 +21,7 @@ import { relationshipsRoutes } from './modules/relationships/relationships.route
 import { requestsRoutes } from './modules/requests/requests.routes'
 import { reviewsRoutes } from './modules/reviews/reviews.routes'
 import { signInRoutes } from './modules/sign-in/sign-in.routes'
+import { standingRoutes } from './modules/standing/standing.routes'
 import { submissionsRoutes } from './modules/submissions/submissions.routes'
 import { studiesRoutes } from './modules/studies/studies.routes'
 import { systemRoutes } from './modules/system/system.routes'
@@ -43,8 +46,11 @@ export function allRoutes({ database, config, identity, sessions }: RouteDepende
     ...gaugesRoutes,
     ...standardsRoutes,
     ...calibrationsRoutes,
+    ...gaugeEventsRoutes,
+    ...standingRoutes,
     ...filesRoutes,
     ...agreementsRoutes,
+    ...houseTermsRoutes,
     ...studiesRoutes,
     ...requestsRoutes,
     ...messagesRoutes,

@@ -1,4 +1,4 @@
-import { and, desc, eq, lte, sql, type AnyColumn, type SQL } from 'drizzle-orm'
+import { and, desc, eq, isNull, lte, sql, type AnyColumn, type SQL } from 'drizzle-orm'
 import { dueSoonDays, type CalibrationStanding } from '../../../contract/calibrations'
 import type { listGaugeCalibrations } from '../../../contract/calibrations'
 import type { QueryOf } from '../../../contract/define'
@@ -13,10 +13,11 @@ export type CalibrationRow = typeof calibrations.$inferSelect
 /** What a calibration is of: one gauge or one reference standard. */
 export type CalibratedThing = { gaugeId: string } | { standardId: string }
 
-const ofThing = (thing: CalibratedThing) =>
+/** Rows of one gauge or one reference standard. */
+export const ofThing = (thing: CalibratedThing) =>
   'gaugeId' in thing ? eq(calibrations.gaugeId, thing.gaugeId) : eq(calibrations.standardId, thing.standardId)
 
-const latestFirst = [
+export const latestFirst = [
   desc(calibrations.calibratedOn),
   desc(calibrations.createdAt),
   desc(calibrations.id),
@@ -113,4 +114,39 @@ export async function insertCalibration(
     .returning()
   if (!inserted) throw new Error('The calibration was not stored.')
   return inserted
+}
+
+/** One calibration of a gauge or a reference standard. */
+export async function selectCalibration(
+  tenant: Tenant,
+  thing: CalibratedThing,
+  calibrationId: string,
+): Promise<CalibrationRow | undefined> {
+  const [row] = await tenant.tx
+    .select()
+    .from(calibrations)
+    .where(
+      and(eq(calibrations.orgId, tenant.organisationId), ofThing(thing), eq(calibrations.id, calibrationId)),
+    )
+  return row
+}
+
+/** Gives a calibration its certificate; undefined where it has one already. */
+export async function setCertificate(
+  tenant: Tenant,
+  calibrationId: string,
+  fileId: string,
+): Promise<CalibrationRow | undefined> {
+  const [row] = await tenant.tx
+    .update(calibrations)
+    .set({ fileId })
+    .where(
+      and(
+        eq(calibrations.orgId, tenant.organisationId),
+        eq(calibrations.id, calibrationId),
+        isNull(calibrations.fileId),
+      ),
+    )
+    .returning()
+  return row
 }

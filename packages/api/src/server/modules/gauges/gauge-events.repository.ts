@@ -1,10 +1,10 @@
-import { and, eq, gte, lte, sql } from 'drizzle-orm'
+import { and, eq, gte, lte } from 'drizzle-orm'
 import type { QueryOf } from '../../../contract/define'
 import type { listGaugeEvents } from '../../../contract/gauge-events'
 import { orderOf, totalOverPages, windowOf } from '../../db/paging'
 import type { Tenant } from '../../db/tenant'
 import { files } from '../files/files.table'
-import type { CalibratedThing } from './calibrations.repository'
+import { latestFirst, ofThing as ofCalibrated, type CalibratedThing } from './calibrations.repository'
 import { gaugeEvents } from './gauge-events.table'
 import { calibrations, gauges, referenceStandards } from './gauges.table'
 
@@ -112,14 +112,12 @@ export async function selectLastGood(tenant: Tenant, thing: CalibratedThing, day
     .where(
       and(
         eq(calibrations.orgId, tenant.organisationId),
-        'gaugeId' in thing
-          ? eq(calibrations.gaugeId, thing.gaugeId)
-          : eq(calibrations.standardId, thing.standardId),
+        ofCalibrated(thing),
         eq(calibrations.foundWithinLimits, true),
         lte(calibrations.calibratedOn, day),
       ),
     )
-    .orderBy(sql`${calibrations.calibratedOn} desc, ${calibrations.createdAt} desc, ${calibrations.id} desc`)
+    .orderBy(...latestFirst)
     .limit(1)
   return row
 }

@@ -19,18 +19,14 @@ import {
   type GaugeEventRow,
 } from './gauge-events.repository'
 import { gaugeById, standardById } from './gauges.lookup.service'
-import { todayOf } from './gauges.service'
+import { todayOf } from '../organisations/organisations.lookup.service'
 
 type EventAnswer = AnswerInputOf<typeof reportGaugeEvent>
 type Effect = AnswerInputOf<typeof previewGaugeEvent>
 type Reported = BodyOf<typeof reportGaugeEvent>
 
 /** One page of what happened to a gauge. */
-export async function eventsOfGauge(
-  tenant: Tenant,
-  gaugeId: string,
-  query: QueryOf<typeof listGaugeEvents>,
-) {
+export async function eventsOfGauge(tenant: Tenant, gaugeId: string, query: QueryOf<typeof listGaugeEvents>) {
   await gaugeById(tenant, gaugeId)
   return paged(
     query,
@@ -125,13 +121,15 @@ const countsOf = (effects: readonly { effect: 'suspended' | 'stays' | null }[]) 
   stays: effects.filter(({ effect }) => effect === 'stays').length,
 })
 
-const thingById = (
+/** The gauge or reference standard; 404 for those of others. */
+export const thingById = (
   tenant: Tenant,
   thing: CalibratedThing,
 ): Promise<{ id: string; code: string; archivedAt: string | null }> =>
   'gaugeId' in thing ? gaugeById(tenant, thing.gaugeId) : standardById(tenant, thing.standardId)
 
-const subjectOf = (thing: CalibratedThing) =>
+/** What events about it name as their subject. */
+export const subjectOf = (thing: CalibratedThing) =>
   'gaugeId' in thing
     ? ({ type: 'gauge', id: thing.gaugeId } as const)
     : ({ type: 'reference-standard', id: thing.standardId } as const)

@@ -30,6 +30,12 @@ const signedFor = (resting = sql`true`) => sql<number | null>`(
     and (a.characteristic_id is null or a.characteristic_id = ${characteristics.id})
     and ${resting})`
 
+/** The number of a submission that was decided on these limits, or is under review with them. */
+const submittedWith = sql<number | null>`(
+  select min(s.number) from submissions s
+  where s.relationship_id = ${characteristics.relationshipId} and s.characteristic_id = ${characteristics.id}
+    and s.submitted_at is not null and s.state not in ('refused', 'withdrawn'))`
+
 /** Every signed agreement rests on the limits. */
 const frozenBy = signedFor()
 /** On the spread of the process those rest of which a clause takes a share of it. */
@@ -43,6 +49,7 @@ const fields = {
   revision: partRevisions,
   isCurrent: isCurrentRevision,
   frozenBy,
+  submittedWith,
   spreadFrozenBy,
   total: totalOverPages,
 }

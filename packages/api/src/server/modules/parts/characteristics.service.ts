@@ -93,10 +93,12 @@ export async function changeCharacteristicOf(
   { expectedVersion, ...entered }: BodyOf<typeof changeCharacteristic>,
 ): Promise<CharacteristicAnswer> {
   await lockCharacteristic(tenant, characteristicId)
-  const { characteristic, part, frozenBy, spreadFrozenBy } = await loaded(tenant, characteristicId)
+  const row = await loaded(tenant, characteristicId)
+  const { characteristic, part, spreadFrozenBy } = row
   if (part.archivedAt) throw isArchived('part')
   if (characteristic.archivedAt) throw isArchived('characteristic')
-  if (frozenBy !== null && !sameLimits(characteristic, entered)) throw limitsFrozen(`Agreement ${frozenBy}`)
+  const rests = restsOn(row)
+  if (rests !== null && !sameLimits(characteristic, entered)) throw limitsFrozen(rests)
   const { processStandardDeviation: spread } = characteristic
   // A margin that is a share of the process variation would grow with it.
   if (spreadFrozenBy !== null && spread !== null && spread !== entered.processStandardDeviation)
@@ -177,6 +179,10 @@ async function move(
   return characteristicById(tenant, characteristic.id)
 }
 
+/** What rests on the limits as they are, by name; null where nothing does. */
+const restsOn = ({ frozenBy, submittedWith }: CharacteristicInPart): string | null =>
+  frozenBy !== null ? `Agreement ${frozenBy}` : submittedWith !== null ? `Submission ${submittedWith}` : null
+
 const frozenFields = ['nominal', 'lowerLimit', 'upperLimit', 'unit', 'class'] as const
 
 /** As entered: 24.0 and 24.000 are different texts, and a signature stands under one of them. */
@@ -201,15 +207,16 @@ function recordCharacteristic(
 }
 
 function asAnswer(
-  { characteristic, part, revision, isCurrent, frozenBy }: CharacteristicInPart,
+  row: CharacteristicInPart,
   proof: ProofOfCharacteristic = { tasks: 0, proof: 'no-task', leastFar: null },
 ): CharacteristicAnswer {
+  const { characteristic, part, revision, isCurrent } = row
   return {
     ...characteristic,
     partNumber: part.number,
     revision: revision.label,
     currentRevision: isCurrent,
-    limitsFrozen: frozenBy !== null,
+    limitsFrozen: restsOn(row) !== null,
     ...proof,
   }
 }

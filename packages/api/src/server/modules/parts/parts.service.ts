@@ -11,6 +11,7 @@ import { paged } from '../../db/paging'
 import type { Tenant } from '../../db/tenant'
 import { uniqueOr409 } from '../../db/unique'
 import { changedMeanwhile, invalidInput, notFound } from '../../errors'
+import { reopening } from '../standing/standing.reopen.service'
 import { customerStandsBehind, isArchived, isNotArchived } from './parts.errors'
 import {
   hasConfirmedCharacteristic,
@@ -132,7 +133,7 @@ export async function revisionsOfPart(tenant: Tenant, partId: string, query: Que
 
 /**
  * Adds a revision, which becomes the current one. The copies of characteristics are new ones: what was agreed and
- * proved for the old revision stays with it.
+ * proved for the old revision stays with it, and acceptances are reopened until the customer carries them over.
  */
 export async function addRevisionTo(
   tenant: Tenant,
@@ -143,9 +144,11 @@ export async function addRevisionTo(
   if (part.archivedAt) throw isArchived('part')
   // The part's own version is raised, so that two revisions cannot be added at once from the same view.
   if (!(await updatePart(tenant, partId, expectedVersion, {}))) throw changedMeanwhile('part')
-  const revision = await uniqueOr409(taken, () => insertRevision(tenant, part, label))
-  const copied = copy ? await copyCharacteristics(tenant, before, revision) : 0
-  recordPart(tenant, part, 'part.revision-added', { revisionId: revision.id, label, copied })
+  await reopening(tenant, part, label, async () => {
+    const revision = await uniqueOr409(taken, () => insertRevision(tenant, part, label))
+    const copied = copy ? await copyCharacteristics(tenant, before, revision) : 0
+    recordPart(tenant, part, 'part.revision-added', { revisionId: revision.id, label, copied })
+  })
   return partById(tenant, partId)
 }
 

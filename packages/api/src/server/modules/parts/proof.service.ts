@@ -1,20 +1,48 @@
+import { acceptedStates } from '../../../contract/moves/submission'
 import { proofOfCharacteristic, proofOfTask, type ProofState } from '../../../contract/proof'
 import type { Tenant } from '../../db/tenant'
-import { selectActiveTasks, selectSubmissionStates } from './proof.repository'
+import { selectCarriedTo } from '../standing/standing.carry.repository'
+import { standingsOf } from '../standing/standing.service'
+import { selectActiveTasks, selectPlacesOfTasks, selectSubmissionStates } from './proof.repository'
 
-/** How far the proof of each measuring task has come, as both sides see it. */
+/**
+ * How far the proof of each measuring task has come, as both sides see it. What was carried over from an earlier
+ * revision counts for the task of the same gauge, site and process step.
+ */
 export async function proofOfTasks(
   tenant: Tenant,
   taskIds: readonly string[],
 ): Promise<Map<string, ProofState>> {
-  const rows = await selectSubmissionStates(tenant, taskIds)
+  const own = await selectSubmissionStates(tenant, taskIds)
+  const places = await selectPlacesOfTasks(tenant, taskIds)
+  const carried = await selectCarriedTo(
+    tenant,
+    places.map(({ characteristicId }) => characteristicId),
+  )
+  const standings = await standingsOf(tenant, [
+    ...own.filter(({ state }) => acceptedStates.includes(state)).map(({ id }) => id),
+    ...carried.map(({ submissionId }) => submissionId),
+  ])
+  const proofOf = (id: string, state: string) => ({ state, standing: standings.get(id)?.state ?? null })
   return new Map(
-    taskIds.map((taskId) => [
-      taskId,
-      proofOfTask(rows.filter((row) => row.taskId === taskId).map(({ state }) => state)),
-    ]),
+    taskIds.map((taskId) => {
+      const place = places.find(({ id }) => id === taskId)
+      const older = place ? carried.filter((each) => isSamePlace(each, place)) : []
+      return [
+        taskId,
+        proofOfTask([
+          ...own.filter((row) => row.taskId === taskId).map(({ id, state }) => proofOf(id, state)),
+          ...older.map(({ submissionId, state }) => proofOf(submissionId, state)),
+        ]),
+      ]
+    }),
   )
 }
+
+type Place = Omit<Awaited<ReturnType<typeof selectPlacesOfTasks>>[number], 'id'>
+
+const isSamePlace = (a: Place, b: Place): boolean =>
+  (['characteristicId', 'gaugeId', 'site', 'processStep'] as const).every((field) => a[field] === b[field])
 
 export interface ProofOfCharacteristic {
   /** Active measuring tasks. */

@@ -6,6 +6,7 @@ import {
   selectAccepted,
   selectCalibrationFacts,
   selectCarryOvers,
+  selectConditions,
   selectEventFacts,
   selectNewerRevisions,
   selectReinstatements,
@@ -26,6 +27,7 @@ export async function standingFactsOf(
   const accepted = await selectAccepted(tenant, submissionIds)
   if (accepted.length === 0) return []
   const ids = accepted.map(({ submissionId }) => submissionId)
+  const conditions = groupOf(await selectConditions(tenant, ids))
   const calibrations = groupOf(await selectCalibrationFacts(tenant, ids))
   const events = groupOf(await selectEventFacts(tenant, ids))
   const reinstatements = groupOf(await selectReinstatements(tenant, ids))
@@ -37,7 +39,10 @@ export async function standingFactsOf(
       acceptedAt,
       acceptedOn: day(acceptedAt),
       terms,
-      conditions: [],
+      conditions: conditions(submissionId).map(({ dueOn, confirmedAt }) => ({
+        dueOn,
+        confirmedOn: confirmedAt === null ? null : day(confirmedAt),
+      })),
       calibrations: calibrations(submissionId),
       events: events(submissionId),
       reinstatements: reinstatements(submissionId).map(({ reinstatedAt }) => ({

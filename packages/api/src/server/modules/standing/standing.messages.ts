@@ -1,10 +1,12 @@
 import type { Side } from '../../../contract/access'
 import type { GaugeEventKind } from '../../../contract/standing'
+import type { CarryOver } from '../../../contract/standings'
 import { dayInWords } from '../../calendar'
 import type { Tenant } from '../../db/tenant'
 import type { GaugeEventRow } from '../gauges/gauge-events.repository'
 import { workingRoles } from '../notifications/notifications.send'
 import { sha256 } from '../record/record.append'
+import type { PartRow } from '../parts/parts.repository'
 import { recordSubmission } from '../submissions/submissions.move.service'
 import type { ConcernedSubmission } from './standing.share.repository'
 
@@ -67,14 +69,20 @@ export function tellOfEvent(
   }
   const suspended = affected.filter(({ effect }) => effect === 'suspended')
   if (affected.length > 0)
-    notifyOf(tenant, 'supplier', affected, `${said.slice(0, -1)}: ${countOf(suspended.length, 'acceptance', 'acceptances')} suspended`, [
-      said,
-      `“${words}”`,
-      doubt,
-      ...affected.map(
-        (each) => `${each.customer}: ${lineOf(each)} ${effectWords[each.effect ?? 'review']}.`,
-      ),
-    ])
+    notifyOf(
+      tenant,
+      'supplier',
+      affected,
+      `${said.slice(0, -1)}: ${countOf(suspended.length, 'acceptance', 'acceptances')} suspended`,
+      [
+        said,
+        `“${words}”`,
+        doubt,
+        ...affected.map(
+          (each) => `${each.customer}: ${lineOf(each)} ${effectWords[each.effect ?? 'review']}.`,
+        ),
+      ],
+    )
 }
 
 /** Tells both sides of acceptances that were on hold and stand again by a calibration. */
@@ -90,8 +98,60 @@ export function tellOfStandingAgain(
   for (const own of byRelationship(lifted)) {
     const subject = `${countOf(own.length, 'acceptance stands', 'acceptances stand')} again: ${code} calibrated`
     const lines = own.map((each) => `${lineOf(each)} is no longer on hold.`)
-    for (const side of ['customer', 'supplier'] as const) notifyOf(tenant, side, own, subject, [said, ...lines])
+    for (const side of ['customer', 'supplier'] as const)
+      notifyOf(tenant, side, own, subject, [said, ...lines])
   }
+}
+
+/** Tells the supplier which acceptances the customer carried over to a newer revision of a part. */
+export function tellOfCarryOver(
+  tenant: Tenant,
+  part: PartRow,
+  revision: string,
+  carried: readonly CarryOver[],
+): void {
+  tenant.notify({
+    organisationId: part.supplierOrgId,
+    side: 'supplier',
+    roles: workingRoles.supplier,
+    kind: 'standing',
+    subject: `${countOf(carried.length, 'acceptance', 'acceptances')} carried over to ${part.number} ${revision}`,
+    body: [
+      'The limits of these characteristics did not change, so what was accepted holds for the new revision too.',
+      ...carried.map(
+        ({ number, characteristicNumber, characteristicName }) =>
+          `Submission ${number}: no. ${characteristicNumber} ${characteristicName}`,
+      ),
+    ].join('\n\n'),
+    path: `parts/${part.id}`,
+  })
+}
+
+/** Tells the other side that a newer revision of a part reopened what was accepted for the one before. */
+export function tellOfReopened(
+  tenant: Tenant,
+  part: PartRow,
+  revision: string,
+  reopened: readonly { number: number | null; unchanged: boolean }[],
+): void {
+  const unchanged = reopened.filter((each) => each.unchanged).length
+  for (const side of ['supplier', 'customer'] as const)
+    tenant.notify({
+      organisationId: side === 'supplier' ? part.supplierOrgId : part.customerOrgId,
+      side,
+      roles: workingRoles[side],
+      kind: 'standing',
+      subject: `${part.number} ${revision}: ${countOf(reopened.length, 'acceptance', 'acceptances')} reopened`,
+      body: [
+        `Revision ${revision} of ${part.number} was added. What was accepted for the revision before does not hold for it by itself.`,
+        unchanged > 0
+          ? `${countOf(unchanged, 'acceptance rests', 'acceptances rest')} on limits that did not change: an approver of the customer can carry ${unchanged === 1 ? 'it' : 'them'} over on the page of the part.`
+          : '',
+      ]
+        .filter((line) => line !== '')
+        .join('\n\n'),
+      path: `parts/${part.id}`,
+    })
 }
 
 /** One message about submissions of one relationship (or, to the supplier, of several). */

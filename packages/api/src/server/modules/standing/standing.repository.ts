@@ -6,6 +6,7 @@ import type { StandingTerms } from '../../../contract/standing'
 import type { Tenant } from '../../db/tenant'
 import { ownSide } from '../../db/own-side'
 import { characteristics, partRevisions } from '../parts/parts.table'
+import { conditions, decisions } from '../reviews/reviews.table'
 import { relationships } from '../relationships/relationships.table'
 import { submissions, submissionTexts } from '../submissions/submissions.table'
 import { carryOvers, reinstatements, standingCalibrations, standingEvents } from './standing.table'
@@ -36,7 +37,7 @@ export async function selectAccepted(
   const frozen = (part: string) =>
     sql<string | null>`(select (f.text::json -> ${part})::text from ${submissionTexts} f
       where f.relationship_id = ${submissions.relationshipId} and f.submission_id = ${submissions.id}
-      order by f.frozen_at desc limit 1)`
+      order by f.revision desc limit 1)`
   const rows = await tenant.tx
     .select({
       submissionId: submissions.id,
@@ -74,6 +75,28 @@ const factsOf = (
   table: { supplierOrgId: AnyColumn; customerOrgId: AnyColumn; submissionId: AnyColumn },
   submissionIds: readonly string[],
 ) => and(ownSide(tenant, table), inArray(table.submissionId, [...submissionIds]))
+
+/** Conditions of the final decisions on submissions. */
+export async function selectConditions(tenant: Tenant, submissionIds: readonly string[]) {
+  const { submissionId, dueOn, confirmedAt } = conditions
+  return tenant.tx
+    .select({ submissionId, dueOn, confirmedAt })
+    .from(conditions)
+    .innerJoin(
+      decisions,
+      and(eq(decisions.relationshipId, conditions.relationshipId), eq(decisions.id, conditions.decisionId)),
+    )
+    .where(and(factsOf(tenant, conditions, submissionIds), eq(decisions.state, 'final')))
+}
+
+/** Every accepted submission of this side. */
+export async function selectAcceptedIds(tenant: Tenant): Promise<string[]> {
+  const rows = await tenant.tx
+    .select({ id: submissions.id })
+    .from(submissions)
+    .where(and(ownSide(tenant, submissions), inArray(submissions.state, [...acceptedStates])))
+  return rows.map(({ id }) => id)
+}
 
 export type CalibrationFactRow = typeof standingCalibrations.$inferSelect
 

@@ -1,6 +1,7 @@
-import { standingOf, type Standing } from '../../../contract/standing'
+import { standingOf, type Standing, type StandingState } from '../../../contract/standing'
 import { dayIn } from '../../calendar'
 import type { Tenant } from '../../db/tenant'
+import { selectAcceptedIds } from './standing.repository'
 import { standingFactsOf } from './standing.facts'
 
 /**
@@ -18,4 +19,10 @@ export async function standingsOf(
       standingOf(facts, dayIn(timeZone, tenant.now)),
     ]),
   )
+}
+
+/** The accepted submissions of this side that stand in this way today, for filters. */
+export async function submissionsThat(tenant: Tenant, state: StandingState): Promise<string[]> {
+  const standings = await standingsOf(tenant, await selectAcceptedIds(tenant))
+  return [...standings].filter(([, standing]) => standing.state === state).map(([id]) => id)
 }

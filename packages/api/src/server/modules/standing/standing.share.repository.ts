@@ -2,10 +2,11 @@ import { and, asc, eq, inArray, isNotNull, sql } from 'drizzle-orm'
 import { acceptedStates, underReview } from '../../../contract/moves/submission'
 import type { Tenant } from '../../db/tenant'
 import type { CalibratedThing } from '../gauges/calibrations.repository'
+import { gauges, referenceStandards } from '../gauges/gauges.table'
 import { organisations } from '../organisations/organisations.table'
 import { characteristics, measuringTasks, parts } from '../parts/parts.table'
 import { relationships } from '../relationships/relationships.table'
-import { studies } from '../studies/studies.table'
+import { studies, studyData } from '../studies/studies.table'
 import { submissions, submissionStudies } from '../submissions/submissions.table'
 import { standingCalibrations, standingEvents } from './standing.table'
 
@@ -92,4 +93,49 @@ export async function insertEventFacts(
   rows: (typeof standingEvents.$inferInsert)[],
 ): Promise<void> {
   if (rows.length > 0) await tx.insert(standingEvents).values(rows).onConflictDoNothing()
+}
+
+/** A gauge or reference standard by the code that both sides know. */
+export interface NamedThing {
+  thing: CalibratedThing
+  code: string
+}
+
+/** The gauge of a submission's task and the standards of its studies, and the first day of its readings. */
+export async function selectEquipment(
+  { tx, organisationId }: Tenant,
+  { id, relationshipId, taskId }: Pick<typeof submissions.$inferSelect, 'id' | 'relationshipId' | 'taskId'>,
+): Promise<{ things: NamedThing[]; readingsSince: string | null }> {
+  const ofTask = await tx
+    .select({ id: gauges.id, code: gauges.code })
+    .from(measuringTasks)
+    .innerJoin(
+      gauges,
+      and(eq(gauges.orgId, measuringTasks.supplierOrgId), eq(gauges.id, measuringTasks.gaugeId)),
+    )
+    .where(and(eq(measuringTasks.relationshipId, relationshipId), eq(measuringTasks.id, taskId)))
+  const ofStudies = await tx
+    .select({ id: referenceStandards.id, code: referenceStandards.code, collectedOn: studyData.collectedOn })
+    .from(submissionStudies)
+    .innerJoin(
+      studies,
+      and(eq(studies.orgId, submissionStudies.orgId), eq(studies.id, submissionStudies.studyId)),
+    )
+    .innerJoin(
+      studyData,
+      and(eq(studyData.orgId, submissionStudies.orgId), eq(studyData.id, submissionStudies.dataId)),
+    )
+    .innerJoin(
+      referenceStandards,
+      and(eq(referenceStandards.orgId, studies.orgId), eq(referenceStandards.id, studies.standardId)),
+    )
+    .where(and(eq(submissionStudies.orgId, organisationId), eq(submissionStudies.submissionId, id)))
+  const standards = new Map(ofStudies.map((each) => [each.id, each]))
+  return {
+    things: [
+      ...ofTask.map((gauge) => ({ thing: { gaugeId: gauge.id }, code: gauge.code })),
+      ...[...standards.values()].map((each) => ({ thing: { standardId: each.id }, code: each.code })),
+    ],
+    readingsSince: ofStudies.map(({ collectedOn }) => collectedOn).sort()[0] ?? null,
+  }
 }

@@ -3,6 +3,7 @@ import type { Tenant } from '../../db/tenant'
 import type { CalibratedThing, CalibrationRow } from '../gauges/calibrations.repository'
 import type { GaugeEventRow } from '../gauges/gauge-events.repository'
 import { lockThing, selectEventsSince, selectLastGood } from '../gauges/gauge-events.repository'
+import { todayOf } from '../organisations/organisations.lookup.service'
 import type { SubmissionRow } from '../submissions/submissions.repository'
 import { tellOfEvent, tellOfStandingAgain } from './standing.messages'
 import {
@@ -10,16 +11,14 @@ import {
   insertEventFacts,
   keyOf,
   selectConcerned,
+  selectEquipment,
   type ConcernedSubmission,
+  type NamedThing,
 } from './standing.share.repository'
 import { standingsOf } from './standing.service'
 import { selectAccepted } from './standing.repository'
 
-/** A gauge or reference standard by the code that both sides know. */
-export interface NamedThing {
-  thing: CalibratedThing
-  code: string
-}
+export type { NamedThing }
 
 const factOf = ({ thing, code }: NamedThing) =>
   'gaugeId' in thing
@@ -30,15 +29,12 @@ const factOf = ({ thing, code }: NamedThing) =>
  * At the signature: what the submission rests on from then on, and what happened to its equipment since its readings
  * were taken, so that the customer decides knowing it.
  */
-export async function shareAtSigning(
-  tenant: Tenant,
-  submission: SubmissionRow,
-  things: readonly NamedThing[],
-  readingsSince: string | null,
-): Promise<void> {
+export async function shareAtSigning(tenant: Tenant, submission: SubmissionRow): Promise<void> {
+  const { things, readingsSince } = await selectEquipment(tenant, submission)
+  const today = await todayOf(tenant)
   for (const named of things) {
     await lockThing(tenant, named.thing, 'share')
-    const good = await selectLastGood(tenant, named.thing, tenant.now.slice(0, 10))
+    const good = await selectLastGood(tenant, named.thing, today)
     if (good) await insertCalibrationFacts(tenant, [calibrationFact(named, submission, good)])
     if (readingsSince === null) continue
     const events = await selectEventsSince(tenant, named.thing, readingsSince)
@@ -110,7 +106,10 @@ export async function shareEvent(
 }
 
 /** Only what is found out of limits reaches back to the last good calibration. */
-export const inDoubtSince = ({ kind, lastGoodOn }: Pick<GaugeEventRow, 'kind' | 'lastGoodOn'>): string | null =>
+export const inDoubtSince = ({
+  kind,
+  lastGoodOn,
+}: Pick<GaugeEventRow, 'kind' | 'lastGoodOn'>): string | null =>
   kind === 'reported-out-of-limits' ? lastGoodOn : null
 
 const calibrationFact = (
