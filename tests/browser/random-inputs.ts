@@ -1,8 +1,11 @@
 import {
   clauseTypes,
+  subjects,
+  type AgreedBaseline,
   type Clause,
   type ClauseType,
   type Kind,
+  type Margin,
   type Rule,
   type RuleType,
 } from '@evenrule/metrology'
@@ -70,6 +73,8 @@ const ruleMakers: { [T in RuleType]: (random: Random, size: number) => Rule } = 
     sigmas: random.of([4, 6]),
     least: random.of([1, 1.33, 1.67]),
     toleranceWidth: 10 * size,
+    ...(random.chance(0.5) && { leastCg: random.of([1, 1.33, 2]) }),
+    ...(random.chance(0.5) && { alpha: random.of([0.01, 0.05, 0.1]) }),
   }),
   'with-uncertainty': (random, margin) => ({
     type: 'with-uncertainty',
@@ -89,6 +94,27 @@ function ruleAndTruth(random: Random) {
   return { rule: ruleMakers[random.of(ruleTypes)](random, size), truth }
 }
 
+function baseline(random: Random, { level, spread }: Scale): { baseline?: AgreedBaseline } {
+  if (random.chance(0.5)) return {}
+  const agreed: AgreedBaseline[] = [
+    { kind: 'natural-bound', value: random.of([0, level - 20 * spread, level + 20 * spread]) },
+    { kind: 'process' },
+    { kind: 'absolute', value: spread * random.size(1, 100), unit: random.of(['mm', 'µm', 'in', 'g']) },
+  ]
+  return { baseline: random.of(agreed) }
+}
+
+function margin(random: Random, scale: Scale): Margin {
+  const share = random.of([0.01, 0.05, 0.1])
+  if (random.chance(0.3)) {
+    const value = scale.spread * random.size(0.1, 5)
+    return { base: 'absolute', value, unit: random.of(['mm', 'µm', 'in', 'g']) }
+  }
+  return random.chance(0.3)
+    ? { base: 'process', share }
+    : { base: 'tolerance', share, ...baseline(random, scale) }
+}
+
 const clauseMakers: { [T in ClauseType]: (random: Random, scale: Scale) => Clause } = {
   'design-minimum': (random) => ({
     type: 'design-minimum',
@@ -98,24 +124,57 @@ const clauseMakers: { [T in ClauseType]: (random: Random, scale: Scale) => Claus
       ...(random.chance(0.5) && { attempts: random.whole(1, 3) }),
     },
   }),
-  'resolution-share': (random) => ({
+  'resolution-share': (random, scale) => ({
     type: 'resolution-share',
-    parameters: { share: random.of([0.05, 0.1, 0.3]), base: random.of(['tolerance', 'process'] as const) },
+    parameters: {
+      share: random.of([0.05, 0.1, 0.3]),
+      base: random.of(['tolerance', 'process'] as const),
+      ...baseline(random, scale),
+    },
   }),
   'calibration-in-date': (random) => ({
     type: 'calibration-in-date',
     parameters: { gauge: random.chance(0.7), standard: random.chance(0.7) },
   }),
-  'bias-equivalence': (random, { spread }) => ({
+  'bias-equivalence': (random, scale) => ({
     type: 'bias-equivalence',
+    parameters: { margin: margin(random, scale), confidence: random.of(confidences) },
+  }),
+  'bias-interval-inside': (random, scale) => ({
+    type: 'bias-interval-inside',
+    parameters: { margin: margin(random, scale), confidence: random.of(confidences) },
+  }),
+  'bias-point': (random, scale) => ({ type: 'bias-point', parameters: { margin: margin(random, scale) } }),
+  'bias-zero-test': (random) => ({ type: 'bias-zero-test', parameters: { alpha: random.of(alphas) } }),
+  'bias-index': (random, scale) => ({
+    type: 'bias-index',
     parameters: {
-      margin: random.chance(0.3)
-        ? { base: 'absolute', value: spread * random.size(0.1, 5), unit: random.of(['mm', 'µm', 'in', 'g']) }
-        : { base: random.of(['tolerance', 'process'] as const), share: random.of([0.01, 0.05, 0.1]) },
+      share: random.of([0.1, 0.15, 0.2]),
+      base: random.of(['tolerance', 'process'] as const),
+      ...baseline(random, scale),
+      sigmas: random.of([4, 5.15, 6]),
+      leastCg: random.of([null, 1, 1.33]),
+      leastCgk: random.of([1, 1.33, 1.67]),
+      basis: random.of(['estimate', 'bound'] as const),
       confidence: random.of(confidences),
     },
   }),
-  'bias-zero-test': (random) => ({ type: 'bias-zero-test', parameters: { alpha: random.of(alphas) } }),
+  'bias-with-uncertainty': (random, scale) => ({
+    type: 'bias-with-uncertainty',
+    parameters: { margin: margin(random, scale), coverageFactor: random.of([1, 2, 3]) },
+  }),
+  'by-hand': (random) => ({
+    type: 'by-hand',
+    parameters: {
+      subject: random.of(subjects),
+      measure: random.of(['slope', 'Share of  tolerance', 'κ of the line']),
+      asks: 'what it must show',
+    },
+  }),
+  'does-not-apply': (random) => ({
+    type: 'does-not-apply',
+    parameters: { key: random.of(['bias/index', 'linearity/by-hand/slope']), reason: 'not here' },
+  }),
 }
 
 function calibration(random: Random) {
@@ -138,6 +197,13 @@ const facts = (random: Random) => ({
     design: { registeredBeforehand: random.chance(0.5), attempts: random.whole(1, 4) },
   }),
   ...(random.chance(0.7) && { calibration: calibration(random) }),
+  ...(random.chance(0.5) && {
+    byHand: {
+      verdict: random.of(['meets', 'falls-short', 'not-shown'] as const),
+      reason: 'as the document says',
+      documentSha256: 'ab'.repeat(32),
+    },
+  }),
 })
 
 const makers: { [K in Kind]: (random: Random, scale: Scale) => object } = {

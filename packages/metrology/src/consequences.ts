@@ -1,8 +1,8 @@
 import { clauseDescriptor } from './clauses'
 import { incentives } from './kinds/incentives'
-import { ruleDescriptor } from './rules'
+import { acceptedHalfWidth, ruleDescriptor } from './rules'
 import { chancesOf } from './rules/chances'
-import type { Chances, Characteristic, Clause, IncentivesOutput, Rule } from './types'
+import type { Chances, Characteristic, Clause, IncentivesOutput, Rule, RuleAssumptions } from './types'
 
 /** The chances of the three verdicts at one true bias. */
 export interface CurvePoint extends Chances {
@@ -28,6 +28,8 @@ export interface ConsequencesInput {
   readings: number
   /** Assumed repeatability standard deviation, above 0, in the characteristic's unit. */
   standardDeviation: number
+  /** What else the rule rests on, such as the uncertainty of the reference value; none where not given. */
+  assumed?: RuleAssumptions
   /** True biases of the curves; by default 101 from zero to a little beyond what matters. */
   biases?: readonly number[]
   /** Numbers of readings for the allowed bias; by default from 2 to four times the planned one. */
@@ -40,7 +42,7 @@ export interface ConsequencesInput {
  */
 export function consequences(input: ConsequencesInput): Consequences | null {
   const { clause, characteristic, readings, standardDeviation } = input
-  const rule = clauseDescriptor(clause).rule?.(clause, characteristic) ?? null
+  const rule = clauseDescriptor(clause).rule?.(clause, characteristic, input.assumed) ?? null
   if (!rule) return null
   const chances = chancesOf(rule, readings)
   const biases = input.biases ?? defaultBiases(rule, standardDeviation)
@@ -60,7 +62,7 @@ export function consequences(input: ConsequencesInput): Consequences | null {
 
 /** The largest |bias| that a rule accepts with n readings and a sample standard deviation s; 0 where it is none. */
 export function allowedBias(rule: Rule, n: number, s: number): number {
-  return Math.max(0, ruleDescriptor(rule).accepts(rule, n).halfWidth(s))
+  return Math.max(0, acceptedHalfWidth(ruleDescriptor(rule).accepts(rule, n), s))
 }
 
 function defaultBiases(rule: Rule, standardDeviation: number): number[] {

@@ -2,15 +2,18 @@
 export * from './types'
 export { canonicalText } from './canonical'
 export { baselineWidth, marginInUnit } from './clauses/baselines'
-export { fieldBounds } from './clauses/fields'
+export { baselineKinds, fieldBounds } from './clauses/fields'
 export {
+  clauseBasis,
   clauseDescriptor,
   clauseDescriptors,
   clauseKey,
   clauseProblems,
+  clauseSubject,
   clauseTypes,
   judgeClause,
   parseClause,
+  typeKey,
 } from './clauses'
 export {
   allowedBias,

@@ -17,7 +17,32 @@ const agreed: { [T in ClauseType]: Clause } = {
     type: 'bias-equivalence',
     parameters: { margin: { base: 'tolerance', share: 0.1 }, confidence: 0.95 },
   },
+  'bias-interval-inside': {
+    type: 'bias-interval-inside',
+    parameters: { margin: { base: 'tolerance', share: 0.1 }, confidence: 0.95 },
+  },
+  'bias-point': { type: 'bias-point', parameters: { margin: { base: 'tolerance', share: 0.1 } } },
   'bias-zero-test': { type: 'bias-zero-test', parameters: { alpha: 0.05 } },
+  'bias-index': {
+    type: 'bias-index',
+    parameters: {
+      ...{ share: 0.2, base: 'tolerance', sigmas: 6, leastCg: 1.33, leastCgk: 1.33 },
+      ...{ basis: 'bound', confidence: 0.95 },
+    },
+  },
+  'bias-with-uncertainty': {
+    type: 'bias-with-uncertainty',
+    parameters: { margin: { base: 'tolerance', share: 0.1 }, coverageFactor: 2 },
+  },
+  'by-hand': {
+    type: 'by-hand',
+    parameters: {
+      subject: 'linearity',
+      measure: 'Slope over the range',
+      asks: 'a slope below 1 %',
+    },
+  },
+  'does-not-apply': { type: 'does-not-apply', parameters: { key: 'bias/index', reason: 'one-off' } },
 }
 
 const study = (
@@ -38,6 +63,7 @@ const facts = (given: Partial<JudgementFacts> = {}): JudgementFacts => ({
   calibration: null,
   study: null,
   coverageFactor: 2,
+  byHand: null,
   ...given,
 })
 
@@ -58,7 +84,16 @@ describe('reading a clause', () => {
     expect(clauseProblems(agreed[type], width)).toEqual([])
   })
 
-  it.each(clauseTypes)('%s: defaults of its fields make a clause that can be agreed', (type) => {
+  /** What both sides must write themselves has no default. */
+  const withDefaults = clauseTypes.filter((type) =>
+    clauseDescriptors[type].fields.every((field) => !field.required || field.default !== undefined),
+  )
+
+  it('only what is written in words has no defaults', () => {
+    expect(clauseTypes.filter((type) => !withDefaults.includes(type))).toEqual(['by-hand', 'does-not-apply'])
+  })
+
+  it.each(withDefaults)('%s: defaults of its fields make a clause that can be agreed', (type) => {
     const parameters = Object.fromEntries(
       clauseDescriptors[type].fields.flatMap((field) =>
         field.default === undefined ? [] : [[field.name, field.default]],
@@ -168,6 +203,12 @@ describe('descriptors', () => {
       'calibration/date',
       'bias/mean',
       'bias/mean',
+      'bias/mean',
+      'bias/mean',
+      'bias/index',
+      'bias/with-uncertainty',
+      'linearity/by-hand/slope-over-the-range',
+      'bias/index',
     ])
   })
 

@@ -1,6 +1,7 @@
 import { InvalidInput } from '../input/invalid-input'
 import { Reader } from '../input/reader'
 import type {
+  Basis,
   Characteristic,
   Clause,
   ClauseDescriptor,
@@ -10,12 +11,18 @@ import type {
   JudgementFacts,
   Problem,
   ProblemCode,
+  Subject,
 } from '../types'
 import { problemCodes } from '../types'
-import { biasEquivalence } from './bias-equivalence'
+import { biasIndex } from './bias-index'
+import { biasEquivalence, biasIntervalInside } from './bias-intervals'
+import { biasPoint } from './bias-point'
+import { biasWithUncertainty } from './bias-with-uncertainty'
 import { biasZeroTest } from './bias-zero-test'
+import { byHand } from './by-hand'
 import { calibrationInDate } from './calibration-in-date'
 import { designMinimum } from './design-minimum'
+import { doesNotApply } from './does-not-apply'
 import { readField } from './fields'
 import { resolutionShare } from './resolution-share'
 
@@ -25,7 +32,13 @@ export const clauseDescriptors: { [T in ClauseType]: ClauseDescriptor<T> } = {
   'resolution-share': resolutionShare,
   'calibration-in-date': calibrationInDate,
   'bias-equivalence': biasEquivalence,
+  'bias-interval-inside': biasIntervalInside,
+  'bias-point': biasPoint,
   'bias-zero-test': biasZeroTest,
+  'bias-index': biasIndex,
+  'bias-with-uncertainty': biasWithUncertainty,
+  'by-hand': byHand,
+  'does-not-apply': doesNotApply,
 }
 
 /** Every clause type there is, in the order of the catalogue. */
@@ -36,10 +49,29 @@ export function clauseDescriptor<T extends ClauseType>(clause: ClauseOf<T>): Cla
   return clauseDescriptors[clause.type as T]
 }
 
+/** What a clause is about. */
+export function clauseSubject(clause: Clause): Subject {
+  const descriptor = clauseDescriptor(clause)
+  // Every descriptor has one of the two; a test goes through them all.
+  return descriptor.subject ?? (descriptor.subjectOf?.(clause) as Subject)
+}
+
 /** Subject and measure: of two clauses with the same key the narrower scope's replaces the other. */
 export function clauseKey(clause: Clause): string {
-  const { subject, measure } = clauseDescriptors[clause.type]
-  return `${subject}/${measure}`
+  const descriptor = clauseDescriptor(clause)
+  return descriptor.keyOf?.(clause) ?? `${descriptor.subject}/${descriptor.measure}`
+}
+
+/** The key of all clauses of a type; null where each clause names its own. */
+export function typeKey(type: ClauseType): string | null {
+  const { subject, measure } = clauseDescriptors[type]
+  return subject && measure && `${subject}/${measure}`
+}
+
+/** Whether a clause compares the estimate or a bound, or is judged on documents. */
+export function clauseBasis(clause: Clause): Basis {
+  const descriptor = clauseDescriptor(clause)
+  return descriptor.basisOf?.(clause) ?? descriptor.basis
 }
 
 /** The one place where a verdict is made. */

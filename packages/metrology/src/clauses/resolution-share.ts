@@ -15,14 +15,20 @@ export const resolutionShare: ClauseDescriptor<'resolution-share'> = {
   fields: [
     { name: 'share', kind: 'share', required: true, default: 0.1 },
     { name: 'base', kind: 'choice', required: true, choices: ['tolerance', 'process'], default: 'tolerance' },
+    { name: 'baseline', kind: 'baseline', required: false },
   ],
   check: ({ parameters }, characteristic) =>
-    baselineProblems(parameters.base, characteristic, 'parameters.base'),
+    baselineProblems(
+      parameters.base,
+      characteristic,
+      { base: 'parameters.base', agreed: 'parameters.baseline' },
+      parameters.baseline,
+    ),
   judge: ({ parameters }, { characteristic }): Judgement => {
-    const { base, share } = parameters
+    const { base, share, baseline } = parameters
     const limits = { lower: null, upper: share }
     const unknown = { verdict: 'not-shown', figure: null, interval: null, limits, quantity: 'share' } as const
-    const width = baselineWidth(base, characteristic)
+    const width = baselineWidth(base, characteristic, baseline)
     if (!width) return { ...unknown, reason: { code: missingBaseline(base) } }
     const { resolution } = characteristic
     if (resolution === undefined) return { ...unknown, reason: { code: 'resolution-unknown' } }

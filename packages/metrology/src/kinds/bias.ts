@@ -29,8 +29,8 @@ import { capabilityIndices } from './bias-indices'
 export interface BiasArguments extends CommonFields {
   readings: readonly number[]
   reference: { value: number; standardUncertainty?: number }
-  /** Conventions of Cg and Cgk: share of the tolerance and multiple of s. */
-  index: { share: number; sigmas: number }
+  /** Conventions of Cg and Cgk: share of a width and multiple of s; without a width that of the tolerance. */
+  index: { share: number; sigmas: number; width?: number }
 }
 
 /** Reads the input of `bias`. Throws `InvalidInput` with the path of what is missing or out of bounds. */
@@ -45,6 +45,7 @@ export function readBias(reader: Reader): BiasArguments {
     index: {
       share: index?.optionalNumber('share', { above: 0 }) ?? 0.2,
       sigmas: index?.optionalNumber('sigmas', { above: 0 }) ?? 6,
+      ...given('width', index?.optionalNumber('width', { above: 0 })),
     },
   }
 }
@@ -77,7 +78,9 @@ export function bias(input: BiasArguments): BiasOutput {
   const t = spread !== null && standardError ? estimate / standardError : null
   const critical = n > 1 ? twoSidedCritical(alpha, degreesOfFreedom) : null
   const halfWidth = critical !== null && standardError !== null ? critical * standardError : null
-  const index = capabilityIndices(input, estimate, spread, n)
+  const width = input.index.width === undefined ? toleranceWidth(input) : rational(input.index.width)
+  const { share, sigmas } = input.index
+  const index = capabilityIndices({ share, sigmas, width }, confidence, estimate, spread, n)
   const uncertain = withUncertainty(input, of.variance, estimate, n)
   return {
     kind: 'bias',
@@ -105,7 +108,7 @@ export function bias(input: BiasArguments): BiasOutput {
           ? null
           : positionAgainstMargin(estimate, halfWidth, margin) === 'inside',
     },
-    index: input.index,
+    index: { share, sigmas, width: width && toNumber(width) },
     ...index,
     shareOfTolerance: shareOfTolerance(estimate, input),
     shareOfProcess: shareOfProcess(estimate, input),
@@ -189,11 +192,14 @@ function withUncertainty(
   }
 }
 
-function shareOfTolerance(estimate: number, { tolerance }: BiasArguments): number | null {
-  if (tolerance?.lower === undefined || tolerance.upper === undefined || !Number.isFinite(estimate))
-    return null
-  const width = subtract(rational(tolerance.upper), rational(tolerance.lower))
-  return toNumber(divide(absolute(rational(estimate)), width))
+function toleranceWidth({ tolerance }: BiasArguments): Rational | null {
+  const { lower, upper } = tolerance ?? {}
+  return lower === undefined || upper === undefined ? null : subtract(rational(upper), rational(lower))
+}
+
+function shareOfTolerance(estimate: number, input: BiasArguments): number | null {
+  const width = toleranceWidth(input)
+  return width && Number.isFinite(estimate) ? toNumber(divide(absolute(rational(estimate)), width)) : null
 }
 
 function shareOfProcess(estimate: number, input: BiasArguments): number | null {

@@ -4,7 +4,7 @@ import { InvalidInput } from '../input/invalid-input'
 import type { Reader } from '../input/reader'
 import type { BiasOutput, Characteristic, Clause, ClauseOutput, StudyOptions, WarningCode } from '../types'
 import { bias, readReference } from './bias'
-import { readCalibration, readDesignFacts } from './judge'
+import { readByHand, readCalibration, readDesignFacts } from './judge'
 
 /** Warnings of a study about inputs that its clause does not use. */
 const aboutUnusedInputs: readonly WarningCode[] = ['no-margin', 'no-tolerance', 'one-sided-tolerance']
@@ -26,6 +26,7 @@ export function clause(reader: Reader): ClauseOutput {
     calibration: readCalibration(reader),
     study,
     coverageFactor: common.coverageFactor,
+    byHand: readByHand(reader),
   })
   const needsStudy = clauseDescriptor(wanted).studyKind !== null
   const warnings = needsStudy && study ? study.warnings : []
@@ -48,9 +49,9 @@ function readStudy(reader: Reader, common: CommonFields, options: StudyOptions):
   data.choice('kind', ['bias'])
   return bias({
     ...common,
+    index: { share: 0.2, sigmas: 6 },
     ...options,
     readings: data.numbers('readings', 1),
     reference: readReference(data),
-    index: { share: 0.2, sigmas: 6 },
   })
 }

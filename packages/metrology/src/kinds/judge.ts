@@ -3,7 +3,14 @@ import { characteristicOf, readCommon } from '../input/common'
 import { asDay } from '../input/days'
 import { InvalidInput } from '../input/invalid-input'
 import type { Reader } from '../input/reader'
-import type { BiasFigures, CalibrationFacts, CalibrationWindow, DesignFacts, JudgeOutput } from '../types'
+import type {
+  BiasFigures,
+  ByHandFacts,
+  CalibrationFacts,
+  CalibrationWindow,
+  DesignFacts,
+  JudgeOutput,
+} from '../types'
 
 /**
  * The verdict of a clause on a result computed before. `result` is a `bias` output of this contract (or absent);
@@ -18,6 +25,7 @@ export function judge(reader: Reader): JudgeOutput {
     calibration: readCalibration(reader),
     study: readResult(reader),
     coverageFactor: common.coverageFactor,
+    byHand: readByHand(reader),
   })
   return { kind: 'judge', ...judgement, warnings: [] }
 }
@@ -27,6 +35,7 @@ function readResult(reader: Reader): BiasFigures | null {
   if (!source) return null
   source.choice('kind', ['bias'])
   const reference = source.optionalObject('reference')?.ignoreRest()
+  const uncertain = source.optionalObject('withUncertainty')?.ignoreRest()
   return {
     n: source.integer('n', { least: 1 }),
     bias: source.optionalNumber('bias') ?? null,
@@ -35,7 +44,27 @@ function readResult(reader: Reader): BiasFigures | null {
       value: reference?.optionalNumber('value') ?? 0,
       standardUncertainty: reference?.optionalNumber('standardUncertainty', { least: 0 }) ?? null,
     },
+    withUncertainty: {
+      standardUncertainty: uncertain?.optionalNumber('standardUncertainty', { least: 0 }) ?? null,
+    },
   }
+}
+
+const handVerdicts: readonly ByHandFacts['verdict'][] = ['meets', 'falls-short', 'not-shown']
+
+/** Reads `byHand`, what somebody judged on a document; null where it is not given. */
+export function readByHand(reader: Reader): ByHandFacts | null {
+  const source = reader.optionalObject('byHand')
+  if (!source) return null
+  const documentSha256 = source.text('documentSha256')
+  if (!/^[0-9a-f]{64}$/.test(documentSha256)) {
+    throw new InvalidInput(
+      'not-a-hash',
+      'Write the SHA-256 of the document as 64 hexadecimal digits.',
+      source.at('documentSha256'),
+    )
+  }
+  return { verdict: source.choice('verdict', handVerdicts), reason: source.text('reason'), documentSha256 }
 }
 
 /** Reads `design`, how the study came about; null where it is not given. */

@@ -8,7 +8,13 @@ export interface Band {
   spreadAt(h: number): number | null
   /** Spreads around which the half width bends sharply; integration is split there. */
   bends: readonly number[]
+  /** The largest s that is accepted at all, whatever the bias; none where that follows from the half width alone. */
+  largestSpread?: number
 }
+
+/** The half width at s as the rule accepts: negative where nothing is. */
+export const acceptedHalfWidth = (band: Band, s: number): number =>
+  band.largestSpread !== undefined && s > band.largestSpread ? -1 : band.halfWidth(s)
 
 /** Half width `offset + slope · s`. */
 export function linearBand(offset: number, slope: number): Band {

@@ -1,6 +1,6 @@
 import { normalCdf } from '../distributions'
 import type { Chances, Rule, Truth } from '../types'
-import { rootSumOfSquares, type Band } from './band'
+import { acceptedHalfWidth, rootSumOfSquares, type Band } from './band'
 import { ruleDescriptor } from './index'
 import { spreadNodes, type SpreadNode, type SpreadSupport, spreadSupport } from './spread-nodes'
 
@@ -66,7 +66,7 @@ function chanceInside(band: Band, n: number): (at: At) => number {
     }
     let sum = 0
     for (const { v, weight } of nodes) {
-      const h = band.halfWidth(standardDeviation * v)
+      const h = acceptedHalfWidth(band, standardDeviation * v)
       if (h < 0) continue
       const above = (h - bias) / spreadOfMean
       const below = (h + bias) / spreadOfMean
@@ -77,10 +77,10 @@ function chanceInside(band: Band, n: number): (at: At) => number {
   }
 }
 
-/** The v at which the band closes, a corner of the integrand, and where it bends. */
+/** The v at which the band closes, a corner of the integrand, or ends, a step, and where it bends. */
 function edges(band: Band, standardDeviation: number): number[] {
-  const closed = band.spreadAt(0)
-  return (closed === null ? band.bends : [closed, ...band.bends]).map((s) => s / standardDeviation)
+  const closed = [band.spreadAt(0), band.largestSpread].filter((s) => s !== null && s !== undefined)
+  return [...closed, ...band.bends].map((s) => s / standardDeviation)
 }
 
 /** Break points within the steps of the two normal functions where these are sharper than the panels resolve. */

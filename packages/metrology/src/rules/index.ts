@@ -1,7 +1,8 @@
 import type { Reader } from '../input/reader'
 import type { Rule, RuleOf, RuleType } from '../types'
 import type { RuleDescriptor } from './descriptor'
-import { index, point } from './estimate-rules'
+import { index } from './capability-index'
+import { point } from './point'
 import { equivalence, intervalInside } from './interval-rules'
 import { withUncertainty } from './with-uncertainty'
 import { zeroTest } from './zero-test'
@@ -31,5 +32,5 @@ export function readRule(reader: Reader): Rule {
 }
 
 export type { Band } from './band'
-export { rootSumOfSquares } from './band'
+export { acceptedHalfWidth, rootSumOfSquares } from './band'
 export type { RuleDescriptor } from './descriptor'

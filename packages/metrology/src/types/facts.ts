@@ -42,6 +42,15 @@ export interface CalibrationFacts {
   standard: CalibrationWindow | null
 }
 
+/** What somebody judged on an attached document, where a method is not computed here. */
+export interface ByHandFacts {
+  verdict: 'meets' | 'falls-short' | 'not-shown'
+  /** Why, in their own words. */
+  reason: string
+  /** SHA-256 of the document, in hexadecimal. */
+  documentSha256: string
+}
+
 /** Readings and reference value of one bias study, both in the characteristic's unit. */
 export interface BiasData {
   kind: 'bias'

@@ -1,6 +1,6 @@
 import type { Clause, Judgement } from './clauses'
 import type { WarningCode } from './codes'
-import type { CalibrationFacts, Characteristic, DesignFacts, Interval, StudyData } from './facts'
+import type { ByHandFacts, CalibrationFacts, Characteristic, DesignFacts, Interval, StudyData } from './facts'
 import type { Truth } from './rules'
 
 /** `readings` are zero-based places in the data the warning is about. */
@@ -55,11 +55,14 @@ export interface BiasOutput {
     accepts: boolean | null
   }
   intervalInside: { accepts: boolean | null }
-  index: { share: number; sigmas: number }
+  /** Conventions of the indices; without a width they are not defined. */
+  index: { share: number; sigmas: number; width: number | null }
   cg: number | null
   cgk: number | null
   cgLowerBound: number | null
   cgkLowerBound: number | null
+  cgUpperBound: number | null
+  cgkUpperBound: number | null
   shareOfTolerance: number | null
   shareOfProcess: number | null
   resolutionUsed: boolean
@@ -122,6 +125,7 @@ export interface ClauseInput extends Characteristic {
   design?: DesignFacts | null
   calibration?: CalibrationFacts | null
   data?: StudyData | null
+  byHand?: ByHandFacts | null
 }
 export interface ClauseOutput extends Judgement {
   kind: 'clause'

@@ -4,7 +4,15 @@ export interface RuleParameters {
   equivalence: { alpha: number; margin: number }
   'interval-inside': { alpha: number; margin: number }
   point: { margin: number }
-  index: { share: number; sigmas: number; least: number; toleranceWidth: number }
+  /** Cgk at least `least` and, where given, Cg at least `leastCg`; on one-sided bounds at alpha where that is given. */
+  index: {
+    share: number
+    sigmas: number
+    least: number
+    toleranceWidth: number
+    leastCg?: number
+    alpha?: number
+  }
   'with-uncertainty': { margin: number; referenceStandardUncertainty: number; coverageFactor: number }
 }
 export type RuleType = keyof RuleParameters

@@ -40,13 +40,14 @@ export function ruleFigures(
     share: () => formatShare(figure as number | null, { digits: 1 }),
     count: () => formatNumber(figure as number | null),
     date: () => formatDate(figure as string | null),
+    ratio: () => formatNumber(figure as number | null, { digits: 2 }),
   }[quantity]()
   return {
     text,
     estimate: number(figure),
     interval: ends(judgement.interval),
     limits: ends(judgement.limits),
-    unit: { value: unit, share: '%', count: undefined, date: undefined }[quantity],
+    unit: { value: unit, share: '%', count: undefined, date: undefined, ratio: undefined }[quantity],
     calendar: quantity === 'date',
     format:
       quantity === 'date'

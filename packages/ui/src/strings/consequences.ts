@@ -8,7 +8,13 @@ export const ruleNames: Record<ClauseType, string> = {
   'resolution-share': 'resolution',
   'calibration-in-date': 'calibration',
   'bias-equivalence': 'equivalence',
+  'bias-interval-inside': 'interval inside',
+  'bias-point': 'point limit',
   'bias-zero-test': 'zero test',
+  'bias-index': 'capability index',
+  'bias-with-uncertainty': 'with uncertainty',
+  'by-hand': 'by hand',
+  'does-not-apply': 'does not apply',
 }
 
 /** A bias of the plots, to two significant digits. */

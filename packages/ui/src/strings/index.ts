@@ -1,11 +1,12 @@
 export {
   clauseTypeHints,
   clauseTypeWords,
+  describeBaseline,
   describeClause,
+  describeKey,
   describeMargin,
   describeTerms,
   figureWords,
-  subjectOf,
   subjectWords,
 } from './clauses'
 export { choiceWords, clauseFieldWords, describeParameter, marginBaseWords } from './fields'

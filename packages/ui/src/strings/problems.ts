@@ -15,12 +15,15 @@ export const problemWords: Record<ProblemCode, string> = {
   'unknown-field': 'This field does not belong to the clause; leave it out.',
   'unknown-clause-type': 'This kind of clause is not known; choose another.',
   'no-tolerance-width':
-    'The characteristic has no two-sided tolerance. Name a value with its unit, or a share of process variation.',
+    'The characteristic has no two-sided tolerance. Name what stands in for its width, a value with its unit, or a share of process variation.',
   'no-process-spread':
     'The process variation of this characteristic is not known. Enter it with the characteristic, or choose another base.',
   'unit-unknown': 'This unit is not known; choose one from the list.',
   'unit-of-another-quantity':
     'This unit measures something else than the characteristic; choose one of the same quantity.',
+  'bound-beyond-limit':
+    'The natural bound must lie on the other side of the limit of the characteristic; enter it in its unit.',
+  'too-long': 'This is too long; shorten it.',
   'margin-below-resolution':
     'The margin is smaller than one step of the gauge, so nothing could show it. Widen the margin or use a finer gauge.',
 }

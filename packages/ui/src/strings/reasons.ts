@@ -1,5 +1,5 @@
 import type { Reason, ReasonCode, SettleCode, Settling } from '@evenrule/metrology'
-import { formatChance, formatCount, formatDate } from '../format'
+import { formatChance, formatCount, formatDate, formatNumber } from '../format'
 
 export interface ReasonWords {
   /** Why the verdict is what it is. */
@@ -20,8 +20,7 @@ export const reasonWords: Record<ReasonCode, ReasonWords> = {
   },
   'zero-spread': {
     sentence: 'All readings are the same: the spread hides below the resolution.',
-    remedy:
-      'Use a gauge with a finer resolution, or enter the resolution so that it can stand in for the spread.',
+    remedy: 'Use a gauge with a finer resolution.',
   },
   'reference-uncertainty-too-large': {
     sentence: 'The uncertainty of the reference standard alone eats the margin.',
@@ -51,6 +50,48 @@ export const reasonWords: Record<ReasonCode, ReasonWords> = {
     sentence: 'The bias is larger than the test allows with these readings.',
     remedy: 'Adjust or recalibrate the gauge, then repeat the study.',
   },
+  'bias-within-margin': { sentence: 'The estimated bias lies within the margin.' },
+  'bias-beyond-margin': {
+    sentence: 'The estimated bias lies beyond the margin.',
+    remedy: 'Adjust or recalibrate the gauge, then repeat the study.',
+  },
+  'index-high-enough': { sentence: 'The index reaches the least that is agreed.' },
+  'index-too-low': {
+    sentence: 'The index is below the least that is agreed.',
+    remedy: 'A smaller bias or less spread raises it.',
+  },
+  'index-bound-high-enough': { sentence: 'The lower bound of the index reaches the least that is agreed.' },
+  'index-bound-too-low': {
+    sentence: 'Even the upper bound of the index is below the least that is agreed.',
+    remedy: 'A smaller bias or less spread raises it.',
+  },
+  'index-bound-open': {
+    sentence:
+      'The least that is agreed lies between the bounds of the index: the readings neither prove nor disprove it.',
+    remedy: 'More readings bring the bounds together; less spread or bias raises them.',
+  },
+  'bias-with-uncertainty-inside': {
+    sentence: 'Bias and expanded uncertainty together lie within the margin.',
+  },
+  'bias-with-uncertainty-outside': {
+    sentence: 'The bias lies beyond the margin by more than its expanded uncertainty.',
+    remedy: 'Adjust or recalibrate the gauge, then repeat the study.',
+  },
+  'bias-with-uncertainty-crosses': {
+    sentence:
+      'Within its expanded uncertainty the bias may lie inside or outside the margin: the readings neither prove nor disprove it.',
+    remedy: 'More readings, less spread or a reference standard with a smaller uncertainty narrow it.',
+  },
+  'reference-uncertainty-unknown': {
+    sentence: 'The uncertainty of the reference standard is not known.',
+    remedy: 'Enter it from the certificate of the standard.',
+  },
+  'judged-by-hand': { sentence: 'It was judged by hand on the attached document.' },
+  'no-document': {
+    sentence: 'There is no document yet.',
+    remedy: 'Attach one to the submission and say what it shows.',
+  },
+  'does-not-apply': { sentence: 'The clause does not apply here.' },
   'design-as-agreed': { sentence: 'The study was made as agreed.' },
   'too-few-readings': {
     sentence: 'There are fewer readings than agreed.',
@@ -116,6 +157,12 @@ export const settleWords: Record<SettleCode, string> = {
   'one-reading': 'A second reading is needed before anything can be said.',
   'finer-resolution': 'A gauge with a finer resolution would settle it.',
   'better-standard': 'A reference standard with a smaller uncertainty is needed.',
+  'standard-uncertainty': 'The uncertainty of the reference standard is needed, from its certificate.',
+  'index-below-least':
+    'More readings would rather show that it falls short: the index is below the least that is agreed.',
+  'index-too-near-least':
+    'The index lies so near the least that is agreed that no practical number of readings settles it.',
+  document: 'A document that shows it is needed.',
   'estimate-beyond-margin':
     'More readings would rather show that it falls short: the estimate lies beyond the margin.',
   'estimate-too-near-margin':
@@ -133,8 +180,24 @@ const dayOf = (reason: Reason, name: string): string => {
   return formatDate(typeof value === 'string' ? value : null)
 }
 
+/** The index that decided, by its name, and the least agreed for it. */
+function indexSentence(say: (name: string, least: string) => string) {
+  return (reason: Reason): string | undefined => {
+    const least = numberOf(reason, 'least')
+    return least === undefined ? undefined : say(reason.index === 'cg' ? 'Cg' : 'Cgk', formatNumber(least))
+  }
+}
+
 /** Sentences that name their figures, where the judgement gave them. */
 const detailed: Partial<Record<ReasonCode, (reason: Reason) => string | undefined>> = {
+  'index-too-low': indexSentence((name, least) => `${name} is below the ${least} that is agreed.`),
+  'index-bound-too-low': indexSentence(
+    (name, least) => `Even the upper bound of ${name} is below the ${least} that is agreed.`,
+  ),
+  'index-bound-open': indexSentence(
+    (name, least) =>
+      `${least} lies between the bounds of ${name}: the readings neither prove nor disprove it.`,
+  ),
   'too-few-readings': (reason) => {
     const [readings, least] = [numberOf(reason, 'readings'), numberOf(reason, 'least')]
     if (readings === undefined || least === undefined) return undefined

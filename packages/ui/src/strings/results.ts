@@ -53,6 +53,9 @@ export const answerWords = {
     `${listSubjects(subjects)} ${new Set(subjects).size > 1 ? 'are' : 'is'} not shown`,
   biasInside: (bias: string, margin: string) =>
     `The bias is ${bias}, and its whole interval lies inside ${margin}.`,
+  biasWithin: (bias: string, margin: string) => `The bias is ${bias}, within ${margin}.`,
+  index: (name: string, figure: string, least: string) =>
+    `${name} is ${figure}; at least ${least} is agreed.`,
   biasAllowed: (bias: string, allowed: string) => `The bias is ${bias}; the test allows ${allowed}.`,
 } as const
 
@@ -91,6 +94,37 @@ export const wayWords = {
   pLarger: 'the larger of the two one-sided tests',
   pTwoSided: 'two-sided, of t = b / (s / √n)',
   margin: 'Margin',
+  marginOneSided: (share: string, of: string) => `${share} of ${of}, the tolerance being one-sided`,
+  allowance: 'Share the gauge may take up',
+  allowanceFormula: (share: string) => `${share} of the width`,
+  indexWidth: 'Width the share is taken of',
+  cg: 'Cg',
+  cgFormula: (sigmas: string) => `share of the width / (${sigmas} · s)`,
+  cgk: 'Cgk',
+  cgkFormula: (sigmas: string) => `(half the share − |b|) / (${sigmas} · s / 2)`,
+  indexBounds: (name: string, confidence: string) => `Bounds of ${name}, each at ${confidence}`,
+  boundsFormula: {
+    cg: 'Cg · √(χ²(p; n − 1) / (n − 1))',
+    cgk: 'noncentral t of √n · (half the share − |b|) / s',
+  },
+  bounds: (lower: string, upper: string) => `${lower} to ${upper}`,
+  leastOf: (name: string) => `Least ${name} that is agreed`,
+  repeatability: 'Repeatability',
+  repeatabilityFormula: 's',
+  repeatabilityOfResolution: 'resolution / √12, as that is larger than s',
+  referenceUncertainty: 'Standard uncertainty of the reference value',
+  referenceUncertaintyFormula: 'u, from the certificate',
+  biasUncertainty: 'Standard uncertainty of the bias',
+  biasUncertaintyFormula: '√(s² / n + u²)',
+  biasExpanded: 'Expanded uncertainty',
+  biasExpandedFormula: (factor: string) => `U = ${factor} · √(s² / n + u²)`,
+  biasRange: 'Bias with its expanded uncertainty',
+  biasRangeFormula: 'b ± U',
+  asks: 'What the document must show',
+  judgedAs: 'Judged as',
+  judgedReason: 'Reason given',
+  document: 'SHA-256 of the document',
+  noDocument: 'none yet',
   marginTolerance: (share: string, upper: string, lower: string) => `${share} of (${upper} − ${lower})`,
   marginProcess: (share: string, sigma: string) => `${share} of 6 · ${sigma}`,
   marginAbsolute: 'as agreed',
@@ -132,6 +166,9 @@ export const wayWords = {
   atLeast: (value: string, limit: string) => `${value} ≥ ${limit}`,
   under: (value: string, limit: string) => `${value} < ${limit}`,
 } as const
+
+/** The indices by name, where one of them decided. */
+export const indexWords = { cg: 'Cg', cgk: 'Cgk' } as const
 
 /** What a share is a share of, beside its figure. */
 export const shareOfWords = {

@@ -1,9 +1,11 @@
-import { clauseDescriptor, whatWouldSettle, type Subject, type Verdict } from '@evenrule/metrology'
+import { clauseBasis, clauseSubject, whatWouldSettle, type Subject, type Verdict } from '@evenrule/metrology'
 import { isMet, overallVerdict } from '@evenrule/api/contract/submission-content'
 import { formatLimits, formatNumber } from '../../format'
+import { figureWords } from '../../strings/clauses'
 import { describeReason, describeSettling } from '../../strings/reasons'
 import { answerWords as words } from '../../strings/results'
 import { figureDigits } from './digits'
+import { shareLabel } from './shareLabel'
 import type { ClauseResult } from './types'
 
 /** The answer to "is it fit?": the decisive part, and one or two sentences of why. */
@@ -14,7 +16,7 @@ export interface Answer {
 }
 
 const subjectsOf = (results: readonly ClauseResult[]): Subject[] =>
-  results.map(({ clause }) => clauseDescriptor(clause).subject)
+  results.map(({ clause }) => clauseSubject(clause))
 
 /** "The uncertainty …" behind a colon becomes "the uncertainty …". */
 const continued = (sentence: string): string => sentence.charAt(0).toLowerCase() + sentence.slice(1)
@@ -38,18 +40,29 @@ function short(results: readonly ClauseResult[]): string {
   return `${words.subjectsFallShort(subjectsOf(results))}: ${continued(describeReason(first.output.reason).sentence)}`
 }
 
-/** Where everything meets, the bias is the figure that was asked for. */
+/** Where everything meets, the bias is the figure that was asked for; where it was not, the index is. */
 function biasSentence(results: readonly ClauseResult[]): string {
-  const result = results.find(({ clause }) => clauseDescriptor(clause).subject === 'bias')
-  const { figure, limits } = result?.output ?? {}
-  if (!result || typeof figure !== 'number' || typeof limits?.upper !== 'number') return ''
+  const onBias = results.filter(({ clause }) => clauseSubject(clause) === 'bias')
+  const result = onBias.find(({ output }) => output.quantity === 'value') ?? onBias[0]
+  const { figure, limits, quantity } = result?.output ?? {}
+  if (!result || typeof figure !== 'number') return ''
+  if (quantity === 'ratio') return indexSentence(result, figure)
+  if (typeof limits?.upper !== 'number') return ''
   const digits = figureDigits(result)
   const { unit } = result.input
   const bias = formatNumber(figure, { unit, digits })
   const margin = { lower: -limits.upper, upper: limits.upper }
-  return clauseDescriptor(result.clause).basis === 'bound'
-    ? words.biasInside(bias, formatLimits(margin, { unit }))
-    : words.biasAllowed(bias, formatLimits(margin, { unit, digits }))
+  if (clauseBasis(result.clause) === 'bound') return words.biasInside(bias, formatLimits(margin, { unit }))
+  return result.clause.type === 'bias-zero-test'
+    ? words.biasAllowed(bias, formatLimits(margin, { unit, digits }))
+    : words.biasWithin(bias, formatLimits(margin, { unit }))
+}
+
+function indexSentence({ clause, output }: ClauseResult, figure: number): string {
+  const least = output.limits?.lower
+  if (typeof least !== 'number') return ''
+  const name = shareLabel(clause, output) ?? figureWords[clause.type]
+  return words.index(name, formatNumber(figure, { digits: 2 }), formatNumber(least))
 }
 
 /** The overall answer in words, computed from the results of all clauses that are asked for. */

@@ -1,6 +1,11 @@
-import type { Clause } from '@evenrule/metrology'
-import { shareOfWords } from '../../strings/results'
+import type { Clause, Judgement } from '@evenrule/metrology'
+import { indexWords, shareOfWords } from '../../strings/results'
 
-/** "share of tolerance" for a clause whose figure is a share; other clauses keep their own word. */
-export const shareLabel = (clause: Clause): string | undefined =>
-  clause.type === 'resolution-share' ? shareOfWords[clause.parameters.base] : undefined
+/**
+ * "share of tolerance" for a clause whose figure is a share, "Cg" where that index decided; other clauses keep their own
+ * word.
+ */
+export function shareLabel(clause: Clause, judgement?: Pick<Judgement, 'reason'>): string | undefined {
+  if (clause.type === 'resolution-share') return shareOfWords[clause.parameters.base]
+  return judgement?.reason.index === 'cg' ? indexWords.cg : undefined
+}

@@ -1,4 +1,4 @@
-import { clauseDescriptor, type BiasOutput, type Warning } from '@evenrule/metrology'
+import { clauseSubject, type BiasOutput, type Warning } from '@evenrule/metrology'
 import { decimalPlaces, formatShare, type Ends } from '../../format'
 import { shiftDecimal } from '../../format/numbers'
 import { figureDigits } from './digits'
@@ -29,7 +29,7 @@ const urgency = { 'falls-short': 0, 'not-shown': 1, 'meets-with-conditions': 2, 
 function leadingOf(results: readonly ClauseResult[]): ClauseResult | null {
   const onMean = results.filter(
     ({ clause, input, output }) =>
-      clauseDescriptor(clause).subject === 'bias' && output.study !== null && Boolean(input.data),
+      clauseSubject(clause) === 'bias' && output.study !== null && Boolean(input.data),
   )
   return onMean.sort((a, b) => urgency[a.output.verdict] - urgency[b.output.verdict])[0] ?? null
 }

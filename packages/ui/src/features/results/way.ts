@@ -1,151 +1,23 @@
-import {
-  type BiasOutput,
-  type CalibrationWindow,
-  type ClauseOf,
-  type ClauseType,
-  marginInUnit,
-  type Margin,
-} from '@evenrule/metrology'
-import { decimalPlaces, formatDate, formatInterval, formatNumber, formatShare } from '../../format'
+import { marginInUnit, type CalibrationWindow, type ClauseType } from '@evenrule/metrology'
+import { formatDate, formatNumber, formatShare } from '../../format'
 import { shiftDecimal } from '../../format/numbers'
 import { wayWords as words } from '../../strings/results'
-import { atMostComparison, intervalComparison } from './comparisons'
-import { figureDigits } from './digits'
+import { verdictWords } from '../../strings/verdicts'
+import { atMostComparison } from './comparisons'
 import type { ClauseResult } from './types'
+import { indexWay, intervalWay, pointWay, withUncertaintyWay, zeroTestWay } from './wayOfBias'
+import { count, numberOf, step, writers, yesNo, type Of, type WayStep } from './waySteps'
 
-/** One line of the way from the readings to a figure. */
-export interface WayStep {
-  label: string
-  /** In plain notation; empty for what is a fact rather than computed. */
-  formula: string
-  figure: string
-}
+export type { WayStep } from './waySteps'
 
-type Judged = Pick<ClauseResult, 'input' | 'output'>
-type Of<T extends ClauseType> = Omit<ClauseResult, 'clause'> & { clause: ClauseOf<T> }
 type Ways = { [T in ClauseType]: (result: Of<T>) => WayStep[] }
-
-const step = (label: string, formula: string, figure: string): WayStep => ({ label, formula, figure })
-const count = (value: number | null): string => formatNumber(value)
-const yesNo = (value: boolean): string => (value ? words.yes : words.no)
-
-/** Writers of figures in the unit; working figures carry one place more than the row shows. */
-function writers({ input, output }: Judged) {
-  const digits = figureDigits({ input, output })
-  const { unit } = input
-  return {
-    digits,
-    figure: (value: number | null) => formatNumber(value, { unit, digits: digits + 1 }),
-    entered: (value: number | null) =>
-      formatNumber(value, { unit, digits: value === null ? 0 : Math.max(digits - 1, decimalPlaces(value)) }),
-    plain: (value: number) => formatNumber(value),
-    limit: (value: number | null) => formatNumber(value, { unit }),
-  }
-}
-
-/** What every clause on the mean of a bias study shares: from the readings to the standard error. */
-function commonSteps(result: Judged, study: BiasOutput): WayStep[] {
-  const { figure, entered } = writers(result)
-  return [
-    step(words.readings, words.readingsFormula, count(study.n)),
-    step(words.mean, words.meanFormula, figure(study.mean)),
-    step(words.reference, words.referenceFormula, entered(study.reference.value)),
-    step(words.bias, words.biasFormula, figure(study.bias)),
-    step(words.deviation, words.deviationFormula, figure(study.standardDeviation)),
-    step(words.error, words.errorFormula, figure(study.standardError)),
-    step(words.freedom, words.freedomFormula, count(study.degreesOfFreedom)),
-  ]
-}
-
-/** A margin formed from what was agreed. */
-function marginStep(margin: Margin, { input, output }: Judged): WayStep {
-  const { limit, plain } = writers({ input, output })
-  const inUnit = output.study?.equivalence.margin ?? numberOf(output.limits?.upper)
-  const share = margin.base === 'absolute' ? '' : formatShare(margin.share)
-  const { tolerance, processStandardDeviation: sigma } = input
-  const formula =
-    margin.base === 'absolute'
-      ? margin.unit === input.unit
-        ? words.marginAbsolute
-        : words.marginConverted(formatNumber(margin.value, { unit: margin.unit }))
-      : margin.base === 'tolerance'
-        ? words.marginTolerance(share, written(tolerance?.upper, plain), written(tolerance?.lower, plain))
-        : words.marginProcess(share, written(sigma, plain))
-  return step(words.margin, formula, inUnit === null ? words.notDefined : `±${limit(inUnit)}`)
-}
-
-const written = (value: number | undefined, write: (value: number) => string): string =>
-  value === undefined ? words.notDefined : write(value)
-const numberOf = (value: unknown): number | null => (typeof value === 'number' ? value : null)
-
-const probabilityText = (alpha: number): string => formatNumber(1 - alpha, { digits: decimalPlaces(alpha) })
-const quantile = (alpha: number, df: number): string => words.quantileFormula(probabilityText(alpha), df)
-const critical = (value: number | null): string => formatNumber(value, { digits: 4 })
-const pText = (value: number | null): string =>
-  value === null ? words.notDefined : value < 0.0001 ? '< 0.0001' : formatNumber(value, { digits: 4 })
-
-function equivalence(result: Of<'bias-equivalence'>): WayStep[] {
-  const { clause, output, input } = result
-  const { study } = output
-  const margin = marginStep(clause.parameters.margin, result)
-  if (!study) return [margin]
-  const { figure, digits, limit } = writers(result)
-  const { alpha, criticalValue, interval, pValue } = study.equivalence
-  const edge = study.equivalence.margin
-  const u = study.reference.standardUncertainty
-  const factor = study.withUncertainty.coverageFactor
-  const half =
-    criticalValue !== null && study.standardError !== null ? criticalValue * study.standardError : null
-  const confidence = formatShare(shiftDecimal(Math.round(shiftDecimal(1 - 2 * alpha, 6)), -6))
-  return [
-    ...commonSteps(result, study),
-    ...(interval && study.standardDeviation
-      ? [
-          step(words.quantileOneSided, quantile(alpha, study.degreesOfFreedom), critical(criticalValue)),
-          step(words.halfWidth, words.halfWidthFormula, figure(half)),
-          step(
-            words.interval(confidence),
-            words.intervalFormula,
-            formatInterval(interval, { unit: input.unit, digits: digits + 1 }),
-          ),
-          step(words.pValue, words.pLarger, pText(pValue)),
-        ]
-      : []),
-    margin,
-    ...(u !== null ? [step(words.uncertainty, words.uncertaintyFormula, limit(factor * u))] : []),
-    ...(output.interval && interval && edge !== null
-      ? [step(words.comparison, '', intervalComparison(interval.lower, interval.upper, edge, digits))]
-      : []),
-  ]
-}
-
-function zeroTest(result: Of<'bias-zero-test'>): WayStep[] {
-  const { study } = result.output
-  if (!study) return []
-  const { figure, digits } = writers(result)
-  const { alpha, criticalValue, allowedBias } = study.zeroTest
-  const tested =
-    allowedBias !== null && study.bias !== null && study.standardDeviation
-      ? [
-          step(words.quantileTwoSided, quantile(alpha / 2, study.degreesOfFreedom), critical(criticalValue)),
-          step(words.allowed, words.allowedFormula, `±${figure(allowedBias)}`),
-          step(words.pValue, words.pTwoSided, pText(study.pValue)),
-          step(
-            words.comparison,
-            words.absoluteFormula,
-            atMostComparison(Math.abs(study.bias), allowedBias, digits),
-          ),
-        ]
-      : []
-  return [...commonSteps(result, study), ...tested]
-}
 
 function resolution(result: Of<'resolution-share'>): WayStep[] {
   const { clause, input, output } = result
-  const { base, share } = clause.parameters
+  const { base, share, baseline } = clause.parameters
   const { entered } = writers(result)
   // The whole of the base is its width.
-  const width = marginInUnit({ base, share: 1 }, input)
+  const width = marginInUnit({ base, share: 1, ...(base === 'tolerance' && baseline && { baseline }) }, input)
   const figure = numberOf(output.figure)
   return [
     step(words.resolution, '', input.resolution === undefined ? words.unknown : entered(input.resolution)),
@@ -201,9 +73,30 @@ function calibration({ clause, input }: Of<'calibration-in-date'>): WayStep[] {
   ]
 }
 
+function byHand({ clause, input }: Of<'by-hand'>): WayStep[] {
+  const judged = input.byHand ?? null
+  return [
+    step(words.asks, '', clause.parameters.asks),
+    ...(judged
+      ? [
+          step(words.judgedAs, '', verdictWords[judged.verdict]),
+          step(words.judgedReason, '', judged.reason),
+          step(words.document, '', judged.documentSha256),
+        ]
+      : [step(words.document, '', words.noDocument)]),
+  ]
+}
+
 const ways: Ways = {
-  'bias-equivalence': equivalence,
-  'bias-zero-test': zeroTest,
+  'bias-equivalence': intervalWay,
+  'bias-interval-inside': intervalWay,
+  'bias-point': pointWay,
+  'bias-zero-test': zeroTestWay,
+  'bias-index': indexWay,
+  'bias-with-uncertainty': withUncertaintyWay,
+  'by-hand': byHand,
+  // It judges nothing, so there is no way to follow.
+  'does-not-apply': () => [],
   'resolution-share': resolution,
   'design-minimum': design,
   'calibration-in-date': calibration,

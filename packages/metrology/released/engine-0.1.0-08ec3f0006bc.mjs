@@ -9945,24 +9945,32 @@ function inUnits(numerator, denominator, exponent) {
 }
 
 // packages/metrology/src/kinds/bias-indices.ts
-function capabilityIndices(input, bias2, standardDeviation, n) {
-  const { tolerance, index: index2, confidence } = input;
-  if (tolerance?.lower === void 0 || tolerance.upper === void 0 || standardDeviation === null) {
-    return { cg: null, cgk: null, cgLowerBound: null, cgkLowerBound: null };
-  }
-  const width = subtract(rational(tolerance.upper), rational(tolerance.lower));
-  const allowance = multiply(rational(index2.share), width);
-  const room = toNumber(subtract(divide(allowance, rational(2)), absolute(rational(bias2))));
+var none = {
+  cg: null,
+  cgk: null,
+  cgLowerBound: null,
+  cgkLowerBound: null,
+  cgUpperBound: null,
+  cgkUpperBound: null
+};
+function capabilityIndices({ share, sigmas, width }, confidence, bias2, standardDeviation, n) {
+  if (!width || standardDeviation === null) return none;
+  const allowance2 = multiply(rational(share), width);
+  const room = subtract(divide(allowance2, rational(2)), absolute(rational(bias2)));
+  const spread = multiply(rational(sigmas), rational(standardDeviation));
   const df = n - 1;
-  const halfSpread = index2.sigmas / 2 * standardDeviation;
-  const cg = toNumber(allowance) / (2 * halfSpread);
-  const bound = chiSquareQuantile(complement(confidence), df) / df;
-  const observed = Math.sqrt(n) * (room / standardDeviation);
+  const alpha = complement(confidence);
+  const cg = toNumber(divide(allowance2, spread));
+  const boundOfCg = (p) => cg * Math.sqrt(chiSquareQuantile(p, df) / df);
+  const observed = Math.sqrt(n) * (toNumber(room) / standardDeviation);
+  const boundOfCgk = (p) => Number.isFinite(observed) ? noncentralityAt(observed, df, p) / Math.sqrt(n) / (sigmas / 2) : null;
   return {
     cg,
-    cgk: room / halfSpread,
-    cgLowerBound: cg * Math.sqrt(bound),
-    cgkLowerBound: Number.isFinite(observed) ? noncentralityAt(observed, df, confidence) / Math.sqrt(n) / (index2.sigmas / 2) : null
+    cgk: toNumber(divide(multiply(rational(2), room), spread)),
+    cgLowerBound: boundOfCg(alpha),
+    cgkLowerBound: boundOfCgk(confidence),
+    cgUpperBound: boundOfCg(confidence),
+    cgkUpperBound: boundOfCgk(alpha)
   };
 }
 
@@ -9977,7 +9985,8 @@ function readBias(reader) {
     reference: readReference(reader),
     index: {
       share: index2?.optionalNumber("share", { above: 0 }) ?? 0.2,
-      sigmas: index2?.optionalNumber("sigmas", { above: 0 }) ?? 6
+      sigmas: index2?.optionalNumber("sigmas", { above: 0 }) ?? 6,
+      ...given("width", index2?.optionalNumber("width", { above: 0 }))
     }
   };
 }
@@ -10001,7 +10010,9 @@ function bias(input) {
   const t = spread !== null && standardError ? estimate / standardError : null;
   const critical = n > 1 ? twoSidedCritical(alpha, degreesOfFreedom) : null;
   const halfWidth = critical !== null && standardError !== null ? critical * standardError : null;
-  const index2 = capabilityIndices(input, estimate, spread, n);
+  const width = input.index.width === void 0 ? toleranceWidth(input) : rational(input.index.width);
+  const { share, sigmas } = input.index;
+  const index2 = capabilityIndices({ share, sigmas, width }, confidence, estimate, spread, n);
   const uncertain = withUncertainty(input, of.variance, estimate, n);
   return {
     kind: "bias",
@@ -10026,7 +10037,7 @@ function bias(input) {
     intervalInside: {
       accepts: spread === null || halfWidth === null || margin === void 0 ? null : positionAgainstMargin(estimate, halfWidth, margin) === "inside"
     },
-    index: input.index,
+    index: { share, sigmas, width: width && toNumber(width) },
     ...index2,
     shareOfTolerance: shareOfTolerance(estimate, input),
     shareOfProcess: shareOfProcess(estimate, input),
@@ -10090,11 +10101,13 @@ function withUncertainty({ reference, coverageFactor, margin, resolution }, vari
     insideMargin: insideMargin()
   };
 }
-function shareOfTolerance(estimate, { tolerance }) {
-  if (tolerance?.lower === void 0 || tolerance.upper === void 0 || !Number.isFinite(estimate))
-    return null;
-  const width = subtract(rational(tolerance.upper), rational(tolerance.lower));
-  return toNumber(divide(absolute(rational(estimate)), width));
+function toleranceWidth({ tolerance }) {
+  const { lower, upper } = tolerance ?? {};
+  return lower === void 0 || upper === void 0 ? null : subtract(rational(upper), rational(lower));
+}
+function shareOfTolerance(estimate, input) {
+  const width = toleranceWidth(input);
+  return width && Number.isFinite(estimate) ? toNumber(divide(absolute(rational(estimate)), width)) : null;
 }
 function shareOfProcess(estimate, input) {
   if (input.processStandardDeviation === void 0 || !Number.isFinite(estimate)) return null;
@@ -10142,6 +10155,180 @@ function referenceWarnings(u, factor, margin) {
   ];
 }
 
+// packages/metrology/src/types/clauses.ts
+var subjects = [
+  "design",
+  "resolution",
+  "calibration",
+  "bias",
+  "linearity",
+  "stability",
+  "repeatability",
+  "attribute",
+  "uncertainty"
+];
+
+// packages/metrology/src/units/index.ts
+var unit = (symbol, quantity, numerator, denominator = 1) => ({
+  symbol,
+  quantity,
+  size: [numerator, denominator]
+});
+var units = [
+  unit("mm", "length", 1),
+  unit("µm", "length", 1, 1e3),
+  unit("nm", "length", 1, 1e6),
+  unit("cm", "length", 10),
+  unit("m", "length", 1e3),
+  unit("in", "length", 254, 10),
+  unit("°", "angle", 1),
+  unit("′", "angle", 1, 60),
+  unit("″", "angle", 1, 3600),
+  unit("g", "mass", 1),
+  unit("mg", "mass", 1, 1e3),
+  unit("kg", "mass", 1e3),
+  unit("N", "force", 1),
+  unit("mN", "force", 1, 1e3),
+  unit("kN", "force", 1e3),
+  unit("N·m", "torque", 1),
+  unit("N·cm", "torque", 1, 100),
+  unit("N·mm", "torque", 1, 1e3),
+  unit("Pa", "pressure", 1),
+  unit("kPa", "pressure", 1e3),
+  unit("MPa", "pressure", 1e6),
+  unit("mbar", "pressure", 100),
+  unit("bar", "pressure", 1e5),
+  unit("ml/min", "flow", 1),
+  unit("l/min", "flow", 1e3),
+  unit("s", "time", 1),
+  unit("ms", "time", 1, 1e3),
+  unit("min", "time", 60),
+  unit("°C", "temperature", 1),
+  unit("V", "voltage", 1),
+  unit("mV", "voltage", 1, 1e3),
+  unit("A", "current", 1),
+  unit("mA", "current", 1, 1e3),
+  unit("Ω", "resistance", 1),
+  unit("mΩ", "resistance", 1, 1e3),
+  unit("kΩ", "resistance", 1e3),
+  unit("HRC", "hardness-rockwell-c", 1),
+  unit("HV", "hardness-vickers", 1),
+  unit("%", "fraction", 1),
+  unit("‰", "fraction", 1, 10),
+  unit("1", "count", 1)
+];
+var bySymbol = new Map(units.map((each) => [each.symbol, each]));
+function findUnit(symbol) {
+  return bySymbol.get(symbol);
+}
+function convertExactly(value, from, to) {
+  if (from === to) return value;
+  const [source, target] = [findUnit(from), findUnit(to)];
+  if (!source || !target || source.quantity !== target.quantity) return null;
+  return divide(multiply(value, sizeOf(source)), sizeOf(target));
+}
+var sizeOf = ({ size: [numerator, denominator] }) => ({
+  numerator: BigInt(numerator),
+  denominator: BigInt(denominator)
+});
+
+// packages/metrology/src/clauses/baselines.ts
+var sigmasOfProcess = 6;
+function baselineWidth(base, of, agreed) {
+  if (base === "process") return processWidth(of);
+  const { lower, upper } = of.tolerance ?? {};
+  if (lower !== void 0 && upper !== void 0) return subtract(rational(upper), rational(lower));
+  return agreed && isOneSided(of) ? agreedWidth(agreed, of) : null;
+}
+function processWidth({ processStandardDeviation: sigma }) {
+  return sigma === void 0 ? null : multiply(rational(sigmasOfProcess), rational(sigma));
+}
+var isOneSided = ({ tolerance }) => tolerance !== void 0 && tolerance.lower === void 0 !== (tolerance.upper === void 0);
+function agreedWidth(agreed, of) {
+  const width = formed(agreed, of);
+  return width && width.numerator > 0n ? width : null;
+}
+function formed(agreed, of) {
+  if (agreed.kind === "process") return processWidth(of);
+  if (agreed.kind === "absolute") return convertExactly(rational(agreed.value), agreed.unit, of.unit);
+  const { lower, upper } = of.tolerance ?? {};
+  const bound = rational(agreed.value);
+  if (upper !== void 0) return subtract(rational(upper), bound);
+  return lower === void 0 ? null : subtract(bound, rational(lower));
+}
+function missingBaseline(base) {
+  return base === "process" ? "no-process-spread" : "no-tolerance-width";
+}
+function baselineProblems(base, of, paths, agreed) {
+  if (agreed?.kind === "absolute" && !findUnit(agreed.unit))
+    return [unitProblem(agreed.unit, of, `${paths.agreed}.unit`)];
+  if (baselineWidth(base, of, agreed)) return [];
+  if (base === "tolerance" && agreed && isOneSided(of)) return [agreedProblem(agreed, of, paths.agreed)];
+  return [
+    {
+      code: missingBaseline(base),
+      path: paths.base,
+      message: base === "process" ? "No standard deviation of the process is known; name a share of tolerance or an absolute value instead." : "There is no two-sided tolerance to take a share of; agree what stands in for its width, or name a share of process variation or an absolute value instead."
+    }
+  ];
+}
+function agreedProblem(agreed, of, path) {
+  if (agreed.kind === "process") {
+    return {
+      code: "no-process-spread",
+      path: `${path}.kind`,
+      message: "No standard deviation of the process is known to stand in for the width of the tolerance."
+    };
+  }
+  if (agreed.kind === "absolute") return unitProblem(agreed.unit, of, `${path}.unit`);
+  const side = of.tolerance?.upper === void 0 ? "above the lower limit" : "below the upper limit";
+  return {
+    code: "bound-beyond-limit",
+    path: `${path}.value`,
+    message: `The natural bound must lie ${side} of the characteristic.`
+  };
+}
+function marginInUnit(margin, of) {
+  const exact = exactMargin(margin, of);
+  const value = exact && toNumber(exact);
+  return value !== null && value > 0 && Number.isFinite(value) ? value : null;
+}
+var agreedFor = (margin) => margin.base === "tolerance" ? margin.baseline : void 0;
+function exactMargin(margin, of) {
+  if (margin.base === "absolute") return convertExactly(rational(margin.value), margin.unit, of.unit);
+  const width = baselineWidth(margin.base, of, agreedFor(margin));
+  return width && multiply(rational(margin.share), width);
+}
+function marginProblems(margin, of, path) {
+  if (margin.base !== "absolute") {
+    const paths = { base: `${path}.base`, agreed: `${path}.baseline` };
+    const problems = baselineProblems(margin.base, of, paths, agreedFor(margin));
+    if (problems.length > 0) return problems;
+  }
+  const exact = exactMargin(margin, of);
+  if (exact)
+    return sizeProblems(toNumber(exact), of, `${path}.${margin.base === "absolute" ? "value" : "share"}`);
+  return margin.base === "absolute" ? [unitProblem(margin.unit, of, `${path}.unit`)] : [];
+}
+function unitProblem(unit2, of, path) {
+  return findUnit(unit2) ? {
+    code: "unit-of-another-quantity",
+    path,
+    message: `A value in ${unit2} cannot limit a characteristic in ${of.unit}.`
+  } : { code: "unit-unknown", path, message: `The unit ${unit2} is not in the list of units.` };
+}
+function sizeProblems(value, of, path) {
+  if (value > 0 && Number.isFinite(value)) return [];
+  const code = value > 0 ? "too-large" : "too-small";
+  return [
+    {
+      code,
+      path,
+      message: `The margin is ${code === "too-large" ? "too large" : "too small"} to be written in ${of.unit}.`
+    }
+  ];
+}
+
 // packages/metrology/src/input/bounds.ts
 var [smallest, largest] = [1e-100, 1e100];
 var positiveSize = { above: 0, least: smallest, most: largest };
@@ -10149,6 +10336,7 @@ var notNegativeSize = { least: 0, most: largest };
 var anySize = { least: -largest, most: largest };
 
 // packages/metrology/src/rules/band.ts
+var acceptedHalfWidth = (band2, s) => band2.largestSpread !== void 0 && s > band2.largestSpread ? -1 : band2.halfWidth(s);
 function linearBand(offset, slope) {
   return {
     halfWidth: (s) => offset + slope * s,
@@ -10178,7 +10366,44 @@ function rootSumOfSquares(a, b) {
   return large * Math.sqrt(1 + ratio * ratio);
 }
 
-// packages/metrology/src/rules/estimate-rules.ts
+// packages/metrology/src/rules/capability-index.ts
+var allowance = ({ share, toleranceWidth: toleranceWidth2 }) => share * toleranceWidth2 / 2;
+var halfSpread = ({ least, sigmas }) => least * sigmas / 2;
+function band(rule, n, p) {
+  const half = halfSpread(rule);
+  const factor = p === null ? half : noncentralTQuantile(p, n - 1, Math.sqrt(n) * half) / Math.sqrt(n);
+  const ofCg = rule.leastCg === void 0 ? null : 2 * allowance(rule) / (rule.leastCg * rule.sigmas);
+  const shrunk = p === null ? 1 : Math.sqrt(chiSquareQuantile(complement(p), n - 1) / (n - 1));
+  return {
+    ...linearBand(allowance(rule), -factor),
+    ...ofCg !== null && { largestSpread: ofCg * shrunk }
+  };
+}
+var index = {
+  type: "index",
+  read: (reader) => ({
+    type: "index",
+    share: reader.number("share", positiveSize),
+    sigmas: reader.number("sigmas", positiveSize),
+    least: reader.number("least", positiveSize),
+    toleranceWidth: reader.number("toleranceWidth", positiveSize),
+    ...given("leastCg", reader.optionalNumber("leastCg", positiveSize)),
+    ...given("alpha", reader.optionalNumber("alpha", { above: 0, most: 0.5 }))
+  }),
+  accepts: (rule, n) => band(rule, n, rule.alpha === void 0 ? null : complement(rule.alpha)),
+  refusesOutside: (rule, n) => rule.alpha === void 0 ? null : band(rule, n, rule.alpha),
+  referenceUncertainty: () => 0,
+  margin: allowance,
+  // A gauge whose true indices are at least those asked for.
+  largestSpread: (rule, bias2) => Math.min(
+    (allowance(rule) - Math.abs(bias2)) / halfSpread(rule),
+    rule.leastCg === void 0 ? Infinity : 2 * allowance(rule) / (rule.leastCg * rule.sigmas)
+  ),
+  stricter: (rule) => rule.alpha === void 0 ? null : { ...rule, alpha: rule.alpha / 2 },
+  powerOf: "meets"
+};
+
+// packages/metrology/src/rules/point.ts
 var point = {
   type: "point",
   read: (reader) => ({ type: "point", margin: reader.number("margin", positiveSize) }),
@@ -10187,24 +10412,6 @@ var point = {
   referenceUncertainty: () => 0,
   margin: ({ margin }) => margin,
   largestSpread: ({ margin }) => margin,
-  stricter: () => null,
-  powerOf: "meets"
-};
-var index = {
-  type: "index",
-  read: (reader) => ({
-    type: "index",
-    share: reader.number("share", positiveSize),
-    sigmas: reader.number("sigmas", positiveSize),
-    least: reader.number("least", positiveSize),
-    toleranceWidth: reader.number("toleranceWidth", positiveSize)
-  }),
-  accepts: (rule) => linearBand(rule.share * rule.toleranceWidth / 2, -(rule.least * rule.sigmas) / 2),
-  refusesOutside: () => null,
-  referenceUncertainty: () => 0,
-  margin: (rule) => rule.share * rule.toleranceWidth / 2,
-  // A gauge whose true index is at least the one asked for.
-  largestSpread: (rule, bias2) => (rule.share * rule.toleranceWidth / 2 - Math.abs(bias2)) / (rule.least * rule.sigmas / 2),
   stricter: () => null,
   powerOf: "meets"
 };
@@ -10361,25 +10568,25 @@ var located = ({ bias: bias2, standardDeviation }, n, reference) => ({
   spreadOfMean: rootSumOfSquares(standardDeviation / Math.sqrt(n), reference)
 });
 var reach = 9;
-function chanceInside(band, n) {
+function chanceInside(band2, n) {
   const df = n - 1;
   const support = spreadSupport(df);
   let plain = null;
   return (at) => {
     const { bias: bias2, standardDeviation, spreadOfMean } = at;
-    const sharp = sharpPoints(band, at, support);
+    const sharp = sharpPoints(band2, at, support);
     let nodes2;
     if (sharp.length > 0) {
-      nodes2 = spreadNodes(df, support, [...edges(band, standardDeviation), ...sharp]);
+      nodes2 = spreadNodes(df, support, [...edges(band2, standardDeviation), ...sharp]);
     } else {
       if (plain?.standardDeviation !== standardDeviation) {
-        plain = { standardDeviation, nodes: spreadNodes(df, support, edges(band, standardDeviation)) };
+        plain = { standardDeviation, nodes: spreadNodes(df, support, edges(band2, standardDeviation)) };
       }
       nodes2 = plain.nodes;
     }
     let sum = 0;
     for (const { v, weight } of nodes2) {
-      const h = band.halfWidth(standardDeviation * v);
+      const h = acceptedHalfWidth(band2, standardDeviation * v);
       if (h < 0) continue;
       const above = (h - bias2) / spreadOfMean;
       const below2 = (h + bias2) / spreadOfMean;
@@ -10389,20 +10596,20 @@ function chanceInside(band, n) {
     return Math.min(1, Math.max(0, sum));
   };
 }
-function edges(band, standardDeviation) {
-  const closed = band.spreadAt(0);
-  return (closed === null ? band.bends : [closed, ...band.bends]).map((s) => s / standardDeviation);
+function edges(band2, standardDeviation) {
+  const closed = [band2.spreadAt(0), band2.largestSpread].filter((s) => s !== null && s !== void 0);
+  return [...closed, ...band2.bends].map((s) => s / standardDeviation);
 }
-function sharpPoints(band, at, support) {
+function sharpPoints(band2, at, support) {
   const { bias: bias2, standardDeviation, spreadOfMean } = at;
   const slope = Math.abs(
-    band.halfWidth(standardDeviation * support.upper) - band.halfWidth(standardDeviation * support.lower)
+    band2.halfWidth(standardDeviation * support.upper) - band2.halfWidth(standardDeviation * support.lower)
   ) / ((support.upper - support.lower) * spreadOfMean);
   if (!(slope * support.panel > 6)) return [];
   const points = [];
   for (const side of [bias2, -bias2]) {
     for (let z = -reach; z <= reach; z += 4.5) {
-      const s = band.spreadAt(side + z * spreadOfMean);
+      const s = band2.spreadAt(side + z * spreadOfMean);
       if (s !== null) points.push(s / standardDeviation);
     }
   }
@@ -10482,135 +10689,6 @@ function readSampleSize(reader) {
   return { kind: "sampleSize", ...found, warnings: [] };
 }
 
-// packages/metrology/src/units/index.ts
-var unit = (symbol, quantity, numerator, denominator = 1) => ({
-  symbol,
-  quantity,
-  size: [numerator, denominator]
-});
-var units = [
-  unit("mm", "length", 1),
-  unit("µm", "length", 1, 1e3),
-  unit("nm", "length", 1, 1e6),
-  unit("cm", "length", 10),
-  unit("m", "length", 1e3),
-  unit("in", "length", 254, 10),
-  unit("°", "angle", 1),
-  unit("′", "angle", 1, 60),
-  unit("″", "angle", 1, 3600),
-  unit("g", "mass", 1),
-  unit("mg", "mass", 1, 1e3),
-  unit("kg", "mass", 1e3),
-  unit("N", "force", 1),
-  unit("mN", "force", 1, 1e3),
-  unit("kN", "force", 1e3),
-  unit("N·m", "torque", 1),
-  unit("N·cm", "torque", 1, 100),
-  unit("N·mm", "torque", 1, 1e3),
-  unit("Pa", "pressure", 1),
-  unit("kPa", "pressure", 1e3),
-  unit("MPa", "pressure", 1e6),
-  unit("mbar", "pressure", 100),
-  unit("bar", "pressure", 1e5),
-  unit("ml/min", "flow", 1),
-  unit("l/min", "flow", 1e3),
-  unit("s", "time", 1),
-  unit("ms", "time", 1, 1e3),
-  unit("min", "time", 60),
-  unit("°C", "temperature", 1),
-  unit("V", "voltage", 1),
-  unit("mV", "voltage", 1, 1e3),
-  unit("A", "current", 1),
-  unit("mA", "current", 1, 1e3),
-  unit("Ω", "resistance", 1),
-  unit("mΩ", "resistance", 1, 1e3),
-  unit("kΩ", "resistance", 1e3),
-  unit("HRC", "hardness-rockwell-c", 1),
-  unit("HV", "hardness-vickers", 1),
-  unit("%", "fraction", 1),
-  unit("‰", "fraction", 1, 10),
-  unit("1", "count", 1)
-];
-var bySymbol = new Map(units.map((each) => [each.symbol, each]));
-function findUnit(symbol) {
-  return bySymbol.get(symbol);
-}
-function convertExactly(value, from, to) {
-  if (from === to) return value;
-  const [source, target] = [findUnit(from), findUnit(to)];
-  if (!source || !target || source.quantity !== target.quantity) return null;
-  return divide(multiply(value, sizeOf(source)), sizeOf(target));
-}
-var sizeOf = ({ size: [numerator, denominator] }) => ({
-  numerator: BigInt(numerator),
-  denominator: BigInt(denominator)
-});
-
-// packages/metrology/src/clauses/baselines.ts
-var sigmasOfProcess = 6;
-function baselineWidth(base, of) {
-  if (base === "process") {
-    const sigma = of.processStandardDeviation;
-    return sigma === void 0 ? null : multiply(rational(sigmasOfProcess), rational(sigma));
-  }
-  const { lower, upper } = of.tolerance ?? {};
-  return lower === void 0 || upper === void 0 ? null : subtract(rational(upper), rational(lower));
-}
-function missingBaseline(base) {
-  return base === "process" ? "no-process-spread" : "no-tolerance-width";
-}
-function baselineProblems(base, of, path) {
-  if (baselineWidth(base, of)) return [];
-  return [
-    {
-      code: missingBaseline(base),
-      path,
-      message: base === "process" ? "No standard deviation of the process is known; name a share of tolerance or an absolute value instead." : "There is no two-sided tolerance to take a share of; name a share of process variation or an absolute value instead."
-    }
-  ];
-}
-function marginInUnit(margin, of) {
-  const exact = exactMargin(margin, of);
-  const value = exact && toNumber(exact);
-  return value !== null && value > 0 && Number.isFinite(value) ? value : null;
-}
-function exactMargin(margin, of) {
-  if (margin.base === "absolute") return convertExactly(rational(margin.value), margin.unit, of.unit);
-  const width = baselineWidth(margin.base, of);
-  return width && multiply(rational(margin.share), width);
-}
-function marginProblems(margin, of, path) {
-  const exact = exactMargin(margin, of);
-  if (exact)
-    return sizeProblems(toNumber(exact), of, `${path}.${margin.base === "absolute" ? "value" : "share"}`);
-  if (margin.base !== "absolute") return baselineProblems(margin.base, of, `${path}.base`);
-  const unitPath = `${path}.unit`;
-  return findUnit(margin.unit) ? [
-    {
-      code: "unit-of-another-quantity",
-      path: unitPath,
-      message: `A margin in ${margin.unit} cannot limit a characteristic in ${of.unit}.`
-    }
-  ] : [
-    {
-      code: "unit-unknown",
-      path: unitPath,
-      message: `The unit ${margin.unit} is not in the list of units.`
-    }
-  ];
-}
-function sizeProblems(value, of, path) {
-  if (value > 0 && Number.isFinite(value)) return [];
-  const code = value > 0 ? "too-large" : "too-small";
-  return [
-    {
-      code,
-      path,
-      message: `The margin is ${code === "too-large" ? "too large" : "too small"} to be written in ${of.unit}.`
-    }
-  ];
-}
-
 // packages/metrology/src/clauses/bias-facts.ts
 function biasFacts(study) {
   if (!study) return { code: "no-study" };
@@ -10627,6 +10705,12 @@ function biasFacts(study) {
     referenceStandardUncertainty: reference.standardUncertainty
   };
 }
+function factsWithin(margin, { study, coverageFactor }) {
+  const of = biasFacts(study);
+  if (isReason(of)) return of;
+  const u = of.referenceStandardUncertainty;
+  return u !== null && eatsMargin(u, coverageFactor, margin) ? { code: "reference-uncertainty-too-large", expandedUncertainty: coverageFactor * u, margin } : of;
+}
 var isReason = (value) => "code" in value;
 function notShown({ study }, limits, reason) {
   return {
@@ -10638,47 +10722,155 @@ function notShown({ study }, limits, reason) {
     reason
   };
 }
+function standardUncertaintyOf(of, u, facts) {
+  const evaluated = facts.study?.withUncertainty?.standardUncertainty;
+  if (evaluated != null) return evaluated;
+  const square = (value) => multiply(rational(value), rational(value));
+  const step = divide(square(facts.characteristic.resolution ?? 0), rational(12));
+  const spread = square(of.standardDeviation);
+  const larger = step.numerator * spread.denominator > spread.numerator * step.denominator ? step : spread;
+  return squareRoot(add(divide(larger, rational(of.n)), square(u)));
+}
+function readingsFor(rule, truth, power) {
+  const found = rule && sampleSize(rule, truth, power);
+  return found ? { readings: found.n, chance: found.power, reason: "size-found" } : { readings: null, chance: null, reason: "no-size-suffices" };
+}
 
-// packages/metrology/src/clauses/bias-equivalence.ts
+// packages/metrology/src/clauses/bias-index.ts
+var biasIndex = {
+  type: "bias-index",
+  subject: "bias",
+  measure: "index",
+  basis: "estimate",
+  basisOf: ({ parameters }) => parameters.basis,
+  studyKind: "bias",
+  fields: [
+    { name: "share", kind: "share", required: true, default: 0.2 },
+    { name: "base", kind: "choice", required: true, choices: ["tolerance", "process"], default: "tolerance" },
+    { name: "baseline", kind: "baseline", required: false },
+    { name: "sigmas", kind: "number", required: true, minimum: 1, maximum: 12, default: 6 },
+    {
+      name: "leastCg",
+      kind: "nullable-number",
+      required: false,
+      exclusiveMinimum: 0,
+      maximum: 100,
+      default: 1.33
+    },
+    {
+      name: "leastCgk",
+      kind: "number",
+      required: true,
+      exclusiveMinimum: 0,
+      maximum: 100,
+      default: 1.33
+    },
+    { name: "basis", kind: "choice", required: true, choices: ["estimate", "bound"], default: "bound" },
+    { name: "confidence", kind: "confidence", required: true, default: 0.95 }
+  ],
+  check: ({ parameters }, characteristic) => baselineProblems(
+    parameters.base,
+    characteristic,
+    { base: "parameters.base", agreed: "parameters.baseline" },
+    parameters.baseline
+  ),
+  rule: ({ parameters }, characteristic) => indexRule(parameters, characteristic),
+  options: ({ parameters }, characteristic) => {
+    const { share, sigmas, confidence } = parameters;
+    const width = widthOf(parameters, characteristic);
+    return { confidence, index: { share, sigmas, ...width && { width: toNumber(width) } } };
+  },
+  judge: ({ parameters }, facts) => {
+    const { share, sigmas, confidence, basis, base, leastCg, leastCgk } = parameters;
+    const limits = { lower: leastCgk, upper: null };
+    const asIndex = (judgement) => ({ ...judgement, figure: null, quantity: "ratio" });
+    const width = widthOf(parameters, facts.characteristic);
+    if (!width) return asIndex(notShown(facts, limits, { code: missingBaseline(base) }));
+    const most = toNumber(divide(multiply(rational(share), width), rational(2)));
+    const of = factsWithin(most, facts);
+    if (isReason(of)) return asIndex(notShown(facts, limits, of));
+    const found = capabilityIndices({ share, sigmas, width }, confidence, of.bias, of.standardDeviation, of.n);
+    const parts = partsOf(found, leastCg, leastCgk);
+    const judged = parts.map((part2) => ({ part: part2, ...basis === "bound" ? onBound(part2) : onEstimate(part2) }));
+    const decisive = judged.reduce(
+      (worst, each) => severity[each.verdict] > severity[worst.verdict] ? each : worst
+    );
+    const { part, verdict, code } = decisive;
+    return {
+      verdict,
+      figure: part.figure,
+      interval: basis === "bound" ? { lower: part.lower, upper: part.upper } : null,
+      limits: { lower: part.least, upper: null },
+      quantity: "ratio",
+      reason: { code, index: part.index, least: part.least, cg: found.cg, cgk: found.cgk }
+    };
+  },
+  readingsNeeded: ({ parameters }, characteristic, truth, power) => readingsFor(indexRule(parameters, characteristic), truth, power)
+};
+var severity = {
+  meets: 0,
+  "meets-with-conditions": 1,
+  "not-shown": 2,
+  "falls-short": 3
+};
+var widthOf = ({ base, baseline }, of) => baselineWidth(base, of, baseline);
+function indexRule(parameters, of) {
+  const { share, sigmas, leastCg, leastCgk, basis, confidence } = parameters;
+  const width = widthOf(parameters, of);
+  return width && {
+    type: "index",
+    share,
+    sigmas,
+    least: leastCgk,
+    toleranceWidth: toNumber(width),
+    ...leastCg !== null && { leastCg },
+    ...basis === "bound" && { alpha: complement(confidence) }
+  };
+}
+function partsOf(found, leastCg, leastCgk) {
+  const cgk = {
+    index: "cgk",
+    least: leastCgk,
+    figure: found.cgk ?? NaN,
+    lower: found.cgkLowerBound,
+    upper: found.cgkUpperBound
+  };
+  if (leastCg === null) return [cgk];
+  return [
+    cgk,
+    {
+      index: "cg",
+      least: leastCg,
+      figure: found.cg ?? NaN,
+      lower: found.cgLowerBound,
+      upper: found.cgUpperBound
+    }
+  ];
+}
+function onEstimate({ figure, least }) {
+  return figure >= least ? { verdict: "meets", code: "index-high-enough" } : { verdict: "falls-short", code: "index-too-low" };
+}
+function onBound({ lower, upper, least }) {
+  if (lower === null || upper === null) return { verdict: "not-shown", code: "not-representable" };
+  if (lower >= least) return { verdict: "meets", code: "index-bound-high-enough" };
+  return upper < least ? { verdict: "falls-short", code: "index-bound-too-low" } : { verdict: "not-shown", code: "index-bound-open" };
+}
+
+// packages/metrology/src/clauses/bias-intervals.ts
 var decided = {
   inside: { verdict: "meets", code: "interval-inside-margin" },
   outside: { verdict: "falls-short", code: "interval-outside-margin" },
   crosses: { verdict: "not-shown", code: "interval-crosses-margin" }
 };
-var biasEquivalence = {
-  type: "bias-equivalence",
-  subject: "bias",
-  measure: "mean",
-  basis: "bound",
-  studyKind: "bias",
-  fields: [
-    { name: "margin", kind: "margin", required: true, default: { base: "tolerance", share: 0.05 } },
-    { name: "confidence", kind: "confidence", required: true, default: 0.95 }
-  ],
-  check: ({ parameters }, characteristic) => marginProblems(parameters.margin, characteristic, "parameters.margin"),
-  rule: ({ parameters }, characteristic) => {
-    const margin = marginInUnit(parameters.margin, characteristic);
-    return margin === null ? null : { type: "equivalence", alpha: complement(parameters.confidence), margin };
-  },
-  options: ({ parameters }, characteristic) => {
-    const margin = marginInUnit(parameters.margin, characteristic);
-    return { confidence: parameters.confidence, ...margin === null ? {} : { margin } };
-  },
-  judge: ({ parameters }, facts) => {
-    const margin = marginInUnit(parameters.margin, facts.characteristic);
+function intervalClause(type, rule, critical) {
+  const ruleOf = (confidence, inUnit) => inUnit === null ? null : { type: rule, alpha: complement(confidence), margin: inUnit };
+  const judge2 = ({ margin: agreed, confidence }, facts) => {
+    const margin = marginInUnit(agreed, facts.characteristic);
     if (margin === null) return notShown(facts, null, { code: "margin-undefined" });
     const limits = { lower: -margin, upper: margin };
-    const of = biasFacts(facts.study);
+    const of = factsWithin(margin, facts);
     if (isReason(of)) return notShown(facts, limits, of);
-    const { referenceStandardUncertainty: u } = of;
-    if (u !== null && eatsMargin(u, facts.coverageFactor, margin)) {
-      return notShown(facts, limits, {
-        code: "reference-uncertainty-too-large",
-        expandedUncertainty: facts.coverageFactor * u,
-        margin
-      });
-    }
-    const halfWidth = oneSidedCritical(complement(parameters.confidence), of.n - 1) * of.standardError;
+    const halfWidth = critical(complement(confidence), of.n - 1) * of.standardError;
     const { verdict, code } = decided[positionAgainstMargin(of.bias, halfWidth, margin)];
     return {
       verdict,
@@ -10688,13 +10880,129 @@ var biasEquivalence = {
       quantity: "value",
       reason: { code, margin, halfWidth }
     };
+  };
+  return {
+    type,
+    subject: "bias",
+    measure: "mean",
+    basis: "bound",
+    studyKind: "bias",
+    fields: [
+      { name: "margin", kind: "margin", required: true, default: { base: "tolerance", share: 0.05 } },
+      { name: "confidence", kind: "confidence", required: true, default: 0.95 }
+    ],
+    check: ({ parameters }, characteristic) => marginProblems(parameters.margin, characteristic, "parameters.margin"),
+    rule: ({ parameters }, characteristic) => ruleOf(parameters.confidence, marginInUnit(parameters.margin, characteristic)),
+    options: ({ parameters }, characteristic) => {
+      const margin = marginInUnit(parameters.margin, characteristic);
+      return { confidence: parameters.confidence, ...margin === null ? {} : { margin } };
+    },
+    judge: ({ parameters }, facts) => judge2(parameters, facts),
+    readingsNeeded: ({ parameters }, characteristic, truth, power) => readingsFor(
+      ruleOf(parameters.confidence, marginInUnit(parameters.margin, characteristic)),
+      truth,
+      power
+    )
+  };
+}
+var biasEquivalence = intervalClause("bias-equivalence", "equivalence", oneSidedCritical);
+var biasIntervalInside = intervalClause("bias-interval-inside", "interval-inside", twoSidedCritical);
+
+// packages/metrology/src/clauses/bias-point.ts
+var biasPoint = {
+  type: "bias-point",
+  subject: "bias",
+  measure: "mean",
+  basis: "estimate",
+  studyKind: "bias",
+  fields: [{ name: "margin", kind: "margin", required: true, default: { base: "tolerance", share: 0.05 } }],
+  check: ({ parameters }, characteristic) => marginProblems(parameters.margin, characteristic, "parameters.margin"),
+  rule: ({ parameters }, characteristic) => {
+    const margin = marginInUnit(parameters.margin, characteristic);
+    return margin === null ? null : { type: "point", margin };
+  },
+  options: ({ parameters }, characteristic) => {
+    const margin = marginInUnit(parameters.margin, characteristic);
+    return margin === null ? {} : { margin };
+  },
+  judge: ({ parameters }, facts) => {
+    const margin = marginInUnit(parameters.margin, facts.characteristic);
+    if (margin === null) return notShown(facts, null, { code: "margin-undefined" });
+    const limits = { lower: -margin, upper: margin };
+    const of = factsWithin(margin, facts);
+    if (isReason(of)) return notShown(facts, limits, of);
+    const within = compare(absolute(rational(of.bias)), rational(margin)) <= 0;
+    return {
+      verdict: within ? "meets" : "falls-short",
+      figure: of.bias,
+      interval: null,
+      limits,
+      quantity: "value",
+      reason: { code: within ? "bias-within-margin" : "bias-beyond-margin", margin }
+    };
   },
   readingsNeeded: ({ parameters }, characteristic, truth, power) => {
     const margin = marginInUnit(parameters.margin, characteristic);
-    const found = margin === null ? null : sampleSize({ type: "equivalence", alpha: complement(parameters.confidence), margin }, truth, power);
-    return found ? { readings: found.n, chance: found.power, reason: "size-found" } : { readings: null, chance: null, reason: "no-size-suffices" };
+    return readingsFor(margin === null ? null : { type: "point", margin }, truth, power);
   }
 };
+
+// packages/metrology/src/clauses/bias-with-uncertainty.ts
+var biasWithUncertainty = {
+  type: "bias-with-uncertainty",
+  subject: "bias",
+  measure: "with-uncertainty",
+  basis: "bound",
+  studyKind: "bias",
+  fields: [
+    { name: "margin", kind: "margin", required: true, default: { base: "tolerance", share: 0.1 } },
+    { name: "coverageFactor", kind: "number", required: true, minimum: 1, maximum: 10, default: 2 }
+  ],
+  check: ({ parameters }, characteristic) => marginProblems(parameters.margin, characteristic, "parameters.margin"),
+  rule: ({ parameters }, characteristic, assumed) => uncertaintyRule(parameters, characteristic, assumed),
+  options: ({ parameters }, characteristic) => {
+    const margin = marginInUnit(parameters.margin, characteristic);
+    return { coverageFactor: parameters.coverageFactor, ...margin === null ? {} : { margin } };
+  },
+  judge: ({ parameters }, facts) => {
+    const { coverageFactor } = parameters;
+    const margin = marginInUnit(parameters.margin, facts.characteristic);
+    if (margin === null) return notShown(facts, null, { code: "margin-undefined" });
+    const limits = { lower: -margin, upper: margin };
+    const of = biasFacts(facts.study);
+    if (isReason(of)) return notShown(facts, limits, of);
+    const u = of.referenceStandardUncertainty;
+    if (u === null) return notShown(facts, limits, { code: "reference-uncertainty-unknown" });
+    if (eatsMargin(u, coverageFactor, margin)) {
+      const expandedUncertainty2 = coverageFactor * u;
+      return notShown(facts, limits, { code: "reference-uncertainty-too-large", expandedUncertainty: expandedUncertainty2, margin });
+    }
+    const standardUncertainty = standardUncertaintyOf(of, u, facts);
+    const room = toNumber(
+      divide(subtract(rational(margin), absolute(rational(of.bias))), rational(coverageFactor))
+    );
+    const { verdict, code } = against(standardUncertainty, room);
+    const expandedUncertainty = coverageFactor * standardUncertainty;
+    return {
+      verdict,
+      figure: of.bias,
+      interval: intervalAround(of.bias, expandedUncertainty),
+      limits,
+      quantity: "value",
+      reason: { code, margin, expandedUncertainty }
+    };
+  },
+  readingsNeeded: ({ parameters }, characteristic, truth, power, assumed) => readingsFor(uncertaintyRule(parameters, characteristic, assumed), truth, power)
+};
+function against(standardUncertainty, room) {
+  if (standardUncertainty <= room) return { verdict: "meets", code: "bias-with-uncertainty-inside" };
+  return room < -standardUncertainty ? { verdict: "falls-short", code: "bias-with-uncertainty-outside" } : { verdict: "not-shown", code: "bias-with-uncertainty-crosses" };
+}
+function uncertaintyRule({ margin: agreed, coverageFactor }, characteristic, assumed = {}) {
+  const margin = marginInUnit(agreed, characteristic);
+  const { referenceStandardUncertainty = 0 } = assumed;
+  return margin === null ? null : { type: "with-uncertainty", margin, referenceStandardUncertainty, coverageFactor };
+}
 
 // packages/metrology/src/clauses/bias-zero-test.ts
 var biasZeroTest = {
@@ -10725,6 +11033,36 @@ var biasZeroTest = {
   readingsNeeded: () => ({ readings: null, chance: null, reason: "size-does-not-help" })
 };
 
+// packages/metrology/src/clauses/by-hand.ts
+var undecided = {
+  verdict: "not-shown",
+  figure: null,
+  interval: null,
+  limits: null,
+  quantity: "value"
+};
+var byHand = {
+  type: "by-hand",
+  subject: null,
+  measure: null,
+  subjectOf: ({ parameters }) => parameters.subject,
+  keyOf: ({ parameters }) => `${parameters.subject}/by-hand/${slug(parameters.measure)}`,
+  basis: "document",
+  studyKind: null,
+  fields: [
+    { name: "subject", kind: "choice", required: true, choices: subjects, default: "repeatability" },
+    { name: "measure", kind: "text", required: true, longest: 60 },
+    { name: "asks", kind: "text", required: true, longest: 1e3, lines: true }
+  ],
+  check: () => [],
+  judge: (_clause, { byHand: judged }) => judged ? {
+    ...undecided,
+    verdict: judged.verdict,
+    reason: { code: "judged-by-hand", documentSha256: judged.documentSha256 }
+  } : { ...undecided, reason: { code: "no-document" } }
+};
+var slug = (title) => title.normalize("NFC").trim().toLowerCase().replace(/[\s/]+/g, "-");
+
 // packages/metrology/src/clauses/calibration-in-date.ts
 var calibrationInDate = {
   type: "calibration-in-date",
@@ -10738,7 +11076,7 @@ var calibrationInDate = {
   ],
   check: () => [],
   judge: ({ parameters }, { calibration }) => {
-    if (!calibration) return { ...undecided, reason: { code: "calibration-unknown" } };
+    if (!calibration) return { ...undecided2, reason: { code: "calibration-unknown" } };
     const items = asked(parameters, calibration);
     const day = calibration.collectedOn;
     const shown = { figure: day, interval: null, limits: sharedWindow(items), quantity: "date" };
@@ -10751,7 +11089,7 @@ var calibrationInDate = {
     return missing ? { ...shown, verdict: "not-shown", reason: { code: missing.unknown, collectedOn: day } } : { ...shown, verdict: "meets", reason: { code: "in-calibration", collectedOn: day } };
   }
 };
-var undecided = {
+var undecided2 = {
   verdict: "not-shown",
   figure: null,
   interval: null,
@@ -10818,46 +11156,6 @@ var designMinimum = {
   readingsNeeded: ({ parameters }) => ({ readings: parameters.readings, chance: null, reason: "minimum" })
 };
 
-// packages/metrology/src/clauses/fields.ts
-var boundsOfKind = {
-  share: { above: 0, most: 1 },
-  confidence: { least: 0.5, below: 1 },
-  alpha: { above: 0, below: 1 }
-};
-function fieldBounds(field) {
-  const own = {};
-  if (field.minimum !== void 0) own.least = field.minimum;
-  if (field.maximum !== void 0) own.most = field.maximum;
-  if (field.exclusiveMinimum !== void 0) own.above = field.exclusiveMinimum;
-  if (field.exclusiveMaximum !== void 0) own.below = field.exclusiveMaximum;
-  return { ...boundsOfKind[field.kind], ...own };
-}
-function readField(field, reader) {
-  if (!field.required && !reader.has(field.name)) return void 0;
-  switch (field.kind) {
-    case "integer":
-      return reader.integer(field.name, fieldBounds(field));
-    case "number":
-    case "share":
-    case "confidence":
-    case "alpha":
-      return reader.number(field.name, fieldBounds(field));
-    case "boolean":
-      return reader.boolean(field.name);
-    case "choice":
-      return reader.choice(field.name, field.choices ?? []);
-    case "margin":
-      return readMargin(reader.object(field.name));
-  }
-}
-function readMargin(reader) {
-  const base = reader.choice("base", ["tolerance", "process", "absolute"]);
-  if (base !== "absolute") return { base, share: reader.number("share", { above: 0, most: 1 }) };
-  const unit2 = reader.text("unit");
-  if (unit2 === "") throw new InvalidInput("missing", "Give the unit of the margin.", reader.at("unit"));
-  return { base, value: reader.number("value", { above: 0 }), unit: unit2 };
-}
-
 // packages/metrology/src/clauses/resolution-share.ts
 var resolutionShare = {
   type: "resolution-share",
@@ -10867,14 +11165,20 @@ var resolutionShare = {
   studyKind: null,
   fields: [
     { name: "share", kind: "share", required: true, default: 0.1 },
-    { name: "base", kind: "choice", required: true, choices: ["tolerance", "process"], default: "tolerance" }
+    { name: "base", kind: "choice", required: true, choices: ["tolerance", "process"], default: "tolerance" },
+    { name: "baseline", kind: "baseline", required: false }
   ],
-  check: ({ parameters }, characteristic) => baselineProblems(parameters.base, characteristic, "parameters.base"),
+  check: ({ parameters }, characteristic) => baselineProblems(
+    parameters.base,
+    characteristic,
+    { base: "parameters.base", agreed: "parameters.baseline" },
+    parameters.baseline
+  ),
   judge: ({ parameters }, { characteristic }) => {
-    const { base, share } = parameters;
+    const { base, share, baseline } = parameters;
     const limits = { lower: null, upper: share };
     const unknown = { verdict: "not-shown", figure: null, interval: null, limits, quantity: "share" };
-    const width = baselineWidth(base, characteristic);
+    const width = baselineWidth(base, characteristic, baseline);
     if (!width) return { ...unknown, reason: { code: missingBaseline(base) } };
     const { resolution } = characteristic;
     if (resolution === void 0) return { ...unknown, reason: { code: "resolution-unknown" } };
@@ -10891,21 +11195,139 @@ var resolutionShare = {
   }
 };
 
+// packages/metrology/src/clauses/does-not-apply.ts
+var computedKeys = [
+  designMinimum,
+  resolutionShare,
+  calibrationInDate,
+  biasEquivalence,
+  biasIndex,
+  biasWithUncertainty
+].map(({ subject, measure }) => `${subject}/${measure}`);
+var doesNotApply = {
+  type: "does-not-apply",
+  subject: null,
+  measure: null,
+  // A key begins with its subject; reading the clause has seen to that.
+  subjectOf: ({ parameters }) => parameters.key.split("/", 1)[0],
+  keyOf: ({ parameters }) => parameters.key,
+  basis: "document",
+  studyKind: null,
+  fields: [
+    { name: "key", kind: "clause-key", required: true, choices: computedKeys },
+    { name: "reason", kind: "text", required: true, longest: 1e3, lines: true }
+  ],
+  check: () => [],
+  judge: () => ({
+    verdict: "not-shown",
+    figure: null,
+    interval: null,
+    limits: null,
+    quantity: "value",
+    reason: { code: "does-not-apply" }
+  })
+};
+
+// packages/metrology/src/clauses/fields.ts
+var baselineKinds = ["natural-bound", "process", "absolute"];
+var longestKey = 100;
+var boundsOfKind = {
+  share: { above: 0, most: 1 },
+  confidence: { least: 0.5, below: 1 },
+  alpha: { above: 0, below: 1 }
+};
+function fieldBounds(field) {
+  const own = {};
+  if (field.minimum !== void 0) own.least = field.minimum;
+  if (field.maximum !== void 0) own.most = field.maximum;
+  if (field.exclusiveMinimum !== void 0) own.above = field.exclusiveMinimum;
+  if (field.exclusiveMaximum !== void 0) own.below = field.exclusiveMaximum;
+  return { ...boundsOfKind[field.kind], ...own };
+}
+function readField(field, reader) {
+  if (!field.required && !reader.has(field.name)) return field.kind === "nullable-number" ? null : void 0;
+  switch (field.kind) {
+    case "integer":
+      return reader.integer(field.name, fieldBounds(field));
+    case "number":
+    case "nullable-number":
+    case "share":
+    case "confidence":
+    case "alpha":
+      return reader.number(field.name, fieldBounds(field));
+    case "boolean":
+      return reader.boolean(field.name);
+    case "choice":
+      return reader.choice(field.name, field.choices ?? []);
+    case "text":
+      return readText(field, reader);
+    case "margin":
+      return readMargin(reader.object(field.name));
+    case "baseline":
+      return readBaseline(reader.object(field.name));
+    case "clause-key":
+      return readKey(field, reader);
+  }
+}
+function readText({ name, longest, lines }, reader) {
+  const given2 = reader.text(name).trim();
+  const text = lines ? given2 : given2.replace(/\s+/g, " ");
+  if (text === "") throw new InvalidInput("missing", `Give ${name}.`, reader.at(name));
+  if (longest !== void 0 && text.length > longest) {
+    throw new InvalidInput(
+      "too-long",
+      `Write at most ${longest} characters here; these are ${text.length}.`,
+      reader.at(name)
+    );
+  }
+  return text;
+}
+function readKey({ name, choices = [] }, reader) {
+  const key = reader.text(name);
+  const [subject, by, title, ...more] = key.split("/");
+  const judgedByHand = subjects.some((each) => each === subject) && by === "by-hand" && title && !more.length;
+  if (choices.includes(key) || judgedByHand && key.length <= longestKey) return key;
+  throw new InvalidInput("not-a-choice", `There is no clause with the key “${key}”.`, reader.at(name));
+}
+function readMargin(reader) {
+  const base = reader.choice("base", ["tolerance", "process", "absolute"]);
+  if (base === "absolute") return { base, ...readWithUnit(reader) };
+  const share = reader.number("share", { above: 0, most: 1 });
+  const baseline = base === "tolerance" ? reader.optionalObject("baseline") : void 0;
+  return base === "tolerance" && baseline ? { base, share, baseline: readBaseline(baseline) } : { base, share };
+}
+function readBaseline(reader) {
+  const kind = reader.choice("kind", baselineKinds);
+  if (kind === "process") return { kind };
+  return kind === "absolute" ? { kind, ...readWithUnit(reader) } : { kind, value: reader.number("value") };
+}
+function readWithUnit(reader) {
+  const unit2 = reader.text("unit");
+  if (unit2 === "") throw new InvalidInput("missing", "Give the unit of this value.", reader.at("unit"));
+  return { value: reader.number("value", { above: 0 }), unit: unit2 };
+}
+
 // packages/metrology/src/clauses/index.ts
 var clauseDescriptors = {
   "design-minimum": designMinimum,
   "resolution-share": resolutionShare,
   "calibration-in-date": calibrationInDate,
   "bias-equivalence": biasEquivalence,
-  "bias-zero-test": biasZeroTest
+  "bias-interval-inside": biasIntervalInside,
+  "bias-point": biasPoint,
+  "bias-zero-test": biasZeroTest,
+  "bias-index": biasIndex,
+  "bias-with-uncertainty": biasWithUncertainty,
+  "by-hand": byHand,
+  "does-not-apply": doesNotApply
 };
 var clauseTypes = Object.keys(clauseDescriptors);
 function clauseDescriptor(clause2) {
   return clauseDescriptors[clause2.type];
 }
 function clauseKey(clause2) {
-  const { subject, measure } = clauseDescriptors[clause2.type];
-  return `${subject}/${measure}`;
+  const descriptor = clauseDescriptor(clause2);
+  return descriptor.keyOf?.(clause2) ?? `${descriptor.subject}/${descriptor.measure}`;
 }
 function judgeClause(clause2, facts) {
   return clauseDescriptor(clause2).judge(clause2, facts);
@@ -10950,7 +11372,8 @@ function judge(reader) {
     design: readDesignFacts(reader),
     calibration: readCalibration(reader),
     study: readResult(reader),
-    coverageFactor: common2.coverageFactor
+    coverageFactor: common2.coverageFactor,
+    byHand: readByHand(reader)
   });
   return { kind: "judge", ...judgement, warnings: [] };
 }
@@ -10959,6 +11382,7 @@ function readResult(reader) {
   if (!source) return null;
   source.choice("kind", ["bias"]);
   const reference = source.optionalObject("reference")?.ignoreRest();
+  const uncertain = source.optionalObject("withUncertainty")?.ignoreRest();
   return {
     n: source.integer("n", { least: 1 }),
     bias: source.optionalNumber("bias") ?? null,
@@ -10966,8 +11390,25 @@ function readResult(reader) {
     reference: {
       value: reference?.optionalNumber("value") ?? 0,
       standardUncertainty: reference?.optionalNumber("standardUncertainty", { least: 0 }) ?? null
+    },
+    withUncertainty: {
+      standardUncertainty: uncertain?.optionalNumber("standardUncertainty", { least: 0 }) ?? null
     }
   };
+}
+var handVerdicts = ["meets", "falls-short", "not-shown"];
+function readByHand(reader) {
+  const source = reader.optionalObject("byHand");
+  if (!source) return null;
+  const documentSha256 = source.text("documentSha256");
+  if (!/^[0-9a-f]{64}$/.test(documentSha256)) {
+    throw new InvalidInput(
+      "not-a-hash",
+      "Write the SHA-256 of the document as 64 hexadecimal digits.",
+      source.at("documentSha256")
+    );
+  }
+  return { verdict: source.choice("verdict", handVerdicts), reason: source.text("reason"), documentSha256 };
 }
 function readDesignFacts(reader) {
   const source = reader.optionalObject("design");
@@ -11015,7 +11456,8 @@ function clause(reader) {
     design: readDesignFacts(reader),
     calibration: readCalibration(reader),
     study,
-    coverageFactor: common2.coverageFactor
+    coverageFactor: common2.coverageFactor,
+    byHand: readByHand(reader)
   });
   const needsStudy = clauseDescriptor(wanted).studyKind !== null;
   const warnings = needsStudy && study ? study.warnings : [];
@@ -11036,10 +11478,10 @@ function readStudy(reader, common2, options) {
   data.choice("kind", ["bias"]);
   return bias({
     ...common2,
+    index: { share: 0.2, sigmas: 6 },
     ...options,
     readings: data.numbers("readings", 1),
-    reference: readReference(data),
-    index: { share: 0.2, sigmas: 6 }
+    reference: readReference(data)
   });
 }
 

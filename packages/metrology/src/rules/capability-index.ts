@@ -1,0 +1,61 @@
+import { chiSquareQuantile, noncentralTQuantile } from '../distributions'
+import { positiveSize } from '../input/bounds'
+import { given } from '../input/common'
+import { complement } from '../statistics/mean-interval'
+import type { RuleOf } from '../types'
+import { linearBand, type Band } from './band'
+import type { RuleDescriptor } from './descriptor'
+
+type Index = RuleOf<'index'>
+
+/** What a bias may take up where there is no spread. */
+const allowance = ({ share, toleranceWidth }: Index): number => (share * toleranceWidth) / 2
+
+/** How many s beside the bias an index of `least` leaves no room for. */
+const halfSpread = ({ least, sigmas }: Index): number => (least * sigmas) / 2
+
+/**
+ * |bias| + factor·s ≤ allowance, and s at most what Cg allows. On the estimate the factor is least·sigmas/2; on a bound at
+ * `p` it is the tolerance factor t(p; n − 1, √n·least·sigmas/2)/√n of the noncentral t distribution, and the spread that
+ * Cg allows shrinks or grows by √(χ²(1 − p; n − 1)/(n − 1)), as the bounds of `capabilityIndices` do.
+ */
+function band(rule: Index, n: number, p: number | null): Band {
+  const half = halfSpread(rule)
+  const factor = p === null ? half : noncentralTQuantile(p, n - 1, Math.sqrt(n) * half) / Math.sqrt(n)
+  const ofCg = rule.leastCg === undefined ? null : (2 * allowance(rule)) / (rule.leastCg * rule.sigmas)
+  const shrunk = p === null ? 1 : Math.sqrt(chiSquareQuantile(complement(p), n - 1) / (n - 1))
+  return {
+    ...linearBand(allowance(rule), -factor),
+    ...(ofCg !== null && { largestSpread: ofCg * shrunk }),
+  }
+}
+
+/**
+ * Capability indices: Cgk = (share·T/2 − |bias|)/(sigmas·s/2) at least `least` and, where asked for, Cg =
+ * share·T/(sigmas·s) at least `leastCg`; on the estimate, or with alpha on one-sided bounds at 1 − alpha. On bounds it
+ * falls short where an upper bound stays below the least, otherwise wherever it does not meet.
+ */
+export const index: RuleDescriptor<'index'> = {
+  type: 'index',
+  read: (reader) => ({
+    type: 'index',
+    share: reader.number('share', positiveSize),
+    sigmas: reader.number('sigmas', positiveSize),
+    least: reader.number('least', positiveSize),
+    toleranceWidth: reader.number('toleranceWidth', positiveSize),
+    ...given('leastCg', reader.optionalNumber('leastCg', positiveSize)),
+    ...given('alpha', reader.optionalNumber('alpha', { above: 0, most: 0.5 })),
+  }),
+  accepts: (rule, n) => band(rule, n, rule.alpha === undefined ? null : complement(rule.alpha)),
+  refusesOutside: (rule, n) => (rule.alpha === undefined ? null : band(rule, n, rule.alpha)),
+  referenceUncertainty: () => 0,
+  margin: allowance,
+  // A gauge whose true indices are at least those asked for.
+  largestSpread: (rule, bias) =>
+    Math.min(
+      (allowance(rule) - Math.abs(bias)) / halfSpread(rule),
+      rule.leastCg === undefined ? Infinity : (2 * allowance(rule)) / (rule.leastCg * rule.sigmas),
+    ),
+  stricter: (rule) => (rule.alpha === undefined ? null : { ...rule, alpha: rule.alpha / 2 }),
+  powerOf: 'meets',
+}
