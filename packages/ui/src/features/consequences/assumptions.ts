@@ -5,6 +5,8 @@ import { shiftDecimal } from '../../format/numbers'
 export interface Assumptions {
   readings: number
   standardDeviation: number
+  /** Standard uncertainty of the reference value; counts for clauses that add it. */
+  referenceStandardUncertainty?: number
 }
 
 /** Stands for any characteristic where none is entered yet: its unit is one per cent of the tolerance. */
@@ -34,12 +36,31 @@ export function assumedSpread(characteristic: Characteristic, clauses: readonly 
     const width = marginInUnit({ base, share: 1 }, characteristic)
     if (width) return short(width / 60)
   }
-  for (const clause of clauses)
-    if (clause.type === 'bias-equivalence') {
-      const margin = marginInUnit(clause.parameters.margin, characteristic)
-      if (margin) return short(margin / 3)
+  const margin = firstMargin(characteristic, clauses)
+  return margin ? short(margin / 3) : 1
+}
+
+/** The margin of the first clause that has one, in the characteristic's unit. */
+function firstMargin(characteristic: Characteristic, clauses: readonly Clause[]): number | null {
+  for (const { parameters } of clauses)
+    if ('margin' in parameters) {
+      const margin = marginInUnit(parameters.margin, characteristic)
+      if (margin) return margin
     }
-  return 1
+  return null
+}
+
+/**
+ * A standard uncertainty of the reference value to assume before one is known: of a standard whose expanded uncertainty
+ * takes a tenth of the margin. Undefined where no clause adds it.
+ */
+export function assumedReference(
+  characteristic: Characteristic,
+  clauses: readonly Clause[],
+): number | undefined {
+  const adding = clauses.filter(({ type }) => type === 'bias-with-uncertainty')
+  const margin = firstMargin(characteristic, adding)
+  return adding.length === 0 ? undefined : margin ? short(margin / 20) : 0
 }
 
 /** The next finer unit, for figures that would begin with several zeros. */

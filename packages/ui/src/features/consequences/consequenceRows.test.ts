@@ -15,7 +15,7 @@ describe('the consequences of two rules', () => {
 
   it('stand on the same true biases', () => {
     const [before, after] = [effects.before, effects.after].map((effect) =>
-      effect?.computed.curve.map(({ bias }) => bias),
+      effect?.curve.map(({ bias }) => bias),
     )
     expect(before).toEqual(after)
     expect(before?.at(-1)).toBeCloseTo(1.6 * 0.0025)

@@ -1,20 +1,24 @@
 import {
   clauseDescriptor,
-  consequences,
   incentives,
   type Characteristic,
   type Clause,
-  type Consequences,
+  type CurvePoint,
   type IncentiveChange,
-  type Truth,
+  type IncentivesOutput,
+  type Rule,
 } from '@evenrule/metrology'
 import { describeIncentive, type IncentiveSentence } from '../../strings/incentives'
 import type { Assumptions } from './assumptions'
+import { biasCurve, biasReach, meantMargin, ruleOf, steps } from './chances'
 
 /** What one clause does, with its incentives in words. */
 export interface ClauseEffect {
   clause: Clause
-  computed: Consequences
+  rule: Rule
+  /** Chances of the three verdicts against the true bias. */
+  curve: CurvePoint[]
+  found: IncentivesOutput
   incentives: IncentiveRow[]
   /** It rewards the wrong thing somewhere. */
   perverse: boolean
@@ -22,74 +26,75 @@ export interface ClauseEffect {
 
 export interface IncentiveRow extends IncentiveSentence {
   kind: IncentiveChange
-  /** The true bias at which the chances are given. */
+  /** The true bias and the true spread at which the chances are given. */
   bias: number
+  spread: number
+  /** Chances to meet the clause before and after the change. */
+  before: number
+  after: number
 }
 
 /** Whether the chance to meet a clause can be computed: it has consequences to be seen before signing. */
 export const hasConsequences = (clause: Clause): boolean => clauseDescriptor(clause).rule !== undefined
 
-const ruleMargin = ({ rule }: Pick<Consequences, 'rule'>): number | null =>
-  'margin' in rule ? rule.margin : null
-
-const isWrong = ({ incentives: found }: Consequences, change: IncentiveChange): boolean =>
+const isWrong = (found: IncentivesOutput, change: IncentiveChange): boolean =>
   ({
     'worse-repeatability': found.worseRepeatabilityHelps,
     'more-readings': found.moreReadingsHurt,
     'stricter-risk': found.stricterRiskHelps === true,
   })[change]
 
-/** The bias of the curve at which the chance to meet the clause is nearest to one half: where a change shows most. */
-const tellingBias = ({ curve }: Consequences): number =>
-  curve.reduce((near, point) => (Math.abs(point.meets - 0.5) < Math.abs(near.meets - 0.5) ? point : near))
-    .bias
+type Shown = IncentivesOutput['shown'][number]
+
+/** Which way the chance to meet a sound clause goes. */
+const soundSign: Record<IncentiveChange, 1 | -1> = {
+  'worse-repeatability': -1,
+  'more-readings': 1,
+  'stricter-risk': -1,
+}
+const soundly = ({ change, before, after }: Shown): number => soundSign[change] * (after - before)
+
+/** At the assumed spread, the true bias of those the rule is meant to accept at which each change shows most. */
+function telling(rule: Rule, { readings, standardDeviation }: Assumptions): Map<IncentiveChange, Shown> {
+  const reach = meantMargin(rule) ?? 3 * standardDeviation
+  const most = new Map<IncentiveChange, Shown>()
+  for (const bias of steps(0.95 * reach, 12))
+    for (const shown of incentives(rule, readings, { bias, standardDeviation }).shown) {
+      const best = most.get(shown.change)
+      if (!best || soundly(shown) > soundly(best)) most.set(shown.change, shown)
+    }
+  return most
+}
 
 /**
  * The incentive check of one clause. What is wrong is shown at the truth where it is worst, as computed over all the
- * rule is meant to accept; what is right at the assumed spread, where the chance is about one half.
+ * rule is meant to accept; what is right at the assumed spread, at the bias where it shows most.
  */
-function incentiveRows(computed: Consequences, { readings, standardDeviation }: Assumptions): IncentiveRow[] {
-  const telling: Truth = { bias: tellingBias(computed), standardDeviation }
-  const atTelling = incentives(computed.rule, readings, telling).shown
-  return computed.incentives.shown.map((worst) => {
-    const wrong = isWrong(computed, worst.change)
-    const shown = wrong ? worst : (atTelling.find(({ change }) => change === worst.change) ?? worst)
+export function incentiveRows(
+  rule: Rule,
+  assumptions: Assumptions,
+  found: IncentivesOutput = incentives(rule, assumptions.readings),
+): IncentiveRow[] {
+  const { standardDeviation } = assumptions
+  const right = telling(rule, assumptions)
+  return found.shown.map((worst) => {
+    const wrong = isWrong(found, worst.change)
+    const { change, truth, before, after } = wrong ? worst : (right.get(worst.change) ?? worst)
     // A rule without a margin knows the bias in spreads only.
-    const scale =
-      wrong && ruleMargin(computed) === null ? standardDeviation / worst.truth.standardDeviation : 1
+    const scale = wrong && meantMargin(rule) === null ? standardDeviation / truth.standardDeviation : 1
     return {
-      kind: shown.change,
-      bias: shown.truth.bias * scale,
-      ...describeIncentive(shown.change, shown.before, shown.after),
+      kind: change,
+      bias: truth.bias * scale,
+      spread: truth.standardDeviation * scale,
+      before,
+      after,
+      ...describeIncentive(change, before, after),
       wrong,
     }
   })
 }
 
-/** True biases of the curves: from none to beyond what matters to any of the clauses compared. */
-function sharedBiases(
-  clauses: readonly Clause[],
-  characteristic: Characteristic,
-  standardDeviation: number,
-): number[] {
-  const most = Math.max(
-    2.4 * standardDeviation,
-    ...clauses.map((clause) => {
-      const rule = clauseDescriptor(clause).rule?.(clause, characteristic)
-      return rule && 'margin' in rule ? 1.6 * rule.margin : 0
-    }),
-  )
-  return Array.from({ length: 101 }, (_, at) => (most * at) / 100)
-}
-
-/** Numbers of readings from a few to four times the planned one; with two or three the zero test allows anything. */
-function numbersOfReadings(planned: number): number[] {
-  const sizes = new Set([planned])
-  const most = Math.max(50, 4 * planned)
-  for (let size = Math.min(5, planned); size <= most; size = Math.max(size + 1, Math.round(size * 1.1)))
-    sizes.add(size)
-  return [...sizes].sort((a, b) => a - b)
-}
+const curvePoints = 200
 
 /** The effects of the clause in force and of the one proposed for it, on the same biases; null without a rule. */
 export function clauseEffects(
@@ -97,18 +102,30 @@ export function clauseEffects(
   characteristic: Characteristic,
   assumptions: Assumptions,
 ): { before: ClauseEffect | null; after: ClauseEffect | null } {
-  const clauses = [pair.before, pair.after].filter((clause) => clause !== null)
-  const biases = sharedBiases(clauses, characteristic, assumptions.standardDeviation)
-  const sizes = numbersOfReadings(assumptions.readings)
-  const effect = (clause: Clause | null): ClauseEffect | null => {
-    const computed = clause && consequences({ clause, characteristic, biases, sizes, ...assumptions })
-    if (!computed) return null
-    const rows = incentiveRows(computed, assumptions)
-    return { clause, computed, incentives: rows, perverse: rows.some(({ wrong }) => wrong) }
+  const rule = (clause: Clause | null) => clause && ruleOf(clause, characteristic, assumptions)
+  const rules = { before: rule(pair.before), after: rule(pair.after) }
+  const known = [rules.before, rules.after].filter((each) => each !== null)
+  const biases = steps(biasReach(known, assumptions.standardDeviation), curvePoints)
+  const effect = (which: 'before' | 'after'): ClauseEffect | null => {
+    const [clause, of] = [pair[which], rules[which]]
+    if (!clause || !of) return null
+    const found = incentives(of, assumptions.readings)
+    const rows = incentiveRows(of, assumptions, found)
+    return {
+      clause,
+      rule: of,
+      curve: biasCurve(of, assumptions, biases),
+      found,
+      incentives: rows,
+      perverse: rows.some(({ wrong }) => wrong),
+    }
   }
-  return { before: effect(pair.before), after: effect(pair.after) }
+  return { before: effect('before'), after: effect('after') }
 }
 
 /** The margin to mark on a plot: the proposal's, else that of the clause in force. */
-export const shownMargin = (effects: ReturnType<typeof clauseEffects>): number | null =>
-  [effects.after, effects.before].map((effect) => effect && ruleMargin(effect.computed)).find(Boolean) ?? null
+export const shownMargin = (rules: {
+  before: { rule: Rule } | null
+  after: { rule: Rule } | null
+}): number | null =>
+  [rules.after, rules.before].map((each) => each && meantMargin(each.rule)).find(Boolean) ?? null

@@ -1,20 +1,24 @@
 import { formatChance, type Unit } from '../../format'
 import { comparisonWords as words } from '../../strings/agreements'
-import { biasText, ruleNames } from '../../strings/consequences'
+import { biasText, consequenceWords, ruleNames } from '../../strings/consequences'
 import type { ClauseEffect, clauseEffects } from './consequenceRows'
 import type { ClauseDifference } from '../agreements/differences'
 
 const wrongOf = (effect: ClauseEffect | null, unit: Unit): string | undefined => {
-  const worse = effect?.computed.incentives.worseRepeatabilityHelps
-    ? effect.incentives.find(({ kind }) => kind === 'worse-repeatability')
-    : undefined
-  const shown = effect?.computed.incentives.shown.find(({ change }) => change === 'worse-repeatability')
-  return effect && worse && shown
-    ? words.effects.worse(
+  const worse = effect?.incentives.find(({ kind, wrong }) => wrong && kind === 'worse-repeatability')
+  if (effect && worse)
+    return words.effects.worse(
+      ruleNames[effect.clause.type],
+      formatChance(worse.before),
+      formatChance(worse.after),
+      biasText(worse.bias, unit),
+    )
+  const more = effect?.incentives.find(({ kind, wrong }) => wrong && kind === 'more-readings')
+  return effect && more
+    ? consequenceWords.moreReadingsHurt(
         ruleNames[effect.clause.type],
-        formatChance(shown.before),
-        formatChance(shown.after),
-        biasText(worse.bias, unit),
+        formatChance(more.before),
+        formatChance(more.after),
       )
     : undefined
 }

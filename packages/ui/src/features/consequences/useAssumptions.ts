@@ -1,48 +1,99 @@
 import type { Characteristic, Clause } from '@evenrule/metrology'
 import { computed, ref } from 'vue'
 import { parseNumber } from '../../format'
+import { shiftDecimal } from '../../format/numbers'
 import { consequenceWords as words } from '../../strings/consequences'
-import { assumedSpread, plannedReadings, type Assumptions } from './assumptions'
+import { assumedReference, assumedSpread, plannedReadings, type Assumptions } from './assumptions'
 
-const mostReadings = 1000
+export const mostReadings = 1000
+export const leastReadings = 2
+const usualChance = 0.9
+
+/** A number that may be typed, with what counts while nothing good is. */
+interface Entry {
+  usual: number
+  /** The number as it is written in its field. */
+  text: (value: number) => string
+  /** The number that a text stands for, as it is computed with; undefined where it is not good. */
+  read: (typed: number) => number | undefined
+  problem: string
+}
+
+export type EntryName = 'readings' | 'spread' | 'reference' | 'bias' | 'chance'
+
+const plain = { text: String }
+const within = (least: number, most: number) => (value: number) =>
+  value >= least && value <= most ? value : undefined
 
 /**
- * The number of readings and the spread that consequences are computed for: sensible until somebody types others. An
- * entry that cannot be computed with keeps the last good figure and says what is wrong.
+ * Everything consequences are computed for: sensible until somebody types or drags others. An entry that cannot be
+ * computed with keeps the last good figure and says what is wrong.
  */
 export function useAssumptions(
   source: () => { after: readonly Clause[]; before: readonly Clause[]; characteristic: Characteristic },
 ) {
-  const typed = ref<{ readings?: string; spread?: string }>({})
-  const usual = computed<Assumptions>(() => {
+  const typed = ref<Partial<Record<EntryName, string>>>({})
+  const entries = computed<Record<EntryName, Entry>>(() => {
     const { after, before, characteristic } = source()
+    const clauses = [...after, ...before]
     return {
-      readings: Math.min(plannedReadings(after, before), mostReadings),
-      standardDeviation: assumedSpread(characteristic, [...after, ...before]),
+      readings: {
+        ...plain,
+        usual: Math.min(plannedReadings(after, before), mostReadings),
+        read: (value) => (Number.isInteger(value) ? within(leastReadings, mostReadings)(value) : undefined),
+        problem: words.readingsProblem,
+      },
+      spread: {
+        ...plain,
+        usual: assumedSpread(characteristic, clauses),
+        read: (value) => (value > 0 ? value : undefined),
+        problem: words.spreadProblem,
+      },
+      reference: {
+        ...plain,
+        usual: assumedReference(characteristic, clauses) ?? 0,
+        read: within(0, Infinity),
+        problem: words.notNegative,
+      },
+      bias: { ...plain, usual: 0, read: within(0, Infinity), problem: words.notNegative },
+      chance: {
+        usual: usualChance,
+        text: (value) => String(shiftDecimal(value, 2)),
+        read: (value) => within(0.01, 0.999)(shiftDecimal(value, -2)),
+        problem: words.chanceProblem,
+      },
     }
   })
-  const readings = computed(() => {
-    const value = typed.value.readings === undefined ? undefined : parseNumber(typed.value.readings).value
-    const good = value != null && Number.isInteger(value) && value >= 2 && value <= mostReadings
-    return { good: value === undefined || good, value: good ? value : usual.value.readings }
-  })
-  const spread = computed(() => {
-    const value = typed.value.spread === undefined ? undefined : parseNumber(typed.value.spread).value
-    const good = value != null && value > 0
-    return { good: value === undefined || good, value: good ? value : usual.value.standardDeviation }
+  const good = (name: EntryName): number | undefined => {
+    const text = typed.value[name]
+    const value = text === undefined ? undefined : parseNumber(text).value
+    return value == null ? undefined : entries.value[name].read(value)
+  }
+  const value = (name: EntryName): number => good(name) ?? entries.value[name].usual
+  const addsReference = computed(() => {
+    const { after, before, characteristic } = source()
+    return assumedReference(characteristic, [...after, ...before]) !== undefined
   })
   return {
     assumptions: computed<Assumptions>(() => ({
-      readings: readings.value.value,
-      standardDeviation: spread.value.value,
+      readings: value('readings'),
+      standardDeviation: value('spread'),
+      ...(addsReference.value ? { referenceStandardUncertainty: value('reference') } : {}),
     })),
-    readingsText: computed(() => typed.value.readings ?? String(usual.value.readings)),
-    spreadText: computed(() => typed.value.spread ?? String(usual.value.standardDeviation)),
-    typeReadings: (text: string) => void (typed.value = { ...typed.value, readings: text }),
-    typeSpread: (text: string) => void (typed.value = { ...typed.value, spread: text }),
-    readingsError: computed(() => (readings.value.good ? undefined : words.readingsProblem)),
-    spreadError: computed(() => (spread.value.good ? undefined : words.spreadProblem)),
-    /** Another characteristic: a spread typed for the one before means nothing there. */
-    forgetSpread: () => (typed.value = { readings: typed.value.readings }),
+    /** Whether a clause adds the uncertainty of the reference value, so that it must be assumed. */
+    addsReference,
+    /** The true bias of the gauge looked at, and the wanted chance to meet a clause. */
+    bias: computed(() => value('bias')),
+    chance: computed(() => value('chance')),
+    usual: (name: EntryName) => entries.value[name].usual,
+    text: (name: EntryName) => typed.value[name] ?? entries.value[name].text(entries.value[name].usual),
+    type: (name: EntryName, text: string) => void (typed.value = { ...typed.value, [name]: text }),
+    put: (name: EntryName, number: number) =>
+      void (typed.value = { ...typed.value, [name]: entries.value[name].text(number) }),
+    error: (name: EntryName) =>
+      typed.value[name] === undefined || good(name) !== undefined ? undefined : entries.value[name].problem,
+    /** Another characteristic: what was typed in the unit of the one before means nothing there. */
+    forgetValues: () => (typed.value = { readings: typed.value.readings, chance: typed.value.chance }),
   }
 }
+export type AssumptionsView = ReturnType<typeof useAssumptions>

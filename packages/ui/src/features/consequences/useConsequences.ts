@@ -64,9 +64,10 @@ export function useConsequences(
   return {
     ...entered,
     chosen,
+    characteristic,
     choose(id: string) {
       chosenId.value = id
-      entered.forgetSpread()
+      entered.forgetValues()
     },
     unit,
     pairs,
