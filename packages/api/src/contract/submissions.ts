@@ -146,6 +146,8 @@ export const submissionSchema = z.object({
   state,
   rowVersion: z.number().int(),
   ageDays: z.number().int(),
+  /** Today in the relationship's time zone, from which the days left of due dates count. */
+  today: calendarDate,
   relationshipId: uuid,
   taskId: uuid,
   partId: uuid,
