@@ -1,6 +1,8 @@
 import { z } from 'zod'
 import {
+  calendarDate,
   instant,
+  line,
   organisationParams,
   pageOf,
   pageQuery,
@@ -18,6 +20,7 @@ export const recordSubjects = [
   'submission',
   'challenge',
   'request',
+  'house-terms',
   'part',
   'characteristic',
   'measuring-task',
@@ -77,9 +80,28 @@ export const listEvents = defineEndpoint({
     subjectId: uuid.optional(),
     taskId: uuid.optional(),
     personId: uuid.optional(),
+    /** Events that name this clause, such as `bias/mean`. */
+    clauseKey: line(200).optional(),
+    /** First and last calendar day, in this organisation's time zone. */
+    from: calendarDate.optional(),
+    to: calendarDate.optional(),
   }),
   response: pageOf(recordEventSchema),
   summary: 'Events that this organisation may see on this side, the latest first.',
+})
+
+export const listRecordChoices = defineEndpoint({
+  method: 'get',
+  path: '/organisations/:organisationId/record/choices',
+  access: 'record.read',
+  params: organisationParams,
+  query: z.object({ chainId: uuid.optional() }),
+  response: z.object({
+    people: z.array(z.object({ id: uuid, name: z.string().nullable(), organisation: z.string().nullable() })),
+    tasks: z.array(z.object({ id: uuid, label: z.string() })),
+    clauseKeys: z.array(z.string()),
+  }),
+  summary: 'Whom, which measuring tasks and which clauses the events of a chain name, to filter by.',
 })
 
 /** How the record can be broken at an event. */
@@ -89,6 +111,8 @@ export const recordFaults = [
   'misplaced',
   'link-broken',
   'columns-changed',
+  /** The event is whole, but what it froze (a signed text, an evaluation) is no longer what it names. */
+  'frozen-changed',
   'added',
   'end-changed',
   'end-missing',

@@ -2,6 +2,7 @@ import { readdirSync, readFileSync } from 'node:fs'
 import { join } from 'node:path'
 import { agreementMoves } from '@evenrule/api/contract/moves/agreement-version'
 import { challengeMoves } from '@evenrule/api/contract/moves/challenge'
+import { houseTermsMoves } from '@evenrule/api/contract/moves/house-terms'
 import { requestMoves } from '@evenrule/api/contract/moves/request'
 import { studyMoves } from '@evenrule/api/contract/moves/study'
 import { submissionMoves } from '@evenrule/api/contract/moves/submission'
@@ -15,7 +16,7 @@ const namedInServices = (): string[] => {
     file.endsWith('.service.ts'),
   )
   const kind =
-    /'((?:agreement|study|submission|challenge|request|part|characteristic|measuring-task|gauge|reference-standard|calibration|member|organisation)\.[a-z-]+)'/g
+    /'((?:agreement|study|submission|challenge|request|house-terms|part|characteristic|measuring-task|gauge|reference-standard|calibration|member|organisation)\.[a-z-]+)'/g
   return files.flatMap((file) =>
     [...readFileSync(join(modules, file), 'utf8').matchAll(kind)].map(([, type]) => type ?? ''),
   )
@@ -23,6 +24,7 @@ const namedInServices = (): string[] => {
 const ofMoves = [
   ...agreementMoves,
   ...challengeMoves,
+  ...houseTermsMoves,
   ...requestMoves,
   ...studyMoves,
   ...submissionMoves,

@@ -6,6 +6,7 @@ const pages: Record<record.RecordSubject, { path: (id: string) => string; side?:
   submission: { path: (id) => `submissions/${id}` },
   challenge: { path: (id) => `submissions/${id}` },
   request: { path: (id) => `requests/${id}` },
+  'house-terms': { path: (id) => `house-terms/${id}`, side: 'customer' },
   part: { path: (id) => `parts/${id}` },
   characteristic: { path: (id) => `parts/${id}` },
   'measuring-task': { path: (id) => `tasks/${id}` },

@@ -1,48 +1,62 @@
-import { clauseKey, clauseTypes, type Clause } from '@evenrule/metrology'
+import { clauseKey } from '@evenrule/metrology'
 import type { readCriteria, ScopeKind } from '../../../contract/agreements'
 import type { AnswerInputOf, QueryOf } from '../../../contract/define'
+import type { ResolvedTerm, ResolvedTerms } from '../../../contract/terms'
 import type { Tenant } from '../../db/tenant'
 import { taskById } from '../parts/parts.lookup.service'
 import { relationshipById, todayIn } from '../relationships/relationships.lookup.service'
 import type { FrozenClause } from '../studies/studies.table'
+import { byCatalogue, isTakenAway, whatCounts, type Saying } from './agreements.apply'
 import { selectFirstDayInForce, selectInForce, type CriteriaScope } from './agreements.apply.repository'
 import { scopeKindOf } from './agreements.scope'
 import { readAgreementText } from './agreements.text'
 
 export type { CriteriaScope, FrozenClause }
 
-/** How wide a scope is; of two clauses with the same key the narrower scope's counts. */
-const width: Record<ScopeKind, number> = { relationship: 2, part: 1, characteristic: 0 }
+/** A signed version in force, as what rests on it names it. */
+export type VersionInForce = Omit<FrozenClause, 'clauseKey' | 'clause'>
 
-const place = ({ clause }: { clause: Clause }): number => clauseTypes.indexOf(clause.type)
-
-/**
- * The clauses that apply to a characteristic on a day, read from the text that both sides signed: of agreements in
- * force then, the narrower scope's in place of the wider's, in the order of the catalogue.
- */
-export async function criteriaFor(tenant: Tenant, scope: CriteriaScope): Promise<FrozenClause[]> {
-  const found = new Map<string, FrozenClause>()
-  for (const { agreement, version } of await selectInForce(tenant, scope)) {
+/** What every version in force on the day says, read from the text that both sides signed. */
+async function sayings(tenant: Tenant, scope: CriteriaScope): Promise<Saying<VersionInForce>[]> {
+  const inForce = await selectInForce(tenant, scope)
+  return inForce.map(({ agreement, version }) => {
     const { text, sha256, effectiveOn } = version
     if (agreement.number === null || version.number === null || !text || !sha256 || !effectiveOn)
-      throw new Error('A signed version lacks its numbers or its text.')
-    for (const clause of readAgreementText(text).clauses) {
-      const frozen: FrozenClause = {
-        clauseKey: clauseKey(clause),
-        clause,
-        agreementId: agreement.id,
-        agreementNumber: agreement.number,
-        versionId: version.id,
-        versionNumber: version.number,
-        versionSha256: sha256,
-        effectiveOn,
-        scope: scopeKindOf(agreement),
-      }
-      const known = found.get(frozen.clauseKey)
-      if (!known || width[frozen.scope] < width[known.scope]) found.set(frozen.clauseKey, frozen)
+      throw new Error('A signed version lacks its numbers, its day or its text.')
+    const { clauses, terms } = readAgreementText(text)
+    const kind: ScopeKind = scopeKindOf(agreement)
+    const source: VersionInForce = {
+      agreementId: agreement.id,
+      agreementNumber: agreement.number,
+      versionId: version.id,
+      versionNumber: version.number,
+      versionSha256: sha256,
+      effectiveOn,
+      scope: kind,
     }
-  }
-  return [...found.values()].sort((a, b) => place(a) - place(b))
+    return { scope: kind, clauses, terms, source }
+  })
+}
+
+/**
+ * The clauses that apply to a characteristic on a day: of agreements in force then, the narrower scope's in place of
+ * the wider's, without those that a narrower scope says do not apply; in the order of the catalogue.
+ */
+export async function criteriaFor(tenant: Tenant, scope: CriteriaScope): Promise<FrozenClause[]> {
+  const { clauses } = whatCounts(await sayings(tenant, scope))
+  return [...clauses.values()]
+    .filter(({ clause }) => !isTakenAway(clause))
+    .sort((a, b) => byCatalogue(a.clause, b.clause))
+    .map(({ clause, saying }) => ({ clauseKey: clauseKey(clause), clause, ...saying.source }))
+}
+
+/** The terms that hold for a characteristic on a day, field by field, with where each comes from. */
+export async function termsFor(
+  tenant: Tenant,
+  scope: CriteriaScope,
+): Promise<{ values: ResolvedTerms; from: ResolvedTerm<VersionInForce>[] }> {
+  const { values, from } = whatCounts(await sayings(tenant, scope)).terms
+  return { values, from: from.map((term) => ({ ...term, source: term.source && term.source.source })) }
 }
 
 /**

@@ -28,6 +28,21 @@ export const agreementMessages = {
       comment,
     ],
   }),
+  clausesWithdrawn: (count: number, words: string): AgreementMessage => ({
+    subject:
+      count === 1
+        ? 'A clause was taken out of what is proposed'
+        : 'Clauses were taken out of what is proposed',
+    body: ['What is left stands as a new proposal. Accept it, or answer with a changed one.', words],
+  }),
+  commented: (text: string): AgreementMessage => ({
+    subject: 'A comment on what is being negotiated',
+    body: [text],
+  }),
+  everythingMarked: {
+    subject: 'Everything you proposed is marked as accepted',
+    body: ['What is left is that the other side accepts it as a whole; then both sides sign.'],
+  } satisfies AgreementMessage,
   accepted: (effectiveOn: string): AgreementMessage => ({
     subject: 'Criteria are agreed and wait for signatures',
     body: [

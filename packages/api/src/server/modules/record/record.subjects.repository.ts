@@ -3,6 +3,7 @@ import type { RecordSubject } from '../../../contract/record'
 import type { Tenant } from '../../db/tenant'
 import { agreements, agreementVersions } from '../agreements/agreements.table'
 import { gauges, referenceStandards } from '../gauges/gauges.table'
+import { houseTerms } from '../house-terms/house-terms.table'
 import { namesOfPeople } from '../organisations/people.repository'
 import { organisations } from '../organisations/organisations.table'
 import { characteristics, measuringTasks, parts } from '../parts/parts.table'
@@ -141,6 +142,13 @@ const finders: Record<RecordSubject, Finder> = {
       .from(requests)
       .where(inArray(requests.id, ids))
     return rows.map(({ id, number }) => ({ id, label: `${number}`, pageId: id }))
+  },
+  'house-terms': async ({ tx }, ids) => {
+    const rows = await tx
+      .select({ id: houseTerms.id, number: houseTerms.number })
+      .from(houseTerms)
+      .where(inArray(houseTerms.id, ids))
+    return rows.map(({ id, number }) => ({ id, label: number === null ? 'draft' : `${number}`, pageId: id }))
   },
   gauge: async ({ tx }, ids) => {
     const rows = await tx
