@@ -23,6 +23,13 @@ export {
   type CurvePoint,
 } from './consequences'
 export { evaluate, isError } from './evaluate'
+export {
+  gaugeAskedFor,
+  gaugeReasons,
+  type GaugeAskedFor,
+  type GaugeLimit,
+  type GaugeReason,
+} from './gauge-asked-for'
 export { InvalidInput } from './input/invalid-input'
 export { incentives } from './kinds/incentives'
 export { operatingCharacteristic } from './kinds/operating-characteristic'
@@ -32,3 +39,4 @@ export { studyKinds } from './studies'
 export { areCompatible, convert, findUnit, units, type Unit, type UnitQuantity } from './units'
 export { ENGINE_VERSION } from './version'
 export { whatWouldSettle, type Settling } from './what-would-settle'
+export { whatIf, whatIfInput, type WhatIf, type WhatIfChange } from './what-if'
