@@ -448,21 +448,37 @@ CREATE TABLE "study_tasks" (
 );
 --> statement-breakpoint
 ALTER TABLE "study_tasks" ENABLE ROW LEVEL SECURITY;--> statement-breakpoint
+CREATE TABLE "submission_by_hand" (
+	"org_id" uuid NOT NULL,
+	"relationship_id" uuid NOT NULL,
+	"submission_id" uuid NOT NULL,
+	"clause_key" text NOT NULL,
+	"verdict" text NOT NULL,
+	"reason" text NOT NULL,
+	"file_id" uuid NOT NULL,
+	"entered_by" uuid NOT NULL,
+	"entered_at" timestamp (3) with time zone NOT NULL,
+	CONSTRAINT "submission_by_hand_org_id_submission_id_clause_key_pk" PRIMARY KEY("org_id","submission_id","clause_key")
+);
+--> statement-breakpoint
+ALTER TABLE "submission_by_hand" ENABLE ROW LEVEL SECURITY;--> statement-breakpoint
 CREATE TABLE "submission_clauses" (
 	"id" uuid PRIMARY KEY NOT NULL,
 	"relationship_id" uuid NOT NULL,
 	"supplier_org_id" uuid NOT NULL,
 	"customer_org_id" uuid NOT NULL,
 	"submission_id" uuid NOT NULL,
+	"revision" integer NOT NULL,
 	"position" integer NOT NULL,
 	"clause_key" text NOT NULL,
+	"advisory" boolean NOT NULL,
 	"verdict" text NOT NULL,
 	"input_text" text NOT NULL,
 	"output_text" text NOT NULL,
 	"output_sha256" text NOT NULL,
 	"engine_version" text NOT NULL,
 	"engine_sha256" text NOT NULL,
-	CONSTRAINT "submission_clauses_key" UNIQUE("relationship_id","submission_id","clause_key")
+	CONSTRAINT "submission_clauses_key" UNIQUE("relationship_id","submission_id","revision","clause_key")
 );
 --> statement-breakpoint
 ALTER TABLE "submission_clauses" ENABLE ROW LEVEL SECURITY;--> statement-breakpoint
@@ -472,6 +488,7 @@ CREATE TABLE "submission_files" (
 	"supplier_org_id" uuid NOT NULL,
 	"customer_org_id" uuid NOT NULL,
 	"submission_id" uuid NOT NULL,
+	"revision" integer NOT NULL,
 	"role" text NOT NULL,
 	"name" text NOT NULL,
 	"content_type" text NOT NULL,
@@ -501,6 +518,7 @@ CREATE TABLE "submission_signatures" (
 	"side" text NOT NULL,
 	"user_id" uuid NOT NULL,
 	"meaning" text NOT NULL,
+	"revision" integer NOT NULL,
 	"sha256" text NOT NULL,
 	"decision_id" uuid,
 	"signed_at" timestamp (3) with time zone NOT NULL,
@@ -523,10 +541,13 @@ CREATE TABLE "submission_texts" (
 	"supplier_org_id" uuid NOT NULL,
 	"customer_org_id" uuid NOT NULL,
 	"submission_id" uuid NOT NULL,
+	"revision" integer NOT NULL,
+	"corrects" integer,
 	"text" text NOT NULL,
 	"sha256" text NOT NULL,
 	"frozen_at" timestamp (3) with time zone NOT NULL,
-	CONSTRAINT "submission_texts_relationship_id_submission_id_pk" PRIMARY KEY("relationship_id","submission_id")
+	CONSTRAINT "submission_texts_relationship_id_submission_id_revision_pk" PRIMARY KEY("relationship_id","submission_id","revision"),
+	CONSTRAINT "submission_texts_in_order" CHECK ((revision = 1 and corrects is null) or corrects = revision - 1)
 );
 --> statement-breakpoint
 ALTER TABLE "submission_texts" ENABLE ROW LEVEL SECURITY;--> statement-breakpoint
@@ -547,6 +568,7 @@ CREATE TABLE "submissions" (
 	"submitted_at" timestamp (3) with time zone,
 	"decided_at" timestamp (3) with time zone,
 	"withdrawal_reason" text,
+	"criteria" text,
 	"verdict" text,
 	"clauses_met" integer,
 	"clauses_total" integer,
@@ -555,7 +577,8 @@ CREATE TABLE "submissions" (
 	"row_version" integer DEFAULT 1 NOT NULL,
 	CONSTRAINT "submissions_relationship_id" UNIQUE("relationship_id","id"),
 	CONSTRAINT "submissions_number" UNIQUE("relationship_id","number"),
-	CONSTRAINT "submissions_signed_number" CHECK ((submitted_at is null) = (number is null))
+	CONSTRAINT "submissions_signed_number" CHECK ((submitted_at is null) = (number is null)),
+	CONSTRAINT "submissions_signed_criteria" CHECK ((submitted_at is null) = (criteria is null))
 );
 --> statement-breakpoint
 ALTER TABLE "submissions" ENABLE ROW LEVEL SECURITY;--> statement-breakpoint
@@ -567,8 +590,15 @@ CREATE TABLE "challenge_messages" (
 	"challenge_id" uuid NOT NULL,
 	"side" text NOT NULL,
 	"user_id" uuid NOT NULL,
+	"move" text NOT NULL,
+	"answer_kind" text,
 	"text" text NOT NULL,
-	"created_at" timestamp (3) with time zone NOT NULL
+	"revision" integer,
+	"agreement_id" uuid,
+	"version_id" uuid,
+	"what_if" text,
+	"created_at" timestamp (3) with time zone NOT NULL,
+	CONSTRAINT "challenge_messages_relationship_id" UNIQUE("relationship_id","id")
 );
 --> statement-breakpoint
 ALTER TABLE "challenge_messages" ENABLE ROW LEVEL SECURITY;--> statement-breakpoint
@@ -579,8 +609,11 @@ CREATE TABLE "challenges" (
 	"customer_org_id" uuid NOT NULL,
 	"submission_id" uuid NOT NULL,
 	"number" integer NOT NULL,
-	"clause_key" text NOT NULL,
+	"target" jsonb NOT NULL,
 	"reason_kind" text NOT NULL,
+	"revision" integer NOT NULL,
+	"due_on" date NOT NULL,
+	"laboratory" text,
 	"state" text NOT NULL,
 	"opened_by" uuid NOT NULL,
 	"opened_at" timestamp (3) with time zone NOT NULL,
@@ -593,6 +626,42 @@ CREATE TABLE "challenges" (
 );
 --> statement-breakpoint
 ALTER TABLE "challenges" ENABLE ROW LEVEL SECURITY;--> statement-breakpoint
+CREATE TABLE "condition_reports" (
+	"id" uuid PRIMARY KEY NOT NULL,
+	"relationship_id" uuid NOT NULL,
+	"supplier_org_id" uuid NOT NULL,
+	"customer_org_id" uuid NOT NULL,
+	"condition_id" uuid NOT NULL,
+	"move" text NOT NULL,
+	"side" text NOT NULL,
+	"user_id" uuid NOT NULL,
+	"text" text NOT NULL,
+	"created_at" timestamp (3) with time zone NOT NULL,
+	CONSTRAINT "condition_reports_relationship_id" UNIQUE("relationship_id","id")
+);
+--> statement-breakpoint
+ALTER TABLE "condition_reports" ENABLE ROW LEVEL SECURITY;--> statement-breakpoint
+CREATE TABLE "conditions" (
+	"id" uuid PRIMARY KEY NOT NULL,
+	"relationship_id" uuid NOT NULL,
+	"supplier_org_id" uuid NOT NULL,
+	"customer_org_id" uuid NOT NULL,
+	"submission_id" uuid NOT NULL,
+	"decision_id" uuid NOT NULL,
+	"number" integer NOT NULL,
+	"text" text NOT NULL,
+	"due_on" date NOT NULL,
+	"owner" text NOT NULL,
+	"follow_up" text NOT NULL,
+	"state" text NOT NULL,
+	"confirmed_at" timestamp (3) with time zone,
+	"row_version" integer DEFAULT 1 NOT NULL,
+	CONSTRAINT "conditions_relationship_id" UNIQUE("relationship_id","id"),
+	CONSTRAINT "conditions_number" UNIQUE("relationship_id","decision_id","number"),
+	CONSTRAINT "conditions_confirmed" CHECK ((state = 'confirmed') = (confirmed_at is not null))
+);
+--> statement-breakpoint
+ALTER TABLE "conditions" ENABLE ROW LEVEL SECURITY;--> statement-breakpoint
 CREATE TABLE "decisions" (
 	"id" uuid PRIMARY KEY NOT NULL,
 	"relationship_id" uuid NOT NULL,
@@ -601,18 +670,38 @@ CREATE TABLE "decisions" (
 	"submission_id" uuid NOT NULL,
 	"kind" text NOT NULL,
 	"state" text NOT NULL,
-	"conditions" text,
-	"conditions_due_on" date,
 	"reason" text DEFAULT '' NOT NULL,
+	"revision" integer NOT NULL,
 	"decided_by" uuid NOT NULL,
 	"decided_at" timestamp (3) with time zone NOT NULL,
 	"second_by" uuid,
 	"second_at" timestamp (3) with time zone,
 	"sent_back_reason" text,
+	"other_side_by" uuid,
+	"other_side_at" timestamp (3) with time zone,
+	"declined_reason" text,
 	CONSTRAINT "decisions_relationship_id" UNIQUE("relationship_id","id")
 );
 --> statement-breakpoint
 ALTER TABLE "decisions" ENABLE ROW LEVEL SECURITY;--> statement-breakpoint
+CREATE TABLE "review_files" (
+	"id" uuid PRIMARY KEY NOT NULL,
+	"relationship_id" uuid NOT NULL,
+	"supplier_org_id" uuid NOT NULL,
+	"customer_org_id" uuid NOT NULL,
+	"submission_id" uuid NOT NULL,
+	"message_id" uuid,
+	"report_id" uuid,
+	"side" text NOT NULL,
+	"name" text NOT NULL,
+	"content_type" text NOT NULL,
+	"size" integer NOT NULL,
+	"sha256" text NOT NULL,
+	"storage_key" text NOT NULL,
+	CONSTRAINT "review_files_of_one" CHECK (num_nonnulls(message_id, report_id) = 1)
+);
+--> statement-breakpoint
+ALTER TABLE "review_files" ENABLE ROW LEVEL SECURITY;--> statement-breakpoint
 CREATE TABLE "request_answers" (
 	"relationship_id" uuid NOT NULL,
 	"supplier_org_id" uuid NOT NULL,
@@ -843,17 +932,20 @@ ALTER TABLE "study_evaluations" ADD CONSTRAINT "study_evaluations_data_fk" FOREI
 ALTER TABLE "study_tasks" ADD CONSTRAINT "study_tasks_study_fk" FOREIGN KEY ("org_id","study_id") REFERENCES "public"."studies"("org_id","id") ON DELETE no action ON UPDATE no action;--> statement-breakpoint
 ALTER TABLE "study_tasks" ADD CONSTRAINT "study_tasks_task_fk" FOREIGN KEY ("relationship_id","task_id") REFERENCES "public"."measuring_tasks"("relationship_id","id") ON DELETE no action ON UPDATE no action;--> statement-breakpoint
 ALTER TABLE "study_tasks" ADD CONSTRAINT "study_tasks_relationship_fk" FOREIGN KEY ("relationship_id","org_id","customer_org_id") REFERENCES "public"."relationships"("id","supplier_org_id","customer_org_id") ON DELETE no action ON UPDATE no action;--> statement-breakpoint
+ALTER TABLE "submission_by_hand" ADD CONSTRAINT "submission_by_hand_submission_fk" FOREIGN KEY ("relationship_id","submission_id") REFERENCES "public"."submissions"("relationship_id","id") ON DELETE no action ON UPDATE no action;--> statement-breakpoint
+ALTER TABLE "submission_by_hand" ADD CONSTRAINT "submission_by_hand_file_fk" FOREIGN KEY ("org_id","file_id") REFERENCES "public"."files"("org_id","id") ON DELETE no action ON UPDATE no action;--> statement-breakpoint
 ALTER TABLE "submission_clauses" ADD CONSTRAINT "submission_clauses_submission_fk" FOREIGN KEY ("relationship_id","submission_id") REFERENCES "public"."submissions"("relationship_id","id") ON DELETE no action ON UPDATE no action;--> statement-breakpoint
 ALTER TABLE "submission_clauses" ADD CONSTRAINT "submission_clauses_relationship_fk" FOREIGN KEY ("relationship_id","supplier_org_id","customer_org_id") REFERENCES "public"."relationships"("id","supplier_org_id","customer_org_id") ON DELETE no action ON UPDATE no action;--> statement-breakpoint
 ALTER TABLE "submission_files" ADD CONSTRAINT "submission_files_submission_fk" FOREIGN KEY ("relationship_id","submission_id") REFERENCES "public"."submissions"("relationship_id","id") ON DELETE no action ON UPDATE no action;--> statement-breakpoint
 ALTER TABLE "submission_files" ADD CONSTRAINT "submission_files_relationship_fk" FOREIGN KEY ("relationship_id","supplier_org_id","customer_org_id") REFERENCES "public"."relationships"("id","supplier_org_id","customer_org_id") ON DELETE no action ON UPDATE no action;--> statement-breakpoint
 ALTER TABLE "submission_notes" ADD CONSTRAINT "submission_notes_submission_fk" FOREIGN KEY ("relationship_id","submission_id") REFERENCES "public"."submissions"("relationship_id","id") ON DELETE no action ON UPDATE no action;--> statement-breakpoint
 ALTER TABLE "submission_signatures" ADD CONSTRAINT "submission_signatures_decision_fk" FOREIGN KEY ("relationship_id","decision_id") REFERENCES "public"."decisions"("relationship_id","id") ON DELETE no action ON UPDATE no action;--> statement-breakpoint
-ALTER TABLE "submission_signatures" ADD CONSTRAINT "submission_signatures_submission_fk" FOREIGN KEY ("relationship_id","submission_id") REFERENCES "public"."submissions"("relationship_id","id") ON DELETE no action ON UPDATE no action;--> statement-breakpoint
+ALTER TABLE "submission_signatures" ADD CONSTRAINT "submission_signatures_text_fk" FOREIGN KEY ("relationship_id","submission_id","revision") REFERENCES "public"."submission_texts"("relationship_id","submission_id","revision") ON DELETE no action ON UPDATE no action;--> statement-breakpoint
 ALTER TABLE "submission_signatures" ADD CONSTRAINT "submission_signatures_relationship_fk" FOREIGN KEY ("relationship_id","supplier_org_id","customer_org_id") REFERENCES "public"."relationships"("id","supplier_org_id","customer_org_id") ON DELETE no action ON UPDATE no action;--> statement-breakpoint
 ALTER TABLE "submission_studies" ADD CONSTRAINT "submission_studies_submission_fk" FOREIGN KEY ("relationship_id","submission_id") REFERENCES "public"."submissions"("relationship_id","id") ON DELETE no action ON UPDATE no action;--> statement-breakpoint
 ALTER TABLE "submission_studies" ADD CONSTRAINT "submission_studies_study_fk" FOREIGN KEY ("org_id","study_id") REFERENCES "public"."studies"("org_id","id") ON DELETE no action ON UPDATE no action;--> statement-breakpoint
 ALTER TABLE "submission_studies" ADD CONSTRAINT "submission_studies_data_fk" FOREIGN KEY ("org_id","data_id") REFERENCES "public"."study_data"("org_id","id") ON DELETE no action ON UPDATE no action;--> statement-breakpoint
+ALTER TABLE "submission_texts" ADD CONSTRAINT "submission_texts_corrects_fk" FOREIGN KEY ("relationship_id","submission_id","corrects") REFERENCES "public"."submission_texts"("relationship_id","submission_id","revision") ON DELETE no action ON UPDATE no action;--> statement-breakpoint
 ALTER TABLE "submission_texts" ADD CONSTRAINT "submission_texts_submission_fk" FOREIGN KEY ("relationship_id","submission_id") REFERENCES "public"."submissions"("relationship_id","id") ON DELETE no action ON UPDATE no action;--> statement-breakpoint
 ALTER TABLE "submission_texts" ADD CONSTRAINT "submission_texts_relationship_fk" FOREIGN KEY ("relationship_id","supplier_org_id","customer_org_id") REFERENCES "public"."relationships"("id","supplier_org_id","customer_org_id") ON DELETE no action ON UPDATE no action;--> statement-breakpoint
 ALTER TABLE "submissions" ADD CONSTRAINT "submissions_task_fk" FOREIGN KEY ("relationship_id","task_id") REFERENCES "public"."measuring_tasks"("relationship_id","id") ON DELETE no action ON UPDATE no action;--> statement-breakpoint
@@ -862,8 +954,17 @@ ALTER TABLE "challenge_messages" ADD CONSTRAINT "challenge_messages_challenge_fk
 ALTER TABLE "challenge_messages" ADD CONSTRAINT "challenge_messages_relationship_fk" FOREIGN KEY ("relationship_id","supplier_org_id","customer_org_id") REFERENCES "public"."relationships"("id","supplier_org_id","customer_org_id") ON DELETE no action ON UPDATE no action;--> statement-breakpoint
 ALTER TABLE "challenges" ADD CONSTRAINT "challenges_submission_fk" FOREIGN KEY ("relationship_id","submission_id") REFERENCES "public"."submissions"("relationship_id","id") ON DELETE no action ON UPDATE no action;--> statement-breakpoint
 ALTER TABLE "challenges" ADD CONSTRAINT "challenges_relationship_fk" FOREIGN KEY ("relationship_id","supplier_org_id","customer_org_id") REFERENCES "public"."relationships"("id","supplier_org_id","customer_org_id") ON DELETE no action ON UPDATE no action;--> statement-breakpoint
+ALTER TABLE "condition_reports" ADD CONSTRAINT "condition_reports_condition_fk" FOREIGN KEY ("relationship_id","condition_id") REFERENCES "public"."conditions"("relationship_id","id") ON DELETE no action ON UPDATE no action;--> statement-breakpoint
+ALTER TABLE "condition_reports" ADD CONSTRAINT "condition_reports_relationship_fk" FOREIGN KEY ("relationship_id","supplier_org_id","customer_org_id") REFERENCES "public"."relationships"("id","supplier_org_id","customer_org_id") ON DELETE no action ON UPDATE no action;--> statement-breakpoint
+ALTER TABLE "conditions" ADD CONSTRAINT "conditions_decision_fk" FOREIGN KEY ("relationship_id","decision_id") REFERENCES "public"."decisions"("relationship_id","id") ON DELETE no action ON UPDATE no action;--> statement-breakpoint
+ALTER TABLE "conditions" ADD CONSTRAINT "conditions_submission_fk" FOREIGN KEY ("relationship_id","submission_id") REFERENCES "public"."submissions"("relationship_id","id") ON DELETE no action ON UPDATE no action;--> statement-breakpoint
+ALTER TABLE "conditions" ADD CONSTRAINT "conditions_relationship_fk" FOREIGN KEY ("relationship_id","supplier_org_id","customer_org_id") REFERENCES "public"."relationships"("id","supplier_org_id","customer_org_id") ON DELETE no action ON UPDATE no action;--> statement-breakpoint
 ALTER TABLE "decisions" ADD CONSTRAINT "decisions_submission_fk" FOREIGN KEY ("relationship_id","submission_id") REFERENCES "public"."submissions"("relationship_id","id") ON DELETE no action ON UPDATE no action;--> statement-breakpoint
 ALTER TABLE "decisions" ADD CONSTRAINT "decisions_relationship_fk" FOREIGN KEY ("relationship_id","supplier_org_id","customer_org_id") REFERENCES "public"."relationships"("id","supplier_org_id","customer_org_id") ON DELETE no action ON UPDATE no action;--> statement-breakpoint
+ALTER TABLE "review_files" ADD CONSTRAINT "review_files_message_fk" FOREIGN KEY ("relationship_id","message_id") REFERENCES "public"."challenge_messages"("relationship_id","id") ON DELETE no action ON UPDATE no action;--> statement-breakpoint
+ALTER TABLE "review_files" ADD CONSTRAINT "review_files_report_fk" FOREIGN KEY ("relationship_id","report_id") REFERENCES "public"."condition_reports"("relationship_id","id") ON DELETE no action ON UPDATE no action;--> statement-breakpoint
+ALTER TABLE "review_files" ADD CONSTRAINT "review_files_submission_fk" FOREIGN KEY ("relationship_id","submission_id") REFERENCES "public"."submissions"("relationship_id","id") ON DELETE no action ON UPDATE no action;--> statement-breakpoint
+ALTER TABLE "review_files" ADD CONSTRAINT "review_files_relationship_fk" FOREIGN KEY ("relationship_id","supplier_org_id","customer_org_id") REFERENCES "public"."relationships"("id","supplier_org_id","customer_org_id") ON DELETE no action ON UPDATE no action;--> statement-breakpoint
 ALTER TABLE "request_answers" ADD CONSTRAINT "request_answers_task_fk" FOREIGN KEY ("relationship_id","request_id","task_id") REFERENCES "public"."request_tasks"("relationship_id","request_id","task_id") ON DELETE no action ON UPDATE no action;--> statement-breakpoint
 ALTER TABLE "request_answers" ADD CONSTRAINT "request_answers_submission_fk" FOREIGN KEY ("relationship_id","submission_id") REFERENCES "public"."submissions"("relationship_id","id") ON DELETE no action ON UPDATE no action;--> statement-breakpoint
 ALTER TABLE "request_answers" ADD CONSTRAINT "request_answers_relationship_fk" FOREIGN KEY ("relationship_id","supplier_org_id","customer_org_id") REFERENCES "public"."relationships"("id","supplier_org_id","customer_org_id") ON DELETE no action ON UPDATE no action;--> statement-breakpoint
@@ -912,7 +1013,7 @@ CREATE INDEX "agreements_supplier" ON "agreements" USING btree ("supplier_org_id
 CREATE INDEX "agreements_customer" ON "agreements" USING btree ("customer_org_id","number");--> statement-breakpoint
 CREATE INDEX "studies_org_state" ON "studies" USING btree ("org_id","state","registered_at");--> statement-breakpoint
 CREATE INDEX "study_evaluations_study" ON "study_evaluations" USING btree ("org_id","study_id");--> statement-breakpoint
-CREATE INDEX "submission_files_submission" ON "submission_files" USING btree ("relationship_id","submission_id");--> statement-breakpoint
+CREATE INDEX "submission_files_submission" ON "submission_files" USING btree ("relationship_id","submission_id","revision");--> statement-breakpoint
 CREATE INDEX "submission_notes_submission" ON "submission_notes" USING btree ("org_id","submission_id","created_at");--> statement-breakpoint
 CREATE INDEX "submission_signatures_submission" ON "submission_signatures" USING btree ("relationship_id","submission_id");--> statement-breakpoint
 CREATE UNIQUE INDEX "submissions_one_draft" ON "submissions" USING btree ("relationship_id","task_id") WHERE state in ('draft', 'for-signature');--> statement-breakpoint
@@ -920,9 +1021,12 @@ CREATE INDEX "submissions_supplier_state" ON "submissions" USING btree ("supplie
 CREATE INDEX "submissions_customer_state" ON "submissions" USING btree ("customer_org_id","state","state_since");--> statement-breakpoint
 CREATE INDEX "submissions_task" ON "submissions" USING btree ("relationship_id","task_id");--> statement-breakpoint
 CREATE INDEX "challenge_messages_challenge" ON "challenge_messages" USING btree ("relationship_id","challenge_id","created_at");--> statement-breakpoint
+CREATE INDEX "condition_reports_condition" ON "condition_reports" USING btree ("relationship_id","condition_id","created_at");--> statement-breakpoint
+CREATE INDEX "conditions_submission" ON "conditions" USING btree ("relationship_id","submission_id");--> statement-breakpoint
 CREATE INDEX "decisions_submission" ON "decisions" USING btree ("relationship_id","submission_id");--> statement-breakpoint
 CREATE UNIQUE INDEX "decisions_one_final" ON "decisions" USING btree ("relationship_id","submission_id") WHERE state = 'final';--> statement-breakpoint
-CREATE UNIQUE INDEX "decisions_one_proposed" ON "decisions" USING btree ("relationship_id","submission_id") WHERE state = 'awaiting-second-person';--> statement-breakpoint
+CREATE UNIQUE INDEX "decisions_one_proposed" ON "decisions" USING btree ("relationship_id","submission_id") WHERE state in ('awaiting-second-person', 'awaiting-other-side');--> statement-breakpoint
+CREATE INDEX "review_files_submission" ON "review_files" USING btree ("relationship_id","submission_id");--> statement-breakpoint
 CREATE INDEX "request_answers_submission" ON "request_answers" USING btree ("relationship_id","submission_id");--> statement-breakpoint
 CREATE INDEX "request_tasks_task" ON "request_tasks" USING btree ("relationship_id","task_id");--> statement-breakpoint
 CREATE INDEX "requests_supplier_due" ON "requests" USING btree ("supplier_org_id","due_on");--> statement-breakpoint
@@ -978,12 +1082,13 @@ CREATE POLICY "studies_owner" ON "studies" AS PERMISSIVE FOR ALL TO "evenrule_ap
 CREATE POLICY "study_data_owner" ON "study_data" AS PERMISSIVE FOR ALL TO "evenrule_app" USING (org_id = nullif(current_setting('app.org_id', true), '')::uuid) WITH CHECK (org_id = nullif(current_setting('app.org_id', true), '')::uuid);--> statement-breakpoint
 CREATE POLICY "study_evaluations_owner" ON "study_evaluations" AS PERMISSIVE FOR ALL TO "evenrule_app" USING (org_id = nullif(current_setting('app.org_id', true), '')::uuid) WITH CHECK (org_id = nullif(current_setting('app.org_id', true), '')::uuid);--> statement-breakpoint
 CREATE POLICY "study_tasks_owner" ON "study_tasks" AS PERMISSIVE FOR ALL TO "evenrule_app" USING (org_id = nullif(current_setting('app.org_id', true), '')::uuid) WITH CHECK (org_id = nullif(current_setting('app.org_id', true), '')::uuid);--> statement-breakpoint
+CREATE POLICY "submission_by_hand_owner" ON "submission_by_hand" AS PERMISSIVE FOR ALL TO "evenrule_app" USING (org_id = nullif(current_setting('app.org_id', true), '')::uuid) WITH CHECK (org_id = nullif(current_setting('app.org_id', true), '')::uuid);--> statement-breakpoint
 CREATE POLICY "submission_clauses_parties" ON "submission_clauses" AS PERMISSIVE FOR ALL TO "evenrule_app" USING ((supplier_org_id = nullif(current_setting('app.org_id', true), '')::uuid or customer_org_id = nullif(current_setting('app.org_id', true), '')::uuid)) WITH CHECK ((supplier_org_id = nullif(current_setting('app.org_id', true), '')::uuid or customer_org_id = nullif(current_setting('app.org_id', true), '')::uuid));--> statement-breakpoint
 CREATE POLICY "submission_clauses_visible" ON "submission_clauses" AS RESTRICTIVE FOR ALL TO "evenrule_app" USING (exists (select 1 from submissions s where s.id = submission_id)) WITH CHECK (exists (select 1 from submissions s where s.id = submission_id));--> statement-breakpoint
-CREATE POLICY "submission_clauses_frozen" ON "submission_clauses" AS RESTRICTIVE FOR INSERT TO "evenrule_app" WITH CHECK (supplier_org_id = nullif(current_setting('app.org_id', true), '')::uuid and not exists (select 1 from submission_texts f where f.submission_id = submission_clauses.submission_id));--> statement-breakpoint
+CREATE POLICY "submission_clauses_frozen" ON "submission_clauses" AS RESTRICTIVE FOR INSERT TO "evenrule_app" WITH CHECK (supplier_org_id = nullif(current_setting('app.org_id', true), '')::uuid and not exists (select 1 from submission_texts f where f.submission_id = submission_clauses.submission_id and f.revision >= submission_clauses.revision));--> statement-breakpoint
 CREATE POLICY "submission_files_parties" ON "submission_files" AS PERMISSIVE FOR ALL TO "evenrule_app" USING ((supplier_org_id = nullif(current_setting('app.org_id', true), '')::uuid or customer_org_id = nullif(current_setting('app.org_id', true), '')::uuid)) WITH CHECK ((supplier_org_id = nullif(current_setting('app.org_id', true), '')::uuid or customer_org_id = nullif(current_setting('app.org_id', true), '')::uuid));--> statement-breakpoint
 CREATE POLICY "submission_files_visible" ON "submission_files" AS RESTRICTIVE FOR ALL TO "evenrule_app" USING (exists (select 1 from submissions s where s.id = submission_id)) WITH CHECK (exists (select 1 from submissions s where s.id = submission_id));--> statement-breakpoint
-CREATE POLICY "submission_files_frozen" ON "submission_files" AS RESTRICTIVE FOR INSERT TO "evenrule_app" WITH CHECK (supplier_org_id = nullif(current_setting('app.org_id', true), '')::uuid and not exists (select 1 from submission_texts f where f.submission_id = submission_files.submission_id));--> statement-breakpoint
+CREATE POLICY "submission_files_frozen" ON "submission_files" AS RESTRICTIVE FOR INSERT TO "evenrule_app" WITH CHECK (supplier_org_id = nullif(current_setting('app.org_id', true), '')::uuid and not exists (select 1 from submission_texts f where f.submission_id = submission_files.submission_id and f.revision >= submission_files.revision));--> statement-breakpoint
 CREATE POLICY "submission_notes_owner" ON "submission_notes" AS PERMISSIVE FOR ALL TO "evenrule_app" USING (org_id = nullif(current_setting('app.org_id', true), '')::uuid) WITH CHECK (org_id = nullif(current_setting('app.org_id', true), '')::uuid);--> statement-breakpoint
 CREATE POLICY "submission_signatures_parties" ON "submission_signatures" AS PERMISSIVE FOR ALL TO "evenrule_app" USING ((supplier_org_id = nullif(current_setting('app.org_id', true), '')::uuid or customer_org_id = nullif(current_setting('app.org_id', true), '')::uuid)) WITH CHECK ((supplier_org_id = nullif(current_setting('app.org_id', true), '')::uuid or customer_org_id = nullif(current_setting('app.org_id', true), '')::uuid));--> statement-breakpoint
 CREATE POLICY "submission_signatures_visible" ON "submission_signatures" AS RESTRICTIVE FOR ALL TO "evenrule_app" USING (exists (select 1 from submissions s where s.id = submission_id)) WITH CHECK (exists (select 1 from submissions s where s.id = submission_id));--> statement-breakpoint
@@ -992,7 +1097,7 @@ CREATE POLICY "submission_signatures_decided" ON "submission_signatures" AS REST
 CREATE POLICY "submission_studies_owner" ON "submission_studies" AS PERMISSIVE FOR ALL TO "evenrule_app" USING (org_id = nullif(current_setting('app.org_id', true), '')::uuid) WITH CHECK (org_id = nullif(current_setting('app.org_id', true), '')::uuid);--> statement-breakpoint
 CREATE POLICY "submission_texts_parties" ON "submission_texts" AS PERMISSIVE FOR ALL TO "evenrule_app" USING ((supplier_org_id = nullif(current_setting('app.org_id', true), '')::uuid or customer_org_id = nullif(current_setting('app.org_id', true), '')::uuid)) WITH CHECK ((supplier_org_id = nullif(current_setting('app.org_id', true), '')::uuid or customer_org_id = nullif(current_setting('app.org_id', true), '')::uuid));--> statement-breakpoint
 CREATE POLICY "submission_texts_visible" ON "submission_texts" AS RESTRICTIVE FOR ALL TO "evenrule_app" USING (exists (select 1 from submissions s where s.id = submission_id)) WITH CHECK (exists (select 1 from submissions s where s.id = submission_id));--> statement-breakpoint
-CREATE POLICY "submission_texts_by_supplier" ON "submission_texts" AS RESTRICTIVE FOR INSERT TO "evenrule_app" WITH CHECK (supplier_org_id = nullif(current_setting('app.org_id', true), '')::uuid);--> statement-breakpoint
+CREATE POLICY "submission_texts_by_supplier" ON "submission_texts" AS RESTRICTIVE FOR INSERT TO "evenrule_app" WITH CHECK (supplier_org_id = nullif(current_setting('app.org_id', true), '')::uuid and exists (select 1 from submissions s where s.id = submission_id and s.state = case when revision = 1 then 'for-signature' else 'challenged' end));--> statement-breakpoint
 CREATE POLICY "submissions_parties" ON "submissions" AS PERMISSIVE FOR ALL TO "evenrule_app" USING ((supplier_org_id = nullif(current_setting('app.org_id', true), '')::uuid or customer_org_id = nullif(current_setting('app.org_id', true), '')::uuid)) WITH CHECK ((supplier_org_id = nullif(current_setting('app.org_id', true), '')::uuid or customer_org_id = nullif(current_setting('app.org_id', true), '')::uuid));--> statement-breakpoint
 CREATE POLICY "submissions_by_supplier" ON "submissions" AS RESTRICTIVE FOR INSERT TO "evenrule_app" WITH CHECK (supplier_org_id = nullif(current_setting('app.org_id', true), '')::uuid);--> statement-breakpoint
 CREATE POLICY "submissions_drafts" ON "submissions" AS RESTRICTIVE FOR ALL TO "evenrule_app" USING (submitted_at is not null or supplier_org_id = nullif(current_setting('app.org_id', true), '')::uuid) WITH CHECK (submitted_at is not null or supplier_org_id = nullif(current_setting('app.org_id', true), '')::uuid);--> statement-breakpoint
@@ -1000,10 +1105,19 @@ CREATE POLICY "challenge_messages_parties" ON "challenge_messages" AS PERMISSIVE
 CREATE POLICY "challenge_messages_own_side" ON "challenge_messages" AS RESTRICTIVE FOR INSERT TO "evenrule_app" WITH CHECK (((side = 'supplier' and supplier_org_id = nullif(current_setting('app.org_id', true), '')::uuid) or (side = 'customer' and customer_org_id = nullif(current_setting('app.org_id', true), '')::uuid)));--> statement-breakpoint
 CREATE POLICY "challenges_parties" ON "challenges" AS PERMISSIVE FOR ALL TO "evenrule_app" USING ((supplier_org_id = nullif(current_setting('app.org_id', true), '')::uuid or customer_org_id = nullif(current_setting('app.org_id', true), '')::uuid)) WITH CHECK ((supplier_org_id = nullif(current_setting('app.org_id', true), '')::uuid or customer_org_id = nullif(current_setting('app.org_id', true), '')::uuid));--> statement-breakpoint
 CREATE POLICY "challenges_by_customer" ON "challenges" AS RESTRICTIVE FOR INSERT TO "evenrule_app" WITH CHECK (customer_org_id = nullif(current_setting('app.org_id', true), '')::uuid);--> statement-breakpoint
+CREATE POLICY "condition_reports_parties" ON "condition_reports" AS PERMISSIVE FOR ALL TO "evenrule_app" USING ((supplier_org_id = nullif(current_setting('app.org_id', true), '')::uuid or customer_org_id = nullif(current_setting('app.org_id', true), '')::uuid)) WITH CHECK ((supplier_org_id = nullif(current_setting('app.org_id', true), '')::uuid or customer_org_id = nullif(current_setting('app.org_id', true), '')::uuid));--> statement-breakpoint
+CREATE POLICY "condition_reports_visible" ON "condition_reports" AS RESTRICTIVE FOR ALL TO "evenrule_app" USING (exists (select 1 from conditions c where c.id = condition_id)) WITH CHECK (exists (select 1 from conditions c where c.id = condition_id));--> statement-breakpoint
+CREATE POLICY "condition_reports_own_side" ON "condition_reports" AS RESTRICTIVE FOR INSERT TO "evenrule_app" WITH CHECK (((side = 'supplier' and supplier_org_id = nullif(current_setting('app.org_id', true), '')::uuid) or (side = 'customer' and customer_org_id = nullif(current_setting('app.org_id', true), '')::uuid)));--> statement-breakpoint
+CREATE POLICY "conditions_parties" ON "conditions" AS PERMISSIVE FOR ALL TO "evenrule_app" USING ((supplier_org_id = nullif(current_setting('app.org_id', true), '')::uuid or customer_org_id = nullif(current_setting('app.org_id', true), '')::uuid)) WITH CHECK ((supplier_org_id = nullif(current_setting('app.org_id', true), '')::uuid or customer_org_id = nullif(current_setting('app.org_id', true), '')::uuid));--> statement-breakpoint
+CREATE POLICY "conditions_visible" ON "conditions" AS RESTRICTIVE FOR ALL TO "evenrule_app" USING (exists (select 1 from decisions d where d.id = decision_id)) WITH CHECK (exists (select 1 from decisions d where d.id = decision_id));--> statement-breakpoint
+CREATE POLICY "conditions_by_customer" ON "conditions" AS RESTRICTIVE FOR INSERT TO "evenrule_app" WITH CHECK (customer_org_id = nullif(current_setting('app.org_id', true), '')::uuid);--> statement-breakpoint
+CREATE POLICY "conditions_changed" ON "conditions" AS RESTRICTIVE FOR UPDATE TO "evenrule_app" USING (customer_org_id = nullif(current_setting('app.org_id', true), '')::uuid or (owner = 'supplier' and state = 'open')) WITH CHECK (customer_org_id = nullif(current_setting('app.org_id', true), '')::uuid or (owner = 'supplier' and state = 'reported'));--> statement-breakpoint
 CREATE POLICY "decisions_parties" ON "decisions" AS PERMISSIVE FOR ALL TO "evenrule_app" USING ((supplier_org_id = nullif(current_setting('app.org_id', true), '')::uuid or customer_org_id = nullif(current_setting('app.org_id', true), '')::uuid)) WITH CHECK ((supplier_org_id = nullif(current_setting('app.org_id', true), '')::uuid or customer_org_id = nullif(current_setting('app.org_id', true), '')::uuid));--> statement-breakpoint
 CREATE POLICY "decisions_by_customer" ON "decisions" AS RESTRICTIVE FOR INSERT TO "evenrule_app" WITH CHECK (customer_org_id = nullif(current_setting('app.org_id', true), '')::uuid);--> statement-breakpoint
-CREATE POLICY "decisions_changed_by_customer" ON "decisions" AS RESTRICTIVE FOR UPDATE TO "evenrule_app" USING (customer_org_id = nullif(current_setting('app.org_id', true), '')::uuid) WITH CHECK (customer_org_id = nullif(current_setting('app.org_id', true), '')::uuid);--> statement-breakpoint
-CREATE POLICY "decisions_final" ON "decisions" AS RESTRICTIVE FOR SELECT TO "evenrule_app" USING (state = 'final' or customer_org_id = nullif(current_setting('app.org_id', true), '')::uuid);--> statement-breakpoint
+CREATE POLICY "decisions_changed" ON "decisions" AS RESTRICTIVE FOR UPDATE TO "evenrule_app" USING (customer_org_id = nullif(current_setting('app.org_id', true), '')::uuid or state = 'awaiting-other-side') WITH CHECK (customer_org_id = nullif(current_setting('app.org_id', true), '')::uuid or (other_side_by is not null and state in ('final', 'withdrawn')));--> statement-breakpoint
+CREATE POLICY "decisions_visible" ON "decisions" AS RESTRICTIVE FOR SELECT TO "evenrule_app" USING (state in ('final', 'awaiting-other-side') or other_side_by is not null or customer_org_id = nullif(current_setting('app.org_id', true), '')::uuid);--> statement-breakpoint
+CREATE POLICY "review_files_parties" ON "review_files" AS PERMISSIVE FOR ALL TO "evenrule_app" USING ((supplier_org_id = nullif(current_setting('app.org_id', true), '')::uuid or customer_org_id = nullif(current_setting('app.org_id', true), '')::uuid)) WITH CHECK ((supplier_org_id = nullif(current_setting('app.org_id', true), '')::uuid or customer_org_id = nullif(current_setting('app.org_id', true), '')::uuid));--> statement-breakpoint
+CREATE POLICY "review_files_own_side" ON "review_files" AS RESTRICTIVE FOR INSERT TO "evenrule_app" WITH CHECK (((side = 'supplier' and supplier_org_id = nullif(current_setting('app.org_id', true), '')::uuid) or (side = 'customer' and customer_org_id = nullif(current_setting('app.org_id', true), '')::uuid)));--> statement-breakpoint
 CREATE POLICY "request_answers_parties" ON "request_answers" AS PERMISSIVE FOR ALL TO "evenrule_app" USING ((supplier_org_id = nullif(current_setting('app.org_id', true), '')::uuid or customer_org_id = nullif(current_setting('app.org_id', true), '')::uuid)) WITH CHECK ((supplier_org_id = nullif(current_setting('app.org_id', true), '')::uuid or customer_org_id = nullif(current_setting('app.org_id', true), '')::uuid));--> statement-breakpoint
 CREATE POLICY "request_answers_by_supplier" ON "request_answers" AS RESTRICTIVE FOR INSERT TO "evenrule_app" WITH CHECK (supplier_org_id = nullif(current_setting('app.org_id', true), '')::uuid);--> statement-breakpoint
 CREATE POLICY "request_tasks_parties" ON "request_tasks" AS PERMISSIVE FOR ALL TO "evenrule_app" USING ((supplier_org_id = nullif(current_setting('app.org_id', true), '')::uuid or customer_org_id = nullif(current_setting('app.org_id', true), '')::uuid)) WITH CHECK ((supplier_org_id = nullif(current_setting('app.org_id', true), '')::uuid or customer_org_id = nullif(current_setting('app.org_id', true), '')::uuid));--> statement-breakpoint

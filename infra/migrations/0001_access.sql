@@ -17,19 +17,20 @@ GRANT SELECT, INSERT, UPDATE ON
   sites, memberships, parts, part_revisions, characteristics, measuring_tasks,
   gauges, reference_standards, calibrations,
   agreements, agreement_versions, agreement_rounds, house_terms,
-  studies, study_tasks, submission_studies
+  studies, study_tasks, submission_studies, submission_by_hand
   TO evenrule_app;
 --> statement-breakpoint
 -- What is written once and never changed.
 GRANT SELECT, INSERT ON
   files, agreement_signatures, agreement_comments, agreement_marks, study_data, study_evaluations, submission_texts, submission_clauses,
-  submission_files, submission_signatures, submission_notes, challenge_messages, request_tasks, request_answers, reminders,
+  submission_files, submission_signatures, submission_notes, challenge_messages,
+  condition_reports, review_files, request_tasks, request_answers, reminders,
   gauge_events, standing_calibrations, standing_events, reinstatements, carry_overs, record_events
   TO evenrule_app;
 --> statement-breakpoint
 -- What these rows are about never changes, only where they stand.
 GRANT SELECT, INSERT, UPDATE (
-  number, state, state_since, sent_for_signature_at, submitted_at, decided_at, withdrawal_reason, verdict,
+  number, state, state_since, sent_for_signature_at, submitted_at, decided_at, withdrawal_reason, criteria, verdict,
   clauses_met, clauses_total, safety, superseded_by, row_version
 ) ON submissions TO evenrule_app;
 --> statement-breakpoint
@@ -38,9 +39,15 @@ GRANT SELECT, INSERT, UPDATE (due_on, withdrawn_by, withdrawn_at, withdrawal_rea
 --> statement-breakpoint
 GRANT SELECT, INSERT, UPDATE (sequence, hash) ON record_heads TO evenrule_app;
 --> statement-breakpoint
-GRANT SELECT, INSERT, UPDATE (state, second_by, second_at, sent_back_reason) ON decisions TO evenrule_app;
+GRANT SELECT, INSERT, UPDATE (
+  state, second_by, second_at, sent_back_reason, other_side_by, other_side_at, declined_reason
+) ON decisions TO evenrule_app;
 --> statement-breakpoint
-GRANT SELECT, INSERT, UPDATE (state, answered_at, closed_by, closed_at, row_version) ON challenges TO evenrule_app;
+GRANT SELECT, INSERT, UPDATE (state, confirmed_at, row_version) ON conditions TO evenrule_app;
+--> statement-breakpoint
+GRANT SELECT, INSERT, UPDATE (
+  state, answered_at, laboratory, closed_by, closed_at, row_version
+) ON challenges TO evenrule_app;
 --> statement-breakpoint
 GRANT SELECT ON organisations, relationships TO evenrule_app;
 --> statement-breakpoint
@@ -52,7 +59,8 @@ GRANT SELECT, UPDATE (read_at) ON messages TO evenrule_app;
 --> statement-breakpoint
 GRANT INSERT ON security_events TO evenrule_app;
 --> statement-breakpoint
-GRANT DELETE ON memberships, agreements, agreement_rounds, agreement_versions, house_terms, submission_studies TO evenrule_app;
+GRANT DELETE ON memberships, agreements, agreement_rounds, agreement_versions, house_terms, submission_studies, submission_by_hand
+  TO evenrule_app;
 --> statement-breakpoint
 GRANT SELECT ON messages, users TO evenrule_system;
 --> statement-breakpoint

@@ -36,6 +36,8 @@ export const messageMoves = [
   'decline-unresolved',
 ] as const satisfies readonly ChallengeMoveName[]
 
+export type MessageMove = (typeof messageMoves)[number]
+
 export const challengeMessageSchema = z.object({
   id: uuid,
   side: sideSchema,

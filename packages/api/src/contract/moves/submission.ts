@@ -335,6 +335,16 @@ export const submissionMoves = [
     event: 'submission.superseded',
     words: 'Replace by a newer acceptance',
   },
+  {
+    // The supplier's approver is the last to sign where no criteria are agreed.
+    name: 'supersede',
+    from: ['accepted', 'accepted-with-conditions'],
+    to: 'superseded',
+    ...signer,
+    preconditions: ['newer-accepted'],
+    event: 'submission.superseded',
+    words: 'Replace by a newer acceptance',
+  },
 ] as const satisfies readonly Move<SubmissionState, SubmissionPrecondition>[]
 
 export type SubmissionMove = (typeof submissionMoves)[number]

@@ -50,18 +50,22 @@ export const sharedPolicy = (name: string) =>
     withCheck: sql.raw(party),
   })
 
-/** Narrows what the permissive policy grants; `condition` is SQL over the table's own columns. */
+/**
+ * Narrows what the permissive policy grants; `condition` is SQL over the table's own columns. For a change it is asked
+ * of the row before and after; `after` where that is another condition.
+ */
 export const restrictPolicy = (
   name: string,
   condition: string,
   command: 'all' | 'select' | 'insert' | 'update' | 'delete' = 'all',
+  after = condition,
 ) =>
   pgPolicy(name, {
     as: 'restrictive',
     for: command,
     to: appRole,
     ...(command === 'insert' ? {} : { using: sql.raw(condition) }),
-    ...(command === 'select' || command === 'delete' ? {} : { withCheck: sql.raw(condition) }),
+    ...(command === 'select' || command === 'delete' ? {} : { withCheck: sql.raw(after) }),
   })
 
 /** SQL: the row's column names the side that the current organisation has in this row's relationship. */

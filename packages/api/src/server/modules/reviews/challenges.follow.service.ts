@@ -3,15 +3,14 @@ import type { SubmissionMoveName } from '../../../contract/moves/submission'
 import type { Challenge } from '../../../contract/reviews'
 import type { Tenant } from '../../db/tenant'
 import { changedMeanwhile } from '../../errors'
-import { namesOfPeople } from '../organisations/people.repository'
 import { sha256 } from '../record/record.append'
 import { about, tell } from '../submissions/submissions.messages'
 import { makeMove, permittedMove } from '../submissions/submissions.move.service'
 import { updateSubmission, type SubmissionRow } from '../submissions/submissions.repository'
-import { challengeAnswers } from './challenges.read'
-import { selectChallenges, selectMessages, type ChallengeRow } from './challenges.repository'
+import { selectChallenges, type ChallengeRow } from './challenges.repository'
 import { challengeFacts } from './reviews.facts.service'
 import { challengeMessages } from './reviews.messages'
+import { readChallenge } from './reviews.read.service'
 
 /** Moves of a challenge that somebody makes; the rest follows from a decision. */
 export type Spoken = Exclude<ChallengeMoveName, 'leave-unresolved'>
@@ -20,9 +19,22 @@ export type Spoken = Exclude<ChallengeMoveName, 'leave-unresolved'>
 const following: Record<Spoken, SubmissionMoveName | null> = {
   open: 'challenge',
   answer: 'answer',
+  correct: 'answer',
   reply: 'challenge',
   settle: null,
   withdraw: 'resume',
+  'propose-unresolved': 'challenge',
+  'agree-unresolved': 'answer',
+  'decline-unresolved': 'answer',
+}
+
+export interface Concluding {
+  /** What was said. */
+  text: string
+  /** What the event holds beside it. */
+  data?: Record<string, unknown>
+  /** What else of the submission changes by it. */
+  values?: Parameters<typeof updateSubmission>[2]
 }
 
 /** What follows from a move of a challenge: event, message, and where the challenges put the submission now. */
@@ -31,8 +43,7 @@ export async function concludeChallenge(
   submission: SubmissionRow,
   row: ChallengeRow,
   move: Extract<ChallengeMove, { name: Spoken }>,
-  text: string,
-  data: Record<string, unknown> = {},
+  { text, data = {}, values = {} }: Concluding,
 ): Promise<Challenge> {
   recordChallenge(tenant, submission, row, move, {
     ...data,
@@ -42,12 +53,12 @@ export async function concludeChallenge(
   const next = reviewState(all.map(({ state, answeredAt }) => ({ state, answered: answeredAt !== null })))
   const name = following[move.name]
   if (next !== submission.state && name)
-    await makeMove(tenant, submission, permittedMove(tenant, name, submission, challengeFacts(all)))
+    await makeMove(tenant, submission, permittedMove(tenant, name, submission, challengeFacts(all)), values)
   // Who decides must have seen what was said last, so every word gives the submission a new version.
-  else if (!(await updateSubmission(tenant, submission, {}))) throw changedMeanwhile('submission')
-  const words = about(tenant.side, challengeMessages[move.name](text))
+  else if (!(await updateSubmission(tenant, submission, values))) throw changedMeanwhile('submission')
+  const words = about(tenant.side, challengeMessages[move.name](text, row))
   await tell(tenant, submission, 'other side', 'challenge', words)
-  return asAnswer(tenant, submission, row)
+  return readChallenge(tenant, submission, row.id)
 }
 
 /** Writes a move of a challenge into the record of the relationship. */
@@ -55,7 +66,7 @@ export function recordChallenge(
   tenant: Tenant,
   { id, relationshipId, supplierOrgId, customerOrgId, taskId, number }: SubmissionRow,
   { id: challengeId, number: challengeNumber }: ChallengeRow,
-  { event }: ChallengeMove,
+  { event }: Pick<ChallengeMove, 'event'>,
   data: Record<string, unknown> = {},
 ): void {
   tenant.record({
@@ -65,12 +76,4 @@ export function recordChallenge(
     taskId,
     data: { submissionId: id, number, challenge: challengeNumber, ...data },
   })
-}
-
-async function asAnswer(tenant: Tenant, submission: SubmissionRow, row: ChallengeRow): Promise<Challenge> {
-  const messages = await selectMessages(tenant, submission, [row.id])
-  const names = await namesOfPeople(tenant, [row.closedBy, ...messages.map(({ userId }) => userId)])
-  const [answer] = challengeAnswers([row], messages, (userId) => names.get(userId ?? '') ?? null)
-  if (!answer) throw new Error('A challenge was lost on its way out.')
-  return answer
 }

@@ -19,7 +19,7 @@ export async function selectChallenges({ tx }: Tenant, { relationshipId, id }: K
 /** What was said under challenges, the oldest first. */
 export async function selectMessages(
   { tx }: Tenant,
-  { relationshipId }: Key,
+  { relationshipId }: Pick<Key, 'relationshipId'>,
   challengeIds: readonly string[],
 ): Promise<MessageRow[]> {
   if (challengeIds.length === 0) return []
@@ -35,10 +35,12 @@ export async function selectMessages(
     .orderBy(asc(challengeMessages.createdAt), asc(challengeMessages.id))
 }
 
+type Opened = Pick<ChallengeRow, 'number' | 'target' | 'reasonKind' | 'revision' | 'dueOn' | 'state'>
+
 export async function insertChallenge(
   { tx, userId, now }: Tenant,
   { id, relationshipId, supplierOrgId, customerOrgId }: SubmissionRow,
-  challenge: Pick<ChallengeRow, 'number' | 'clauseKey' | 'reasonKind' | 'state'>,
+  challenge: Opened,
 ): Promise<ChallengeRow> {
   const [inserted] = await tx
     .insert(challenges)
@@ -53,11 +55,14 @@ export async function insertChallenge(
   return inserted
 }
 
+export type ChallengeChange = Pick<ChallengeRow, 'state'> &
+  Partial<Pick<ChallengeRow, 'answeredAt' | 'laboratory' | 'closedBy' | 'closedAt'>>
+
 /** Changes a challenge whose submission is locked. */
 export async function updateChallenge(
   { tx }: Tenant,
   { relationshipId, id, rowVersion }: ChallengeRow,
-  values: Pick<ChallengeRow, 'state'> & Partial<Pick<ChallengeRow, 'answeredAt' | 'closedBy' | 'closedAt'>>,
+  values: ChallengeChange,
 ): Promise<ChallengeRow> {
   const [updated] = await tx
     .update(challenges)
@@ -68,13 +73,22 @@ export async function updateChallenge(
   return updated
 }
 
+export type NewMessage = Pick<MessageRow, 'move' | 'text'> &
+  Partial<Pick<MessageRow, 'answerKind' | 'revision' | 'agreementId' | 'versionId' | 'whatIf'>>
+
 export async function insertMessage(
   { tx, side, userId, now }: Tenant,
   { id, relationshipId, supplierOrgId, customerOrgId }: ChallengeRow,
-  text: string,
-): Promise<void> {
-  await tx.insert(challengeMessages).values({
-    ...{ challengeId: id, relationshipId, supplierOrgId, customerOrgId },
-    ...{ side, userId, text, createdAt: now },
-  })
+  message: NewMessage,
+): Promise<MessageRow> {
+  const [inserted] = await tx
+    .insert(challengeMessages)
+    .values({
+      ...{ challengeId: id, relationshipId, supplierOrgId, customerOrgId },
+      ...{ side, userId, createdAt: now },
+      ...message,
+    })
+    .returning()
+  if (!inserted) throw new Error('What was said was not stored.')
+  return inserted
 }

@@ -1,8 +1,9 @@
-import type { SubmissionMove, SubmissionMoveName } from '../../../contract/moves/submission'
 import type { BodyOf } from '../../../contract/define'
+import type { SubmissionMove, SubmissionMoveName } from '../../../contract/moves/submission'
 import type {
   accept,
   acceptWithConditions,
+  ConditionAsked,
   confirm,
   Moved,
   refuse,
@@ -10,16 +11,16 @@ import type {
 } from '../../../contract/reviews'
 import type { Tenant } from '../../db/tenant'
 import { invalidInput } from '../../errors'
-import { sha256 } from '../record/record.append'
-import { relationshipById, todayIn } from '../relationships/relationships.lookup.service'
-import { insertSignature, selectText } from '../submissions/submissions.frozen.repository'
+import { insertSignature } from '../submissions/submissions.frozen.repository'
 import { about, tell } from '../submissions/submissions.messages'
 import { asMoved, makeMove, openForMove, permittedMove } from '../submissions/submissions.move.service'
-import { selectAccepted, type SubmissionRow } from '../submissions/submissions.repository'
-import { leaveUnresolved } from './challenges.service'
-import { endProposal, insertDecision, selectProposed, type DecisionRow } from './decisions.repository'
+import type { SubmissionRow } from '../submissions/submissions.repository'
+import { insertConditions, selectConditions } from './conditions.repository'
+import { conclude, conditionsOf, proposedOf, seenFacts } from './decisions.conclude.service'
+import { endProposal, insertDecision, type DecisionRow } from './decisions.repository'
 import { reviewFacts } from './reviews.facts.service'
 import { reviewMessages } from './reviews.messages'
+import { todayOf } from './reviews.read.service'
 
 const meanings = {
   accepted: 'accepts',
@@ -27,84 +28,79 @@ const meanings = {
   refused: 'refuses',
 } as const
 
+/** Where a decision stands that put the submission into a state. */
+const standsAs = (to: SubmissionMove['to']): DecisionRow['state'] =>
+  to === 'awaiting-second-person' || to === 'awaiting-other-side' ? to : 'final'
+
 /** Accepts a submission; on a safety-class characteristic it then waits for a second person. */
-export async function acceptSubmission(
+export const acceptSubmission = (
   tenant: Tenant,
   id: string,
   { reason, ...seen }: BodyOf<typeof accept>,
-): Promise<Moved> {
-  return decide(tenant, id, 'accept', seen, {
-    ...{ kind: 'accepted', conditions: null, conditionsDueOn: null, reason },
-  })
-}
+): Promise<Moved> => decide(tenant, id, 'accept', seen, { kind: 'accepted', conditions: [], reason })
 
-/** Accepts a submission on conditions, with the last day on which what must follow may follow. */
-export async function acceptOnConditions(
+/** Accepts a submission on conditions: what must follow, until when, and who owes it. */
+export const acceptOnConditions = (
   tenant: Tenant,
   id: string,
-  { reason, conditions, conditionsDueOn, ...seen }: BodyOf<typeof acceptWithConditions>,
-): Promise<Moved> {
-  return decide(tenant, id, 'accept-with-conditions', seen, {
-    ...{ kind: 'accepted-with-conditions', conditions, conditionsDueOn, reason },
+  { reason, conditions, ...seen }: BodyOf<typeof acceptWithConditions>,
+): Promise<Moved> =>
+  decide(tenant, id, 'accept-with-conditions', seen, {
+    ...{ kind: 'accepted-with-conditions', conditions, reason },
   })
-}
 
 /** Refuses a submission; challenges whose answers did not settle them stay unresolved. */
-export async function refuseSubmission(
+export const refuseSubmission = (
   tenant: Tenant,
   id: string,
   { reason, ...seen }: BodyOf<typeof refuse>,
-): Promise<Moved> {
-  return decide(tenant, id, 'refuse', seen, {
-    ...{ kind: 'refused', conditions: null, conditionsDueOn: null, reason },
-  })
-}
+): Promise<Moved> => decide(tenant, id, 'refuse', seen, { kind: 'refused', conditions: [], reason })
 
 type Seen = BodyOf<typeof confirm>
-type Entered = Pick<DecisionRow, 'kind' | 'conditions' | 'conditionsDueOn' | 'reason'>
+interface Entered {
+  kind: DecisionRow['kind']
+  conditions: readonly ConditionAsked[]
+  reason: string
+}
 
 async function decide(
   tenant: Tenant,
   id: string,
   name: SubmissionMoveName,
   seen: Seen,
-  entered: Entered,
+  { kind, conditions, reason }: Entered,
 ): Promise<Moved> {
   const submission = await openForMove(tenant, id, seen.expectedVersion, { alone: true })
-  const move = permittedMove(tenant, name, submission, {
-    ...(await seenFacts(tenant, submission, seen)),
-    'reason-given': entered.reason !== '',
-  })
-  await refusePastDays(tenant, submission, entered)
-  const final = move.to !== 'awaiting-second-person'
-  const decision = await insertDecision(tenant, submission, {
-    ...entered,
-    state: final ? 'final' : 'awaiting-second-person',
-  })
+  const { revision, facts } = await seenFacts(tenant, submission, seen)
+  const move = permittedMove(tenant, name, submission, { ...facts, 'reason-given': reason !== '' })
+  await refusePastDays(tenant, submission, conditions)
+  const state = standsAs(move.to)
+  const decision = await insertDecision(tenant, submission, { kind, state, reason, revision })
+  await insertConditions(tenant, submission, decision.id, conditions)
   await insertSignature(tenant, submission, {
-    meaning: meanings[decision.kind],
-    sha256: seen.sha256,
-    decisionId: decision.id,
+    meaning: meanings[kind],
+    ...{ revision, sha256: seen.sha256, decisionId: decision.id },
   })
-  if (final) return conclude(tenant, submission, move, decision, seen.sha256)
-  // What is proposed is the customer's own business until it is final, in the record too.
-  const moved = await makeMove(tenant, submission, move, {}, { sha256: seen.sha256 })
-  await tell(tenant, moved, 'own side', 'decision', about('customer', reviewMessages.secondPersonAsked()))
-  return asMoved(moved)
+  return state === 'final'
+    ? conclude(tenant, submission, move, decision, seen.sha256)
+    : propose(tenant, submission, move, decision, seen.sha256)
 }
 
 /** Confirms a proposed acceptance as its second person. */
 export async function confirmAcceptance(tenant: Tenant, id: string, seen: Seen): Promise<Moved> {
   const submission = await openForMove(tenant, id, seen.expectedVersion, { alone: true })
-  const move = permittedMove(tenant, 'confirm', submission, await seenFacts(tenant, submission, seen))
+  const { revision, facts } = await seenFacts(tenant, submission, seen)
+  const move = permittedMove(tenant, 'confirm', submission, facts)
   const proposed = await proposedOf(tenant, submission)
-  await endProposal(tenant, proposed, { state: 'final' })
+  const final = move.to !== 'awaiting-other-side'
+  await endProposal(tenant, proposed, { state: final ? 'final' : 'awaiting-other-side' })
   await insertSignature(tenant, submission, {
     meaning: 'second-person',
-    sha256: seen.sha256,
-    decisionId: proposed.id,
+    ...{ revision, sha256: seen.sha256, decisionId: proposed.id },
   })
-  return conclude(tenant, submission, move, proposed, seen.sha256)
+  return final
+    ? conclude(tenant, submission, move, proposed, seen.sha256)
+    : propose(tenant, submission, move, proposed, seen.sha256)
 }
 
 /** Does not confirm a proposed acceptance: the review goes on. */
@@ -127,71 +123,43 @@ export async function sendBackToReview(
   return asMoved(moved)
 }
 
-/** The decision takes effect: the new state, its event, and what it ends. */
-async function conclude(
+/** The decision waits for one more signature: of a second person, or of the supplier's approver. */
+async function propose(
   tenant: Tenant,
   submission: SubmissionRow,
   move: SubmissionMove,
   decision: DecisionRow,
   signed: string,
 ): Promise<Moved> {
-  const { kind, conditions, conditionsDueOn, reason } = decision
-  const moved = await makeMove(
-    tenant,
-    submission,
-    move,
-    { decidedAt: tenant.now },
-    {
-      ...{ decisionId: decision.id, sha256: signed, conditionsDueOn },
-      // Words of people stay outside the chain; their hashes prove them.
-      conditionsSha256: conditions === null ? null : sha256(conditions),
-      reasonSha256: sha256(reason),
-    },
-  )
-  if (kind === 'refused') await leaveUnresolved(tenant, moved)
-  else await supersedeOlder(tenant, moved)
-  await tell(tenant, moved, 'other side', 'decision', about('customer', wordsOf(decision)))
+  // What waits for its second person is the customer's own business until it is final, in the record too.
+  const toSupplier = move.to === 'awaiting-other-side'
+  const data = toSupplier ? { decisionId: decision.id, kind: decision.kind } : {}
+  const moved = await makeMove(tenant, submission, move, {}, { sha256: signed, ...data })
+  if (toSupplier) {
+    const conditions = conditionsOf(await selectConditions(tenant, submission), decision)
+    const words = about('customer', reviewMessages.oneOffProposed(conditions, decision.reason))
+    await tell(tenant, moved, 'other side', 'decision', words, ['supplier-approver'])
+  } else
+    await tell(tenant, moved, 'own side', 'decision', about('customer', reviewMessages.secondPersonAsked()))
   return asMoved(moved)
-}
-
-const wordsOf = ({ kind, conditions, conditionsDueOn, reason }: DecisionRow) =>
-  kind === 'refused'
-    ? reviewMessages.refused(reason)
-    : kind === 'accepted'
-      ? reviewMessages.accepted(reason)
-      : reviewMessages.acceptedWithConditions(conditions ?? '', conditionsDueOn ?? '', reason)
-
-/** What was accepted of the same task before gives way to the newer acceptance. */
-async function supersedeOlder(tenant: Tenant, accepted: SubmissionRow): Promise<void> {
-  for (const older of await selectAccepted(tenant, accepted)) {
-    const move = permittedMove(tenant, 'supersede', older, { 'newer-accepted': true })
-    await makeMove(tenant, older, move, { supersededBy: accepted.id }, { supersededBy: accepted.number })
-  }
-}
-
-async function seenFacts(tenant: Tenant, submission: SubmissionRow, seen: Seen) {
-  const frozen = await selectText(tenant, submission)
-  return {
-    ...(await reviewFacts(tenant, submission)),
-    'as-seen': frozen !== undefined && frozen.sha256 === seen.sha256,
-  }
-}
-
-async function proposedOf(tenant: Tenant, submission: SubmissionRow): Promise<DecisionRow> {
-  const proposed = await selectProposed(tenant, submission)
-  if (!proposed) throw new Error(`The submission ${submission.id} waits for nothing that was proposed.`)
-  return proposed
 }
 
 async function refusePastDays(
   tenant: Tenant,
-  { relationshipId }: SubmissionRow,
-  { conditionsDueOn }: Entered,
+  submission: SubmissionRow,
+  conditions: readonly ConditionAsked[],
 ): Promise<void> {
-  if (conditionsDueOn === null) return
-  const today = todayIn(await relationshipById(tenant, relationshipId), tenant)
-  if (conditionsDueOn < today)
-    throw invalidInput([
-      { path: 'body.conditionsDueOn', message: 'This day is over. Enter today or a later day.' },
-    ])
+  if (conditions.length === 0) return
+  const today = await todayOf(tenant, submission)
+  const errors = conditions.flatMap(({ dueOn }, at) =>
+    dueOn < today
+      ? [
+          {
+            path: `body.conditions.${at}.dueOn`,
+            message: 'This day is over. Enter today or a later day.',
+          },
+        ]
+      : [],
+  )
+  if (errors.length > 0) throw invalidInput(errors)
 }

@@ -1,4 +1,4 @@
-import { isUnsettled } from '../../../contract/moves/challenge'
+import { isUnsettled, waitsOnSupplier } from '../../../contract/moves/challenge'
 import type { Tenant } from '../../db/tenant'
 import type { SubmissionFacts } from '../submissions/submissions.move.service'
 import { selectAccepted, type SubmissionRow } from '../submissions/submissions.repository'
@@ -7,7 +7,7 @@ import { selectProposed, type DecisionRow } from './decisions.repository'
 
 /** What challenges say about the moves of their submission. */
 export const challengeFacts = (challenges: readonly ChallengeRow[]): SubmissionFacts => {
-  const open = challenges.some(({ state }) => state === 'open')
+  const open = challenges.some(({ state }) => waitsOnSupplier(state))
   return {
     'a-challenge-is-open': open,
     'no-challenge-open': !open,
@@ -26,7 +26,7 @@ const proposalFacts = (proposed: DecisionRow | undefined, userId: string): Submi
       }
     : {}
 
-/** Everything that the customer's moves of a submission depend on, but for what the request itself brings. */
+/** Everything that moves under review of a submission depend on, but for what the request itself brings. */
 export async function reviewFacts(tenant: Tenant, submission: SubmissionRow): Promise<SubmissionFacts> {
   const accepted = await selectAccepted(tenant, submission)
   const isNewer = ({ number }: SubmissionRow) => (number ?? 0) > (submission.number ?? 0)
@@ -34,6 +34,8 @@ export async function reviewFacts(tenant: Tenant, submission: SubmissionRow): Pr
     ...challengeFacts(await selectChallenges(tenant, submission)),
     ...proposalFacts(await selectProposed(tenant, submission), tenant.userId),
     'no-newer-accepted': !accepted.some(isNewer),
+    'criteria-agreed': submission.criteria === 'agreed',
+    'no-criteria-agreed': submission.criteria === 'none',
     'safety-class': submission.safety,
     'not-safety-class': !submission.safety,
   }

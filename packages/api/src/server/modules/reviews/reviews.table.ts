@@ -1,9 +1,11 @@
 import { sql } from 'drizzle-orm'
 import {
+  check,
   date,
   foreignKey,
   index,
   integer,
+  jsonb,
   pgTable,
   text,
   unique,
@@ -12,8 +14,18 @@ import {
 } from 'drizzle-orm/pg-core'
 import type { Side } from '../../../contract/access'
 import type { ChallengeState } from '../../../contract/moves/challenge'
-import type { ChallengeReason } from '../../../contract/reviews'
+import type { ConditionState } from '../../../contract/moves/condition'
+import type {
+  AnswerKind,
+  ChallengeReason,
+  ChallengeTarget,
+  DecisionKind,
+  DecisionState,
+  FollowUp,
+  MessageMove,
+} from '../../../contract/reviews'
 import {
+  customerOnly,
   instant,
   ownSideOnly,
   primaryId,
@@ -25,25 +37,33 @@ import {
 import { relationships } from '../relationships/relationships.table'
 import { submissions } from '../submissions/submissions.table'
 
-/** The customer's decision on a submission. On safety-class characteristics it is final with a second person. */
+const decided = "state in ('final', 'awaiting-other-side')"
+
+/**
+ * The customer's decision on a submission. On safety-class characteristics it is final with a second person, without
+ * agreed criteria with the supplier's approver.
+ */
 export const decisions = pgTable(
   'decisions',
   {
     id: primaryId(),
     ...sharedColumns,
     submissionId: uuid().notNull(),
-    kind: text().$type<'accepted' | 'accepted-with-conditions' | 'refused'>().notNull(),
-    state: text().$type<'awaiting-second-person' | 'final' | 'withdrawn'>().notNull(),
-    /** For a conditional acceptance: what must follow, by when. */
-    conditions: text(),
-    conditionsDueOn: date({ mode: 'string' }),
+    kind: text().$type<DecisionKind>().notNull(),
+    state: text().$type<DecisionState>().notNull(),
     reason: text().notNull().default(''),
+    /** The revision of the submission that was decided on. */
+    revision: integer().notNull(),
     decidedBy: uuid().notNull(),
     decidedAt: instant().notNull(),
     secondBy: uuid(),
     secondAt: instant(),
     /** Why it was sent back to review instead of being confirmed; the customer's own business. */
     sentBackReason: text(),
+    /** Without agreed criteria: the supplier's approver who agreed, or did not and why. */
+    otherSideBy: uuid(),
+    otherSideAt: instant(),
+    declinedReason: text(),
   },
   (t) => [
     unique('decisions_relationship_id').on(t.relationshipId, t.id),
@@ -53,7 +73,7 @@ export const decisions = pgTable(
       .where(sql`state = 'final'`),
     uniqueIndex('decisions_one_proposed')
       .on(t.relationshipId, t.submissionId)
-      .where(sql`state = 'awaiting-second-person'`),
+      .where(sql`state in ('awaiting-second-person', 'awaiting-other-side')`),
     foreignKey({
       name: 'decisions_submission_fk',
       columns: [t.relationshipId, t.submissionId],
@@ -61,26 +81,104 @@ export const decisions = pgTable(
     }),
     relationshipKey('decisions', t, () => relationships),
     sharedPolicy('decisions'),
+    restrictPolicy('decisions_by_customer', customerOnly, 'insert'),
+    // The supplier answers what was proposed to it, once.
     restrictPolicy(
-      'decisions_by_customer',
-      `customer_org_id = nullif(current_setting('app.org_id', true), '')::uuid`,
-      'insert',
-    ),
-    restrictPolicy(
-      'decisions_changed_by_customer',
-      `customer_org_id = nullif(current_setting('app.org_id', true), '')::uuid`,
+      'decisions_changed',
+      `${customerOnly} or state = 'awaiting-other-side'`,
       'update',
+      `${customerOnly} or (other_side_by is not null and state in ('final', 'withdrawn'))`,
     ),
-    // A decision that waits for its second person is the customer's own business until it is final.
+    // What waits for its second person is the customer's own business; what was declined both sides know.
     restrictPolicy(
-      'decisions_final',
-      `state = 'final' or customer_org_id = nullif(current_setting('app.org_id', true), '')::uuid`,
+      'decisions_visible',
+      `${decided} or other_side_by is not null or ${customerOnly}`,
       'select',
     ),
   ],
 )
 
-/** An objection of the customer to one named clause result. */
+const ofVisibleDecision = 'exists (select 1 from decisions d where d.id = decision_id)'
+
+/** What must follow a conditional acceptance: each with its day, who owes it, and what shows that it is done. */
+export const conditions = pgTable(
+  'conditions',
+  {
+    id: primaryId(),
+    ...sharedColumns,
+    submissionId: uuid().notNull(),
+    decisionId: uuid().notNull(),
+    /** Counts the conditions of the decision, from one. */
+    number: integer().notNull(),
+    text: text().notNull(),
+    dueOn: date({ mode: 'string' }).notNull(),
+    owner: text().$type<Side>().notNull(),
+    followUp: text().$type<FollowUp>().notNull(),
+    state: text().$type<ConditionState>().notNull(),
+    confirmedAt: instant(),
+    rowVersion: integer().notNull().default(1),
+  },
+  (t) => [
+    unique('conditions_relationship_id').on(t.relationshipId, t.id),
+    unique('conditions_number').on(t.relationshipId, t.decisionId, t.number),
+    index('conditions_submission').on(t.relationshipId, t.submissionId),
+    check('conditions_confirmed', sql`(state = 'confirmed') = (confirmed_at is not null)`),
+    foreignKey({
+      name: 'conditions_decision_fk',
+      columns: [t.relationshipId, t.decisionId],
+      foreignColumns: [decisions.relationshipId, decisions.id],
+    }),
+    foreignKey({
+      name: 'conditions_submission_fk',
+      columns: [t.relationshipId, t.submissionId],
+      foreignColumns: [submissions.relationshipId, submissions.id],
+    }),
+    relationshipKey('conditions', t, () => relationships),
+    sharedPolicy('conditions'),
+    restrictPolicy('conditions_visible', ofVisibleDecision),
+    restrictPolicy('conditions_by_customer', customerOnly, 'insert'),
+    // The supplier reports what it owes; only the customer confirms.
+    restrictPolicy(
+      'conditions_changed',
+      `${customerOnly} or (owner = 'supplier' and state = 'open')`,
+      'update',
+      `${customerOnly} or (owner = 'supplier' and state = 'reported')`,
+    ),
+  ],
+)
+
+/** What was reported, confirmed or returned of a condition, in order; never changed. */
+export const conditionReports = pgTable(
+  'condition_reports',
+  {
+    id: primaryId(),
+    ...sharedColumns,
+    conditionId: uuid().notNull(),
+    move: text().$type<'report' | 'confirm' | 'return'>().notNull(),
+    side: text().$type<Side>().notNull(),
+    userId: uuid().notNull(),
+    text: text().notNull(),
+    createdAt: instant().notNull(),
+  },
+  (t) => [
+    unique('condition_reports_relationship_id').on(t.relationshipId, t.id),
+    index('condition_reports_condition').on(t.relationshipId, t.conditionId, t.createdAt),
+    foreignKey({
+      name: 'condition_reports_condition_fk',
+      columns: [t.relationshipId, t.conditionId],
+      foreignColumns: [conditions.relationshipId, conditions.id],
+    }),
+    relationshipKey('condition_reports', t, () => relationships),
+    sharedPolicy('condition_reports'),
+    restrictPolicy(
+      'condition_reports_visible',
+      'exists (select 1 from conditions c where c.id = condition_id)',
+    ),
+    restrictPolicy('condition_reports_own_side', ownSideOnly('side'), 'insert'),
+  ],
+)
+
+/** An objection of the customer to one named thing in a submission. */
 export const challenges = pgTable(
   'challenges',
   {
@@ -88,8 +186,14 @@ export const challenges = pgTable(
     ...sharedColumns,
     submissionId: uuid().notNull(),
     number: integer().notNull(),
-    clauseKey: text().notNull(),
+    target: jsonb().$type<ChallengeTarget>().notNull(),
     reasonKind: text().$type<ChallengeReason>().notNull(),
+    /** The revision of the submission in which the target is named. */
+    revision: integer().notNull(),
+    /** The day until which an answer is asked for. */
+    dueOn: date({ mode: 'string' }).notNull(),
+    /** The laboratory that is to find out, where both sides leave it unresolved. */
+    laboratory: text(),
     state: text().$type<ChallengeState>().notNull(),
     openedBy: uuid().notNull(),
     openedAt: instant().notNull(),
@@ -109,11 +213,7 @@ export const challenges = pgTable(
     }),
     relationshipKey('challenges', t, () => relationships),
     sharedPolicy('challenges'),
-    restrictPolicy(
-      'challenges_by_customer',
-      `customer_org_id = nullif(current_setting('app.org_id', true), '')::uuid`,
-      'insert',
-    ),
+    restrictPolicy('challenges_by_customer', customerOnly, 'insert'),
   ],
 )
 
@@ -126,10 +226,22 @@ export const challengeMessages = pgTable(
     challengeId: uuid().notNull(),
     side: text().$type<Side>().notNull(),
     userId: uuid().notNull(),
+    /** What it did to the challenge. */
+    move: text().$type<MessageMove>().notNull(),
+    /** Of an answer. */
+    answerKind: text().$type<AnswerKind>(),
     text: text().notNull(),
+    /** The revision that an answer by correction points to. */
+    revision: integer(),
+    /** The proposal that an answer by "change the criterion" points to. */
+    agreementId: uuid(),
+    versionId: uuid(),
+    /** A what-if that is quoted, as canonical JSON: an argument, never a verdict. */
+    whatIf: text(),
     createdAt: instant().notNull(),
   },
   (t) => [
+    unique('challenge_messages_relationship_id').on(t.relationshipId, t.id),
     index('challenge_messages_challenge').on(t.relationshipId, t.challengeId, t.createdAt),
     foreignKey({
       name: 'challenge_messages_challenge_fk',
@@ -139,5 +251,45 @@ export const challengeMessages = pgTable(
     relationshipKey('challenge_messages', t, () => relationships),
     sharedPolicy('challenge_messages'),
     restrictPolicy('challenge_messages_own_side', ownSideOnly('side'), 'insert'),
+  ],
+)
+
+/** Files that go with what was said under a challenge, or with a report of a condition; never changed. */
+export const reviewFiles = pgTable(
+  'review_files',
+  {
+    id: primaryId(),
+    ...sharedColumns,
+    submissionId: uuid().notNull(),
+    messageId: uuid(),
+    reportId: uuid(),
+    side: text().$type<Side>().notNull(),
+    name: text().notNull(),
+    contentType: text().notNull(),
+    size: integer().notNull(),
+    sha256: text().notNull(),
+    storageKey: text().notNull(),
+  },
+  (t) => [
+    index('review_files_submission').on(t.relationshipId, t.submissionId),
+    check('review_files_of_one', sql`num_nonnulls(message_id, report_id) = 1`),
+    foreignKey({
+      name: 'review_files_message_fk',
+      columns: [t.relationshipId, t.messageId],
+      foreignColumns: [challengeMessages.relationshipId, challengeMessages.id],
+    }),
+    foreignKey({
+      name: 'review_files_report_fk',
+      columns: [t.relationshipId, t.reportId],
+      foreignColumns: [conditionReports.relationshipId, conditionReports.id],
+    }),
+    foreignKey({
+      name: 'review_files_submission_fk',
+      columns: [t.relationshipId, t.submissionId],
+      foreignColumns: [submissions.relationshipId, submissions.id],
+    }),
+    relationshipKey('review_files', t, () => relationships),
+    sharedPolicy('review_files'),
+    restrictPolicy('review_files_own_side', ownSideOnly('side'), 'insert'),
   ],
 )

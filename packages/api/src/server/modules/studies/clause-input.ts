@@ -1,5 +1,6 @@
 import {
   convert,
+  type ByHandFacts,
   type CalibrationFacts,
   type Clause,
   type ClauseInput,
@@ -17,6 +18,8 @@ export interface ClauseInputFacts {
   study: StudyOfTask | null
   /** Studies registered on the task since criteria came into force, this one included. */
   attempts: number
+  /** What a person judged on a document; null where nobody has. */
+  byHand?: ByHandFacts | null
 }
 
 /**
@@ -29,6 +32,7 @@ export function clauseInputOf({
   gauge,
   study,
   attempts,
+  byHand = null,
 }: ClauseInputFacts): ClauseInput {
   return {
     kind: 'clause',
@@ -37,6 +41,8 @@ export function clauseInputOf({
     design: study && { registeredBeforehand: study.study.registeredBeforehand, attempts },
     calibration: study && calibrationOf(study),
     data: study && dataOf(study, characteristic.unit),
+    // Only a clause that is judged by hand knows of it.
+    ...(clause.type === 'by-hand' ? { byHand } : {}),
   }
 }
 

@@ -1,122 +1,122 @@
-import { summaryOf, type SubmissionContent } from '../../../contract/submission-content'
+import { clauseKey } from '@evenrule/metrology'
 import { dayIn } from '../../calendar'
 import type { Tenant } from '../../db/tenant'
-import { criteriaFor, criteriaSince } from '../agreements/agreements.apply.service'
-import { fileById } from '../files/files.service'
+import { criteriaFor, criteriaSince, termsFor } from '../agreements/agreements.apply.service'
 import { gaugeById } from '../gauges/gauges.lookup.service'
+import { houseTermsFor } from '../house-terms/house-terms.lookup.service'
 import { frozenCharacteristic, taskById } from '../parts/parts.lookup.service'
 import { partRow } from '../parts/parts.service'
-import { canonicalText, sha256 } from '../record/record.append'
 import { partiesOf as partyNames, relationshipById } from '../relationships/relationships.lookup.service'
-import { clauseInputOf } from '../studies/clause-input'
+import { openRequestsOf } from '../requests/requests.answers.service'
 import { attemptsOn, resultsForTask, type StudyOfTask } from '../studies/studies.results.service'
-import {
-  byRegistration,
-  frozenResult,
-  frozenStudy,
-  versionsOf,
-  whatJudges,
-  type ToJudge,
-} from './submissions.content'
-import { selectChosen, selectEffectiveDays, type ChosenStudy } from './submissions.draft.repository'
-import type { insertFrozen } from './submissions.frozen.repository'
+import { byHandOf } from './submissions.by-hand.repository'
+import { byRegistration, newestOf, versionsOf, whatJudges, type ToJudge } from './submissions.content'
+import { selectChosen, selectEffectiveDays } from './submissions.draft.repository'
+import { asFrozenFile, freeze, type Basis, type Frozen } from './submissions.freeze'
 import { nextNumber, type SubmissionRow } from './submissions.repository'
 
-type ToFreeze = Parameters<typeof insertFrozen>[2]
-
 /** What signing now would freeze. */
-export interface Prepared extends ToFreeze, ReturnType<typeof summaryOf> {
-  content: SubmissionContent
-  /** The studies it rests on, in the revisions it would freeze. */
-  chosen: ChosenStudy[]
-  /** Those who took the readings; none of them may sign. */
-  takenBy: string[]
+export interface Prepared extends Frozen {
   /** Every computed study of the task, to choose from. */
   studies: StudyOfTask[]
+  taskInUse: boolean
 }
 
 /** Computes everything that signing now would freeze; stores nothing. The supplier's alone. */
 export async function whatSigningFreezes(tenant: Tenant, submission: SubmissionRow): Promise<Prepared> {
-  const { relationshipId, taskId, partId, characteristicId } = submission
-  const relationship = await partiesOf(tenant, relationshipId)
-  const criteriaOn = dayIn(relationship.timeZone, tenant.now)
-  const scope = { relationshipId, partId, characteristicId, on: criteriaOn }
-  const task = await taskById(tenant, taskId)
-  const gauge = await gaugeById(tenant, task.gaugeId)
-  const characteristic = await frozenCharacteristic(tenant, characteristicId)
-  const part = await partRow(tenant, partId)
-
+  const { relationshipId, taskId } = submission
   const studies = await resultsForTask(tenant, taskId)
   const chosenIds = (await selectChosen(tenant, submission.id)).map(({ studyId }) => studyId)
   const chosen = studies.filter(({ study }) => chosenIds.includes(study.id)).sort(byRegistration)
-  const attemptsSince = await criteriaSince(tenant, scope)
-  const attempts = await attemptsOn(tenant, taskId, attemptsSince)
+  const { timeZone, ...parties } = await partiesOf(tenant, relationshipId)
+  const on = dayIn(timeZone, tenant.now)
+  const criteria = await judgedBy(tenant, submission, on, chosen)
+  const byHand = (await byHandOf(tenant, submission.id)).filter(({ entry }) =>
+    criteria.judged.some(({ named }) => named.clauseKey === entry.clauseKey),
+  )
+  const task = await taskById(tenant, taskId)
+  const frozen = await freeze(tenant, {
+    content: {
+      format: 'evenrule.submission/1',
+      number: await nextNumber(tenant, relationshipId),
+      ...{ revision: 1, corrects: null, criteriaOn: on },
+      relationship: { ...parties, timeZone },
+      ...(await whatItIsAbout(tenant, submission, chosen)),
+      ...criteria.content,
+      byHand: byHand.map(({ entry: { clauseKey: key, verdict, reason }, file: { name, sha256 } }) => ({
+        ...{ clauseKey: key, verdict, reason, document: { name, sha256 } },
+      })),
+      requests: (await openRequestsOf(tenant, taskId)).map(({ id, number }) => ({ id, number })),
+    },
+    judged: criteria.judged,
+    advisory: criteria.advisory,
+    studies: chosen,
+    documents: byHand.map(({ file }) => ({ role: 'document' as const, ...asFrozenFile(file) })),
+  })
+  return { ...frozen, studies, taskInUse: task.archivedAt === null }
+}
 
-  const judged = whatJudges(await criteriaFor(tenant, scope), chosen)
-  const clauses = []
-  for (const each of judged) {
-    const { output, stored } = await tenant.services.engines.evaluateClause(
-      clauseInputOf({
-        clause: each.frozen.clause,
-        characteristic: each.study?.task.characteristic ?? characteristic,
-        gauge: each.study?.study.gauge ?? gauge,
-        study: each.study,
-        attempts: attempts.length,
-      }),
-    )
-    clauses.push({ judged: each, stored, verdict: output.verdict })
-  }
-  const files = await filesOf(tenant, chosen)
-
-  const content: SubmissionContent = {
-    format: 'evenrule.submission/1',
-    number: await nextNumber(tenant, relationshipId),
-    criteriaOn,
-    relationship,
-    characteristic,
+/** Part, characteristic and measuring task; the gauge is the one that the newest study was registered with. */
+async function whatItIsAbout(
+  tenant: Tenant,
+  { taskId, partId, characteristicId }: SubmissionRow,
+  chosen: readonly StudyOfTask[],
+): Promise<Pick<Basis['content'], 'part' | 'characteristic' | 'task'>> {
+  const task = await taskById(tenant, taskId)
+  const gauge = newestOf(chosen)?.study.gauge ?? (await gaugeById(tenant, task.gaugeId))
+  const part = await partRow(tenant, partId)
+  return {
+    characteristic: await frozenCharacteristic(tenant, characteristicId),
     part: { id: part.id, name: part.name },
     task: {
-      id: task.id,
-      gaugeCode: gauge.code,
-      gaugeName: gauge.name,
-      gaugeResolution: gauge.resolution,
-      gaugeUnit: gauge.unit,
-      site: task.site,
-      processStep: task.processStep,
+      ...{ id: task.id, gaugeCode: gauge.code, gaugeName: gauge.name },
+      ...{ gaugeResolution: gauge.resolution, gaugeUnit: gauge.unit },
+      ...{ site: task.site, processStep: task.processStep },
     },
-    agreements: versionsOf(judged, await effectiveDays(tenant, relationshipId, judged)),
-    clauses: clauses.map((each) => frozenResult(each.judged, each.stored, each.verdict)),
-    studies: chosen.map((study) =>
-      frozenStudy(study, files.find(({ row }) => row.id === study.data.fileId)?.row),
-    ),
-    attemptsSince,
-    attempts: attempts.map(
-      ({ code, registeredAt, registeredBeforehand, state, collectedOn, abandonReason }) => ({
-        ...{ code, registeredAt, registeredBeforehand, state, collectedOn, abandonReason },
-      }),
-    ),
-    files: files.map(({ role, row: { name, contentType, size, sha256: hash } }) => ({
-      ...{ role, name, contentType, size, sha256: hash },
-    })),
   }
-  const text = canonicalText(content)
+}
+
+type Criteria = Pick<Basis, 'judged' | 'advisory'> & {
+  content: Pick<
+    Basis['content'],
+    'criteria' | 'agreements' | 'terms' | 'houseTerms' | 'attemptsSince' | 'attempts'
+  >
+}
+
+/**
+ * What judges it on a day: the signed clauses that apply. Where there are none, the customer's house terms are judged
+ * for information, on the newest study.
+ */
+async function judgedBy(
+  tenant: Tenant,
+  { relationshipId, taskId, partId, characteristicId }: SubmissionRow,
+  on: string,
+  chosen: readonly StudyOfTask[],
+): Promise<Criteria> {
+  const scope = { relationshipId, partId, characteristicId, on }
+  const judged = whatJudges(await criteriaFor(tenant, scope), chosen)
+  const agreed = judged.length > 0
+  const attemptsSince = await criteriaSince(tenant, scope)
+  const attempts = await attemptsOn(tenant, taskId, attemptsSince)
+  const house = agreed ? null : await houseTermsFor(tenant, relationshipId)
   return {
-    content,
-    text,
-    sha256: sha256(text),
-    ...summaryOf(content),
-    clauses: clauses.map(({ judged: { frozen }, stored, verdict }) => ({
-      clauseKey: frozen.clauseKey,
-      verdict,
-      ...stored,
+    content: {
+      criteria: agreed ? 'agreed' : 'none',
+      agreements: versionsOf(judged, await effectiveDays(tenant, relationshipId, judged)),
+      terms: (await termsFor(tenant, scope)).values,
+      houseTerms: house && { id: house.id, number: house.number, sha256: house.sha256 },
+      attemptsSince,
+      attempts: attempts.map(
+        ({ code, registeredAt, registeredBeforehand, state, collectedOn, abandonReason }) => ({
+          ...{ code, registeredAt, registeredBeforehand, state, collectedOn, abandonReason },
+        }),
+      ),
+    },
+    judged,
+    advisory: (house?.clauses ?? []).map((clause) => ({
+      named: { clauseKey: clauseKey(clause), clause },
+      study: newestOf(chosen) ?? null,
     })),
-    files: files.map(({ role, row }) => ({
-      ...{ role, name: row.name, contentType: row.contentType, size: row.size },
-      ...{ sha256: row.sha256, storageKey: row.storageKey },
-    })),
-    chosen: chosen.map(({ study, data }) => ({ studyId: study.id, dataId: data.id })),
-    takenBy: [...new Set(chosen.flatMap(({ data }) => data.takenBy))],
-    studies,
   }
 }
 
@@ -130,24 +130,9 @@ export async function partiesOf(tenant: Tenant, relationshipId: string) {
   }
 }
 
-const effectiveDays = (tenant: Tenant, relationshipId: string, judged: readonly ToJudge[]) =>
+const effectiveDays = (tenant: Tenant, relationshipId: string, judged: readonly Pick<ToJudge, 'named'>[]) =>
   selectEffectiveDays(
     tenant,
     relationshipId,
-    judged.map(({ frozen }) => frozen.versionId),
+    judged.map(({ named }) => named.versionId),
   )
-
-/** The files that go with the chosen studies, each once: readings as uploaded, and the certificates of the day. */
-async function filesOf(tenant: Tenant, chosen: readonly StudyOfTask[]) {
-  const roles = ['readings', 'gauge-certificate', 'standard-certificate'] as const
-  const found = []
-  for (const role of roles) {
-    const ids = chosen.map(({ data, calibration }) =>
-      role === 'readings'
-        ? data.fileId
-        : (role === 'gauge-certificate' ? calibration.gauge : calibration.standard)?.fileId,
-    )
-    for (const id of new Set(ids)) if (id) found.push({ role, row: await fileById(tenant, id) })
-  }
-  return found
-}

@@ -1,10 +1,20 @@
 import type { SubmissionPrecondition, SubmissionState } from '../../../contract/moves/submission'
 import { defineError, wrongState, type ProblemError } from '../../errors'
 
-const noCriteria = defineError(
-  'no-criteria',
+const taskArchived = defineError(
+  'task-archived',
   409,
-  'No signed criteria apply to this measuring task today. Agree on criteria with the customer first.',
+  'This measuring task was archived meanwhile, so it needs no proof. Discard the submission, or use the task again.',
+)
+const nothingToJudge = defineError(
+  'nothing-to-judge',
+  409,
+  'No criteria are agreed and no study is chosen, so there is nothing to submit. Choose a study first.',
+)
+const needsApprover = defineError(
+  'needs-approver',
+  403,
+  'No criteria are agreed for this submission, so an approver decides. Ask an approver of your organisation.',
 )
 const otherDraft = defineError(
   'other-draft',
@@ -56,6 +66,7 @@ export const stateWords: Record<SubmissionState, string> = {
   challenged: 'challenged',
   answered: 'answered',
   'awaiting-second-person': 'waiting for the second person',
+  'awaiting-other-side': 'waiting for the supplier’s approver',
   accepted: 'accepted',
   'accepted-with-conditions': 'accepted with conditions',
   refused: 'refused',
@@ -68,7 +79,8 @@ export const wrongSubmissionState = (state: SubmissionState): ProblemError =>
 
 /** What to say where a condition of a move does not hold; null where only the state can be at fault. */
 export const refusals: Record<SubmissionPrecondition, (() => ProblemError) | null> = {
-  'criteria-in-force': noCriteria,
+  'task-in-use': taskArchived,
+  'something-to-judge': nothingToJudge,
   'no-other-draft': otherDraft,
   'reason-given': reasonMissing,
   'did-not-take-readings': tookTheReadings,
@@ -79,6 +91,8 @@ export const refusals: Record<SubmissionPrecondition, (() => ProblemError) | nul
   'challenges-settled': challengeUnsettled,
   'safety-class': null,
   'not-safety-class': null,
+  'criteria-agreed': needsApprover,
+  'no-criteria-agreed': null,
   'no-newer-accepted': newerAccepted,
   'newer-accepted': null,
   'without-conditions': null,

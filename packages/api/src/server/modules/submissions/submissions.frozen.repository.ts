@@ -1,4 +1,4 @@
-import { and, asc, eq } from 'drizzle-orm'
+import { and, asc, desc, eq } from 'drizzle-orm'
 import type { Tenant } from '../../db/tenant'
 import type { SubmissionRow } from './submissions.repository'
 import {
@@ -11,13 +11,24 @@ import {
 type Key = Pick<SubmissionRow, 'relationshipId' | 'id'>
 type Shared = Pick<SubmissionRow, 'relationshipId' | 'supplierOrgId' | 'customerOrgId' | 'id'>
 
+export type FrozenTextRow = typeof submissionTexts.$inferSelect
 export type FrozenClauseRow = typeof submissionClauses.$inferSelect
 export type FrozenFileRow = typeof submissionFiles.$inferSelect
 export type SignatureRow = typeof submissionSignatures.$inferSelect
 type NewOf<T, K extends keyof T> = Omit<
   T,
-  'id' | 'relationshipId' | 'supplierOrgId' | 'customerOrgId' | 'submissionId' | K
+  'id' | 'relationshipId' | 'supplierOrgId' | 'customerOrgId' | 'submissionId' | 'revision' | K
 >
+export type FileToFreeze = NewOf<FrozenFileRow, never>
+
+/** One revision of what a submission freezes. */
+export interface ToFreeze {
+  revision: number
+  text: string
+  sha256: string
+  clauses: NewOf<FrozenClauseRow, 'position'>[]
+  files: FileToFreeze[]
+}
 
 const sharedOf = ({ id, relationshipId, supplierOrgId, customerOrgId }: Shared) => ({
   submissionId: id,
@@ -30,48 +41,75 @@ const sharedOf = ({ id, relationshipId, supplierOrgId, customerOrgId }: Shared) 
 export async function insertFrozen(
   { tx, now }: Tenant,
   submission: Shared,
-  frozen: {
-    text: string
-    sha256: string
-    clauses: NewOf<FrozenClauseRow, 'position'>[]
-    files: NewOf<FrozenFileRow, never>[]
-  },
+  { revision, text, sha256, clauses, files }: ToFreeze,
 ): Promise<void> {
-  const shared = sharedOf(submission)
-  if (frozen.clauses.length > 0)
+  const shared = { ...sharedOf(submission), revision }
+  if (clauses.length > 0)
     await tx
       .insert(submissionClauses)
-      .values(frozen.clauses.map((clause, position) => ({ ...shared, ...clause, position })))
-  if (frozen.files.length > 0)
-    await tx.insert(submissionFiles).values(frozen.files.map((file) => ({ ...shared, ...file })))
-  const { text, sha256 } = frozen
-  await tx.insert(submissionTexts).values({ ...shared, text, sha256, frozenAt: now })
+      .values(clauses.map((clause, position) => ({ ...shared, ...clause, position })))
+  if (files.length > 0) await tx.insert(submissionFiles).values(files.map((file) => ({ ...shared, ...file })))
+  const corrects = revision === 1 ? null : revision - 1
+  await tx.insert(submissionTexts).values({ ...shared, corrects, text, sha256, frozenAt: now })
 }
 
+/** Every signed text of a submission, the first first. */
+export async function selectTexts({ tx }: Tenant, { relationshipId, id }: Key): Promise<FrozenTextRow[]> {
+  return tx
+    .select()
+    .from(submissionTexts)
+    .where(and(eq(submissionTexts.relationshipId, relationshipId), eq(submissionTexts.submissionId, id)))
+    .orderBy(asc(submissionTexts.revision))
+}
+
+/** The newest signed text of a submission. */
 export async function selectText(
   { tx }: Tenant,
   { relationshipId, id }: Key,
-): Promise<{ text: string; sha256: string } | undefined> {
+): Promise<FrozenTextRow | undefined> {
   const [row] = await tx
-    .select({ text: submissionTexts.text, sha256: submissionTexts.sha256 })
+    .select()
     .from(submissionTexts)
     .where(and(eq(submissionTexts.relationshipId, relationshipId), eq(submissionTexts.submissionId, id)))
+    .orderBy(desc(submissionTexts.revision))
+    .limit(1)
   return row
 }
 
-export async function selectClauses({ tx }: Tenant, { relationshipId, id }: Key): Promise<FrozenClauseRow[]> {
+export async function selectClauses(
+  { tx }: Tenant,
+  { relationshipId, id }: Key,
+  revision: number,
+): Promise<FrozenClauseRow[]> {
   return tx
     .select()
     .from(submissionClauses)
-    .where(and(eq(submissionClauses.relationshipId, relationshipId), eq(submissionClauses.submissionId, id)))
+    .where(
+      and(
+        eq(submissionClauses.relationshipId, relationshipId),
+        eq(submissionClauses.submissionId, id),
+        eq(submissionClauses.revision, revision),
+      ),
+    )
     .orderBy(asc(submissionClauses.position))
 }
 
-export async function selectFiles({ tx }: Tenant, { relationshipId, id }: Key): Promise<FrozenFileRow[]> {
+/** Files of one revision, or of all of them. */
+export async function selectFiles(
+  { tx }: Tenant,
+  { relationshipId, id }: Key,
+  revision?: number,
+): Promise<FrozenFileRow[]> {
   return tx
     .select()
     .from(submissionFiles)
-    .where(and(eq(submissionFiles.relationshipId, relationshipId), eq(submissionFiles.submissionId, id)))
+    .where(
+      and(
+        eq(submissionFiles.relationshipId, relationshipId),
+        eq(submissionFiles.submissionId, id),
+        revision === undefined ? undefined : eq(submissionFiles.revision, revision),
+      ),
+    )
     .orderBy(asc(submissionFiles.role), asc(submissionFiles.name), asc(submissionFiles.id))
 }
 
@@ -89,7 +127,7 @@ export async function selectSignatures({ tx }: Tenant, { relationshipId, id }: K
 export async function insertSignature(
   tenant: Tenant,
   submission: Shared,
-  signature: Pick<SignatureRow, 'meaning' | 'sha256'> & { decisionId?: string },
+  signature: Pick<SignatureRow, 'meaning' | 'revision' | 'sha256'> & { decisionId?: string },
 ): Promise<void> {
   await tenant.tx.insert(submissionSignatures).values({
     ...sharedOf(submission),

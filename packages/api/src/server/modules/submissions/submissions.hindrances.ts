@@ -11,7 +11,9 @@ import type { SubmissionFacts } from './submissions.move.service'
 
 /** Conditions that a person should know of before trying; what comes with the request itself is none of them. */
 const codes: Partial<Record<SubmissionPrecondition, Hindrance['code']>> = {
-  'criteria-in-force': 'no-criteria',
+  'task-in-use': 'task-archived',
+  'something-to-judge': 'nothing-to-judge',
+  'criteria-agreed': 'needs-approver',
   'did-not-take-readings': 'took-the-readings',
   'another-person': 'same-person',
   'no-challenge-open': 'challenge-open',

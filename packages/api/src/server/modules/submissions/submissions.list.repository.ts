@@ -1,6 +1,6 @@
 import { and, eq, inArray, isNotNull, sql } from 'drizzle-orm'
 import type { SubmissionQuery, SubmissionSort } from '../../../contract/submissions'
-import { submissionStates, waitsOn } from '../../../contract/moves/submission'
+import { acceptedStates, submissionStates, waitsOn } from '../../../contract/moves/submission'
 import { verdictSchema } from '../../../contract/submission-content'
 import { ownSide } from '../../db/own-side'
 import { containing, orderOf, totalOverPages, windowOf } from '../../db/paging'
@@ -32,7 +32,12 @@ export type SubmissionListed = Awaited<ReturnType<typeof selectSubmissions>>[num
  * One page of submissions in one query; every row carries the total. What waits for somebody comes oldest first,
  * the whole list with what moved last on top, unless another order is asked for.
  */
-export async function selectSubmissions(tenant: Tenant, query: SubmissionQuery) {
+export async function selectSubmissions(
+  tenant: Tenant,
+  query: SubmissionQuery,
+  /** Only these; without them all. */
+  ids?: readonly string[],
+) {
   const { relationshipId, taskId, partId } = submissions
   const other = tenant.side === 'supplier' ? submissions.customerOrgId : submissions.supplierOrgId
   const waiting = submissionStates.filter((state) => waitsOn[state] === query.waitsOn)
@@ -70,7 +75,9 @@ export async function selectSubmissions(tenant: Tenant, query: SubmissionQuery) 
       and(
         ownSide(tenant, submissions),
         tenant.side === 'customer' ? isNotNull(submissions.submittedAt) : undefined,
+        ids ? inArray(submissions.id, [...ids]) : undefined,
         query.state ? eq(submissions.state, query.state) : undefined,
+        query.criteria ? eq(submissions.criteria, query.criteria) : undefined,
         query.waitsOn ? inArray(submissions.state, waiting) : undefined,
         query.verdict ? eq(submissions.verdict, query.verdict) : undefined,
         query.safety ? eq(submissions.safety, query.safety === 'true') : undefined,
@@ -92,4 +99,13 @@ export async function selectSubmissions(tenant: Tenant, query: SubmissionQuery) 
     .orderBy(...orderOf(columns, query.sort ?? (query.waitsOn ? '-age' : 'age'), submissions.id))
     .limit(windowOf(query).limit)
     .offset(windowOf(query).offset)
+}
+
+/** Ids of every accepted submission of this side: of what can have a standing. */
+export async function selectAcceptedIds(tenant: Tenant): Promise<string[]> {
+  const rows = await tenant.tx
+    .select({ id: submissions.id })
+    .from(submissions)
+    .where(and(ownSide(tenant, submissions), inArray(submissions.state, [...acceptedStates])))
+  return rows.map(({ id }) => id)
 }

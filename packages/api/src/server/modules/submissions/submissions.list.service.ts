@@ -1,10 +1,12 @@
 import { waitsOn } from '../../../contract/moves/submission'
+import type { Standing, StandingState } from '../../../contract/standing'
 import { verdictSchema } from '../../../contract/submission-content'
 import type { SubmissionQuery, SubmissionRow as SubmissionInList } from '../../../contract/submissions'
 import { dayIn, daysBetween } from '../../calendar'
 import { paged } from '../../db/paging'
 import type { Tenant } from '../../db/tenant'
-import { selectSubmissions, type SubmissionListed } from './submissions.list.repository'
+import { standingsOf } from '../standing/standing.service'
+import { selectAcceptedIds, selectSubmissions, type SubmissionListed } from './submissions.list.repository'
 
 /** Calendar days, in the relationship's time zone, from an instant until now. */
 export const ageInDays = (tenant: Tenant, timeZone: string, since: string): number =>
@@ -12,19 +14,32 @@ export const ageInDays = (tenant: Tenant, timeZone: string, since: string): numb
 
 /** One page of this side's submissions. */
 export async function listOfSubmissions(tenant: Tenant, query: SubmissionQuery) {
+  const ids = query.standing && (await idsStanding(tenant, query.standing))
   return paged(
     query,
-    (page) => selectSubmissions(tenant, page),
-    (rows) => rows.map((row) => asItem(tenant, row)),
+    (page) => selectSubmissions(tenant, page, ids),
+    async (rows) => {
+      const standings = await standingsOf(
+        tenant,
+        rows.map(({ submission }) => submission.id),
+      )
+      return rows.map((row) => asItem(tenant, row, standings.get(row.submission.id) ?? null))
+    },
   )
 }
 
-function asItem(tenant: Tenant, row: SubmissionListed): SubmissionInList {
+/** A standing follows from dates, so those that stand so are found by looking at every accepted one. */
+async function idsStanding(tenant: Tenant, state: StandingState): Promise<string[]> {
+  const standings = await standingsOf(tenant, await selectAcceptedIds(tenant))
+  return [...standings].flatMap(([id, standing]) => (standing.state === state ? [id] : []))
+}
+
+function asItem(tenant: Tenant, row: SubmissionListed, standing: Standing | null): SubmissionInList {
   const { submission, task, characteristic, partNumber, revision, other, timeZone } = row
-  const { id, number, state, taskId, partId, safety, clausesMet, clausesTotal } = submission
+  const { id, number, state, taskId, partId, safety, criteria, clausesMet, clausesTotal } = submission
   const { nominal, lowerLimit, upperLimit, unit } = characteristic
   return {
-    ...{ id, number, state, taskId, partId, safety, clausesMet, clausesTotal },
+    ...{ id, number, state, taskId, partId, safety, criteria, clausesMet, clausesTotal, standing },
     ageDays: ageInDays(tenant, timeZone, submission.stateSince),
     waitsOn: waitsOn[state],
     gaugeCode: task.gaugeCode,

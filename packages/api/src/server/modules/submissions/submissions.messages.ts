@@ -62,9 +62,12 @@ export const submissionMessages = {
     body: ['Read it, then sign it or return it with a note. Whoever took the readings may not sign.', note],
   }),
   returned: (note: string) => ({ subject: 'Returned with a note', body: [note] }),
-  signed: (met: number, total: number) => ({
+  signed: (criteria: 'agreed' | 'none', met: number, total: number) => ({
     subject: 'Waits for your decision',
-    body: [countOfClauses(met, total), 'Accept it, accept it with conditions, or challenge a result.'],
+    body:
+      criteria === 'agreed'
+        ? [countOfClauses(met, total), 'Accept it, accept it with conditions, or challenge a result.']
+        : ['No criteria are agreed for it.', 'An approver of each side decides on this one alone.'],
   }),
   withdrawn: (reason: string) => ({
     subject: 'Taken back',

@@ -1,20 +1,24 @@
 import type { BodyOf } from '../../../contract/define'
 import type { Moved } from '../../../contract/reviews'
 import type { chooseStudies, prepareSubmission, sendForSignature } from '../../../contract/submissions'
-import { dayIn } from '../../calendar'
 import type { Tenant } from '../../db/tenant'
 import { uniqueOr409 } from '../../db/unique'
 import { changedMeanwhile, invalidInput } from '../../errors'
-import { criteriaFor } from '../agreements/agreements.apply.service'
-import { isArchived } from '../parts/parts.errors'
 import { frozenCharacteristic, taskById } from '../parts/parts.lookup.service'
 import { resultsForTask, type StudyOfTask } from '../studies/studies.results.service'
-import { byRegistration } from './submissions.content'
-import { partiesOf, whatSigningFreezes } from './submissions.content.service'
+import { newestOf } from './submissions.content'
+import { whatSigningFreezes, type Prepared } from './submissions.content.service'
 import { insertNote, replaceChosen } from './submissions.draft.repository'
 import { wrongSubmissionState } from './submissions.errors'
 import { about, submissionMessages, tell } from './submissions.messages'
-import { asMoved, makeMove, openForMove, permittedMove, recordSubmission } from './submissions.move.service'
+import {
+  asMoved,
+  makeMove,
+  openForMove,
+  permittedMove,
+  recordSubmission,
+  type SubmissionFacts,
+} from './submissions.move.service'
 import { hasUnsigned, insertSubmission, updateSubmission } from './submissions.repository'
 
 // Two at once both see none: the database has the last word.
@@ -28,17 +32,13 @@ const meanwhile = {
 /** Prepares a submission of a measuring task from its studies; without a choice from the newest computed one. */
 export async function prepare(tenant: Tenant, body: BodyOf<typeof prepareSubmission>): Promise<Moved> {
   const task = await taskById(tenant, body.taskId)
-  if (task.archivedAt) throw isArchived('measuring task')
   const { relationshipId, supplierOrgId, customerOrgId, partId, characteristicId } = task
-  const { timeZone } = await partiesOf(tenant, relationshipId)
-  const on = dayIn(timeZone, tenant.now)
-  const criteria = await criteriaFor(tenant, { relationshipId, partId, characteristicId, on })
   const move = permittedMove(tenant, 'prepare', null, {
-    'criteria-in-force': criteria.length > 0,
+    'task-in-use': task.archivedAt === null,
     'no-other-draft': !(await hasUnsigned(tenant, task.id)),
   })
   const studies = await resultsForTask(tenant, task.id)
-  const newest = [...studies].sort((a, b) => byRegistration(b, a))[0]
+  const newest = newestOf(studies)
   const chosen = pick(studies, body.studyIds ?? (newest ? [newest.study.id] : []))
   const { class: ofClass } = await frozenCharacteristic(tenant, characteristicId)
   const submission = await uniqueOr409(meanwhile, () =>
@@ -82,9 +82,7 @@ export async function send(
 ): Promise<Moved> {
   const submission = await openForMove(tenant, id, expectedVersion)
   const prepared = await whatSigningFreezes(tenant, submission)
-  const move = permittedMove(tenant, 'send-for-signature', submission, {
-    'criteria-in-force': prepared.clausesTotal > 0,
-  })
+  const move = permittedMove(tenant, 'send-for-signature', submission, preparedFacts(prepared))
   await replaceChosen(tenant, submission, prepared.chosen)
   if (note) await insertNote(tenant, submission, note)
   const moved = await makeMove(
@@ -98,6 +96,12 @@ export async function send(
   await tell(tenant, moved, 'own side', 'submission', words, ['supplier-approver'])
   return asMoved(moved)
 }
+
+/** What stands in the way of handing on what would be frozen now. */
+export const preparedFacts = ({ taskInUse, clausesTotal, chosen }: Prepared): SubmissionFacts => ({
+  'task-in-use': taskInUse,
+  'something-to-judge': clausesTotal > 0 || chosen.length > 0,
+})
 
 /** Returns what waits for signature to its draft, with a note. */
 export async function giveBack(

@@ -1,20 +1,23 @@
 import { contentOf, summaryOf } from '../../../contract/submission-content'
 import type { Submission } from '../../../contract/submissions'
+import { dayIn } from '../../calendar'
 import type { Tenant } from '../../db/tenant'
+import { notFound } from '../../errors'
 import { namesOfPeople } from '../organisations/people.repository'
-import { selectChallenges, selectMessages } from '../reviews/challenges.repository'
-import { challengeAnswers } from '../reviews/challenges.read'
-import { selectDecisions } from '../reviews/decisions.repository'
-import { decisionAnswers } from '../reviews/decisions.read'
+import { readReview } from '../reviews/reviews.read.service'
 import { reviewFacts } from '../reviews/reviews.facts.service'
+import { standingsOf } from '../standing/standing.service'
+import { byHandAsked } from './submissions.by-hand.service'
 import { byRegistration } from './submissions.content'
 import { partiesOf, whatSigningFreezes, type Prepared } from './submissions.content.service'
 import { selectNotes } from './submissions.draft.repository'
-import { selectClauses, selectFiles, selectSignatures, selectText } from './submissions.frozen.repository'
+import { selectClauses, selectFiles, selectSignatures, selectTexts } from './submissions.frozen.repository'
 import { hindrancesOf } from './submissions.hindrances'
 import { ageInDays } from './submissions.list.service'
 import { submissionById, type SubmissionFacts } from './submissions.move.service'
+import { preparedFacts } from './submissions.prepare.service'
 import { selectNumber, type SubmissionRow } from './submissions.repository'
+import { maySignFor } from './submissions.sign.service'
 
 type Content = Pick<
   Submission,
@@ -27,32 +30,29 @@ type Content = Pick<
   | 'evaluations'
   | 'files'
   | 'choices'
+  | 'criteria'
+  | 'revision'
+  | 'revisions'
+  | 'byHand'
 > & { facts: SubmissionFacts }
 
-/** One submission with everything in it, as far as the reader's side may see it. */
-export async function readSubmissionOf(tenant: Tenant, id: string): Promise<Submission> {
+/** One submission with everything in it, as far as the reader's side may see it; of the newest text or an earlier. */
+export async function readSubmissionOf(tenant: Tenant, id: string, revision?: number): Promise<Submission> {
   const submission = await submissionById(tenant, id)
   const { timeZone } = await partiesOf(tenant, submission.relationshipId)
   const { facts, ...content } =
-    submission.number === null ? await asPrepared(tenant, submission) : await asFrozen(tenant, submission)
+    submission.number === null
+      ? await asPrepared(tenant, submission)
+      : await asFrozen(tenant, submission, revision)
 
   const signatures = await selectSignatures(tenant, submission)
-  const decisions = await selectDecisions(tenant, submission)
-  const challenges = await selectChallenges(tenant, submission)
-  const messages = await selectMessages(
-    tenant,
-    submission,
-    challenges.map((challenge) => challenge.id),
-  )
   const notes = tenant.side === 'supplier' ? await selectNotes(tenant, id) : []
+  const review = await readReview(tenant, submission, dayIn(timeZone, tenant.now))
   const names = await namesOfPeople(tenant, [
     ...signatures.map(({ userId }) => userId),
-    ...decisions.flatMap(({ decidedBy, secondBy }) => [decidedBy, secondBy]),
-    ...challenges.map(({ closedBy }) => closedBy),
-    ...messages.map(({ userId }) => userId),
     ...notes.map(({ userId }) => userId),
   ])
-  const nameOf = (userId: string | null) => (userId === null ? null : (names.get(userId) ?? null))
+  const nameOf = (userId: string) => names.get(userId) ?? null
 
   const { number, state, rowVersion, relationshipId, taskId, partId, characteristicId } = submission
   const { createdAt, sentForSignatureAt, submittedAt, decidedAt, withdrawalReason } = submission
@@ -60,13 +60,14 @@ export async function readSubmissionOf(tenant: Tenant, id: string): Promise<Subm
     ...{ id, number, state, rowVersion, relationshipId, taskId, partId, characteristicId },
     ...{ createdAt, sentForSignatureAt, submittedAt, decidedAt, withdrawalReason },
     ageDays: ageInDays(tenant, timeZone, submission.stateSince),
+    today: dayIn(timeZone, tenant.now),
     supersededBy: await newer(tenant, submission),
+    standing: (await standingsOf(tenant, [id])).get(id) ?? null,
     ...content,
-    signatures: signatures.map(({ side, userId, meaning, sha256, signedAt }) => ({
-      ...{ side, name: nameOf(userId), meaning, sha256, signedAt },
+    signatures: signatures.map(({ side, userId, meaning, revision: of, sha256, signedAt }) => ({
+      ...{ side, name: nameOf(userId), meaning, revision: of, sha256, signedAt },
     })),
-    decisions: decisionAnswers(tenant, submission, decisions, nameOf),
-    challenges: challengeAnswers(challenges, messages, nameOf),
+    ...review,
     notes: notes.map((note) => ({
       ...{ id: note.id, name: nameOf(note.userId), text: note.text, createdAt: note.createdAt },
     })),
@@ -77,33 +78,45 @@ export async function readSubmissionOf(tenant: Tenant, id: string): Promise<Subm
 /** Before signing: what signing now would freeze, and what a draft may choose from. */
 async function asPrepared(tenant: Tenant, submission: SubmissionRow): Promise<Content> {
   const prepared = await whatSigningFreezes(tenant, submission)
-  const { text, sha256, verdict, clausesMet, clausesTotal, content, clauses, takenBy } = prepared
+  const { text, sha256, verdict, clausesMet, clausesTotal, content, clauses } = prepared
+  const isDraft = submission.state === 'draft'
   return {
     ...{ text, sha256, verdict, clausesMet, clausesTotal },
+    ...{ criteria: content.criteria, revision: prepared.revision, revisions: [] },
     safety: content.characteristic.class === 'safety',
     evaluations: clauses,
     files: prepared.files.map((file) => ({ ...file, id: null })),
-    choices: submission.state === 'draft' ? choicesOf(prepared) : [],
-    facts: {
-      'criteria-in-force': clausesTotal > 0,
-      'did-not-take-readings': !takenBy.includes(tenant.userId),
-    },
+    choices: isDraft ? choicesOf(prepared) : [],
+    byHand: isDraft ? await byHandAsked(tenant, submission.id, prepared) : [],
+    facts: { ...preparedFacts(prepared), 'did-not-take-readings': maySignFor(tenant, prepared) },
   }
 }
 
 /** After signing: what was frozen, and nothing else. Verdict and counts are read from the signed text. */
-async function asFrozen(tenant: Tenant, submission: SubmissionRow): Promise<Content> {
-  const frozen = await selectText(tenant, submission)
-  if (!frozen) throw new Error(`The signed submission ${submission.id} has no text.`)
+async function asFrozen(tenant: Tenant, submission: SubmissionRow, revision?: number): Promise<Content> {
+  const texts = await selectTexts(tenant, submission)
+  const frozen = revision === undefined ? texts.at(-1) : texts.find((each) => each.revision === revision)
+  if (!frozen) {
+    if (revision !== undefined) throw notFound('revision of this submission')
+    throw new Error(`The signed submission ${submission.id} has no text.`)
+  }
+  // Nothing counts as met where a text is no submission any more; the check says so loudly.
+  const readable = (text: string) => contentOf(text) ?? { clauses: [], corrects: null }
   return {
-    ...frozen,
-    // Nothing counts as met where the text is no submission any more; the check says so loudly.
-    ...summaryOf(contentOf(frozen.text) ?? { clauses: [] }),
+    ...{ text: frozen.text, sha256: frozen.sha256, revision: frozen.revision },
+    ...summaryOf(readable(frozen.text)),
+    revisions: texts.map((each) => ({
+      ...{ revision: each.revision, sha256: each.sha256, frozenAt: each.frozenAt },
+      ...summaryOf(readable(each.text)),
+      challenge: readable(each.text).corrects?.challenge ?? null,
+    })),
+    criteria: submission.criteria ?? 'agreed',
     safety: submission.safety,
-    evaluations: await selectClauses(tenant, submission),
-    files: await selectFiles(tenant, submission),
+    evaluations: await selectClauses(tenant, submission, frozen.revision),
+    files: await selectFiles(tenant, submission, frozen.revision),
     choices: [],
-    facts: tenant.side === 'customer' ? await reviewFacts(tenant, submission) : {},
+    byHand: [],
+    facts: await reviewFacts(tenant, submission),
   }
 }
 

@@ -15,6 +15,7 @@ type SubmissionChange = Partial<
     | 'submittedAt'
     | 'decidedAt'
     | 'withdrawalReason'
+    | 'criteria'
     | 'verdict'
     | 'clausesMet'
     | 'clausesTotal'

@@ -1,5 +1,6 @@
 import * as contract from '../../../contract/submissions'
 import { tenantRoute, type Route } from '../../http/route'
+import { clear, judge } from './submissions.by-hand.service'
 import { listOfSubmissions } from './submissions.list.service'
 import { choose, discard, giveBack, prepare, send } from './submissions.prepare.service'
 import { readSubmissionOf } from './submissions.read.service'
@@ -9,9 +10,17 @@ import { downloadOf, verify } from './submissions.verify.service'
 export const submissionsRoutes: Route[] = [
   tenantRoute(contract.listSubmissions, ({ tenant, query }) => listOfSubmissions(tenant, query)),
   tenantRoute(contract.prepareSubmission, ({ tenant, body }) => prepare(tenant, body)),
-  tenantRoute(contract.readSubmission, ({ tenant, params }) => readSubmissionOf(tenant, params.submissionId)),
+  tenantRoute(contract.readSubmission, ({ tenant, params, query }) =>
+    readSubmissionOf(tenant, params.submissionId, query.revision),
+  ),
   tenantRoute(contract.chooseStudies, ({ tenant, params, body }) =>
     choose(tenant, params.submissionId, body),
+  ),
+  tenantRoute(contract.judgeByHand, ({ tenant, params, body }) =>
+    judge(tenant, params.submissionId, params.clauseKey, body),
+  ),
+  tenantRoute(contract.clearByHand, ({ tenant, params, body }) =>
+    clear(tenant, params.submissionId, params.clauseKey, body),
   ),
   tenantRoute(contract.sendForSignature, ({ tenant, params, body }) =>
     send(tenant, params.submissionId, body),

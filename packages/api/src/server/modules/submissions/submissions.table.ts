@@ -14,6 +14,9 @@ import {
 } from 'drizzle-orm/pg-core'
 import type { Side } from '../../../contract/access'
 import type { SubmissionState } from '../../../contract/moves/submission'
+import type { ByHandVerdict } from '../../../contract/by-hand-verdicts'
+import type { FileRole } from '../../../contract/submission-content'
+import type { SignatureMeaning } from '../../../contract/submissions'
 import {
   instant,
   ownerColumn,
@@ -26,6 +29,7 @@ import {
   sharedPolicy,
   supplierOnly,
 } from '../../db/columns'
+import { files } from '../files/files.table'
 import { measuringTasks } from '../parts/parts.table'
 import { relationships } from '../relationships/relationships.table'
 import { decisions } from '../reviews/reviews.table'
@@ -55,6 +59,8 @@ export const submissions = pgTable(
     decidedAt: instant(),
     /** Why the supplier took it back after signing; both sides read it. */
     withdrawalReason: text(),
+    /** Whether signed criteria judged it; null before it is signed. */
+    criteria: text().$type<'agreed' | 'none'>(),
     /** Overall verdict and counts, for lists; derived from the clauses when frozen. */
     verdict: text(),
     clausesMet: integer(),
@@ -71,6 +77,7 @@ export const submissions = pgTable(
       .on(t.relationshipId, t.taskId)
       .where(sql`state in ('draft', 'for-signature')`),
     check('submissions_signed_number', sql`(submitted_at is null) = (number is null)`),
+    check('submissions_signed_criteria', sql`(submitted_at is null) = (criteria is null)`),
     index('submissions_supplier_state').on(t.supplierOrgId, t.state, t.stateSince),
     index('submissions_customer_state').on(t.customerOrgId, t.state, t.stateSince),
     index('submissions_task').on(t.relationshipId, t.taskId),
@@ -140,27 +147,71 @@ export const submissionNotes = pgTable(
   ],
 )
 
+/** What a person judged by hand for a draft, on a document: the supplier's alone until it is frozen. */
+export const submissionByHand = pgTable(
+  'submission_by_hand',
+  {
+    ...ownerColumn,
+    relationshipId: uuid().notNull(),
+    submissionId: uuid().notNull(),
+    clauseKey: text().notNull(),
+    verdict: text().$type<ByHandVerdict>().notNull(),
+    reason: text().notNull(),
+    fileId: uuid().notNull(),
+    enteredBy: uuid().notNull(),
+    enteredAt: instant().notNull(),
+  },
+  (t) => [
+    primaryKey({ columns: [t.orgId, t.submissionId, t.clauseKey] }),
+    foreignKey({
+      name: 'submission_by_hand_submission_fk',
+      columns: [t.relationshipId, t.submissionId],
+      foreignColumns: [submissions.relationshipId, submissions.id],
+    }),
+    foreignKey({
+      name: 'submission_by_hand_file_fk',
+      columns: [t.orgId, t.fileId],
+      foreignColumns: [files.orgId, files.id],
+    }),
+    ownerPolicy('submission_by_hand'),
+  ],
+)
+
 const ofVisibleSubmission = 'exists (select 1 from submissions s where s.id = submission_id)'
 
-/** Frozen rows are the supplier's to write, and only until the text that closes the submission is written. */
+/** Frozen rows are the supplier's to write, and only until the text that closes their revision is written. */
 const beforeText = (table: string): string =>
-  `${supplierOnly} and not exists (select 1 from submission_texts f where f.submission_id = ${table}.submission_id)`
+  `${supplierOnly} and not exists (select 1 from submission_texts f where f.submission_id = ${table}.submission_id and f.revision >= ${table}.revision)`
+
+/** A text is written when the submission is signed, or while a challenge waits to be answered by a correction. */
+const whileSigning = `${supplierOnly} and exists (select 1 from submissions s where s.id = submission_id and s.state = case when revision = 1 then 'for-signature' else 'challenged' end)`
 
 /**
- * Everything frozen at signing: canonical JSON (RFC 8785) and its SHA-256, which the signatures name. Written
- * last of what is frozen; nobody may change it or add to the clauses and files it names.
+ * Everything frozen at a signature: canonical JSON (RFC 8785) and its SHA-256, which the signatures name. Written
+ * last of what is frozen; nobody may change it or add to the clauses and files it names. A correction adds a revision,
+ * the earlier ones stay.
  */
 export const submissionTexts = pgTable(
   'submission_texts',
   {
     ...sharedColumns,
     submissionId: uuid().notNull(),
+    revision: integer().notNull(),
+    /** The revision whose place it takes; null for the first. */
+    corrects: integer(),
     text: text().notNull(),
     sha256: text().notNull(),
     frozenAt: instant().notNull(),
   },
   (t) => [
-    primaryKey({ columns: [t.relationshipId, t.submissionId] }),
+    primaryKey({ columns: [t.relationshipId, t.submissionId, t.revision] }),
+    // Without a gap: each follows the one before.
+    check('submission_texts_in_order', sql`(revision = 1 and corrects is null) or corrects = revision - 1`),
+    foreignKey({
+      name: 'submission_texts_corrects_fk',
+      columns: [t.relationshipId, t.submissionId, t.corrects],
+      foreignColumns: [t.relationshipId, t.submissionId, t.revision],
+    }),
     foreignKey({
       name: 'submission_texts_submission_fk',
       columns: [t.relationshipId, t.submissionId],
@@ -169,7 +220,7 @@ export const submissionTexts = pgTable(
     relationshipKey('submission_texts', t, () => relationships),
     sharedPolicy('submission_texts'),
     restrictPolicy('submission_texts_visible', ofVisibleSubmission),
-    restrictPolicy('submission_texts_by_supplier', supplierOnly, 'insert'),
+    restrictPolicy('submission_texts_by_supplier', whileSigning, 'insert'),
   ],
 )
 
@@ -180,8 +231,11 @@ export const submissionClauses = pgTable(
     id: primaryId(),
     ...sharedColumns,
     submissionId: uuid().notNull(),
+    revision: integer().notNull(),
     position: integer().notNull(),
     clauseKey: text().notNull(),
+    /** Of a clause of house terms, judged for information. */
+    advisory: boolean().notNull(),
     verdict: text().notNull(),
     inputText: text().notNull(),
     outputText: text().notNull(),
@@ -190,7 +244,7 @@ export const submissionClauses = pgTable(
     engineSha256: text().notNull(),
   },
   (t) => [
-    unique('submission_clauses_key').on(t.relationshipId, t.submissionId, t.clauseKey),
+    unique('submission_clauses_key').on(t.relationshipId, t.submissionId, t.revision, t.clauseKey),
     foreignKey({
       name: 'submission_clauses_submission_fk',
       columns: [t.relationshipId, t.submissionId],
@@ -210,7 +264,8 @@ export const submissionFiles = pgTable(
     id: primaryId(),
     ...sharedColumns,
     submissionId: uuid().notNull(),
-    role: text().$type<'readings' | 'gauge-certificate' | 'standard-certificate'>().notNull(),
+    revision: integer().notNull(),
+    role: text().$type<FileRole>().notNull(),
     name: text().notNull(),
     contentType: text().notNull(),
     size: integer().notNull(),
@@ -218,7 +273,7 @@ export const submissionFiles = pgTable(
     storageKey: text().notNull(),
   },
   (t) => [
-    index('submission_files_submission').on(t.relationshipId, t.submissionId),
+    index('submission_files_submission').on(t.relationshipId, t.submissionId, t.revision),
     foreignKey({
       name: 'submission_files_submission_fk',
       columns: [t.relationshipId, t.submissionId],
@@ -231,8 +286,6 @@ export const submissionFiles = pgTable(
   ],
 )
 
-export type SignatureMeaning = 'submits' | 'accepts' | 'accepts-with-conditions' | 'refuses' | 'second-person'
-
 /** Signatures under a submission's frozen bytes: the supplier's approver, and those who decide. */
 export const submissionSignatures = pgTable(
   'submission_signatures',
@@ -243,6 +296,8 @@ export const submissionSignatures = pgTable(
     side: text().$type<Side>().notNull(),
     userId: uuid().notNull(),
     meaning: text().$type<SignatureMeaning>().notNull(),
+    /** The revision whose text it stands under, and that text's hash. */
+    revision: integer().notNull(),
     sha256: text().notNull(),
     /** The decision it is part of; null under the submission itself. */
     decisionId: uuid(),
@@ -257,9 +312,13 @@ export const submissionSignatures = pgTable(
       foreignColumns: [decisions.relationshipId, decisions.id],
     }),
     foreignKey({
-      name: 'submission_signatures_submission_fk',
-      columns: [t.relationshipId, t.submissionId],
-      foreignColumns: [submissions.relationshipId, submissions.id],
+      name: 'submission_signatures_text_fk',
+      columns: [t.relationshipId, t.submissionId, t.revision],
+      foreignColumns: [
+        submissionTexts.relationshipId,
+        submissionTexts.submissionId,
+        submissionTexts.revision,
+      ],
     }),
     relationshipKey('submission_signatures', t, () => relationships),
     sharedPolicy('submission_signatures'),
