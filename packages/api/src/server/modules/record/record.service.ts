@@ -1,19 +1,24 @@
 import type { Side } from '../../../contract/access'
 import type { AnswerInputOf, QueryOf } from '../../../contract/define'
-import type { listEvents, RecordEvent, RecordSubject, verifyRecord } from '../../../contract/record'
+import type {
+  listEvents,
+  listRecordChoices,
+  RecordEvent,
+  RecordSubject,
+  verifyRecord,
+} from '../../../contract/record'
 import { paged } from '../../db/paging'
 import type { Tenant } from '../../db/tenant'
 import { notFound } from '../../errors'
+import { selectTimeZone } from '../organisations/organisations.repository'
 import { namesOfPeople } from '../organisations/people.repository'
-import { genesisHash } from './record.append'
-import { contentOf, faultOf, type Link } from './record.check'
+import { recomputeChain } from './record.chain'
+import { contentOf } from './record.check'
 import {
   isOwnChain,
-  selectChainAfter,
-  selectChainEnd,
+  selectChoices,
   selectEvents,
   selectOrganisationNames,
-  type ChainEnd,
   type EventRow,
 } from './record.repository'
 import { namesOfSubjects } from './record.subjects.repository'
@@ -21,9 +26,10 @@ import { namesOfSubjects } from './record.subjects.repository'
 /** One page of the record, with the names that people and things have today. */
 export async function listOfEvents(tenant: Tenant, query: QueryOf<typeof listEvents>) {
   if (query.chainId && !(await isOwnChain(tenant, query.chainId))) throw notFound('record')
+  const timeZone = await selectTimeZone(tenant)
   return paged(
     query,
-    (page) => selectEvents(tenant, page),
+    (page) => selectEvents(tenant, page, timeZone),
     (rows) =>
       withNames(
         tenant,
@@ -66,53 +72,44 @@ const subjectOf = ({ subjectType, subjectId }: EventRow) => ({
   id: subjectId,
 })
 
-/** Events read at a time while a chain is recomputed. */
-const batch = 500
-
-type Check = AnswerInputOf<typeof verifyRecord>
-
-/** Recomputes a chain from its first event and compares its end with the head; 404 for chains of others. */
-export async function checkChain(tenant: Tenant, chainId: string, knownHash?: string): Promise<Check> {
+/** Recomputes a chain of this side; 404 for chains of others. */
+export async function checkChain(
+  tenant: Tenant,
+  chainId: string,
+  knownHash?: string,
+): Promise<AnswerInputOf<typeof verifyRecord>> {
   if (!(await isOwnChain(tenant, chainId))) throw notFound('record')
-  const link: Link = { chainId, sequence: 0, hash: genesisHash }
-  let last: Check['last'] = null
-  let known: Check['known'] = null
-  const broken = (sequence: number, fault: NonNullable<Check['broken']>['fault'], type: string | null) => ({
-    ...{ chainId, sound: link.sequence, last, known },
-    broken: { sequence, fault, type },
-  })
-  for (;;) {
-    const events = await selectChainAfter(tenant, chainId, link.sequence, batch)
-    for (const event of events) {
-      const fault = faultOf(event, link)
-      if (fault === 'missing') return broken(link.sequence + 1, fault, null)
-      if (fault) return broken(event.sequence, fault, event.type)
-      Object.assign(link, { sequence: event.sequence, hash: event.hash })
-      last = lastOf(event)
-      if (event.hash === knownHash) known = { sequence: event.sequence, at: event.at }
-    }
-    if (events.length === batch) continue
-    const end = await selectChainEnd(tenant, chainId)
-    // Somebody appended while this read: go on with what is new.
-    if (end.last > link.sequence) continue
-    const fault = faultAtEnd(end, link)
-    if (!fault) return { chainId, sound: link.sequence, last, known, broken: null }
-    if (fault.fault === 'added') {
-      // Events past the head follow from each other, but nobody vouches for them.
-      const [sound] = await selectChainAfter(tenant, chainId, fault.sequence - 2, 1)
-      link.sequence = fault.sequence - 1
-      last = sound && sound.sequence < fault.sequence ? lastOf(sound) : null
-    }
-    return broken(fault.sequence, fault.fault, null)
-  }
+  return recomputeChain(tenant, chainId, knownHash)
 }
 
-const lastOf = ({ sequence, at, hash }: EventRow) => ({ sequence, at, hash })
-
-/** Whether the head tells of the same last event: one cut off, or one added past it, shows here. */
-function faultAtEnd({ head }: ChainEnd, { sequence, hash }: Link) {
-  if (!head) return sequence === 0 ? null : { sequence, fault: 'end-missing' as const }
-  if (head.sequence > sequence) return { sequence: sequence + 1, fault: 'missing' as const }
-  if (head.sequence < sequence) return { sequence: head.sequence + 1, fault: 'added' as const }
-  return head.hash === hash ? null : { sequence, fault: 'end-changed' as const }
+/** What the events of a chain, or of every chain of this side, can be filtered by. */
+export async function choicesOf(
+  tenant: Tenant,
+  { chainId }: QueryOf<typeof listRecordChoices>,
+): Promise<AnswerInputOf<typeof listRecordChoices>> {
+  if (chainId && !(await isOwnChain(tenant, chainId))) throw notFound('record')
+  const { people, taskIds, clauseKeys } = await selectChoices(tenant, chainId)
+  const names = await namesOfPeople(
+    tenant,
+    people.map(({ id }) => id),
+  )
+  const companies = await selectOrganisationNames(tenant, [
+    ...new Set(people.flatMap(({ organisationId }) => organisationId ?? [])),
+  ])
+  const tasks = await namesOfSubjects(
+    tenant,
+    taskIds.map((id) => ({ type: 'measuring-task', id })),
+  )
+  return {
+    people: people.map(({ id, organisationId }) => ({
+      id,
+      name: names.get(id) ?? null,
+      organisation: companies.get(organisationId ?? '') ?? null,
+    })),
+    tasks: taskIds.flatMap((id) => {
+      const label = tasks.get(id)?.label
+      return label === undefined ? [] : [{ id, label }]
+    }),
+    clauseKeys,
+  }
 }

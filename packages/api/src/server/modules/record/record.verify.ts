@@ -1,0 +1,105 @@
+import { asc, sql } from 'drizzle-orm'
+import { contentOf } from '../../../contract/submission-content'
+import { checkSubmission } from '../../../contract/submission-check'
+import type { RecordCheck } from '../../../contract/record'
+import type { Database, Transaction } from '../../db/database'
+import type { Engines } from '../../integrations/engines'
+import { recomputeOn } from '../submissions/submissions.verify.service'
+import { submissionSignatures, submissionTexts } from '../submissions/submissions.table'
+import { recomputeChain } from './record.chain'
+import { selectSubmissionEvaluations } from './record.frozen.repository'
+
+export interface CheckedChain extends RecordCheck {
+  /** Whose chain it is: an organisation's name, or those of supplier and customer. */
+  name: string
+}
+
+export interface CheckedText {
+  submissionId: string
+  number: number | null
+  revision: number
+  evaluations: number
+  /** What differs, in short; null where everything is equal. */
+  fault: string | null
+}
+
+export interface VerifiedRecord {
+  chains: CheckedChain[]
+  texts: CheckedText[]
+}
+
+/**
+ * Recomputes every chain of the database and every frozen evaluation on the engine it names, in one snapshot that
+ * changes nothing. For the owner of the database, who sees all organisations.
+ */
+export async function verifyWholeRecord(
+  database: Database,
+  engines: Engines,
+  knownHash?: string,
+): Promise<VerifiedRecord> {
+  return database.transaction(
+    async (tx) => {
+      const chains: CheckedChain[] = []
+      for (const { id, name } of await selectChains(tx))
+        chains.push({ name, ...(await recomputeChain({ tx }, id, knownHash)) })
+      return { chains, texts: await checkTexts(tx, engines) }
+    },
+    { isolationLevel: 'repeatable read', accessMode: 'read only' },
+  )
+}
+
+/** Every chain there is a trace of, by its head or by its events. */
+async function selectChains(tx: Transaction): Promise<{ id: string; name: string }[]> {
+  const { rows } = await tx.execute<{ id: string; name: string }>(sql`
+    select c.id, coalesce(o.name || ' (journal)', s.name || ' → ' || b.name, c.id::text) as name
+    from (select chain_id as id from record_heads union select chain_id from record_events) c
+    left join organisations o on o.id = c.id
+    left join relationships r on r.id = c.id
+    left join organisations s on s.id = r.supplier_org_id
+    left join organisations b on b.id = r.customer_org_id
+    order by o.name is null, name, c.id`)
+  return rows
+}
+
+async function checkTexts(tx: Transaction, engines: Engines): Promise<CheckedText[]> {
+  const { submissionId, revision, text, sha256 } = submissionTexts
+  const texts = await tx
+    .select({ submissionId, revision, text, sha256 })
+    .from(submissionTexts)
+    .orderBy(asc(submissionTexts.frozenAt), asc(submissionId), asc(revision))
+  const signatures = await tx.select().from(submissionSignatures)
+  const checked: CheckedText[] = []
+  for (const frozen of texts) {
+    const evaluations = await selectSubmissionEvaluations({ tx }, frozen)
+    const previous = texts.find(
+      (each) => each.submissionId === frozen.submissionId && each.revision === frozen.revision - 1,
+    )
+    const check = await checkSubmission(
+      {
+        ...{ text: frozen.text, sha256: frozen.sha256, evaluations, previousText: previous?.text },
+        signatures: signatures.filter(
+          (each) => each.submissionId === frozen.submissionId && each.revision === frozen.revision,
+        ),
+      },
+      recomputeOn(engines),
+    )
+    checked.push({
+      ...{ submissionId: frozen.submissionId, revision: frozen.revision },
+      number: contentOf(frozen.text)?.number ?? null,
+      evaluations: evaluations.length,
+      fault: check.equal ? null : faultIn(check),
+    })
+  }
+  return checked
+}
+
+function faultIn(check: Awaited<ReturnType<typeof checkSubmission>>): string {
+  if (!check.text.equal) return 'the signed text was changed'
+  const signature = check.signatures.find(({ equal }) => !equal)
+  if (signature) return `a signature (${signature.meaning}) names another text`
+  const data = check.data.find(({ equal }) => !equal)
+  if (data) return `the readings of ${data.study} were changed`
+  const clause = check.clauses.find(({ equal }) => !equal)
+  if (clause) return `the evaluation of ${clause.clauseKey}: ${clause.problem ?? 'differs'}`
+  return 'it names another text as the one it corrects'
+}
