@@ -181,6 +181,8 @@ async function may(role: string, table: string, act: string): Promise<boolean> {
 describe('the running program', () => {
   /** What is written once: no column may be changed, no row removed. */
   const writtenOnce = [
+    'agreement_comments',
+    'agreement_marks',
     'agreement_signatures',
     'challenge_messages',
     'files',
@@ -198,6 +200,7 @@ describe('the running program', () => {
     'agreement_rounds',
     'agreement_versions',
     'agreements',
+    'house_terms',
     'memberships',
     'submission_studies',
   ]

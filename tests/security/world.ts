@@ -1,6 +1,15 @@
-import { gauges, reviews, roles, submissions, type Role, type Side } from '@evenrule/api/contract'
+import {
+  agreements,
+  gauges,
+  houseTerms,
+  reviews,
+  roles,
+  submissions,
+  type Role,
+  type Side,
+} from '@evenrule/api/contract'
 import type { Organisation, Person } from '../api/harness'
-import { startStory } from '../api/prepared'
+import { clauses, startStory } from '../api/prepared'
 
 /** Ids for the parameters of paths, and for fields of bodies, by their name. */
 export type Samples = Record<string, string>
@@ -70,6 +79,35 @@ export async function startWorld() {
       { body: { expectedVersion: 2, note: 'Which fixture was it?' } },
     )
 
+  // A negotiation in which the other side has commented and marked, begun from published house terms.
+  const { id: houseTermsId } = await story
+    .by('quality')
+    .call(houseTerms.beginHouseTerms, {}, { body: { clauses, words: 'What we ask of everybody.' } })
+  await story
+    .by('quality')
+    .call(houseTerms.publishHouseTerms, { houseTermsId }, { body: { expectedVersion: 1 } })
+  const { id: agreementId, versions } = await story.by('quality').call(
+    agreements.beginVersion,
+    {},
+    {
+      body: {
+        ...{ relationshipId: relationship.id, partId: other.part.id, houseTermsId, clauses },
+        ...{ effectiveOn: '2027-03-01', send: true },
+      },
+    },
+  )
+  const open = { agreementId, versionId: versions[0]?.id ?? '' }
+  const effective = versions[0]?.acceptance?.items.find(({ kind }) => kind === 'effective-on')
+  const about = { kind: 'effective-on' }
+  await story
+    .by('engineer')
+    .call(agreements.commentOnRound, open, { body: { round: 1, about, text: 'March is early.' } })
+  await story
+    .by('engineer')
+    .call(agreements.markAccepted, open, {
+      body: { round: 1, items: [{ about, sha256: effective?.sha256 }] },
+    })
+
   /** The first row of a query, as samples. */
   const one = async (text: string, ...values: unknown[]): Promise<Samples> => {
     const { rows } = await harness.owner.query<Samples>(text, values)
@@ -90,6 +128,7 @@ export async function startWorld() {
     submissionId: challenged,
     userId: story.people.reader.id,
     chainId: relationship.id,
+    houseTermsId,
     ...(await one(`select id as "challengeId" from challenges where submission_id = $1`, challenged)),
     ...(await one(`select id as "fileId" from files where org_id = $1 limit 1`, supplier.id)),
     ...(await one(
