@@ -100,6 +100,7 @@ export const plotWords = {
   readings: 'number of readings',
   value: 'value',
   entered: 'as entered',
+  note: 'in question',
   band: 'interval of the mean',
   order: 'in the order taken',
   trueBias: 'true bias',

@@ -14,12 +14,16 @@ export const actNames = [
   'refuse',
   'confirm',
   'send-back',
+  'agree-one-off',
+  'decline-one-off',
 ] as const
 export type ActName = (typeof actNames)[number]
 
 interface ActFacts extends Parties {
   gauge: string
   safety: boolean
+  /** No criteria are agreed: an approver of each side decides. */
+  oneOff: boolean
 }
 export interface ActWords {
   /** The question of the dialog. */
@@ -70,17 +74,19 @@ export const actWords: Record<ActName, ActWords> = {
   },
   accept: {
     title: 'Accept the submission?',
-    text: ({ supplier, gauge, safety }) =>
-      safety
-        ? `The characteristic is of class safety: a second person of your organisation must confirm before ${gauge} counts as accepted. ${supplier} is told then.`
-        : `${capital(gauge)} counts as accepted proof for this characteristic. ${supplier} is told at once, and the decision stands in the record of both sides.`,
+    text: ({ supplier, gauge, safety, oneOff }) =>
+      oneOff
+        ? `No criteria are agreed, so this is a decision for this once: ${safety ? 'a second person of your organisation confirms it, and then ' : ''}an approver of ${supplier} must agree before ${gauge} counts as accepted.`
+        : safety
+          ? `The characteristic is of class safety: a second person of your organisation must confirm before ${gauge} counts as accepted. ${supplier} is told then.`
+          : `${capital(gauge)} counts as accepted proof for this characteristic. ${supplier} is told at once, and the decision stands in the record of both sides.`,
     submit: 'Accept',
     cannot: 'You cannot accept it:',
   },
   'accept-with-conditions': {
     title: 'Accept it on conditions?',
-    text: ({ supplier, safety }) =>
-      `${supplier} sees what must follow and until when.${safety ? ' The characteristic is of class safety: a second person of your organisation must confirm first.' : ''} The decision stands in the record of both sides.`,
+    text: ({ supplier, safety, oneOff }) =>
+      `${supplier} sees what must follow and until when.${oneOff ? ` No criteria are agreed, so one of its approvers must agree before it counts.` : ''}${safety ? ' The characteristic is of class safety: a second person of your organisation must confirm first.' : ''} The decision stands in the record of both sides.`,
     submit: 'Accept with conditions',
     cannot: 'You cannot accept it on conditions:',
   },
@@ -105,6 +111,19 @@ export const actWords: Record<ActName, ActWords> = {
     submit: 'Send back to review',
     cannot: 'You cannot send it back:',
   },
+  'agree-one-off': {
+    title: 'Agree to the acceptance?',
+    text: ({ customer, gauge }) =>
+      `No criteria were agreed beforehand. ${customer} accepts it this once; with your signature ${gauge} counts as accepted proof, and both signatures stand in the record.`,
+    submit: 'Agree and sign',
+    cannot: 'You cannot agree to it:',
+  },
+  'decline-one-off': {
+    title: 'Not agree to the acceptance?',
+    text: ({ customer }) => `${customer} sees your reason, and the review goes on.`,
+    submit: 'Do not agree',
+    cannot: 'You cannot decline it:',
+  },
 }
 
 export const decisionWords = {
@@ -124,14 +143,10 @@ export const decisionWords = {
     sign: '',
     discard: '',
     confirm: '',
+    'agree-one-off': '',
+    'decline-one-off': 'Why you do not agree',
   } satisfies Record<ActName, string>,
-  conditions: 'What must follow',
-  conditionsHint: 'Such as “Repeat the study with 30 readings on the new fixture”.',
-  dueOn: 'Until when',
   sayWhy: 'Say why.',
-  sayWhat: 'Say what must follow.',
-  sayWhen: 'Choose the day by which it must follow.',
-  dueInPast: 'Choose a day from today on.',
   secondPerson: (name: string | null) =>
     name === null
       ? 'Somebody has decided to accept it. On a safety-class characteristic that counts only once a second person confirms.'
@@ -145,12 +160,16 @@ export const decisionWords = {
   } satisfies Record<reviews.DecisionKind, string>,
   states: {
     'awaiting-second-person': 'waits for a second person',
+    'awaiting-other-side': 'waits for an approver of the supplier',
     final: '',
-    withdrawn: 'not confirmed',
+    withdrawn: 'did not take effect',
   } satisfies Record<reviews.Decision['state'], string>,
-  conditionsUntil: (day: string) => `Until ${day}:`,
+  conditionUntil: (number: number, day: string) => `Condition ${number}, until ${day}:`,
   secondBy: (name: string | null) => (name === null ? 'a second person' : name),
   sentBack: 'Not confirmed:',
+  declined: (name: string | null) => `${name ?? 'An approver of the supplier'} did not agree:`,
+  otherSideBy: (name: string | null) => `${name ?? 'an approver of the supplier'} agreed`,
+  ofRevision: (revision: number) => `on revision ${revision}`,
   safetyTitle: 'Safety class: two people decide.',
   safetyText:
     'Whoever accepts it first only proposes; the acceptance counts once somebody else of the customer confirms it, signed in afresh.',
@@ -158,98 +177,4 @@ export const decisionWords = {
   weakOnSafety:
     'Safety class: this clause is met by an estimate, or by failing to find a difference. It proves little by itself.',
   somebody: 'Somebody of the customer',
-} as const
-
-export const challengeWords = {
-  heading: 'Challenges',
-  challenge: 'Challenge this result',
-  challengeAny: 'Challenge a result',
-  toAnswer: (number: number) => `Answer challenge ${number}`,
-  title: 'Challenge a result?',
-  text: (supplier: string) =>
-    `${supplier} is told what you doubt and answers in words. Nothing is decided while the challenge is open.`,
-  clause: 'Result in question',
-  chooseClause: 'Choose the result you challenge.',
-  reason: 'What is in doubt',
-  chooseReason: 'Choose what is in doubt.',
-  words: 'What is wrong with it',
-  wordsMissing: 'Say what is wrong, so that it can be answered.',
-  sayMissing: 'Say it in words.',
-  reasons: {
-    result: 'The result',
-    readings: 'The readings',
-    'set-up': 'The set-up of the gauge',
-    'reference-standard': 'The reference standard',
-    calculation: 'The calculation',
-  } satisfies Record<reviews.ChallengeReason, string>,
-  reasonHints: {
-    result: 'the verdict does not follow from what was shown',
-    readings: 'how, when or by whom they were taken',
-    'set-up': 'fixture, adjustment, software, place',
-    'reference-standard': 'its value, uncertainty or certificate',
-    calculation: 'the way from the readings to the figure',
-  } satisfies Record<reviews.ChallengeReason, string>,
-  numbered: (number: number) => `Challenge ${number}`,
-  about: (reason: string) => `in doubt: ${reason.charAt(0).toLowerCase()}${reason.slice(1)}`,
-  mark: (number: number) => `challenge ${number}`,
-  states: {
-    open: {
-      supplier: 'waits for your answer',
-      customer: 'waits for the supplier’s answer',
-      anybody: 'waits for the supplier’s answer',
-    },
-    answered: {
-      supplier: 'answered; the customer has the next word',
-      customer: 'answered; your word is next',
-      anybody: 'answered; the customer has the next word',
-    },
-    'resolved-by-evidence': {
-      supplier: 'settled by the answer',
-      customer: 'settled by the answer',
-      anybody: 'settled by the answer',
-    },
-    withdrawn: {
-      supplier: 'withdrawn by the customer',
-      customer: 'withdrawn',
-      anybody: 'withdrawn by the customer',
-    },
-    unresolved: { supplier: 'left unresolved', customer: 'left unresolved', anybody: 'left unresolved' },
-  },
-  closed: (day: string, name: string | null) => (name === null ? day : `${day} by ${name}`),
-  say: {
-    answer: {
-      act: 'Answer',
-      title: 'Answer the challenge',
-      text: (facts: Parties) => `${facts.customer} is told and decides whether the answer settles it.`,
-      field: 'Your answer',
-      submit: 'Send the answer',
-      required: true,
-    },
-    reply: {
-      act: 'Reply, keep it open',
-      title: 'Reply to the answer',
-      text: (facts: Parties) => `The challenge is open again: ${facts.supplier} is asked for another answer.`,
-      field: 'Your reply',
-      submit: 'Reply, keep it open',
-      required: true,
-    },
-    settle: {
-      act: 'The answer settles it',
-      title: 'Does the answer settle it?',
-      text: () =>
-        'The challenge ends as resolved by evidence. The decision on the submission is still yours to make.',
-      field: 'Closing words',
-      submit: 'The answer settles it',
-      required: false,
-    },
-    withdraw: {
-      act: 'Withdraw the challenge',
-      title: 'Withdraw the challenge?',
-      text: () =>
-        'The challenge ends as withdrawn and stays on the page. The decision is still yours to make.',
-      field: 'Closing words',
-      submit: 'Withdraw the challenge',
-      required: false,
-    },
-  },
 } as const

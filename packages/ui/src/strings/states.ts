@@ -28,6 +28,7 @@ export const submissionStateWords = {
   challenged: 'challenged',
   answered: 'answered',
   'awaiting-second-person': 'waits for a second person',
+  'awaiting-other-side': 'waits for the supplier’s approver',
   accepted: 'accepted',
   'accepted-with-conditions': 'accepted with conditions',
   refused: 'refused',
@@ -41,6 +42,7 @@ export const submissionStateWords = {
 export const challengeStateWords = {
   open: 'open',
   answered: 'answered',
+  'unresolved-proposed': 'proposed to be left unresolved',
   'resolved-by-evidence': 'resolved by evidence',
   'resolved-by-correction': 'resolved by correction',
   withdrawn: 'withdrawn',

@@ -1,6 +1,6 @@
 import type { Side, submissions } from '@evenrule/api/contract'
 import type { SubmissionState } from '@evenrule/api/contract/moves/submission'
-import { capital, countWord, formatCount, formatDate } from '../format'
+import { capital, countWord, formatCount, formatDate, joinWords } from '../format'
 
 /** Who stands on either side of a submission, and on which side the reader is; null for anybody, as on paper. */
 export interface Parties {
@@ -9,7 +9,8 @@ export interface Parties {
   customer: string
 }
 
-const whose = (parties: Parties, side: Side): string =>
+/** "your" for the reader's own side, else the organisation's name in the possessive. */
+export const whoseOf = (parties: Parties, side: Side): string =>
   parties.side === side ? 'your' : `${parties[side]}${parties[side].endsWith('s') ? '’' : '’s'}`
 
 /** How long something has stood still: "today", "1 day", "6 days". */
@@ -27,18 +28,24 @@ export const standingWords: Record<
     waits(days, 'a signature'),
     'An approver who took none of the readings signs it.',
   ],
-  submitted: (parties, days) => [waits(days, `${whose(parties, 'customer')} decision`), ''],
+  submitted: (parties, days) => [waits(days, `${whoseOf(parties, 'customer')} decision`), ''],
   challenged: (parties, days) => [
-    waits(days, `${whose(parties, 'supplier')} answer`),
-    parties.side === 'customer' ? 'You challenge a result.' : `${parties.customer} challenges a result.`,
+    waits(days, `${whoseOf(parties, 'supplier')} answer`),
+    parties.side === 'customer'
+      ? 'You challenge something in it.'
+      : `${parties.customer} challenges something in it.`,
   ],
   answered: (parties, days) => [
-    waits(days, `${whose(parties, 'customer')} decision`),
+    waits(days, `${whoseOf(parties, 'customer')} decision`),
     parties.side === 'supplier' ? 'You have answered.' : `${parties.supplier} has answered.`,
   ],
   'awaiting-second-person': (parties, days) => [
     waits(days, 'a second person'),
     `Somebody else of ${parties.customer} must confirm the acceptance.`,
+  ],
+  'awaiting-other-side': (parties, days) => [
+    waits(days, `an approver of ${parties.side === 'supplier' ? 'yours' : parties.supplier}`),
+    `${parties.side === 'customer' ? 'You accept' : `${parties.customer} accepts`} it without agreed criteria; it counts once the other side agrees.`,
   ],
   accepted: (parties, _days, decidedAt) => [
     `Accepted by ${parties.customer} on ${formatDate(decidedAt)}.`,
@@ -137,6 +144,15 @@ export const sectionWords = {
   },
   inForce: (day: string, scope: string) => `in force from ${day} for ${scope}`,
   criteriaOn: 'Criteria as of',
+  noAgreements: 'Criteria',
+  noAgreementsText: 'None were agreed for this measuring task on that day.',
+  houseTerms: (number: number) => `House terms ${number}, for information`,
+  corrects: 'Takes the place of',
+  correctsText: (revision: number, challenge: number) =>
+    `Revision ${revision}, corrected for challenge ${challenge}`,
+  requests: 'Answers',
+  requestsText: (numbers: readonly number[]) =>
+    `${numbers.length === 1 ? 'Request' : 'Requests'} ${joinWords(numbers.map(String))}`,
   limits: 'Limits',
   process: 'Process standard deviation',
   gauge: 'Gauge',
@@ -151,6 +167,21 @@ export const sectionWords = {
   standard: (study: string) => `Reference standard of study ${study}`,
   standardText: (code: string, name: string, value: string, uncertainty: string | null, factor: string) =>
     `${code} ${name}, certified ${value}${uncertainty === null ? '' : `, expanded uncertainty ${uncertainty} (coverage factor ${factor})`}`,
+  restsOn: (study: string) => `What the readings of study ${study} rest on`,
+  readingsLabel: 'The readings',
+  readingsTaken: (count: number, day: string, appraiser: string, revision: number) =>
+    `${formatCount(count, 'reading')}, collected ${day} by appraiser ${appraiser}${revision > 1 ? `, data revision ${revision}` : ''}`,
+  leftOut: (rows: readonly { row: number; text: string }[]) =>
+    `Left out because no number stood there: ${joinWords(rows.map(({ row, text }) => `row ${row} “${text}”`))}`,
+  replacedBecause: (reason: string) => `Readings replaced; the reason given: “${reason}”`,
+  standardLabel: 'The reference standard',
+  setUpLabel: 'The set-up',
+  calibrated: (certificate: string, due: string) => `Calibration certificate ${certificate}, next due ${due}`,
+  notCalibrated: 'No calibration known on the day of collection',
+  measuredAs: {
+    value: 'Readings taken as values',
+    deviation: 'Readings taken as deviations from the standard',
+  },
   hash: 'SHA-256',
   copy: 'Copy',
   copied: 'Copied',
@@ -174,6 +205,7 @@ export const sectionWords = {
     readings: 'readings as uploaded',
     'gauge-certificate': 'calibration certificate of the gauge',
     'standard-certificate': 'certificate of the reference standard',
+    document: 'document that a judgement by hand rests on',
   },
   fileName: 'File',
   fileRole: 'What it is',
@@ -182,6 +214,8 @@ export const sectionWords = {
   noSignatures: 'Not signed yet.',
   meanings: {
     submits: 'signed and submitted it',
+    corrects: 'signed a correction',
+    'agrees-one-off': 'agreed to the acceptance without agreed criteria',
     accepts: 'accepted it',
     'accepts-with-conditions': 'accepted it with conditions',
     refuses: 'refused it',
@@ -204,17 +238,66 @@ export const sectionWords = {
   readings: (study: string) => `Readings of study ${study}`,
   supersededBy: (number: number) => `See submission ${number}`,
   withdrawalReason: 'The reason given:',
-  page: 'On this page',
+  record: 'What happened to this submission?',
 } as const
 
 type HindranceCode = submissions.Hindrance['code']
 
 /** Why a move is not this person's to make right now. */
 export const hindranceWords: Record<HindranceCode, string> = {
-  'no-criteria': 'no signed criteria apply to this measuring task today. Agree them first.',
+  'nothing-to-judge':
+    'no criteria are agreed and no study is chosen, so it would show nothing. Choose a computed study first.',
+  'task-archived': 'the measuring task is archived. Restore it first.',
+  'needs-approver': 'no criteria are agreed, so this decision takes an approver of your side.',
   'took-the-readings': 'you took the readings of a study in it. Another approver must sign.',
   'same-person': 'you decided first. Somebody else must confirm it.',
   'challenge-open': 'a challenge waits for the supplier’s answer. Withdraw it, or wait for the answer.',
-  'challenge-unsettled': 'a challenge is not settled. Settle it, withdraw it, or reply to the answer first.',
+  'challenge-unsettled':
+    'a challenge is not settled. Settle it, withdraw it, reply to the answer, or leave it unresolved with the other side first.',
   'newer-accepted': 'a later submission of the same measuring task is accepted already.',
 }
+
+/** No criteria were agreed: said as such, and the customer's house terms for information. */
+export const advisoryWords = {
+  answer: 'No criteria agreed.',
+  answerRest: 'Nothing is judged by a signed clause; an approver of each side decides for this once.',
+  verdict: 'no criteria agreed',
+  noteTitle: 'No criteria are agreed for this measuring task.',
+  note: (parties: Parties) =>
+    `So there is no verdict. ${parties.side === 'customer' ? 'Your approver' : `An approver of ${parties.customer}`} decides for this once, and ${parties.side === 'supplier' ? 'your approver' : `an approver of ${parties.supplier}`} must agree.`,
+  propose: 'Agree criteria',
+  heading: (customer: string) => `What would the house terms of ${customer} say?`,
+  text: (customer: string, number: number) =>
+    `House terms ${number} of ${customer}, for information only. Nobody has agreed to them here, so none of this counts as a verdict.`,
+  none: (customer: string) =>
+    `${customer} has published no house terms, so there is nothing to compare with.`,
+  would: {
+    meets: 'would meet',
+    'meets-with-conditions': 'would meet with conditions',
+    'falls-short': 'would fall short',
+    'not-shown': 'would not be shown',
+  },
+} as const
+
+/** The terms frozen with a submission, each as a sentence. */
+export const termsWords = {
+  heading: 'What becomes of an acceptance',
+  validity: (months: number | null) =>
+    months === null ? 'It does not run out.' : `It is valid for ${formatCount(months, 'month')}.`,
+  overdue: {
+    'on-hold': 'While a calibration is overdue it is on hold.',
+    stays: 'An overdue calibration changes nothing.',
+  },
+  suspended: (what: readonly string[]) => `It is suspended when the gauge is ${joinWords(what)}.`,
+  stays: (what: readonly string[]) => `It stays when the gauge is ${joinWords(what)}.`,
+  events: {
+    outOfLimits: 'found out of limits',
+    repaired: 'repaired',
+    moved: 'moved',
+    changed: 'changed in software or fixture',
+  },
+  taker: {
+    yes: 'Whoever took the readings may sign.',
+    no: 'Whoever took the readings may not sign.',
+  },
+} as const

@@ -1,24 +1,27 @@
 import { reviews, type Permission, type Side, type submissions } from '@evenrule/api/contract'
+import { clausesConcerned, sameTarget, type ChallengeTarget } from '@evenrule/api/contract/challenge-targets'
 import { challengeMoves, isUnsettled, type ChallengeState } from '@evenrule/api/contract/moves/challenge'
 import { possibleMoves, type Move } from '@evenrule/api/contract/moves/define'
-import type { SubmissionState } from '@evenrule/api/contract/moves/submission'
+import { openToChallenge, type SubmissionState } from '@evenrule/api/contract/moves/submission'
+import { describeClause } from '../../strings/clauses'
+import { challengeMark, describeTarget } from '../../strings/challenges'
+import type { ReadSubmission } from '../submissions/reading'
 
-type Challenge = reviews.Challenge
+export type Challenge = reviews.Challenge
+type Challenged = Pick<submissions.Submission, 'challenges'>
 
 /** What can be said in a challenge by a button, in the order offered. */
-export const sayings = ['answer', 'settle', 'reply', 'withdraw'] as const
+export const sayings = [
+  'answer',
+  'correct',
+  'agree-unresolved',
+  'decline-unresolved',
+  'settle',
+  'reply',
+  'withdraw',
+  'propose-unresolved',
+] as const
 export type Saying = (typeof sayings)[number]
-
-/** The endpoint behind each. */
-export const sayingEndpoints = {
-  answer: reviews.answerChallenge,
-  reply: reviews.replyToAnswer,
-  settle: reviews.settleChallenge,
-  withdraw: reviews.withdrawChallenge,
-} as const
-
-/** States in which challenges can be opened and talked about: the decision is still to be made. */
-const reviewing: readonly SubmissionState[] = ['submitted', 'challenged', 'answered']
 
 /** What a person may say in a challenge as it and its submission stand. */
 export function possibleSayings(
@@ -27,11 +30,12 @@ export function possibleSayings(
   side: Side,
   holds: (permission: Permission) => boolean,
 ): Saying[] {
-  if (!reviewing.includes(submission)) return []
+  if (!openToChallenge.includes(submission)) return []
   const names = possibleMoves<Move<ChallengeState>>(challengeMoves, challenge, side, holds).map(
     ({ name }) => name,
   )
-  return sayings.filter((saying) => names.includes(saying))
+  // Whoever may answer may begin a correction; signing it is an approver's.
+  return sayings.filter((saying) => names.includes(saying === 'correct' ? 'answer' : saying))
 }
 
 /** Whether a person may open a challenge here at all. */
@@ -41,18 +45,50 @@ export function mayChallenge(
   holds: (permission: Permission) => boolean,
 ): boolean {
   const open = challengeMoves.find(({ name }) => name === 'open')
-  return reviewing.includes(submission) && open !== undefined && open.side === side && holds(open.permission)
+  return (
+    openToChallenge.includes(submission) && open !== undefined && open.side === side && holds(open.permission)
+  )
 }
 
-/** The challenges of one clause, the newest first. */
+/** Whether the last answer of a challenge was a corrected revision. */
+export const isCorrected = ({ messages }: Pick<Challenge, 'messages'>): boolean =>
+  messages.filter(({ answerKind }) => answerKind !== null).at(-1)?.answerKind === 'correction'
+
+/** The challenges on which the result of a clause rests, the newest first. */
 export const challengesOf = (
-  { challenges }: Pick<submissions.Submission, 'challenges'>,
+  { submission, content }: Pick<ReadSubmission, 'content'> & { submission: Challenged },
   clauseKey: string,
 ): Challenge[] =>
-  challenges.filter((each) => each.clauseKey === clauseKey).sort((a, b) => b.number - a.number)
+  submission.challenges
+    .filter(({ target }) => clausesConcerned(target, content).includes(clauseKey))
+    .sort((a, b) => b.number - a.number)
 
-/** One challenge at a time for each clause: whether a clause has one that is not settled. */
-export const isUnderChallenge = (
-  submission: Pick<submissions.Submission, 'challenges'>,
-  clauseKey: string,
-): boolean => challengesOf(submission, clauseKey).some(({ state }) => isUnsettled(state))
+/** The challenges about one study or its readings, the newest first. */
+export const challengesOfStudy = ({ challenges }: Challenged, study: string): Challenge[] =>
+  challenges
+    .filter(({ target }) => 'study' in target && target.study === study)
+    .sort((a, b) => b.number - a.number)
+
+/** One challenge at a time about the same thing: whether a target has one that is not settled. */
+export const isUnderChallenge = ({ challenges }: Challenged, target: ChallengeTarget): boolean =>
+  challenges.some((each) => isUnsettled(each.state) && sameTarget(each.target, target))
+
+/** What single readings of a study are in question for, by their zero-based places in the revision shown. */
+export function readingsInQuestion(
+  { challenges }: Challenged,
+  study: string,
+  revision: number,
+): Map<number, string> {
+  const marks = new Map<number, string[]>()
+  for (const { target, number, revision: of, state } of challenges)
+    if (target.kind === 'readings' && target.study === study && of === revision && state !== 'withdrawn')
+      for (const at of target.readings) marks.set(at, [...(marks.get(at) ?? []), challengeMark(number)])
+  return new Map([...marks].map(([at, texts]) => [at, texts.join(', ')]))
+}
+
+/** What a challenge is about, in words. */
+export function targetText(target: ChallengeTarget, { results, advisory }: ReadSubmission): string {
+  const key = 'clauseKey' in target ? target.clauseKey : ''
+  const result = [...results, ...advisory].find(({ clauseKey }) => clauseKey === key)
+  return describeTarget(target, result ? describeClause(result.clause, result.input) : key)
+}

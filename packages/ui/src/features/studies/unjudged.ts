@@ -5,7 +5,9 @@ import { answerWords } from '../../strings/results'
 
 /** The readings of a study that no clause judges, computed from what is kept; null where they cannot be compared. */
 export function unjudgedStudy(
-  study: Pick<studies.Study, 'standard' | 'measuredAs' | 'unit'>,
+  study: Pick<studies.Study, 'measuredAs' | 'unit'> & {
+    standard: Pick<studies.Study['standard'], 'certifiedValue' | 'unit'>
+  },
   { values }: Pick<studies.StudyRevision, 'values'>,
 ): BiasOutput | null {
   const { standard, measuredAs, unit } = study

@@ -3,13 +3,13 @@ import { possibleMoves, type Move } from '@evenrule/api/contract/moves/define'
 import { submissionMoves, type SubmissionState } from '@evenrule/api/contract/moves/submission'
 import type { Client } from '../../session/client'
 import { actNames, type ActName } from '../../strings/reviews'
+import { askedConditions, type ConditionDraft } from './conditionDraft'
 
 /** What a person may have to say with a move, by the names of the contract. */
 export interface ActValues {
   note: string
   reason: string
-  conditions: string
-  conditionsDueOn: string
+  conditions: ConditionDraft[]
 }
 
 /** What a move names of the submission it is made on. */
@@ -24,7 +24,7 @@ interface Act {
   endpoint: EndpointShape
   /** The field of words that goes with it, and whether it may stay empty. */
   words: { field: 'note' | 'reason'; required: boolean } | null
-  /** Conditions and the day by which they must be met. */
+  /** Names conditions. */
   conditions: boolean
   /** Cannot be taken back. */
   danger: boolean
@@ -82,10 +82,10 @@ export const acts: Record<ActName, Act> = {
     endpoint: reviews.acceptWithConditions,
     words: { field: 'reason', required: false },
     conditions: true,
-    send: (api, { params, expectedVersion, sha256 }, { reason, conditions, conditionsDueOn }) =>
+    send: (api, { params, expectedVersion, sha256 }, { reason, conditions }) =>
       api.call(reviews.acceptWithConditions, {
         params,
-        body: { expectedVersion, sha256, conditions, conditionsDueOn, reason },
+        body: { expectedVersion, sha256, conditions: askedConditions(conditions), reason },
       }),
   },
   refuse: {
@@ -101,6 +101,19 @@ export const acts: Record<ActName, Act> = {
     endpoint: reviews.confirm,
     send: (api, { params, expectedVersion, sha256 }) =>
       api.call(reviews.confirm, { params, body: { expectedVersion, sha256 } }),
+  },
+  'agree-one-off': {
+    ...plain,
+    endpoint: reviews.agreeOneOff,
+    send: (api, { params, expectedVersion, sha256 }) =>
+      api.call(reviews.agreeOneOff, { params, body: { expectedVersion, sha256 } }),
+  },
+  'decline-one-off': {
+    ...plain,
+    endpoint: reviews.declineOneOff,
+    words: { field: 'reason', required: true },
+    send: (api, { params, expectedVersion }, { reason }) =>
+      api.call(reviews.declineOneOff, { params, body: { expectedVersion, reason } }),
   },
   'send-back': {
     ...plain,
@@ -141,8 +154,10 @@ const ranks: readonly ActName[] = [
   'sign',
   'send-for-signature',
   'confirm',
+  'agree-one-off',
   'accept',
   'accept-with-conditions',
+  'decline-one-off',
   'refuse',
   'return',
   'send-back',

@@ -6,6 +6,7 @@ import {
   type ClauseInput,
   type ClauseOutput,
 } from '@evenrule/metrology'
+import { defaultTerms } from '@evenrule/api/contract/terms'
 import { sha256Of } from '@evenrule/api/contract/submission-check'
 import type { Content } from './reading'
 
@@ -50,6 +51,7 @@ export async function submissionOf({
         output,
         stored: {
           clauseKey: output.clauseKey,
+          advisory: false,
           inputText: canonicalText(input),
           outputText,
           outputSha256: await sha256Of(outputText),
@@ -67,6 +69,12 @@ export async function submissionOf({
     state: 'submitted',
     rowVersion: 3,
     ageDays: 6,
+    today: '2026-11-08',
+    criteria: 'agreed',
+    standing: null,
+    revision: 1,
+    revisions: [],
+    byHand: [],
     relationshipId: id,
     taskId: id,
     partId: id,
@@ -86,7 +94,14 @@ export async function submissionOf({
     evaluations: evaluations.map(({ stored }) => stored),
     files: [],
     signatures: [
-      { side: 'supplier', name: 'Tomas', meaning: 'submits', sha256, signedAt: '2026-11-02T08:00:00.000Z' },
+      {
+        side: 'supplier',
+        name: 'Tomas',
+        meaning: 'submits',
+        sha256,
+        signedAt: '2026-11-02T08:00:00.000Z',
+        revision: 1,
+      },
     ],
     decisions: [],
     challenges: [],
@@ -106,6 +121,14 @@ async function contentOf(
   return {
     format: 'evenrule.submission/1',
     number: 7,
+    revision: 1,
+    corrects: null,
+    criteria: 'agreed',
+    terms: defaultTerms,
+    houseTerms: null,
+    advisory: [],
+    byHand: [],
+    requests: [],
     criteriaOn: '2026-11-02',
     relationship: {
       id,
@@ -163,6 +186,7 @@ async function contentOf(
         plannedReadings: texts.length,
         unit: 'mm',
         measuredAs: 'value',
+        gauge: { code: 'BG-14', name: 'Bore gauge', resolution: '0.001', unit: 'mm' },
         standard: {
           code: 'R-1',
           name: 'Ring',
@@ -174,6 +198,8 @@ async function contentOf(
         calibration: { gauge: null, standard: null },
         data: {
           revision: 1,
+          reason: null,
+          leftOut: [],
           source: 'typed',
           collectedOn: '2026-10-10',
           appraiser: 'A',

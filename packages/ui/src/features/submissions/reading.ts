@@ -1,8 +1,11 @@
 import { submissions, type Side } from '@evenrule/api/contract'
 import { waitsOn } from '@evenrule/api/contract/moves/submission'
 import { clauseDescriptor } from '@evenrule/metrology'
+import { formatNumber } from '../../format'
 import type { Parties } from '../../strings/submissions'
+import { readingsOf, studyFiguresOf, type StudyFigures } from '../results/studyFigures'
 import { resultOf, type ClauseResult } from '../results/types'
+import { unjudgedStudy } from '../studies/unjudged'
 
 export type Content = submissions.SubmissionContent
 export type FrozenStudy = submissions.FrozenStudy
@@ -11,18 +14,29 @@ export type FrozenStudy = submissions.FrozenStudy
 export interface ReadSubmission {
   submission: submissions.Submission
   content: Content
+  /** The revision that is shown. */
+  revision: number
+  /** Of the agreed clauses, in the order of the text. */
   results: ClauseResult[]
+  /** Of house terms, judged for information where no criteria are agreed. */
+  advisory: ClauseResult[]
 }
 
 /** Reads the frozen text and the evaluations of a submission; clauses stand in the order of the text. */
 export function readContent(submission: submissions.Submission): ReadSubmission {
   const content = submissions.submissionContentSchema.parse(JSON.parse(submission.text))
+  const evaluated = (clauseKey: string) =>
+    submission.evaluations.find((evaluation) => evaluation.clauseKey === clauseKey)
   const results = content.clauses.flatMap((clause) => {
-    const evaluation = submission.evaluations.find(({ clauseKey }) => clauseKey === clause.clauseKey)
+    const evaluation = evaluated(clause.clauseKey)
     const { agreementNumber, versionNumber, scope } = clause
     return evaluation ? [resultOf(evaluation, { agreementNumber, versionNumber, scope })] : []
   })
-  return { submission, content, results }
+  const advisory = content.advisory.flatMap(({ clauseKey }) => {
+    const evaluation = evaluated(clauseKey)
+    return evaluation ? [resultOf(evaluation, null)] : []
+  })
+  return { submission, content, revision: submission.revision, results, advisory }
 }
 
 /** Both organisations by name, and on which side the reader is; null for a reader of either or none. */
@@ -32,10 +46,23 @@ export const partiesOf = ({ relationship }: Content, side: Side | null): Parties
   customer: relationship.customer.name,
 })
 
-/** The results that rest on the readings of one study. */
-export const resultsOfStudy = ({ content, results }: ReadSubmission, code: string): ClauseResult[] => {
-  const keys = content.clauses.filter(({ study }) => study === code).map(({ clauseKey }) => clauseKey)
-  return results.filter(({ clauseKey }) => keys.includes(clauseKey))
+/** The results that rest on the readings of one study; those of house terms where no criteria are agreed. */
+export const resultsOfStudy = (
+  { content, results, advisory }: Pick<ReadSubmission, 'content' | 'results' | 'advisory'>,
+  code: string,
+): ClauseResult[] => {
+  const judged = [...content.clauses, ...content.advisory]
+  const keys = judged.filter(({ study }) => study === code).map(({ clauseKey }) => clauseKey)
+  return [...results, ...advisory].filter(({ clauseKey }) => keys.includes(clauseKey))
+}
+
+/** What the plot of a study shows; where no clause rests on its readings, they are computed here. */
+export function figuresOfStudy(read: ReadSubmission, study: FrozenStudy): StudyFigures | null {
+  const judged = studyFiguresOf(resultsOfStudy(read, study.code))
+  if (judged) return judged
+  const values = study.data.readings.map(Number)
+  const output = unjudgedStudy(study, { values })
+  return output && readingsOf(values, study.unit, output)
 }
 
 /**
@@ -62,4 +89,10 @@ export function sizeParts(bytes: number): { value: number; unit: 'B' | 'kB' | 'M
   if (bytes < kilo) return { value: bytes, unit: 'B', digits: 0 }
   if (bytes < kilo * kilo) return { value: bytes / kilo, unit: 'kB', digits: 1 }
   return { value: bytes / kilo / kilo, unit: 'MB', digits: 1 }
+}
+
+/** The same as text. */
+export function sizeText(bytes: number): string {
+  const { value, ...format } = sizeParts(bytes)
+  return formatNumber(value, format)
 }

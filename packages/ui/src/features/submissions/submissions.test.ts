@@ -45,7 +45,7 @@ describe('the question and its answer', () => {
     )
     expect(sentences[1]).toEqual({
       strong: 'It has waited 6 days for Tarnfield Turned Parts’ answer.',
-      rest: 'Brackwell Drivelines challenges a result.',
+      rest: 'Brackwell Drivelines challenges something in it.',
     })
   })
   it('put the decision first once there is one', async () => {

@@ -1,10 +1,10 @@
 import { computed, nextTick, ref, watch, type Ref } from 'vue'
 import { useRoute, useRouter } from 'vue-router'
 import { signInAfresh } from '../../session/freshSignIn'
-import type { ActName } from '../../strings/reviews'
 import { useHere } from '../common'
-import { mayChallenge, possibleSayings } from '../reviews/challenges'
+import { mayChallenge, possibleSayings, type Saying } from '../reviews/challenges'
 import { inOrder, possibleActs } from './acts'
+import { readAsked, writeAsked, type Asked } from './asks'
 import type { ReadSubmission } from './reading'
 
 /** Name in the address of the move that a fresh sign-in was asked for. */
@@ -12,36 +12,48 @@ const returning = 'do'
 
 /**
  * What may be done with a submission, which question is being asked, and coming back to it after a fresh sign-in.
+ * Nothing can be done with an earlier revision.
  */
-export function useActs(read: Ref<ReadSubmission | undefined>, moved: () => Promise<void>) {
+export function useActs(
+  read: Ref<ReadSubmission | undefined>,
+  newest: Ref<boolean>,
+  moved: () => Promise<void>,
+) {
   const here = useHere()
   const route = useRoute()
   const router = useRouter()
-  const asked = ref<ActName>()
-  const challenging = ref<{ clauseKey: string | undefined }>()
+  const asked = ref<Asked>()
 
+  const acting = computed(() => (newest.value ? read.value?.submission : undefined))
   const possible = computed(() =>
-    read.value ? inOrder(possibleActs(read.value.submission, here.side, here.allows)) : [],
+    acting.value ? inOrder(possibleActs(acting.value, here.side, here.allows)) : [],
   )
   const mayOpen = computed(
-    () => read.value !== undefined && mayChallenge(read.value.submission.state, here.side, here.allows),
+    () => acting.value !== undefined && mayChallenge(acting.value.state, here.side, here.allows),
   )
-
+  /** What this person may say in each challenge. */
+  const sayingsOf = (challengeId: string): Saying[] => {
+    const challenge = acting.value?.challenges.find(({ id }) => id === challengeId)
+    return acting.value && challenge
+      ? possibleSayings(acting.value.state, challenge.state, here.side, here.allows)
+      : []
+  }
   /** The first challenge that waits for this person's answer. */
-  const toAnswer = computed(() => {
-    const { state, challenges } = read.value?.submission ?? { challenges: [] }
-    return challenges.find(
-      (each) =>
-        state !== undefined && possibleSayings(state, each.state, here.side, here.allows).includes('answer'),
-    )
-  })
+  const toAnswer = computed(() => acting.value?.challenges.find(({ id }) => sayingsOf(id).includes('answer')))
+
+  const isPossible = (wanted: Asked): boolean =>
+    wanted.kind === 'act'
+      ? possible.value.some(({ name, hindrances }) => name === wanted.act && !hindrances.length)
+      : wanted.kind === 'say'
+        ? sayingsOf(wanted.challengeId).includes(wanted.saying)
+        : true
 
   /** Leaves for the sign-in; the dialog goes first, so that its unsaved words hold nobody back. They are kept. */
   async function askAfresh() {
-    const act = asked.value
+    const wanted = asked.value && writeAsked(asked.value)
     asked.value = undefined
     await nextTick()
-    const back = router.resolve({ query: { ...route.query, [returning]: act } })
+    const back = router.resolve({ query: { ...route.query, [returning]: wanted } })
     signInAfresh(back.fullPath)
   }
 
@@ -49,10 +61,10 @@ export function useActs(read: Ref<ReadSubmission | undefined>, moved: () => Prom
   watch(
     read,
     () => {
-      const wanted = route.query[returning]
-      if (!read.value || typeof wanted !== 'string') return
-      const found = possible.value.find(({ name, hindrances }) => name === wanted && !hindrances.length)
-      asked.value = found?.name
+      const text = route.query[returning]
+      if (!read.value || typeof text !== 'string') return
+      const wanted = readAsked(text)
+      asked.value = wanted && isPossible(wanted) ? wanted : undefined
       const { [returning]: _done, ...query } = route.query
       void router.replace({ query, hash: route.hash })
     },
@@ -61,9 +73,8 @@ export function useActs(read: Ref<ReadSubmission | undefined>, moved: () => Prom
 
   async function done() {
     asked.value = undefined
-    challenging.value = undefined
     await moved()
   }
 
-  return { possible, asked, askAfresh, done, challenging, mayOpen, toAnswer }
+  return { possible, asked, askAfresh, done, mayOpen, sayingsOf, toAnswer }
 }

@@ -1,4 +1,11 @@
-import { standingWords, submissionWords, type Parties } from '../../strings/submissions'
+import { describeStanding } from '../../strings/standings'
+import {
+  advisoryWords,
+  standingWords,
+  submissionWords,
+  termsWords,
+  type Parties,
+} from '../../strings/submissions'
 import { taskWords } from '../../strings/tasks'
 import { inSentence } from '../common'
 import { characteristicText } from '../parts/tolerance'
@@ -31,11 +38,36 @@ export interface Sentence {
 
 const ended = ['accepted', 'accepted-with-conditions', 'refused', 'withdrawn', 'superseded']
 
-/** The answer in words: what was shown and where it stands; of a submission that has ended, its end first. */
-export function answerOf({ submission, results }: ReadSubmission, parties: Parties): Sentence[] {
+/**
+ * The answer in words: what was shown and where it stands; of a submission that has ended, its end first. An
+ * acceptance that does not stand any more says that before all else.
+ */
+export function answerOf({ submission, content, results }: ReadSubmission, parties: Parties): Sentence[] {
   const { decisive, rest } = overallAnswer(results)
   const [strong, then] = standingWords[submission.state](parties, submission.ageDays, submission.decidedAt)
-  const shown = { strong: decisive, rest }
+  const shown =
+    content.criteria === 'none'
+      ? { strong: advisoryWords.answer, rest: advisoryWords.answerRest }
+      : { strong: decisive, rest }
   const stands = { strong, rest: then }
+  const { standing } = submission
+  if (standing && standing.state !== 'stands') return [describeStanding(standing, parties.customer), stands]
   return ended.includes(submission.state) ? [stands, shown] : [shown, stands]
+}
+
+/** The terms frozen with a submission, as sentences. */
+export function termsText(terms: Content['terms']): string {
+  const events = ['outOfLimits', 'repaired', 'moved', 'changed'] as const
+  const named = (effect: 'suspended' | 'stays') =>
+    events.filter((event) => terms[event] === effect).map((event) => termsWords.events[event])
+  const [suspended, stays] = [named('suspended'), named('stays')]
+  return [
+    termsWords.validity(terms.validityMonths),
+    termsWords.overdue[terms.calibrationOverdue],
+    suspended.length ? termsWords.suspended(suspended) : '',
+    stays.length ? termsWords.stays(stays) : '',
+    termsWords.taker[terms.readingsTakerMaySign ? 'yes' : 'no'],
+  ]
+    .filter(Boolean)
+    .join(' ')
 }
