@@ -250,6 +250,7 @@ describe('scopes', () => {
       versionId: newest(ofPart).id,
       versionNumber: 1,
       versionSha256: newest(ofPart).sha256,
+      effectiveOn: '2026-11-10',
       scope: 'part',
     })
     // Both sides read the same, strangers nothing.

@@ -1,6 +1,6 @@
 import { afterAll, beforeAll, describe, expect, it } from 'vitest'
 import { createHash } from 'node:crypto'
-import { agreements } from '@evenrule/api/contract'
+import { agreements, noTerms } from '@evenrule/api/contract'
 import {
   equivalence,
   newest,
@@ -60,7 +60,8 @@ describe('the whole story', () => {
       state: 'proposed',
       begunBy: 'customer',
       waitsOn: ['supplier'],
-      moves: ['withdraw'],
+      moves: ['withdraw-clauses', 'comment', 'withdraw'],
+      hindrances: [{ move: 'withdraw-clauses', code: 'last-clause' }],
       rounds: [{ number: 1, side: 'customer', state: 'sent', by: 'Ola Brandt', comment: 'As last year.' }],
     })
     expect(proposed.characteristics).toMatchObject([
@@ -68,7 +69,7 @@ describe('the whole story', () => {
     ])
 
     const seen = await world.read(engineer, proposed.id)
-    expect(newest(seen).moves).toEqual(['keep-draft', 'counter', 'accept', 'withdraw'])
+    expect(newest(seen).moves).toEqual(['keep-draft', 'counter', 'comment', 'mark', 'accept', 'withdraw'])
     const countered = await world.answer(engineer, seen, newest(seen), {
       clauses: [equivalence(), readings(20)],
       effectiveOn,
@@ -107,6 +108,7 @@ describe('the whole story', () => {
       scope: agreed.scope,
       characteristics: agreed.characteristics,
       clauses: [equivalence(), readings(20)],
+      terms: noTerms,
       effectiveOn,
     })
 
@@ -403,7 +405,7 @@ describe('clauses', () => {
     expect(await refusedFor(scope, [absolute('mm')])).toEqual([
       {
         path: 'body.clauses.0.parameters.margin.unit',
-        message: 'A margin in mm cannot limit a characteristic in ml/min.',
+        message: 'A value in mm cannot limit a characteristic in ml/min.',
       },
     ])
     const sent = await world.begin(quality, { ...proposal, ...scope, clauses: [absolute('ml/min')] })
@@ -430,7 +432,9 @@ describe('clauses', () => {
       },
     ])
     expect(await refusedFor({}, ['x'], draft)).toMatchObject([{ path: 'body.clauses.0' }])
-    expect(await refusedFor({}, [])).toEqual([{ path: 'body.clauses', message: 'Add at least one clause.' }])
+    expect(await refusedFor({}, [])).toEqual([
+      { path: 'body.clauses', message: 'Add at least one clause, or one of the terms.' },
+    ])
   })
 
   it('of a wider scope warn of the characteristics they cannot be computed for, and flag safety', async () => {
@@ -454,10 +458,13 @@ describe('clauses', () => {
         code: 'no-tolerance-width',
         path: 'parameters.base',
         message: expect.stringContaining('two-sided tolerance'),
+        count: 1,
         characteristicIds: [flow.id],
       },
     ])
-    expect(round?.flags).toEqual([{ clause: 1, code: 'zero-difference', characteristicIds: [bore.id] }])
+    expect(round?.flags).toEqual([
+      { clause: 1, code: 'zero-difference', count: 1, characteristicIds: [bore.id] },
+    ])
   })
 
   it('of a wider scope are refused where they can be computed for none of its characteristics', async () => {

@@ -1,4 +1,5 @@
 import {
+  clauseBasis,
   clauseDescriptor,
   clauseKey,
   clauseProblems,
@@ -119,10 +120,9 @@ export function safetyFlags(
   if (safety.length === 0) return []
   const characteristicIds = safety.map((each) => each.characteristicId)
   return clauses.flatMap((clause, place): SafetyFlag[] => {
-    const descriptor = clauseDescriptor(clause)
-    if (descriptor.rule?.(clause, complete)?.type === 'zero-test')
+    if (clauseDescriptor(clause).rule?.(clause, complete)?.type === 'zero-test')
       return [{ clause: place, code: 'zero-difference', count: characteristicIds.length, characteristicIds }]
-    return descriptor.basis === 'estimate'
+    return clauseBasis(clause) === 'estimate'
       ? [{ clause: place, code: 'point-estimate', count: characteristicIds.length, characteristicIds }]
       : []
   })

@@ -3,6 +3,7 @@ import canonicalize from 'canonicalize'
 import { describe, expect, it } from 'vitest'
 import { checkSubmission, EngineProblem, firstDifference, sha256Of } from './submission-check'
 import { overallVerdict, type SubmissionContent } from './submission-content'
+import { defaultTerms } from './terms'
 
 const hashOf = (text: string) => createHash('sha256').update(text).digest('hex')
 const id = '01890a5d-ac96-774b-bcce-b302099a8057'
@@ -57,6 +58,9 @@ const readings = ['24.001', '24.002']
 const content: SubmissionContent = {
   format: 'evenrule.submission/1',
   number: 1,
+  revision: 1,
+  corrects: null,
+  criteria: 'agreed',
   criteriaOn: '2026-11-02',
   relationship: {
     id,
@@ -88,6 +92,11 @@ const content: SubmissionContent = {
     processStep: null,
   },
   agreements: [],
+  terms: defaultTerms,
+  houseTerms: null,
+  advisory: [],
+  byHand: [],
+  requests: [],
   clauses: [
     {
       clauseKey: 'bias.equivalence',
@@ -117,6 +126,7 @@ const content: SubmissionContent = {
       plannedReadings: 2,
       unit: 'mm',
       measuredAs: 'value',
+      gauge: { code: 'BG-14', name: 'Bore gauge', resolution: '0.001', unit: 'mm' },
       standard: {
         code: 'RS-1',
         name: 'ring',
@@ -128,10 +138,12 @@ const content: SubmissionContent = {
       calibration: { gauge: null, standard: null },
       data: {
         revision: 1,
+        reason: null,
         source: 'typed',
         collectedOn: '2026-11-01',
         appraiser: 'A',
         readings,
+        leftOut: [],
         sha256: hashOf(JSON.stringify(readings)),
         fileSha256: null,
       },
