@@ -57,6 +57,8 @@ export const coverageWords = {
   accepted: 'accepted',
   conditional: 'accepted with conditions',
   'running-out': 'acceptance runs out soon',
+  stopped: 'acceptance on hold or suspended',
   challenged: 'challenged',
+  ended: 'acceptance ended',
   missing: 'no accepted proof',
 } as const

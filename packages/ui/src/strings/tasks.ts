@@ -8,6 +8,23 @@ export const taskStandings: Record<proof.ProofState, (customer: string) => [stri
     `Nothing has been put before ${customer} for this measuring task.`,
   ],
   refused: (customer) => [`Refused by ${customer}.`, 'A new submission can show it.'],
+  reopened: () => [
+    'Not any more: a new revision reopened it.',
+    'The customer carries the acceptance over where the limits stayed, or looks at new proof.',
+  ],
+  expired: (customer) => ['Not any more: the acceptance expired.', `New proof goes to ${customer}.`],
+  lapsed: (customer) => [
+    'Not any more: a condition of the acceptance was not kept in time.',
+    `The submission says which; ${customer} can still confirm it.`,
+  ],
+  suspended: () => [
+    'In doubt: the acceptance is suspended.',
+    'The submission says what happened to the gauge; new proof, or an approver of the customer, lifts it.',
+  ],
+  'on-hold': () => [
+    'On hold: a calibration is overdue.',
+    'A calibration that finds it within limits lifts the hold.',
+  ],
   challenged: (customer) => [
     'Challenged.',
     `${customer} objects to a named result; the submission says which.`,

@@ -27,11 +27,14 @@ describe('the answer on a part’s page', () => {
         row(4, 'waiting'),
         row(5, 'missing'),
         row(6, 'no-task'),
+        row(7, 'suspended'),
+        row(8, 'on-hold'),
+        row(9, 'reopened'),
       ]),
     ).toEqual({
-      plain: 'Revision C has 6 characteristics, 1 of class safety.',
+      plain: 'Revision C has 9 characteristics, 1 of class safety.',
       strong:
-        '2 of 6 stand on accepted proof: 1 challenged or refused, 1 waiting for a decision, 2 not shown yet.',
+        '2 of 9 stand on accepted proof: 1 challenged or refused, 2 on hold or suspended, 1 expired, lapsed or reopened, 1 waiting for a decision, 2 not shown yet.',
     }))
   it('says so when all is proved, and when nothing is', () => {
     expect(answerOfPart('A', [row(1, 'accepted')]).strong).toBe('All stand on accepted proof.')

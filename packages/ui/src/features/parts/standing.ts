@@ -10,7 +10,12 @@ const coverageOf: Record<proof.ProofState, CoverageState> = {
   'no-task': 'missing',
   missing: 'missing',
   refused: 'challenged',
+  reopened: 'ended',
+  expired: 'ended',
+  lapsed: 'ended',
+  suspended: 'stopped',
   challenged: 'challenged',
+  'on-hold': 'stopped',
   waiting: 'missing',
   'accepted-with-conditions': 'conditional',
   accepted: 'accepted',
@@ -43,6 +48,8 @@ export function answerOfPart(revision: string, rows: readonly Row[]): PartAnswer
   const accepted = count('accepted', 'accepted-with-conditions')
   const open = [
     [count('challenged', 'refused'), words.challengedCount],
+    [count('on-hold', 'suspended'), words.stoppedCount],
+    [count('expired', 'lapsed', 'reopened'), words.endedCount],
     [count('waiting'), words.waitingCount],
     [count('missing', 'no-task'), words.missingCount],
   ] as const
