@@ -1,4 +1,5 @@
-import { reviews, type Permission, type Side, type submissions } from '@evenrule/api/contract'
+import type { reviews} from '@evenrule/api/contract';
+import { type Permission, type Side, type submissions } from '@evenrule/api/contract'
 import { clausesConcerned, sameTarget, type ChallengeTarget } from '@evenrule/api/contract/challenge-targets'
 import { challengeMoves, isUnsettled, type ChallengeState } from '@evenrule/api/contract/moves/challenge'
 import { possibleMoves, type Move } from '@evenrule/api/contract/moves/define'

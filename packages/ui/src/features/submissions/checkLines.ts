@@ -22,10 +22,10 @@ export interface CheckLine {
 /** A check of a submission as lines: the text, its signatures, the readings, and every clause. */
 export function checkLines(
   check: SubmissionCheck,
-  { results }: Pick<ReadSubmission, 'results'>,
+  { results, advisory }: Pick<ReadSubmission, 'results' | 'advisory'>,
 ): CheckLine[] {
   const nameOf = (clauseKey: string) => {
-    const result = results.find((each) => each.clauseKey === clauseKey)
+    const result = [...results, ...advisory].find((each) => each.clauseKey === clauseKey)
     return result ? describeClause(result.clause, result.input) : clauseKey
   }
   return [
@@ -37,6 +37,7 @@ export function checkLines(
       stored: null,
       recomputed: null,
     })),
+    ...(check.corrects ? [{ key: 'corrects', label: words.previousText, ...check.corrects }] : []),
     ...check.data.map(({ study, ...each }) => ({
       key: `data-${study}`,
       label: words.readingsOf(study),

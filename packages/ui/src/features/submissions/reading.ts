@@ -1,6 +1,6 @@
 import { submissions, type Side } from '@evenrule/api/contract'
 import { waitsOn } from '@evenrule/api/contract/moves/submission'
-import { clauseDescriptor } from '@evenrule/metrology'
+import { clauseBasis, clauseDescriptor } from '@evenrule/metrology'
 import { formatNumber } from '../../format'
 import type { Parties } from '../../strings/submissions'
 import { readingsOf, studyFiguresOf, type StudyFigures } from '../results/studyFigures'
@@ -72,7 +72,7 @@ export function figuresOfStudy(read: ReadSubmission, study: FrozenStudy): StudyF
 export const isWeakOnSafety = ({ clause }: Pick<ClauseResult, 'clause'>, content: Content): boolean =>
   content.characteristic.class === 'safety' &&
   (clause.type === 'bias-zero-test' ||
-    (clauseDescriptor(clause).basis === 'estimate' && clauseDescriptor(clause).studyKind !== null))
+    (clauseBasis(clause) === 'estimate' && clauseDescriptor(clause).studyKind !== null))
 
 export type WaitsFor = 'us' | 'them' | null
 

@@ -1,4 +1,29 @@
+import { submissions } from '@evenrule/api/contract'
 import { EngineProblem, sha256Of, type Recompute } from '@evenrule/api/contract/submission-check'
+import type { Client } from '../../session/client'
+import type { ReadSubmission } from './reading'
+
+/** The text of the revision before the one shown; undefined for the first. */
+export const previousText = async (
+  api: Client,
+  params: { organisationId: string },
+  { content, revision, submission }: ReadSubmission,
+): Promise<string | undefined> =>
+  content.corrects === null
+    ? undefined
+    : (
+        await api.call(submissions.readSubmission, {
+          params: { ...params, submissionId: submission.id },
+          query: { revision: revision - 1 },
+        })
+      ).text
+
+/** What is checked of one revision: its own signatures, and the text it takes the place of. */
+export const ofRevision = ({ submission, revision }: ReadSubmission, previous: string | undefined) => ({
+  ...submission,
+  signatures: submission.signatures.filter((signature) => signature.revision === revision),
+  previousText: previous,
+})
 
 /** What a released engine offers. */
 export interface EngineModule {
