@@ -29,7 +29,7 @@ export const consequenceWords = {
   proposal: 'proposal',
   chance: 'Chance to meet the clause, by true bias',
   chanceBySpread: 'Chance to meet the clause, by true spread',
-  verdicts: 'Which verdict it would be, by true bias',
+  verdictsOf: (name: string) => `Chance of each verdict, by true bias: ${name}`,
   allowed: 'Bias it allows, by number of readings',
   assumed: (readings: number, spread: number, unit: Unit) =>
     `${formatNumber(readings)} readings, spread ${formatNumber(spread, { unit })}`,
@@ -75,9 +75,12 @@ export const clausePageWords = {
   noClause: 'There is no such clause in this agreement.',
   back: 'Back to the agreement',
   /** "A gauge without bias and a spread of 0.8 µm meets it with a chance of 98 %." */
+  /** "A gauge without bias and with a spread of 0.8 µm would meet it with a chance of 98 %." */
   answer: (chance: string, bias: string, spread: string) =>
     `A gauge ${bias} and with a spread of ${spread} would meet it with a chance of ${chance}.`,
-  replaced: (chance: string) => `Under the clause it would replace: ${chance}.`,
+  replaced: (chance: string) => `Under the clause it would replace the chance is ${chance}.`,
+  undefined: 'It is not defined for this characteristic.',
+  asksPlainly: 'It asks for something that can be seen, and rewards nothing else.',
   sound: 'A better gauge and more readings make it easier to meet.',
   wrong: {
     'worse-repeatability': 'a gauge with more spread can meet it more easily',
@@ -87,8 +90,6 @@ export const clausePageWords = {
   rewardsWrong: (faults: string) => `It can reward the wrong thing: ${faults}.`,
   takenAway: 'This proposal takes the clause away: nothing is asked here any more.',
   noBefore: 'Nothing of the kind is asked so far.',
-  without: 'This clause has no chances',
-  bandsOf: (name: string) => name,
 } as const
 
 /** The gauge a clause asks for, and the least study, in words for whoever buys or repairs gauges. */
@@ -96,27 +97,32 @@ export const askedWords = {
   gauge: 'The gauge this clause asks for',
   gaugeText: (chance: string, readings: number) =>
     `To meet it with a chance of ${chance} in a study of ${formatNumber(readings)} readings:`,
-  spread: (spread: string) => `A gauge without bias may have a spread of at most ${spread}.`,
-  spreadWidth: (width: string, share: string) =>
-    share
-      ? `Six of these standard deviations take ${width}, ${share} of the tolerance.`
-      : `Six of these standard deviations take ${width}.`,
+  spread: (spread: string) =>
+    `A gauge without bias may have a spread of at most ${spread}, as the standard deviation of repeated readings.`,
+  spreadWidth: (width: string) =>
+    `Six of these standard deviations take ${width}: the figure to ask a maker of gauges for.`,
   noSpread: 'No gauge meets it with that chance, however small its spread.',
-  anySpread: 'Without bias any spread will do: the clause asks nothing of the repeatability.',
+  anySpread:
+    'A gauge without bias may have any spread: the clause asks nothing of the repeatability, so it names no gauge to buy.',
   bias: (spread: string, bias: string) =>
-    `A gauge with a spread of ${spread} may have a true bias of at most ${bias}.`,
+    `A gauge with a spread of ${spread}, as assumed, may have a true bias of at most ${bias}, either way: what is left after adjusting it must be smaller.`,
   noBias: (spread: string) =>
-    `With a spread of ${spread} it is not met with that chance even without bias: repair the repeatability first.`,
-  anyBias: 'Any bias will do.',
+    `With a spread of ${spread}, as assumed, it is not met with that chance even without bias: adjusting the bias is not enough, the spread must come down.`,
+  anyBias: (spread: string) => `With a spread of ${spread}, as assumed, any bias will do.`,
+  grows: 'With twice that spread the bias may even be larger: the clause favours the worse gauge.',
   least: 'The least study',
   leastText: (chance: string, spread: string, bias: string) =>
-    `For a chance of ${chance} with a spread of ${spread} and a true bias of ${bias}:`,
+    `For a chance of ${chance} with a spread of ${spread} and ${bias}:`,
+  bias0: 'no bias',
+  biasOf: (bias: string) => `a true bias of ${bias}`,
   leastReadings: (readings: number, chance: string) =>
     `${formatCount(readings, 'reading')} are enough; the chance is then ${chance}.`,
   leastMinimum: (readings: number) => `${formatCount(readings, 'reading')}, as asked for.`,
   anySize: 'Any number of readings will do.',
   noSize: 'No number of readings gives that chance at this bias and spread.',
-  sizeDoesNotHelp: 'More readings do not make it surer.',
+  sizeDoesNotHelp: 'More readings do not make it surer, so no number can be named.',
+  undefined: 'It could not be computed from these entries.',
+  computing: 'It is being computed.',
 } as const
 
 /** What clauses without a rule of chance ask, plainly. */

@@ -1,4 +1,11 @@
-import { canonicalText, evaluate, isError, type ClauseInput, type ClauseOutput } from '@evenrule/metrology'
+import {
+  canonicalText,
+  evaluate,
+  isError,
+  whatIfInput,
+  type ClauseInput,
+  type ClauseOutput,
+} from '@evenrule/metrology'
 import type { ClauseResult } from '../results'
 import type { WhatIfBase, WhatIfResult } from './base'
 import type { WhatIfChanges } from './changes'
@@ -16,26 +23,18 @@ export function supposedInput(
   { study, clauseKey, input }: WhatIfResult,
   changes: WhatIfChanges,
 ): ClauseInput {
-  const clause = changes.clauses.get(clauseKey) ?? input.clause
-  const { data } = input
-  const mine = data && study === changes.study
-  const left = new Set(changes.leftOut)
-  const changedData =
-    mine && (left.size > 0 || changes.reference !== null)
-      ? {
-          ...data,
-          readings: data.readings.filter((_, at) => !left.has(at)),
-          reference:
-            changes.reference === null ? data.reference : { ...data.reference, value: changes.reference },
-        }
-      : data
-  if (clause === input.clause && changedData === data && changes.tolerance === null) return input
-  return {
-    ...input,
-    clause,
-    ...(changes.tolerance && { tolerance: changes.tolerance }),
-    ...(changedData && { data: changedData }),
-  }
+  const clause = changes.clauses.get(clauseKey)
+  const { tolerance } = changes
+  const mine = input.data && study === changes.study
+  const leftOut = mine ? changes.leftOut : []
+  const referenceValue = mine ? changes.reference : null
+  if (!clause && !tolerance && leftOut.length === 0 && referenceValue === null) return input
+  return whatIfInput(input, {
+    leftOut,
+    ...(referenceValue !== null && { referenceValue }),
+    ...(tolerance && { tolerance }),
+    ...(clause && { clause }),
+  })
 }
 
 /** Every clause of the base as it would come out under the changes, computed here and nowhere kept. */

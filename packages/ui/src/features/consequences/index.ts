@@ -1,0 +1,2 @@
+export { default as ConsequencesPage } from './ConsequencesPage.vue'
+export { clausePagePath } from './clausePagePath'
