@@ -1,3 +1,4 @@
+import { clauseKey } from '@evenrule/metrology'
 import fc from 'fast-check'
 import { afterAll, beforeAll, expect, it } from 'vitest'
 import {
@@ -23,6 +24,11 @@ import {
   save,
   send,
 } from '../../packages/api/src/server/modules/agreements/agreements.draft.service'
+import {
+  comment,
+  mark,
+  withdrawClausesOf,
+} from '../../packages/api/src/server/modules/agreements/agreements.remark.service'
 import { readAgreementOf } from '../../packages/api/src/server/modules/agreements/agreements.read.service'
 import { sign } from '../../packages/api/src/server/modules/agreements/agreements.sign.service'
 import {
@@ -60,7 +66,9 @@ const anAct: fc.Arbitrary<Act> = fc.record({
   name: fc.oneof(
     { weight: 3, arbitrary: fc.constantFrom<Act['name']>('propose', 'accept', 'sign') },
     { weight: 4, arbitrary: fc.constantFrom<Act['name']>('counter', 'keep-draft', 'wait') },
-    { weight: 3, arbitrary: fc.constantFrom<Act['name']>('withdraw', 'discard-draft', 'discard-draft') },
+    { weight: 2, arbitrary: fc.constantFrom<Act['name']>('withdraw', 'discard-draft', 'discard-draft') },
+    { weight: 2, arbitrary: fc.constantFrom<Act['name']>('comment', 'mark') },
+    { weight: 3, arbitrary: fc.constant<Act['name']>('withdraw-clauses') },
   ),
   side: fc.constantFrom(...sides),
   approver: fc.boolean(),
@@ -69,7 +77,7 @@ const anAct: fc.Arbitrary<Act> = fc.record({
   inDays: fc.integer({ min: 0, max: 4 }),
   clauses: fc.integer({ min: 0, max: 2 }),
 })
-const choices = [[zeroTest()], [equivalence()], [readings(), zeroTest(0.01)]]
+const choices = [[zeroTest(), readings(20)], [equivalence()], [readings(), zeroTest(0.01)]]
 
 const inTenant = <T>(
   { side, approver }: Pick<Act, 'side' | 'approver'>,
@@ -110,6 +118,8 @@ async function attempt(tenant: Tenant, act: Act, at: Answer, version: Version): 
   const ids = { agreementId: at.id, versionId: version.id }
   const expectedVersion = version.rowVersion
   const draft = version.rounds.find(({ state }) => state === 'draft')
+  const standing = version.rounds.findLast(({ state }) => state !== 'draft')
+  const [first] = standing?.clauses ?? []
   const written = {
     clauses: choices[act.clauses] ?? [],
     effectiveOn: dayAfter(world.harness.now(), act.inDays),
@@ -118,7 +128,14 @@ async function attempt(tenant: Tenant, act: Act, at: Answer, version: Version): 
   }
   switch (act.name) {
     case 'keep-draft':
-      if (draft) await save(tenant, ids, { ...written, send: false, expectedVersion: draft.rowVersion })
+      if (draft)
+        await save(tenant, ids, {
+          ...written,
+          send: false,
+          expectedVersion: draft.rowVersion,
+          // Whoever writes on has the round before them that stands now, or still the one they began with.
+          ...(act.inDays > 1 && standing ? { answersRound: standing.number } : {}),
+        })
       else await answer(tenant, ids, { ...written, caseOf: null, send: false, expectedVersion })
       return
     case 'discard-draft':
@@ -130,6 +147,30 @@ async function attempt(tenant: Tenant, act: Act, at: Answer, version: Version): 
     case 'counter':
       if (draft) await send(tenant, ids, draft.rowVersion)
       else await answer(tenant, ids, { ...written, caseOf: null, send: true, expectedVersion })
+      return
+    case 'withdraw-clauses':
+      await withdrawClausesOf(tenant, ids, {
+        expectedVersion,
+        clauseKeys: [first ? clauseKey(first) : 'bias/mean'],
+        words: 'x',
+      })
+      return
+    case 'comment':
+      await comment(tenant, ids, {
+        round: standing?.number ?? 1,
+        about: { kind: 'effective-on', clauseKey: null },
+        text: 'x',
+      })
+      return
+    case 'mark':
+      await mark(tenant, ids, {
+        round: standing?.number ?? 1,
+        accepted: act.approver,
+        items: (version.acceptance?.items ?? []).map(({ kind, clauseKey: key, sha256 }) => ({
+          about: { kind, clauseKey: key },
+          sha256,
+        })),
+      })
       return
     case 'accept':
       await accept(tenant, ids, expectedVersion)
