@@ -3,6 +3,8 @@ export { default as ClauseResultRow } from './ClauseResultRow.vue'
 export {
   draftOf,
   readDraftParameters,
+  noBaseline,
+  type BaselineDraft,
   type ClauseDraft,
   type MarginDraft,
   type ReadDraft,

@@ -5,7 +5,6 @@ import { several, whose } from './agreements'
 export const editorWords = {
   heading: { draft: 'Our proposal', answer: 'Our answer', begin: 'Our proposal for a new version' },
   clause: (at: number) => `Clause ${at + 1}`,
-  add: 'Add a clause',
   remove: 'Remove',
   removeLabel: (name: string) => `Remove: ${name}`,
   replace: 'Kind',
@@ -18,7 +17,7 @@ export const editorWords = {
   comment: 'Comment to the other side',
   commentHint: (other: string) => `${other} reads it with this round.`,
   saved: 'Draft saved.',
-  noClauses: 'Add at least one clause before you send it.',
+  repeated: (what: string) => `Two clauses here judge the same thing (${what}). Keep one of them.`,
 } as const
 
 export const actWords = {
@@ -44,6 +43,9 @@ export const hindranceWords: Record<agreements.AgreementHindrance['code'], strin
   'limits-changed':
     'Limits of a characteristic have changed since this was agreed. Withdraw it and propose the clauses anew.',
   'own-side-has-signed': 'Our side has signed.',
+  'last-clause': 'It is the last clause of the round. Withdraw the proposal instead.',
+  'round-replaced':
+    'The round it answers has been replaced. Go on with the answer, look at the new round, then send it.',
 }
 
 export const signWords = {
@@ -82,10 +84,6 @@ export const roundsWords = {
   round: (number: number, side: Side, own: Side, other: string) =>
     `Round ${number}, ${whose(side, own, other)}`,
   sent: (at: string) => `sent ${at}`,
-  draft: 'not sent',
-  accepted: 'accepted',
-  answered: 'answered',
-  withdrawn: 'withdrawn',
   first: (count: number, day: string) =>
     `${formatCount(count, 'clause')}, first day in force ${formatDate(day)}.`,
   day: (before: string, after: string) => `First day in force: ${formatDate(before)} → ${formatDate(after)}`,
@@ -131,7 +129,8 @@ export const taskCriteriaWords = {
   since: (day: string) => `Criteria are in force without a gap since ${formatDate(day)}.`,
   clause: 'Clause',
   subject: 'About',
-  why: 'Why it applies',
+  reason: 'Why it applies',
+  why: 'What applies on another day, and why',
   from: (agreement: number, version: number) => `Agreement ${agreement}, version ${version}`,
   scope: { relationship: 'for all parts', part: 'for this part', characteristic: 'for this characteristic' },
   inForceSince: (day: string) => `in force since ${formatDate(day)}`,

@@ -1,7 +1,8 @@
-import type { agreements } from '@evenrule/api/contract'
+import { compareTerms, type agreements, type Terms } from '@evenrule/api/contract'
 import { describeClause, describeTerms, subjectWords } from '../../strings/clauses'
 import { clauseFieldWords, describeParameter, type FieldWords } from '../../strings/fields'
 import { roundsWords as words } from '../../strings/agreementActs'
+import { describeTerm, termLabels, termWords } from '../../strings/terms'
 import { compareClauses, type ClauseDifference } from './differences'
 
 function sentencesOf(row: ClauseDifference): string[] {
@@ -21,12 +22,27 @@ function sentencesOf(row: ClauseDifference): string[] {
   )
 }
 
-type Compared = Pick<agreements.AgreementRound, 'clauses' | 'effectiveOn'>
+type Compared = Pick<agreements.AgreementRound, 'clauses' | 'terms' | 'effectiveOn'>
+
+const termSentences = (before: Terms, after: Terms): string[] =>
+  compareTerms(before, after)
+    .filter(({ change }) => change !== 'same')
+    .map(({ field, before: old, after: now }) =>
+      words.parameter(
+        termWords.heading,
+        termLabels[field],
+        describeTerm(field, old),
+        describeTerm(field, now),
+      ),
+    )
 
 /** What a round changes of the one before, a sentence each; what it holds, for the first. */
 export function changeSentences(before: Compared | undefined, round: Compared): string[] {
   if (!before) return [words.first(round.clauses.length, round.effectiveOn)]
-  const changes = compareClauses(before.clauses, round.clauses).flatMap(sentencesOf)
+  const changes = [
+    ...compareClauses(before.clauses, round.clauses).flatMap(sentencesOf),
+    ...termSentences(before.terms, round.terms),
+  ]
   return [
     ...(changes.length ? changes : [words.noChange]),
     ...(before.effectiveOn === round.effectiveOn ? [] : [words.day(before.effectiveOn, round.effectiveOn)]),

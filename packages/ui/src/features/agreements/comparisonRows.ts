@@ -13,10 +13,10 @@ export function comparisonNotes(
   return (place) => {
     const flag = flags.find(({ clause }) => clause === place)
     return {
-      flag: flag ? safetyFlagWords[flag.code](flag.characteristicIds.length) : '',
+      flag: flag ? safetyFlagWords[flag.code](flag.count) : '',
       warnings: warnings
         .filter(({ clause }) => clause === place)
-        .map(({ code, characteristicIds }) => words.notFor(characteristicIds.length, problemWords[code])),
+        .map(({ code, count }) => words.notFor(count, problemWords[code])),
     }
   }
 }

@@ -39,6 +39,7 @@ export function versionInForce(agreement: Agreement): Version | undefined {
 
 /** A clause of a wider scope that applies where the narrower one says nothing. */
 export interface WiderClause {
+  key: string
   clause: Clause
   agreementNumber: number
   scope: agreements.ScopeKind
@@ -62,6 +63,7 @@ export function widerClauses(agreementsInForce: readonly Agreement[]): WiderClau
     for (const clause of (version && standingRound(version)?.clauses) ?? [])
       if (!clauses.has(clauseKey(clause)))
         clauses.set(clauseKey(clause), {
+          key: clauseKey(clause),
           clause,
           agreementNumber: agreement.number ?? 0,
           scope: agreement.scope.kind,

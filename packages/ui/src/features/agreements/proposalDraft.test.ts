@@ -1,7 +1,7 @@
-import type { Clause } from '@evenrule/metrology'
+import { clauseTypes, type Clause } from '@evenrule/metrology'
 import { describe, expect, it } from 'vitest'
+import { addableGroups } from './addable'
 import {
-  addableTypes,
   alternatives,
   dayAfter,
   marginUnits,
@@ -39,13 +39,24 @@ describe('a proposal as typed', () => {
 })
 
 describe('kinds of clauses', () => {
-  it('are offered unless something judges the same already', () => {
-    const types = addableTypes([{ type: 'bias-zero-test' }])
-    expect(types).not.toContain('bias-equivalence')
-    expect(types).toContain('resolution-share')
+  it('are all offered by subject; what judges the same already is named as taken', () => {
+    const groups = addableGroups([{ type: 'bias-zero-test' }])
+    const types = groups.flatMap((group) => group.types)
+    expect(types.map(({ type }) => type).sort()).toEqual([...clauseTypes].sort())
+    expect(types.find(({ type }) => type === 'bias-equivalence')?.taken).toBe('bias-zero-test')
+    expect(types.find(({ type }) => type === 'resolution-share')?.taken).toBeUndefined()
+    expect(groups.at(-1)?.types.map(({ type }) => type)).toEqual(['by-hand', 'does-not-apply'])
   })
+  it('that name their own subject can be added again', () =>
+    expect(
+      addableGroups([{ type: 'by-hand' }])
+        .at(-1)
+        ?.types.every(({ taken }) => taken === undefined),
+    ).toBe(true))
   it('know what judges the same', () =>
-    expect(alternatives('bias-zero-test').sort()).toEqual(['bias-equivalence', 'bias-zero-test']))
+    expect(alternatives('bias-zero-test')).toEqual(
+      expect.arrayContaining(['bias-equivalence', 'bias-zero-test']),
+    ))
 })
 
 describe('units of a margin', () => {
@@ -59,4 +70,13 @@ describe('units of a margin', () => {
 
 it('a day after another crosses months and years', () => {
   expect(dayAfter('2026-12-15', 30)).toBe('2027-01-14')
+})
+
+it('two clauses that judge the same are named before anything is sent', () => {
+  const twice = typedClauses([
+    equivalence,
+    { type: 'does-not-apply', parameters: { key: 'bias/mean', reason: 'Not on this part.' } },
+  ])
+  expect(readTyped(twice).problems.clauses).toContain('Bias')
+  expect(readTyped(twice.slice(0, 1)).problems).toEqual({})
 })

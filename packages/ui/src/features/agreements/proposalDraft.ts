@@ -1,14 +1,18 @@
-import type { agreements } from '@evenrule/api/contract'
+import { repeatedClauses, type agreements } from '@evenrule/api/contract'
 import {
   areCompatible,
   clauseDescriptors,
+  clauseKey,
   clauseTypes,
   units,
   type Clause,
   type ClauseType,
 } from '@evenrule/metrology'
-import { bySubject } from './differences'
 import { draftOf, readDraftParameters, type ClauseDraft } from '../../clauses/clauseDraft'
+import { editorWords } from '../../strings/agreementActs'
+import { describeKey } from '../../strings/clauses'
+import { bySubject } from './differences'
+import type { TypedTerms } from './typedTerms'
 
 /** A clause as typed. */
 export interface TypedClause {
@@ -19,25 +23,37 @@ export interface TypedClause {
 /** A proposal as typed. */
 export interface TypedProposal {
   clauses: TypedClause[]
+  terms: TypedTerms
   effectiveOn: string
   comment: string
 }
 
-/** Subject and measure of a type: of clauses with one key a proposal holds one. */
+/** Subject and measure of a type; of one whose clauses name their own, the type itself. */
 export const keyOfType = (type: ClauseType): string => {
   const { subject, measure } = clauseDescriptors[type]
-  return `${subject}/${measure}`
+  return subject === null || measure === null ? type : `${subject}/${measure}`
+}
+
+/** A type of which a proposal may hold several clauses, each of a subject and measure of its own. */
+export const isRepeatable = (type: ClauseType): boolean => clauseDescriptors[type].measure === null
+
+/** What a clause is, read from what was typed; undefined where it cannot be read. */
+export function readTypedClause({ type, parameters }: TypedClause): Clause | undefined {
+  const read = readDraftParameters(clauseDescriptors[type].fields, parameters)
+  // The fields of a type, read by their descriptors, are the parameters of that type.
+  return read.parameters ? ({ type, parameters: read.parameters } as unknown as Clause) : undefined
+}
+
+/** The key of a clause as typed: of one that names its own and cannot be read yet, its type. */
+export function keyOfTyped(typed: TypedClause): string {
+  if (!isRepeatable(typed.type)) return keyOfType(typed.type)
+  const clause = readTypedClause(typed)
+  return clause ? clauseKey(clause) : typed.type
 }
 
 /** Types that judge the same thing as this one, itself among them. */
 export const alternatives = (type: ClauseType): ClauseType[] =>
   clauseTypes.filter((each) => keyOfType(each) === keyOfType(type))
-
-/** Types whose subject and measure no clause has yet; of several for one thing the first. */
-export function addableTypes(present: readonly { type: ClauseType }[]): ClauseType[] {
-  const taken = new Set(present.map(({ type }) => keyOfType(type)))
-  return clauseTypes.filter((type) => !taken.has(keyOfType(type)))
-}
 
 export const typedClause = (type: ClauseType, unit?: string, parameters?: object): TypedClause => ({
   type,
@@ -66,17 +82,20 @@ export function readTyped(typed: readonly TypedClause[]): {
   const clauses: Clause[] = []
   const places: number[] = []
   const problems: Record<string, string> = {}
-  typed.forEach(({ type, parameters }, at) => {
-    const read = readDraftParameters(clauseDescriptors[type].fields, parameters)
-    if (read.problems) {
-      for (const [field, message] of Object.entries(read.problems))
-        problems[`clauses.${at}.parameters.${field}`] = message
+  typed.forEach((each, at) => {
+    const clause = readTypedClause(each)
+    if (clause) {
+      clauses.push(clause)
+      places.push(at)
       return
     }
-    // The fields of a type, read by their descriptors, are the parameters of that type.
-    clauses.push({ type, parameters: read.parameters } as unknown as Clause)
-    places.push(at)
+    const { problems: found } = readDraftParameters(clauseDescriptors[each.type].fields, each.parameters)
+    for (const [field, message] of Object.entries(found ?? {}))
+      problems[`clauses.${at}.parameters.${field}`] = message
   })
+  const [repeated] = repeatedClauses(clauses)
+  if (repeated !== undefined)
+    problems.clauses = editorWords.repeated(describeKey(clauseKey(clauses[repeated]!)))
   return { clauses, places, problems }
 }
 
@@ -87,6 +106,19 @@ export function marginUnits(
   const own = [...new Set(characteristics.map(({ unit }) => unit))]
   const symbols = units.map(({ symbol }) => symbol)
   return own.length ? symbols.filter((symbol) => own.some((unit) => areCompatible(unit, symbol))) : symbols
+}
+
+/**
+ * How many characteristics have one limit only, for which a share of the tolerance needs a baseline; undefined where
+ * that does not matter, because every one has both.
+ */
+export function oneSidedCount(
+  characteristics: readonly Pick<agreements.ScopedCharacteristic, 'lowerLimit' | 'upperLimit'>[],
+): number | undefined {
+  const count = characteristics.filter(
+    ({ lowerLimit, upperLimit }) => (lowerLimit === null) !== (upperLimit === null),
+  ).length
+  return count > 0 || characteristics.length === 0 ? count : undefined
 }
 
 /** An ISO day some days after another. */

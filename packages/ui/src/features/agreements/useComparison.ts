@@ -1,11 +1,22 @@
-import { clauseWarnings, safetyFlags, type agreements, type Side } from '@evenrule/api/contract'
-import type { Clause } from '@evenrule/metrology'
+import {
+  clauseWarnings,
+  noTerms,
+  safetyFlags,
+  type agreements,
+  type Side,
+  type Terms,
+} from '@evenrule/api/contract'
+import { clauseKey, type Clause } from '@evenrule/metrology'
 import { computed, ref } from 'vue'
 import { comparisonWords as words } from '../../strings/agreements'
 import type { ComparisonRow } from './ClauseComparison.vue'
+import { hasConsequences } from '../consequences/consequenceRows'
+import { effectText } from '../consequences/effectText'
+import { useConsequences } from '../consequences/useConsequences'
+import { acceptanceWords } from '../../strings/rounds'
+import { aboutClause, aboutFirstDay, itemOf } from './acceptance'
 import { comparisonNotes } from './comparisonRows'
 import { compareClauses } from './differences'
-import { effectText } from '../consequences/effectText'
 import {
   effectiveClauses,
   otherOf,
@@ -14,15 +25,21 @@ import {
   versionInForce,
   type WiderClause,
 } from './negotiation'
-import { useConsequences } from '../consequences/useConsequences'
+import { clausePoint, firstDayPoint, termsPoint, type PointRow } from './pointRows'
+
+/** What is being typed, as far as it can be read. */
+export interface TypedContent {
+  clauses: readonly Clause[]
+  terms: Terms
+}
 
 interface Compared {
   agreement: agreements.Agreement | undefined
   version: agreements.AgreementVersion | undefined
   wider: readonly WiderClause[]
   side: Side
-  /** The clauses being typed, where a proposal is being written. */
-  typed: readonly Clause[] | undefined
+  /** What is being typed, where a proposal is being written. */
+  typed: TypedContent | undefined
 }
 
 /** The clauses at hand beside those they are held against, and what they do. */
@@ -75,7 +92,7 @@ export function useComparison(source: () => Compared) {
   })
   const after = computed<Clause[]>(() => {
     const { typed, wider } = source()
-    return effectiveClauses(typed ?? round.value?.clauses ?? [], wider)
+    return effectiveClauses(typed?.clauses ?? round.value?.clauses ?? [], wider)
   })
   const differences = computed(() => compareClauses(before.value, after.value))
   const characteristics = computed(() => source().agreement?.characteristics ?? [])
@@ -104,15 +121,46 @@ export function useComparison(source: () => Compared) {
       ? words.inForceOf(agreement?.number ?? null, inForce.value.number ?? 0)
       : words.inForce
   })
-  const rows = computed<ComparisonRow[]>(() =>
-    differences.value.map((row) => ({
-      ...row,
+  /** What an earlier round of the version said about something the standing one leaves out. */
+  const leftOut = computed<PointRow[]>(() => {
+    const { version, typed } = source()
+    const keys = new Set(differences.value.map(({ key }) => key))
+    const items = (!typed && version?.acceptance?.items) || []
+    return items.flatMap(({ kind, clauseKey: key, present }): PointRow[] => {
+      if (kind !== 'clause' || key === null || present || keys.has(key)) return []
+      const clause = version?.rounds
+        .flatMap(({ clauses }) => clauses)
+        .findLast((each) => clauseKey(each) === key)
+      if (!clause) return []
+      const [row] = compareClauses([clause], [])
+      return row
+        ? [{ ...clausePoint(row), about: aboutClause(key), before: null, after: null, change: 'removed' }]
+        : []
+    })
+  })
+  const otherPoints = computed<PointRow[]>(() => {
+    const { version, typed } = source()
+    const of = baseRound.value ?? (isNew.value && inForce.value ? standingRound(inForce.value) : undefined)
+    const terms = termsPoint(of?.terms ?? null, typed?.terms ?? round.value?.terms ?? noTerms)
+    const day =
+      !typed && version && round.value && itemOf(version, aboutFirstDay)
+        ? [firstDayPoint(of?.effectiveOn ?? null, round.value.effectiveOn)]
+        : []
+    return [...(terms ? [terms] : []), ...day]
+  })
+  const bare = { beforeNote: '', afterNote: '', effect: { text: '', wrong: false }, flag: '', warnings: [] }
+  const rows = computed<ComparisonRow[]>(() => [
+    ...differences.value.map((row) => ({
+      ...clausePoint(row),
       beforeNote: noteOf(row.before),
       afterNote: row.change === 'same' && beforeLabel.value ? '' : noteOf(row.after),
       effect: effectText(row, consequences.effects.value?.get(row.key), consequences.unit.value),
+      hasRule: [row.before, row.after].some((clause) => clause && hasConsequences(clause)),
       ...notes.value(row.after ? after.value.indexOf(row.after) : -1),
     })),
-  )
+    ...leftOut.value.map((row) => ({ ...row, ...bare, hasRule: false, afterNote: acceptanceWords.leftOut })),
+    ...otherPoints.value.map((row) => ({ ...row, ...bare, hasRule: false })),
+  ])
   const afterLabel = computed(() => {
     const { version, side, typed } = source()
     if (typed) return words.draft

@@ -1,57 +1,47 @@
 import type { agreements, Side } from '@evenrule/api/contract'
 import { ref, shallowRef, watch } from 'vue'
 import { writeDraft } from '../../forms/drafts'
-import { ownDraft, standingRound, versionInForce, type WiderClause } from './negotiation'
+import { standingRound, versionInForce, type WiderClause } from './negotiation'
 import { dayAfter, startingTypes, typedClause, typedClauses } from './proposalDraft'
-import { proposalKey, type ProposalTarget } from './useProposalForm'
+import { proposalKey, proposalTarget, usualLead, type ProposalTarget } from './proposalTarget'
+import { typedTerms } from './typedTerms'
 
 interface Edited {
   agreement: agreements.Agreement | undefined
   version: agreements.AgreementVersion | undefined
   side: Side
   wider: readonly WiderClause[]
+  /** The challenge from which one came here to change the criterion. */
+  caseOf: agreements.AgreementCase | null
 }
-
-/** Days from today that a new proposal offers as its first day: time for an answer and two signatures. */
-const usualLead = 30
 
 /** Which proposal is being written on the page, if any: an unsent one opens for writing by itself. */
 export function useEditing(source: () => Edited) {
   const target = shallowRef<ProposalTarget>()
   const stopped = ref<string>()
+  /** The round was sent or discarded by somebody else while it was being written. */
+  const gone = ref(false)
 
-  /** The proposal that `start` writes: one's own draft, else an answer to the round that stands. */
-  function targetOf({ agreement, version }: Edited): ProposalTarget | undefined {
-    if (!agreement || !version?.moves.includes('keep-draft')) return undefined
-    const draft = ownDraft(version)
-    const from = draft ?? standingRound(version)
-    const unit = agreement.characteristics[0]?.unit
-    const initial = {
-      clauses: typedClauses(from?.clauses ?? [], unit),
-      effectiveOn:
-        from && from.effectiveOn >= agreement.today ? from.effectiveOn : dayAfter(agreement.today, usualLead),
-      comment: draft?.comment ?? '',
-    }
-    return draft ? { kind: 'draft', version, round: draft, initial } : { kind: 'answer', version, initial }
-  }
-
+  const targetOf = ({ agreement, version, caseOf }: Edited) => proposalTarget(agreement, version, caseOf)
   const start = () => (target.value = targetOf(source()))
 
   /** A new version: it starts from what is in force. */
   function begin() {
-    const { agreement, wider } = source()
+    const { agreement, wider, caseOf } = source()
     if (!agreement) return
     const unit = agreement.characteristics[0]?.unit
     const inForce = versionInForce(agreement)
-    const clauses = inForce && standingRound(inForce)?.clauses
+    const from = inForce && standingRound(inForce)
     target.value = {
       kind: 'begin',
+      caseOf,
       initial: {
-        clauses: clauses
-          ? typedClauses(clauses, unit)
+        clauses: from
+          ? typedClauses(from.clauses, unit)
           : wider.length > 0
             ? []
             : startingTypes.map((type) => typedClause(type, unit)),
+        terms: typedTerms(from?.terms),
         effectiveOn: dayAfter(agreement.today, usualLead),
         comment: '',
       },
@@ -61,6 +51,7 @@ export function useEditing(source: () => Edited) {
   function stop() {
     stopped.value = source().version?.id
     target.value = undefined
+    gone.value = false
   }
 
   /** After a draft was discarded: closes the form, and forgets what was typed into it. */
@@ -70,19 +61,24 @@ export function useEditing(source: () => Edited) {
     for (const id of [agreement?.id, version?.id]) if (id) writeDraft(proposalKey(id), undefined)
   }
 
-  /** After a draft was kept: the same form goes on with the draft as the server has it now. */
+  /** After a draft was kept, or somebody else changed it: the same form goes on with what the server has now. */
   function goOn() {
     const next = targetOf(source())
     if (next) target.value = next
+    gone.value = !next
   }
 
   watch(
     () => source().version,
     (version, before) => {
-      if (version?.id !== before?.id && target.value && before) target.value = undefined
-      if (version?.state === 'draft' && !target.value && stopped.value !== version.id) start()
+      if (version?.id !== before?.id && target.value && before && target.value.kind !== 'begin')
+        target.value = undefined
+      if (!version || target.value || stopped.value === version.id) return
+      const { agreement, caseOf } = source()
+      if (version.state === 'draft' || (caseOf && version.moves.includes('keep-draft'))) start()
+      else if (caseOf && agreement?.mayBegin) begin()
     },
     { immediate: true },
   )
-  return { target, start, begin, stop, forget, goOn }
+  return { target, gone, start, begin, stop, forget, goOn }
 }
