@@ -136,6 +136,42 @@ describe('the record', () => {
     expect(second.items.map(({ sequence }) => sequence)).toEqual([4])
   })
 
+  it('is filtered by clause and by calendar days of the organisation, and says what there is to choose', async () => {
+    harness.moveClock('2026-11-03T23:30:00.000Z')
+    await append({
+      type: 'submission.signed',
+      relationship,
+      taskId: task,
+      subject: { type: 'submission', id: gauge },
+      data: { clauses: [{ clauseKey: 'bias/mean', verdict: 'meets' }] },
+    })
+    await append({
+      type: 'part.changed',
+      relationship,
+      data: { name: 'a name with "clauseKey":"bias/index" in it' },
+    })
+    const types = async (query: Record<string, unknown>) => (await list(query)).items.map(({ type }) => type)
+    expect(await types({ clauseKey: 'bias/mean' })).toEqual(['submission.signed'])
+    expect(await types({ clauseKey: 'bias/index' })).toEqual([])
+    // Half past eleven in the evening in UTC is the next day in Berlin.
+    expect(await types({ from: '2026-11-04', to: '2026-11-04' })).toEqual([
+      'part.changed',
+      'submission.signed',
+    ])
+    expect((await list({ from: '2026-11-05' })).total).toBe(0)
+    const choices = await harness
+      .as('supplier', engineer)
+      .call(
+        record.listRecordChoices,
+        { organisationId: supplier.id },
+        { query: { chainId: relationship.id } },
+      )
+    expect(choices.clauseKeys).toEqual(['bias/mean'])
+    expect(choices.people).toContainEqual({ id: engineer.id, name: 'Ada Vogt', organisation: 'Supplier' })
+    expect(choices.tasks).toEqual([])
+    harness.moveClock('2026-11-04T09:00:00.000Z')
+  })
+
   it('keeps several events of one act in their order', async () => {
     await harness.inTenant('supplier', supplier, engineer, ['gauge-engineer'], async (tenant) => {
       for (const type of ['study.registered', 'study.computed', 'study.corrected'])
