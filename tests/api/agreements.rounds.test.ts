@@ -355,8 +355,6 @@ describe('comments', () => {
     ] as const)
       await expect(
         world.harness.inTenant('supplier', world.supplier, world.people.engineer, [], async ({ tx }) => {
-          const { agreementComments } =
-            await import('../../packages/api/src/server/modules/agreements/agreements.table')
           await tx.insert(agreementComments).values({
             relationshipId: world.relationship.id,
             supplierOrgId: world.supplier.id,

@@ -79,9 +79,9 @@ export async function startWorld() {
     as,
     inside,
 
-    async part(number: string): Promise<parts.Part> {
+    async part(number: string, relationshipId = relationship.id): Promise<parts.Part> {
       return as(actors.quality).call(parts.createPart, inside(actors.quality), {
-        body: { relationshipId: relationship.id, number, name: 'Pump housing', revision: 'A' },
+        body: { relationshipId, number, name: 'Pump housing', revision: 'A' },
       })
     },
     async characteristic(part: parts.Part, number: number, more: object = {}) {
