@@ -16,6 +16,11 @@ const seenBy = async (who: Who, id: string) => {
   const { rowVersion: expectedVersion, sha256 } = await story.read(who, id)
   return { expectedVersion, sha256 }
 }
+const owed = { owner: 'supplier', followUp: 'new-study' } as const
+const conditions = [{ text: 'x', dueOn: '2027-01-01', ...owed }]
+const onClause = (clauseKey: string, text: string) => ({
+  ...{ target: { kind: 'clause', clauseKey }, reasonKind: 'verdict', dueOn: '2026-11-30', text },
+})
 /** A move by somebody who has just looked. */
 const act = async (who: Who, endpoint: EndpointShape, id: string, body: object = {}) =>
   story.by(who).call(endpoint, { submissionId: id }, { body: { ...(await seenBy(who, id)), ...body } })
@@ -93,16 +98,19 @@ describe('accepting', () => {
   })
 
   it('takes an approver to set conditions, a day that is still to come, and words', async () => {
-    const body = { conditions: 'Repeat with the new ring.', conditionsDueOn: '2026-12-31' }
+    const asked = { text: 'Repeat with the new ring.', dueOn: '2026-12-31', ...owed }
+    const body = { conditions: [asked] }
     expect(await refusal('quality', reviews.acceptWithConditions, id, body)).toMatchObject({
       ...{ status: 403, code: 'not-allowed' },
     })
     expect(
-      await refusal('approves', reviews.acceptWithConditions, id, { ...body, conditionsDueOn: '2026-11-01' }),
-    ).toMatchObject({ status: 422, errors: [{ path: 'body.conditionsDueOn' }] })
+      await refusal('approves', reviews.acceptWithConditions, id, {
+        conditions: [asked, { ...asked, dueOn: '2026-11-01' }],
+      }),
+    ).toMatchObject({ status: 422, errors: [{ path: 'body.conditions.1.dueOn' }] })
     expect(
-      await refusal('approves', reviews.acceptWithConditions, id, { ...body, conditions: ' ' }),
-    ).toMatchObject({ status: 422, errors: [{ path: 'body.conditions' }] })
+      await refusal('approves', reviews.acceptWithConditions, id, { conditions: [{ ...asked, text: ' ' }] }),
+    ).toMatchObject({ status: 422, errors: [{ path: 'body.conditions.0.text' }] })
     await act('approves', reviews.acceptWithConditions, id, body)
     const seen = await story.read('engineer', id)
     expect(seen).toMatchObject({
@@ -124,7 +132,7 @@ describe('accepting', () => {
     for (const move of ['accept', 'refuse', 'confirm', 'accept-with-conditions']) {
       const answer = await client
         .send('post', `/organisations/${organisation.id}/submissions/${id}/${move}`)
-        .send({ ...body, reason: 'x', conditions: 'x', conditionsDueOn: '2027-01-01' })
+        .send({ ...body, reason: 'x', conditions })
       expect(answer.status).toBe(403)
     }
     story.harness.moveClock(before)
@@ -180,7 +188,7 @@ describe('accepting', () => {
 describe('who may decide', () => {
   it('is nobody of the supplier, no reader and no stranger', async () => {
     const id = await story.submission(ordinary.id, 'submitted')
-    const body = { reason: 'x', conditions: 'x', conditionsDueOn: '2027-01-01' }
+    const body = { reason: 'x', conditions }
     const moves = [
       reviews.accept,
       reviews.acceptWithConditions,
@@ -193,7 +201,7 @@ describe('who may decide', () => {
         expect((await refusal(who, endpoint, id, body)).status).toBe(403)
       expect((await refusal('stranger', endpoint, id, body)).status).toBe(404)
     }
-    const challenged = { clauseKey: 'bias/mean', reasonKind: 'result', text: 'x' }
+    const challenged = onClause('bias/mean', 'x')
     expect((await refusal('engineer', reviews.openChallenge, id, challenged)).status).toBe(403)
     expect((await refusal('stranger', reviews.openChallenge, id, challenged)).status).toBe(404)
     expect(
@@ -238,7 +246,7 @@ describe('a second person on a safety-class characteristic', () => {
   })
 
   it('confirms conditions as they were proposed, which the supplier sees only then', async () => {
-    const body = { conditions: 'Repeat by spring.', conditionsDueOn: '2027-03-01' }
+    const body = { conditions: [{ text: 'Repeat by spring.', dueOn: '2027-03-01', ...owed }] }
     await act('approves', reviews.acceptWithConditions, id, body)
     const between = await story.read('engineer', id)
     expect(between).toMatchObject({ state: 'awaiting-second-person', decisions: [] })
@@ -303,7 +311,7 @@ describe('a second person on a safety-class characteristic', () => {
 })
 
 describe('challenging a result', () => {
-  const bias = { clauseKey: 'bias/mean', reasonKind: 'result', text: 'The spread looks too small.' }
+  const bias = onClause('bias/mean', 'The spread looks too small.')
   let task: Awaited<ReturnType<Story['ready']>>
   let id: string
   beforeAll(async () => {
@@ -341,7 +349,7 @@ describe('challenging a result', () => {
   it('goes to and fro in words until the answer settles it, and then it can be accepted', async () => {
     const opened = await act('quality', reviews.openChallenge, id, bias)
     expect(opened).toMatchObject({
-      ...{ number: 1, clauseKey: 'bias/mean', reasonKind: 'result', state: 'open', closedAt: null },
+      ...{ number: 1, target: bias.target, reasonKind: 'verdict', state: 'open', closedAt: null },
       messages: [{ side: 'customer', name: 'Ola Brandt', text: bias.text }],
     })
     expect(await story.read('engineer', id)).toMatchObject({ state: 'challenged' })
@@ -365,6 +373,7 @@ describe('challenging a result', () => {
       ['supplier', 'Grit Falk'],
       ['customer', 'Ida Mohn'],
       ['supplier', 'Arne Holt'],
+      ['customer', 'Ola Brandt'],
     ])
     expect(await act('quality', reviews.accept, id)).toMatchObject({ state: 'accepted' })
     expect(await events(id)).toEqual([
@@ -376,19 +385,17 @@ describe('challenging a result', () => {
   })
 
   it('names a clause of the submission, one challenge at a time for each', async () => {
-    expect(
-      await refusal('quality', reviews.openChallenge, id, { ...bias, clauseKey: 'no/such' }),
-    ).toMatchObject({
-      ...{ status: 422, errors: [{ path: 'body.clauseKey' }] },
+    expect(await refusal('quality', reviews.openChallenge, id, onClause('no/such', 'x'))).toMatchObject({
+      ...{ status: 422, errors: [{ path: 'body.target.clauseKey' }] },
     })
     expect(await refusal('quality', reviews.openChallenge, id, { ...bias, text: ' ' })).toMatchObject({
       ...{ status: 422, errors: [{ path: 'body.text' }] },
     })
     await act('quality', reviews.openChallenge, id, bias)
     expect(await refusal('quality', reviews.openChallenge, id, bias)).toMatchObject({
-      ...{ status: 409, code: 'clause-under-challenge' },
+      ...{ status: 409, code: 'target-under-challenge' },
     })
-    const other = await act('quality', reviews.openChallenge, id, { ...bias, clauseKey: 'design/readings' })
+    const other = await act('quality', reviews.openChallenge, id, onClause('design/readings', 'x'))
     expect(other).toMatchObject({ number: 2 })
     // Answered only once both are.
     await say('engineer', reviews.answerChallenge, 'first', 0)
@@ -496,12 +503,12 @@ describe('challenging a result', () => {
     expect(await attempt(`delete from challenges`)).toMatch(/permission denied/)
     expect(
       await attempt(
-        `insert into challenge_messages select gen_random_uuid(), relationship_id, supplier_org_id, customer_org_id, challenge_id, 'customer', user_id, 'we were wrong', created_at from challenge_messages limit 1`,
+        `insert into challenge_messages select gen_random_uuid(), relationship_id, supplier_org_id, customer_org_id, challenge_id, 'customer', user_id, 'answer', 'words', 'we were wrong', null, null, null, null, created_at from challenge_messages limit 1`,
       ),
     ).toMatch(/row-level security/)
     expect(
       await attempt(
-        `insert into decisions select gen_random_uuid(), relationship_id, supplier_org_id, customer_org_id, id, 'accepted', 'final', null, null, '', created_by, created_at from submissions where id = '${id}'`,
+        `insert into decisions select gen_random_uuid(), relationship_id, supplier_org_id, customer_org_id, id, 'accepted', 'final', '', 1, created_by, created_at from submissions where id = '${id}'`,
       ),
     ).toMatch(/row-level security/)
   })

@@ -8,9 +8,11 @@ import {
 import { chooseMove, type Facts } from '../../../contract/moves/define'
 import { openToChallenge } from '../../../contract/moves/submission'
 import type { Challenge } from '../../../contract/reviews'
+import { whatIfOf } from '../../../contract/what-if'
 import type { Tenant } from '../../db/tenant'
-import { changedMeanwhile, notFound, wrongState, type ProblemError } from '../../errors'
+import { changedMeanwhile, invalidInput, notFound, wrongState, type ProblemError } from '../../errors'
 import { ownFiles } from '../files/attachments.service'
+import { selectTexts } from '../submissions/submissions.frozen.repository'
 import { wrongSubmissionState } from '../submissions/submissions.errors'
 import { lockedSubmission } from '../submissions/submissions.move.service'
 import type { SubmissionRow } from '../submissions/submissions.repository'
@@ -123,6 +125,7 @@ export async function sayUnder(
 ): Promise<Record<string, unknown>> {
   const files = await ownFiles(tenant, said.fileIds ?? [])
   const whatIf = said.whatIf ?? null
+  if (whatIf !== null) await refuseStrangeWhatIf(tenant, submission, whatIf)
   const { id: messageId } = await insertMessage(tenant, row, {
     ...message,
     move: name,
@@ -131,6 +134,15 @@ export async function sayUnder(
   })
   await insertReviewFiles(tenant, submission, { messageId }, files)
   return files.length > 0 ? { files: files.map(({ sha256 }) => sha256) } : {}
+}
+
+/** A what-if is quoted of what was signed here, or it would argue about something else. */
+async function refuseStrangeWhatIf(tenant: Tenant, submission: SubmissionRow, text: string): Promise<void> {
+  const quoted = whatIfOf(text)?.submissionSha256
+  if ((await selectTexts(tenant, submission)).some(({ sha256 }) => sha256 === quoted)) return
+  throw invalidInput([
+    { path: 'body.whatIf', message: 'This what-if was tried on another submission. Quote one of this.' },
+  ])
 }
 
 /** Who closed it and when, where the move ends it. */

@@ -1,9 +1,8 @@
 import { and, asc, eq, inArray } from 'drizzle-orm'
 import type { ConditionAsked } from '../../../contract/conditions'
 import type { Tenant } from '../../db/tenant'
-import { ownSide } from '../../db/own-side'
 import type { SubmissionRow } from '../submissions/submissions.repository'
-import { conditionReports, conditions, decisions } from './reviews.table'
+import { conditionReports, conditions } from './reviews.table'
 
 export type ConditionRow = typeof conditions.$inferSelect
 export type ConditionReportRow = typeof conditionReports.$inferSelect
@@ -34,33 +33,6 @@ export async function selectReports(
       ),
     )
     .orderBy(asc(conditionReports.createdAt), asc(conditionReports.id))
-}
-
-/** The conditions of final acceptances, by submission: what a lapse follows from. */
-export async function selectFinalConditions(
-  tenant: Tenant,
-  submissionIds: readonly string[],
-): Promise<Pick<ConditionRow, 'submissionId' | 'dueOn' | 'confirmedAt'>[]> {
-  if (submissionIds.length === 0) return []
-  return tenant.tx
-    .select({
-      submissionId: conditions.submissionId,
-      dueOn: conditions.dueOn,
-      confirmedAt: conditions.confirmedAt,
-    })
-    .from(conditions)
-    .innerJoin(
-      decisions,
-      and(eq(decisions.relationshipId, conditions.relationshipId), eq(decisions.id, conditions.decisionId)),
-    )
-    .where(
-      and(
-        ownSide(tenant, conditions),
-        inArray(conditions.submissionId, [...submissionIds]),
-        eq(decisions.state, 'final'),
-      ),
-    )
-    .orderBy(asc(conditions.dueOn), asc(conditions.id))
 }
 
 export async function insertConditions(

@@ -4,6 +4,7 @@ import type { askForCorrection, Challenge, Correction, signCorrection } from '..
 import type { Tenant } from '../../db/tenant'
 import { notFound } from '../../errors'
 import { sha256 } from '../record/record.append'
+import { shareAtSigning } from '../standing/standing.share.service'
 import { whatCorrectionFreezes, type Corrected } from '../submissions/submissions.correction.service'
 import { replaceChosen } from '../submissions/submissions.draft.repository'
 import { insertFrozen, insertSignature } from '../submissions/submissions.frozen.repository'
@@ -95,6 +96,7 @@ export async function correct(
     ...{ revision, challenge: row.number, textSha256: sha256(text) },
     ...frozenData(corrected),
   })
+  await shareAtSigning(tenant, submission)
   return moveChallenge(
     tenant,
     { submission, row },

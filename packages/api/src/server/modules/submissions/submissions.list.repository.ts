@@ -1,6 +1,6 @@
 import { and, eq, inArray, isNotNull, sql } from 'drizzle-orm'
 import type { SubmissionQuery, SubmissionSort } from '../../../contract/submissions'
-import { acceptedStates, submissionStates, waitsOn } from '../../../contract/moves/submission'
+import { submissionStates, waitsOn } from '../../../contract/moves/submission'
 import { verdictSchema } from '../../../contract/submission-content'
 import { ownSide } from '../../db/own-side'
 import { containing, orderOf, totalOverPages, windowOf } from '../../db/paging'
@@ -99,13 +99,4 @@ export async function selectSubmissions(
     .orderBy(...orderOf(columns, query.sort ?? (query.waitsOn ? '-age' : 'age'), submissions.id))
     .limit(windowOf(query).limit)
     .offset(windowOf(query).offset)
-}
-
-/** Ids of every accepted submission of this side: of what can have a standing. */
-export async function selectAcceptedIds(tenant: Tenant): Promise<string[]> {
-  const rows = await tenant.tx
-    .select({ id: submissions.id })
-    .from(submissions)
-    .where(and(ownSide(tenant, submissions), inArray(submissions.state, [...acceptedStates])))
-  return rows.map(({ id }) => id)
 }

@@ -1,12 +1,12 @@
 import { waitsOn } from '../../../contract/moves/submission'
-import type { Standing, StandingState } from '../../../contract/standing'
+import type { Standing } from '../../../contract/standing'
 import { verdictSchema } from '../../../contract/submission-content'
 import type { SubmissionQuery, SubmissionRow as SubmissionInList } from '../../../contract/submissions'
 import { dayIn, daysBetween } from '../../calendar'
 import { paged } from '../../db/paging'
 import type { Tenant } from '../../db/tenant'
-import { standingsOf } from '../standing/standing.service'
-import { selectAcceptedIds, selectSubmissions, type SubmissionListed } from './submissions.list.repository'
+import { standingsOf, submissionsThat } from '../standing/standing.service'
+import { selectSubmissions, type SubmissionListed } from './submissions.list.repository'
 
 /** Calendar days, in the relationship's time zone, from an instant until now. */
 export const ageInDays = (tenant: Tenant, timeZone: string, since: string): number =>
@@ -14,7 +14,8 @@ export const ageInDays = (tenant: Tenant, timeZone: string, since: string): numb
 
 /** One page of this side's submissions. */
 export async function listOfSubmissions(tenant: Tenant, query: SubmissionQuery) {
-  const ids = query.standing && (await idsStanding(tenant, query.standing))
+  // A standing follows from dates, so those that stand so are found by looking at every accepted one.
+  const ids = query.standing && (await submissionsThat(tenant, query.standing))
   return paged(
     query,
     (page) => selectSubmissions(tenant, page, ids),
@@ -26,12 +27,6 @@ export async function listOfSubmissions(tenant: Tenant, query: SubmissionQuery) 
       return rows.map((row) => asItem(tenant, row, standings.get(row.submission.id) ?? null))
     },
   )
-}
-
-/** A standing follows from dates, so those that stand so are found by looking at every accepted one. */
-async function idsStanding(tenant: Tenant, state: StandingState): Promise<string[]> {
-  const standings = await standingsOf(tenant, await selectAcceptedIds(tenant))
-  return [...standings].flatMap(([id, standing]) => (standing.state === state ? [id] : []))
 }
 
 function asItem(tenant: Tenant, row: SubmissionListed, standing: Standing | null): SubmissionInList {

@@ -47,7 +47,8 @@ export async function readSubmissionOf(tenant: Tenant, id: string, revision?: nu
 
   const signatures = await selectSignatures(tenant, submission)
   const notes = tenant.side === 'supplier' ? await selectNotes(tenant, id) : []
-  const review = await readReview(tenant, submission, dayIn(timeZone, tenant.now))
+  const today = dayIn(timeZone, tenant.now)
+  const review = await readReview(tenant, submission, today)
   const names = await namesOfPeople(tenant, [
     ...signatures.map(({ userId }) => userId),
     ...notes.map(({ userId }) => userId),
@@ -60,7 +61,7 @@ export async function readSubmissionOf(tenant: Tenant, id: string, revision?: nu
     ...{ id, number, state, rowVersion, relationshipId, taskId, partId, characteristicId },
     ...{ createdAt, sentForSignatureAt, submittedAt, decidedAt, withdrawalReason },
     ageDays: ageInDays(tenant, timeZone, submission.stateSince),
-    today: dayIn(timeZone, tenant.now),
+    today,
     supersededBy: await newer(tenant, submission),
     standing: (await standingsOf(tenant, [id])).get(id) ?? null,
     ...content,

@@ -4,6 +4,7 @@ import type { signSubmission, withdrawSubmission } from '../../../contract/submi
 import type { Tenant } from '../../db/tenant'
 import { sha256 } from '../record/record.append'
 import { answerRequests } from '../requests/requests.answers.service'
+import { shareAtSigning } from '../standing/standing.share.service'
 import { whatSigningFreezes } from './submissions.content.service'
 import { replaceChosen } from './submissions.draft.repository'
 import type { Frozen } from './submissions.freeze'
@@ -49,6 +50,7 @@ export async function sign(
     },
   )
   await answerRequests(tenant, moved, content.requests)
+  await shareAtSigning(tenant, moved)
   const words = about('supplier', submissionMessages.signed(content.criteria, clausesMet, clausesTotal))
   await tell(tenant, moved, 'other side', 'submission', words)
   return asMoved(moved)
