@@ -66,6 +66,16 @@ GRANT SELECT ON messages, users TO evenrule_system;
 --> statement-breakpoint
 GRANT SELECT, UPDATE ON outbox TO evenrule_system;
 --> statement-breakpoint
+-- What reminders follow from. The worker reads as one organisation after the other, inside its row security, and
+-- writes nothing but what it reminded of, and the messages, through notify_party.
+GRANT SELECT ON
+  organisations, relationships, parts, part_revisions, characteristics, measuring_tasks, gauges, reference_standards,
+  calibrations, agreements, agreement_versions, agreement_signatures, submissions, submission_texts, decisions, conditions,
+  challenges, requests, request_tasks, request_answers, standing_calibrations, standing_events, reinstatements, carry_overs
+  TO evenrule_system;
+--> statement-breakpoint
+GRANT SELECT, INSERT ON reminders TO evenrule_system;
+--> statement-breakpoint
 CREATE SCHEMA session;
 --> statement-breakpoint
 CREATE TABLE session.session (
@@ -164,6 +174,16 @@ BEGIN
   RETURN told;
 END $$;
 --> statement-breakpoint
+-- Which organisations stand on which side, for the worker's chores: ids, and nothing of what they do.
+CREATE FUNCTION organisations_with_sides()
+RETURNS TABLE (org_id uuid, side text)
+LANGUAGE sql STABLE SECURITY DEFINER SET search_path = public, pg_temp AS $$
+  SELECT supplier_org_id, 'supplier' FROM relationships
+  UNION
+  SELECT customer_org_id, 'customer' FROM relationships
+  ORDER BY 1, 2
+$$;
+--> statement-breakpoint
 REVOKE ALL ON ALL FUNCTIONS IN SCHEMA public FROM PUBLIC;
 --> statement-breakpoint
 GRANT EXECUTE ON FUNCTION
@@ -171,3 +191,7 @@ GRANT EXECUTE ON FUNCTION
   names_of_people(uuid[]), members_of_current(),
   notify_party(uuid, text, text[], uuid, text, text, text, text, timestamptz)
   TO evenrule_app;
+--> statement-breakpoint
+GRANT EXECUTE ON FUNCTION
+  organisations_with_sides(), notify_party(uuid, text, text[], uuid, text, text, text, text, timestamptz)
+  TO evenrule_system;

@@ -4,6 +4,7 @@ import { readWorkerConfig } from './config'
 import { openDatabase } from './db/database'
 import { openMail } from './integrations/mail'
 import { sendDueMail } from './modules/notifications/mail.service'
+import { tellReminders } from './modules/reminders/reminders.service'
 
 /** How often to look for mail that is due, milliseconds. */
 const interval = 1_000
@@ -16,13 +17,19 @@ const transport = openMail({ url: config.smtpUrl, from: config.mailFrom })
 const stopping = new AbortController()
 for (const signal of ['SIGTERM', 'SIGINT'] as const) process.once(signal, () => stopping.abort())
 
+const stopped = (): boolean => stopping.signal.aborted
+/** The hour in which reminders were last looked for: days begin in every time zone at some hour. */
+let remindedIn = ''
+
 logger.info('worker ready')
-while (!stopping.signal.aborted) {
+while (!stopped()) {
   try {
-    await sendDueMail(
-      { database, transport, origins: config.origins, logger, clock },
-      () => stopping.signal.aborted,
-    )
+    await remindHourly()
+  } catch (error) {
+    logger.error({ err: error }, 'reminders could not be looked for')
+  }
+  try {
+    await sendDueMail({ database, transport, origins: config.origins, logger, clock }, stopped)
   } catch (error) {
     // The database may be away for a while; the mail waits in it and is looked for again.
     logger.error({ err: error }, 'mail could not be looked for')
@@ -32,6 +39,15 @@ while (!stopping.signal.aborted) {
 transport.close()
 await pool.end()
 logger.info('worker stopped')
+
+/** Reminders once an hour by the clock, and at the start; what was told already is not told again. */
+async function remindHourly(): Promise<void> {
+  const hour = clock().toISOString().slice(0, 13)
+  if (hour === remindedIn) return
+  const told = await tellReminders({ database, logger, clock }, stopped)
+  remindedIn = hour
+  logger.info({ told }, 'reminders told')
+}
 
 /** Waits, or not any longer once asked to stop. */
 function pause(milliseconds: number): Promise<void> {

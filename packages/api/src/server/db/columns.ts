@@ -26,14 +26,18 @@ export const sharedColumns = {
   customerOrgId: uuid().notNull(),
 }
 
-const appRole = 'evenrule_app'
+/**
+ * Row security of an organisation binds the program, and the worker's chores, which read as one organisation after the
+ * other; what each role may do at all is granted in infra/migrations.
+ */
+const tenantRoles = ['evenrule_app', 'evenrule_system']
 
 /** Rows of one organisation: seen and written by it alone. */
 export const ownerPolicy = (name: string, column = 'org_id') =>
   pgPolicy(`${name}_owner`, {
     as: 'permissive',
     for: 'all',
-    to: appRole,
+    to: tenantRoles,
     using: sql.raw(`${column} = nullif(current_setting('app.org_id', true), '')::uuid`),
     withCheck: sql.raw(`${column} = nullif(current_setting('app.org_id', true), '')::uuid`),
   })
@@ -45,7 +49,7 @@ export const sharedPolicy = (name: string) =>
   pgPolicy(`${name}_parties`, {
     as: 'permissive',
     for: 'all',
-    to: appRole,
+    to: tenantRoles,
     using: sql.raw(party),
     withCheck: sql.raw(party),
   })
@@ -63,7 +67,7 @@ export const restrictPolicy = (
   pgPolicy(name, {
     as: 'restrictive',
     for: command,
-    to: appRole,
+    to: tenantRoles,
     ...(command === 'insert' ? {} : { using: sql.raw(condition) }),
     ...(command === 'select' || command === 'delete' ? {} : { withCheck: sql.raw(after) }),
   })

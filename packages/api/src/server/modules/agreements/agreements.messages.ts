@@ -10,7 +10,7 @@ export interface AgreementMessage {
 }
 
 /** Those who sign for a side. */
-const approver: Record<Side, Role> = { supplier: 'supplier-approver', customer: 'customer-approver' }
+export const approver: Record<Side, Role> = { supplier: 'supplier-approver', customer: 'customer-approver' }
 
 /** What messages say; `comment` and `reason` are what a person wrote. */
 export const agreementMessages = {

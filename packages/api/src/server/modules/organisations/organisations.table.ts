@@ -28,14 +28,14 @@ export const organisations = pgTable(
     pgPolicy('organisations_self', {
       as: 'permissive',
       for: 'all',
-      to: 'evenrule_app',
+      to: ['evenrule_app', 'evenrule_system'],
       using: sql.raw(`id = nullif(current_setting('app.org_id', true), '')::uuid`),
       withCheck: sql.raw(`id = nullif(current_setting('app.org_id', true), '')::uuid`),
     }),
     pgPolicy('organisations_partners', {
       as: 'permissive',
       for: 'select',
-      to: 'evenrule_app',
+      to: ['evenrule_app', 'evenrule_system'],
       using: sql.raw(
         `exists (select 1 from relationships r where r.supplier_org_id = organisations.id or r.customer_org_id = organisations.id)`,
       ),

@@ -21,6 +21,7 @@ const fromRequests = (tenant: Tenant) =>
       state: stateOfRequest,
       daysLeft: daysLeft(tenant),
       partner: { id: organisations.id, name: organisations.name },
+      timeZone: relationships.timeZone,
       total: totalOverPages,
     })
     .from(requests)
@@ -87,4 +88,11 @@ export async function selectListedRequest(
 ): Promise<RequestListed | undefined> {
   const [row] = await fromRequests(tenant).where(and(ownSide(tenant, requests), eq(requests.id, requestId)))
   return row
+}
+
+/** Every open request of this side, for reminders. */
+export async function selectOpenRequests(tenant: Tenant): Promise<RequestListed[]> {
+  return fromRequests(tenant)
+    .where(and(ownSide(tenant, requests), eq(stateOfRequest, 'open')))
+    .orderBy(requests.dueOn, requests.id)
 }
