@@ -88,7 +88,7 @@ export const revisionWords = {
   labelHint: (current: string) => `As on the new drawing. The current one is ${current}.`,
   copy: 'Copy the characteristics of the current revision',
   copyHint:
-    'The copies can be changed, and what was agreed and proved for the current revision stays with it. Measuring tasks are set up anew.',
+    'The copies can be changed, and what was agreed and proved for the current revision stays with it. Measuring tasks are set up anew, and acceptances are reopened until the customer carries over those whose limits stay.',
   noLonger: (label: string, current: string) =>
     `Revision ${label} is no longer the current one; that is ${current}.`,
 } as const

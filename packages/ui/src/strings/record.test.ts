@@ -2,6 +2,7 @@ import { readdirSync, readFileSync } from 'node:fs'
 import { join } from 'node:path'
 import { agreementMoves } from '@evenrule/api/contract/moves/agreement-version'
 import { challengeMoves } from '@evenrule/api/contract/moves/challenge'
+import { conditionMoves } from '@evenrule/api/contract/moves/condition'
 import { houseTermsMoves } from '@evenrule/api/contract/moves/house-terms'
 import { requestMoves } from '@evenrule/api/contract/moves/request'
 import { studyMoves } from '@evenrule/api/contract/moves/study'
@@ -13,10 +14,10 @@ const modules = join(process.cwd(), 'packages/api/src/server/modules')
 /** Types of events that services name themselves, beside those of the tables of moves. */
 const namedInServices = (): string[] => {
   const files = readdirSync(modules, { recursive: true, encoding: 'utf8' }).filter((file) =>
-    file.endsWith('.service.ts'),
+    /\.(service|messages)\.ts$/.test(file),
   )
   const kind =
-    /'((?:agreement|study|submission|challenge|request|house-terms|part|characteristic|measuring-task|gauge|reference-standard|calibration|member|organisation)\.[a-z-]+)'/g
+    /'((?:agreement|study|submission|challenge|condition|request|house-terms|part|characteristic|measuring-task|gauge|reference-standard|calibration|member|organisation)\.[a-z-]+)'/g
   return files.flatMap((file) =>
     [...readFileSync(join(modules, file), 'utf8').matchAll(kind)].map(([, type]) => type ?? ''),
   )
@@ -24,6 +25,7 @@ const namedInServices = (): string[] => {
 const ofMoves = [
   ...agreementMoves,
   ...challengeMoves,
+  ...conditionMoves,
   ...houseTermsMoves,
   ...requestMoves,
   ...studyMoves,
@@ -60,6 +62,22 @@ describe('what an event adds', () => {
     ['submission.refused', { reason: 'Bias too large.' }, '“Bias too large.”'],
     ['part.revision-added', { label: 'C' }, 'Revision C.'],
     ['calibration.entered', { dueOn: '2027-10-14' }, 'Due 14 Oct 2027.'],
+    [
+      'calibration.entered',
+      { dueOn: '2027-10-14', foundWithinLimits: false },
+      'Found out of limits. Due 14 Oct 2027.',
+    ],
+    [
+      'submission.suspended',
+      {
+        ...{ gauge: 'BG-14', kind: 'reported-out-of-limits' },
+        ...{ happenedOn: '2026-11-03', inDoubtSince: '2026-03-02' },
+      },
+      'BG-14 was found out of limits on 3 Nov 2026, in doubt since 2 Mar 2026.',
+    ],
+    ['gauge.repaired', { happenedOn: '2026-11-03' }, 'On 3 Nov 2026.'],
+    ['submission.reopened', { revision: 'B', limits: 'differ' }, 'Revision B: its limits changed.'],
+    ['submission.signed', { clauses: [{ clauseKey: 'bias/mean', verdict: 'meets' }] }, 'Bias meets.'],
     [
       'member.changed',
       { roles: ['admin', 'reader'], endsOn: '2027-01-31' },

@@ -1,6 +1,11 @@
 import type { record, Role } from '@evenrule/api/contract'
+import type { GaugeEventKind, LimitsComparison } from '@evenrule/api/contract/standing'
+import type { Verdict } from '@evenrule/metrology'
 import { formatDate, formatDateTime, formatNumber } from '../format'
+import { describeKey } from './clauses'
 import { roleWords } from './roles'
+import { equipmentEventWords } from './standings'
+import { verdictWords } from './verdicts'
 
 /** What a subject is called before its name; without a name the second form. */
 export const recordSubjectWords: Record<record.RecordSubject, [named: string, unnamed: string]> = {
@@ -79,9 +84,28 @@ export const eventWords: Record<string, string> = {
   'submission.second-person-asked': 'decided on * and asked for a second person',
   'submission.second-person-declined': 'sent * back to review as second person',
   'submission.refused': 'refused *',
+  'submission.one-off-proposed': 'accepted * without agreed criteria, for the other side to agree',
+  'submission.one-off-agreed': 'agreed to the acceptance of * without agreed criteria',
+  'submission.one-off-declined': 'did not agree to the acceptance of * without agreed criteria',
+  'submission.judged-by-hand': 'judged a clause of * by hand',
+  'submission.by-hand-cleared': 'took back what was judged by hand of *',
+  'submission.corrected': 'signed a corrected revision of *',
+  'condition.reported': 'reported a condition of * as done',
+  'condition.confirmed': 'confirmed a condition of *',
+  'condition.returned': 'did not take a condition of * as fulfilled',
   'submission.superseded': 'replaced * by a newer acceptance',
+  'submission.suspended': 'reported what suspends *',
+  'submission.gauge-event': 'reported what concerns the gauge of *',
+  'submission.hold-lifted': 'lifted the hold of * with a calibration',
+  'submission.reinstated': 'let * stand again',
+  'submission.reopened': 'reopened * with a new revision of the part',
+  'submission.carried-over': 'carried * over to a new revision',
   'challenge.opened': 'opened *',
   'challenge.answered': 'answered *',
+  'challenge.answered-by-correction': 'answered * with corrected readings',
+  'challenge.correction-sent-for-signature': 'sent a correction that answers * for signature',
+  'challenge.unresolved-proposed': 'proposed to leave * unresolved',
+  'challenge.unresolved-declined': 'did not agree to leave * unresolved',
   'challenge.replied': 'replied to the answer to * and kept it open',
   'challenge.settled': 'took the answer as settling *',
   'challenge.withdrawn': 'withdrew *',
@@ -102,6 +126,10 @@ export const eventWords: Record<string, string> = {
   'measuring-task.restored': 'restored *',
   'gauge.created': 'registered *',
   'gauge.changed': 'changed *',
+  'gauge.reported-out-of-limits': 'reported * out of limits',
+  'gauge.repaired': 'reported a repair of *',
+  'gauge.moved': 'reported that * was moved',
+  'gauge.changed-in-use': 'reported a change of software or fixture of *',
   'gauge.archived': 'archived *',
   'gauge.restored': 'restored *',
   'reference-standard.created': 'registered *',
@@ -109,6 +137,7 @@ export const eventWords: Record<string, string> = {
   'reference-standard.archived': 'archived *',
   'reference-standard.restored': 'restored *',
   'calibration.entered': 'entered a calibration of *',
+  'calibration.certificate-added': 'added the certificate to a calibration of *',
   'member.changed': 'changed the membership of *',
   'organisation.changed': 'changed the details of *',
 }
@@ -122,16 +151,69 @@ export function eventSentence(type: string): [before: string, after: string] {
 
 const isText = (value: unknown): value is string => typeof value === 'string' && value.trim() !== ''
 
-/** What an event adds in words: the reason given, the revision's label, the roles, the last day. */
+type Data = record.RecordEvent['data']
+type Detail = (data: Data) => string
+
+const day = (value: unknown): string => (isText(value) ? formatDate(value) : '')
+const has = (value: unknown, words: (text: string) => string): string => (isText(value) ? words(value) : '')
+
+/** What happened to a gauge, on what day, and since when its readings are in doubt. */
+const gaugeEvent: Detail = ({ gauge, kind, happenedOn, inDoubtSince }) => {
+  const what = equipmentEventWords[kind as GaugeEventKind]
+  const doubt = has(inDoubtSince, (on) => `, in doubt since ${formatDate(on)}`)
+  return what && isText(gauge) ? `${gauge} ${what} on ${day(happenedOn)}${doubt}.` : ''
+}
+const happened: Detail = ({ happenedOn }) => has(happenedOn, (on) => `On ${formatDate(on)}.`)
+
+const verdicts: Detail = ({ clauses }) =>
+  Array.isArray(clauses) && clauses.length > 0
+    ? `${(clauses as { clauseKey?: unknown; verdict?: unknown }[])
+        .map(
+          ({ clauseKey, verdict }) =>
+            `${describeKey(String(clauseKey))} ${verdictWords[verdict as Verdict] ?? String(verdict)}`,
+        )
+        .join(', ')}.`
+    : ''
+
+const limitsWords: Record<LimitsComparison, string> = {
+  same: 'its limits did not change',
+  differ: 'its limits changed',
+  missing: 'it has no such characteristic',
+}
+
+/** What events of a type add, where it is more than a reason. */
+const details: Record<string, Detail> = {
+  'part.revision-added': ({ label }) => has(label, (text) => `Revision ${text}.`),
+  'calibration.entered': ({ dueOn, foundWithinLimits }) =>
+    [foundWithinLimits === false ? 'Found out of limits.' : '', has(dueOn, (on) => `Due ${formatDate(on)}.`)]
+      .filter(Boolean)
+      .join(' '),
+  'calibration.certificate-added': ({ certificateNumber }) =>
+    has(certificateNumber, (text) => `Certificate ${text}.`),
+  'gauge.reported-out-of-limits': happened,
+  'gauge.repaired': happened,
+  'gauge.moved': happened,
+  'gauge.changed-in-use': happened,
+  'submission.suspended': gaugeEvent,
+  'submission.gauge-event': gaugeEvent,
+  'submission.hold-lifted': ({ gauge, calibratedOn, dueOn }) =>
+    has(gauge, (code) => `${code} was calibrated on ${day(calibratedOn)}, due again ${day(dueOn)}.`),
+  'submission.reopened': ({ revision, limits }) =>
+    has(revision, (label) => `Revision ${label}: ${limitsWords[limits as LimitsComparison] ?? ''}.`),
+  'submission.carried-over': ({ revision }) => has(revision, (label) => `Revision ${label}.`),
+  'submission.signed': verdicts,
+  'submission.corrected': verdicts,
+}
+
+/** What an event adds in words: the reason given, days, the revision's label, the verdicts, the roles. */
 export function eventDetail({ type, data }: Pick<record.RecordEvent, 'type' | 'data'>): string {
   const parts = [
-    isText(data.reason) ? `“${data.reason}”` : '',
-    type === 'part.revision-added' && isText(data.label) ? `Revision ${data.label}.` : '',
-    type === 'calibration.entered' && isText(data.dueOn) ? `Due ${formatDate(data.dueOn)}.` : '',
+    has(data.reason, (text) => `“${text}”`),
+    details[type]?.(data) ?? '',
     Array.isArray(data.roles)
       ? `${data.roles.map((role) => roleWords[role as Role] ?? String(role)).join(', ')}.`
       : '',
-    isText(data.endsOn) ? `Until ${formatDate(data.endsOn)}.` : '',
+    has(data.endsOn, (on) => `Until ${formatDate(on)}.`),
   ]
   return parts.filter(Boolean).join(' ')
 }
@@ -154,6 +236,10 @@ export const faultWords: Record<record.RecordFault, (sequence: number) => [what:
   'columns-changed': (n) => [
     `Event ${n} is not listed as it was written.`,
     'Its text is whole, but its day, person or subject in the list was altered.',
+  ],
+  'frozen-changed': (n) => [
+    `What event ${n} froze was changed.`,
+    'The event itself is whole, but a signed text or an evaluation it names by hash is no longer the one that was signed.',
   ],
   added: (n) => [
     `Event ${n} was put in past the end.`,
@@ -185,12 +271,22 @@ export const recordWords = {
   noChain: 'No record by that name',
   about: 'About',
   everything: 'everything',
-  onlyBy: (name: string) => `Only what ${name} did.`,
-  onlyTask: 'Only what concerns one measuring task.',
   onlySubject: 'Only what concerns one thing.',
   showAll: 'Show everything',
+  by: 'By',
+  anybody: 'anybody',
+  task: 'Measuring task',
+  anyTask: 'any',
+  oneTask: 'one that is not among those listed',
+  clause: 'Clause',
+  anyClause: 'any',
+  from: 'From',
+  to: 'To',
+  filters: 'Narrow the record',
+  personOf: (name: string | null, organisation: string | null) =>
+    `${name ?? 'somebody of before'}${organisation ? ` (${organisation})` : ''}`,
   somebody: 'Somebody who may not be named',
-  otherPerson: 'this person',
+  otherPerson: 'somebody who is not among those listed',
   filterPerson: (name: string) => `Only what ${name} did`,
   list: 'Events',
   proof: 'Exact text',

@@ -4,12 +4,20 @@ import { useApi } from '../../session/client'
 import { useTableQuery } from '../../tables/useTableQuery'
 import { chosen, useHere, useLoaded } from '../common'
 
+/** What narrows the list, all of it in the address. */
+const nothing = { about: '', subject: '', task: '', person: '', clause: '', from: '', to: '' }
+const filters = Object.keys(nothing) as (keyof typeof nothing)[]
+export type RecordFilterState = Record<keyof typeof nothing, string>
+
+/** A day that is half typed narrows nothing yet. */
+const dayOr = (text: string): string => (/^\d{4}-\d{2}-\d{2}$/.test(text) ? text : '')
+
 /** State of the record's page: which chain, which filters, and the events they give. */
 export function useRecordPage() {
   const api = useApi()
   const here = useHere()
   const { query, state } = useTableQuery({
-    filters: { chain: '', about: '', subject: '', task: '', person: '' },
+    filters: { chain: '', ...nothing },
     size: 50,
   })
 
@@ -26,13 +34,10 @@ export function useRecordPage() {
   const isJournal = computed(() => chainId.value === here.organisationId.value)
   const partner = computed(() => partners.value?.items.find(({ id }) => id === chainId.value)?.partner.name)
 
-  const isFiltered = computed(() => {
-    const { about, subject, task, person } = query.value
-    return Boolean(about || subject || task || person)
-  })
+  const isFiltered = computed(() => filters.some((name) => query.value[name] !== ''))
   const { data, error, loading, reload } = useLoaded(
     () => ({ ...query.value, chainId: chainId.value }),
-    async ({ chainId: chain, page, size, about, subject, task, person }) =>
+    async ({ chainId: chain, page, size, about, subject, task, person, clause, from, to }) =>
       chain === undefined
         ? undefined
         : api.call(record.listEvents, {
@@ -45,13 +50,15 @@ export function useRecordPage() {
               subjectId: subject,
               taskId: task,
               personId: person,
+              clauseKey: clause,
+              ...{ from: dayOr(from), to: dayOr(to) },
             }) as SentQueryOf<typeof record.listEvents>,
           }),
   )
 
   /** Back to every event of the chain. */
   function showAll(): void {
-    Object.assign(state, { about: '', subject: '', task: '', person: '' })
+    Object.assign(state, nothing)
   }
   return {
     query,

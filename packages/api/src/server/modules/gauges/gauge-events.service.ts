@@ -1,4 +1,5 @@
 import type { AnswerInputOf, BodyOf, QueryOf } from '../../../contract/define'
+import type { GaugeEventKind } from '../../../contract/standing'
 import type { listGaugeEvents, previewGaugeEvent, reportGaugeEvent } from '../../../contract/gauge-events'
 import { paged } from '../../db/paging'
 import type { Tenant } from '../../db/tenant'
@@ -57,6 +58,14 @@ export async function previewOf(
   }
 }
 
+/** `gauge.changed` is what an edit of the gauge leaves, so a change of software or fixture has another name. */
+const eventTypes = {
+  'reported-out-of-limits': 'gauge.reported-out-of-limits',
+  repaired: 'gauge.repaired',
+  moved: 'gauge.moved',
+  changed: 'gauge.changed-in-use',
+} as const satisfies Record<GaugeEventKind, string>
+
 /** Reports what happened to a gauge: acceptances are suspended as agreed, and both sides told. */
 export async function reportEventOf(
   tenant: Tenant,
@@ -74,7 +83,7 @@ export async function reportEventOf(
   const event = await storeEvent(tenant, { thing, code }, reported, { fileId, calibrationId: null })
   const { id, kind, happenedOn, lastGoodOn } = event
   tenant.record({
-    type: `gauge.${kind}`,
+    type: eventTypes[kind],
     subject: subjectOf(thing),
     data: {
       ...{ eventId: id, happenedOn, lastGoodOn },
