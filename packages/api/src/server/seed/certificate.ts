@@ -2,18 +2,21 @@
 const escaped = (text: string): string => text.replace(/[^\x20-\x7e]/g, '?').replace(/[\\()]/g, '\\$&')
 
 /** A certificate of one page, so that the demonstration's files open in any reader. Plainly marked as invented. */
-export function certificate(
+export const certificate = (
   number: string,
   laboratory: string,
   { calibratedOn, dueOn }: { calibratedOn: string; dueOn: string },
-): Buffer {
-  const lines = [
+): Buffer =>
+  page([
     'Calibration certificate (demonstration, invented)',
     number,
     laboratory,
     `Calibrated on ${calibratedOn}, due on ${dueOn}`,
     'Found within its limits.',
-  ]
+  ])
+
+/** A document of one page with these lines. */
+export function page(lines: readonly string[]): Buffer {
   const text = lines
     .map((line, at) => `BT /F1 12 Tf 72 ${760 - 22 * at} Td (${escaped(line)}) Tj ET`)
     .join('\n')

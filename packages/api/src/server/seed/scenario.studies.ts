@@ -15,6 +15,12 @@ export type DemoEnd =
   | 'accepted'
   | 'accepted-after-challenge'
   | 'accepted-with-conditions'
+  | 'answered-by-correction'
+  | 'accepted-after-correction'
+  | 'unresolved-proposed'
+  | 'conditions-lapsed'
+  | 'one-off-proposed'
+  | 'one-off-accepted'
 
 /** Registered so many days before the seeding, number of readings, and how far it came. */
 export type DemoStudy = readonly [daysAgo: number, readings: number, end: DemoEnd]
@@ -129,6 +135,7 @@ export const studies: readonly (readonly [string, number, string, readonly DemoS
     'VC-22',
     [
       [240, 25, 'accepted-after-challenge'],
+      [60, 25, 'accepted-after-correction'],
       [3, 25, 'collecting'],
     ],
   ],
@@ -157,7 +164,7 @@ export const studies: readonly (readonly [string, number, string, readonly DemoS
     'CM-3',
     [
       [220, 25, 'accepted'],
-      [95, 25, 'accepted-with-conditions'],
+      [95, 25, 'conditions-lapsed'],
     ],
   ],
   [
@@ -203,7 +210,7 @@ export const studies: readonly (readonly [string, number, string, readonly DemoS
     'MM-2',
     [
       [195, 25, 'accepted'],
-      [24, 10, 'answered'],
+      [24, 10, 'answered-by-correction'],
     ],
   ],
   [
@@ -232,6 +239,7 @@ export const studies: readonly (readonly [string, number, string, readonly DemoS
     [
       [245, 10, 'answered'],
       [40, 10, 'computed'],
+      [29, 10, 'unresolved-proposed'],
     ],
   ],
   [
@@ -261,17 +269,38 @@ export const studies: readonly (readonly [string, number, string, readonly DemoS
       [18, 10, 'for-signature'],
     ],
   ],
-  ['OC 12-118', 1, 'MM-07', [[65, 25, 'computed']]],
+  [
+    'OC 12-118',
+    1,
+    'MM-07',
+    [
+      [65, 25, 'computed'],
+      [45, 25, 'one-off-accepted'],
+    ],
+  ],
+  ['OC 12-118', 2, 'VC-22', [[21, 25, 'one-off-proposed']]],
+  ['OC 12-140', 1, 'VC-22', [[11, 25, 'submitted']]],
   ['OC 12-140', 2, 'TW-5', [[10, 25, 'registered']]],
 ]
 
 export const abandonReason = 'The master was exchanged halfway through; the readings are of two objects.'
 
+/** Zero-based places of the readings that are challenged. */
+export const challengedReadings = [2, 10]
 export const challengeText =
   'Readings 3 and 11 lie apart from the rest. Was the fixture set anew between them?'
 export const answerText =
   'The readings stand as taken. The fixture was not touched; the operator reports coolant on the contact at both.'
+export const correctionText =
+  'You are right: both were entered with two digits changed over. They were read again from the printed strip.'
+export const unresolvedText =
+  'Neither of us can show it from here. We propose to leave it open and have the ring measured elsewhere.'
+export const laboratory = 'Hallvik measuring laboratory (invented)'
 export const refusalReason =
   'The criteria are not met. Please repair or replace the gauge and study it again.'
 export const withdrawalReason = 'The wrong master was used; a new study follows.'
-export const conditions = 'Repeat the study after the next calibration, with the same number of readings.'
+export const conditionTexts = {
+  study: 'Repeat the study after the next calibration, with the same number of readings.',
+  instruction: 'Send the work instruction with the new way of clamping.',
+}
+export const conditionReport = 'The instruction was changed and both shifts were told; it is attached.'

@@ -1,66 +1,23 @@
 import {
-  accept,
-  acceptWithConditions,
-  answerChallenge,
-  confirm,
-  openChallenge,
-  refuse,
-  settleChallenge,
-} from '../../contract/reviews'
-import {
   prepareSubmission,
-  readSubmission,
   sendForSignature,
   signSubmission,
   withdrawSubmission,
 } from '../../contract/submissions'
-import { memberWith, type Base, type SeededOrganisation, type SeededPerson } from './base'
+import type { Base } from './base'
 import type { Ids } from './ids'
-import {
-  answerText,
-  challengeText,
-  conditions,
-  refusalReason,
-  withdrawalReason,
-  type DemoEnd,
-} from './scenario.studies'
+import { reviewActs, type Acts } from './review-acts'
+import { withdrawalReason, type DemoEnd } from './scenario.studies'
 import type { Scene } from './scenes'
-import type { Act, Stage } from './stage'
+import type { Stage } from './stage'
+import { castOf, Played } from './submission-cast'
+import { deedsOf, type Deed } from './submission-deeds'
 import type { DemoTask } from './tasks'
 
 interface Planned {
   task: DemoTask
   end: DemoEnd
   collectedDaysAgo: number
-}
-
-/** What happens to a submission, by how far it comes; each act a day or more after the one before. */
-type Deed =
-  | 'prepare'
-  | 'send'
-  | 'sign'
-  | 'withdraw'
-  | 'challenge'
-  | 'answer'
-  | 'settle'
-  | 'refuse'
-  | 'accept'
-  | 'accept-with-conditions'
-  | 'confirm'
-
-const signed: Deed[] = ['prepare', 'send', 'sign']
-const deeds: Partial<Record<DemoEnd, Deed[]>> = {
-  draft: ['prepare'],
-  'for-signature': ['prepare', 'send'],
-  submitted: signed,
-  withdrawn: [...signed, 'withdraw'],
-  challenged: [...signed, 'challenge'],
-  answered: [...signed, 'challenge', 'answer'],
-  refused: [...signed, 'refuse'],
-  'awaiting-second-person': [...signed, 'accept'],
-  accepted: [...signed, 'accept', 'confirm'],
-  'accepted-after-challenge': [...signed, 'challenge', 'answer', 'settle', 'accept', 'confirm'],
-  'accepted-with-conditions': [...signed, 'accept-with-conditions', 'confirm'],
 }
 
 /** The scenes of one submission. */
@@ -71,112 +28,41 @@ export function submissionScenes(
   { task, end, collectedDaysAgo }: Planned,
 ): Scene[] {
   const { relationship, limits } = task
-  const supplier = base.organisations[relationship.supplier]
-  const customer = base.organisations[relationship.customer]
+  const { [relationship.supplier]: supplier, [relationship.customer]: customer } = base.organisations
   const isSafety = limits[6] === 'safety'
-  const cast = castOf(stage, supplier, customer)
-  let submissionId = ''
-  const seen = async () => {
-    const { rowVersion, sha256, evaluations, challenges } = await cast.engineer(readSubmission, {
-      params: { submissionId },
+  const played = new Played(castOf(stage, supplier, customer))
+  const play: Acts<Deed> = { ...makingActs(ids, task, played), ...reviewActs(stage, played) }
+  return (deedsOf[end] ?? [])
+    .filter((deed) => deed !== 'confirm' || isSafety)
+    .map((deed, at) => {
+      const daysAgo = Math.max(collectedDaysAgo - 1 - at, 0)
+      return { daysAgo, play: async () => void (await play[deed](daysAgo)) }
     })
-    return { expectedVersion: rowVersion, sha256, evaluations, challenges }
-  }
-  const params = () => ({ submissionId })
-  const challengeParams = async () => ({ ...params(), challengeId: (await seen()).challenges[0]?.id ?? '' })
-  const play: Record<Deed, () => Promise<unknown>> = {
+}
+
+/** How the supplier makes a submission. */
+function makingActs(
+  ids: Ids,
+  task: DemoTask,
+  played: Played,
+): Acts<'prepare' | 'send' | 'sign' | 'withdraw'> {
+  const { engineer, approver } = played.cast
+  return {
     prepare: async () => {
-      submissionId = (
-        await cast.engineer(prepareSubmission, { body: { taskId: ids.get('task', task.name) } })
-      ).id
+      const body = { taskId: ids.get('task', task.name) }
+      played.id = (await engineer(prepareSubmission, { body })).id
     },
     send: async () => {
-      const { expectedVersion } = await seen()
-      await cast.engineer(sendForSignature, { params: params(), body: { expectedVersion, note: '' } })
+      const { expectedVersion } = await played.seen()
+      await engineer(sendForSignature, { params: played.params(), body: { expectedVersion, note: '' } })
     },
-    sign: async () => {
-      const { expectedVersion, sha256 } = await seen()
-      await cast.approver(signSubmission, { params: params(), body: { expectedVersion, sha256 } })
-    },
+    sign: async () => approver(signSubmission, { params: played.params(), body: await played.seen() }),
     withdraw: async () => {
-      const { expectedVersion } = await seen()
-      await cast.engineer(withdrawSubmission, {
-        params: params(),
+      const { expectedVersion } = await played.seen()
+      await engineer(withdrawSubmission, {
+        params: played.params(),
         body: { expectedVersion, reason: withdrawalReason },
       })
     },
-    challenge: async () => {
-      const { expectedVersion, evaluations } = await seen()
-      const clauseKey = evaluations.find((each) => each.clauseKey.startsWith('bias'))?.clauseKey
-      await cast.reviewer(openChallenge, {
-        params: params(),
-        body: { expectedVersion, clauseKey, reasonKind: 'readings', text: challengeText },
-      })
-    },
-    answer: async () => {
-      const { challenges } = await seen()
-      await cast.engineer(answerChallenge, {
-        params: await challengeParams(),
-        body: { expectedVersion: challenges[0]?.rowVersion, text: answerText },
-      })
-    },
-    settle: async () => {
-      const { challenges } = await seen()
-      await cast.reviewer(settleChallenge, {
-        params: await challengeParams(),
-        body: { expectedVersion: challenges[0]?.rowVersion, text: '' },
-      })
-    },
-    refuse: async () => {
-      const { expectedVersion, sha256 } = await seen()
-      await cast.reviewer(refuse, {
-        params: params(),
-        body: { expectedVersion, sha256, reason: refusalReason },
-      })
-    },
-    accept: async () => {
-      const { expectedVersion, sha256 } = await seen()
-      await cast.reviewer(accept, { params: params(), body: { expectedVersion, sha256, reason: '' } })
-    },
-    'accept-with-conditions': async () => {
-      const { expectedVersion, sha256 } = await seen()
-      await cast.customerApprover(acceptWithConditions, {
-        params: params(),
-        body: { expectedVersion, sha256, conditions, conditionsDueOn: stage.day(-90), reason: '' },
-      })
-    },
-    confirm: async () => {
-      const { expectedVersion, sha256 } = await seen()
-      await cast.second(confirm, { params: params(), body: { expectedVersion, sha256 } })
-    },
-  }
-  return (deeds[end] ?? [])
-    .filter((deed) => deed !== 'confirm' || isSafety)
-    .map((deed, at) => ({
-      daysAgo: Math.max(collectedDaysAgo - 1 - at, 0),
-      play: async () => void (await play[deed]()),
-    }))
-}
-
-/** Who plays which part: whoever took the readings does not sign, and the second person is another one. */
-function castOf(stage: Stage, supplier: SeededOrganisation, customer: SeededOrganisation) {
-  const engineer = memberWith(supplier, 'gauge-engineer')
-  const reviewer = memberWith(customer, 'quality-representative')
-  const other = (
-    organisation: SeededOrganisation,
-    roles: SeededPerson['roles'],
-    not: SeededPerson,
-  ): SeededPerson =>
-    organisation.people.find(
-      (person) => person !== not && person.roles.some((role) => roles.includes(role)),
-    ) ?? not
-  const as = (side: 'supplier' | 'customer', person: SeededPerson): Act =>
-    stage.as(side, side === 'supplier' ? supplier : customer, person)
-  return {
-    engineer: as('supplier', engineer),
-    approver: as('supplier', other(supplier, ['supplier-approver'], engineer)),
-    reviewer: as('customer', reviewer),
-    customerApprover: as('customer', memberWith(customer, 'customer-approver')),
-    second: as('customer', other(customer, ['quality-representative', 'customer-approver'], reviewer)),
   }
 }
