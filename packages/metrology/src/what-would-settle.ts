@@ -1,5 +1,7 @@
 import { clauseDescriptor, parseClause } from './clauses'
-import type { Characteristic, ClauseInput, ClauseOutput, ReasonCode, SettleCode } from './types'
+import { given } from './input/common'
+import { spreadAtLeast } from './rules/capability-index'
+import type { Characteristic, ClauseInput, ClauseOutput, ReasonCode, Rule, SettleCode, Truth } from './types'
 
 /** What would likely turn "not shown" into a verdict. */
 export interface Settling {
@@ -18,7 +20,11 @@ const otherRemedies: Partial<Record<ReasonCode, SettleCode>> = {
   'one-reading': 'one-reading',
   'zero-spread': 'finer-resolution',
   'reference-uncertainty-too-large': 'better-standard',
+  'reference-uncertainty-unknown': 'standard-uncertainty',
   'margin-undefined': 'margin-undefined',
+  'no-tolerance-width': 'margin-undefined',
+  'no-process-spread': 'margin-undefined',
+  'no-document': 'document',
 }
 
 /**
@@ -33,16 +39,25 @@ export function whatWouldSettle(input: ClauseInput, output: ClauseOutput): Settl
   const clause = parseClause(input.clause)
   const { study } = output
   const descriptor = clauseDescriptor(clause)
-  const rule = descriptor.rule?.(clause, characteristicOf(input)) ?? null
+  const assumed = given('referenceStandardUncertainty', study?.reference.standardUncertainty ?? undefined)
+  const rule = descriptor.rule?.(clause, characteristicOf(input), assumed) ?? null
   if (!descriptor.readingsNeeded || !study?.standardDeviation || study.bias === null || !rule) {
     return none('not-an-equivalence')
   }
-  if ('margin' in rule && Math.abs(study.bias) >= rule.margin) return none('estimate-beyond-margin')
   const truth = { bias: study.bias, standardDeviation: study.standardDeviation }
-  const needed = descriptor.readingsNeeded(clause, characteristicOf(input), truth, wantedChance)
+  const beyond = beyondLimit(rule, truth)
+  if (beyond) return none(beyond)
+  const needed = descriptor.readingsNeeded(clause, characteristicOf(input), truth, wantedChance, assumed)
   return needed.readings === null
-    ? none('estimate-too-near-margin')
+    ? none(rule.type === 'index' ? 'index-too-near-least' : 'estimate-too-near-margin')
     : { reason: 'more-readings', readings: needed.readings, chance: needed.chance }
+}
+
+/** Where the estimates themselves do not meet the clause, more readings would rather show that it falls short. */
+function beyondLimit(rule: Rule, { bias, standardDeviation }: Truth): SettleCode | null {
+  if (rule.type === 'index')
+    return standardDeviation >= spreadAtLeast(rule, bias) ? 'index-below-least' : null
+  return 'margin' in rule && Math.abs(bias) >= rule.margin ? 'estimate-beyond-margin' : null
 }
 
 function characteristicOf({

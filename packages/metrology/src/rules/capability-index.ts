@@ -14,6 +14,19 @@ const allowance = ({ share, toleranceWidth }: Index): number => (share * toleran
 /** How many s beside the bias an index of `least` leaves no room for. */
 const halfSpread = ({ least, sigmas }: Index): number => (least * sigmas) / 2
 
+/** The standard deviation at which a true bias leaves the true indices exactly the least asked for. */
+export const spreadAtLeast = (rule: Index, bias: number): number =>
+  Math.min(
+    (allowance(rule) - Math.abs(bias)) / halfSpread(rule),
+    rule.leastCg === undefined ? Infinity : (2 * allowance(rule)) / (rule.leastCg * rule.sigmas),
+  )
+
+/**
+ * A bound is there to keep out a gauge whose true indices are just the least: those it is meant to accept are better by
+ * about a tenth.
+ */
+const marginOfSafety = 0.9
+
 /**
  * |bias| + factor·s ≤ allowance, and s at most what Cg allows. On the estimate the factor is least·sigmas/2; on a bound at
  * `p` it is the tolerance factor t(p; n − 1, √n·least·sigmas/2)/√n of the noncentral t distribution, and the spread that
@@ -50,12 +63,8 @@ export const index: RuleDescriptor<'index'> = {
   refusesOutside: (rule, n) => (rule.alpha === undefined ? null : band(rule, n, rule.alpha)),
   referenceUncertainty: () => 0,
   margin: allowance,
-  // A gauge whose true indices are at least those asked for.
   largestSpread: (rule, bias) =>
-    Math.min(
-      (allowance(rule) - Math.abs(bias)) / halfSpread(rule),
-      rule.leastCg === undefined ? Infinity : (2 * allowance(rule)) / (rule.leastCg * rule.sigmas),
-    ),
+    rule.alpha === undefined ? spreadAtLeast(rule, bias) : marginOfSafety * spreadAtLeast(rule, bias),
   stricter: (rule) => (rule.alpha === undefined ? null : { ...rule, alpha: rule.alpha / 2 }),
   powerOf: 'meets',
 }

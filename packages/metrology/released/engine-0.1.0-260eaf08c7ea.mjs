@@ -10369,6 +10369,11 @@ function rootSumOfSquares(a, b) {
 // packages/metrology/src/rules/capability-index.ts
 var allowance = ({ share, toleranceWidth: toleranceWidth2 }) => share * toleranceWidth2 / 2;
 var halfSpread = ({ least, sigmas }) => least * sigmas / 2;
+var spreadAtLeast = (rule, bias2) => Math.min(
+  (allowance(rule) - Math.abs(bias2)) / halfSpread(rule),
+  rule.leastCg === void 0 ? Infinity : 2 * allowance(rule) / (rule.leastCg * rule.sigmas)
+);
+var marginOfSafety = 0.9;
 function band(rule, n, p) {
   const half = halfSpread(rule);
   const factor = p === null ? half : noncentralTQuantile(p, n - 1, Math.sqrt(n) * half) / Math.sqrt(n);
@@ -10394,11 +10399,7 @@ var index = {
   refusesOutside: (rule, n) => rule.alpha === void 0 ? null : band(rule, n, rule.alpha),
   referenceUncertainty: () => 0,
   margin: allowance,
-  // A gauge whose true indices are at least those asked for.
-  largestSpread: (rule, bias2) => Math.min(
-    (allowance(rule) - Math.abs(bias2)) / halfSpread(rule),
-    rule.leastCg === void 0 ? Infinity : 2 * allowance(rule) / (rule.leastCg * rule.sigmas)
-  ),
+  largestSpread: (rule, bias2) => rule.alpha === void 0 ? spreadAtLeast(rule, bias2) : marginOfSafety * spreadAtLeast(rule, bias2),
   stricter: (rule) => rule.alpha === void 0 ? null : { ...rule, alpha: rule.alpha / 2 },
   powerOf: "meets"
 };
