@@ -1,5 +1,5 @@
 import type { IncentiveChange } from '@evenrule/metrology'
-import { formatChance } from '../format'
+import { formatChance, formatShare } from '../format'
 
 /** What is changed to see whether a clause rewards the right thing. */
 export const incentiveWords: Record<IncentiveChange, string> = {
@@ -24,6 +24,17 @@ export interface IncentiveSentence {
   wrong: boolean
 }
 
+/** Both chances, with as many places as it takes to see that they differ. */
+function writeChances(before: number, after: number): string {
+  const plain = [before, after].map(formatChance)
+  if (before === after || plain[0] !== plain[1]) return plain.join(' → ')
+  for (let digits = 1; digits <= 6; digits += 1) {
+    const pair = [before, after].map((chance) => formatShare(chance, { digits }))
+    if (pair[0] !== pair[1]) return pair.join(' → ')
+  }
+  return plain.join(' → ')
+}
+
 /** The effect of one change in words; chances that differ by less than a billionth count as equal. */
 export function describeIncentive(change: IncentiveChange, before: number, after: number): IncentiveSentence {
   const difference = after - before
@@ -35,7 +46,7 @@ export function describeIncentive(change: IncentiveChange, before: number, after
   }[direction]
   return {
     change: incentiveWords[change],
-    effect: `${words}: ${formatChance(before)} → ${formatChance(after)}`,
+    effect: `${words}: ${writeChances(before, after)}`,
     wrong: direction !== 'same' && direction !== soundDirection[change],
   }
 }
