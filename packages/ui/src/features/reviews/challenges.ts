@@ -1,4 +1,4 @@
-import type { reviews} from '@evenrule/api/contract';
+import type { reviews } from '@evenrule/api/contract'
 import { type Permission, type Side, type submissions } from '@evenrule/api/contract'
 import { clausesConcerned, sameTarget, type ChallengeTarget } from '@evenrule/api/contract/challenge-targets'
 import { challengeMoves, isUnsettled, type ChallengeState } from '@evenrule/api/contract/moves/challenge'
