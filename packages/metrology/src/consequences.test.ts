@@ -16,6 +16,17 @@ const equivalence: Clause = {
   parameters: { margin: { base: 'tolerance', share: 0.05 }, confidence: 0.95 },
 }
 const zeroTest: Clause = { type: 'bias-zero-test', parameters: { alpha: 0.05 } }
+const uncertain: Clause = {
+  type: 'bias-with-uncertainty',
+  parameters: { margin: { base: 'tolerance', share: 0.05 }, coverageFactor: 2 },
+}
+const index = (leastCgk: number): Clause => ({
+  type: 'bias-index',
+  parameters: {
+    ...{ share: 0.2, base: 'tolerance', sigmas: 6, leastCg: null, leastCgk },
+    ...{ basis: 'bound', confidence: 0.95 },
+  },
+})
 const readingsAgreed: Clause = {
   type: 'design-minimum',
   parameters: { readings: 15, registeredBeforehand: true },
@@ -129,6 +140,18 @@ describe('what would settle a clause that is not shown', () => {
     ['estimate-beyond-margin', submitted(wide.map((reading) => reading + 0.012))],
     ['estimate-too-near-margin', submitted(wide.map((reading) => Number((reading + 0.00839999).toFixed(8))))],
     ['margin-undefined', { ...submitted(wide), tolerance: { upper: 10.1 } }],
+    ['standard-uncertainty', { ...submitted(wide), clause: uncertain }],
+    ['more-readings', { ...submitted(wide, { standardUncertainty: 0.0002 }), clause: uncertain }],
+    ['better-standard', { ...submitted(wide, { standardUncertainty: 0.005 }), clause: uncertain }],
+    ['more-readings', { ...submitted(wide), clause: index(0.3) }],
+    ['index-below-least', { ...submitted(wide), clause: index(0.6) }],
+    [
+      'document',
+      {
+        ...submitted(wide),
+        clause: { type: 'by-hand', parameters: { subject: 'linearity', measure: 'slope', asks: 'a slope' } },
+      },
+    ],
     [
       'not-an-equivalence',
       {

@@ -75,9 +75,28 @@ describe('clauses for a scope', () => {
 
   it('are flagged for class safety where they rest on a zero-difference test', () => {
     expect(safetyFlags([share, zeroTest], [bore, safety])).toEqual([
-      { clause: 1, code: 'zero-difference', characteristicIds: ['safety'] },
+      { clause: 1, code: 'zero-difference', count: 1, characteristicIds: ['safety'] },
     ])
     expect(safetyFlags([zeroTest], [bore])).toEqual([])
     expect(safetyFlags([within({ base: 'tolerance', share: 0.05 })], [safety])).toEqual([])
+  })
+
+  it('are flagged for class safety where they rest on a point estimate, an index by the basis it names', () => {
+    const point: Clause = {
+      type: 'bias-point',
+      parameters: { margin: { base: 'tolerance', share: 0.05 } },
+    }
+    const index = (basis: 'estimate' | 'bound'): Clause => ({
+      type: 'bias-index',
+      parameters: {
+        ...{ share: 0.2, base: 'tolerance', sigmas: 6, leastCg: 1.33, leastCgk: 1.33, confidence: 0.95 },
+        basis,
+      },
+    })
+    const flags = safetyFlags([point, index('estimate'), index('bound')], [safety])
+    expect(flags.map(({ clause, code }) => [clause, code])).toEqual([
+      [0, 'point-estimate'],
+      [1, 'point-estimate'],
+    ])
   })
 })
