@@ -7,4 +7,5 @@ export default [
     name: 'agreement',
     component: () => import('../views/AgreementPage.vue'),
   },
+  { path: 'criteria', name: 'criteria', component: () => import('../views/AppliesPage.vue') },
 ] satisfies RouteRecordRaw[]

@@ -117,6 +117,8 @@ export const proposeWords = {
   searchCharacteristic: 'Type its name',
   noCharacteristic: 'No characteristic of the current revision is found.',
   begin: 'Begin the proposal',
+  fromHouseTerms: (number: number) =>
+    `It starts with the clauses and terms of house terms ${number}; you can change them before you send it.`,
   beginHint: 'It begins as a draft that only your side sees.',
 } as const
 

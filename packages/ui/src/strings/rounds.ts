@@ -32,8 +32,11 @@ export const conflictWords = {
   onlyMine: 'only you changed it',
   bothChanged: 'both changed it',
   unreadable: 'not complete yet',
-  effectiveOn: 'First day in force',
-  comment: 'Comment to the other side',
+  texts: {
+    effectiveOn: 'First day in force',
+    comment: 'Comment to the other side',
+    words: 'Why they are so',
+  } as Record<string, string | undefined>,
   choose: (what: string) => `Which counts: ${what}`,
 } as const
 

@@ -1,4 +1,4 @@
-import type { ResolvedTerms, TermField, TermValue } from '@evenrule/api/contract'
+import type { TermField } from '@evenrule/api/contract'
 import { formatCount } from '../format'
 import { several } from './agreements'
 
@@ -58,13 +58,16 @@ export const termWords = {
   monthsProblem: 'Enter whole months from 1 to 120, or leave it empty.',
 } as const
 
-/** The value of one term for reading; null is what is not said. */
-export function describeTerm(field: TermField, value: TermValue): string {
+/** The value of any term; null is what is not said. */
+type Value = number | string | boolean | null
+
+/** The value of one term for reading. */
+export function describeTerm(field: TermField, value: Value): string {
   if (value === null) return termWords.notSaid
   if (field === 'validityMonths') return formatCount(Number(value), 'month')
   return termChoices[field]?.[String(value)] ?? String(value)
 }
 
 /** The same where nothing is left open: no validity means no time limit. */
-export const describeResolvedTerm = (field: TermField, value: ResolvedTerms[TermField]): string =>
+export const describeResolvedTerm = (field: TermField, value: Value): string =>
   field === 'validityMonths' && value === null ? termWords.neverExpires : describeTerm(field, value)

@@ -17,7 +17,7 @@ export function pieceTitle({ key, mine, theirs, base }: MergeRow): string {
   }
   const term = termOfPiece(key)
   if (term) return termLabels[term]
-  return key === 'effectiveOn' ? words.effectiveOn : words.comment
+  return words.texts[key] ?? key
 }
 
 /** The value of a piece in words, also where a clause cannot be read yet. */

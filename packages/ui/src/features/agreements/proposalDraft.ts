@@ -4,6 +4,7 @@ import {
   clauseDescriptors,
   clauseKey,
   clauseTypes,
+  parseClause,
   units,
   type Clause,
   type ClauseType,
@@ -20,10 +21,14 @@ export interface TypedClause {
   parameters: ClauseDraft
 }
 
-/** A proposal as typed. */
-export interface TypedProposal {
+/** Clauses and terms as typed: what proposals and house terms have in common. */
+export interface TypedCriteria {
   clauses: TypedClause[]
   terms: TypedTerms
+}
+
+/** A proposal as typed. */
+export interface TypedProposal extends TypedCriteria {
   effectiveOn: string
   comment: string
 }
@@ -71,6 +76,10 @@ export const startingTypes: readonly ClauseType[] = [
   'calibration-in-date',
   'design-minimum',
 ]
+
+/** The same clauses as they are stored. */
+export const usualClauses = (): Clause[] =>
+  startingTypes.map((type) => parseClause(readTypedClause(typedClause(type))))
 
 /** The clauses typed so far that can be read, and what is wrong with the others by path in the form. */
 export function readTyped(typed: readonly TypedClause[]): {

@@ -1,7 +1,7 @@
 import { noTerms } from '@evenrule/api/contract'
 import { describe, expect, it } from 'vitest'
 import { typedClause, typedClauses, type TypedProposal } from './proposalDraft'
-import { piecesOf, proposalOf } from './proposalPieces'
+import { fromPieces, piecesOf } from './proposalPieces'
 import { pieceText, pieceTitle } from './pieceText'
 import { design, equivalence } from './rooms.fixture'
 import { readTerms, typedTerms } from './typedTerms'
@@ -15,11 +15,11 @@ const proposal: TypedProposal = {
 
 describe('a proposal in pieces', () => {
   it('is the same when it is put together again', () =>
-    expect(proposalOf(piecesOf(proposal))).toEqual(proposal))
+    expect(fromPieces(piecesOf(proposal), proposal)).toEqual(proposal))
 
   it('keeps two clauses apart that cannot be read yet', () => {
     const two = { ...proposal, clauses: [typedClause('by-hand'), typedClause('by-hand')] }
-    expect(proposalOf(piecesOf(two)).clauses).toHaveLength(2)
+    expect(fromPieces(piecesOf(two), two).clauses).toHaveLength(2)
   })
 
   it('says every piece in words, also one that is not complete', () => {

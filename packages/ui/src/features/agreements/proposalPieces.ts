@@ -1,13 +1,13 @@
 import { termFields, type TermField } from '@evenrule/api/contract'
 import type { Pieces } from './merging'
-import { keyOfTyped, type TypedClause, type TypedProposal } from './proposalDraft'
+import { keyOfTyped, type TypedClause, type TypedCriteria } from './proposalDraft'
 import { typedTerms } from './typedTerms'
 
 const clausePrefix = 'clause:'
 const termPrefix = 'term:'
 
-/** A proposal as typed, piece by piece; two clauses that cannot be read yet stay two. */
-export function piecesOf({ clauses, terms, effectiveOn, comment }: TypedProposal): Pieces {
+/** What is typed, piece by piece; two clauses that cannot be read yet stay two. */
+export function piecesOf<T extends TypedCriteria>({ clauses, terms, ...texts }: T): Pieces {
   const pieces: Record<string, unknown> = {}
   for (const clause of clauses) {
     const key = clausePrefix + keyOfTyped(clause)
@@ -16,24 +16,22 @@ export function piecesOf({ clauses, terms, effectiveOn, comment }: TypedProposal
     pieces[free] = clause
   }
   for (const field of termFields) pieces[termPrefix + field] = terms[field]
-  return { ...pieces, effectiveOn, comment }
+  return { ...pieces, ...texts }
 }
 
-/** The proposal that the pieces make up. */
-export function proposalOf(pieces: Pieces): TypedProposal {
+/** What the pieces make up; texts that are no piece any more stay as in `like`. */
+export function fromPieces<T extends TypedCriteria>(pieces: Pieces, like: T): T {
   const clauses = Object.entries(pieces)
-    .filter(([key]) => key.startsWith(clausePrefix))
+    .filter(([key]) => isClausePiece(key))
     .map(([, clause]) => clause as TypedClause)
   const said = termFields.flatMap((field) => {
     const text = pieces[termPrefix + field]
     return typeof text === 'string' ? [[field, text] as const] : []
   })
-  return {
-    clauses,
-    terms: { ...typedTerms(), ...Object.fromEntries(said) },
-    effectiveOn: pieces.effectiveOn as string,
-    comment: pieces.comment as string,
-  }
+  const texts = Object.fromEntries(
+    Object.entries(pieces).filter(([key]) => !isClausePiece(key) && !termOfPiece(key)),
+  )
+  return { ...like, ...texts, clauses, terms: { ...typedTerms(), ...Object.fromEntries(said) } }
 }
 
 /** The field of terms that a piece is, where it is one. */

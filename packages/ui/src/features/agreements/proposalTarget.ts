@@ -2,6 +2,7 @@ import type { agreements } from '@evenrule/api/contract'
 import { ownDraft, standingRound } from './negotiation'
 import { dayAfter, typedClauses, type TypedProposal } from './proposalDraft'
 import { typedTerms } from './typedTerms'
+import type { Snapshot } from './useConcurrent'
 
 type Version = agreements.AgreementVersion
 
@@ -43,21 +44,13 @@ export function proposalTarget(
     : { kind: 'answer', version, initial, caseOf }
 }
 
-/** What a proposal was begun from: the row that must still stand as it did, and what it said. */
-export interface Basis {
-  kind: ProposalTarget['kind']
-  rowVersion: number | null
-  typed: TypedProposal
+/** What a proposal stands upon: the row that must still be as it was, and what it says. */
+export function snapshotOf(target: ProposalTarget): Snapshot<TypedProposal> {
+  const { initial: typed } = target
+  if (target.kind === 'draft') {
+    const { rowVersion, by, savedAt } = target.round
+    return { kind: 'draft', rowVersion, typed, by, savedAt }
+  }
+  const rowVersion = target.kind === 'answer' ? target.version.rowVersion : null
+  return { kind: target.kind, rowVersion, typed, by: undefined, savedAt: null }
 }
-
-export function basisOf(target: ProposalTarget): Basis {
-  const rowVersion =
-    target.kind === 'draft'
-      ? target.round.rowVersion
-      : target.kind === 'answer'
-        ? target.version.rowVersion
-        : null
-  return { kind: target.kind, rowVersion, typed: target.initial }
-}
-
-export const sameBasis = (a: Basis, b: Basis): boolean => a.kind === b.kind && a.rowVersion === b.rowVersion

@@ -4,7 +4,7 @@ import { defineComponent, h, nextTick, shallowRef } from 'vue'
 import { useForm, type Form } from '../../forms'
 import { clearDrafts } from '../../forms/drafts'
 import type { TypedProposal } from './proposalDraft'
-import { proposalTarget, type ProposalTarget } from './proposalTarget'
+import { proposalTarget, snapshotOf, type ProposalTarget } from './proposalTarget'
 import { agreement, design, equivalence, resolution, round, version } from './rooms.fixture'
 import { useConcurrent } from './useConcurrent'
 
@@ -25,7 +25,7 @@ function draftTarget(rowVersion: number, readings: number, comment = ''): Propos
 function room(first: ProposalTarget) {
   const target = shallowRef(first)
   let form!: Form<TypedProposal>
-  let concurrent!: ReturnType<typeof useConcurrent>
+  let concurrent!: ReturnType<typeof useConcurrent<TypedProposal>>
   const wrapper = mount(
     defineComponent({
       setup() {
@@ -34,7 +34,7 @@ function room(first: ProposalTarget) {
           storageKey: 'room',
           submit: async () => undefined,
         })
-        concurrent = useConcurrent(() => target.value, form, 'room')
+        concurrent = useConcurrent(() => snapshotOf(target.value), form, 'room')
         return () => h('div')
       },
     }),

@@ -3,36 +3,52 @@ import type { Form } from '../../forms'
 import { readDraft, writeDraft } from '../../forms/drafts'
 import { copy } from '../../forms/paths'
 import { differingPieces, mergedPieces, type Choice } from './merging'
-import type { TypedProposal } from './proposalDraft'
-import { piecesOf, proposalOf } from './proposalPieces'
-import { basisOf, sameBasis, type Basis, type ProposalTarget } from './proposalTarget'
+import type { TypedCriteria } from './proposalDraft'
+import { fromPieces, piecesOf } from './proposalPieces'
 
-const isBasis = (value: unknown): value is Basis =>
+/** What stands on the server, as the form offers it, and what must still be so when it is saved. */
+export interface Snapshot<T> {
+  kind: string
+  rowVersion: number | null
+  typed: T
+  /** Who of one's own side saved it; undefined where the other side's round is meant. */
+  by: string | null | undefined
+  savedAt: string | null
+}
+
+const isSnapshot = <T>(value: unknown): value is Snapshot<T> =>
   typeof value === 'object' && value !== null && 'rowVersion' in value && 'typed' in value
+const sameRow = (a: Snapshot<unknown>, b: Snapshot<unknown>): boolean =>
+  a.kind === b.kind && a.rowVersion === b.rowVersion
 
 /**
  * Two people on one round. Beside what is typed the form keeps what it was begun from, also across a reload; when what
  * stands on the server is no longer that, both are shown side by side, and nothing is saved before one has chosen.
  */
-export function useConcurrent(target: () => ProposalTarget, form: Form<TypedProposal>, storageKey: string) {
+export function useConcurrent<T extends TypedCriteria>(
+  current: () => Snapshot<T>,
+  form: Form<T>,
+  storageKey: string,
+) {
   const basisKey = `${storageKey}.basis`
   const kept = readDraft(basisKey)
-  const basis = shallowRef<Basis>(form.restored.value && isBasis(kept) ? kept : basisOf(target()))
-  /** What somebody else saved meanwhile, as the form would have offered it. */
-  const theirs = shallowRef<ProposalTarget>()
+  const basis = shallowRef<Snapshot<T>>(form.restored.value && isSnapshot<T>(kept) ? kept : current())
+  /** What somebody else saved meanwhile. */
+  const theirs = shallowRef<Snapshot<T>>()
   const ownSaving = ref(false)
 
   const rows = computed(() => {
     const other = theirs.value
     return other
-      ? differingPieces(piecesOf(basis.value.typed), piecesOf(other.initial), piecesOf(form.values))
+      ? differingPieces(piecesOf(basis.value.typed), piecesOf(other.typed), piecesOf(form.values))
       : []
   })
 
   /** Takes up what stands now: silently where only one's own changes differ, else to be chosen between. */
-  function meet(next: ProposalTarget) {
-    if (sameBasis(basis.value, basisOf(next))) return
+  function meet(next: Snapshot<T>) {
+    if (sameRow(basis.value, next)) return
     theirs.value = next
+    if (!form.dirty.value) return settle(next.typed)
     if (rows.value.some(({ changedBy }) => changedBy !== 'mine')) {
       form.problem.value = undefined
       return
@@ -40,26 +56,31 @@ export function useConcurrent(target: () => ProposalTarget, form: Form<TypedProp
     settle(copy(toRaw(form.values)))
   }
 
-  function settle(typed: TypedProposal) {
+  function settle(typed: T) {
     const next = theirs.value
     if (!next) return
     theirs.value = undefined
-    basis.value = basisOf(next)
-    form.reset(next.initial)
+    basis.value = next
+    form.reset(next.typed)
     Object.assign(form.values, typed)
   }
 
-  watch(target, (next) => {
+  watch(current, (next) => {
     if (ownSaving.value) {
       ownSaving.value = false
-      basis.value = basisOf(next)
+      basis.value = next
     } else meet(next)
   })
   watch([form.dirty, basis], ([dirty]) => writeDraft(basisKey, dirty ? basis.value : undefined), {
     immediate: true,
     flush: 'post',
   })
-  meet(target())
+  meet(current())
+
+  function joined(other: T, choices: Readonly<Record<string, Choice>>): T {
+    const mine = copy(toRaw(form.values))
+    return fromPieces(mergedPieces(piecesOf(other), piecesOf(mine), choices), mine)
+  }
 
   return {
     basis,
@@ -69,8 +90,7 @@ export function useConcurrent(target: () => ProposalTarget, form: Form<TypedProp
     ownSave: () => (ownSaving.value = true),
     choose(choices: Readonly<Record<string, Choice>>) {
       const other = theirs.value
-      if (other)
-        settle(proposalOf(mergedPieces(piecesOf(other.initial), copy(piecesOf(form.values)), choices)))
+      if (other) settle(joined(other.typed, choices))
     },
   }
 }

@@ -7,7 +7,7 @@ import { editorWords as words } from '../../strings/agreementActs'
 import { useHere } from '../common'
 import { standingRound } from './negotiation'
 import { readTyped, type TypedProposal } from './proposalDraft'
-import { proposalKey, type ProposalTarget } from './proposalTarget'
+import { proposalKey, snapshotOf, type ProposalTarget } from './proposalTarget'
 import { readTerms } from './typedTerms'
 import { useConcurrent } from './useConcurrent'
 
@@ -93,7 +93,7 @@ export function useProposalForm(
       on.saved(answer, sending.value)
     },
   })
-  const concurrent = useConcurrent(() => source().target, form, storageKey)
+  const concurrent = useConcurrent(() => snapshotOf(source().target), form, storageKey)
 
   return {
     form,

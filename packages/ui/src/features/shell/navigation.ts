@@ -4,6 +4,8 @@ import { navigationWords as words } from '../../strings/navigation'
 interface Counts {
   waiting: number
   agreements: number
+  /** Open requests of this side. */
+  requests: number
   messages: number
 }
 
@@ -24,10 +26,12 @@ export const supplierNavigation: Navigation = (at, counts) => ({
     { to: at(), label: words.waiting, count: counts.waiting, exact: true },
     { to: at('relationships'), label: words.customers },
     { to: at('parts'), label: words.parts, also: [at('tasks')] },
+    { to: at('requests'), label: words.requests, count: counts.requests },
     { to: at('studies'), label: words.studies },
     { to: at('submissions'), label: words.submissions },
     { to: at('gauges'), label: words.gauges, also: [at('standards')] },
-    { to: at('agreements'), label: words.agreements, count: counts.agreements },
+    { to: at('agreements'), label: words.agreements, count: counts.agreements, also: [at('criteria')] },
+    { to: at('house-terms'), label: words.houseTerms },
     { to: at('record'), label: words.record },
   ],
   own: ownItems(at, counts),
@@ -38,7 +42,9 @@ export const customerNavigation: Navigation = (at, counts) => ({
     { to: at(), label: words.decisions, count: counts.waiting, exact: true },
     { to: at('relationships'), label: words.suppliers },
     { to: at('parts'), label: words.parts, also: [at('tasks')] },
-    { to: at('agreements'), label: words.agreements, count: counts.agreements },
+    { to: at('agreements'), label: words.agreements, count: counts.agreements, also: [at('criteria')] },
+    { to: at('house-terms'), label: words.houseTerms },
+    { to: at('requests'), label: words.requests },
     { to: at('submissions'), label: words.submissions },
     { to: at('record'), label: words.record },
   ],
