@@ -40,6 +40,19 @@ describe('bands of chances', () => {
     expect(drawn.bands.find(({ name }) => name === 'not-shown')!.label).toBeNull()
   })
 
+  it('too narrow for their name have it above the plot, with a leader into them', () => {
+    const narrow = points.map(({ x }) => {
+      const meets = x < 2 ? 1 : 0
+      const notShown = x >= 2 && x < 2.15 ? 1 : 0
+      return { x, meets, notShown, fallsShort: 1 - meets - notShown }
+    })
+    const drawn = layoutBands({ points: narrow, width: 500, height: 240, words, yFormat })!
+    const label = drawn.bands.find(({ name }) => name === 'not-shown')!.label!
+    expect(label.y).toBeLessThan(drawn.top)
+    expect(label.to!.y).toBeGreaterThan(drawn.top)
+    expect(label.to!.x).toBeCloseTo(drawn.x.scale.at(2), 0)
+  })
+
   it('are nothing without points', () => {
     expect(layoutBands({ points: [], width: 500, height: 240, words, yFormat })).toBeNull()
   })

@@ -18,6 +18,14 @@ export interface BandsInput {
   yFormat: (value: number) => string
 }
 
+/** A name inside its band, or above the plot with a leader down to `to` where it fits nowhere inside. */
+export interface BandLabel {
+  x: number
+  y: number
+  text: string
+  to: { x: number; y: number } | null
+}
+
 export interface BandsLayout {
   left: number
   right: number
@@ -25,7 +33,7 @@ export interface BandsLayout {
   bottom: number
   x: Axis
   y: Axis
-  bands: { name: BandName; path: string; label: { x: number; y: number; text: string } | null }[]
+  bands: { name: BandName; path: string; label: BandLabel | null }[]
 }
 
 const names: readonly BandName[] = ['meets', 'not-shown', 'falls-short']
@@ -64,26 +72,32 @@ export function layoutBands({ points, width, height, words, yFormat }: BandsInpu
   return { left, right, top, bottom, x, y, bands }
 }
 
-/** The place inside a band where its name has most room; null where it fits nowhere. */
+const leastRoom = 18
+const visible = 6
+
+/** The place inside a band where its name has most room, else above the plot; null where there is hardly a band. */
 function labelIn(
   lower: { x: number; y: number }[],
   upper: { x: number; y: number }[],
   text: string,
   left: number,
   right: number,
-): { x: number; y: number; text: string } | null {
+): BandLabel | null {
   const half = textWidth(text, size) / 2 + 4
-  let best: { room: number; x: number; y: number } | null = null
-  for (const { x } of lower) {
+  let inside: { room: number; x: number; y: number } | null = null
+  let widest: { room: number; x: number; y: number } | null = null
+  for (const [at, { x, y }] of lower.entries()) {
+    const top = upper[at]!.y
+    if (!widest || y - top > widest.room) widest = { room: y - top, x, y: (y + top) / 2 }
     if (x - half < left || x + half > right) continue
-    const under = lower
-      .map((point, index) => ({ point, above: upper[index]! }))
-      .filter(({ point }) => Math.abs(point.x - x) <= half)
-    const floor = Math.min(...under.map(({ point }) => point.y))
-    const ceiling = Math.max(...under.map(({ above }) => above.y))
+    const under = [...lower.keys()].filter((index) => Math.abs(lower[index]!.x - x) <= half)
+    const floor = Math.min(...under.map((index) => lower[index]!.y))
+    const ceiling = Math.max(...under.map((index) => upper[index]!.y))
     const room = floor - ceiling
-    const middle = (floor + ceiling) / 2
-    if (room > 18 && (!best || room > best.room)) best = { room, x, y: middle + 4 }
+    if (room > leastRoom && (!inside || room > inside.room)) inside = { room, x, y: (floor + ceiling) / 2 }
   }
-  return best && { x: best.x, y: best.y, text }
+  if (inside) return { x: inside.x, y: inside.y + 4, text, to: null }
+  if (!widest || widest.room < visible) return null
+  const x = Math.min(Math.max(widest.x, left + half), right - half)
+  return { x, y: 14, text, to: { x: widest.x, y: widest.y } }
 }

@@ -18,6 +18,8 @@ export interface CurveInput {
   pointer?: { x: number; label: string } | null
   /** Tints the area from the left end, or from minus to plus the pointer, up to it. */
   zone?: boolean
+  /** A value on the x axis that is marked by a slide: names keep clear of it. */
+  slide?: number | null
   /** A horizontal limit. */
   limit?: { y: number; label: string } | null
   xFormat?: (value: number, places: number) => string
@@ -101,6 +103,8 @@ export function layoutCurves(input: CurveInput): CurveLayout | null {
     labelX: pointerX + (anchor === 'start' ? 9 : -9),
   }
   const taken: Box[] = pointer ? [{ x: pointer.x - 4, y: top - 14, width: 8, height: bottom - top + 14 }] : []
+  if (input.slide != null)
+    taken.push({ x: x.scale.at(input.slide) - 5, y: top, width: 10, height: bottom - top })
   const limit = input.limit && { y: y.scale.at(input.limit.y), label: input.limit.label }
   if (limit) {
     const width = textWidth(limit.label, 11)

@@ -25,7 +25,7 @@ export function changeLines(changed: Changed, unit: string): string[] {
   return [
     ...(leftOut.length ? [words.change.leftOut(writeNumbers(leftOut), leftOut.length)] : []),
     ...(referenceValue
-      ? [words.change.reference(exact(referenceValue.before, unit), exact(referenceValue.after, unit))]
+      ? [words.change.reference(...exact(referenceValue.before, referenceValue.after, unit))]
       : []),
     ...(tolerance
       ? [words.change.limits(limits(tolerance.before, unit), limits(tolerance.after, unit))]
