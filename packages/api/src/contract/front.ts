@@ -1,6 +1,6 @@
 import { z } from 'zod'
 import { characteristicClass } from './characteristics'
-import { instant, organisationParams, pageOf, pageQuery, sortBy, uuid } from './common'
+import { calendarDate, instant, organisationParams, pageOf, pageQuery, sortBy, uuid } from './common'
 import { defineEndpoint } from './define'
 import { proofStates } from './proof'
 import { verdictSchema } from './submission-content'
@@ -17,6 +17,8 @@ export const readCounts = defineEndpoint({
     waiting: count,
     /** Agreements that wait for this side's answer or signature. */
     agreements: count,
+    /** Requests that wait for this side: the supplier's open ones. */
+    requests: count,
     /** Messages this person has not read. */
     messages: count,
   }),
@@ -28,6 +30,11 @@ export const waitingActs = [
   'decide',
   'confirm-as-second-person',
   'answer-challenge',
+  'agree-unresolved',
+  'agree-one-off',
+  'report-condition',
+  'confirm-condition',
+  'answer-request',
   'sign-submission',
   'finish-submission',
   'sign-criteria',
@@ -40,11 +47,14 @@ export type WaitingAct = (typeof waitingActs)[number]
 
 export const waitingSchema = z.object({
   act: z.enum(waitingActs),
-  /** Id of the submission, agreement, study or part. */
+  /** Id of the submission, agreement, study, part or request. */
   id: uuid,
   since: instant,
   /** Calendar days, in this organisation's time zone. */
   ageDays: z.number().int(),
+  /** The day by which it is asked for, and how many days are left in the relationship's calendar; negative after it. */
+  dueOn: calendarDate.nullable(),
+  daysLeft: z.number().int().nullable(),
   /** The organisation on the other side; null where none is concerned. */
   partner: z.string().nullable(),
   /** Number of the agreement, code of the study. */
@@ -65,7 +75,7 @@ export const waitingSchema = z.object({
   verdict: verdictSchema.nullable(),
   clausesMet: count.nullable(),
   clausesTotal: count.nullable(),
-  /** How many characteristics wait to be confirmed, readings to be taken. */
+  /** How many characteristics wait to be confirmed, readings to be taken, tasks to be answered. */
   count: count.nullable(),
 })
 export type Waiting = z.output<typeof waitingSchema>
@@ -77,11 +87,12 @@ export const listWaiting = defineEndpoint({
   params: organisationParams,
   query: pageQuery.extend({ sort: sortBy(['since']) }),
   response: pageOf(waitingSchema).extend({
-    /** Over all pages: days the oldest has waited, and how many concern a safety characteristic. */
+    /** Over all pages: days the oldest has waited, how many are overdue or concern a safety characteristic. */
     oldestDays: count,
+    overdue: count,
     safety: count,
   }),
-  summary: 'What waits for this side, the longest first.',
+  summary: 'What waits for this side: what is overdue first, then the longest.',
 })
 
 export const coveredPartSchema = z.object({

@@ -25,7 +25,8 @@ export const frontWords = {
         ? 'Nothing waits on us'
         : `${numerals[total] ?? total} ${total === 1 ? 'thing waits' : 'things wait'} on us`,
     coverage: 'How much of what we supply stands on accepted proof',
-    nothing: 'Studies to take, submissions to sign, challenges and proposals to answer appear here.',
+    nothing:
+      'Proof you are asked for, studies to take, submissions to sign, challenges and proposals to answer appear here.',
   },
   customer: {
     question: (total: number) =>
@@ -35,12 +36,16 @@ export const frontWords = {
     coverage: 'How much of what we buy stands on accepted proof',
     nothing: 'Submissions to decide on, proposals to answer and criteria to sign appear here.',
   },
+  overdue: (count: number) =>
+    count === 0 ? '' : count === 1 ? 'One is overdue.' : `${numerals[count] ?? count} are overdue.`,
+  dueOn: 'Due',
+  asked: 'named in the request',
   oldest: (age: number) => `The oldest has waited ${age === 0 ? 'since today' : formatCount(age, 'day')}.`,
   safety: (count: number) =>
     count === 0
       ? ''
       : `${count === 1 ? 'One concerns' : `${numerals[count] ?? count} concern`} a safety characteristic.`,
-  waitingCaption: 'What waits, the longest first',
+  waitingCaption: 'What waits: what is overdue first, then the longest',
   age: 'Waiting',
   days,
   what: 'What',
@@ -56,6 +61,11 @@ export const frontWords = {
     decide: 'Decide',
     'confirm-as-second-person': 'Confirm as second person',
     'answer-challenge': 'Answer the challenge',
+    'agree-unresolved': 'Agree to leave it unresolved',
+    'agree-one-off': 'Agree to the one-off acceptance',
+    'report-condition': 'Fulfil the condition',
+    'confirm-condition': 'Confirm the condition',
+    'answer-request': 'Answer the request',
     'sign-submission': 'Sign the submission',
     'finish-submission': 'Finish the draft',
     'sign-criteria': 'Sign criteria',
@@ -64,16 +74,21 @@ export const frontWords = {
     'take-readings': 'Take the readings',
     'confirm-characteristics': 'Confirm characteristics',
   } satisfies Record<front.WaitingAct, string>,
+  request: (number: string | null) => `request ${number ?? ''}`,
+  condition: (number: string | null, gauge: string) => `no. ${number ?? ''} of ${gauge}`,
   agreement: (number: string | null) => (number === null ? '' : `agreement ${number}`),
   study: (code: string, gauge: string) =>
     code.includes(gauge) ? `study ${code}` : `study ${code}, ${gauge}`,
   counted: {
+    'answer-request': (count: number) => formatCount(count, 'measuring task'),
     'take-readings': (count: number) => formatCount(count, 'reading'),
     'confirm-characteristics': (count: number) => formatCount(count, 'characteristic'),
     'answer-proposal': (count: number) => formatCount(count, 'clause'),
     'finish-proposal': (count: number) => formatCount(count, 'clause'),
     'sign-criteria': (count: number) => formatCount(count, 'clause'),
   } as Partial<Record<front.WaitingAct, (count: number) => string>>,
+  requests: 'Which proof we asked for and do not have yet',
+  allRequests: (open: number) => `All ${open} open`,
   part: 'Part',
   characteristics: 'Characteristics',
   covered: 'Covered',

@@ -6,7 +6,7 @@ import { useApi } from '../../session/client'
 
 type Counts = AnswerOf<typeof front.readCounts>
 
-const none: Counts = { waiting: 0, agreements: 0, messages: 0 }
+const none: Counts = { waiting: 0, agreements: 0, requests: 0, messages: 0 }
 
 /** What waits, in numbers, for the navigation. */
 export const useCountsStore = defineStore('counts', () => {

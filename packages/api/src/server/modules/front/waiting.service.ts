@@ -28,6 +28,7 @@ export async function listOfWaiting(tenant: Tenant, query: QueryOf<typeof listWa
     items: rows.map((row) => asAnswer(row, age(row.since))),
     total: first?.total ?? 0,
     safety: first?.safetyTotal ?? 0,
+    overdue: first?.overdueTotal ?? 0,
     oldestDays: first ? age(first.oldest) : 0,
     page: query.page,
     size: query.size,

@@ -1,0 +1,7 @@
+import type { RouteRecordRaw } from 'vue-router'
+
+export default [
+  { path: 'requests', name: 'requests', component: () => import('../views/RequestsPage.vue') },
+  { path: 'requests/new', name: 'new-request', component: () => import('../views/NewRequestPage.vue') },
+  { path: 'requests/:requestId', name: 'request', component: () => import('../views/RequestPage.vue') },
+] satisfies RouteRecordRaw[]
