@@ -147,6 +147,8 @@ export const decisionWords = {
     'decline-one-off': 'Why you do not agree',
   } satisfies Record<ActName, string>,
   sayWhy: 'Say why.',
+  /** In place of the moves, where the same reason keeps several back. */
+  cannotDecide: 'You cannot decide on it yet:',
   secondPerson: (name: string | null) =>
     name === null
       ? 'Somebody has decided to accept it. On a safety-class characteristic that counts only once a second person confirms.'

@@ -4,8 +4,10 @@ import { clausesConcerned, sameTarget, type ChallengeTarget } from '@evenrule/ap
 import { challengeMoves, isUnsettled, type ChallengeState } from '@evenrule/api/contract/moves/challenge'
 import { possibleMoves, type Move } from '@evenrule/api/contract/moves/define'
 import { openToChallenge, type SubmissionState } from '@evenrule/api/contract/moves/submission'
+import { clauseSubject } from '@evenrule/metrology'
 import { describeClause } from '../../strings/clauses'
 import { challengeMark, describeTarget } from '../../strings/challenges'
+import type { ClauseResult } from '../results'
 import type { ReadSubmission } from '../submissions/reading'
 
 export type Challenge = reviews.Challenge
@@ -55,13 +57,20 @@ export function mayChallenge(
 export const isCorrected = ({ messages }: Pick<Challenge, 'messages'>): boolean =>
   messages.filter(({ answerKind }) => answerKind !== null).at(-1)?.answerKind === 'correction'
 
-/** The challenges on which the result of a clause rests, the newest first. */
+/** Clauses whose figure comes from the readings, or from the standard they were taken on. */
+const restsOn = { readings: ['bias'], 'set-up': ['bias'], standard: ['bias', 'calibration'] } as const
+
+/** The challenges that put the result of a clause in question, the newest first. */
 export const challengesOf = (
   { submission, content }: Pick<ReadSubmission, 'content'> & { submission: Challenged },
-  clauseKey: string,
+  { clauseKey, clause }: Pick<ClauseResult, 'clauseKey' | 'clause'>,
 ): Challenge[] =>
   submission.challenges
-    .filter(({ target }) => clausesConcerned(target, content).includes(clauseKey))
+    .filter(
+      ({ target }) =>
+        clausesConcerned(target, content).includes(clauseKey) &&
+        ('clauseKey' in target || restsOn[target.kind].some((subject) => subject === clauseSubject(clause))),
+    )
     .sort((a, b) => b.number - a.number)
 
 /** The challenges about one study or its readings, the newest first. */

@@ -1,6 +1,7 @@
 import { allows, type reviews, type Role, type Side } from '@evenrule/api/contract'
 import { challengeMoves } from '@evenrule/api/contract/moves/challenge'
 import { conditionMoves } from '@evenrule/api/contract/moves/condition'
+import type { Clause } from '@evenrule/metrology'
 import { describe, expect, it } from 'vitest'
 import { challengeReasonWords, describeTarget, targetKindWords } from '../../strings/challenges'
 import { emptyTarget, missingIn, targetOf } from './challengeForm'
@@ -128,17 +129,22 @@ describe('opening a challenge', () => {
 })
 
 describe('what is in question', () => {
-  it('concerns every clause that rests on the study', () => {
+  it('concerns the clauses whose figure comes from it', () => {
     const content = {
       clauses: [
         { clauseKey: 'bias/mean', study: 'S-1' },
-        { clauseKey: 'resolution/share', study: null },
+        { clauseKey: 'calibration/in-date', study: 'S-1' },
       ],
       advisory: [],
     } as unknown as Parameters<typeof challengesOf>[0]['content']
     const submission = { challenges: [challenge(1, {}), challenge(2, { target: readings([2]) })] }
-    expect(challengesOf({ submission, content }, 'bias/mean').map(({ number }) => number)).toEqual([2, 1])
-    expect(challengesOf({ submission, content }, 'resolution/share')).toEqual([])
+    const numbers = (clauseKey: string, clause: Clause) =>
+      challengesOf({ submission, content }, { clauseKey, clause }).map(({ number }) => number)
+    const bias: Clause = { type: 'bias-zero-test', parameters: { alpha: 0.05 } }
+    expect(numbers('bias/mean', bias)).toEqual([2, 1])
+    const calibration: Clause = { type: 'calibration-in-date', parameters: { gauge: true, standard: true } }
+    // It looks at certificates, not at readings.
+    expect(numbers('calibration/in-date', calibration)).toEqual([])
   })
   it('marks readings only in the revision that was challenged, and not once withdrawn', () => {
     const challenges = [

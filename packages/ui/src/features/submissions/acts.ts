@@ -134,6 +134,9 @@ export interface PossibleAct {
 
 const isAct = (name: string): name is ActName => (actNames as readonly string[]).includes(name)
 
+/** Decisions that wait while a challenge does; they stay in sight, with the reason. */
+const decisions: readonly string[] = ['accept', 'accept-with-conditions', 'refuse']
+
 /** The moves that the state and the person's roles allow, each once, with what stands in their way. */
 export function possibleActs(
   { state, hindrances }: Pick<submissions.Submission, 'hindrances'> & { state: SubmissionState },
@@ -146,6 +149,15 @@ export function possibleActs(
     const codes = hindrances.filter(({ move }) => move === name).map(({ code }) => code)
     found.set(name, { name, words, hindrances: codes })
   }
+  if (state === 'challenged')
+    for (const { name, words } of possibleMoves<Move<SubmissionState>>(
+      submissionMoves,
+      'answered',
+      side,
+      holds,
+    ))
+      if (isAct(name) && decisions.includes(name))
+        found.set(name, { name, words, hindrances: ['challenge-open'] })
   return [...found.values()]
 }
 

@@ -141,6 +141,11 @@ describe('what can be done', () => {
       'confirm',
       'send-back',
     ])
+    expect(offered('awaiting-other-side', 'supplier', 'supplier-approver')).toEqual([
+      'agree-one-off',
+      'decline-one-off',
+      'withdraw',
+    ])
     expect(offered('accepted', 'customer', 'customer-approver')).toEqual([])
     expect(offered('submitted', 'customer', 'reader')).toEqual([])
   })
@@ -152,6 +157,15 @@ describe('what can be done', () => {
     ).filter(({ name }) => name === 'sign')
     expect(sign?.hindrances).toEqual(['took-the-readings'])
   })
+  it('keeps the decisions in sight while a challenge waits, with the reason', () =>
+    expect(
+      possibleActs({ state: 'challenged', hindrances: [] }, 'customer', (permission) =>
+        allows(permission, 'customer', ['quality-representative']),
+      ).map(({ name, hindrances }) => [name, ...hindrances]),
+    ).toEqual([
+      ['accept', 'challenge-open'],
+      ['refuse', 'challenge-open'],
+    ]))
   it('knows every move of the table that is made by a button', () => {
     const elsewhere = ['prepare', 'challenge', 'answer', 'resume', 'supersede']
     const names = new Set(submissionMoves.map(({ name }) => name as string))
