@@ -7,9 +7,11 @@ import type { WhatIfQuote } from './quote'
 
 type Changed = WhatIfQuote['changed']
 
-/** A number as it was entered: every place it has, and no more. */
-const exact = (value: number, unit?: Unit): string =>
-  formatNumber(value, { unit, digits: decimalPlaces(value) })
+/** Two numbers with every place that either of them has, and no more. */
+function exact(before: number, after: number, unit: Unit): [string, string] {
+  const digits = Math.max(decimalPlaces(before), decimalPlaces(after))
+  return [formatNumber(before, { unit, digits }), formatNumber(after, { unit, digits })]
+}
 
 const limits = (ends: { lower: number | null; upper: number | null }, unit: Unit): string => {
   const places = [ends.lower, ends.upper].map((end) => (end === null ? 0 : decimalPlaces(end)))
