@@ -194,6 +194,8 @@ describe('the running program', () => {
     'submission_notes',
     'submission_signatures',
     'submission_texts',
+    'condition_reports',
+    'review_files',
   ]
   /** What may be removed: drafts, their parts, and memberships. */
   const removable = [
@@ -202,6 +204,7 @@ describe('the running program', () => {
     'agreements',
     'house_terms',
     'memberships',
+    'submission_by_hand',
     'submission_studies',
   ]
   /** Rows that come to be by invitation or by functions of the database. */
@@ -248,11 +251,16 @@ describe('the running program', () => {
         )
       ).map(({ column }) => column)
     expect(await columns('record_heads')).toEqual(['hash', 'sequence'])
-    expect(await columns('decisions')).toEqual(['second_at', 'second_by', 'sent_back_reason', 'state'])
+    expect(await columns('decisions')).toEqual([
+      ...['declined_reason', 'other_side_at', 'other_side_by'],
+      ...['second_at', 'second_by', 'sent_back_reason', 'state'],
+    ])
+    expect(await columns('conditions')).toEqual(['confirmed_at', 'row_version', 'state'])
     expect(await columns('challenges')).toEqual([
       'answered_at',
       'closed_at',
       'closed_by',
+      'laboratory',
       'row_version',
       'state',
     ])
