@@ -260,12 +260,9 @@ export const hindranceWords: Record<HindranceCode, string> = {
 /** No criteria were agreed: said as such, and the customer's house terms for information. */
 export const advisoryWords = {
   answer: 'No criteria agreed.',
-  answerRest: 'Nothing is judged by a signed clause; an approver of each side decides for this once.',
+  answerRest: (parties: Parties) =>
+    `So there is no verdict: ${parties.side === 'customer' ? 'your approver' : `an approver of ${parties.customer}`} decides for this once, and ${parties.side === 'supplier' ? 'yours' : `one of ${parties.supplier}`} must agree.`,
   verdict: 'no criteria agreed',
-  noteTitle: 'No criteria are agreed for this measuring task.',
-  note: (parties: Parties) =>
-    `So there is no verdict. ${parties.side === 'customer' ? 'Your approver' : `An approver of ${parties.customer}`} decides for this once, and ${parties.side === 'supplier' ? 'your approver' : `an approver of ${parties.supplier}`} must agree.`,
-  propose: 'Agree criteria',
   heading: (customer: string) => `What would the house terms of ${customer} say?`,
   text: (customer: string, number: number) =>
     `House terms ${number} of ${customer}, for information only. Nobody has agreed to them here, so none of this counts as a verdict.`,

@@ -47,7 +47,7 @@ export function answerOf({ submission, content, results }: ReadSubmission, parti
   const [strong, then] = standingWords[submission.state](parties, submission.ageDays, submission.decidedAt)
   const shown =
     content.criteria === 'none'
-      ? { strong: advisoryWords.answer, rest: advisoryWords.answerRest }
+      ? { strong: advisoryWords.answer, rest: advisoryWords.answerRest(parties) }
       : { strong: decisive, rest }
   const stands = { strong, rest: then }
   const { standing } = submission
