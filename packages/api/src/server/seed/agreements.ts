@@ -2,12 +2,16 @@ import {
   acceptRound,
   answerRound,
   beginVersion,
+  commentOnRound,
+  markAccepted,
   signVersion,
+  withdrawClauses,
   withdrawVersion,
   type Agreement,
+  type AgreementVersion,
 } from '../../contract/agreements'
 import { approverOf, memberWith, relationshipOf, workerOf, type Base } from './base'
-import { characteristicName, type Ids } from './ids'
+import { characteristicName, houseTermsName, type Ids } from './ids'
 import type { DemoAgreement, DemoStep, DemoVersion } from './scenario.agreements'
 import { agreements } from './scenario.agreements'
 import type { Stage } from './stage'
@@ -23,7 +27,7 @@ export function agreementScenes(stage: Stage, base: Base, ids: Ids): Scene[] {
         daysAgo: step.daysAgo,
         play: async () => {
           const scope = scopeOf(base, ids, agreement)
-          current = await playStep(stage, base, { agreement, version, step, scope, current })
+          current = await playStep(stage, base, ids, { agreement, version, step, scope, current })
         },
       })),
     )
@@ -41,6 +45,7 @@ interface Played {
 async function playStep(
   stage: Stage,
   base: Base,
+  ids: Ids,
   { agreement, version, step, scope, current }: Played,
 ): Promise<Agreement> {
   const organisation = base.organisations[agreement[step.side]]
@@ -48,8 +53,13 @@ async function playStep(
   const act = stage.as(step.side, organisation, memberWith(organisation, role))
   const effectiveOn = stage.day(version.effectiveDaysAgo)
   if (step.act === 'propose') {
-    const { clauses, comment, send = true } = step
-    return act(beginVersion, { body: { ...scope, clauses, effectiveOn, comment, send } })
+    const { clauses, terms, comment, send = true, houseTerms } = step
+    const houseTermsId = houseTerms
+      ? ids.get('house terms', houseTermsName(agreement.customer, houseTerms))
+      : null
+    return act(beginVersion, {
+      body: { ...scope, clauses, terms, effectiveOn, comment, send, houseTermsId },
+    })
   }
   const newest = current?.versions[0]
   if (!current || !newest) throw new Error('An act of a negotiation that was not begun.')
@@ -57,11 +67,23 @@ async function playStep(
   const expectedVersion = newest.rowVersion
   switch (step.act) {
     case 'answer': {
-      const { clauses, comment } = step
+      const { clauses, terms, comment } = step
       return act(answerRound, {
         params,
-        body: { clauses, comment, effectiveOn, send: true, expectedVersion },
+        body: { clauses, terms, comment, effectiveOn, send: true, expectedVersion },
       })
+    }
+    case 'comment': {
+      const { about } = thingIn(newest, step.about)
+      return act(commentOnRound, { params, body: { round: standingIn(newest), about, text: step.text } })
+    }
+    case 'mark': {
+      const items = step.about.map((name) => thingIn(newest, name))
+      return act(markAccepted, { params, body: { round: standingIn(newest), items } })
+    }
+    case 'take-out': {
+      const { about: clauseKeys, words } = step
+      return act(withdrawClauses, { params, body: { clauseKeys, words, expectedVersion } })
     }
     case 'accept':
       return act(acceptRound, { params, body: { expectedVersion } })
@@ -70,6 +92,16 @@ async function playStep(
     case 'withdraw':
       return act(withdrawVersion, { params, body: { expectedVersion, reason: step.reason } })
   }
+}
+
+const standingIn = ({ acceptance }: AgreementVersion): number => acceptance?.round ?? 1
+
+/** What the scenario names by the key of a clause, `terms` or `effective-on`. */
+function thingIn({ acceptance }: AgreementVersion, name: string) {
+  const found = acceptance?.items.find(({ kind, clauseKey }) => (clauseKey ?? kind) === name)
+  if (!found) throw new Error(`Nothing named ${name} stands in a proposal of the demonstration.`)
+  const { kind, clauseKey, sha256 } = found
+  return { about: { kind, clauseKey }, sha256 }
 }
 
 function scopeOf(

@@ -1,4 +1,4 @@
-export type Thing = 'part' | 'revision' | 'characteristic' | 'gauge' | 'standard' | 'task'
+export type Thing = 'part' | 'revision' | 'characteristic' | 'gauge' | 'standard' | 'task' | 'house terms'
 
 /** Ids that the scenes played so far have brought about, by what people call the things. */
 export class Ids {
@@ -20,3 +20,5 @@ export const characteristicName = (partNumber: string, number: number): string =
 
 export const taskName = (partNumber: string, number: number, gaugeCode: string): string =>
   `${characteristicName(partNumber, number)}/${gaugeCode}`
+
+export const houseTermsName = (customer: string, number: number): string => `${customer} ${number}`

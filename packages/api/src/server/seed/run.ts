@@ -1,6 +1,7 @@
 import { agreementScenes } from './agreements'
 import type { Base } from './base'
 import { gaugeScenes, standardScenes } from './gauges'
+import { houseTermsScenes } from './house-terms'
 import { Ids } from './ids'
 import { partScenes } from './parts'
 import { inOrder } from './scenes'
@@ -11,9 +12,15 @@ import { taskScenes } from './tasks'
 /** Plays the demonstration from its beginning a year ago to today, in the order of its days. */
 export async function playDemonstration(stage: Stage, base: Base): Promise<void> {
   const ids = new Ids()
-  const scenes = [partScenes, gaugeScenes, standardScenes, taskScenes, agreementScenes, studyScenes].flatMap(
-    (scenesOf) => scenesOf(stage, base, ids),
-  )
+  const scenes = [
+    partScenes,
+    gaugeScenes,
+    standardScenes,
+    taskScenes,
+    houseTermsScenes,
+    agreementScenes,
+    studyScenes,
+  ].flatMap((scenesOf) => scenesOf(stage, base, ids))
   let day = Infinity
   for (const scene of inOrder(scenes)) {
     if (scene.daysAgo === day) stage.pass(5)

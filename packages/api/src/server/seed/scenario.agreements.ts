@@ -1,5 +1,16 @@
 import type { Clause } from '@evenrule/metrology'
 import type { Side } from '../../contract/access'
+import type { Terms } from '../../contract/terms'
+import {
+  calibration,
+  design,
+  equivalence,
+  resolution,
+  standardTerms,
+  within,
+  zeroTest,
+} from './scenario.clauses'
+import { longNegotiation, takenAway } from './scenario.negotiations'
 import type { OrganisationKey } from './scenario.organisations'
 
 /** One act in a negotiation: when (days before the seeding), whose, and what. */
@@ -9,9 +20,16 @@ export type DemoStep =
       side: Side
       act: 'propose' | 'answer'
       clauses: Clause[]
+      terms?: Partial<Terms>
       comment: string
       send?: false
+      /** The customer's house terms from which it is begun, by their number. */
+      houseTerms?: number
     }
+  /** About a clause of the standing round by its key, the terms or the date. */
+  | { daysAgo: number; side: Side; act: 'comment'; about: string; text: string }
+  | { daysAgo: number; side: Side; act: 'mark'; about: string[] }
+  | { daysAgo: number; side: Side; act: 'take-out'; about: string[]; words: string }
   | { daysAgo: number; side: Side; act: 'accept' | 'sign' }
   | { daysAgo: number; side: Side; act: 'withdraw'; reason: string }
 
@@ -30,26 +48,8 @@ export interface DemoAgreement {
   versions: DemoVersion[]
 }
 
-const design = (readings: number, attempts?: number): Clause => ({
-  type: 'design-minimum',
-  parameters: { readings, registeredBeforehand: true, ...(attempts === undefined ? {} : { attempts }) },
-})
-const resolution: Clause = { type: 'resolution-share', parameters: { share: 0.1, base: 'tolerance' } }
-const calibration: Clause = { type: 'calibration-in-date', parameters: { gauge: true, standard: true } }
-const equivalence = (share: number): Clause => ({
-  type: 'bias-equivalence',
-  parameters: { margin: { base: 'tolerance', share }, confidence: 0.95 },
-})
-const within = (value: number, unit: string): Clause => ({
-  type: 'bias-equivalence',
-  parameters: { margin: { base: 'absolute', value, unit }, confidence: 0.95 },
-})
-const zeroTest = (alpha: number): Clause => ({ type: 'bias-zero-test', parameters: { alpha } })
-
-const standardTerms = [design(25, 3), resolution, calibration, equivalence(0.1)]
-
 /** Proposed by the customer, accepted and signed by both. */
-const signedAt = (daysAgo: number, clauses: Clause[], comment: string): DemoVersion => ({
+export const signedAt = (daysAgo: number, clauses: Clause[], comment: string): DemoVersion => ({
   effectiveDaysAgo: daysAgo - 10,
   steps: [
     { daysAgo: daysAgo + 6, side: 'customer', act: 'propose', clauses, comment },
@@ -204,6 +204,7 @@ export const agreements: DemoAgreement[] = [
             side: 'customer',
             act: 'propose',
             clauses: standardTerms,
+            houseTerms: 2,
             comment: 'The same terms for all suppliers from the third quarter on.',
           },
           { daysAgo: 135, side: 'supplier', act: 'accept' },
@@ -259,7 +260,28 @@ export const agreements: DemoAgreement[] = [
             side: 'customer',
             act: 'answer',
             clauses: [design(25, 2), resolution, calibration, equivalence(0.1)],
+            terms: { validityMonths: 24, calibrationOverdue: 'on-hold' },
             comment: 'We see it. A tenth of the tolerance, and two attempts at most.',
+          },
+          {
+            daysAgo: 6,
+            side: 'supplier',
+            act: 'comment',
+            about: 'design/readings',
+            text: 'Two attempts is one too few while the new pins are being run in. Could it be three until summer?',
+          },
+          {
+            daysAgo: 5,
+            side: 'supplier',
+            act: 'mark',
+            about: ['resolution/share', 'calibration/date', 'bias/mean'],
+          },
+          {
+            daysAgo: 3,
+            side: 'customer',
+            act: 'comment',
+            about: 'design/readings',
+            text: 'Three for the shafts, two for everything else. Send us that.',
           },
         ],
       },
@@ -297,4 +319,6 @@ export const agreements: DemoAgreement[] = [
       },
     ],
   },
+  takenAway,
+  longNegotiation,
 ]
