@@ -97,11 +97,12 @@ export function describeMargin(margin: Margin): string {
   return margin.base === 'tolerance' ? share + inItsStead(margin.baseline) : share
 }
 
-/** "Cgk ≥ 1.33 and Cg ≥ 1.33", by what is asked for. */
-const indexLimits = ({ leastCg, leastCgk }: ClauseOf<'bias-index'>['parameters']): string =>
-  [`Cgk ≥ ${formatNumber(leastCgk)}`, leastCg !== null && `Cg ≥ ${formatNumber(leastCg)}`]
-    .filter(Boolean)
-    .join(' and ')
+/** "Cg and Cgk at least 1.33", "Cgk at least 1.33", "Cg at least 1.67 and Cgk at least 1.33", by what is asked for. */
+function indexLimits({ leastCg, leastCgk }: ClauseOf<'bias-index'>['parameters']): string {
+  const cgk = `Cgk at least ${formatNumber(leastCgk)}`
+  if (leastCg === null) return cgk
+  return leastCg === leastCgk ? `Cg and ${cgk}` : `Cg at least ${formatNumber(leastCg)} and ${cgk}`
+}
 
 /** "20 % of tolerance over 6 s, on the lower bound at 95 %". */
 const indexConvention = ({
@@ -133,7 +134,7 @@ const keyWords: Record<string, string> = {
   'resolution/share': 'Resolution',
   'calibration/date': 'Calibration',
   'bias/mean': 'Bias',
-  'bias/index': 'Bias: Cg and Cgk',
+  'bias/index': 'Capability indices Cg and Cgk',
   'bias/with-uncertainty': 'Bias with its uncertainty',
 }
 
@@ -164,7 +165,7 @@ const sentences: Builders<string> = {
   'bias-interval-inside': ({ parameters: { margin, confidence } }) =>
     `Whole ${formatShare(confidence)} interval of the bias within ±${describeMargin(margin)}`,
   'bias-point': ({ parameters: { margin } }) => `Estimated bias within ±${describeMargin(margin)}`,
-  'bias-index': ({ parameters }) => `${indexLimits(parameters)} of ${indexConvention(parameters)}`,
+  'bias-index': ({ parameters }) => `${indexLimits(parameters)} for ${indexConvention(parameters)}`,
   'bias-with-uncertainty': ({ parameters: { margin, coverageFactor } }) =>
     `Bias and its expanded uncertainty (k = ${formatNumber(coverageFactor)}) within ±${describeMargin(margin)}`,
   'by-hand': ({ parameters: { subject, measure } }) => `${subjectWords[subject]}, judged by hand: ${measure}`,

@@ -184,10 +184,12 @@ export const figuresWords = {
     'not-shown': (subject: string) => `Why ${subject} is not shown`,
   },
   readings: 'The readings',
-  text: (count: number, interval: string, margin: boolean) =>
+  interval: (confidence: string) => `${confidence} interval`,
+  uncertainty: (factor: string) => `expanded uncertainty (k = ${factor})`,
+  text: (count: number, band: string, margin: boolean) =>
     [
       `${formatCount(count, 'reading')} in the order taken`,
-      interval ? `, their mean with its ${interval} interval` : ', their mean',
+      band ? `, their mean with its ${band}` : ', their mean',
       margin ? ', and the agreed margin around the reference value.' : ' and the reference value.',
     ].join(''),
   warnings: 'What to know about these readings',

@@ -48,6 +48,67 @@ describe('clause sentences', () => {
       'At least 15 readings, registered beforehand, at most 1 attempt',
       'at least 15 readings, registered beforehand, at most 1 attempt',
     ],
+    [
+      {
+        type: 'bias-interval-inside',
+        parameters: { margin: { base: 'process', share: 0.05 }, confidence: 0.95 },
+      },
+      'Whole 95_% interval of the bias within ±5_% of process variation',
+      'whole 95_% interval within ±5_% of process variation',
+    ],
+    [
+      {
+        type: 'bias-point',
+        parameters: {
+          margin: { base: 'tolerance', share: 0.1, baseline: { kind: 'natural-bound', value: 0 } },
+        },
+      },
+      'Estimated bias within ±10_% of tolerance (one-sided: of the distance to 0)',
+      'estimate within ±10_% of tolerance (one-sided: of the distance to 0)',
+    ],
+    [
+      {
+        type: 'bias-index',
+        parameters: {
+          ...{ share: 0.2, base: 'tolerance', sigmas: 6, leastCg: 1.33, leastCgk: 1.33 },
+          ...{ basis: 'bound', confidence: 0.95 },
+        },
+      },
+      'Cg and Cgk at least 1.33 for 20_% of tolerance over 6_s, on the lower bound at 95_%',
+      'Cg and Cgk at least 1.33, 20_% of tolerance over 6_s, on the lower bound at 95_%',
+    ],
+    [
+      {
+        type: 'bias-index',
+        parameters: {
+          ...{ share: 0.15, base: 'process', sigmas: 4, leastCg: null, leastCgk: 1 },
+          ...{ basis: 'estimate', confidence: 0.95 },
+        },
+      },
+      'Cgk at least 1 for 15_% of process variation over 4_s, on the estimate',
+      'Cgk at least 1, 15_% of process variation over 4_s, on the estimate',
+    ],
+    [
+      {
+        type: 'bias-with-uncertainty',
+        parameters: { margin: { base: 'tolerance', share: 0.1 }, coverageFactor: 2 },
+      },
+      'Bias and its expanded uncertainty (k = 2) within ±10_% of tolerance',
+      'with uncertainty (k = 2) within ±10_% of tolerance',
+    ],
+    [
+      {
+        type: 'by-hand',
+        parameters: { subject: 'linearity', measure: 'Slope', asks: 'a slope below 1 %' },
+      },
+      'Linearity, judged by hand: Slope',
+      'Slope, judged by hand on a document',
+    ],
+    [
+      { type: 'does-not-apply', parameters: { key: 'bias/index', reason: 'one-off part' } },
+      'Does not apply: capability indices Cg and Cgk',
+      'does not apply: one-off part',
+    ],
   ] as const)('say what $type asks for', (clause, sentence, terms) => {
     expect(seen(describeClause(clause))).toBe(sentence)
     expect(seen(describeTerms(clause))).toBe(terms)

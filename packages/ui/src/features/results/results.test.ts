@@ -1,4 +1,10 @@
-import { evaluate, isError, type Clause, type ClauseInput } from '@evenrule/metrology'
+import {
+  evaluate,
+  isError,
+  type BiasIndexParameters,
+  type Clause,
+  type ClauseInput,
+} from '@evenrule/metrology'
 import { describe, expect, it } from 'vitest'
 import { overallAnswer } from './answer'
 import { intervalComparison } from './comparisons'
@@ -20,6 +26,23 @@ const resolution: Clause = { type: 'resolution-share', parameters: { share: 0.05
 const design: Clause = {
   type: 'design-minimum',
   parameters: { readings: 15, registeredBeforehand: true, attempts: 2 },
+}
+const tenth = { base: 'tolerance', share: 0.05 } as const
+const uncertain: Clause = { type: 'bias-with-uncertainty', parameters: { margin: tenth, coverageFactor: 2 } }
+const certified = {
+  data: { kind: 'bias', readings, reference: { value: 24, standardUncertainty: 0.0003 } },
+} as const satisfies Partial<ClauseInput>
+const index = (more: Partial<BiasIndexParameters> = {}): Clause => ({
+  type: 'bias-index',
+  parameters: {
+    ...{ share: 0.2, base: 'tolerance', sigmas: 6, leastCg: 1.33, leastCgk: 1.33 },
+    ...{ basis: 'bound', confidence: 0.95 },
+    ...more,
+  },
+})
+const byHand: Clause = {
+  type: 'by-hand',
+  parameters: { subject: 'linearity', measure: 'slope', asks: 'a slope below 1 %' },
 }
 const calibration: Clause = { type: 'calibration-in-date', parameters: { gauge: true, standard: true } }
 
@@ -90,6 +113,66 @@ describe('the way from the readings to a figure', () => {
     expect(Object.keys(way(same))).not.toContain('Comparison')
     expect(Object.keys(way(judged(equivalence, { data: null })))).toEqual(['Margin'])
   })
+  it('takes the two-sided interval for a clause that wants all of it inside', () => {
+    const steps = way(
+      judged({ type: 'bias-interval-inside', parameters: { margin: tenth, confidence: 0.95 } }),
+    )
+    expect(steps['Student’s t, two-sided']).toBe('2.2622')
+    expect(steps['95 % interval of the bias']).toBe('−0.000169 to 0.000569 mm')
+    expect(steps.Comparison).toBe('−0.00250 ≤ −0.00017 and 0.00057 ≤ 0.00250: inside')
+    expect(steps).not.toHaveProperty('p value')
+  })
+  it('compares the estimate alone with the margin of a point limit', () => {
+    const steps = way(judged({ type: 'bias-point', parameters: { margin: tenth } }))
+    expect([steps.Margin, steps.Comparison]).toEqual(['±0.0025 mm', '0.00020 ≤ 0.00250'])
+  })
+  it('adds the uncertainty of the reference, or says that it is not known', () => {
+    expect(way(judged(uncertain, certified))).toMatchObject({
+      'Standard uncertainty of the reference value': '0.000300 mm',
+      'Standard uncertainty of the bias': '0.000342 mm',
+      'Expanded uncertainty': '0.000683 mm',
+      'Bias with its expanded uncertainty': '−0.000483 to 0.000883 mm',
+      Comparison: '−0.00250 ≤ −0.00048 and 0.00088 ≤ 0.00250: inside',
+    })
+    const unknown = way(judged(uncertain))
+    expect(unknown['Standard uncertainty of the reference value']).toBe('not on record')
+    expect(unknown).not.toHaveProperty('Comparison')
+  })
+  it('shows both indices, their bounds where these decide, and what each is compared with', () => {
+    const steps = way(judged(index()))
+    expect(steps).toMatchObject({
+      'Width the share is taken of': '0.05 mm',
+      'Share the gauge may take up': '0.01 mm',
+      Cg: '3.227',
+      Cgk: '3.098',
+      'Least Cgk that is agreed': '1.33',
+    })
+    expect(steps['Bounds of Cgk, each at 95 %']).toMatch(/^1\.\d{3} to 4\.\d{3}$/)
+    const alone = way(judged(index({ basis: 'estimate', leastCg: null })))
+    expect(Object.keys(alone).filter((label) => /Cg\b|Bounds/.test(label))).toEqual([])
+  })
+  it('tells the width of a one-sided tolerance by what was agreed for it', () => {
+    const margin = { ...tenth, baseline: { kind: 'natural-bound', value: 0 } } as const
+    const [step] = wayOf(
+      judged({ type: 'bias-point', parameters: { margin } }, { tolerance: { upper: 0.05 }, data: null }),
+    )
+    expect(seen(`${step?.formula} = ${step?.figure}`)).toBe(
+      '5 % of the distance to 0, the tolerance being one-sided = ±0.0025 mm',
+    )
+  })
+  it('quotes who judged by hand', () => {
+    expect(way(judged(byHand))).toEqual({
+      'What the document must show': 'a slope below 1 %',
+      'SHA-256 of the document': 'none yet',
+    })
+    const documentSha256 = 'ab'.repeat(32)
+    const facts = { byHand: { verdict: 'meets', reason: 'See page 3.', documentSha256 } } as const
+    expect(way(judged(byHand, facts))).toMatchObject({
+      'Judged as': 'meets',
+      'Reason given': 'See page 3.',
+      'SHA-256 of the document': documentSha256,
+    })
+  })
   it('compares the resolution with the agreed share', () => {
     expect(way(judged(resolution))).toEqual({
       'Resolution of the gauge': '0.0001 mm',
@@ -144,6 +227,22 @@ describe('the answer in words', () => {
       'Yes, both clauses meet.',
       'The bias is 0.00020 mm, and its whole interval lies inside ±0.0025 mm.',
     ]))
+  it('is yes with the index where no clause has the bias itself', () => {
+    expect(answer(judged(index()), judged(resolution))[1]).toMatch(
+      /^Cgk is 3\.10; at least 1\.33 is agreed\.$/,
+    )
+    expect(answer(judged(index()), judged(equivalence))[1]).toMatch(/^The bias is /)
+    const point: Clause = { type: 'bias-point', parameters: { margin: tenth } }
+    expect(answer(judged(point))[1]).toBe('The bias is 0.00020 mm, within ±0.0025 mm.')
+  })
+  it('says what a document, a certificate or a better index would settle', () => {
+    expect(answer(judged(byHand))).toEqual([
+      'Not shown yet.',
+      'Linearity is not shown: a document that shows it is needed.',
+    ])
+    expect(answer(judged(uncertain))[1]).toMatch(/uncertainty of the reference standard is needed/)
+    expect(answer(judged(index({ leastCgk: 9, leastCg: null })))[1]).toMatch(/below the 9 that is agreed/)
+  })
   it('counts and names what falls short and what is open', () => {
     const wide = judged(equivalence, {
       data: {
@@ -177,7 +276,7 @@ describe('the plot of a study', () => {
     expect(figures?.leading?.clause).toEqual(failing)
     expect(figures?.margin?.upper).toBeCloseTo(24.00005, 10)
     expect(figures?.band?.lower).toBeCloseTo(23.9999007, 6)
-    expect(figures?.confidence.replace('\u202F', ' ')).toBe('90 %')
+    expect(figures?.bandName.replace('\u202F', ' ')).toBe('90 % interval')
   })
   it('marks the readings that warnings name', () => {
     const outlying = [...readings, 24.02]
@@ -192,6 +291,17 @@ describe('the plot of a study', () => {
     const figures = readingsOf(readings, 'mm', study)
     expect(figures.margin).toBeNull()
     expect(figures.warnings.map(({ code }) => code)).toEqual([])
+  })
+  it('shows bias and expanded uncertainty where these are compared with the margin', () => {
+    const figures = studyFiguresOf([judged(uncertain, certified)])
+    expect(figures?.bandName).toBe('expanded uncertainty (k = 2)')
+    expect(figures?.band?.upper).toBeCloseTo(24.0002 + 0.00068, 5)
+    expect(figures?.margin?.lower).toBeCloseTo(23.9975, 10)
+  })
+  it('shows no index as if it were a length', () => {
+    const figures = studyFiguresOf([judged(index())])
+    expect(figures?.band?.lower).toBeGreaterThan(23)
+    expect(figures?.margin).toBeNull()
   })
   it('needs readings', () => expect(studyFiguresOf([judged(equivalence, { data: null })])).toBeNull())
 })

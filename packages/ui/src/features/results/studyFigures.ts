@@ -1,6 +1,7 @@
 import { clauseSubject, type BiasOutput, type Warning } from '@evenrule/metrology'
-import { decimalPlaces, formatShare, type Ends } from '../../format'
+import { decimalPlaces, formatNumber, formatShare, type Ends } from '../../format'
 import { shiftDecimal } from '../../format/numbers'
+import { figuresWords as words } from '../../strings/results'
 import { figureDigits } from './digits'
 import type { ClauseResult } from './types'
 
@@ -10,9 +11,9 @@ export interface StudyFigures {
   unit: string
   reference: number
   mean: number | null
-  /** The interval of the mean as values, at `confidence`. */
+  /** What surrounds the mean, as values, and what it is: "95 % interval", "expanded uncertainty (k = 2)". */
   band: Ends | null
-  confidence: string
+  bandName: string
   /** The agreed margin around the reference value; null where none is agreed. */
   margin: Ends | null
   digits: number
@@ -54,19 +55,34 @@ export function studyFiguresOf(results: readonly ClauseResult[]): StudyFigures |
   const any = leading ?? results.find(({ input, output }) => output.study !== null && input.data) ?? null
   const study = any?.output.study
   if (!any || !study || !any.input.data) return null
-  const equivalence = leading?.clause.type === 'bias-equivalence' ? study.equivalence : null
-  const edge = equivalence?.margin ?? null
+  // A study is evaluated with the margin of its clause, where that has one.
+  const edge = leading ? study.equivalence.margin : null
   return {
     ...readingsOf(any.input.data.readings, any.input.unit, study, warningsOf(results)),
-    ...(equivalence
-      ? {
-          band: study.standardDeviation ? shifted(study.reference.value, equivalence.interval) : null,
-          confidence: confidenceText(1 - 2 * equivalence.alpha),
-        }
-      : {}),
+    ...(leading && judgedBand(leading, study)),
     margin: edge === null ? null : shifted(study.reference.value, { lower: -edge, upper: edge }),
     digits: figureDigits(any),
     leading,
+  }
+}
+
+/** What surrounds the mean where the clause compares something else than the two-sided interval. */
+function judgedBand(
+  { clause }: ClauseResult,
+  study: BiasOutput,
+): Pick<StudyFigures, 'band' | 'bandName'> | null {
+  const { reference, equivalence, withUncertainty, bias } = study
+  const of = (ends: { lower: number; upper: number } | null) =>
+    study.standardDeviation ? shifted(reference.value, ends) : null
+  if (clause.type === 'bias-equivalence') {
+    const confidence = confidenceText(1 - 2 * equivalence.alpha)
+    return { band: of(equivalence.interval), bandName: words.interval(confidence) }
+  }
+  if (clause.type !== 'bias-with-uncertainty') return null
+  const { expandedUncertainty: u, coverageFactor } = withUncertainty
+  return {
+    band: of(u === null || bias === null ? null : { lower: bias - u, upper: bias + u }),
+    bandName: words.uncertainty(formatNumber(coverageFactor)),
   }
 }
 
@@ -86,7 +102,7 @@ export function readingsOf(
     reference: study.reference.value,
     mean: study.mean,
     band: study.standardDeviation ? shifted(study.reference.value, study.interval) : null,
-    confidence: confidenceText(study.confidence),
+    bandName: words.interval(confidenceText(study.confidence)),
     margin: null,
     digits: Math.min(9, readings.reduce((most, reading) => Math.max(most, decimalPlaces(reading)), 0) + 1),
     warnings,
