@@ -276,6 +276,9 @@ export const advisoryWords = {
   },
 } as const
 
+const orWords = (names: readonly string[]): string =>
+  names.length > 1 ? `${names.slice(0, -1).join(', ')} or ${names.at(-1)}` : (names[0] ?? '')
+
 /** The terms frozen with a submission, each as a sentence. */
 export const termsWords = {
   heading: 'What becomes of an acceptance',
@@ -285,8 +288,8 @@ export const termsWords = {
     'on-hold': 'While a calibration is overdue it is on hold.',
     stays: 'An overdue calibration changes nothing.',
   },
-  suspended: (what: readonly string[]) => `It is suspended when the gauge is ${joinWords(what)}.`,
-  stays: (what: readonly string[]) => `It stays when the gauge is ${joinWords(what)}.`,
+  suspended: (what: readonly string[]) => `It is suspended when the gauge is ${orWords(what)}.`,
+  stays: (what: readonly string[]) => `It stays when the gauge is ${orWords(what)}.`,
   events: {
     outOfLimits: 'found out of limits',
     repaired: 'repaired',
