@@ -1,5 +1,5 @@
 import type { ClauseOutput } from '@evenrule/metrology'
-import { front, record, type Side } from '@evenrule/api/contract'
+import { front, record, requests, requestStates, type Side } from '@evenrule/api/contract'
 import { studyStates } from '@evenrule/api/contract/moves/study'
 import { submissionStates } from '@evenrule/api/contract/moves/submission'
 import { afterAll, beforeAll, describe, expect, it } from 'vitest'
@@ -50,6 +50,31 @@ describe('the demonstration', () => {
     expect((await states('agreement_versions')).sort()).toEqual(
       ['agreed', 'countered', 'draft', 'proposed', 'signed', 'withdrawn'].sort(),
     )
+  })
+
+  it('has requests in every state, with each of two customers', async () => {
+    for (const [key, name] of [
+      ['brackwell', 'Mara Lindqvist'],
+      ['norvane', 'Leo Sandmark'],
+    ] as const) {
+      const organisation = base.organisations[key]
+      const { items } = await asMember('customer', organisation, name).call(
+        requests.listRequests,
+        { organisationId: organisation.id },
+        { query: { size: 100 } },
+      )
+      expect(new Set(items.map(({ state }) => state))).toEqual(new Set(requestStates))
+      expect(items.some(({ state, daysLeft }) => state === 'open' && daysLeft < 0)).toBe(true)
+    }
+  })
+
+  it('leaves its messages readable, and none of its mail to be sent', async () => {
+    const { rows } = await harness.owner.query<{ waiting: number; messages: number }>(
+      `select (select count(*) from outbox where sent_at is null)::integer as waiting,
+         (select count(*) from messages)::integer as messages`,
+    )
+    expect(rows[0]?.waiting).toBe(0)
+    expect(rows[0]?.messages).toBeGreaterThan(100)
   })
 
   it('estimates the bias that the gauges were given, as often as their intervals promise', async () => {

@@ -1,9 +1,10 @@
 import { pino } from 'pino'
-import { readConfig } from './config'
+import { readConfig, readWorkerConfig } from './config'
 import { openDatabase } from './db/database'
 import { openEngines } from './integrations/engines'
 import { openFileStore } from './integrations/file-store'
 import { openIdentity } from './integrations/oidc'
+import { tellReminders } from './modules/reminders/reminders.service'
 import { allRoutes } from './routes'
 import { finishSeed, seedBase } from './seed/base'
 import { playDemonstration } from './seed/run'
@@ -37,6 +38,15 @@ if (!base) {
   })
   await playDemonstration(new Stage(database, services, routes, seededAt), base)
   await pool.end()
+  await remindOf(new Date(seededAt.getTime() - 86_400_000))
   await finishSeed(ownerUrl)
   console.log('The demonstration is laid out.')
+}
+
+/** What the worker would have told by then, so that its first run does not tell of a whole year at once. */
+async function remindOf(instant: Date): Promise<void> {
+  const { database, pool } = openDatabase(readWorkerConfig(process.env).systemDatabaseUrl, 1)
+  const logger = pino({ level: config.logLevel })
+  await tellReminders({ database, logger, clock: () => instant })
+  await pool.end()
 }

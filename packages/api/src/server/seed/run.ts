@@ -3,7 +3,9 @@ import type { Base } from './base'
 import { gaugeScenes, standardScenes } from './gauges'
 import { houseTermsScenes } from './house-terms'
 import { Ids } from './ids'
+import { lifeScenes } from './life'
 import { partScenes } from './parts'
+import { requestScenes } from './requests'
 import { inOrder } from './scenes'
 import type { Stage } from './stage'
 import { studyScenes } from './studies'
@@ -19,7 +21,9 @@ export async function playDemonstration(stage: Stage, base: Base): Promise<void>
     taskScenes,
     houseTermsScenes,
     agreementScenes,
+    requestScenes,
     studyScenes,
+    lifeScenes,
   ].flatMap((scenesOf) => scenesOf(stage, base, ids))
   let day = Infinity
   for (const scene of inOrder(scenes)) {
