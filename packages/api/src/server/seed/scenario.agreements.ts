@@ -5,9 +5,11 @@ import {
   calibration,
   design,
   equivalence,
+  indices,
   resolution,
   standardTerms,
   within,
+  withUncertainty,
   zeroTest,
 } from './scenario.clauses'
 import { longNegotiation, takenAway } from './scenario.negotiations'
@@ -108,6 +110,19 @@ export const agreements: DemoAgreement[] = [
         190,
         [within(0.1, 'µm')],
         'Only an upper limit here, so the margin is a value of its own, in micrometres.',
+      ),
+    ],
+  },
+  {
+    supplier: 'tarnfield',
+    customer: 'brackwell',
+    part: '7741-220',
+    characteristic: 1,
+    versions: [
+      signedAt(
+        85,
+        [indices(1.33, 1), withUncertainty(0.1)],
+        'The bore is fitted by class: spread and bias together, and the uncertainty of the ring counted in.',
       ),
     ],
   },
