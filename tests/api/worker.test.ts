@@ -253,6 +253,53 @@ describe('several workers', () => {
   })
 })
 
+describe('a mail server that is down for an hour', () => {
+  const minute = 60_000
+  it('loses no mail and sends none twice, with three workers of which one dies in the middle', async () => {
+    // Nobody listens there.
+    const down = openMail({ url: 'smtp://127.0.0.1:9', from: 'Evenrule <evenrule@supplier.test>' })
+    const workers = (transport: MailTransport) => Promise.all([1, 2, 3].map(() => send({ transport })))
+    const subjects: string[] = []
+    const tellOf = async (subject: string) => {
+      subjects.push(subject)
+      await tell(subject)
+    }
+    for (const number of [1, 2, 3, 4, 5]) await tellOf(`Before ${number}`)
+    for (let passed = 0; passed < 60; passed += 1) {
+      if (passed % 15 === 5) await tellOf(`At minute ${passed}`)
+      expect(await workers(down)).toEqual([0, 0, 0])
+      passes(minute)
+    }
+    down.close()
+    expect(received).toEqual([])
+    const tried = await outboxRows()
+    expect(tried).toHaveLength(subjects.length)
+    // Tried again and again, but not every minute, and nobody has given up.
+    for (const { attempts, sent_at } of tried) {
+      expect(sent_at).toBeNull()
+      expect(attempts).toBeLessThan(10)
+    }
+    expect(Math.max(...tried.map(({ attempts }) => attempts))).toBeGreaterThan(5)
+
+    // The server is up again. One worker takes a mail and dies before it has sent it.
+    await tellOf('After it')
+    const died = await takeDueMail(system.database, {
+      now: harness.now().toISOString(),
+      until: new Date(harness.now().getTime() + claimFor).toISOString(),
+      attempts: attemptsAtMost,
+    })
+    expect(died).toBeDefined()
+    for (let passed = 0; passed < 60; passed += 1) {
+      await workers(transport)
+      passes(minute)
+    }
+    expect(received.map((mail) => mail.subject).sort()).toEqual([...subjects].sort())
+    expect(new Set(received.map((mail) => mail.messageId)).size).toBe(subjects.length)
+    expect((await outboxRows()).every(({ sent_at }) => sent_at !== null)).toBe(true)
+    expect(await workers(transport)).toEqual([0, 0, 0])
+  }, 120_000)
+})
+
 it('the worker’s program sends what comes, and ends in order on SIGTERM', async () => {
   const worker = spawn(
     process.execPath,

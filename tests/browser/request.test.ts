@@ -1,0 +1,140 @@
+import type { Browser, BrowserContext, Page } from 'playwright-core'
+import { afterAll, afterEach, beforeAll, describe, expect, it, vi } from 'vitest'
+import { addresses, axeFaults, launch, picture, signIn, signOut, watchErrors } from './support'
+
+const gauge = 'DG-9'
+const words = `Please show it again ${Date.now().toString(36)}.`
+
+/** A day so many days from now, as a date field takes it. */
+const inDays = (days: number): string =>
+  new Date(Date.now() + days * 86_400_000).toLocaleDateString('sv-SE', { timeZone: 'Europe/Berlin' })
+
+describe('a request for proof, from the question to the answer', () => {
+  let browser: Browser
+  let supplier: BrowserContext
+  let customer: BrowserContext
+  let supplierPage: Page
+  let customerPage: Page
+  let errors: string[]
+  /** Path of the request's page in either app, below its organisation. */
+  let path = ''
+  const app = addresses()
+
+  beforeAll(async () => {
+    browser = await launch()
+    const options = { viewport: { width: 1280, height: 860 }, locale: 'en-GB', timezoneId: 'Europe/Berlin' }
+    supplier = await browser.newContext(options)
+    customer = await browser.newContext(options)
+    errors = watchErrors(supplier, watchErrors(customer))
+    supplierPage = await supplier.newPage()
+    customerPage = await customer.newPage()
+    for (const page of [supplierPage, customerPage]) page.setDefaultTimeout(20_000)
+  })
+  afterAll(() => browser.close())
+  afterEach(async ({ task }) => {
+    if (task.result?.state !== 'fail') return
+    await picture(supplierPage, 'request-failed-supplier')
+    await picture(customerPage, 'request-failed-customer')
+  })
+
+  it('the customer asks a supplier for proof of a measuring task by a day', async () => {
+    const page = customerPage
+    await signIn(page, app.customer, 'Mara Lindqvist')
+    await page.getByRole('link', { name: 'Requests' }).first().click()
+    await page.getByRole('link', { name: 'Ask for proof' }).first().click()
+    const field = page.getByRole('combobox', { name: 'Supplier' })
+    await field.focus()
+    await field.pressSequentially('Osmere')
+    await page.getByRole('option', { name: /Osmere Castings/ }).click()
+    await page.getByRole('textbox', { name: /Search part/ }).fill(gauge)
+    await page
+      .getByRole('checkbox', { name: new RegExp(gauge) })
+      .first()
+      .check()
+    expect(await page.getByRole('status').filter({ hasText: '1 measuring task chosen' }).count()).toBe(1)
+    // What is missing is said at its field, and nothing that was chosen is lost.
+    await page.getByRole('button', { name: 'Ask for proof' }).click()
+    await page.getByText('Enter the day by which you want it.').waitFor()
+    await page.getByLabel(/Due by/).fill(inDays(9))
+    await page.getByRole('combobox', { name: 'Occasion' }).press('ArrowDown')
+    await page.getByRole('option', { name: 'yearly' }).click()
+    await page.getByLabel(/should know/).fill(words)
+    await picture(page, 'request-1-ask')
+    await page.getByRole('button', { name: 'Ask for proof' }).click()
+    await page.getByRole('heading', { level: 1, name: /Has Osmere Castings proved/ }).waitFor()
+    await page.getByText('Not yet: the measuring task has no answer.').waitFor()
+    path = /requests\/[0-9a-f-]{36}/.exec(page.url())?.[0] ?? ''
+    expect(path).not.toBe('')
+    await picture(page, 'request-2-asked')
+    expect(await axeFaults(page)).toEqual([])
+  })
+
+  it('the supplier finds it on the front page and in the mail', async () => {
+    const page = supplierPage
+    await signIn(page, app.supplier, 'Kofi Brandt')
+    await page
+      .getByRole('link', { name: /Answer the request/ })
+      .first()
+      .waitFor()
+    await picture(page, 'request-3-front')
+    const link = await vi.waitUntil(
+      async () => {
+        const list = await fetch(`${app.mail}/messages.json?to=kofi.brandt@osmere.example`)
+        const { items } = (await list.json()) as { items: { id: string; subject: string }[] }
+        for (const { id } of items.filter(({ subject }) => subject.startsWith('Asks for proof'))) {
+          const mail = await (await fetch(`${app.mail}/messages/${id}.json`)).text()
+          if (mail.includes(words)) return /https?:[^\s"\\]+requests\/[0-9a-f-]{36}/.exec(mail)?.[0]
+        }
+        return undefined
+      },
+      { timeout: 60_000, interval: 1_000 },
+    )
+    expect(link?.startsWith(app.supplier)).toBe(true)
+    expect(link?.endsWith(path)).toBe(true)
+    await page.goto(link ?? '')
+    await page.getByRole('heading', { level: 1, name: /Have we proved to Brackwell/ }).waitFor()
+    await page.getByText(words).waitFor()
+  })
+
+  it('the supplier prepares the submission from it, and an approver signs', async () => {
+    const page = supplierPage
+    await page.getByRole('button', { name: 'Prepare the submission' }).click()
+    await page.getByRole('button', { name: 'Send for signature' }).first().click()
+    await page.getByRole('dialog').getByRole('button', { name: 'Send for signature' }).click()
+    await page
+      .getByText(/[Ww]aiting for signature|For signature/)
+      .first()
+      .waitFor()
+    const submission = page.url()
+    await signOut(page)
+    await signIn(page, app.supplier, 'Elin Tor')
+    await page.goto(submission)
+    await page.getByRole('button', { name: 'Sign and submit' }).first().click()
+    await page.getByRole('dialog').getByRole('button', { name: 'Sign and submit' }).click()
+    await page
+      .getByText(/Submitted/)
+      .first()
+      .waitFor()
+  })
+
+  it('the customer sees it answered', async () => {
+    const page = customerPage
+    await page.reload()
+    await page.getByText('Everything is answered; 1 waits for the decision.').waitFor()
+    await page
+      .getByRole('link', { name: /^Submission \d+/ })
+      .first()
+      .waitFor()
+    await picture(page, 'request-4-answered')
+    await page.getByRole('link', { name: 'Messages' }).first().click()
+    await page
+      .getByText(/Answered: request \d+/)
+      .first()
+      .waitFor()
+  })
+
+  it('leaves no error in either console, and no fault that axe finds', async () => {
+    expect(errors).toEqual([])
+    for (const page of [supplierPage, customerPage]) expect(await axeFaults(page)).toEqual([])
+  })
+})
