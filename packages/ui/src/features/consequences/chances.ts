@@ -30,9 +30,18 @@ export function meantMargin(rule: Rule): number | null {
 export const steps = (most: number, count: number): number[] =>
   Array.from({ length: count }, (_, at) => (most * at) / (count - 1))
 
+/** The margin a rule was agreed with, to be marked on a plot; null where it has none of its own. */
+export const markedMargin = (rule: Rule): number | null => ('margin' in rule ? rule.margin : null)
+
+/** The bias that matters to a rule at a spread: its margin, or where an index reaches its least value. */
+function tellingBias(rule: Rule, standardDeviation: number): number {
+  if (rule.type !== 'index') return markedMargin(rule) ?? 0
+  return (rule.share * rule.toleranceWidth - rule.least * rule.sigmas * standardDeviation) / 2
+}
+
 /** How far the curves over the bias reach: beyond what matters to any of the rules. */
 export const biasReach = (rules: readonly Rule[], standardDeviation: number): number =>
-  Math.max(2.4 * standardDeviation, ...rules.map((rule) => 1.6 * (meantMargin(rule) ?? 0)))
+  Math.max(2.4 * standardDeviation, ...rules.map((rule) => 1.6 * tellingBias(rule, standardDeviation)))
 
 /** The chances of the three verdicts against the true bias. */
 export function biasCurve(

@@ -10,7 +10,7 @@ import {
 } from '@evenrule/metrology'
 import { describeIncentive, type IncentiveSentence } from '../../strings/incentives'
 import type { Assumptions } from './assumptions'
-import { biasCurve, biasReach, meantMargin, ruleOf, steps } from './chances'
+import { biasCurve, biasReach, markedMargin, meantMargin, ruleOf, steps } from './chances'
 
 /** What one clause does, with its incentives in words. */
 export interface ClauseEffect {
@@ -128,4 +128,4 @@ export const shownMargin = (rules: {
   before: { rule: Rule } | null
   after: { rule: Rule } | null
 }): number | null =>
-  [rules.after, rules.before].map((each) => each && meantMargin(each.rule)).find(Boolean) ?? null
+  [rules.after, rules.before].map((each) => each && markedMargin(each.rule)).find(Boolean) ?? null

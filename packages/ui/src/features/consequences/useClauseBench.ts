@@ -11,7 +11,7 @@ import {
   allowedCurve,
   biasCurve,
   biasReach,
-  meantMargin,
+  markedMargin,
   ruleOf,
   sizesUpTo,
   spreadCurve,
@@ -150,7 +150,7 @@ export function useClauseBench(source: () => BenchInput, entered: AssumptionsVie
     values,
     busy: chunks.busy,
     margin: computed(
-      () => both.map((which) => rules[which].value && meantMargin(rules[which].value)).find(Boolean) ?? null,
+      () => both.map((which) => rules[which].value && markedMargin(rules[which].value)).find(Boolean) ?? null,
     ),
     /** The chance to meet a clause at the bias looked at. */
     chance: (which: Which): number | null => {
