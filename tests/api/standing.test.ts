@@ -292,7 +292,7 @@ describe('a newer revision of a part', () => {
     for (const who of ['approver', 'second'] as const)
       expect(await subjectsFor(who)).toContain(`${part.number} B: 1 acceptance reopened`)
     expect(await listed(part.id)).toMatchObject([
-      { submissionId, revision: 'A', limits: 'same', standing: 'reopened', carriedOverOn: null },
+      { submissionId, revision: 'A', limits: 'same', standing: 'stands', carriedOverOn: null },
     ])
     // The supplier sets its tasks up anew; nothing is shown for them yet.
     await story.by('engineer').call(tasks.takeOverTasks, { partId: part.id })

@@ -2,7 +2,7 @@ import { allows, roles, sides, type EndpointShape, type Permission, type Side } 
 import type { Route } from '../../packages/api/src/server/http/route'
 import { afterAll, beforeAll, beforeEach, describe, expect, it } from 'vitest'
 import type { Person } from '../api/harness'
-import { sampleBody, sampleFile } from './sample-body'
+import { sampleBody, sampleFile, sampleQuery } from './sample-body'
 import { startWorld, type Samples, type World } from './world'
 
 let world: World
@@ -54,7 +54,10 @@ async function call(
   samples: Samples,
   at = samples,
 ) {
-  const request = world.harness.as(side, person).send(endpoint.method, addressOf(endpoint, samples))
+  const request = world.harness
+    .as(side, person)
+    .send(endpoint.method, addressOf(endpoint, samples))
+    .query(sampleQuery(endpoint))
   const body = sampleBody(endpoint, at)
   if (!endpoint.upload) return body === undefined ? request : request.send(body as object)
   const { name, bytes } = sampleFile(endpoint)

@@ -99,6 +99,36 @@ describe('without an organisation set', () => {
   })
 })
 
+describe('the worker', () => {
+  it('sees no row of an organisation without naming it, and of others none when it does', async () => {
+    const worker = new pg.Client({ connectionString: world.harness.urlAs('evenrule_system') })
+    await worker.connect()
+    try {
+      const count = async (org: string | null, table: string) => {
+        await worker.query('begin')
+        if (org) await worker.query(`select set_config('app.org_id', $1, true)`, [org])
+        const { rowCount } = await worker.query(`select from "${table}"`)
+        await worker.query('rollback')
+        return rowCount
+      }
+      const foreign = world.attackers.find(({ name }) => name === 'a foreigner')?.home.id ?? ''
+      for (const table of [
+        'requests',
+        'submissions',
+        'gauges',
+        'relationships',
+        'calibrations',
+        'reminders',
+      ]) {
+        expect([table, await count(null, table), await count(foreign, table)]).toEqual([table, 0, 0])
+        expect([table, await count(world.victims.supplier.id, table)]).not.toEqual([table, 0])
+      }
+    } finally {
+      await worker.end()
+    }
+  })
+})
+
 describe('hostile settings', () => {
   it.each(['nobody', "' or true --", '*', 'null', '{}', '%'])(
     'end in an error, never in rows: %s',
@@ -280,11 +310,13 @@ describe('the other side', () => {
       'gauges',
       'reference_standards',
       'calibrations',
+      'gauge_events',
       'studies',
       'study_data',
       'study_evaluations',
       'study_tasks',
       'submission_studies',
+      'submission_by_hand',
       'submission_notes',
       'files',
     ]) {

@@ -58,6 +58,16 @@ export function sampleBody(endpoint: EndpointShape, samples: Samples): unknown {
   return body
 }
 
+/** The query that an endpoint cannot do without; most need none. */
+export function sampleQuery({ query }: EndpointShape): Record<string, unknown> {
+  if (!query) return {}
+  const { properties = {}, required = [] } = z.toJSONSchema(query, {
+    io: 'input',
+    unrepresentable: 'any',
+  }) as JsonSchema
+  return Object.fromEntries(required.map((name) => [name, valueOf(properties[name] ?? {}, name, known)]))
+}
+
 function valueOf(schema: JsonSchema, name: string, values: Record<string, unknown>): unknown {
   const choices = schema.anyOf ?? schema.oneOf
   if (name in values && !(schema.type === 'array' && typeof values[name] === 'string')) return values[name]
@@ -92,6 +102,6 @@ function valueOf(schema: JsonSchema, name: string, values: Record<string, unknow
 
 /** A file that the endpoint takes: a certificate, or readings. */
 export const sampleFile = ({ path }: EndpointShape): { name: string; bytes: Buffer } =>
-  path.endsWith('/calibrations')
+  /\/(calibrations|certificate|events)$/.test(path)
     ? { name: 'certificate.pdf', bytes: Buffer.from('%PDF-1.7\ncertificate\n%%EOF\n') }
     : { name: 'readings.csv', bytes: Buffer.from('24.001\r\n24.002\r\n') }

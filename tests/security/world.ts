@@ -1,15 +1,23 @@
 import {
   agreements,
+  calibrations,
+  gaugeEvents,
   gauges,
   houseTerms,
+  requests,
+  parts,
   reviews,
   roles,
+  standings,
   submissions,
   type Role,
   type Side,
 } from '@evenrule/api/contract'
+import { openDatabase } from '../../packages/api/src/server/db/database'
+import { tellReminders } from '../../packages/api/src/server/modules/reminders/reminders.service'
 import type { Organisation, Person } from '../api/harness'
 import { clauses, startStory } from '../api/prepared'
+import { reviewRows } from './world.reviews'
 
 /** Ids for the parameters of paths, and for fields of bodies, by their name. */
 export type Samples = Record<string, string>
@@ -58,6 +66,16 @@ export async function startWorld() {
     const { rowVersion: expectedVersion, sha256 } = await story.read('quality', id)
     return { expectedVersion, sha256 }
   }
+  const request = await story.by('quality').call(
+    requests.askForProof,
+    {},
+    {
+      body: {
+        ...{ relationshipId: relationship.id, taskIds: [task.id], dueOn: '2027-03-01' },
+        ...{ occasion: 'yearly', words: 'For the yearly review.' },
+      },
+    },
+  )
   const accepted = await story.submission(task.id, 'submitted')
   await story.by('quality').call(reviews.accept, { submissionId: accepted }, { body: await seen(accepted) })
   const challenged = await story.submission(task.id, 'submitted')
@@ -66,7 +84,51 @@ export async function startWorld() {
     reviews.openChallenge,
     { submissionId: challenged },
     {
-      body: { expectedVersion, clauseKey: 'bias/mean', reasonKind: 'result', text: 'Is it still so?' },
+      body: {
+        ...{ expectedVersion, target: { kind: 'clause', clauseKey: 'bias/mean' }, reasonKind: 'verdict' },
+        ...{ text: 'Is it still so?', dueOn: '2026-12-01' },
+      },
+    },
+  )
+  // What the acceptances follow from: an event, a reinstatement, a carry-over, a calibration without a certificate.
+  const later = () => harness.moveClock(new Date(harness.now().getTime() + 60_000))
+  later()
+  await story
+    .by('engineer')
+    .call(
+      gaugeEvents.reportGaugeEvent,
+      { gaugeId: task.gauge.id },
+      { body: { kind: 'repaired', happenedOn: '2026-11-02', words: 'A new guide.' } },
+    )
+  later()
+  await story
+    .by('approves')
+    .call(standings.reinstate, { submissionId: accepted }, { body: { words: 'Shown by a master.' } })
+  const revised = await story.ready()
+  const carried = await story.submission(revised.id, 'submitted')
+  await story.by('quality').call(reviews.accept, { submissionId: carried }, { body: await seen(carried) })
+  const { currentRevision } = await story
+    .by('quality')
+    .call(
+      parts.addRevision,
+      { partId: revised.part.id },
+      { body: { label: 'B', copyCharacteristics: true, expectedVersion: 1 } },
+    )
+  await story
+    .by('approves')
+    .call(
+      standings.carryOver,
+      { partId: revised.part.id },
+      { body: { revisionId: currentRevision.id, submissionIds: [carried] } },
+    )
+  const { id: calibrationId } = await story.by('engineer').call(
+    calibrations.addGaugeCalibration,
+    { gaugeId: revised.gauge.id },
+    {
+      body: {
+        ...{ certificateNumber: 'late', calibratedOn: '2026-10-01', dueOn: '2027-10-01' },
+        foundWithinLimits: true,
+      },
     },
   )
   const other = await story.ready()
@@ -102,11 +164,17 @@ export async function startWorld() {
   await story
     .by('engineer')
     .call(agreements.commentOnRound, open, { body: { round: 1, about, text: 'March is early.' } })
-  await story
-    .by('engineer')
-    .call(agreements.markAccepted, open, {
-      body: { round: 1, items: [{ about, sha256: effective?.sha256 }] },
-    })
+  await story.by('engineer').call(agreements.markAccepted, open, {
+    body: { round: 1, items: [{ about, sha256: effective?.sha256 }] },
+  })
+
+  // The worker's chore, under a clock that runs ahead to the days before the request is due.
+  const system = openDatabase(harness.urlAs('evenrule_system'), 1)
+  const ahead = () => new Date('2027-02-25T09:00:00.000Z')
+  await tellReminders({ database: system.database, logger: harness.services.logger, clock: ahead })
+  await system.pool.end()
+
+  const ofReviews = await reviewRows(story)
 
   /** The first row of a query, as samples. */
   const one = async (text: string, ...values: unknown[]): Promise<Samples> => {
@@ -122,13 +190,16 @@ export async function startWorld() {
     characteristicId: task.characteristic.id,
     taskId: task.id,
     gaugeId: task.gauge.id,
+    calibrationId,
     standardId: task.standard.id,
     studyId: task.study.id,
     revision: '1',
+    requestId: request.id,
     submissionId: challenged,
     userId: story.people.reader.id,
     chainId: relationship.id,
     houseTermsId,
+    ...ofReviews,
     ...(await one(`select id as "challengeId" from challenges where submission_id = $1`, challenged)),
     ...(await one(`select id as "fileId" from files where org_id = $1 limit 1`, supplier.id)),
     ...(await one(

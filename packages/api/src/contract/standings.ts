@@ -86,6 +86,7 @@ export const carryOverSchema = z.object({
   limits: z.enum(limitsComparisons),
   /** Of the current revision; null where it has none of that number. */
   characteristicId: uuid.nullable(),
+  /** How it stands today apart from the newer revisions: a suspended one stays so when it is carried over. */
   standing: z.enum(standingStates),
   carriedOverOn: calendarDate.nullable(),
   carriedOverBy: z.string().nullable(),

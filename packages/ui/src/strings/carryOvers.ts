@@ -1,5 +1,6 @@
 import type { standings } from '@evenrule/api/contract'
 import { formatCount, formatDate } from '../format'
+import { standingStateWords } from './standings'
 
 type Row = standings.CarryOver
 
@@ -23,25 +24,31 @@ export const carryOverWords = {
   signIn: 'Sign in again',
 } as const
 
-/** How an earlier acceptance stands for the current revision. */
-export function carryOverState({ limits, carriedOverOn, carriedOverBy }: Row): string {
+/** How an earlier acceptance stands for the current revision, and what else stops it. */
+export function carryOverState({ limits, carriedOverOn, carriedOverBy, standing }: Row): string {
+  const besides = standing === 'stands' ? '' : `; it is ${standingStateWords[standing]} besides`
   if (carriedOverOn !== null)
-    return `carried over on ${formatDate(carriedOverOn)}${carriedOverBy ? ` by ${carriedOverBy}` : ''}`
-  return {
+    return `carried over on ${formatDate(carriedOverOn)}${carriedOverBy ? ` by ${carriedOverBy}` : ''}${besides}`
+  const reopened: Record<Row['limits'], string> = {
     same: 'reopened; its limits did not change',
     differ: 'reopened; its limits changed, new proof is needed',
     missing: 'reopened; the revision has no such characteristic',
-  }[limits]
+  }
+  return limits === 'same' ? reopened.same + besides : reopened[limits]
 }
+
+/** Whether an earlier acceptance covers the current revision today. */
+export const holdsForRevision = ({ carriedOverOn, standing }: Row): boolean =>
+  carriedOverOn !== null && standing === 'stands'
 
 /** How much of what was accepted holds for the current revision: the decisive part, and the rest. */
 export function carryOverAnswer(revision: string, rows: readonly Row[]): { strong: string; rest: string } {
-  const carried = rows.filter(({ carriedOverOn }) => carriedOverOn !== null).length
+  const carried = rows.filter(holdsForRevision).length
   const open = rows.filter(({ carriedOverOn }) => carriedOverOn === null)
   const same = open.filter(({ limits }) => limits === 'same').length
   const other = open.length - same
   const strong =
-    open.length === 0
+    carried === rows.length
       ? `All of it holds for revision ${revision}.`
       : carried === 0
         ? `None of it holds for revision ${revision} yet.`

@@ -58,7 +58,7 @@ describe('what reporting an event will do', () => {
 
 describe('what was accepted before a revision', () => {
   const row = (more: object) =>
-    ({ limits: 'same', carriedOverOn: null, carriedOverBy: null, ...more }) as Parameters<
+    ({ limits: 'same', carriedOverOn: null, carriedOverBy: null, standing: 'stands', ...more }) as Parameters<
       typeof carryOverState
     >[0]
 
@@ -80,5 +80,8 @@ describe('what was accepted before a revision', () => {
       'carried over on 10 Nov 2026 by Veit Sahm',
     )
     expect(carryOverState(row({ limits: 'missing' }))).toContain('no such characteristic')
+    expect(carryOverState(row({ standing: 'suspended' }))).toBe(
+      'reopened; its limits did not change; it is suspended besides',
+    )
   })
 })

@@ -1,3 +1,4 @@
+import { standingOf } from '../../../contract/standing'
 import type { CarryOver } from '../../../contract/standings'
 import { dayIn } from '../../calendar'
 import type { Tenant } from '../../db/tenant'
@@ -8,9 +9,8 @@ import type { PartRow } from '../parts/parts.repository'
 import { selectNewestRevisions, type RevisionRow } from '../parts/revisions.repository'
 import { relationshipById } from '../relationships/relationships.lookup.service'
 import { selectEarlierAcceptances, type EarlierAcceptance } from './standing.carry.repository'
-import { compareLimits } from './standing.facts'
+import { compareLimits, standingFactsOf } from './standing.facts'
 import { selectAccepted, selectCarryOvers } from './standing.repository'
-import { standingsOf } from './standing.service'
 
 /** The revision of a part that counts now. */
 export async function currentOf(tenant: Tenant, part: PartRow): Promise<RevisionRow> {
@@ -31,7 +31,13 @@ export async function earlierOf(tenant: Tenant, part: PartRow): Promise<Earlier[
   const { timeZone } = await relationshipById(tenant, part.relationshipId)
   const now = await selectActiveOfRevisions(tenant, [current.id])
   const accepted = new Map((await selectAccepted(tenant, ids)).map((each) => [each.submissionId, each]))
-  const standings = await standingsOf(tenant, ids)
+  // A carry-over lifts nothing but the revision, so what else stops an acceptance is told beside it.
+  const standings = new Map(
+    (await standingFactsOf(tenant, ids)).map(({ submissionId, facts }) => [
+      submissionId,
+      standingOf({ ...facts, revisions: [] }, dayIn(timeZone, tenant.now)),
+    ]),
+  )
   const carried = (await selectCarryOvers(tenant, ids)).filter(({ revisionId }) => revisionId === current.id)
   const names = await namesOfPeople(
     tenant,
