@@ -7,7 +7,13 @@ import {
   type SubmissionMove,
   type SubmissionPrecondition,
 } from './submission'
-import { challengeMove, reviewState } from './challenge'
+import {
+  challengeMove,
+  challengeMovesNamed,
+  reviewState,
+  type ChallengeMove,
+  type ChallengePrecondition,
+} from './challenge'
 
 const choose = (
   name: SubmissionMove['name'],
@@ -22,10 +28,17 @@ const decidable = ['as-seen', 'challenges-settled', 'no-newer-accepted'] as cons
 
 describe('of moves with one name', () => {
   it('the conditions tell which it is', () => {
-    expect(choose('accept', 'submitted', [...decidable, 'not-safety-class']).move?.to).toBe('accepted')
-    expect(choose('accept', 'submitted', [...decidable, 'safety-class']).move?.to).toBe(
+    expect(
+      choose('accept', 'submitted', [...decidable, 'criteria-agreed', 'not-safety-class']).move?.to,
+    ).toBe('accepted')
+    expect(choose('accept', 'submitted', [...decidable, 'criteria-agreed', 'safety-class']).move?.to).toBe(
       'awaiting-second-person',
     )
+    expect(
+      choose('accept', 'submitted', [...decidable, 'no-criteria-agreed', 'not-safety-class']).move,
+    ).toMatchObject({
+      ...{ to: 'awaiting-other-side', permission: 'reviews.approve' },
+    })
   })
   it('the most particular counts where several may be made', () => {
     expect(choose('send-back', 'awaiting-second-person', ['reason-given']).move?.to).toBe('answered')
@@ -34,7 +47,7 @@ describe('of moves with one name', () => {
     ).toBe('submitted')
   })
   it('what keeps the nearest one back is told, and nothing where none may start', () => {
-    expect(choose('accept', 'answered', ['as-seen', 'safety-class'])).toEqual({
+    expect(choose('accept', 'answered', ['as-seen', 'criteria-agreed', 'safety-class'])).toEqual({
       move: null,
       refused: 'challenges-settled',
       lacking: ['challenges-settled', 'no-newer-accepted'],
@@ -44,9 +57,9 @@ describe('of moves with one name', () => {
 })
 
 describe('the table of a submission’s moves', () => {
-  it('has one row for each name, start and end', () => {
-    const rows = submissionMoves.flatMap(({ name, from, to }) =>
-      (from.length ? from : ['nothing']).map((start) => `${name}: ${start} → ${to}`),
+  it('has one row for each name, start, end and permission', () => {
+    const rows = submissionMoves.flatMap(({ name, from, to, permission }) =>
+      (from.length ? from : ['nothing']).map((start) => `${name}: ${start} → ${to} by ${permission}`),
     )
     expect(new Set(rows).size).toBe(rows.length)
   })
@@ -58,6 +71,15 @@ describe('the table of a submission’s moves', () => {
 })
 
 describe('challenges', () => {
+  it('are settled by what the last answer was', () => {
+    const settle = (fact: ChallengePrecondition) =>
+      chooseMove<ChallengePrecondition, ChallengeMove>(challengeMovesNamed('settle', 'answered'), {
+        'submission-under-review': true,
+        [fact]: true,
+      }).move?.to
+    expect(settle('corrected')).toBe('resolved-by-correction')
+    expect(settle('not-corrected')).toBe('resolved-by-evidence')
+  })
   it('begin by being opened and end in no further move', () => {
     expect(challengeMove('open', null)?.to).toBe('open')
     expect(challengeMove('answer', 'answered')).toBeUndefined()
@@ -66,6 +88,8 @@ describe('challenges', () => {
   it.each([
     [[], 'submitted'],
     [[{ state: 'open', answered: true }], 'challenged'],
+    [[{ state: 'unresolved-proposed', answered: true }], 'challenged'],
+    [[{ state: 'unresolved', answered: true }], 'answered'],
     [[{ state: 'withdrawn', answered: false }], 'submitted'],
     [[{ state: 'withdrawn', answered: true }], 'answered'],
     [
