@@ -84,7 +84,7 @@ export const acceptanceWords = {
 export const commentWords = {
   comment: 'Comment',
   count: (count: number) => formatCount(count, 'comment'),
-  label: (what: string) => `Comments: ${what}`,
+  of: (what: string) => `: ${what}`,
   hide: 'Hide comments',
   none: 'Nobody has commented on this yet.',
   field: (other: string) => `Comment for ${other}`,
