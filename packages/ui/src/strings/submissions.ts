@@ -301,3 +301,20 @@ export const termsWords = {
     no: 'Whoever took the readings may not sign.',
   },
 } as const
+
+/** The parts of a submission's page, by their places in the address. */
+export const indexWords = {
+  label: 'On this page',
+  parts: {
+    results: 'results',
+    standing: 'does it stand',
+    conditions: 'what must follow',
+    challenges: 'challenges',
+    readings: 'readings',
+    'what-if': 'what if',
+    recompute: 'recompute',
+    signatures: 'signatures',
+    frozen: 'what is frozen',
+    record: 'what happened',
+  },
+} as const
