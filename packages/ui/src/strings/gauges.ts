@@ -53,6 +53,7 @@ export const calibrationWords = {
   outsideWords: 'What was found',
   outsideWordsHint: 'Optional. The customers concerned read it; without it they read the certificate number.',
   attach: 'Add certificate',
+  attachTo: (number: string) => `Add certificate ${number}`,
   attachTitle: (number: string) => `Add the file of certificate ${number}`,
   certificateMissing: 'Choose the certificate.',
   search: 'Search certificate or laboratory',
