@@ -85,18 +85,20 @@ describe('a challenge of two readings, its correction, and an acceptance whose c
     await dialog.getByRole('checkbox', { name: /^3 / }).check()
     expect(await dialog.getByLabel('Numbers of the readings').inputValue()).toBe('3, 11')
     expect(await dialog.getByRole('checkbox', { name: /^11 / }).isChecked()).toBe(true)
-    expect(await dialog.locator('.frame').count()).toBe(2)
+    expect(await dialog.locator('.er-plot .frame').count()).toBe(2)
     await choose(dialog, 'Reason', /not taken as planned/)
     await dialog.getByLabel('What is wrong with it').fill('Both were taken after the fixture was set anew.')
     await picture(page, 'challenge-1-dialog')
     await dialog.getByRole('button', { name: 'Send the challenge' }).click()
+    await dialog.waitFor({ state: 'hidden' })
     await page.getByRole('heading', { name: /^Challenge 1: readings 3 and 11 of study/ }).waitFor()
   })
 
   it('shows both marked in every plot and table, and no decision before it is settled', async () => {
     const page = customerPage
-    expect(await page.locator('.frame').count()).toBe(4)
-    for (const show of await page.getByRole('button', { name: 'Show the numbers' }).all()) await show.click()
+    expect(await page.locator('.er-plot .frame').count()).toBe(4)
+    for (let plot = 0; plot < 2; plot += 1)
+      await page.getByRole('button', { name: 'Show the numbers' }).first().click()
     expect(await page.getByRole('cell', { name: 'challenge 1', exact: true }).count()).toBe(4)
     await page.getByText(/You cannot decide on it yet: a challenge waits for the supplier’s answer/).waitFor()
     expect(await page.getByRole('button', { name: 'Accept', exact: true }).isDisabled()).toBe(true)
@@ -123,20 +125,25 @@ describe('a challenge of two readings, its correction, and an acceptance whose c
     await picture(page, 'challenge-4-difference')
     await dialog.getByRole('button', { name: 'Ask an approver to sign it' }).click()
     await dialog.getByText(/approvers are told/).waitFor()
+    await dialog.getByRole('button', { name: 'Close' }).click()
+    await dialog.waitFor({ state: 'hidden' })
   })
 
   /** The readings as they were submitted, the two in question otherwise. */
   async function readingsCorrected(): Promise<string> {
     const page = customerPage
     const texts = await page.locator('.numbers').last().locator('tbody tr td:nth-child(3)').allInnerTexts()
-    const places = texts[0]?.split('.')[1]?.length ?? 0
-    const others = texts.filter((_text, place) => !corrected.at.includes(place)).map(Number)
+    // The decimal sign stays as it was entered: what is written otherwise counts as changed.
+    const sign = texts[0]?.includes(',') ? ',' : '.'
+    const places = texts[0]?.split(sign)[1]?.length ?? 0
+    const valueOf = (text: string) => Number(text.replace(',', '.'))
+    const write = (value: number) => value.toFixed(places).replace('.', sign)
+    const others = texts.filter((_text, place) => !corrected.at.includes(place)).map(valueOf)
     const usual = others.reduce((sum, value) => sum + value, 0) / others.length
     // Close to the others, and never the text that stood there.
-    corrected.texts = corrected.at.map((place) => {
-      const next = usual.toFixed(places)
-      return next === texts[place] ? (usual + 10 ** -places).toFixed(places) : next
-    })
+    corrected.texts = corrected.at.map((place) =>
+      write(usual) === texts[place] ? write(usual + 10 ** -places) : write(usual),
+    )
     return texts.map((text, place) => corrected.texts[corrected.at.indexOf(place)] ?? text).join('\n')
   }
 
