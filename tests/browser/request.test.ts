@@ -73,7 +73,7 @@ describe('a request for proof, from the question to the answer', () => {
     const page = supplierPage
     await signIn(page, app.supplier, 'Kofi Brandt')
     await page
-      .getByRole('link', { name: /Answer the request/ })
+      .getByRole('link', { name: /Prove what is asked for/ })
       .first()
       .waitFor()
     await picture(page, 'request-3-front')

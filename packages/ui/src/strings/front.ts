@@ -65,7 +65,7 @@ export const frontWords = {
     'agree-one-off': 'Agree to the one-off acceptance',
     'report-condition': 'Fulfil the condition',
     'confirm-condition': 'Confirm the condition',
-    'answer-request': 'Answer the request',
+    'answer-request': 'Prove what is asked for',
     'sign-submission': 'Sign the submission',
     'finish-submission': 'Finish the draft',
     'sign-criteria': 'Sign criteria',

@@ -56,6 +56,6 @@ export function subjectOf({ act, partNumber, characteristic }: Waiting): string 
 
 /** Clauses met, or what else is counted for the act. */
 export function countOf({ act, clausesMet, clausesTotal, count }: Waiting): string {
-  if (clausesMet !== null && clausesTotal !== null) return words.ofClauses(clausesMet, clausesTotal)
+  if (clausesMet !== null && clausesTotal) return words.ofClauses(clausesMet, clausesTotal)
   return count === null ? '' : (words.counted[act]?.(count) ?? '')
 }
