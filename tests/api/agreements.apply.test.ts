@@ -402,6 +402,22 @@ describe('limits', () => {
     expect(refused.body).toMatchObject({ status: 409, code: 'spread-frozen' })
     expect(refused.body.detail).toContain(`Agreement ${agreed.number} `)
     expect((await widen(two.id, 2)).status).toBe(200)
+    // It stands in for the width of a one-sided tolerance too, where that was agreed.
+    const three = await world.characteristic(part, 3, { ...spread, lowerLimit: null, nominal: null })
+    const baseline: Clause = {
+      type: 'bias-equivalence',
+      parameters: {
+        margin: { base: 'tolerance', share: 0.1, baseline: { kind: 'process' } },
+        confidence: 0.95,
+      },
+    }
+    await world.agree({ ...body, characteristicId: three.id, clauses: [baseline] })
+    const upper = { ...limits, lowerLimit: null, nominal: null, upperLimit: '24.025' }
+    const again = await world
+      .as(engineer)
+      .send('put', `/organisations/${world.supplier.id}/characteristics/${three.id}`)
+      .send({ ...upper, number: 3, processStandardDeviation: '0.040', expectedVersion: 1 })
+    expect(again.body).toMatchObject({ status: 409, code: 'spread-frozen' })
   })
 
   /** Work in a transaction of the customer that stays open until `release`. */

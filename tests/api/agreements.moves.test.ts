@@ -206,7 +206,7 @@ it('never leaves its table of moves, offers what then succeeds, and applies noth
   // The walk is worth something only where it gets about.
   for (const name of agreementMoveNames) expect([...reached], name).toContain(name)
   expect([...reached]).toContain('in force')
-}, 120_000)
+}, 300_000)
 
 interface Scope {
   relationshipId: string

@@ -1,6 +1,6 @@
 import { afterAll, beforeAll, describe, expect, it } from 'vitest'
 import { agreements, noTerms, type EndpointShape } from '@evenrule/api/contract'
-import { agreementComments } from '../../packages/api/src/server/modules/agreements/agreements.table'
+import { agreementComments } from '../../packages/api/src/server/modules/agreements/agreements.remarks.table'
 import {
   equivalence,
   newest,

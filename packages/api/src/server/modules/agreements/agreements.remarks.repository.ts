@@ -3,7 +3,7 @@ import type { About } from '../../../contract/agreements-rounds'
 import type { Tenant } from '../../db/tenant'
 import type { VersionRow } from './agreements.repository'
 import { ofVersions, type RoundRow } from './agreements.rounds.repository'
-import { agreementComments, agreementMarks } from './agreements.table'
+import { agreementComments, agreementMarks } from './agreements.remarks.table'
 
 export type CommentRow = typeof agreementComments.$inferSelect
 export type MarkRow = typeof agreementMarks.$inferSelect

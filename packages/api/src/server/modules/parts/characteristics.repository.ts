@@ -40,7 +40,7 @@ const submittedWith = sql<number | null>`(
 const frozenBy = signedFor()
 /** On the spread of the process those rest of which a clause takes a share of it. */
 const spreadFrozenBy = signedFor(
-  sql`jsonb_path_exists(v.text::jsonb, '$.clauses[*].parameters.** ? (@.base == "process")')`,
+  sql`jsonb_path_exists(v.text::jsonb, '$.clauses[*].parameters.** ? (@.base == "process" || @.kind == "process")')`,
 )
 
 const fields = {
