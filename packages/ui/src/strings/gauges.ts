@@ -37,6 +37,7 @@ export const calibrationWords = {
   dueIn: (when: string) => `due ${when}`,
   until: (day: string) => `until ${day}`,
   add: 'Enter calibration',
+  addAndSuspend: (count: number) => `Enter it and suspend ${formatCount(count, 'acceptance')}`,
   addTitle: (code: string) => `Enter a calibration of ${code}`,
   certificateNumber: 'Certificate number',
   laboratory: 'Laboratory',
