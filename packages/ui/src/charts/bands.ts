@@ -86,13 +86,20 @@ function labelIn(
   const half = textWidth(text, size) / 2 + 4
   let inside: { room: number; x: number; y: number } | null = null
   let widest: { room: number; x: number; y: number } | null = null
-  for (const [at, { x, y }] of lower.entries()) {
+  // Every few points are places enough; all of them bound the room.
+  const stride = Math.ceil(lower.length / 40)
+  for (let at = 0; at < lower.length; at += stride) {
+    const { x, y } = lower[at]!
     const top = upper[at]!.y
     if (!widest || y - top > widest.room) widest = { room: y - top, x, y: (y + top) / 2 }
     if (x - half < left || x + half > right) continue
-    const under = [...lower.keys()].filter((index) => Math.abs(lower[index]!.x - x) <= half)
-    const floor = Math.min(...under.map((index) => lower[index]!.y))
-    const ceiling = Math.max(...under.map((index) => upper[index]!.y))
+    let floor = Infinity
+    let ceiling = -Infinity
+    for (const [index, point] of lower.entries()) {
+      if (Math.abs(point.x - x) > half) continue
+      floor = Math.min(floor, point.y)
+      ceiling = Math.max(ceiling, upper[index]!.y)
+    }
     const room = floor - ceiling
     if (room > leastRoom && (!inside || room > inside.room)) inside = { room, x, y: (floor + ceiling) / 2 }
   }

@@ -35,12 +35,11 @@ export const consequenceWords = {
     `${formatNumber(readings)} readings, spread ${formatNumber(spread, { unit })}`,
   spread: (spread: number, unit: Unit) => `spread ${formatNumber(spread, { unit })}`,
   atReadings: (readings: number) => `${formatNumber(readings)} readings`,
-  atTrueBias: (bias: number, unit: Unit) =>
-    bias === 0 ? 'without bias' : `at a true bias of ${biasText(bias, unit)}`,
   rewards: 'Does the clause reward the right thing?',
-  atBias: (bias: number, unit: Unit) => `at a true bias of ${biasText(bias, unit)}`,
+  atBias: (bias: number, unit: Unit) =>
+    bias === 0 ? 'without bias' : `at a true bias of ${biasText(bias, unit)}`,
   atBiasAndSpread: (bias: number, spread: number, unit: Unit) =>
-    `at a true bias of ${biasText(bias, unit)} and a spread of ${biasText(spread, unit)}`,
+    `${bias === 0 ? 'without bias' : `at a true bias of ${biasText(bias, unit)}`} and with a spread of ${biasText(spread, unit)}`,
   moreReadingsHurt: (rule: string, before: string, after: string) =>
     `More readings can make the ${rule} harder to meet: ${before} → ${after} with twice as many.`,
   readings: 'Planned readings',

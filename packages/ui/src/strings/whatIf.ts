@@ -60,6 +60,7 @@ export const whatIfWords = {
     different === 0
       ? 'No clause would come out differently.'
       : `${formatNumber(different)} of ${formatCount(total, 'clause')} would come out differently.`,
+  corrected: 'The readings it was tried on are not those that stand here: they have been corrected.',
   pair: (subject: string) => `${subject}: as it stands and under the what-if`,
   engine: (version: string, hash: string) => `Computed by engine ${version}, SHA-256 ${hash}…`,
 } as const
