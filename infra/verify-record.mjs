@@ -30,4 +30,5 @@ try {
   main()
 } catch (error) {
   fail(error)
+  process.exitCode = 2
 }

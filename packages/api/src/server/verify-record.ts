@@ -27,8 +27,8 @@ function lineOf({ name, sound, last, broken }: CheckedChain): string {
   return `whole   ${name}: ${events}, last hash ${last?.hash ?? 'none'}${last ? ` of ${last.at}` : ''}`
 }
 
-const textLine = ({ submissionId, number, revision, fault }: CheckedText): string =>
-  `BROKEN  submission ${number ?? submissionId}, revision ${revision} (${submissionId}): ${fault ?? ''}`
+const textLine = ({ name, revision, fault }: CheckedText): string =>
+  `BROKEN  ${name}, revision ${revision}: ${fault ?? ''}`
 
 async function main(): Promise<number> {
   const url = process.env.MIGRATOR_DATABASE_URL

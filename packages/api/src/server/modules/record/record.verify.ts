@@ -1,6 +1,6 @@
 import { asc, sql } from 'drizzle-orm'
 import { contentOf } from '../../../contract/submission-content'
-import { checkSubmission } from '../../../contract/submission-check'
+import { checkSubmission, type ClauseProblem } from '../../../contract/submission-check'
 import type { RecordCheck } from '../../../contract/record'
 import type { Database, Transaction } from '../../db/database'
 import type { Engines } from '../../integrations/engines'
@@ -16,7 +16,8 @@ export interface CheckedChain extends RecordCheck {
 
 export interface CheckedText {
   submissionId: string
-  number: number | null
+  /** What people call it: its number and whose it is; its id where the text cannot be read any more. */
+  name: string
   revision: number
   evaluations: number
   /** What differs, in short; null where everything is equal. */
@@ -85,12 +86,30 @@ async function checkTexts(tx: Transaction, engines: Engines): Promise<CheckedTex
     )
     checked.push({
       ...{ submissionId: frozen.submissionId, revision: frozen.revision },
-      number: contentOf(frozen.text)?.number ?? null,
+      name: nameOf(frozen),
       evaluations: evaluations.length,
       fault: check.equal ? null : faultIn(check),
     })
   }
   return checked
+}
+
+function nameOf({ text, submissionId }: { text: string; submissionId: string }): string {
+  const content = contentOf(text)
+  if (!content) return `submission ${submissionId}`
+  const { number, relationship } = content
+  return `submission ${number} of ${relationship.supplier.name} → ${relationship.customer.name}`
+}
+
+const problemWords: Record<ClauseProblem, string> = {
+  missing: 'is gone',
+  'not-in-text': 'is not in the signed text',
+  'input-altered': 'has another input than was signed',
+  'output-altered': 'has another output than was signed',
+  'verdict-altered': 'shows another verdict than was computed',
+  'engine-unavailable': 'cannot be recomputed: the engine that made it is not here',
+  'engine-altered': 'cannot be recomputed: its engine is not the one that was released',
+  'recomputed-differs': 'gives another result when it is computed again',
 }
 
 function faultIn(check: Awaited<ReturnType<typeof checkSubmission>>): string {
@@ -100,6 +119,7 @@ function faultIn(check: Awaited<ReturnType<typeof checkSubmission>>): string {
   const data = check.data.find(({ equal }) => !equal)
   if (data) return `the readings of ${data.study} were changed`
   const clause = check.clauses.find(({ equal }) => !equal)
-  if (clause) return `the evaluation of ${clause.clauseKey}: ${clause.problem ?? 'differs'}`
+  if (clause)
+    return `the evaluation of ${clause.clauseKey} ${clause.problem ? problemWords[clause.problem] : 'differs'}`
   return 'it names another text as the one it corrects'
 }
