@@ -81,6 +81,21 @@ function transitionPoints(t: number, shift: number, left: number, right: number,
 }
 
 /**
+ * The tail on the side of a chance that is sought: the lower one up to one half, the upper one above. A clearly smaller
+ * tail is integrated alone, which is half the work; near one half it is the complement of the smaller one.
+ */
+function smallTail(p: number): (t: number, df: number, noncentrality: number) => number {
+  const useLower = p <= 0.5
+  if (Math.min(p, 1 - p) > 0.4) {
+    return (t, df, noncentrality) => {
+      const { lower, upper } = noncentralTTails(t, df, noncentrality)
+      return useLower ? lower : upper
+    }
+  }
+  return useLower ? below : (t, df, noncentrality) => below(-t, df, -noncentrality)
+}
+
+/**
  * Quantile of the noncentral t distribution for a chance strictly between 0 and 1. Starts from the normal
  * approximation with the mean and spread of (Z + noncentrality)/V.
  */
@@ -88,10 +103,9 @@ export function noncentralTQuantile(p: number, df: number, noncentrality: number
   if (noncentrality === 0) return tQuantile(p, df)
   const useLower = p <= 0.5
   const target = ln(useLower ? p : 1 - p)
-  const gap = (t: number): number => {
-    const tails = noncentralTTails(t, df, noncentrality)
-    return useLower ? ln(tails.lower) - target : target - ln(tails.upper)
-  }
+  const tail = smallTail(p)
+  const gap = (t: number): number =>
+    useLower ? ln(tail(t, df, noncentrality)) - target : target - ln(tail(t, df, noncentrality))
   const width = Math.sqrt(1 + (0.5 * noncentrality * noncentrality) / df)
   return findRisingRoot(gap, noncentrality + normalQuantile(p) * width, 0.2 * width)
 }
@@ -105,10 +119,9 @@ export function noncentralityAt(t: number, df: number, p: number): number {
   if (Math.abs(t) > 1e7) return t * Math.sqrt(chiSquareQuantile(t > 0 ? 1 - p : p, df) / df)
   const useLower = p <= 0.5
   const target = ln(useLower ? p : 1 - p)
-  const gap = (noncentrality: number): number => {
-    const tails = noncentralTTails(t, df, noncentrality)
-    return useLower ? target - ln(tails.lower) : ln(tails.upper) - target
-  }
+  const tail = smallTail(p)
+  const gap = (noncentrality: number): number =>
+    useLower ? target - ln(tail(t, df, noncentrality)) : ln(tail(t, df, noncentrality)) - target
   const width = Math.sqrt(1 + (0.5 * t * t) / df)
   return findRisingRoot(gap, t - normalQuantile(p) * width, 0.2 * width, 1e-13)
 }

@@ -80,7 +80,8 @@ describe('bias from repeated readings', () => {
         expect(other.withUncertainty.insideMargin).toBe(one.withUncertainty.insideMargin)
         expect(other.warnings.map(({ code }) => code)).toEqual(one.warnings.map(({ code }) => code))
       }),
-      runs(12),
+      // Its indices make it the slowest of the properties.
+      { seed: 12, numRuns: 150 },
     )
   })
 

@@ -9658,14 +9658,22 @@ function transitionPoints(t, shift, left, right, width) {
   }
   return points;
 }
+function smallTail(p) {
+  const useLower = p <= 0.5;
+  if (Math.min(p, 1 - p) > 0.4) {
+    return (t, df, noncentrality) => {
+      const { lower, upper } = noncentralTTails(t, df, noncentrality);
+      return useLower ? lower : upper;
+    };
+  }
+  return useLower ? below : (t, df, noncentrality) => below(-t, df, -noncentrality);
+}
 function noncentralTQuantile(p, df, noncentrality) {
   if (noncentrality === 0) return tQuantile(p, df);
   const useLower = p <= 0.5;
   const target = (0, import_math_base_special_ln7.default)(useLower ? p : 1 - p);
-  const gap = (t) => {
-    const tails = noncentralTTails(t, df, noncentrality);
-    return useLower ? (0, import_math_base_special_ln7.default)(tails.lower) - target : target - (0, import_math_base_special_ln7.default)(tails.upper);
-  };
+  const tail = smallTail(p);
+  const gap = (t) => useLower ? (0, import_math_base_special_ln7.default)(tail(t, df, noncentrality)) - target : target - (0, import_math_base_special_ln7.default)(tail(t, df, noncentrality));
   const width = Math.sqrt(1 + 0.5 * noncentrality * noncentrality / df);
   return findRisingRoot(gap, noncentrality + normalQuantile(p) * width, 0.2 * width);
 }
@@ -9673,10 +9681,8 @@ function noncentralityAt(t, df, p) {
   if (Math.abs(t) > 1e7) return t * Math.sqrt(chiSquareQuantile(t > 0 ? 1 - p : p, df) / df);
   const useLower = p <= 0.5;
   const target = (0, import_math_base_special_ln7.default)(useLower ? p : 1 - p);
-  const gap = (noncentrality) => {
-    const tails = noncentralTTails(t, df, noncentrality);
-    return useLower ? target - (0, import_math_base_special_ln7.default)(tails.lower) : (0, import_math_base_special_ln7.default)(tails.upper) - target;
-  };
+  const tail = smallTail(p);
+  const gap = (noncentrality) => useLower ? target - (0, import_math_base_special_ln7.default)(tail(t, df, noncentrality)) : (0, import_math_base_special_ln7.default)(tail(t, df, noncentrality)) - target;
   const width = Math.sqrt(1 + 0.5 * t * t / df);
   return findRisingRoot(gap, t - normalQuantile(p) * width, 0.2 * width, 1e-13);
 }
