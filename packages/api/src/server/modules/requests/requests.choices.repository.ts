@@ -8,12 +8,19 @@ import { characteristics, measuringTasks, parts } from '../parts/parts.table'
 import { fromTasks, ownTasks } from '../parts/tasks.repository'
 import { submissions } from '../submissions/submissions.table'
 
-const hasAccepted = sql<boolean>`exists (select 1 from ${submissions} s
+/** Whether an accepted submission of the task stands; `fallen` are the accepted ones that do not. */
+const hasProof = (fallen: readonly string[]) => sql<boolean>`exists (select 1 from ${submissions} s
   where s.relationship_id = ${measuringTasks.relationshipId} and s.task_id = ${measuringTasks.id}
-    and ${inArray(sql`s.state`, [...acceptedStates])})`
+    and ${inArray(sql`s.state`, [...acceptedStates])}
+    and s.id <> all (${sql.param([...fallen])}::uuid[]))`
 
-/** One page of a supplier's active tasks; those without an accepted submission first, unless asked otherwise. */
-export async function selectChoices(tenant: Tenant, query: QueryOf<typeof listRequestChoices>) {
+/** One page of a supplier's active tasks; those without proof that stands first, unless asked otherwise. */
+export async function selectChoices(
+  tenant: Tenant,
+  query: QueryOf<typeof listRequestChoices>,
+  fallen: readonly string[],
+) {
+  const hasAccepted = hasProof(fallen)
   const { gaugeCode, gaugeName, site, processStep } = measuringTasks
   const sorts = {
     proof: hasAccepted,

@@ -8,6 +8,8 @@ import { namesOfPeople } from '../organisations/people.repository'
 import { proofOfTasks } from '../parts/proof.service'
 import { selectListedTasks, type TaskListed } from '../parts/tasks.repository'
 import { relationshipById } from '../relationships/relationships.lookup.service'
+import { selectAcceptedIds } from '../standing/standing.repository'
+import { standingsOf } from '../standing/standing.service'
 import { selectAnswers, selectTasksOf } from './requests.answers.repository'
 import { openRequestsOfTasks, taskStateIn } from './requests.answers.service'
 import { selectChoices } from './requests.choices.repository'
@@ -27,9 +29,11 @@ const asRow = ({ request, total: _, ...row }: RequestListed) => ({ ...request, .
 /** One page of a supplier's tasks to ask proof of, with the requests that ask for each already. */
 export async function listOfChoices(tenant: Tenant, query: QueryOf<typeof listRequestChoices>) {
   await relationshipById(tenant, query.relationshipId)
+  const standings = await standingsOf(tenant, await selectAcceptedIds(tenant))
+  const fallen = [...standings].filter(([, { state }]) => state !== 'stands').map(([id]) => id)
   return paged(
     query,
-    (page) => selectChoices(tenant, page),
+    (page) => selectChoices(tenant, page, fallen),
     async (rows) => {
       const ids = rows.map(({ task }) => task.id)
       const [proofs, asked] = [await proofOfTasks(tenant, ids), await openRequestsOfTasks(tenant, ids)]
