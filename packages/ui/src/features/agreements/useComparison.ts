@@ -138,6 +138,11 @@ export function useComparison(source: () => Compared) {
         : []
     })
   })
+  /** The standing round leaves it out; what a wider agreement says about it stays. */
+  const isLeftOut = (key: string): boolean => {
+    const { version, typed } = source()
+    return !typed && version !== undefined && itemOf(version, aboutClause(key))?.present === false
+  }
   const otherPoints = computed<PointRow[]>(() => {
     const { version, typed } = source()
     const of = baseRound.value ?? (isNew.value && inForce.value ? standingRound(inForce.value) : undefined)
@@ -153,7 +158,11 @@ export function useComparison(source: () => Compared) {
     ...differences.value.map((row) => ({
       ...clausePoint(row),
       beforeNote: noteOf(row.before),
-      afterNote: row.change === 'same' && beforeLabel.value ? '' : noteOf(row.after),
+      afterNote: isLeftOut(row.key)
+        ? acceptanceWords.leftOut
+        : row.change === 'same' && beforeLabel.value
+          ? ''
+          : noteOf(row.after),
       effect: effectText(row, consequences.effects.value?.get(row.key), consequences.unit.value),
       hasRule: [row.before, row.after].some((clause) => clause && hasConsequences(clause)),
       ...notes.value(row.after ? after.value.indexOf(row.after) : -1),
