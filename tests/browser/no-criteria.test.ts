@@ -96,6 +96,7 @@ describe('a submission where no criteria are agreed', () => {
     await section.getByText(/for information only/).waitFor()
     expect(await section.getByText(/^would /).count()).toBe(2)
     expect(await section.locator('.verdict-mark, svg').count()).toBe(0)
+    await supplierPage.getByRole('heading', { name: 'The readings', exact: true }).waitFor()
     expect(await supplierPage.getByText(/^(meets|falls short|not shown)$/).count()).toBe(0)
   })
 

@@ -46,14 +46,13 @@ export const partiesOf = ({ relationship }: Content, side: Side | null): Parties
   customer: relationship.customer.name,
 })
 
-/** The results that rest on the readings of one study; those of house terms where no criteria are agreed. */
+/** The results of agreed clauses that rest on the readings of one study; house terms explain no plot. */
 export const resultsOfStudy = (
-  { content, results, advisory }: Pick<ReadSubmission, 'content' | 'results' | 'advisory'>,
+  { content, results }: Pick<ReadSubmission, 'content' | 'results'>,
   code: string,
 ): ClauseResult[] => {
-  const judged = [...content.clauses, ...content.advisory]
-  const keys = judged.filter(({ study }) => study === code).map(({ clauseKey }) => clauseKey)
-  return [...results, ...advisory].filter(({ clauseKey }) => keys.includes(clauseKey))
+  const keys = content.clauses.filter(({ study }) => study === code).map(({ clauseKey }) => clauseKey)
+  return results.filter(({ clauseKey }) => keys.includes(clauseKey))
 }
 
 /** What the plot of a study shows; where no clause rests on its readings, they are computed here. */
