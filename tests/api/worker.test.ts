@@ -338,10 +338,10 @@ it('the worker’s program sends what comes, and ends in order on SIGTERM', asyn
   } finally {
     worker.kill('SIGKILL')
   }
-})
+}, 150_000)
 
 async function until(reached: () => boolean, state: () => string): Promise<void> {
-  const deadline = Date.now() + 20_000
+  const deadline = Date.now() + 60_000
   while (!reached()) {
     if (Date.now() > deadline) throw new Error(`not reached; so far:\n${state()}`)
     await new Promise((done) => setTimeout(done, 25))

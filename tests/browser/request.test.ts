@@ -101,20 +101,14 @@ describe('a request for proof, from the question to the answer', () => {
     await page.getByRole('button', { name: 'Prepare the submission' }).click()
     await page.getByRole('button', { name: 'Send for signature' }).first().click()
     await page.getByRole('dialog').getByRole('button', { name: 'Send for signature' }).click()
-    await page
-      .getByText(/[Ww]aiting for signature|For signature/)
-      .first()
-      .waitFor()
+    await page.getByText(/It waits for a signature/).waitFor()
     const submission = page.url()
     await signOut(page)
     await signIn(page, app.supplier, 'Elin Tor')
     await page.goto(submission)
     await page.getByRole('button', { name: 'Sign and submit' }).first().click()
     await page.getByRole('dialog').getByRole('button', { name: 'Sign and submit' }).click()
-    await page
-      .getByText(/Submitted/)
-      .first()
-      .waitFor()
+    await page.getByText(/waits for Brackwell Drivelines’ decision/).waitFor()
   })
 
   it('the customer sees it answered', async () => {
