@@ -1,2 +1,2 @@
+export { default as ClauseLink } from './ClauseLink.vue'
 export { default as ConsequencesPage } from './ConsequencesPage.vue'
-export { clausePagePath } from './clausePagePath'

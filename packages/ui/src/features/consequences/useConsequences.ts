@@ -6,6 +6,16 @@ import { hasConsequences } from './consequenceRows'
 import { useEffects } from './useEffects'
 import { useEntered } from './useEntered'
 
+/** The two clauses to set beside each other: one alone where nothing about it changes. */
+export const compared = ({
+  before,
+  after,
+  change,
+}: Pick<ClauseDifference, 'before' | 'after' | 'change'>) => ({
+  before: change === 'same' ? null : before,
+  after,
+})
+
 /**
  * What the clauses of a comparison do, for one characteristic of the scope, at a number of readings and a spread that
  * the reader can change.
@@ -25,7 +35,7 @@ export function useConsequences(
     ),
   )
   const { effects, failed } = useEffects(() => ({
-    pairs: pairs.value.map(({ key, before, after }) => ({ key, before, after })),
+    pairs: pairs.value.map((row) => ({ key: row.key, ...compared(row) })),
     characteristic: entered.characteristic.value,
     assumptions: entered.assumptions.value,
   }))

@@ -75,8 +75,8 @@ export function changedOf(base: WhatIfBase, changes: WhatIfChanges): WhatIfQuote
 
 /**
  * A what-if made ready to be quoted in a challenge: both sides of the comparison computed on the very engine that the
- * submission names, so that nothing but the change makes the difference. Clauses that the change does not touch are
- * left out.
+ * submission names, so that nothing but the change makes the difference. Clauses that come out the same are left
+ * out, unless all do.
  */
 export async function quoteOf(
   base: WhatIfBase,
@@ -86,6 +86,8 @@ export async function quoteOf(
   const study = base.studies.find(({ code }) => code === changes.study) ?? base.studies[0]
   if (!base.submissionSha256 || !base.engine || !study) throw new QuoteProblem('not-computed')
   const all = await Promise.all(base.results.map((result) => outcomes(base, result, changes, run)))
+  const touched = all.filter((each) => each.touched)
+  const different = touched.filter(({ before, after }) => canonicalText(before) !== canonicalText(after))
   const quote: WhatIfQuote = {
     format: 'evenrule.what-if/1',
     submissionSha256: base.submissionSha256,
@@ -93,9 +95,11 @@ export async function quoteOf(
     dataSha256: study.dataSha256,
     unit: base.results[0]?.input.unit ?? '',
     changed: changedOf(base, changes),
-    results: all
-      .filter(({ touched }) => touched)
-      .map(({ clauseKey, before, after }) => ({ clauseKey, before, after })),
+    results: (different.length ? different : touched).map(({ clauseKey, before, after }) => ({
+      clauseKey,
+      before,
+      after,
+    })),
     engineVersion: base.engine.version,
     engineSha256: base.engine.sha256,
   }
