@@ -87,6 +87,10 @@ describe('the one entry of the computation', () => {
         toleranceWidth: positive,
       }),
       fc.record({
+        ...{ type: fc.constant('index'), share: positive, sigmas: positive, least: positive },
+        ...{ toleranceWidth: positive, leastCg: positive, alpha: fc.constantFrom(1e-12, 0.05, 0.5) },
+      }),
+      fc.record({
         type: fc.constant('with-uncertainty'),
         margin: positive,
         referenceStandardUncertainty: positive,
@@ -97,8 +101,15 @@ describe('the one entry of the computation', () => {
       readings: fc.array(number, { minLength: 1, maxLength: 12 }),
       reference: fc.record({ value: number, standardUncertainty: positive }),
     })
+    const baseline = fc.oneof(
+      fc.record({ kind: fc.constant('natural-bound'), value: number }),
+      fc.record({ kind: fc.constant('process') }),
+      fc.record({ kind: fc.constant('absolute'), value: positive, unit: fc.constantFrom('mm', 'in') }),
+      fc.constant(null),
+    )
     const margin = fc.oneof(
       fc.record({ base: fc.constantFrom('tolerance', 'process'), share: fc.constantFrom(5e-324, 0.05, 1) }),
+      fc.record({ base: fc.constant('tolerance'), share: fc.constantFrom(5e-324, 0.05, 1), baseline }),
       fc.record({ base: fc.constant('absolute'), value: positive, unit: fc.constantFrom('mm', 'in') }),
     )
     const clause = fc.oneof(
@@ -107,6 +118,24 @@ describe('the one entry of the computation', () => {
         parameters: fc.record({ margin, confidence: fc.constantFrom(0.5, 0.95, 1 - 1e-16) }),
       }),
       fc.record({ type: fc.constant('bias-zero-test'), parameters: fc.record({ alpha: small }) }),
+      fc.record({
+        type: fc.constant('bias-interval-inside'),
+        parameters: fc.record({ margin, confidence: fc.constantFrom(0.5, 0.95, 1 - 1e-16) }),
+      }),
+      fc.record({ type: fc.constant('bias-point'), parameters: fc.record({ margin }) }),
+      fc.record({
+        type: fc.constant('bias-with-uncertainty'),
+        parameters: fc.record({ margin, coverageFactor: fc.constantFrom(1, 2, 10) }),
+      }),
+      fc.record({
+        type: fc.constant('bias-index'),
+        parameters: fc.record({
+          ...{ share: fc.constantFrom(5e-324, 0.2, 1), base: fc.constantFrom('tolerance', 'process') },
+          ...{ baseline, sigmas: fc.constantFrom(1, 6, 12), leastCg: fc.constantFrom(null, 5e-324, 100) },
+          ...{ leastCgk: fc.constantFrom(5e-324, 1.33, 100), basis: fc.constantFrom('estimate', 'bound') },
+          confidence: fc.constantFrom(0.5, 0.95, 1 - 1e-16),
+        }),
+      }),
       fc.record({
         type: fc.constant('resolution-share'),
         parameters: fc.record({
@@ -148,7 +177,7 @@ describe('the one entry of the computation', () => {
       fc.record({ ...kind('sampleSize'), rule, truth, power: fc.constantFrom(1e-9, 0.9, 1 - 1e-9) }),
     )
     fc.assert(fc.property(input, answersProperly), { seed: 83, numRuns: 250 })
-  })
+  }, 120_000)
 
   it('keeps no state: the same input has the same bytes, whatever came between', () => {
     const input = { kind: 'bias', readings: [1, 2, 4], reference: { value: 2 }, margin: 3 }

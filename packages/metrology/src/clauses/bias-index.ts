@@ -69,14 +69,15 @@ export const biasIndex: ClauseDescriptor<'bias-index'> = {
   options: ({ parameters }, characteristic) => {
     const { share, sigmas, confidence } = parameters
     const width = widthOf(parameters, characteristic)
-    return { confidence, index: { share, sigmas, ...(width && { width: toNumber(width) }) } }
+    return { confidence, index: { share, sigmas, ...(width !== null && { width }) } }
   },
   judge: ({ parameters }, facts) => {
     const { share, sigmas, confidence, basis, base, leastCg, leastCgk } = parameters
     const limits = { lower: leastCgk, upper: null }
     const asIndex = (judgement: Judgement): Judgement => ({ ...judgement, figure: null, quantity: 'ratio' })
-    const width = widthOf(parameters, facts.characteristic)
-    if (!width) return asIndex(notShown(facts, limits, { code: missingBaseline(base) }))
+    const inUnit = widthOf(parameters, facts.characteristic)
+    if (inUnit === null) return asIndex(notShown(facts, limits, { code: missingBaseline(base) }))
+    const width = rational(inUnit)
     // Half of the allowance is what a bias may take up when there is no spread at all.
     const most = toNumber(divide(multiply(rational(share), width), rational(2)))
     const of = factsWithin(most, facts)
@@ -108,23 +109,22 @@ const severity: Record<Verdict, number> = {
   'falls-short': 3,
 }
 
-const widthOf = ({ base, baseline }: BiasIndexParameters, of: Characteristic) =>
-  baselineWidth(base, of, baseline)
+/** The width in the characteristic's unit; null where there is none, or no number holds it. */
+function widthOf({ base, baseline }: BiasIndexParameters, of: Characteristic): number | null {
+  const exact = baselineWidth(base, of, baseline)
+  const width = exact && toNumber(exact)
+  return width !== null && width > 0 && Number.isFinite(width) ? width : null
+}
 
 function indexRule(parameters: BiasIndexParameters, of: Characteristic): Rule | null {
   const { share, sigmas, leastCg, leastCgk, basis, confidence } = parameters
   const width = widthOf(parameters, of)
-  return (
-    width && {
-      type: 'index',
-      share,
-      sigmas,
-      least: leastCgk,
-      toleranceWidth: toNumber(width),
-      ...(leastCg !== null && { leastCg }),
-      ...(basis === 'bound' && { alpha: complement(confidence) }),
-    }
-  )
+  if (width === null) return null
+  return {
+    ...{ type: 'index', share, sigmas, least: leastCgk, toleranceWidth: width },
+    ...(leastCg !== null && { leastCg }),
+    ...(basis === 'bound' && { alpha: complement(confidence) }),
+  }
 }
 
 /** Cgk first: it decides where both come out alike. */
@@ -149,14 +149,18 @@ function partsOf(found: Indices, leastCg: number | null, leastCgk: number): [Par
   ]
 }
 
+const undefinedFigure = { verdict: 'not-shown', code: 'not-representable' } as const
+
 function onEstimate({ figure, least }: Part): { verdict: Verdict; code: ReasonCode } {
+  if (!Number.isFinite(figure)) return undefinedFigure
   return figure >= least
     ? { verdict: 'meets', code: 'index-high-enough' }
     : { verdict: 'falls-short', code: 'index-too-low' }
 }
 
-function onBound({ lower, upper, least }: Part): { verdict: Verdict; code: ReasonCode } {
-  if (lower === null || upper === null) return { verdict: 'not-shown', code: 'not-representable' }
+function onBound({ figure, lower, upper, least }: Part): { verdict: Verdict; code: ReasonCode } {
+  const figures = [figure, lower, upper]
+  if (lower === null || upper === null || !figures.every(Number.isFinite)) return undefinedFigure
   if (lower >= least) return { verdict: 'meets', code: 'index-bound-high-enough' }
   return upper < least
     ? { verdict: 'falls-short', code: 'index-bound-too-low' }

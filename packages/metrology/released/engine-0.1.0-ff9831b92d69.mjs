@@ -10785,14 +10785,15 @@ var biasIndex = {
   options: ({ parameters }, characteristic) => {
     const { share, sigmas, confidence } = parameters;
     const width = widthOf(parameters, characteristic);
-    return { confidence, index: { share, sigmas, ...width && { width: toNumber(width) } } };
+    return { confidence, index: { share, sigmas, ...width !== null && { width } } };
   },
   judge: ({ parameters }, facts) => {
     const { share, sigmas, confidence, basis, base, leastCg, leastCgk } = parameters;
     const limits = { lower: leastCgk, upper: null };
     const asIndex = (judgement) => ({ ...judgement, figure: null, quantity: "ratio" });
-    const width = widthOf(parameters, facts.characteristic);
-    if (!width) return asIndex(notShown(facts, limits, { code: missingBaseline(base) }));
+    const inUnit = widthOf(parameters, facts.characteristic);
+    if (inUnit === null) return asIndex(notShown(facts, limits, { code: missingBaseline(base) }));
+    const width = rational(inUnit);
     const most = toNumber(divide(multiply(rational(share), width), rational(2)));
     const of = factsWithin(most, facts);
     if (isReason(of)) return asIndex(notShown(facts, limits, of));
@@ -10820,16 +10821,17 @@ var severity = {
   "not-shown": 2,
   "falls-short": 3
 };
-var widthOf = ({ base, baseline }, of) => baselineWidth(base, of, baseline);
+function widthOf({ base, baseline }, of) {
+  const exact = baselineWidth(base, of, baseline);
+  const width = exact && toNumber(exact);
+  return width !== null && width > 0 && Number.isFinite(width) ? width : null;
+}
 function indexRule(parameters, of) {
   const { share, sigmas, leastCg, leastCgk, basis, confidence } = parameters;
   const width = widthOf(parameters, of);
-  return width && {
-    type: "index",
-    share,
-    sigmas,
-    least: leastCgk,
-    toleranceWidth: toNumber(width),
+  if (width === null) return null;
+  return {
+    ...{ type: "index", share, sigmas, least: leastCgk, toleranceWidth: width },
     ...leastCg !== null && { leastCg },
     ...basis === "bound" && { alpha: complement(confidence) }
   };
@@ -10854,11 +10856,14 @@ function partsOf(found, leastCg, leastCgk) {
     }
   ];
 }
+var undefinedFigure = { verdict: "not-shown", code: "not-representable" };
 function onEstimate({ figure, least }) {
+  if (!Number.isFinite(figure)) return undefinedFigure;
   return figure >= least ? { verdict: "meets", code: "index-high-enough" } : { verdict: "falls-short", code: "index-too-low" };
 }
-function onBound({ lower, upper, least }) {
-  if (lower === null || upper === null) return { verdict: "not-shown", code: "not-representable" };
+function onBound({ figure, lower, upper, least }) {
+  const figures = [figure, lower, upper];
+  if (lower === null || upper === null || !figures.every(Number.isFinite)) return undefinedFigure;
   if (lower >= least) return { verdict: "meets", code: "index-bound-high-enough" };
   return upper < least ? { verdict: "falls-short", code: "index-bound-too-low" } : { verdict: "not-shown", code: "index-bound-open" };
 }
