@@ -13,7 +13,7 @@ beforeAll(async () => {
   tenantRoutes = world.harness.routes
     .filter(({ scope }) => scope === 'tenant')
     .map(({ endpoint }) => endpoint)
-})
+}, 240_000)
 afterAll(() => world.stop())
 beforeEach(() => world.freshen())
 
@@ -57,7 +57,7 @@ async function call(
   const request = world.harness
     .as(side, person)
     .send(endpoint.method, addressOf(endpoint, samples))
-    .query(sampleQuery(endpoint))
+    .query(sampleQuery(endpoint, at))
   const body = sampleBody(endpoint, at)
   if (!endpoint.upload) return body === undefined ? request : request.send(body as object)
   const { name, bytes } = sampleFile(endpoint)

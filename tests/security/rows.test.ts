@@ -14,7 +14,7 @@ beforeAll(async () => {
   app = new pg.Client({ connectionString: world.harness.urlAs('evenrule_app') })
   await app.connect()
   tables = await tenantTables(world.harness.owner)
-})
+}, 240_000)
 afterAll(async () => {
   await app.end()
   await world.stop()

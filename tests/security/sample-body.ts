@@ -59,13 +59,14 @@ export function sampleBody(endpoint: EndpointShape, samples: Samples): unknown {
 }
 
 /** The query that an endpoint cannot do without; most need none. */
-export function sampleQuery({ query }: EndpointShape): Record<string, unknown> {
+export function sampleQuery({ query }: EndpointShape, samples: Samples): Record<string, unknown> {
   if (!query) return {}
   const { properties = {}, required = [] } = z.toJSONSchema(query, {
     io: 'input',
     unrepresentable: 'any',
   }) as JsonSchema
-  return Object.fromEntries(required.map((name) => [name, valueOf(properties[name] ?? {}, name, known)]))
+  const values = { ...known, ...samples }
+  return Object.fromEntries(required.map((name) => [name, valueOf(properties[name] ?? {}, name, values)]))
 }
 
 function valueOf(schema: JsonSchema, name: string, values: Record<string, unknown>): unknown {
