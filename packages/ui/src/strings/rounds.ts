@@ -7,7 +7,8 @@ export const addWords = {
   heading: 'Add a clause',
   close: 'Close the list',
   any: 'For any subject',
-  taken: 'In the proposal already; change its kind there.',
+  there: 'In it already.',
+  taken: 'Another kind of it is in already; change the kind there.',
 } as const
 
 const person = (by: string | null): string => by ?? 'Somebody of our side'
