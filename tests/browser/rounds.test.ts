@@ -74,7 +74,7 @@ describe('a negotiation in five rounds', () => {
     mara = (await open('customer', 'Mara Lindqvist')).page
     sanna = (await open('customer', 'Sanna Reve')).page
     nadia = (await open('supplier', 'Nadia Ferro')).page
-  })
+  }, 240_000)
   afterAll(() => browser.close())
   afterEach(async ({ task }) => {
     if (task.result?.state !== 'fail') return
