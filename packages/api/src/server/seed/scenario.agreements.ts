@@ -51,10 +51,15 @@ export interface DemoAgreement {
 }
 
 /** Proposed by the customer, accepted and signed by both. */
-export const signedAt = (daysAgo: number, clauses: Clause[], comment: string): DemoVersion => ({
+export const signedAt = (
+  daysAgo: number,
+  clauses: Clause[],
+  comment: string,
+  terms: Partial<Terms> = {},
+): DemoVersion => ({
   effectiveDaysAgo: daysAgo - 10,
   steps: [
-    { daysAgo: daysAgo + 6, side: 'customer', act: 'propose', clauses, comment },
+    { daysAgo: daysAgo + 6, side: 'customer', act: 'propose', clauses, terms, comment },
     { daysAgo: daysAgo + 3, side: 'supplier', act: 'accept' },
     { daysAgo: daysAgo + 2, side: 'customer', act: 'sign' },
     { daysAgo: daysAgo + 1, side: 'supplier', act: 'sign' },
@@ -258,7 +263,8 @@ export const agreements: DemoAgreement[] = [
     supplier: 'tarnfield',
     customer: 'norvane',
     versions: [
-      signedAt(310, [design(10), calibration, zeroTest(0.05)], ''),
+      // Half a year: the oldest acceptances under it have run out, one is about to.
+      signedAt(310, [design(10), calibration, zeroTest(0.05)], '', { validityMonths: 6 }),
       {
         effectiveDaysAgo: -25,
         steps: [
