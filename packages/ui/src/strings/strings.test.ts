@@ -70,8 +70,13 @@ describe('clause sentences', () => {
       {
         type: 'bias-index',
         parameters: {
-          ...{ share: 0.2, base: 'tolerance', sigmas: 6, leastCg: 1.33, leastCgk: 1.33 },
-          ...{ basis: 'bound', confidence: 0.95 },
+          share: 0.2,
+          base: 'tolerance',
+          sigmas: 6,
+          leastCg: 1.33,
+          leastCgk: 1.33,
+          basis: 'bound',
+          confidence: 0.95,
         },
       },
       'Cg and Cgk at least 1.33 for 20_% of tolerance over 6_s, on the lower bound at 95_%',
@@ -81,8 +86,13 @@ describe('clause sentences', () => {
       {
         type: 'bias-index',
         parameters: {
-          ...{ share: 0.15, base: 'process', sigmas: 4, leastCg: null, leastCgk: 1 },
-          ...{ basis: 'estimate', confidence: 0.95 },
+          share: 0.15,
+          base: 'process',
+          sigmas: 4,
+          leastCg: null,
+          leastCgk: 1,
+          basis: 'estimate',
+          confidence: 0.95,
         },
       },
       'Cgk at least 1 for 15_% of process variation over 4_s, on the estimate',
