@@ -1,7 +1,7 @@
 /**
- * What `npm test` runs, in this order. A stage with `check` is one program that passes or fails; one with `needs`
- * is a project of tests/vitest.config.ts, and says what must run for it: nothing, the database with the stand-ins,
- * or the whole product with a browser.
+ * What `npm test` runs, in this order. A stage with `check` is one program that passes or fails, run beside the
+ * others of its kind; one with `needs` is a project of tests/vitest.config.ts, and says what must run for it:
+ * nothing, the database with the stand-ins, or the whole product with a browser.
  */
 export const stages = [
   { name: 'format', check: 'prettier' },

@@ -110,8 +110,13 @@ describe('the demonstration', () => {
     expect(waiting.items).toHaveLength(waiting.total)
     expect(counts.waiting).toBe(waiting.total)
     expect(counts.agreements).toBe(waiting.items.filter(({ act }) => /proposal|criteria/.test(act)).length)
-    expect(waiting.items.map(({ since }) => since)).toEqual(waiting.items.map(({ since }) => since).sort())
-    expect(waiting.oldestDays).toBe(waiting.items[0]?.ageDays)
+    // What is overdue first, then what has waited longest.
+    const overdue = waiting.items.filter(({ daysLeft }) => daysLeft !== null && daysLeft < 0)
+    expect(waiting.overdue).toBe(overdue.length)
+    expect(waiting.items.slice(0, overdue.length)).toEqual(overdue)
+    for (const part of [overdue, waiting.items.slice(overdue.length)])
+      expect(part.map(({ since }) => since)).toEqual(part.map(({ since }) => since).sort())
+    expect(waiting.oldestDays).toBe(Math.max(...waiting.items.map(({ ageDays }) => ageDays)))
     expect(coverage.total).toBeGreaterThan(0)
   })
 
