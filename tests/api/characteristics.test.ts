@@ -504,6 +504,7 @@ describe('measuring tasks', () => {
           createdAt: now,
           createdBy: engineer.id,
           submittedAt: state === 'draft' ? null : now,
+          criteria: state === 'draft' ? null : 'agreed',
           safety: false,
         })
       })
