@@ -10,7 +10,8 @@ const never = ['**/node_modules/**', '.data/**']
 
 const project = (name: string, include: string[], test: object = {}) => ({
   root,
-  test: { name, include, exclude: never, testTimeout: 30_000, hookTimeout: 60_000, ...test },
+  // Left to itself Vitest keeps a core free, which on two cores is half of the machine.
+  test: { name, include, exclude: never, maxWorkers: 2, testTimeout: 30_000, hookTimeout: 60_000, ...test },
 })
 
 export default defineConfig({
@@ -29,7 +30,6 @@ export default defineConfig({
       project('security', ['tests/security/**/*.test.ts'], { testTimeout: 120_000 }),
       // Two files at a time share the instance: each works on parts, tasks and agreements of its own.
       project('browser', ['tests/browser/**/*.test.ts'], {
-        maxWorkers: 2,
         testTimeout: 300_000,
         hookTimeout: 120_000,
       }),
