@@ -208,6 +208,8 @@ describe('the main job, from the first proposal to the acceptance', () => {
       [customerPage, 'Velloy Springs'],
     ] as const) {
       await open(page, 'Record')
+      // A list opened while the page still loads is drawn anew under the pointer.
+      await page.waitForLoadState('networkidle')
       await choose(page, 'Record', partner)
       await page.getByRole('button', { name: 'Check the record' }).click()
       await page

@@ -1,7 +1,7 @@
 import { submissions, type Side } from '@evenrule/api/contract'
 import { waitsOn } from '@evenrule/api/contract/moves/submission'
 import { clauseBasis, clauseDescriptor } from '@evenrule/metrology'
-import { formatNumber } from '../../format'
+import { formatNumber, parseNumber } from '../../format'
 import type { Parties } from '../../strings/submissions'
 import { readingsOf, studyFiguresOf, type StudyFigures } from '../results/studyFigures'
 import { resultOf, type ClauseResult } from '../results/types'
@@ -59,7 +59,8 @@ export const resultsOfStudy = (
 export function figuresOfStudy(read: ReadSubmission, study: FrozenStudy): StudyFigures | null {
   const judged = studyFiguresOf(resultsOfStudy(read, study.code))
   if (judged) return judged
-  const values = study.data.readings.map(Number)
+  // As entered: the decimal sign may be a comma.
+  const values = study.data.readings.map((text) => parseNumber(text).value ?? NaN)
   const output = unjudgedStudy(study, { values })
   return output && readingsOf(values, study.unit, output)
 }

@@ -8,7 +8,15 @@ import { actNames } from '../../strings/reviews'
 import { inOrder, isFresh, possibleActs } from './acts'
 import { checkLines, outcomeOf } from './checkLines'
 import { submissionOf } from './fixture'
-import { isWeakOnSafety, partiesOf, readContent, resultsOfStudy, sizeParts, waitsFor } from './reading'
+import {
+  figuresOfStudy,
+  isWeakOnSafety,
+  partiesOf,
+  readContent,
+  resultsOfStudy,
+  sizeParts,
+  waitsFor,
+} from './reading'
 import { integrityOf, recomputeWith, type EngineSource } from './recompute'
 import { stepsOf } from './steps'
 import { answerOf, questionOf } from './words'
@@ -181,6 +189,17 @@ describe('what can be done', () => {
     expect(isFresh('2026-11-02T08:00:00.000Z', now)).toBe(true)
     expect(isFresh('2026-11-02T07:59:59.000Z', now)).toBe(false)
     expect(isFresh(undefined, now)).toBe(false)
+  })
+})
+
+describe('the plot of a study that no clause rests on', () => {
+  it('shows readings that were entered with a decimal comma', async () => {
+    const read = readContent(await submissionOf({ texts: fitting, engineSha256 }))
+    const [study] = read.content.studies
+    const commas = fitting.map((text) => text.replace('.', ','))
+    const unjudged = { ...read, content: { ...read.content, clauses: [] }, results: [] }
+    const figures = figuresOfStudy(unjudged, { ...study!, data: { ...study!.data, readings: commas } })
+    expect(figures?.readings).toEqual(fitting.map(Number))
   })
 })
 
