@@ -86,6 +86,8 @@ describe('the whole story', () => {
     })
 
     const agreed = await world.accept(quality, countered, newest(countered))
+    // The whole is accepted with one act, so every thing in it is.
+    expect(newest(agreed).acceptance?.everythingBy).toEqual(['supplier', 'customer'])
     const version = newest(agreed)
     expect(version).toMatchObject({
       state: 'agreed',

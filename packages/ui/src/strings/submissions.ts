@@ -262,6 +262,7 @@ export const advisoryWords = {
   answer: 'No criteria agreed.',
   answerRest: (parties: Parties) =>
     `So there is no verdict: ${parties.side === 'customer' ? 'your approver' : `an approver of ${parties.customer}`} decides for this once, and ${parties.side === 'supplier' ? 'yours' : `one of ${parties.supplier}`} must agree.`,
+  answerEnded: 'So there was no verdict; the decision was made for this once.',
   verdict: 'no criteria agreed',
   heading: (customer: string) => `What would the house terms of ${customer} say?`,
   text: (customer: string, number: number) =>

@@ -47,7 +47,12 @@ export function answerOf({ submission, content, results }: ReadSubmission, parti
   const [strong, then] = standingWords[submission.state](parties, submission.ageDays, submission.decidedAt)
   const shown =
     content.criteria === 'none'
-      ? { strong: advisoryWords.answer, rest: advisoryWords.answerRest(parties) }
+      ? {
+          strong: advisoryWords.answer,
+          rest: ended.includes(submission.state)
+            ? advisoryWords.answerEnded
+            : advisoryWords.answerRest(parties),
+        }
       : { strong: decisive, rest }
   const stands = { strong, rest: then }
   const { standing } = submission

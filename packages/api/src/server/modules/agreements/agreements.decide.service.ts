@@ -2,10 +2,12 @@ import type { withdrawVersion } from '../../../contract/agreements'
 import type { BodyOf } from '../../../contract/define'
 import type { Tenant } from '../../db/tenant'
 import { changedMeanwhile } from '../../errors'
+import { acceptanceOf } from './agreements.acceptance'
 import { agreementMessages, tell } from './agreements.messages'
 import { factsOf, permittedMove, recordMove } from './agreements.move.service'
-import { openForMove } from './agreements.negotiation.service'
+import { openForMove, sentRounds } from './agreements.negotiation.service'
 import { readAgreementOf } from './agreements.read.service'
+import { insertMarks } from './agreements.remarks.repository'
 import { updateVersion } from './agreements.repository'
 import { deleteRound, updateRound } from './agreements.rounds.repository'
 import { agreementTextOf } from './agreements.text'
@@ -35,6 +37,15 @@ export async function accept(tenant: Tenant, at: At, expectedVersion: number) {
     terms,
     effectiveOn,
   })
+  // Accepting the whole is a mark on everything that was not marked one by one.
+  const open = acceptanceOf(sentRounds(version), version.marks)?.items.filter((item) => !item[tenant.side])
+  if (open?.length) {
+    const items = open.map(({ kind, clauseKey, sha256: hash }) => ({
+      about: { kind, clauseKey },
+      sha256: hash,
+    }))
+    await insertMarks(tenant, standing, items, true)
+  }
   if (draft) await deleteRound(tenant, draft)
   if (!(await updateRound(tenant, standing, { state: 'accepted' }))) throw changedMeanwhile('proposal')
   const values = { state: 'agreed', effectiveOn, text, sha256, agreedAt: tenant.now } as const
