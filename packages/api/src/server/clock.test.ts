@@ -6,7 +6,7 @@ import { openClock } from './clock'
 
 const folder = mkdtempSync(join(tmpdir(), 'evenrule-clock-'))
 afterAll(() => rmSync(folder, { recursive: true }))
-const ahead = (clock: () => Date): number => Math.round((clock().getTime() - Date.now()) / 86_400_000)
+const ahead = (clock: () => Date): number => Math.round((clock().getTime() - Date.now()) / 86_400_000) + 0
 
 describe('the clock', () => {
   it('is the machine’s without a file, and while the file is not there', () => {

@@ -56,7 +56,7 @@ export function reviewActs(stage: Stage, played: Played): Acts<OfReview> {
       await cast.reviewer(openChallenge, {
         params: params(),
         body: {
-          ...{ expectedVersion, reasonKind: 'outlying', text: challengeText },
+          ...{ expectedVersion, reasonKind: 'not-as-planned', text: challengeText },
           target: { kind: 'readings', study: study?.code, readings },
           dueOn: stage.day(daysAgo - 21),
         },

@@ -288,11 +288,11 @@ export const abandonReason = 'The master was exchanged halfway through; the read
 /** Zero-based places of the readings that are challenged. */
 export const challengedReadings = [2, 10]
 export const challengeText =
-  'Readings 3 and 11 lie apart from the rest. Was the fixture set anew between them?'
+  'The run sheet notes a break before readings 3 and 11. Were they taken on the same setting of the fixture?'
 export const answerText =
   'The readings stand as taken. The fixture was not touched; the operator reports coolant on the contact at both.'
 export const correctionText =
-  'You are right: both were entered with two digits changed over. They were read again from the printed strip.'
+  'You are right: both were taken after the fixture was set anew. They were taken again on the first setting.'
 export const unresolvedText =
   'Neither of us can show it from here. We propose to leave it open and have the ring measured elsewhere.'
 export const laboratory = 'Hallvik measuring laboratory (invented)'
