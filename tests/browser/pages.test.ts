@@ -4,7 +4,9 @@ import { addresses, axeFaults, launch, picture, signIn, watchErrors } from './su
 
 type Side = 'supplier' | 'customer'
 
-/** Pages below the organisation; after `>` the row of the list whose page is opened. */
+/**
+ * Pages below the organisation; after `>` the row of the list whose page is opened, after `+` the page below that one.
+ */
 const pages: Record<Side, { person: string; paths: string[] }> = {
   supplier: {
     person: 'Ines Calder',
@@ -19,6 +21,12 @@ const pages: Record<Side, { person: string; paths: string[] }> = {
       'standards>0',
       'agreements',
       'agreements>1',
+      'agreements>1+consequences',
+      'house-terms',
+      'house-terms>0',
+      'criteria',
+      'requests',
+      'requests>0',
       'studies',
       'studies?state=computed>0',
       'studies?state=registered>0',
@@ -42,6 +50,13 @@ const pages: Record<Side, { person: string; paths: string[] }> = {
       'agreements',
       'agreements>0',
       'agreements>3',
+      'agreements>3+consequences',
+      'house-terms',
+      'house-terms>0',
+      'criteria',
+      'requests',
+      'requests>0',
+      'requests/new',
       'submissions',
       'submissions>0',
       'submissions?waitsOn=all&state=challenged>0',
@@ -71,12 +86,13 @@ async function settle(page: Page): Promise<void> {
 }
 
 async function open(page: Page, base: string, path: string): Promise<void> {
-  const [list = '', row] = path.split('>')
+  const [list = '', place] = path.split('>')
   await page.goto(`${base}/${list}`)
   await settle(page)
-  if (row === undefined) return
+  if (place === undefined) return
+  const [row, below] = place.split('+')
   const address = await page.locator('a.row-link').nth(Number(row)).getAttribute('href')
-  await page.goto(new URL(address ?? '', base).href)
+  await page.goto(new URL(`${address}${below ? `/${below}` : ''}`, base).href)
   await settle(page)
 }
 
