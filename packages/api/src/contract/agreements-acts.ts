@@ -1,5 +1,6 @@
 import { z } from 'zod'
-import { clauseKeySchema, enteredClauses, hashSchema } from './agreements-content'
+import { clauseKeySchema, enteredClauses } from './agreements-content'
+import { hashSchema } from './frozen'
 import { agreementSchema } from './agreements-read'
 import { aboutSchema, caseSchema } from './agreements-rounds'
 import { calendarDate, expectedVersion, organisationParams, paragraph, paramsWith, uuid } from './common'

@@ -1,11 +1,6 @@
 import { z } from 'zod'
-import {
-  agreementScopeSchema,
-  clauseKeySchema,
-  clauseSchema,
-  hashSchema,
-  scopeKinds,
-} from './agreements-content'
+import { agreementScopeSchema, clauseKeySchema } from './agreements-content'
+import { clauseSchema, hashSchema, scopeKinds } from './frozen'
 import { agreementStateSchema } from './agreements-rounds'
 import { calendarDate, paramsWith, sideSchema, uuid } from './common'
 import { defineEndpoint } from './define'

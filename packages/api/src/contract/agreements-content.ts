@@ -1,17 +1,9 @@
 import { clauseTypes, parseClause, type Clause } from '@evenrule/metrology'
 import { z } from 'zod'
 import { problemsOfClause, repeatedClauses } from './agreement-check'
-import { characteristicClass } from './characteristics'
 import { calendarDate, uuid } from './common'
+import { clauseSchema, frozenCharacteristicSchema, partySchema, scopeKinds } from './frozen'
 import { termsSchema, type Terms } from './terms'
-
-export const hashSchema = z.string().regex(/^[0-9a-f]{64}$/, 'This is not a SHA-256 hash.')
-export const partySchema = z.object({ id: uuid, name: z.string() })
-
-/** A clause as stored: it was checked when it was entered. */
-export const clauseSchema = z.custom<Clause>(
-  (value) => typeof value === 'object' && value !== null && 'type' in value && 'parameters' in value,
-)
 
 /** A clause as sent: every field wrong with it is named. */
 const enteredClause = z
@@ -46,9 +38,6 @@ export interface RoundContent {
   effectiveOn: string
 }
 
-export const scopeKinds = ['relationship', 'part', 'characteristic'] as const
-export type ScopeKind = (typeof scopeKinds)[number]
-
 /** What an agreement covers, named as people name it. */
 export const agreementScopeSchema = z.object({
   kind: z.enum(scopeKinds),
@@ -64,20 +53,7 @@ export const agreementScopeSchema = z.object({
 export type AgreementScope = z.output<typeof agreementScopeSchema>
 
 /** A characteristic in scope as it stands now: what consequences are computed from. */
-export const scopedCharacteristicSchema = z.object({
-  characteristicId: uuid,
-  partId: uuid,
-  partNumber: z.string(),
-  revision: z.string(),
-  number: z.number().int(),
-  name: z.string(),
-  nominal: z.string().nullable(),
-  lowerLimit: z.string().nullable(),
-  upperLimit: z.string().nullable(),
-  unit: z.string(),
-  class: characteristicClass,
-  processStandardDeviation: z.string().nullable(),
-})
+export const scopedCharacteristicSchema = frozenCharacteristicSchema.extend({ partId: uuid })
 export type ScopedCharacteristic = z.output<typeof scopedCharacteristicSchema>
 
 /** The signed text, RFC 8785, in the form `evenrule.agreement/1`. */

@@ -1,5 +1,6 @@
 import { z } from 'zod'
-import { agreementScopeSchema, partySchema, scopedCharacteristicSchema } from './agreements-content'
+import { agreementScopeSchema, scopedCharacteristicSchema } from './agreements-content'
+import { partySchema } from './frozen'
 import { agreementStateSchema, agreementVersionSchema } from './agreements-rounds'
 import {
   calendarDate,

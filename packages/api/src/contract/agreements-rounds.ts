@@ -1,6 +1,7 @@
 import { problemCodes } from '@evenrule/metrology'
 import { z } from 'zod'
-import { clauseKeySchema, clauseSchema, hashSchema } from './agreements-content'
+import { clauseKeySchema } from './agreements-content'
+import { clauseSchema, hashSchema } from './frozen'
 import { calendarDate, instant, sideSchema, uuid } from './common'
 import { agreementMoveNames, agreementVersionStates } from './moves/agreement-version'
 import { termsSchema } from './terms'

@@ -1,8 +1,8 @@
-import type { Clause } from '@evenrule/metrology'
 import { z } from 'zod'
 import { byHandVerdicts } from './by-hand-verdicts'
 import { expectedVersion, organisationParams, paragraph, uuid } from './common'
 import { defineEndpoint } from './define'
+import { clauseSchema } from './frozen'
 import { movedSchema } from './moved'
 
 export * from './by-hand-verdicts'
@@ -19,9 +19,7 @@ export type ByHand = z.output<typeof byHandSchema>
 /** A clause in force that asks for a judgement by hand, and what was entered so far. */
 export const byHandAskedSchema = z.object({
   clauseKey: z.string(),
-  clause: z.custom<Clause>(
-    (value) => typeof value === 'object' && value !== null && 'type' in value && 'parameters' in value,
-  ),
+  clause: clauseSchema,
   judged: byHandSchema.nullable(),
 })
 

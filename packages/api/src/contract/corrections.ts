@@ -2,14 +2,14 @@ import { z } from 'zod'
 import { challengeSchema } from './challenges'
 import { expectedVersion, paragraph, paramsWith, uuid } from './common'
 import { defineEndpoint } from './define'
-import { textHash } from './moved'
+import { hashSchema } from './frozen'
 import { evaluationSchema, verdictSchema } from './submission-content'
 
 /** What signing a correction now would freeze as the next revision. */
 export const correctionSchema = z.object({
   revision: z.number().int(),
   text: z.string(),
-  sha256: textHash,
+  sha256: hashSchema,
   verdict: verdictSchema,
   clausesMet: z.number().int(),
   clausesTotal: z.number().int(),
@@ -51,7 +51,7 @@ export const signCorrection = defineEndpoint({
   params: challengeParams,
   body: z.object({
     expectedVersion,
-    sha256: textHash,
+    sha256: hashSchema,
     text: paragraph().min(1, 'Say in words what was corrected.'),
   }),
   response: challengeSchema,

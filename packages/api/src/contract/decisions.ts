@@ -2,7 +2,8 @@ import { z } from 'zod'
 import { expectedVersion, instant, paragraph, paramsWith, uuid } from './common'
 import { conditionAskedSchema, conditionSchema, mostConditions } from './conditions'
 import { defineEndpoint } from './define'
-import { movedSchema, textHash } from './moved'
+import { hashSchema } from './frozen'
+import { movedSchema } from './moved'
 
 const words = paragraph().min(1, 'Say it in words.')
 
@@ -38,7 +39,7 @@ export type Decision = z.output<typeof decisionSchema>
 const base = '/organisations/:organisationId/submissions/:submissionId'
 const params = paramsWith('submissionId')
 /** A decision names the bytes it is about: the hash of the newest text, which the person had before them. */
-const seen = { expectedVersion, sha256: textHash }
+const seen = { expectedVersion, sha256: hashSchema }
 
 export const accept = defineEndpoint({
   method: 'post',

@@ -1,5 +1,6 @@
 import { z } from 'zod'
-import { clauseSchema, enteredClauses, hashSchema, partySchema } from './agreements-content'
+import { enteredClauses } from './agreements-content'
+import { clauseSchema, hashSchema, partySchema } from './frozen'
 import {
   calendarDate,
   expectedVersion,

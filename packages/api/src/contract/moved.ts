@@ -2,9 +2,6 @@ import { z } from 'zod'
 import { uuid } from './common'
 import { submissionStates } from './moves/submission'
 
-/** SHA-256 of a frozen text, in lower-case hexadecimal digits. */
-export const textHash = z.string().regex(/^[0-9a-f]{64}$/, 'This is not a SHA-256 hash.')
-
 /** Where a move has put the submission. */
 export const movedSchema = z.object({
   id: uuid,

@@ -1,7 +1,9 @@
 import { z } from 'zod'
 import { organisationParams, unitSchema, uuid } from './common'
 import { defineEndpoint } from './define'
-import { characteristicSchema, frozenClauseSchema, planSchema, studiesPath, taskIds } from './study-parts'
+import { criterionSchema } from './agreements-applies'
+import { frozenCharacteristicSchema } from './frozen'
+import { planSchema, studiesPath, taskIds } from './study-parts'
 
 export const planReasons = [
   'size-found',
@@ -23,11 +25,11 @@ export const studyPlanSchema = z.object({
     z.object({
       taskId: uuid,
       readings: z.number().int().nullable(),
-      characteristic: characteristicSchema,
+      characteristic: frozenCharacteristicSchema,
       /** Registered on this task so far since criteria came into force; a new study is one more. */
       attempts: z.number().int(),
       clauses: z.array(
-        frozenClauseSchema.extend({
+        criterionSchema.extend({
           readings: z.number().int().nullable(),
           chance: z.number().nullable(),
           reason: z.enum(planReasons),

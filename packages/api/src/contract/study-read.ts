@@ -4,16 +4,9 @@ import { calendarDate, instant, organisationParams, pageOf, pageQuery, sortBy, u
 import { defineEndpoint } from './define'
 import { fileSchema } from './files'
 import { readAsSchema } from './readings'
-import {
-  characteristicSchema,
-  frozenClauseSchema,
-  hash,
-  measuredAs,
-  studiesPath,
-  studyParams,
-  studyPath,
-  studyState,
-} from './study-parts'
+import { criterionSchema } from './agreements-applies'
+import { frozenCharacteristicSchema, hashSchema } from './frozen'
+import { measuredAs, studiesPath, studyParams, studyPath, studyState } from './study-parts'
 import { verdictSchema } from './submission-content'
 
 const verdictCounts = z.record(verdictSchema, z.number().int())
@@ -93,7 +86,7 @@ const revisionSchema = z.object({
   takenBy: z.array(person),
   collectedOn: calendarDate,
   /** SHA-256 of the canonical JSON of `texts`. */
-  sha256: hash,
+  sha256: hashSchema,
   createdAt: instant,
   createdBy: person,
 })
@@ -106,9 +99,9 @@ const evaluationSchema = z.object({
   /** Canonical JSON; read them as ClauseInput and ClauseOutput of the computation. */
   inputText: z.string(),
   outputText: z.string(),
-  outputSha256: hash,
+  outputSha256: hashSchema,
   engineVersion: z.string(),
-  engineSha256: hash,
+  engineSha256: hashSchema,
   /** What would likely settle a clause that is not shown. */
   settling: z
     .object({
@@ -165,9 +158,9 @@ export const studySchema = z.object({
       site: z.string().nullable(),
       processStep: z.string().nullable(),
       attempt: z.number().int(),
-      characteristic: characteristicSchema,
+      characteristic: frozenCharacteristicSchema,
       /** Clauses in force on the day of registration. */
-      criteria: z.array(frozenClauseSchema),
+      criteria: z.array(criterionSchema),
       /** Estimates where no clause was in force, as JSON of a BiasOutput; null otherwise: evaluations hold them. */
       figuresText: z.string().nullable(),
       /** Every study registered on this task, the newest first; this one included. */

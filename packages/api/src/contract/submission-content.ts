@@ -1,37 +1,16 @@
-import type { Clause, Verdict } from '@evenrule/metrology'
+import type { Verdict } from '@evenrule/metrology'
 import { z } from 'zod'
 import { byHandVerdicts } from './by-hand-verdicts'
 import { calendarDate, instant, uuid } from './common'
+import { clauseSchema, frozenCharacteristicSchema, hashSchema, partySchema, scopeKinds } from './frozen'
 import { resolvedTermsSchema } from './terms'
 
-const hash = z.string().regex(/^[0-9a-f]{64}$/)
 export const verdictSchema = z.enum([
   'meets',
   'meets-with-conditions',
   'falls-short',
   'not-shown',
 ] as const satisfies readonly Verdict[])
-
-/** The agreed clause is kept whole, whatever its type; the engine named beside it knows what it means. */
-const clauseSchema = z.custom<Clause>(
-  (value) => typeof value === 'object' && value !== null && 'type' in value && 'parameters' in value,
-)
-
-const partySchema = z.object({ id: uuid, name: z.string() })
-
-const frozenCharacteristicSchema = z.object({
-  characteristicId: uuid,
-  partNumber: z.string(),
-  revision: z.string(),
-  number: z.number().int(),
-  name: z.string(),
-  nominal: z.string().nullable(),
-  lowerLimit: z.string().nullable(),
-  upperLimit: z.string().nullable(),
-  unit: z.string(),
-  class: z.enum(['ordinary', 'significant', 'safety']),
-  processStandardDeviation: z.string().nullable(),
-})
 
 const calibrationSchema = z
   .object({ certificateNumber: z.string(), calibratedOn: calendarDate, dueOn: calendarDate })
@@ -70,9 +49,9 @@ const frozenStudySchema = z.object({
     /** Rows of the file that held no number where a reading was expected, left out by the supplier. */
     leftOut: z.array(z.object({ row: z.number().int(), column: z.string(), text: z.string() })),
     /** SHA-256 of the canonical JSON of `readings`. */
-    sha256: hash,
+    sha256: hashSchema,
     /** SHA-256 of the file they were read from, where there is one. */
-    fileSha256: hash.nullable(),
+    fileSha256: hashSchema.nullable(),
   }),
 })
 export type FrozenStudy = z.output<typeof frozenStudySchema>
@@ -84,17 +63,17 @@ const judgedFields = {
   /** Code of the study it is judged on; null where none answers it. */
   study: z.string().nullable(),
   verdict: verdictSchema,
-  inputSha256: hash,
-  outputSha256: hash,
+  inputSha256: hashSchema,
+  outputSha256: hashSchema,
   engineVersion: z.string(),
-  engineSha256: hash,
+  engineSha256: hashSchema,
 }
 const frozenClauseSchema = z.object({
   ...judgedFields,
   agreementNumber: z.number().int(),
   versionNumber: z.number().int(),
   versionId: uuid,
-  scope: z.enum(['relationship', 'part', 'characteristic']),
+  scope: z.enum(scopeKinds),
 })
 export type FrozenClauseResult = z.output<typeof frozenClauseSchema>
 
@@ -114,7 +93,7 @@ export const submissionContentSchema = z.object({
   /** Counts the signed texts of the submission, from one; a correction adds one. */
   revision: z.number().int(),
   /** Of a correction: the text it takes the place of, and the challenge it answers. */
-  corrects: z.object({ sha256: hash, challenge: z.number().int() }).nullable(),
+  corrects: z.object({ sha256: hashSchema, challenge: z.number().int() }).nullable(),
   /** Whether signed criteria applied on the day; `none`: an approver of each side decides. */
   criteria: z.enum(['agreed', 'none']),
   /** The calendar day, in the relationship's time zone, whose criteria it answers. */
@@ -137,16 +116,16 @@ export const submissionContentSchema = z.object({
       agreementNumber: z.number().int(),
       versionNumber: z.number().int(),
       versionId: uuid,
-      scope: z.enum(['relationship', 'part', 'characteristic']),
+      scope: z.enum(scopeKinds),
       effectiveOn: calendarDate,
-      sha256: hash,
+      sha256: hashSchema,
     }),
   ),
   clauses: z.array(frozenClauseSchema),
   /** The terms that the agreements set for the day, or the defaults. */
   terms: resolvedTermsSchema,
   /** The customer's house terms, judged for information only; null and empty where criteria are agreed. */
-  houseTerms: z.object({ id: uuid, number: z.number().int(), sha256: hash }).nullable(),
+  houseTerms: z.object({ id: uuid, number: z.number().int(), sha256: hashSchema }).nullable(),
   advisory: z.array(advisoryClauseSchema),
   /** Clauses that were judged by hand, each on a document among the files. */
   byHand: z.array(
@@ -154,7 +133,7 @@ export const submissionContentSchema = z.object({
       clauseKey: z.string(),
       verdict: z.enum(byHandVerdicts),
       reason: z.string(),
-      document: z.object({ name: z.string(), sha256: hash }),
+      document: z.object({ name: z.string(), sha256: hashSchema }),
     }),
   ),
   /** The customer's open requests that it answers. */
@@ -179,7 +158,7 @@ export const submissionContentSchema = z.object({
       name: z.string(),
       contentType: z.string(),
       size: z.number().int(),
-      sha256: hash,
+      sha256: hashSchema,
     }),
   ),
 })
@@ -201,9 +180,9 @@ export const evaluationSchema = z.object({
   advisory: z.boolean(),
   inputText: z.string(),
   outputText: z.string(),
-  outputSha256: hash,
+  outputSha256: hashSchema,
   engineVersion: z.string(),
-  engineSha256: hash,
+  engineSha256: hashSchema,
 })
 export type SubmissionEvaluation = z.output<typeof evaluationSchema>
 

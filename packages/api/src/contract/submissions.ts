@@ -13,7 +13,8 @@ import {
 } from './common'
 import { defineEndpoint } from './define'
 import { byHandAskedSchema } from './by-hand'
-import { movedSchema, textHash } from './moved'
+import { hashSchema } from './frozen'
+import { movedSchema } from './moved'
 import { submissionStates } from './moves/submission'
 import { challengeSchema, decisionSchema } from './reviews'
 import { standingSchema, standingStates } from './standing'
@@ -24,7 +25,6 @@ export * from './by-hand'
 export * from './data-difference'
 export * from './submission-content'
 
-const hash = textHash
 const words = paragraph().min(1, 'Say why.')
 const state = z.enum(submissionStates)
 
@@ -170,7 +170,7 @@ export const submissionSchema = z.object({
   revisions: z.array(
     z.object({
       revision: z.number().int(),
-      sha256: hash,
+      sha256: hashSchema,
       frozenAt: instant,
       verdict: verdictSchema,
       clausesMet: z.number().int(),
@@ -184,7 +184,7 @@ export const submissionSchema = z.object({
    * with `submissionContentSchema`.
    */
   text: z.string(),
-  sha256: hash,
+  sha256: hashSchema,
   evaluations: z.array(evaluationSchema),
   files: z.array(
     z.object({
@@ -194,7 +194,7 @@ export const submissionSchema = z.object({
       name: z.string(),
       contentType: z.string(),
       size: z.number().int(),
-      sha256: hash,
+      sha256: hashSchema,
     }),
   ),
   signatures: z.array(
@@ -202,7 +202,7 @@ export const submissionSchema = z.object({
       side: sideSchema,
       name: z.string().nullable(),
       meaning: z.enum(signatureMeanings),
-      sha256: hash,
+      sha256: hashSchema,
       /** The revision whose text it stands under. */
       revision: z.number().int(),
       signedAt: instant,
@@ -294,7 +294,7 @@ export const signSubmission = defineEndpoint({
   path: `${base}/sign`,
   access: 'submissions.sign',
   params,
-  body: z.object({ expectedVersion, sha256: hash }),
+  body: z.object({ expectedVersion, sha256: hashSchema }),
   response: movedSchema,
   fresh: true,
   summary: 'Signs and submits: everything is frozen, and the customer sees it.',

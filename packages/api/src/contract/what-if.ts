@@ -1,5 +1,6 @@
 import { canonicalText, parseClause, reasonCodes, type Clause } from '@evenrule/metrology'
 import { z } from 'zod'
+import { hashSchema } from './frozen'
 import { verdictSchema } from './submission-content'
 
 /** Readings a quote may leave out; as many as a challenge may name. */
@@ -7,7 +8,6 @@ export const mostLeftOut = 1000
 /** Longest quote, in characters of its canonical JSON. */
 export const longestQuote = 20_000
 
-const hash = z.string().regex(/^[0-9a-f]{64}$/)
 /** A number of the computation, or a day. */
 const figure = z.union([z.number(), z.string().max(40)])
 const ends = z.object({ lower: figure.nullable(), upper: figure.nullable() })
@@ -48,10 +48,10 @@ export type WhatIfOutcome = z.output<typeof whatIfOutcomeSchema>
 export const whatIfQuoteSchema = z.object({
   format: z.literal('evenrule.what-if/1'),
   /** SHA-256 of the submission's frozen text that it was tried on. */
-  submissionSha256: hash,
+  submissionSha256: hashSchema,
   /** Code of the study whose readings it is about, and the SHA-256 of those readings. */
   study: z.string().max(60),
-  dataSha256: hash,
+  dataSha256: hashSchema,
   /** The characteristic's unit; reference value and limits are in it. */
   unit: z.string().max(20),
   changed: z.object({
@@ -75,7 +75,7 @@ export const whatIfQuoteSchema = z.object({
     .max(50),
   /** The engine that computed it: the one the submission's own evaluations name. */
   engineVersion: z.string().max(40),
-  engineSha256: hash,
+  engineSha256: hashSchema,
 })
 export type WhatIfQuote = z.output<typeof whatIfQuoteSchema>
 

@@ -1,4 +1,4 @@
-import type { Clause, Verdict } from '@evenrule/metrology'
+import type { Verdict } from '@evenrule/metrology'
 import {
   boolean,
   date,
@@ -13,6 +13,8 @@ import {
   unique,
   uuid,
 } from 'drizzle-orm/pg-core'
+import type { Criterion } from '../../../contract/agreements-applies'
+import type { FrozenCharacteristic } from '../../../contract/frozen'
 import type { StudyState } from '../../../contract/moves/study'
 import type { ReadAs } from '../../../contract/readings'
 import { instant, ownerColumn, ownerPolicy, primaryId } from '../../db/columns'
@@ -23,33 +25,8 @@ import { measuringTasks } from '../parts/parts.table'
 import { relationships } from '../relationships/relationships.table'
 
 /** A clause as it was in force when the study was registered, with where it came from. */
-export interface FrozenClause {
-  clauseKey: string
-  clause: Clause
-  agreementId: string
-  agreementNumber: number
-  versionId: string
-  versionNumber: number
-  versionSha256: string
-  /** First day of the version in force. */
-  effectiveOn: string
-  scope: 'relationship' | 'part' | 'characteristic'
-}
-
-/** The limits a study is judged by, as they stood at registration. Decimal text as entered. */
-export interface FrozenCharacteristic {
-  characteristicId: string
-  partNumber: string
-  revision: string
-  number: number
-  name: string
-  nominal: string | null
-  lowerLimit: string | null
-  upperLimit: string | null
-  unit: string
-  class: 'ordinary' | 'significant' | 'safety'
-  processStandardDeviation: string | null
-}
+export type FrozenClause = Criterion
+export type { FrozenCharacteristic }
 
 /** The gauge as it stood at registration; decimal text as entered. */
 export interface FrozenGauge {
