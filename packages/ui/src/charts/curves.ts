@@ -10,6 +10,10 @@ export interface CurveSeries {
   style?: CurveStyle
 }
 
+/** Two lists that go together as points; what is not defined leaves a gap. */
+export const pointsOf = (xs: readonly number[], ys: readonly (number | null)[]) =>
+  xs.map((x, at) => ({ x, y: ys[at] ?? Number.NaN }))
+
 export interface CurveInput {
   series: readonly CurveSeries[]
   width: number

@@ -61,7 +61,6 @@ export const signWords = {
     `Rewards the wrong thing: ${names}. That is legal to agree on; sign it only if you want it.`,
   sign: 'Sign',
   afresh: 'Signing needs a fresh sign-in, so that it is surely you.',
-  afreshAct: 'Sign in afresh',
   hash: 'SHA-256 of the text',
   showText: 'Show the exact text',
   hideText: 'Hide the exact text',

@@ -21,7 +21,6 @@ export const carryOverWords = {
     `Carry ${formatCount(count, 'acceptance')} over to revision ${revision}?`,
   text: (revision: string) =>
     `You sign that what was accepted holds for revision ${revision} too: nominal, limits, unit and class of these characteristics are the same. The supplier is told, and it stands in the record of both sides.`,
-  signIn: 'Sign in again',
 } as const
 
 /** How an earlier acceptance stands for the current revision, and what else stops it. */

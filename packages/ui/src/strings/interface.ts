@@ -92,6 +92,7 @@ export const plotWords = {
   showNumbers: 'Show the numbers',
   hideNumbers: 'Hide the numbers',
   numbers: 'Numbers of the plot',
+  inUnit: (name: string, unit: string | null | undefined) => (unit ? `${name}, ${unit}` : name),
   margin: (value: string) => `margin ${value}`,
   marginWord: 'margin',
   mean: 'mean',

@@ -42,6 +42,9 @@ export const signInProblemWords: Record<SignInProblem, string> = {
     'A signature needs a sign-in that happened just now, and the provider used an older one. Sign in again and enter your credentials.',
 }
 
+/** What a signature asks for whose sign-in is not of the last minutes. */
+export const afreshWords = { act: 'Sign in afresh' } as const
+
 export const signedOutWords = {
   question: 'Are you signed out?',
   answer: 'Yes. Nobody can go on in your name in this browser window.',
