@@ -1,42 +1,27 @@
-import type { Browser, Page } from 'playwright-core'
+import type { Page } from 'playwright-core'
 import { afterAll, afterEach, beforeAll, describe, expect, it } from 'vitest'
-import { addresses, axeFaults, launch, picture, signIn, signOut, watchErrors } from './support'
+import { axeFaults, picture, TwoSides } from './support'
 
 const part = 'OC 12-118'
 const gauge = 'MM-07'
 
 describe('a submission where no criteria are agreed', () => {
-  let browser: Browser
+  const two = new TwoSides('no-criteria')
+  const { errors } = two
   let supplierPage: Page
   let customerPage: Page
-  let errors: string[]
   let submission = ''
-  const app = addresses()
 
   beforeAll(async () => {
-    browser = await launch()
-    const options = { viewport: { width: 1280, height: 860 }, locale: 'en-GB', timezoneId: 'Europe/Berlin' }
-    const [supplier, customer] = [await browser.newContext(options), await browser.newContext(options)]
-    errors = watchErrors(supplier, watchErrors(customer))
-    supplierPage = await supplier.newPage()
-    customerPage = await customer.newPage()
-    for (const page of [supplierPage, customerPage]) page.setDefaultTimeout(20_000)
+    await two.open()
+    ;({ supplier: supplierPage, customer: customerPage } = two)
   })
-  afterAll(() => browser.close())
-  afterEach(async ({ task }) => {
-    if (task.result?.state !== 'fail') return
-    await picture(supplierPage, 'no-criteria-failed-supplier')
-    await picture(customerPage, 'no-criteria-failed-customer')
-  })
+  afterAll(() => two.close())
+  afterEach((step) => two.keep(step))
 
-  const organisation = (page: Page): string => /organisations\/([^/?#]+)/.exec(page.url())?.[1] ?? ''
-  const at = (page: Page, side: 'supplier' | 'customer', path: string) =>
-    page.goto(`${app[side]}/organisations/${organisation(page)}/${path}`)
   const as = async (side: 'supplier' | 'customer', name: string) => {
-    const page = side === 'supplier' ? supplierPage : customerPage
-    await signOut(page)
-    await signIn(page, app[side], name)
-    if (submission) await at(page, side, submission)
+    const page = await two.as(side, name)
+    if (submission) await two.at(side, submission)
     return page
   }
   /** Presses a move's button on the page and then in its dialog. */
@@ -47,7 +32,7 @@ describe('a submission where no criteria are agreed', () => {
 
   it('the customer has house terms that nobody signed', async () => {
     const page = await as('customer', 'Elin Tor')
-    const base = `/api/v1/organisations/${organisation(page)}/house-terms`
+    const base = `/api/v1/organisations/${two.organisation('customer')}/house-terms`
     const answers = await page.evaluate(async (address) => {
       const send = async (path: string, body: unknown) => {
         const answer = await fetch(path, {
@@ -74,7 +59,7 @@ describe('a submission where no criteria are agreed', () => {
 
   it('the supplier prepares it, and the draft says that no criteria are agreed', async () => {
     const page = await as('supplier', 'Ines Calder')
-    await at(page, 'supplier', `submissions?waitsOn=all&search=${encodeURIComponent(part)}`)
+    await two.at('supplier', `submissions?waitsOn=all&search=${encodeURIComponent(part)}`)
     await page
       .getByRole('link', { name: new RegExp(gauge) })
       .first()
@@ -135,10 +120,10 @@ describe('a submission where no criteria are agreed', () => {
 
   it('lists and prints it as such', async () => {
     const page = customerPage
-    await at(page, 'customer', `submissions?waitsOn=all&verdict=none&search=${encodeURIComponent(part)}`)
+    await two.at('customer', `submissions?waitsOn=all&verdict=none&search=${encodeURIComponent(part)}`)
     const row = page.getByRole('row', { name: new RegExp(gauge) }).first()
     await row.getByText('no criteria agreed').waitFor()
-    await at(page, 'customer', `${submission}/print`)
+    await two.at('customer', `${submission}/print`)
     await page.getByText('No criteria agreed.', { exact: true }).waitFor()
     await page.getByText(/for information only/).waitFor()
     await picture(page, 'no-criteria-4-print')

@@ -1,41 +1,24 @@
-import type { Browser, BrowserContext, Page } from 'playwright-core'
+import type { Page } from 'playwright-core'
 import { afterAll, afterEach, beforeAll, describe, expect, it, vi } from 'vitest'
-import { addresses, axeFaults, launch, picture, signIn, signOut, watchErrors } from './support'
+import { axeFaults, dayIn, picture, signIn, signOut, TwoSides } from './support'
 
 const gauge = 'DG-9'
 const words = `Please show it again ${Date.now().toString(36)}.`
 
-/** A day so many days from now, as a date field takes it. */
-const inDays = (days: number): string =>
-  new Date(Date.now() + days * 86_400_000).toLocaleDateString('sv-SE', { timeZone: 'Europe/Berlin' })
-
 describe('a request for proof, from the question to the answer', () => {
-  let browser: Browser
-  let supplier: BrowserContext
-  let customer: BrowserContext
+  const two = new TwoSides('request')
+  const { app, errors } = two
   let supplierPage: Page
   let customerPage: Page
-  let errors: string[]
   /** Path of the request's page in either app, below its organisation. */
   let path = ''
-  const app = addresses()
 
   beforeAll(async () => {
-    browser = await launch()
-    const options = { viewport: { width: 1280, height: 860 }, locale: 'en-GB', timezoneId: 'Europe/Berlin' }
-    supplier = await browser.newContext(options)
-    customer = await browser.newContext(options)
-    errors = watchErrors(supplier, watchErrors(customer))
-    supplierPage = await supplier.newPage()
-    customerPage = await customer.newPage()
-    for (const page of [supplierPage, customerPage]) page.setDefaultTimeout(20_000)
+    await two.open()
+    ;({ supplier: supplierPage, customer: customerPage } = two)
   })
-  afterAll(() => browser.close())
-  afterEach(async ({ task }) => {
-    if (task.result?.state !== 'fail') return
-    await picture(supplierPage, 'request-failed-supplier')
-    await picture(customerPage, 'request-failed-customer')
-  })
+  afterAll(() => two.close())
+  afterEach((step) => two.keep(step))
 
   it('the customer asks a supplier for proof of a measuring task by a day', async () => {
     const page = customerPage
@@ -55,7 +38,7 @@ describe('a request for proof, from the question to the answer', () => {
     // What is missing is said at its field, and nothing that was chosen is lost.
     await page.getByRole('button', { name: 'Ask for proof' }).click()
     await page.getByText('Enter the day by which you want it.').waitFor()
-    await page.getByLabel(/Due by/).fill(inDays(9))
+    await page.getByLabel(/Due by/).fill(dayIn(9))
     await page.getByRole('combobox', { name: 'Occasion' }).press('ArrowDown')
     await page.getByRole('option', { name: 'yearly' }).click()
     await page.getByLabel(/should know/).fill(words)

@@ -1,19 +1,8 @@
-import type { Browser, BrowserContext, Locator, Page } from 'playwright-core'
+import type { Browser, Page } from 'playwright-core'
 import { afterAll, afterEach, beforeAll, describe, expect, it } from 'vitest'
-import { addresses, axeFaults, launch, picture, signIn, watchErrors } from './support'
+import { addresses, axeFaults, choose, dayIn, launch, openWindow, picture, signIn } from './support'
 
 const part = `RND-${Date.now().toString(36)}`
-
-/** Picks an entry of a drop-down list, typing first where it searches. */
-async function choose(within: Locator, label: string | RegExp, entry: string | RegExp, typed?: string) {
-  const field = within.getByRole('combobox', { name: label })
-  await field.focus()
-  if (typed) await field.pressSequentially(typed)
-  else await field.press('ArrowDown')
-  await within.page().getByRole('option', { name: entry }).first().click()
-}
-
-const today = (): string => new Date().toLocaleDateString('sv-SE', { timeZone: 'Europe/Berlin' })
 
 /** A part number with one characteristic of its own, entered through the product's own routes. */
 async function enterPart(page: Page, number: string, partner: string): Promise<void> {
@@ -47,7 +36,7 @@ async function enterPart(page: Page, number: string, partner: string): Promise<v
 
 describe('a negotiation in five rounds', () => {
   let browser: Browser
-  let errors: string[] = []
+  const errors: string[] = []
   let mara: Page
   let sanna: Page
   let nadia: Page
@@ -55,25 +44,18 @@ describe('a negotiation in five rounds', () => {
   const app = addresses()
   const pages = () => [mara, sanna, nadia]
 
-  const open = async (
-    side: 'supplier' | 'customer',
-    name: string,
-  ): Promise<{ page: Page; context: BrowserContext }> => {
-    const context = await browser.newContext({
-      ...{ viewport: { width: 1280, height: 860 }, locale: 'en-GB', timezoneId: 'Europe/Berlin' },
-    })
-    errors = watchErrors(context, errors)
-    const page = await context.newPage()
+  const open = async (side: 'supplier' | 'customer', name: string): Promise<Page> => {
+    const page = await openWindow(browser, errors)
     page.setDefaultTimeout(60_000)
     await signIn(page, app[side], name)
-    return { page, context }
+    return page
   }
   beforeAll(async () => {
     browser = await launch()
     // One after the other: the sign-in of three people at once would wait for the slowest.
-    mara = (await open('customer', 'Mara Lindqvist')).page
-    sanna = (await open('customer', 'Sanna Reve')).page
-    nadia = (await open('supplier', 'Nadia Ferro')).page
+    mara = await open('customer', 'Mara Lindqvist')
+    sanna = await open('customer', 'Sanna Reve')
+    nadia = await open('supplier', 'Nadia Ferro')
   }, 240_000)
   afterAll(() => browser.close())
   afterEach(async ({ task }) => {
@@ -102,7 +84,7 @@ describe('a negotiation in five rounds', () => {
     await mara.getByLabel('Margin either way').fill('5')
     await mara.getByRole('button', { name: 'Set terms' }).click()
     await mara.getByLabel('An acceptance holds for').fill('24')
-    await mara.getByLabel(/First day in force/).fill(today())
+    await mara.getByLabel(/First day in force/).fill(dayIn(0))
     await picture(mara, 'rounds-1-proposal')
     await mara.getByRole('button', { name: /^Send/ }).click()
     await mara.getByText(/Round 1, ours, waits for an answer/).waitFor()
@@ -210,7 +192,7 @@ describe('a negotiation in five rounds', () => {
       ['customer', 'Joren Vask', mara],
       ['supplier', 'Ulf Rask', nadia],
     ] as const) {
-      const { page, context } = await open(side, name)
+      const page = await open(side, name)
       await page.goto(at.url())
       await page.getByRole('button', { name: 'Read and sign' }).click()
       hashes.push(await page.locator('#sign code').innerText())
@@ -221,7 +203,7 @@ describe('a negotiation in five rounds', () => {
         .first()
         .waitFor()
       await picture(page, `rounds-7-signed-${side}`)
-      await context.close()
+      await page.context().close()
     }
     expect(hashes[0]).toMatch(/^[0-9a-f]{64}$/)
     expect(hashes[1]).toBe(hashes[0])

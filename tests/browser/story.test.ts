@@ -1,29 +1,10 @@
-import type { Browser, BrowserContext, Locator, Page } from 'playwright-core'
+import type { Page } from 'playwright-core'
 import { afterAll, afterEach, beforeAll, describe, expect, it, vi } from 'vitest'
-import { addresses, axeFaults, launch, picture, signIn, signOut, watchErrors } from './support'
+import { axeFaults, choose, dayIn, picture, TwoSides } from './support'
 
 const part = '9022-005'
 const gauge = 'HG-6'
 const studyCode = `HG-6 story ${Date.now().toString(36)}`
-
-/** Picks an entry of a drop-down list, typing first where it searches. */
-async function choose(
-  within: Page | Locator,
-  label: string | RegExp,
-  entry: string | RegExp,
-  typed?: string,
-) {
-  const field = within.getByRole('combobox', { name: label })
-  // By keyboard, as the field offers it.
-  await field.focus()
-  if (typed) await field.pressSequentially(typed)
-  else await field.press('ArrowDown')
-  const page = 'mouse' in within ? within : within.page()
-  await page.getByRole('option', { name: entry }).first().click()
-}
-
-/** Today as an address bar or a date field writes it. */
-const today = (): string => new Date().toLocaleDateString('sv-SE', { timeZone: 'Europe/Berlin' })
 
 /** Readings on a master of 61.49 mm, as a spreadsheet with a decimal comma saves them. */
 const csv = (): Buffer => {
@@ -33,42 +14,25 @@ const csv = (): Buffer => {
 }
 
 describe('the main job, from the first proposal to the acceptance', () => {
-  let browser: Browser
-  let supplier: BrowserContext
-  let customer: BrowserContext
+  const two = new TwoSides('story')
+  const { app, errors } = two
   let supplierPage: Page
   let customerPage: Page
-  let errors: string[]
   /** Path of the submission's page in the supplier's app. */
   let submissionPath = ''
-  const app = addresses()
 
   beforeAll(async () => {
-    browser = await launch()
-    const options = { viewport: { width: 1280, height: 860 }, locale: 'en-GB', timezoneId: 'Europe/Berlin' }
-    supplier = await browser.newContext(options)
-    customer = await browser.newContext(options)
-    errors = watchErrors(supplier, watchErrors(customer))
-    supplierPage = await supplier.newPage()
-    customerPage = await customer.newPage()
-    for (const page of [supplierPage, customerPage]) page.setDefaultTimeout(20_000)
+    await two.open()
+    ;({ supplier: supplierPage, customer: customerPage } = two)
   })
-  afterAll(() => browser.close())
-  afterEach(async ({ task }) => {
-    if (task.result?.state !== 'fail') return
-    await picture(supplierPage, 'story-failed-supplier')
-    await picture(customerPage, 'story-failed-customer')
-  })
+  afterAll(() => two.close())
+  afterEach((step) => two.keep(step))
 
-  const as = async (page: Page, side: 'supplier' | 'customer', name: string) => {
-    await signOut(page)
-    await signIn(page, app[side], name)
-  }
   const open = (page: Page, link: string) => page.getByRole('link', { name: link }).first().click()
   const heading = (page: Page) => page.getByRole('heading', { level: 1 })
 
   it('the customer proposes criteria for a part', async () => {
-    await as(customerPage, 'customer', 'Mara Lindqvist')
+    await two.as('customer', 'Mara Lindqvist')
     await open(customerPage, 'Agreements')
     await customerPage.getByRole('button', { name: 'Propose criteria' }).first().click()
     const dialog = customerPage.getByRole('dialog')
@@ -79,7 +43,7 @@ describe('the main job, from the first proposal to the acceptance', () => {
     await customerPage.getByRole('heading', { name: 'Our proposal' }).waitFor()
     await customerPage.getByRole('button', { name: /^Bias: equivalence/ }).click()
     await customerPage.getByLabel('Margin either way').fill('5')
-    await customerPage.getByLabel(/First day in force/).fill(today())
+    await customerPage.getByLabel(/First day in force/).fill(dayIn(0))
     await customerPage.getByLabel('Comment to the other side').fill('Half the usual margin for the spring.')
     await picture(customerPage, 'story-1-proposal')
     await customerPage.getByRole('button', { name: /^Send/ }).click()
@@ -87,7 +51,7 @@ describe('the main job, from the first proposal to the acceptance', () => {
   })
 
   it('the supplier sees what the clause does and answers with a change', async () => {
-    await as(supplierPage, 'supplier', 'Nadia Ferro')
+    await two.as('supplier', 'Nadia Ferro')
     await supplierPage
       .getByRole('link', { name: /Answer the proposal/ })
       .first()
@@ -115,7 +79,7 @@ describe('the main job, from the first proposal to the acceptance', () => {
       [supplierPage, 'supplier', 'Ulf Rask'],
     ] as const) {
       const address = new URL(page.url()).pathname
-      await as(page, side, name)
+      await two.as(side, name)
       await page.goto(app[side] + address)
       await page.getByText('Chance to meet the clause, by true bias').first().waitFor()
       await page.getByRole('button', { name: 'Read and sign' }).click()
@@ -130,7 +94,7 @@ describe('the main job, from the first proposal to the acceptance', () => {
   })
 
   it('the supplier plans and registers a study before its first reading', async () => {
-    await as(supplierPage, 'supplier', 'Nadia Ferro')
+    await two.as('supplier', 'Nadia Ferro')
     await open(supplierPage, 'Studies')
     await supplierPage
       .getByRole('link', { name: 'Plan a study' })
@@ -158,7 +122,7 @@ describe('the main job, from the first proposal to the acceptance', () => {
     await supplierPage.getByText('decimal comma', { exact: false }).first().waitFor()
     await supplierPage.getByText('25 readings').first().waitFor()
     await supplierPage.getByLabel('Appraiser code').fill('A1')
-    await supplierPage.getByLabel('Day of collection').fill(today())
+    await supplierPage.getByLabel('Day of collection').fill(dayIn(0))
     await picture(supplierPage, 'story-5-readings')
     await supplierPage.getByRole('button', { name: 'Store and compute' }).click()
     await supplierPage.getByRole('dialog').getByRole('button', { name: 'Store and compute' }).click()
@@ -173,7 +137,7 @@ describe('the main job, from the first proposal to the acceptance', () => {
     await supplierPage.getByRole('dialog').getByRole('button', { name: 'Send for signature' }).click()
     await supplierPage.getByText(/waits for a signature/).waitFor()
     submissionPath = new URL(supplierPage.url()).pathname
-    await as(supplierPage, 'supplier', 'Ulf Rask')
+    await two.as('supplier', 'Ulf Rask')
     await supplierPage.goto(app.supplier + submissionPath)
     await supplierPage.getByRole('button', { name: 'Sign and submit' }).click()
     await supplierPage.getByRole('dialog').getByRole('button', { name: 'Sign and submit' }).click()
@@ -182,7 +146,7 @@ describe('the main job, from the first proposal to the acceptance', () => {
   })
 
   it('the customer recomputes it in the browser, byte for byte, and accepts', async () => {
-    await as(customerPage, 'customer', 'Mara Lindqvist')
+    await two.as('customer', 'Mara Lindqvist')
     await open(customerPage, 'Submissions')
     await customerPage
       .getByRole('link', { name: new RegExp(gauge) })

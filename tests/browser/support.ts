@@ -1,6 +1,6 @@
 import { mkdirSync, readFileSync, writeFileSync } from 'node:fs'
 import { createRequire } from 'node:module'
-import { chromium, type Browser, type BrowserContext, type Page } from 'playwright-core'
+import { chromium, type Browser, type BrowserContext, type Locator, type Page } from 'playwright-core'
 
 const need = (name: string): string => {
   const value = process.env[name]
@@ -107,4 +107,81 @@ export function watchErrors(context: BrowserContext, errors: string[] = []): str
     })
   })
   return errors
+}
+
+/** A day so many days from now as a date field takes it, in the time zone of the demonstration's relationships. */
+export const dayIn = (days: number): string =>
+  new Date(Date.now() + days * 86_400_000).toLocaleDateString('sv-SE', { timeZone: 'Europe/Berlin' })
+
+/** Picks an entry of a drop-down list by keyboard, typing first where it searches. */
+export async function choose(
+  within: Page | Locator,
+  label: string | RegExp,
+  entry: string | RegExp,
+  typed?: string,
+): Promise<void> {
+  const field = within.getByRole('combobox', { name: label })
+  await field.focus()
+  if (typed) await field.pressSequentially(typed)
+  else await field.press('ArrowDown')
+  const page = 'mouse' in within ? within : within.page()
+  await page.getByRole('option', { name: entry }).first().click()
+}
+
+/** A window of its own, as one person at a desk has it. */
+export async function openWindow(browser: Browser, errors: string[] = []): Promise<Page> {
+  const context = await browser.newContext({
+    viewport: { width: 1280, height: 860 },
+    locale: 'en-GB',
+    timezoneId: 'Europe/Berlin',
+  })
+  watchErrors(context, errors)
+  const page = await context.newPage()
+  page.setDefaultTimeout(20_000)
+  return page
+}
+
+/** A window for each side, side by side, with the errors that either writes to its console. */
+export class TwoSides {
+  /** Set once `open` has run. */
+  supplier!: Page
+  customer!: Page
+  readonly errors: string[] = []
+  readonly app = addresses()
+  #browser!: Browser
+  /** @param story name of the pictures of what failed */
+  constructor(private readonly story: string) {}
+
+  async open(): Promise<void> {
+    this.#browser = await launch()
+    this.supplier = await openWindow(this.#browser, this.errors)
+    this.customer = await openWindow(this.#browser, this.errors)
+  }
+
+  close = (): Promise<void> => this.#browser.close()
+
+  /** Changes who sits at the window of a side. */
+  async as(side: 'supplier' | 'customer', name: string): Promise<Page> {
+    const page = this[side]
+    await signOut(page)
+    await signIn(page, this.app[side], name)
+    return page
+  }
+
+  /** Opens a page below the organisation of whoever sits there. */
+  async at(side: 'supplier' | 'customer', path: string): Promise<void> {
+    await this[side].goto(`${this.app[side]}/organisations/${this.organisation(side)}/${path}`)
+  }
+
+  /** Id of the organisation whose page stands in the window of a side. */
+  organisation(side: 'supplier' | 'customer'): string {
+    return /organisations\/([^/?#]+)/.exec(this[side].url())?.[1] ?? ''
+  }
+
+  /** Both windows as they stand when a step has failed. */
+  async keep({ task }: { task: { result?: { state: string } } }): Promise<void> {
+    if (task.result?.state !== 'fail') return
+    for (const side of ['supplier', 'customer'] as const)
+      await picture(this[side], `${this.story}-failed-${side}`)
+  }
 }

@@ -1,79 +1,37 @@
-import type { Browser, BrowserContext, Locator, Page } from 'playwright-core'
+import type { Page } from 'playwright-core'
 import { afterAll, afterEach, beforeAll, describe, expect, it } from 'vitest'
-import {
-  addresses,
-  axeFaults,
-  launch,
-  moveClock,
-  picture,
-  signIn,
-  signOut,
-  watchErrors,
-} from '../browser/support'
+import { axeFaults, choose, dayIn, moveClock, picture, TwoSides } from '../browser/support'
 
 const gauge = 'BG-14'
-/** A day some days from now as a date field takes it, in the relationship's time zone. */
-const dayIn = (days: number): string =>
-  new Date(Date.now() + days * 86_400_000).toLocaleDateString('sv-SE', { timeZone: 'Europe/Berlin' })
-
-/** Picks an entry of a drop-down list by keyboard. */
-async function choose(within: Page | Locator, label: string | RegExp, entry: string | RegExp) {
-  const field = within.getByRole('combobox', { name: label })
-  await field.focus()
-  await field.press('ArrowDown')
-  const page = 'mouse' in within ? within : within.page()
-  await page.getByRole('option', { name: entry }).first().click()
-}
-
 describe('a challenge of two readings, its correction, and an acceptance whose condition lapses', () => {
-  let browser: Browser
+  const two = new TwoSides('challenge')
+  const { errors } = two
   let supplierPage: Page
   let customerPage: Page
-  let errors: string[]
   /** Path of the submission's page below the organisation. */
   let submission = ''
   const corrected = { at: [2, 10], texts: ['', ''] }
-  const app = addresses()
 
-  const pageOf = async (context: BrowserContext): Promise<Page> => {
-    const page = await context.newPage()
-    page.setDefaultTimeout(20_000)
-    return page
-  }
   beforeAll(async () => {
     moveClock(0)
-    browser = await launch()
-    const options = { viewport: { width: 1280, height: 860 }, locale: 'en-GB', timezoneId: 'Europe/Berlin' }
-    const [supplier, customer] = [await browser.newContext(options), await browser.newContext(options)]
-    errors = watchErrors(supplier, watchErrors(customer))
-    supplierPage = await pageOf(supplier)
-    customerPage = await pageOf(customer)
+    await two.open()
+    ;({ supplier: supplierPage, customer: customerPage } = two)
   })
   afterAll(async () => {
     moveClock(0)
-    await browser.close()
+    await two.close()
   })
-  afterEach(async ({ task }) => {
-    if (task.result?.state !== 'fail') return
-    await picture(supplierPage, 'challenge-failed-supplier')
-    await picture(customerPage, 'challenge-failed-customer')
-  })
+  afterEach((step) => two.keep(step))
 
-  const at = (page: Page, side: 'supplier' | 'customer', path: string) => {
-    const organisation = /organisations\/([^/?#]+)/.exec(page.url())?.[1]
-    return page.goto(`${app[side]}/organisations/${organisation}/${path}`)
-  }
   const as = async (side: 'supplier' | 'customer', name: string) => {
-    const page = side === 'supplier' ? supplierPage : customerPage
-    await signOut(page)
-    await signIn(page, app[side], name)
-    if (submission) await at(page, side, submission)
+    const page = await two.as(side, name)
+    if (submission) await two.at(side, submission)
     return page
   }
 
   it('the customer challenges two readings, chosen in the plot and in the list', async () => {
     const page = await as('customer', 'Mara Lindqvist')
-    await at(page, 'customer', `submissions?search=${gauge}`)
+    await two.at('customer', `submissions?search=${gauge}`)
     await page
       .getByRole('link', { name: new RegExp(gauge) })
       .first()
@@ -222,12 +180,12 @@ describe('a challenge of two readings, its correction, and an acceptance whose c
         .waitFor()
     }
     await picture(customerPage, 'challenge-8-lapsed')
-    await at(customerPage, 'customer', `submissions?waitsOn=all&state=lapsed&search=${gauge}`)
+    await two.at('customer', `submissions?waitsOn=all&state=lapsed&search=${gauge}`)
     await customerPage.getByText('lapsed', { exact: true }).first().waitFor()
   })
 
   it('leaves no error in either console, and no fault that axe finds', async () => {
-    await at(customerPage, 'customer', submission)
+    await two.at('customer', submission)
     await customerPage
       .getByText(/^Lapsed since/)
       .first()
