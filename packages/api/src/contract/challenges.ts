@@ -56,7 +56,6 @@ export const challengeMessageSchema = z.object({
   whatIf: z.string().nullable(),
   createdAt: instant,
 })
-export type ChallengeMessage = z.output<typeof challengeMessageSchema>
 
 export const challengeSchema = z.object({
   id: uuid,

@@ -14,7 +14,6 @@ export const fileSchema = z.object({
   sha256: z.string(),
   createdAt: instant,
 })
-export type StoredFile = z.output<typeof fileSchema>
 
 export const readFile = defineEndpoint({
   method: 'get',

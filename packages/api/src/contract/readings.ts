@@ -95,7 +95,6 @@ export const noteCodes = [
   'looks-like-values',
   'looks-like-deviations',
 ] as const
-export type NoteCode = (typeof noteCodes)[number]
 
 export const readingsNoteSchema = z.object({
   code: z.enum(noteCodes),

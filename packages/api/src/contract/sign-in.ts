@@ -23,7 +23,6 @@ export const organisationOfPerson = z.object({
   /** The sides it has in its relationships; empty for one that has none yet. */
   sides: z.array(sideSchema),
 })
-export type OrganisationOfPerson = z.output<typeof organisationOfPerson>
 
 export const readSession = defineEndpoint({
   method: 'get',

@@ -111,7 +111,6 @@ const evaluationSchema = z.object({
     })
     .nullable(),
 })
-export type StudyEvaluation = z.output<typeof evaluationSchema>
 
 export const studySchema = z.object({
   id: uuid,

@@ -5,10 +5,6 @@ import type { Interval } from '../types'
 /** 1 − value in decimal, so that 1 − 0.95 is 0.05. */
 export const complement = (value: number): number => toNumber(subtract(rational(1), rational(value)))
 
-/** 1 − 2·value in decimal. */
-export const complementOfTwice = (value: number): number =>
-  toNumber(subtract(rational(1), multiply(rational(2), rational(value))))
-
 /** t(1 − alpha/2, df): the two-sided interval at confidence 1 − alpha. Domain: 0 < alpha < 1, df > 0. */
 export const twoSidedCritical = (alpha: number, df: number): number => oneSidedCritical(alpha / 2, df)
 

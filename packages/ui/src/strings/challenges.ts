@@ -6,7 +6,7 @@ import type {
   ChallengeTargetKind,
 } from '@evenrule/api/contract/challenges'
 import type { ChallengeState } from '@evenrule/api/contract/moves/challenge'
-import { countWord, formatCount, formatDate, joinWords } from '../format'
+import { formatCount, formatDate, joinWords } from '../format'
 import type { Parties } from './submissions'
 
 /** Files that go with words. */
@@ -184,7 +184,6 @@ export const answerWords = {
   noProposal:
     'No proposal of yours names this challenge yet. Begin one from the challenge, send it, then answer with it.',
   changeCriterion: 'Change the criterion',
-  toProposal: 'Open the proposal',
   seeProposal: 'Read the proposal',
 } as const
 
@@ -349,6 +348,3 @@ export const waitingWords = {
         ? `${formatCount(days, 'day')} left`
         : `${formatCount(-days, 'day')} over`,
 } as const
-
-export const countOfChallenges = (count: number): string =>
-  `${countWord(count)} ${count === 1 ? 'challenge is' : 'challenges are'} not settled`

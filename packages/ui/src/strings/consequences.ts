@@ -24,7 +24,6 @@ export const biasText = (bias: number, unit: Unit): string =>
 export const consequenceWords = {
   heading: (subject: string) => `What the ${subject.toLowerCase()} clause does`,
   more: 'Everything this clause does',
-  moreLabel: (subject: string) => `Everything the ${subject.toLowerCase()} clause does`,
   inForce: 'in force',
   proposal: 'proposal',
   chance: 'Chance to meet the clause, by true bias',
@@ -86,7 +85,6 @@ export const clausePageWords = {
   },
   rewardsWrong: (faults: string) => `It can reward the wrong thing: ${faults}.`,
   takenAway: 'This proposal takes the clause away: nothing is asked here any more.',
-  noBefore: 'Nothing of the kind is asked so far.',
 } as const
 
 /** The gauge a clause asks for, and the least study, in words for whoever buys or repairs gauges. */
@@ -125,8 +123,6 @@ export const askedWords = {
 /** What clauses without a rule of chance ask, plainly. */
 export const plainWords = {
   heading: 'What it asks',
-  noChance:
-    'No readings decide it, so there is no chance to compute: it asks for something that can be seen.',
   design: (readings: number) =>
     `A study of at least ${formatCount(readings, 'reading')}. Whoever takes fewer does not meet it, whatever the readings say.`,
   registered: 'It must be registered before its first reading, so that nobody picks the best of several.',

@@ -1,5 +1,5 @@
 import type { houseTerms } from '@evenrule/api/contract'
-import { capital, countWord, formatCount, formatDate, joinWords } from '../format'
+import { capital, countWord, formatCount, joinWords } from '../format'
 import { several } from './agreements'
 
 export const houseTermsNames = {
@@ -88,7 +88,6 @@ export const houseTermsWords = {
   next: 'Begin a draft from these',
   offer: 'Offer to suppliers',
   propose: 'Begin a proposal from these',
-  changes: (number: number) => `What changed since house terms ${number}`,
 } as const
 
 /** Offering published house terms to chosen suppliers. */
@@ -115,6 +114,3 @@ export const offerRefusalWords: Record<(typeof houseTerms.offerRefusals)[number]
   'clauses-cannot-be-agreed': 'a clause can be computed for none of its characteristics',
   'not-found': 'there is no relationship any more',
 }
-
-/** When a version was published. */
-export const publishedText = (at: string | null): string => (at ? formatDate(at) : '')

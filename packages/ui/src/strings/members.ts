@@ -52,7 +52,6 @@ export const memberWords = {
   organisationNameHint: 'Your customers and suppliers see it too.',
   timeZone: 'Time zone',
   timeZoneHint: 'Days, such as when a calibration is due, are judged by the calendar here.',
-  timeZoneMissing: 'Choose a time zone from the list.',
   judged: (zone: string) => `Days are judged by the calendar of ${zone.replaceAll('_', ' ')}.`,
   editOrganisation: 'Change name or time zone',
   editOrganisationTitle: 'Change the organisation',

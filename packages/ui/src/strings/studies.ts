@@ -226,9 +226,6 @@ export const entryWords = {
   toRow: (rows: number) => `${formatCount(rows, 'row')} in all`,
   errors: (count: number) => `${formatCount(count, 'cell')} without a readable number`,
   errorsText: 'Nothing is stored while they stand: mend them, or leave their rows out.',
-  errorCell: 'Cell',
-  errorText: 'Stands there',
-  errorMend: 'What is wrong',
   moreErrors: (count: number) => `and ${formatNumber(count)} more`,
   emptyCell: '(empty)',
   leaveOut: (count: number) => `Leave ${count === 1 ? 'this row' : `these ${formatNumber(count)} rows`} out`,
@@ -264,7 +261,6 @@ export const studyResultWords = {
   question: (gauge: string, count: number) =>
     `Is ${gauge} fit for these ${countWord(count)} characteristics?`,
   prepare: 'Prepare a submission',
-  prepareFor: (customer: string) => `Prepare a submission for ${customer}`,
   correct: 'Correct readings',
   taskHeading: (characteristic: string, part: string, customer: string) =>
     `${characteristic}, ${part}, ${customer}`,

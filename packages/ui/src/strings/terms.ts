@@ -43,7 +43,6 @@ export const termWords = {
   heading: 'Terms',
   intro: 'What becomes of an acceptance later, and who may sign.',
   notSaid: 'not said here',
-  notSaidCounts: (what: string) => `not said here; then counts: ${what}`,
   said: (count: number) =>
     count === 0
       ? 'Nothing is said here.'

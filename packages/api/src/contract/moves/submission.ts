@@ -365,10 +365,6 @@ export const movesNamed = (name: SubmissionMoveName, from: SubmissionState | nul
       (from === null ? move.from.length === 0 : (move.from as readonly SubmissionState[]).includes(from)),
   )
 
-/** Whether a move of that name may start from the state. */
-export const mayStart = (name: SubmissionMoveName, from: SubmissionState): boolean =>
-  movesNamed(name, from).length > 0
-
 /** Which side the next step is up to; null where nothing waits. */
 export const waitsOn: Record<SubmissionState, Side | null> = {
   draft: 'supplier',

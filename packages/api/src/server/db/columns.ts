@@ -4,9 +4,9 @@ import { v7 } from 'uuid'
 
 export const newId = (): string => v7()
 
-/** The organisation of the running transaction; null (no rows) where none is set. */
-export const currentOrg = sql.raw(`nullif(current_setting('app.org_id', true), '')::uuid`)
-export const currentUser = sql.raw(`nullif(current_setting('app.user_id', true), '')::uuid`)
+/** SQL: the organisation and the person of the running transaction; null (no rows) where none is set. */
+export const currentOrg = `nullif(current_setting('app.org_id', true), '')::uuid`
+export const currentUser = `nullif(current_setting('app.user_id', true), '')::uuid`
 
 /** An instant as ISO 8601 text in UTC, so that what is stored, signed and shown is the same string. */
 export const instant = customType<{ data: string; driverData: string }>({
@@ -38,11 +38,11 @@ export const ownerPolicy = (name: string, column = 'org_id') =>
     as: 'permissive',
     for: 'all',
     to: tenantRoles,
-    using: sql.raw(`${column} = nullif(current_setting('app.org_id', true), '')::uuid`),
-    withCheck: sql.raw(`${column} = nullif(current_setting('app.org_id', true), '')::uuid`),
+    using: sql.raw(`${column} = ${currentOrg}`),
+    withCheck: sql.raw(`${column} = ${currentOrg}`),
   })
 
-const party = `(supplier_org_id = nullif(current_setting('app.org_id', true), '')::uuid or customer_org_id = nullif(current_setting('app.org_id', true), '')::uuid)`
+const party = `(supplier_org_id = ${currentOrg} or customer_org_id = ${currentOrg})`
 
 /** Rows of a relationship: seen and written by its two parties. */
 export const sharedPolicy = (name: string) =>
@@ -74,10 +74,10 @@ export const restrictPolicy = (
 
 /** SQL: the row's column names the side that the current organisation has in this row's relationship. */
 export const ownSideOnly = (sideColumn: string): string =>
-  `((${sideColumn} = 'supplier' and supplier_org_id = nullif(current_setting('app.org_id', true), '')::uuid) or (${sideColumn} = 'customer' and customer_org_id = nullif(current_setting('app.org_id', true), '')::uuid))`
+  `((${sideColumn} = 'supplier' and supplier_org_id = ${currentOrg}) or (${sideColumn} = 'customer' and customer_org_id = ${currentOrg}))`
 
-export const supplierOnly = `supplier_org_id = nullif(current_setting('app.org_id', true), '')::uuid`
-export const customerOnly = `customer_org_id = nullif(current_setting('app.org_id', true), '')::uuid`
+export const supplierOnly = `supplier_org_id = ${currentOrg}`
+export const customerOnly = `customer_org_id = ${currentOrg}`
 
 interface SharedTable {
   relationshipId: AnyPgColumn

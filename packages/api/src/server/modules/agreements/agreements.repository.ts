@@ -82,8 +82,6 @@ export async function deleteAgreement({ tx }: Tenant, { relationshipId, id }: Ag
   await tx.delete(agreements).where(and(eq(agreements.relationshipId, relationshipId), eq(agreements.id, id)))
 }
 
-export type VersionToday = Awaited<ReturnType<typeof selectVersions>>[number]
-
 /** Every version of an agreement that this side may see, with its state today; drafts first, then the newest. */
 export async function selectVersions(tenant: Tenant, { relationshipId, id }: AgreementRow) {
   return tenant.tx

@@ -13,7 +13,7 @@ import {
 } from 'drizzle-orm/pg-core'
 import type { HouseTermsState } from '../../../contract/moves/house-terms'
 import type { Terms } from '../../../contract/terms'
-import { instant, ownerColumn, ownerPolicy, primaryId, restrictPolicy } from '../../db/columns'
+import { currentOrg, instant, ownerColumn, ownerPolicy, primaryId, restrictPolicy } from '../../db/columns'
 import { organisations } from '../organisations/organisations.table'
 
 /**
@@ -53,7 +53,7 @@ export const houseTerms = pgTable(
       for: 'select',
       to: 'evenrule_app',
       using: sql.raw(
-        `state = 'published' and exists (select 1 from relationships r where r.customer_org_id = house_terms.org_id and r.supplier_org_id = nullif(current_setting('app.org_id', true), '')::uuid)`,
+        `state = 'published' and exists (select 1 from relationships r where r.customer_org_id = house_terms.org_id and r.supplier_org_id = ${currentOrg})`,
       ),
     }),
     restrictPolicy('house_terms_published_stay', `state = 'draft'`, 'delete'),

@@ -1,11 +1,11 @@
 import { sql } from 'drizzle-orm'
 import { foreignKey, index, integer, pgPolicy, pgTable, text, unique, uuid } from 'drizzle-orm/pg-core'
 import type { MessageKind } from '../../../contract/messages'
-import { instant, ownerColumn, primaryId } from '../../db/columns'
+import { currentOrg, currentUser, instant, ownerColumn, primaryId } from '../../db/columns'
 import { organisations } from '../organisations/organisations.table'
 import { users } from '../sign-in/sign-in.table'
 
-const own = `org_id = nullif(current_setting('app.org_id', true), '')::uuid and user_id = nullif(current_setting('app.user_id', true), '')::uuid`
+const own = `org_id = ${currentOrg} and user_id = ${currentUser}`
 
 /** Every message, readable in the app by the one person it is for. Written through a function of the database. */
 export const messages = pgTable(

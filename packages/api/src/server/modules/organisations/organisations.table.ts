@@ -11,7 +11,7 @@ import {
   uuid,
 } from 'drizzle-orm/pg-core'
 import type { Role } from '../../../contract/access'
-import { instant, ownerColumn, ownerPolicy, primaryId } from '../../db/columns'
+import { currentOrg, instant, ownerColumn, ownerPolicy, primaryId } from '../../db/columns'
 import { users } from '../sign-in/sign-in.table'
 
 /** An organisation sees itself, and those it has a relationship with. */
@@ -29,8 +29,8 @@ export const organisations = pgTable(
       as: 'permissive',
       for: 'all',
       to: ['evenrule_app', 'evenrule_system'],
-      using: sql.raw(`id = nullif(current_setting('app.org_id', true), '')::uuid`),
-      withCheck: sql.raw(`id = nullif(current_setting('app.org_id', true), '')::uuid`),
+      using: sql.raw(`id = ${currentOrg}`),
+      withCheck: sql.raw(`id = ${currentOrg}`),
     }),
     pgPolicy('organisations_partners', {
       as: 'permissive',

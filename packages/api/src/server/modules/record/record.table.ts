@@ -11,11 +11,11 @@ import {
   uuid,
   type AnyPgColumn,
 } from 'drizzle-orm/pg-core'
-import { instant } from '../../db/columns'
+import { currentOrg, instant } from '../../db/columns'
 import { relationships } from '../relationships/relationships.table'
 
-const owner = `org_id = nullif(current_setting('app.org_id', true), '')::uuid`
-const party = `supplier_org_id = nullif(current_setting('app.org_id', true), '')::uuid or customer_org_id = nullif(current_setting('app.org_id', true), '')::uuid`
+const owner = `org_id = ${currentOrg}`
+const party = `supplier_org_id = ${currentOrg} or customer_org_id = ${currentOrg}`
 
 /** Either an organisation's journal (`org_id`) or a relationship's chain (both parties). */
 const chainColumns = {

@@ -1,6 +1,6 @@
 import { boolean, jsonb, pgPolicy, pgTable, text, unique, uuid } from 'drizzle-orm/pg-core'
 import { sql } from 'drizzle-orm'
-import { instant, primaryId } from '../../db/columns'
+import { currentUser, instant, primaryId } from '../../db/columns'
 
 /** People, keyed by issuer and subject, never by e-mail. A person sees and changes only their own row here. */
 export const users = pgTable(
@@ -22,8 +22,8 @@ export const users = pgTable(
       as: 'permissive',
       for: 'all',
       to: 'evenrule_app',
-      using: sql.raw(`id = nullif(current_setting('app.user_id', true), '')::uuid`),
-      withCheck: sql.raw(`id = nullif(current_setting('app.user_id', true), '')::uuid`),
+      using: sql.raw(`id = ${currentUser}`),
+      withCheck: sql.raw(`id = ${currentUser}`),
     }),
     // The worker addresses mail.
     pgPolicy('users_system', {
