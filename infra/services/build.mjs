@@ -18,6 +18,7 @@ import { runTask } from './task.mjs'
 const serverEntries = {
   main: 'packages/api/src/server/main.ts',
   worker: 'packages/api/src/server/worker.ts',
+  thread: 'packages/api/src/server/thread/thread.ts',
   migrate: 'packages/api/src/server/migrate.ts',
   seed: 'packages/api/src/server/seed.ts',
   oidc: 'fakes/oidc/main.ts',

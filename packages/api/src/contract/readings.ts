@@ -1,13 +1,11 @@
 import { z } from 'zod'
 import { line } from './common'
+import { columnLetter, decimalMarks, encodings, separators, tableChoice } from './tables'
 
 /** Largest file of readings, in bytes, and the most readings one study holds. */
 export const largestReadingsFile = 5_000_000
 export const mostReadings = 100_000
 
-export const encodings = ['utf-8', 'windows-1252', 'utf-16'] as const
-export const separators = ['comma', 'semicolon', 'tab', 'none'] as const
-export const decimalMarks = ['point', 'comma'] as const
 /** Down one column, or, where there is a single row of numbers, across it. */
 export const directions = ['down', 'across'] as const
 
@@ -28,7 +26,7 @@ export type ReadAs = z.output<typeof readAsSchema>
 
 const detected = 'Leave it out to have it detected.'
 /** What to read and how; every part of the how that is left out is detected and named in the answer. */
-export const readingsInput = z.object({
+export const readingsInput = tableChoice.extend({
   /** Typed readings (one per line) or what was pasted; left out when a file is sent. */
   text: z
     .string()
@@ -36,17 +34,12 @@ export const readingsInput = z.object({
     .optional(),
   /** How the text came about. Typed lines hold one reading each and are never split at commas. */
   source: z.enum(['typed', 'pasted', 'uploaded']),
-  encoding: z.enum(encodings, `Choose one of ${encodings.join(', ')}. ${detected}`).optional(),
-  separator: z.enum(separators, `Choose one of ${separators.join(', ')}. ${detected}`).optional(),
   decimal: z.enum(decimalMarks, `Choose point or comma. ${detected}`).optional(),
   direction: z.enum(directions, `Choose down or across. ${detected}`).optional(),
   /** Rows to pass over at the top. */
   headerRows: z.number().int().min(0).max(1000).optional(),
   /** Letter of the column that holds the readings. */
-  column: z
-    .string()
-    .regex(/^[A-Z]{1,3}$/, 'Name the column by its letter, such as B.')
-    .optional(),
+  column: columnLetter.optional(),
 })
 export type ReadingsInput = z.output<typeof readingsInput>
 

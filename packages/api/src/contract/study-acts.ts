@@ -15,10 +15,10 @@ import {
   mostReadings,
   readingsInput,
   readingsPreviewSchema,
-  separators,
 } from './readings'
 import { measuredAs, planSchema, studiesPath, studyParams, studyPath, taskIds } from './study-parts'
 import { studySchema } from './study-read'
+import { separators } from './tables'
 
 export const registerStudy = defineEndpoint({
   method: 'post',

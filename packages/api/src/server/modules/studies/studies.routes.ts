@@ -18,13 +18,13 @@ export const studiesRoutes: Route[] = [
   ),
   preparedRoute(
     contract.previewReadings,
-    async ({ body, file }) => ({ read: readReadings(body, file), file }),
+    async ({ body, file }) => ({ read: await readReadings(body, file), file }),
     ({ tenant, params, body, prepared }) => previewOf(tenant, params.studyId, body, prepared),
   ),
   preparedRoute(
     contract.storeReadings,
     async ({ body, file, services }) => {
-      const read = readToStore(body, file)
+      const read = await readToStore(body, file)
       const stored = file && (await services.files.put(file.bytes))
       return { read, file: file && stored ? { ...file, contentType: 'text/csv', stored } : null }
     },

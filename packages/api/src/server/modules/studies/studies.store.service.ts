@@ -33,8 +33,8 @@ type Entered = BodyOf<typeof storeReadings>
 const mostErrors = 200
 
 /** Reads what is to be stored once more and refuses it where a cell is wrong that may not be left out. */
-export function readToStore(body: Entered, file: UploadedFile | undefined): ReadReadings {
-  const read = readReadings(body, file)
+export async function readToStore(body: Entered, file: UploadedFile | undefined): Promise<ReadReadings> {
+  const read = await readReadings(body, file)
   const leaving = body.leaveOutBadRows && read.mayLeaveOut
   if (read.errors.length > 0 && !leaving)
     throw invalidInput(

@@ -8,12 +8,15 @@ import {
 } from '../../../../contract/readings'
 import { invalidInput } from '../../../errors'
 import type { UploadedFile } from '../../../http/route'
+import { readText } from '../../../tables/csv/read-text'
+import { columnOf, letterOf } from '../../../tables/letters'
+import { asWritten, meantAsNumber, readCell } from '../../../tables/numbers'
+import { readTable } from '../../../tables/read-table'
+import { refusedFile } from '../../../tables/refuse'
+import type { Table, TextDialect } from '../../../tables/table'
 import type { LeftOutRow } from '../studies.table'
-import { decodeFile, type Decoded } from './decode'
-import { asWritten, meantAsNumber, readCell } from './numbers'
-import { commaBoth, detectSeparator, joinDecimals, type Separated } from './separator'
-import { columnOf, letterOf, lineEnds, splitRows, unstorableIn } from './split'
-import { columnsOf, headerRowsOf, readingColumn, type Column } from './table'
+import { columnsOf, headerRowsOf, readingColumn, type Column } from './columns'
+import { commaBoth, joinDecimals } from './join-decimals'
 
 export interface ReadReadings extends Pick<
   ReadingsPreview,
@@ -32,11 +35,25 @@ interface Cell {
  * Reads typed, pasted or uploaded readings. What the sender does not say about the dialect is detected and named;
  * every cell without a number is named with its row, its column and how to mend it. Nothing is stored.
  */
-export function readReadings(input: ReadingsInput, file: UploadedFile | undefined): ReadReadings {
-  const decoded = sourceOf(input, file)
-  const { separator, note, text } = separatorOf(input, lineEnds(decoded.text))
-  const split = splitRows(text, separator)
-  const unreadable = unstorableIn(text, separator) ?? split.broken
+export async function readReadings(
+  input: ReadingsInput,
+  file: UploadedFile | undefined,
+): Promise<ReadReadings> {
+  return readingsOf(await tableOf(input, file), input, file)
+}
+
+/** The readings in a table. */
+export function readingsOf(
+  { rows: all, dialect, broken: unreadable }: Table,
+  input: ReadingsInput,
+  file: UploadedFile | undefined,
+): ReadReadings {
+  if (!dialect)
+    throw refusedFile(
+      'This is a workbook. Save the sheet with the readings as CSV and upload that, or copy the cells and paste them.',
+    )
+  const { separator, note } = dialect
+  const split = { rows: all.map(({ cells }) => cells) }
   const headerRows = input.headerRows ?? (input.source === 'typed' ? 0 : headerRowsOf(split.rows))
   const { rows, joined } =
     separator === 'comma' && input.decimal !== 'point'
@@ -53,8 +70,8 @@ export function readReadings(input: ReadingsInput, file: UploadedFile | undefine
   refuseTooMany(readings.length, file)
   return {
     readAs: {
-      encoding: decoded.encoding,
-      byteOrderMark: decoded.byteOrderMark,
+      encoding: dialect.encoding,
+      byteOrderMark: dialect.byteOrderMark,
       separator,
       decimal,
       direction,
@@ -76,11 +93,13 @@ export function readReadings(input: ReadingsInput, file: UploadedFile | undefine
     errors,
     mayLeaveOut: readings.length > 0 && errors.length > 0,
     notes: [
-      ...encodingNotes(decoded),
+      ...encodingNotes(dialect),
       ...passedOver(headerRows),
       ...notTaken(emptyAtEnd),
       ...(direction === 'across' ? [acrossNote] : []),
-      ...[note, joined ? commaBoth : null, chosen.note].filter((each) => each !== null),
+      ...[note && { ...note, readings: [] }, joined ? commaBoth : null, chosen.note].filter(
+        (each) => each !== null,
+      ),
     ],
   }
 }
@@ -89,27 +108,16 @@ export function readReadings(input: ReadingsInput, file: UploadedFile | undefine
 export const leftOutOf = ({ errors }: Pick<ReadReadings, 'errors'>): LeftOutRow[] =>
   errors.map(({ row, column, text }) => ({ row, column, text }))
 
-function sourceOf({ text, encoding }: ReadingsInput, file: UploadedFile | undefined): Decoded {
+async function tableOf(input: ReadingsInput, file: UploadedFile | undefined): Promise<Table> {
+  const { text, separator, source } = input
   if (file && text !== undefined)
     throw invalidInput([{ path: 'body.text', message: 'Send either a file or text, not both.' }])
-  if (file) return decodeFile(file, encoding)
+  if (file) return readTable(file, input)
   if (text === undefined || text.trim() === '')
     throw invalidInput([
       { path: 'body.text', message: 'There are no readings. Type or paste them, or choose a file.' },
     ])
-  return { text: text.replace(/^\ufeff/, ''), encoding: 'utf-8', byteOrderMark: false }
-}
-
-const named: Record<string, ReadAs['separator']> = { ',': 'comma', ';': 'semicolon', '\t': 'tab' }
-
-/** Spreadsheets may write the separator into a first line of its own, such as `sep=;`. */
-function separatorOf(input: ReadingsInput, text: string): Separated & { text: string } {
-  const [line = ''] = text.split('\n', 1)
-  const said = /^"?sep=(.)"?\s*$/i.exec(line)?.[1]
-  const rest = said === undefined ? text : text.slice(line.length)
-  const separator =
-    input.separator ?? named[said ?? ''] ?? (input.source === 'typed' ? ('none' as const) : undefined)
-  return separator ? { separator, note: null, text: rest } : { ...detectSeparator(rest), text: rest }
+  return readText(text, separator ?? (source === 'typed' ? 'none' : undefined))
 }
 
 function directionOf(
@@ -225,7 +233,7 @@ const acrossNote: ReadingsNote = {
   readings: [],
 }
 
-const encodingNotes = ({ encoding }: Decoded): ReadingsNote[] =>
+const encodingNotes = ({ encoding }: TextDialect): ReadingsNote[] =>
   encoding === 'windows-1252'
     ? [
         {

@@ -3,7 +3,7 @@ import { isMultipleOf } from '../../../../contract/decimal'
 import type { ReadingsNote } from '../../../../contract/readings'
 import type { StudyRow } from '../studies.repository'
 import type { FrozenCharacteristic, FrozenStandard } from '../studies.table'
-import { asWritten } from './numbers'
+import { asWritten } from '../../../tables/numbers'
 
 export interface ReadAgainst {
   study: Pick<StudyRow, 'plannedReadings' | 'unit' | 'measuredAs' | 'gauge'>

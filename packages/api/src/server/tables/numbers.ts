@@ -1,7 +1,6 @@
 import { findUnit } from '@evenrule/metrology'
-import type { CellProblem, ReadAs } from '../../../../contract/readings'
-
-type DecimalMark = ReadAs['decimal']
+import type { CellProblem } from '../../contract/readings'
+import type { DecimalMark } from '../../contract/tables'
 
 /** A cell as a number with the decimal mark it was written with; null for the mark of a whole number. */
 export interface Written {

@@ -1,7 +1,7 @@
 import type { ReadingsNote } from '../../../../contract/readings'
-import { asWritten, meantAsNumber } from './numbers'
-import { counts } from './separator'
-import { letterOf } from './split'
+import { asWritten, meantAsNumber } from '../../../tables/numbers'
+import { counts } from '../../../tables/csv/separator'
+import { letterOf } from '../../../tables/letters'
 
 /** Rows above the first number: names of columns, titles, units. */
 export function headerRowsOf(rows: readonly string[][]): number {

@@ -1,0 +1,8 @@
+import { parseTable } from '../tables/parse-table'
+
+/** What may run on a thread of its own: pure work on one upload. Input and outcome are copied between threads. */
+export const jobs = { table: parseTable }
+
+export type JobName = keyof typeof jobs
+export type JobInput<N extends JobName> = Parameters<(typeof jobs)[N]>
+export type JobOutcome<N extends JobName> = Awaited<ReturnType<(typeof jobs)[N]>>
