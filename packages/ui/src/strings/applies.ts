@@ -34,7 +34,7 @@ export const appliesWords = {
     )}.`,
   since: (day: string) => `Criteria are in force without a gap since ${formatDate(day)}.`,
   task: 'Measuring task',
-  searchTask: 'Type a gauge, part or characteristic',
+  searchTask: 'Gauge, part or characteristic',
   noTask: 'No measuring task is found.',
   day: 'Day',
   dayHint: 'In the time zone of the relationship.',

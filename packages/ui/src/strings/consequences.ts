@@ -45,7 +45,7 @@ export const consequenceWords = {
   readingsProblem: 'Enter a whole number from 2 to 1000.',
   spreadField: 'Assumed spread',
   spreadProblem: 'Enter a number above zero.',
-  reference: 'Reference uncertainty, k = 1',
+  reference: 'Reference uncertainty, k\u00a0=\u00a01',
   notNegative: 'Enter zero or a number above.',
   bias: 'True bias looked at',
   wanted: 'Wanted chance',

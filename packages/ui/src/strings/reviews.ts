@@ -84,11 +84,11 @@ export const actWords: Record<ActName, ActWords> = {
     cannot: 'You cannot accept it:',
   },
   'accept-with-conditions': {
-    title: 'Accept it on conditions?',
+    title: 'Accept it with conditions?',
     text: ({ supplier, safety, oneOff }) =>
       `${supplier} sees what must follow and until when.${oneOff ? ` No criteria are agreed, so one of its approvers must agree before it counts.` : ''}${safety ? ' The characteristic is of class safety: a second person of your organisation must confirm first.' : ''} The decision stands in the record of both sides.`,
     submit: 'Accept with conditions',
-    cannot: 'You cannot accept it on conditions:',
+    cannot: 'You cannot accept it with conditions:',
   },
   refuse: {
     title: 'Refuse the submission?',

@@ -30,6 +30,9 @@ export const equipmentEventWords: Record<GaugeEventKind, string> = {
   changed: 'was changed in software or fixture',
 }
 
+/** What somebody wrote, as the end of a sentence. */
+const quoted = (words: string): string => (/[.!?…]$/.test(words) ? `“${words}”` : `“${words}”.`)
+
 const sinceWords: Record<Exclude<StandingState, 'stands'>, string> = {
   'on-hold': 'On hold',
   suspended: 'Suspended',
@@ -47,7 +50,7 @@ function causeText(cause: StandingCause): string {
         ? ` Readings are in doubt since its last good calibration on ${formatDate(cause.inDoubtSince)}.`
         : ''
       const event = `${equipmentEventWords[cause.event]} on ${formatDate(cause.happenedOn)}`
-      return `The ${nameOf(cause)} ${event}: “${cause.words}”.${doubt}`
+      return `The ${nameOf(cause)} ${event}: ${quoted(cause.words)}${doubt}`
     }
     case 'validity':
       return `The ${formatCount(cause.months, 'month')} agreed since the acceptance are over.`

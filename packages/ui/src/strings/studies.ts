@@ -57,7 +57,7 @@ export const planWords = {
   what: 'What is measured',
   task: 'Measuring task',
   taskHint: 'Gauge and characteristic.',
-  searchTask: 'Type a gauge, part or characteristic',
+  searchTask: 'Gauge, part or characteristic',
   noTask: 'No measuring task is found. Set one up on the page of the part or the gauge first.',
   chooseTask: 'Choose at least one measuring task.',
   also: 'The same readings also serve',
@@ -151,6 +151,7 @@ export const collectWords = {
   hideSheet: 'Hide the run sheet',
   takenByLine: 'Taken by, on',
   criteria: 'What it will be judged by',
+  criteriaAbandoned: 'What it would have been judged by',
   criteriaText: 'Frozen at registration.',
   criteriaNone:
     'No criteria were in force at registration: the readings are computed, and no clause judges them.',

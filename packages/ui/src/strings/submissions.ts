@@ -87,6 +87,7 @@ export const submissionWords = {
   clausesMet: (met: number, total: number) => `${met} of ${total}`,
   safety: 'safety',
   draft: 'draft',
+  numberShort: (number: number) => `no. ${number}`,
   numbered: (number: number) => `submission ${number}`,
   waitsOnChoices: {
     us: 'what waits for us',

@@ -1,6 +1,7 @@
 import { isOwed, type RequestState, type requests, type Side } from '@evenrule/api/contract'
 import { requestWords as words } from '../../strings/requests'
 import { characteristicText } from '../parts/tolerance'
+import { placeText } from '../tasks/place'
 
 /** A measuring task chosen for a request, with the name it was chosen by. */
 export interface ChosenTask {
@@ -17,14 +18,10 @@ type Task = Pick<
 export const taskText = (task: Task): string =>
   `${task.partNumber} ${task.revision} / ${characteristicText({ ...task, name: task.characteristicName })}`
 
-/** Gauge with site and process step: "BG-14 Bore gauge, Hall 2". */
-export const gaugeText = ({
-  gaugeCode,
-  gaugeName,
-  site,
-  processStep,
-}: Pick<requests.RequestTask, 'gaugeCode' | 'gaugeName' | 'site' | 'processStep'>): string =>
-  [`${gaugeCode} ${gaugeName}`, site, processStep].filter(Boolean).join(', ')
+/** Gauge with process step and site: "BG-14 Bore gauge, Hall 2". */
+export const gaugeText = (
+  task: Pick<requests.RequestTask, 'gaugeCode' | 'gaugeName' | 'site' | 'processStep'>,
+): string => [`${task.gaugeCode} ${task.gaugeName}`, placeText(task)].filter(Boolean).join(', ')
 
 /** What the page of a request answers: the decisive sentence, and what follows from the day. */
 export function answerOf(request: requests.RequestRow): { strong: string; rest: string } {

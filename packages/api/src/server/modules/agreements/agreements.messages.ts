@@ -1,3 +1,4 @@
+import { dayInWords } from '../../calendar'
 import { otherSide, type Role, type Side } from '../../../contract/access'
 import type { Tenant } from '../../db/tenant'
 import { workingRoles } from '../notifications/notifications.send'
@@ -17,14 +18,14 @@ export const agreementMessages = {
   proposed: (effectiveOn: string, comment: string): AgreementMessage => ({
     subject: 'Criteria are proposed to you',
     body: [
-      `They would be in force from ${effectiveOn}. Accept them, or answer with a changed proposal.`,
+      `They would be in force from ${dayInWords(effectiveOn)}. Accept them, or answer with a changed proposal.`,
       comment,
     ],
   }),
   countered: (effectiveOn: string, comment: string): AgreementMessage => ({
     subject: 'Your proposal was answered with a changed one',
     body: [
-      `It would be in force from ${effectiveOn}. Accept it, or answer with a changed proposal.`,
+      `It would be in force from ${dayInWords(effectiveOn)}. Accept it, or answer with a changed proposal.`,
       comment,
     ],
   }),
@@ -46,7 +47,7 @@ export const agreementMessages = {
   accepted: (effectiveOn: string): AgreementMessage => ({
     subject: 'Criteria are agreed and wait for signatures',
     body: [
-      `An approver of each side signs them by ${effectiveOn}, the first day in force; otherwise they lapse.`,
+      `An approver of each side signs them by ${dayInWords(effectiveOn)}, the first day in force; otherwise they lapse.`,
     ],
   }),
   withdrawn: (reason: string): AgreementMessage => ({
@@ -56,13 +57,13 @@ export const agreementMessages = {
   signedByOne: (effectiveOn: string): AgreementMessage => ({
     subject: 'Criteria wait for the signature of your side',
     body: [
-      `The other side has signed. Sign by ${effectiveOn}, the first day in force; otherwise they lapse.`,
+      `The other side has signed. Sign by ${dayInWords(effectiveOn)}, the first day in force; otherwise they lapse.`,
     ],
   }),
   signed: (effectiveOn: string): AgreementMessage => ({
     subject: 'Criteria are signed by both sides',
     body: [
-      `They are in force from ${effectiveOn}. Studies registered before are judged by what was in force then.`,
+      `They are in force from ${dayInWords(effectiveOn)}. Studies registered before are judged by what was in force then.`,
     ],
   }),
 }

@@ -38,7 +38,7 @@ function ofStopped(row: NamedSubmission, { state, since, cause }: Standing): Rem
       notice: {
         kind: 'standing',
         subject: `${stopped[state]}: ${titleOf(row)}`,
-        body: [`The acceptance does not stand since ${dayInWords(since)}.`, whyStopped(cause)].join('\n\n'),
+        body: [`The acceptance has not stood since ${dayInWords(since)}.`, whyStopped(cause)].join('\n\n'),
         path: `submissions/${row.submissionId}`,
       },
     },
