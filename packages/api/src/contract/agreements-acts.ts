@@ -51,6 +51,8 @@ export const saveDraft = defineEndpoint({
     expectedVersion,
     /** The round its writer has before them; without it the draft goes on answering the one it was begun for. */
     answersRound: z.number().int().min(1).optional(),
+    /** The challenge that asks for it now; without it the one attached to the draft stays. */
+    caseOf: caseSchema.optional(),
   }),
   response: agreementSchema,
   summary: 'Changes this side’s unsent proposal or answer, and sends it where asked to.',

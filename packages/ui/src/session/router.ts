@@ -37,6 +37,16 @@ export interface RouterOptions {
 export const organisationPath = (organisationId: string, path = ''): string =>
   `/organisations/${organisationId}${path ? `/${path}` : ''}`
 
+/** Whether what an address points to comes to stand on the page, which may have to load it first. */
+async function appears(hash: string): Promise<boolean> {
+  const id = hash.slice(1)
+  for (let tries = 0; tries < 40; tries += 1) {
+    if (document.getElementById(id)) return true
+    await new Promise((resolve) => setTimeout(resolve, 100))
+  }
+  return false
+}
+
 /** The router of either app: the pages both have, and the app's own below `/organisations/:organisationId`. */
 export function createEvenruleRouter({ pages, routes, history = createWebHistory() }: RouterOptions): Router {
   const router = createRouter({
@@ -49,8 +59,13 @@ export function createEvenruleRouter({ pages, routes, history = createWebHistory
       { path: '/organisations/:organisationId', children: Object.values(routes).flat() },
       { path: '/:path(.*)*', name: 'not-found', component: pages.notFound },
     ],
-    scrollBehavior: (to, from, saved) =>
-      saved ?? (to.hash ? { el: to.hash } : to.path === from.path ? undefined : { top: 0 }),
+    scrollBehavior: async (to, from, saved) =>
+      saved ??
+      (to.hash
+        ? (await appears(to.hash)) && { el: to.hash }
+        : to.path === from.path
+          ? undefined
+          : { top: 0 }),
   })
   router.beforeEach(admit)
   return router

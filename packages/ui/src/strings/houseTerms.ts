@@ -105,7 +105,6 @@ export const offerWords = {
   offered: (count: number) => `${several(count, 'proposal')} ${count === 1 ? 'is' : 'are'} sent.`,
   open: (name: string) => `Open the negotiation with ${name}`,
   refusedHeading: 'Not sent',
-  close: 'Close',
 } as const
 
 export const offerRefusalWords: Record<(typeof houseTerms.offerRefusals)[number], string> = {

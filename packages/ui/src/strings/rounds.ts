@@ -44,6 +44,8 @@ export const conflictWords = {
 /** What is typed for a round that can no longer be saved. */
 export const goneWords = {
   text: 'Somebody of our side sent or discarded this round meanwhile, so it cannot be saved here. What you typed stays until you close the form.',
+  discarded:
+    'Somebody of our side discarded this draft meanwhile. What you typed is still here, not saved; saving it begins the answer anew.',
   replaced: (from: number, to: number) =>
     `This answer was begun for round ${from}; round ${to} stands now. Look at what changed below before you send it.`,
 } as const
@@ -133,6 +135,9 @@ export const compareWords = {
 export const caseWords = {
   text: 'A challenge asks for this change of criteria.',
   link: 'Open the challenge',
+  answer: 'Answer the challenge with it',
+  cannotBegin:
+    'You came from a challenge to change the criterion, but these criteria are under negotiation and it is not our turn. Wait for the answer or withdraw what we proposed; then begin again from the challenge.',
   attach: 'The challenge you came from is attached to this proposal, and both sides see it.',
 } as const
 

@@ -18,6 +18,12 @@ export const ageText = (days: number): string => (days <= 0 ? 'today' : formatCo
 const waits = (days: number, what: string): string =>
   days <= 0 ? `It waits for ${what}.` : `It has waited ${formatCount(days, 'day')} for ${what}.`
 
+/** In the place of “challenged”, where all that is asked for is to leave a challenge unresolved. */
+export const unresolvedAsked = (parties: Parties, days: number): [string, string] => [
+  waits(days, `an approver of ${parties.side === 'supplier' ? 'yours' : parties.supplier}`),
+  `${parties.side === 'customer' ? 'You propose' : `${parties.customer} proposes`} to leave a challenge unresolved.`,
+]
+
 /** Where a submission stands and whose step is next: the decisive part, and the rest. */
 export const standingWords: Record<
   SubmissionState,

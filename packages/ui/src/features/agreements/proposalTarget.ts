@@ -40,7 +40,7 @@ export function proposalTarget(
     comment: draft?.comment ?? '',
   }
   return draft
-    ? { kind: 'draft', version, round: draft, initial, caseOf: draft.caseOf }
+    ? { kind: 'draft', version, round: draft, initial, caseOf: caseOf ?? draft.caseOf }
     : { kind: 'answer', version, initial, caseOf }
 }
 

@@ -49,6 +49,8 @@ export function useConcurrent<T extends TypedCriteria>(
     if (sameRow(basis.value, next)) return
     theirs.value = next
     if (!form.dirty.value) return settle(next.typed)
+    // A draft that was discarded leaves nothing of theirs to choose.
+    if (basis.value.kind === 'draft' && next.kind !== 'draft') return settle(copy(toRaw(form.values)))
     if (rows.value.some(({ changedBy }) => changedBy !== 'mine')) {
       form.problem.value = undefined
       return

@@ -21,6 +21,8 @@ export function useEditing(source: () => Edited) {
   const stopped = ref<string>()
   /** The round was sent or discarded by somebody else while it was being written. */
   const gone = ref(false)
+  /** The draft that was being written was discarded by somebody else; saving begins the answer anew. */
+  const discarded = ref(false)
 
   const targetOf = ({ agreement, version, caseOf }: Edited) => proposalTarget(agreement, version, caseOf)
   const start = () => (target.value = targetOf(source()))
@@ -52,6 +54,7 @@ export function useEditing(source: () => Edited) {
     stopped.value = source().version?.id
     target.value = undefined
     gone.value = false
+    discarded.value = false
   }
 
   /** After a draft was discarded: closes the form, and forgets what was typed into it. */
@@ -64,15 +67,25 @@ export function useEditing(source: () => Edited) {
   /** After a draft was kept, or somebody else changed it: the same form goes on with what the server has now. */
   function goOn() {
     const next = targetOf(source())
+    discarded.value = next?.kind === 'answer' && (discarded.value || target.value?.kind === 'draft')
     if (next) target.value = next
     gone.value = !next
+  }
+
+  /** Whether what is being written was taken away with its version, and the page shows another in its place. */
+  function tookAway(): boolean {
+    const now = target.value
+    if (!now || now.kind === 'begin') return false
+    return !source().agreement?.versions.some(({ id }) => id === now.version.id)
   }
 
   watch(
     () => source().version,
     (version, before) => {
-      if (version?.id !== before?.id && target.value && before && target.value.kind !== 'begin')
-        target.value = undefined
+      if (version?.id !== before?.id && target.value && before && target.value.kind !== 'begin') {
+        if (tookAway()) gone.value = true
+        else target.value = undefined
+      }
       if (!version || target.value || stopped.value === version.id) return
       const { agreement, caseOf } = source()
       if (version.state === 'draft' || (caseOf && version.moves.includes('keep-draft'))) start()
@@ -80,5 +93,5 @@ export function useEditing(source: () => Edited) {
     },
     { immediate: true },
   )
-  return { target, gone, start, begin, stop, forget, goOn }
+  return { target, gone, discarded, tookAway, start, begin, stop, forget, goOn }
 }

@@ -11,8 +11,8 @@ import { proposalKey, snapshotOf, type ProposalTarget } from './proposalTarget'
 import { readTerms } from './typedTerms'
 import { useConcurrent } from './useConcurrent'
 
-/** Refusals that say that somebody else has saved, sent or replaced what is being written. */
-const meanwhile = ['changed-meanwhile', 'draft-exists', 'round-replaced']
+/** Refusals that say that somebody else has saved, sent, discarded or replaced what is being written. */
+const meanwhile = ['changed-meanwhile', 'draft-exists', 'round-replaced', 'not-found']
 export const isMeanwhile = (thrown: unknown): boolean =>
   thrown instanceof ApiProblem && meanwhile.includes(thrown.code)
 
@@ -38,16 +38,21 @@ export function useProposalForm(
     }
     const params = (versionId: string) => here.params({ agreementId: now.agreement.id, versionId })
     const expectedVersion = concurrent.basis.value.rowVersion ?? 0
+    const { caseOf } = now.target
     if (now.target.kind === 'draft') {
       const { version } = now.target
       // What stands on the page is what the writer has before them.
       const answersRound = version.state === 'draft' ? undefined : standingRound(version)?.number
       return api.call(agreements.saveDraft, {
         params: params(version.id),
-        body: { ...body, expectedVersion, ...(answersRound ? { answersRound } : {}) },
+        body: {
+          ...body,
+          expectedVersion,
+          ...(answersRound ? { answersRound } : {}),
+          ...(caseOf ? { caseOf } : {}),
+        },
       })
     }
-    const { caseOf } = now.target
     if (now.target.kind === 'answer')
       return api.call(agreements.answerRound, {
         params: params(now.target.version.id),

@@ -21,19 +21,13 @@ export function agreementsConcerned(
   return [...new Set(numbers)]
 }
 
-/** The agreements of a relationship by their numbers, which both sides use; the frozen text names no other. */
-async function agreementIds(
-  api: Client,
-  params: Params,
-  numbers: readonly number[],
-  { submission }: ReadSubmission,
-): Promise<string[]> {
-  const { items } = await api.call(agreements.listAgreements, {
-    params,
-    query: { relationshipId: submission.relationshipId, size: 100 },
-  })
-  return items.filter(({ number }) => number !== null && numbers.includes(number)).map(({ id }) => id)
-}
+const agreementsOf = async (api: Client, params: Params, { submission }: ReadSubmission) =>
+  (
+    await api.call(agreements.listAgreements, {
+      params,
+      query: { relationshipId: submission.relationshipId, size: 100 },
+    })
+  ).items
 
 /** The agreement in which another criterion is to be proposed because of a challenge; undefined where there is none. */
 export const agreementFor = async (
@@ -41,20 +35,33 @@ export const agreementFor = async (
   params: Params,
   challenge: Challenge,
   read: ReadSubmission,
-): Promise<string | undefined> =>
-  (await agreementIds(api, params, agreementsConcerned(challenge, read), read)).at(0)
+): Promise<string | undefined> => {
+  const numbers = agreementsConcerned(challenge, read)
+  const items = await agreementsOf(api, params, read)
+  return items.find(({ number }) => number !== null && numbers.includes(number))?.id
+}
 
-/** Proposals that name a challenge as their case and were sent, to answer it with. */
+/** Whether criteria for a scope can be about what was submitted. */
+const concerns = (
+  { kind, partId, characteristicId }: agreements.AgreementRow['scope'],
+  { submission }: ReadSubmission,
+): boolean =>
+  kind === 'relationship' ||
+  (kind === 'part' && partId === submission.partId) ||
+  characteristicId === submission.characteristicId
+
+/** Proposals that name a challenge as their case and were sent, to answer it with; for whatever scope. */
 export async function proposalsFor(
   api: Client,
   params: Params,
   challenge: Challenge,
   read: ReadSubmission,
 ): Promise<{ value: string; label: string; hint: string }[]> {
-  const numbers = [...new Set(read.content.clauses.map(({ agreementNumber }) => agreementNumber))]
-  const ids = await agreementIds(api, params, numbers, read)
+  const items = await agreementsOf(api, params, read)
   const found = await Promise.all(
-    ids.map((agreementId) => api.call(agreements.readAgreement, { params: { ...params, agreementId } })),
+    items
+      .filter(({ scope }) => concerns(scope, read))
+      .map(({ id }) => api.call(agreements.readAgreement, { params: { ...params, agreementId: id } })),
   )
   return found.flatMap((agreement) =>
     agreement.versions

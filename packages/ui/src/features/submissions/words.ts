@@ -4,6 +4,7 @@ import {
   standingWords,
   submissionWords,
   termsWords,
+  unresolvedAsked,
   type Parties,
 } from '../../strings/submissions'
 import { taskWords } from '../../strings/tasks'
@@ -44,7 +45,11 @@ const ended = ['accepted', 'accepted-with-conditions', 'refused', 'withdrawn', '
  */
 export function answerOf({ submission, content, results }: ReadSubmission, parties: Parties): Sentence[] {
   const { decisive, rest } = overallAnswer(results)
-  const [strong, then] = standingWords[submission.state](parties, submission.ageDays, submission.decidedAt)
+  const { state, ageDays, decidedAt, challenges } = submission
+  const [strong, then] =
+    state === 'challenged' && !challenges.some((each) => each.state === 'open')
+      ? unresolvedAsked(parties, ageDays)
+      : standingWords[state](parties, ageDays, decidedAt)
   const shown =
     content.criteria === 'none'
       ? {

@@ -25,7 +25,7 @@ import {
 import { deleteRound, updateRound, type RoundRow } from './agreements.rounds.repository'
 import { scopeAsEntered } from './agreements.scope.service'
 import { sendDraftAtHand } from './agreements.send.service'
-import { originOf, writeDraft } from './agreements.write.service'
+import { caseAsEntered, originOf, writeDraft } from './agreements.write.service'
 
 interface At {
   agreementId: string
@@ -110,13 +110,14 @@ export async function answer(
 export async function save(
   tenant: Tenant,
   at: At,
-  { expectedVersion, send, answersRound, ...written }: BodyOf<typeof saveDraft>,
+  { expectedVersion, send, answersRound, caseOf, ...written }: BodyOf<typeof saveDraft>,
 ) {
   const { negotiation, version } = await openDraft(tenant, at, expectedVersion, { sending: send })
   const facts = { ...factsOf(tenant, negotiation, version) }
   const move = permittedMove(tenant, 'keep-draft', version.state, facts)
   const draft = await updateRound(tenant, version.draft, {
     ...written,
+    ...(caseOf ? await caseAsEntered(tenant, version.row, caseOf) : {}),
     ...(answersRound === undefined || version.draft.answersRound === null ? {} : { answersRound }),
     createdBy: tenant.userId,
     savedAt: tenant.now,

@@ -1,5 +1,6 @@
 import { dayInWords } from '../../calendar'
 import { otherSide, type Role, type Side } from '../../../contract/access'
+import { dayInWords } from '../../calendar'
 import type { Tenant } from '../../db/tenant'
 import { workingRoles } from '../notifications/notifications.send'
 import type { Negotiation } from './agreements.negotiation.service'

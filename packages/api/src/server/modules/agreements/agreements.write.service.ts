@@ -47,11 +47,22 @@ export async function originOf(
     throw invalidInput([
       { path: 'body.houseTermsId', message: 'Choose published house terms of this customer.' },
     ])
-  if (caseOf && !(await caseExists(tenant, relationshipId, caseOf)))
-    throw invalidInput([{ path: 'body.caseOf', message: 'Attach a challenge of this relationship.' }])
   return {
     houseTermsId: houseTerms ? houseTerms.id : null,
     houseTermsNumber: houseTerms ? houseTerms.number : null,
+    ...(await caseAsEntered(tenant, { relationshipId }, caseOf)),
+  }
+}
+
+/** The challenge attached to a proposal, refused at its field where it is not of this relationship. */
+export async function caseAsEntered(
+  tenant: Tenant,
+  { relationshipId }: { relationshipId: string },
+  caseOf: AgreementCase | null,
+): Promise<Pick<Origin, 'caseSubmissionId' | 'caseChallengeId'>> {
+  if (caseOf && !(await caseExists(tenant, relationshipId, caseOf)))
+    throw invalidInput([{ path: 'body.caseOf', message: 'Attach a challenge of this relationship.' }])
+  return {
     caseSubmissionId: caseOf?.submissionId ?? null,
     caseChallengeId: caseOf?.challengeId ?? null,
   }
