@@ -1,3 +1,4 @@
+import { beginVersion } from '../../contract/agreements'
 import { uploadAttachment } from '../../contract/files'
 import {
   accept,
@@ -24,10 +25,13 @@ import {
   conditionReport,
   conditionTexts,
   correctionText,
+  criterionComment,
+  criterionText,
   laboratory,
   refusalReason,
   unresolvedText,
 } from './scenario.studies'
+import { within } from './scenario.clauses'
 import type { Stage } from './stage'
 import type { Played } from './submission-cast'
 import type { Deed } from './submission-deeds'
@@ -66,6 +70,7 @@ export function reviewActs(stage: Stage, played: Played): Acts<OfReview> {
       const { params: of, expectedVersion } = await played.challenge()
       await cast.engineer(answerChallenge, { params: of, body: { expectedVersion, text: answerText } })
     },
+    'answer-by-criterion': async (daysAgo) => answerByCriterion(stage, played, daysAgo),
     'correct-readings': async () => storeCorrected(played),
     'sign-correction': async () => {
       const { params: of, expectedVersion } = await played.challenge()
@@ -111,6 +116,24 @@ export function reviewActs(stage: Stage, played: Played): Acts<OfReview> {
       await cast.reviewer(confirmCondition, { params: of, body: { expectedVersion, text: '' } })
     },
   }
+}
+
+/** Another margin proposed for the characteristic with the challenge as its case, and the answer that names it. */
+async function answerByCriterion(stage: Stage, played: Played, daysAgo: number): Promise<void> {
+  const { engineer } = played.cast
+  const { id: submissionId, relationshipId, characteristicId, challenges } = await played.see()
+  const { params, expectedVersion } = await played.challenge()
+  const { versions } = await engineer(beginVersion, {
+    body: {
+      ...{ relationshipId, characteristicId, clauses: [within(0.2, 'µm')], send: true },
+      ...{ effectiveOn: stage.day(daysAgo - 60), comment: criterionComment },
+      caseOf: { submissionId, challengeId: challenges.at(-1)?.id },
+    },
+  })
+  await engineer(answerChallenge, {
+    params,
+    body: { expectedVersion, kind: 'criterion', text: criterionText, versionId: versions[0]?.id },
+  })
 }
 
 /** The challenged readings read again: each a last digit nearer to its neighbours. */

@@ -10,6 +10,7 @@ export type DemoEnd =
   | 'withdrawn'
   | 'challenged'
   | 'answered'
+  | 'answered-by-criterion'
   | 'refused'
   | 'awaiting-second-person'
   | 'accepted'
@@ -107,7 +108,7 @@ export const studies: readonly (readonly [string, number, string, readonly DemoS
     3,
     'SR-2',
     [
-      [26, 25, 'answered'],
+      [26, 25, 'answered-by-criterion'],
       [1, 20, 'registered'],
     ],
   ],
@@ -291,6 +292,10 @@ export const challengeText =
   'The run sheet notes a break before readings 3 and 11. Were they taken on the same setting of the fixture?'
 export const answerText =
   'The readings stand as taken. The fixture was not touched; the operator reports coolant on the contact at both.'
+export const criterionText =
+  'The readings stand. What does not suit a roughness is the margin: we propose another one, with this challenge as its case.'
+export const criterionComment =
+  'This tolerance has one limit only, so a share of it says little. Two tenths of a micrometre can be shown.'
 export const correctionText =
   'You are right: both were taken after the fixture was set anew. They were taken again on the first setting.'
 export const unresolvedText =

@@ -8,6 +8,7 @@ export type Deed =
   | 'withdraw'
   | 'challenge'
   | 'answer'
+  | 'answer-by-criterion'
   | 'correct-readings'
   | 'sign-correction'
   | 'settle'
@@ -33,6 +34,7 @@ export const deedsOf: Partial<Record<DemoEnd, Deed[]>> = {
   withdrawn: [...signed, 'withdraw'],
   challenged: [...signed, 'challenge'],
   answered: [...signed, 'challenge', 'answer'],
+  'answered-by-criterion': [...signed, 'challenge', 'answer-by-criterion'],
   'answered-by-correction': corrected,
   'unresolved-proposed': [...signed, 'challenge', 'answer', 'propose-unresolved'],
   refused: [...signed, 'refuse'],
