@@ -148,17 +148,17 @@ export class TwoSides {
   customer!: Page
   readonly errors: string[] = []
   readonly app = addresses()
-  #browser!: Browser
+  browser!: Browser
   /** @param story name of the pictures of what failed */
   constructor(private readonly story: string) {}
 
   async open(): Promise<void> {
-    this.#browser = await launch()
-    this.supplier = await openWindow(this.#browser, this.errors)
-    this.customer = await openWindow(this.#browser, this.errors)
+    this.browser = await launch()
+    this.supplier = await openWindow(this.browser, this.errors)
+    this.customer = await openWindow(this.browser, this.errors)
   }
 
-  close = (): Promise<void> => this.#browser.close()
+  close = (): Promise<void> => this.browser.close()
 
   /** Changes who sits at the window of a side. */
   async as(side: 'supplier' | 'customer', name: string): Promise<Page> {
