@@ -1,4 +1,7 @@
 import { spawn } from 'node:child_process'
+import { mkdtemp, readFile, rm, writeFile } from 'node:fs/promises'
+import { tmpdir } from 'node:os'
+import { join } from 'node:path'
 import { fileURLToPath } from 'node:url'
 import { afterAll, beforeAll, describe, expect, it } from 'vitest'
 import { record, reviews } from '@evenrule/api/contract'
@@ -69,11 +72,12 @@ const rows = async (): Promise<Row[]> =>
   ).rows as Row[]
 
 /** The command as people call it, with its exit status and what it says. */
-const command = (...args: string[]) =>
+const command = (...args: string[]) => commandWith({}, ...args)
+const commandWith = (environment: Record<string, string>, ...args: string[]) =>
   new Promise<{ status: number | null; said: string }>((resolve, reject) => {
     const child = spawn('node', ['infra/verify-record.mjs', ...args], {
       cwd: fileURLToPath(new URL('../..', import.meta.url)),
-      env: { ...process.env, MIGRATOR_DATABASE_URL: story.harness.ownerUrl },
+      env: { ...process.env, MIGRATOR_DATABASE_URL: story.harness.ownerUrl, ...environment },
     })
     let said = ''
     child.stdout.on('data', (bytes: Buffer) => (said += bytes.toString()))
@@ -294,5 +298,50 @@ describe('the owner of the database cannot hide', { timeout: 120_000 }, () => {
 
   it('from a command that is told no database or no hash', async () => {
     expect(await command('abc')).toMatchObject({ status: 2 })
+  })
+})
+
+describe('an engine that is not kept any more', { timeout: 120_000 }, () => {
+  const released = fileURLToPath(new URL('../../packages/metrology/released', import.meta.url))
+  let folder = ''
+  beforeAll(async () => {
+    folder = await mkdtemp(join(tmpdir(), 'engines-'))
+  })
+  afterAll(() => rm(folder, { recursive: true }))
+
+  /** A folder with a later engine alone, whose list may still name the one that made every evaluation. */
+  async function withoutTheEngine(isListed: boolean) {
+    const { current } = story.harness.services.engines
+    const text = `${await readFile(join(released, current.file), 'utf8')}\n// later\n`
+    const later = { version: '9.9.9', sha256: sha256(text), file: 'later.mjs' }
+    await writeFile(join(folder, later.file), text)
+    await writeFile(join(folder, 'index.json'), JSON.stringify(isListed ? [current, later] : [later]))
+    return current
+  }
+
+  it.each([true, false])('is told apart from tampering, listed %s', async (isListed) => {
+    const { version, sha256: hash } = await withoutTheEngine(isListed)
+    const { status, said } = await commandWith({ ENGINES_DIR: folder })
+    expect(said).toContain(
+      `OPEN    submission 1 of Halm Turning → Nordhof Drives, revision 1: cannot be recomputed here: engine ${version} (${hash}) is not kept`,
+    )
+    expect(said).toContain(
+      '0 signed texts and 0 evaluations recomputed, all equal. 1 cannot be recomputed here.',
+    )
+    expect(said).not.toMatch(/BROKEN|broken\.|The record is whole/)
+    expect(status).toBe(2)
+  })
+
+  it('hides nothing that was changed', async () => {
+    await withoutTheEngine(false)
+    try {
+      await run(`update submission_clauses set output_text = output_text || ' ' where position = 1`)
+      const { status, said } = await commandWith({ ENGINES_DIR: folder })
+      expect(said).toMatch(/BROKEN {2}submission 1 .* has another output than was signed/)
+      expect(said).toContain('The record is broken.')
+      expect(status).toBe(1)
+    } finally {
+      await restore()
+    }
   })
 })

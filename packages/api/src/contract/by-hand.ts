@@ -12,7 +12,7 @@ export const byHandSchema = z.object({
   clauseKey: z.string(),
   verdict: z.enum(byHandVerdicts),
   reason: z.string(),
-  document: z.object({ id: uuid, name: z.string(), sha256: z.string() }),
+  document: z.object({ id: uuid, name: z.string(), size: z.number().int(), sha256: z.string() }),
 })
 export type ByHand = z.output<typeof byHandSchema>
 

@@ -193,6 +193,14 @@ describe('checking a submission', () => {
       difference: { path: 'sum', stored: '4', recomputed: '3' },
     })
   })
+  it('tells an engine that is not there from an output that was altered', async () => {
+    const nowhere = () => Promise.reject(new EngineProblem('engine-unavailable'))
+    const untouched = await checkSubmission(frozen(), nowhere)
+    expect(untouched.clauses[0]).toMatchObject({ equal: false, problem: 'engine-unavailable' })
+    const altered = { ...evaluation, outputText: `${evaluation.outputText} ` }
+    const check = await checkSubmission({ ...frozen(), evaluations: [altered] }, nowhere)
+    expect(check.clauses[0]).toMatchObject({ problem: 'output-altered' })
+  })
   it('finds an altered input even when its output follows from it', async () => {
     const output = '{"sum":9,"verdict":"meets"}'
     const changed = {

@@ -142,7 +142,9 @@ async function checkClause(
     recomputed = await recompute({ ...evaluation, engineSha256: clause.engineSha256 })
   } catch (error) {
     const problem = error instanceof EngineProblem ? error.problem : 'engine-unavailable'
-    return { ...base, equal: false, problem, difference: null, recomputedSha256: null }
+    // What was altered shows by its hash, with or without the engine.
+    const found = (await alteredOf(clause, evaluation, null)) ?? { problem, difference: null }
+    return { ...base, equal: false, ...found, recomputedSha256: null }
   }
   const recomputedSha256 = await sha256Of(recomputed)
   const found = await problemOf(clause, evaluation, recomputed)
@@ -161,13 +163,13 @@ const differs = (path: string, stored: string, recomputed: string): Difference =
   recomputed: JSON.stringify(recomputed),
 })
 
-async function problemOf(
+/** Whether input or output are no longer those that the signed text names; `difference` tells more where it is known. */
+async function alteredOf(
   clause: JudgedClause,
   evaluation: CheckedEvaluation,
-  recomputed: string,
+  difference: Difference | null,
 ): Promise<Found | null> {
-  const difference = firstDifference(evaluation.outputText, recomputed)
-  const found = (problem: ClauseProblem, fallback: Difference | null = null): Found => ({
+  const found = (problem: ClauseProblem, fallback: Difference): Found => ({
     problem,
     difference: difference ?? fallback,
   })
@@ -178,13 +180,25 @@ async function problemOf(
   for (const hash of [outputSha256, evaluation.outputSha256])
     if (hash !== clause.outputSha256)
       return found('output-altered', differs('outputSha256', hash, clause.outputSha256))
-  if (evaluation.engineSha256 !== clause.engineSha256)
-    return found('engine-altered', differs('engineSha256', evaluation.engineSha256, clause.engineSha256))
-  if (difference) return found('recomputed-differs')
+  return evaluation.engineSha256 === clause.engineSha256
+    ? null
+    : found('engine-altered', differs('engineSha256', evaluation.engineSha256, clause.engineSha256))
+}
+
+async function problemOf(
+  clause: JudgedClause,
+  evaluation: CheckedEvaluation,
+  recomputed: string,
+): Promise<Found | null> {
+  const difference = firstDifference(evaluation.outputText, recomputed)
+  const altered = await alteredOf(clause, evaluation, difference)
+  if (altered) return altered
+  if (difference) return { problem: 'recomputed-differs', difference }
   const output = parse(recomputed)
   const verdict = isObject(output) && typeof output.verdict === 'string' ? output.verdict : ''
   for (const stored of [clause.verdict, evaluation.verdict ?? clause.verdict])
-    if (stored !== verdict) return found('verdict-altered', differs('verdict', stored, verdict))
+    if (stored !== verdict)
+      return { problem: 'verdict-altered', difference: differs('verdict', stored, verdict) }
   return null
 }
 

@@ -190,6 +190,8 @@ export const submissionSchema = z.object({
     z.object({
       /** Null before signing: the file then belongs to the supplier alone. */
       id: uuid.nullable(),
+      /** Before signing the supplier's own file, to open with `files.downloadFile`; null afterwards. */
+      ownFileId: uuid.nullable(),
       role: fileRoleSchema,
       name: z.string(),
       contentType: z.string(),

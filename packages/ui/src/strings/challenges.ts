@@ -11,13 +11,18 @@ import type { Parties } from './submissions'
 
 /** Files that go with words. */
 export const filesWords = {
-  choose: 'Choose files, or drop them here',
-  hint: 'PDF, PNG, JPEG or CSV, up to 20 MB each. The other side can open them.',
+  choose: (most: number) =>
+    most === 1 ? 'Choose a file, or drop it here' : 'Choose files, or drop them here',
+  hint: (most: number) =>
+    most === 1
+      ? 'PDF, PNG, JPEG or CSV, up to 20 MB. The other side can open it.'
+      : 'PDF, PNG, JPEG or CSV, up to 20 MB each. The other side can open them.',
   chosen: 'Files chosen',
   remove: 'Take out',
   sending: (name: string) => `Sending ${name} …`,
   failed: (name: string, why: string) => `${name} was not taken: ${why}`,
-  tooMany: (most: number) => `At most ${most} files go with one message.`,
+  tooMany: (most: number) =>
+    most === 1 ? 'Only one file goes here.' : `At most ${most} files go with one message.`,
   download: 'Download',
 } as const
 

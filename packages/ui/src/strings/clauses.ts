@@ -57,7 +57,7 @@ export const clauseTypeHints: Record<ClauseType, string> = {
   'bias-with-uncertainty':
     'Bias and its uncertainty, that of the reference standard included, must fit within a margin together.',
   'by-hand':
-    'For a method that is not computed here: the other side attaches a document, and what it shows is judged with a reason.',
+    'For a method that is not computed here: the supplier attaches a document and says with a reason what it shows; the customer decides on it.',
   'does-not-apply': 'Takes a clause that was agreed for a wider scope away, with the reason.',
 }
 
@@ -188,7 +188,8 @@ const terms: Builders<string> = {
   'bias-index': ({ parameters }) => `${indexLimits(parameters)}, ${indexConvention(parameters)}`,
   'bias-with-uncertainty': ({ parameters: { margin, coverageFactor } }) =>
     `with uncertainty (k = ${formatNumber(coverageFactor)}) within ±${describeMargin(margin)}`,
-  'by-hand': ({ parameters: { measure } }) => `${measure}, judged by hand on a document`,
+  'by-hand': ({ parameters: { measure, asks } }) =>
+    `${measure}, judged by hand on a document that shows: ${asks}`,
   'does-not-apply': ({ parameters: { reason } }) => `does not apply: ${reason}`,
 }
 

@@ -69,6 +69,7 @@ export const calibrationWords = {
 } as const
 
 export const gaugeWords = {
+  chooseFile: 'Choose a file',
   listQuestion: 'Are our gauges in calibration?',
   listAnswerFine: 'No gauge in use is overdue.',
   listAnswerOverdue: (count: number) => `${formatCount(count, 'gauge')} overdue for calibration.`,

@@ -41,6 +41,9 @@ const sinceWords: Record<Exclude<StandingState, 'stands'>, string> = {
   reopened: 'Reopened',
 }
 
+/** Somebody's words at the end of a sentence, with one full stop whether or not they brought their own. */
+const quoted = (said: string): string => `“${said}”${/[.!?…]$/.test(said) ? '' : '.'}`
+
 function causeText(cause: StandingCause): string {
   switch (cause.kind) {
     case 'calibration-overdue':

@@ -112,7 +112,7 @@ describe('clause sentences', () => {
         parameters: { subject: 'linearity', measure: 'Slope', asks: 'a slope below 1 %' },
       },
       'Linearity, judged by hand: Slope',
-      'Slope, judged by hand on a document',
+      'Slope, judged by hand on a document that shows: a slope below 1 %',
     ],
     [
       { type: 'does-not-apply', parameters: { key: 'bias/index', reason: 'one-off part' } },

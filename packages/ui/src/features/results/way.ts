@@ -6,7 +6,7 @@ import { verdictWords } from '../../strings/verdicts'
 import { atMostComparison } from './comparisons'
 import type { ClauseResult } from './types'
 import { indexWay, intervalWay, pointWay, withUncertaintyWay, zeroTestWay } from './wayOfBias'
-import { count, numberOf, step, writers, yesNo, type Of, type WayStep } from './waySteps'
+import { count, numberOf, step, textStep, writers, yesNo, type Of, type WayStep } from './waySteps'
 
 export type { WayStep } from './waySteps'
 
@@ -76,14 +76,14 @@ function calibration({ clause, input }: Of<'calibration-in-date'>): WayStep[] {
 function byHand({ clause, input }: Of<'by-hand'>): WayStep[] {
   const judged = input.byHand ?? null
   return [
-    step(words.asks, '', clause.parameters.asks),
+    textStep(words.asks, clause.parameters.asks),
     ...(judged
       ? [
-          step(words.judgedAs, '', verdictWords[judged.verdict]),
-          step(words.judgedReason, '', judged.reason),
-          step(words.document, '', judged.documentSha256),
+          textStep(words.judgedAs, verdictWords[judged.verdict]),
+          textStep(words.judgedReason, judged.reason),
+          textStep(words.document, judged.documentSha256),
         ]
-      : [step(words.document, '', words.noDocument)]),
+      : [textStep(words.document, words.noDocument)]),
   ]
 }
 

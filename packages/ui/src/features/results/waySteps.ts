@@ -11,6 +11,8 @@ export interface WayStep {
   /** In plain notation; empty for what is a fact rather than computed. */
   formula: string
   figure: string
+  /** The figure is a sentence, so it may wrap. */
+  isText?: true
 }
 
 export type Judged = Pick<ClauseResult, 'input' | 'output'>
@@ -18,6 +20,11 @@ export type Judged = Pick<ClauseResult, 'input' | 'output'>
 export type Of<T extends ClauseType> = Omit<ClauseResult, 'clause'> & { clause: ClauseOf<T> }
 
 export const step = (label: string, formula: string, figure: string): WayStep => ({ label, formula, figure })
+/** A fact in words, where nothing is computed. */
+export const textStep = (label: string, figure: string): WayStep => ({
+  ...step(label, '', figure),
+  isText: true,
+})
 export const count = (value: number | null): string => formatNumber(value)
 export const yesNo = (value: boolean): string => (value ? words.yes : words.no)
 

@@ -20,8 +20,10 @@ export interface CheckedText {
   name: string
   revision: number
   evaluations: number
-  /** What differs, in short; null where everything is equal. */
+  /** What differs, in short; null where nothing does. */
   fault: string | null
+  /** Engines that it names and that are not kept here, so that nobody can tell whether it computes again. */
+  withoutEngines: { version: string; sha256: string }[]
 }
 
 export interface VerifiedRecord {
@@ -88,7 +90,8 @@ async function checkTexts(tx: Transaction, engines: Engines): Promise<CheckedTex
       ...{ submissionId: frozen.submissionId, revision: frozen.revision },
       name: nameOf(frozen),
       evaluations: evaluations.length,
-      fault: check.equal ? null : faultIn(check),
+      fault: faultIn(check),
+      withoutEngines: missingEngines(check),
     })
   }
   return checked
@@ -101,25 +104,36 @@ function nameOf({ text, submissionId }: { text: string; submissionId: string }):
   return `submission ${number} of ${relationship.supplier.name} → ${relationship.customer.name}`
 }
 
-const problemWords: Record<ClauseProblem, string> = {
+const problemWords: Record<Exclude<ClauseProblem, 'engine-unavailable'>, string> = {
   missing: 'is gone',
   'not-in-text': 'is not in the signed text',
   'input-altered': 'has another input than was signed',
   'output-altered': 'has another output than was signed',
   'verdict-altered': 'shows another verdict than was computed',
-  'engine-unavailable': 'cannot be recomputed: the engine that made it is not here',
   'engine-altered': 'cannot be recomputed: its engine is not the one that was released',
   'recomputed-differs': 'gives another result when it is computed again',
 }
 
-function faultIn(check: Awaited<ReturnType<typeof checkSubmission>>): string {
-  if (!check.text.equal) return 'the signed text was changed'
-  const signature = check.signatures.find(({ equal }) => !equal)
+type Check = Awaited<ReturnType<typeof checkSubmission>>
+
+/** What was changed; an engine that is not kept here proves nothing either way, so it is told apart. */
+function faultIn({ text, signatures, data, clauses, corrects }: Check): string | null {
+  if (!text.equal) return 'the signed text was changed'
+  const signature = signatures.find(({ equal }) => !equal)
   if (signature) return `a signature (${signature.meaning}) names another text`
-  const data = check.data.find(({ equal }) => !equal)
-  if (data) return `the readings of ${data.study} were changed`
-  const clause = check.clauses.find(({ equal }) => !equal)
-  if (clause)
-    return `the evaluation of ${clause.clauseKey} ${clause.problem ? problemWords[clause.problem] : 'differs'}`
-  return 'it names another text as the one it corrects'
+  const study = data.find(({ equal }) => !equal)
+  if (study) return `the readings of ${study.study} were changed`
+  for (const { clauseKey, equal, problem } of clauses)
+    if (!equal && problem !== 'engine-unavailable')
+      return `the evaluation of ${clauseKey} ${problem ? problemWords[problem] : 'differs'}`
+  return corrects && !corrects.equal ? 'it names another text as the one it corrects' : null
+}
+
+function missingEngines({ clauses }: Check): CheckedText['withoutEngines'] {
+  const missing = clauses.filter(({ problem }) => problem === 'engine-unavailable')
+  return [
+    ...new Map(
+      missing.map(({ engineVersion: version, engineSha256: sha256 }) => [sha256, { version, sha256 }]),
+    ).values(),
+  ]
 }

@@ -54,12 +54,16 @@ export async function byHandAsked(
     const judged: ByHand | null = found
       ? {
           ...{ clauseKey, verdict: found.entry.verdict, reason: found.entry.reason },
-          document: { id: found.file.id, name: found.file.name, sha256: found.file.sha256 },
+          document: documentOf(found.file),
         }
       : null
     return { clauseKey, clause, judged }
   })
 }
+
+const documentOf = ({ id, name, size, sha256: hash }: ByHand['document']): ByHand['document'] => ({
+  ...{ id, name, size, sha256: hash },
+})
 
 const asksByHand = ({ content }: Prepared) =>
   content.clauses.filter(({ clause }) => clause.type === 'by-hand')

@@ -9,9 +9,15 @@ import { advisoryResult, frozenResult, frozenStudy, type ToJudge } from './submi
 import type { ChosenStudy } from './submissions.draft.repository'
 import type { FileToFreeze, ToFreeze } from './submissions.frozen.repository'
 
+/** A file of a text to be frozen, and the file of the supplier's own that it is. */
+export interface FileOfText extends FileToFreeze {
+  ownFileId?: string
+}
+
 /** What a signature would freeze, with what the signing has to know of it. */
 export interface Frozen extends ToFreeze, ReturnType<typeof summaryOf> {
   content: SubmissionContent
+  files: FileOfText[]
   /** The studies it rests on, in the revisions it would freeze. */
   chosen: ChosenStudy[]
   /** Those who took the readings. */
@@ -25,7 +31,7 @@ export interface Basis {
   advisory: readonly ToJudge<{ clauseKey: string; clause: Clause }>[]
   studies: readonly StudyOfTask[]
   /** The documents on which clauses were judged by hand. */
-  documents: readonly FileToFreeze[]
+  documents: readonly FileOfText[]
 }
 
 /** Judges every clause and puts the text together; stores nothing. */
@@ -102,9 +108,9 @@ async function readingsFiles(tenant: Tenant, studies: readonly StudyOfTask[]) {
 }
 
 /** The files that go with the studies, each once: readings as uploaded, and the certificates of the day. */
-async function filesOf(tenant: Tenant, studies: readonly StudyOfTask[]): Promise<FileToFreeze[]> {
+async function filesOf(tenant: Tenant, studies: readonly StudyOfTask[]): Promise<FileOfText[]> {
   const roles = ['readings', 'gauge-certificate', 'standard-certificate'] as const
-  const found: FileToFreeze[] = []
+  const found: FileOfText[] = []
   for (const role of roles) {
     const ids = studies.map(({ data, calibration }) =>
       role === 'readings'
@@ -118,11 +124,12 @@ async function filesOf(tenant: Tenant, studies: readonly StudyOfTask[]): Promise
 
 /** What is frozen of a file of this organisation. */
 export const asFrozenFile = ({
+  id: ownFileId,
   name,
   contentType,
   size,
   sha256: hash,
   storageKey,
-}: Awaited<ReturnType<typeof fileById>>): Omit<FileToFreeze, 'role'> => ({
-  ...{ name, contentType, size, sha256: hash, storageKey },
+}: Awaited<ReturnType<typeof fileById>>): Omit<FileOfText, 'role'> => ({
+  ...{ ownFileId, name, contentType, size, sha256: hash, storageKey },
 })

@@ -69,10 +69,14 @@ export const recomputeOn =
       throw new EngineProblem('engine-unavailable')
     try {
       return (await engines.recompute(evaluation)).outputText
-    } catch {
-      throw new EngineProblem('engine-altered')
+    } catch (error) {
+      // The list of releases may outlive a file of it.
+      throw new EngineProblem(isMissingFile(error) ? 'engine-unavailable' : 'engine-altered')
     }
   }
+
+const isMissingFile = (error: unknown): boolean =>
+  error instanceof Error && 'code' in error && error.code === 'ENOENT'
 
 /** A file of a submission, byte for byte. */
 export async function downloadOf(tenant: Tenant, id: string, fileId: string): Promise<Download> {
