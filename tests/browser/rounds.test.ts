@@ -1,37 +1,25 @@
 import type { Browser, Page } from 'playwright-core'
 import { afterAll, afterEach, beforeAll, describe, expect, it } from 'vitest'
-import { addresses, axeFaults, choose, dayIn, launch, openWindow, picture, signIn } from './support'
+import { addresses, ask, axeFaults, choose, dayIn, launch, openWindow, picture, signIn } from './support'
 
 const part = `RND-${Date.now().toString(36)}`
 
 /** A part number with one characteristic of its own, entered through the product's own routes. */
 async function enterPart(page: Page, number: string, partner: string): Promise<void> {
-  await page.evaluate(
-    async ([partNumber, supplierName]) => {
-      const base = `/api/v1${location.pathname.match(/\/organisations\/[^/]+/)![0]}`
-      const ask = async (path: string, body?: object) => {
-        const answer = await fetch(base + path, {
-          method: body ? 'POST' : 'GET',
-          headers: { 'content-type': 'application/json', 'x-evenrule-client': '1' },
-          ...(body ? { body: JSON.stringify(body) } : {}),
-        })
-        if (!answer.ok) throw new Error(`${path}: ${await answer.text()}`)
-        return (await answer.json()) as Record<string, never>
-      }
-      const { items } = (await ask('/relationships?size=100')) as unknown as {
-        items: { id: string; partner: { name: string } }[]
-      }
-      const relationshipId = items.find((each) => each.partner.name === supplierName)!.id
-      const made = (await ask('/parts', {
-        ...{ relationshipId, number: partNumber, name: 'Valve spring seat', revision: 'A' },
-      })) as unknown as { id: string; currentRevision: { id: string } }
-      await ask(`/parts/${made.id}/revisions/${made.currentRevision.id}/characteristics`, {
-        ...{ number: 1, name: 'Seat height', nominal: '12.00', lowerLimit: '11.90', upperLimit: '12.10' },
-        ...{ unit: 'mm', class: 'ordinary' },
-      })
-    },
-    [number, partner] as const,
+  const { items } = await ask<{ items: { id: string; partner: { name: string } }[] }>(
+    page,
+    'relationships?size=100',
   )
+  const relationshipId = items.find((each) => each.partner.name === partner)!.id
+  const made = await ask<{ id: string; currentRevision: { id: string } }>(page, 'parts', {
+    body: { relationshipId, number, name: 'Valve spring seat', revision: 'A' },
+  })
+  await ask(page, `parts/${made.id}/revisions/${made.currentRevision.id}/characteristics`, {
+    body: {
+      ...{ number: 1, name: 'Seat height', nominal: '12.00', lowerLimit: '11.90', upperLimit: '12.10' },
+      ...{ unit: 'mm', class: 'ordinary' },
+    },
+  })
 }
 
 describe('a negotiation in five rounds', () => {

@@ -128,6 +128,32 @@ export async function choose(
   await page.getByRole('option', { name: entry }).first().click()
 }
 
+/**
+ * Asks the API as whoever sits at a page, for what a story needs and does not tell; throws what was refused. `data`
+ * goes as an upload without a file where the route takes one.
+ */
+export async function ask<Answer>(
+  page: Page,
+  path: string,
+  sent: { body?: object; data?: object } = {},
+): Promise<Answer> {
+  return page.evaluate(
+    async ([below, { body, data }]) => {
+      const organisation = /\/organisations\/[^/]+/.exec(location.pathname)?.[0] ?? ''
+      const form = new FormData()
+      if (data) form.set('data', JSON.stringify(data))
+      const answer = await fetch(`/api/v1${organisation}/${below}`, {
+        method: body || data ? 'POST' : 'GET',
+        headers: { 'x-evenrule-client': '1', ...(body ? { 'content-type': 'application/json' } : {}) },
+        ...(data ? { body: form } : body ? { body: JSON.stringify(body) } : {}),
+      })
+      if (!answer.ok) throw new Error(`${below}: ${await answer.text()}`)
+      return (await answer.json()) as Answer
+    },
+    [path, sent] as const,
+  )
+}
+
 /** A window of its own, as one person at a desk has it. */
 export async function openWindow(browser: Browser, errors: string[] = []): Promise<Page> {
   const context = await browser.newContext({
