@@ -1,5 +1,6 @@
 import exp from '@stdlib/math-base-special-exp'
 import ln from '@stdlib/math-base-special-ln'
+import log1p from '@stdlib/math-base-special-log1p'
 import { scaledGamma } from './scaled-gamma'
 
 /**
@@ -18,6 +19,12 @@ export function chiConstant(df: number): number {
 /** Density of V = s/σ at v > 0. */
 export function chiDensity(v: number, df: number): number {
   return chiConstant(df) * exp(logChiShape(v, df))
+}
+
+/** Mean of V = s/σ, √(2/df)·Γ((df + 1)/2)/Γ(df/2), which tends to 1. */
+export function chiMean(df: number): number {
+  const exponent = 0.5 * (df * log1p(1 / df) - 1)
+  return (scaledGamma((df + 1) / 2) / scaledGamma(df / 2)) * exp(exponent)
 }
 
 const pi = 3.141592653589793

@@ -10,9 +10,11 @@ import {
   fQuantile,
   fTails,
   noncentralTQuantile,
+  noncentralTQuantileNear,
   noncentralTTails,
   noncentralityAt,
   normalCdf,
+  normalCdfWithin,
   normalQuantile,
   normalUpperTail,
   studentizedRangeQuantile,
@@ -276,5 +278,28 @@ describe('integration and roots', () => {
       runs,
     )
     expect(findRoot((x) => x * x - 2, 0, 2)).toBe(Math.SQRT2)
+  })
+})
+
+describe('what is formed at once', () => {
+  it('the normal distribution from a table is that of the function to 1e-14, at every seam', () => {
+    for (let i = -1000; i <= 1000; i++) {
+      const z = i / 100 + (i % 3) * 1e-9
+      expect(Math.abs(normalCdfWithin(z) - normalCdf(z)), `z ${z}`).toBeLessThan(1e-14)
+    }
+    expect([normalCdfWithin(-1e300), normalCdfWithin(1e300)]).toEqual([0, 1])
+  })
+
+  it('the quantile of noncentral t is near, and above it once a fifth of 1/df is added, for chances from a half', () => {
+    for (const p of [0.5, 0.6, 0.75, 0.9, 0.99, 0.9999])
+      for (const df of [4, 9, 30, 99, 999, 99_999])
+        for (const half of [0.01, 0.5, 2, 4, 12, 600]) {
+          const shift = half * Math.sqrt(df + 1)
+          const near = noncentralTQuantileNear(p, df, shift)
+          if (near === null) continue
+          const exact = noncentralTQuantile(p, df, shift)
+          expect(near * (1 + 0.2 / df), `p ${p}, df ${df}, half ${half}`).toBeGreaterThan(exact)
+          expect(Math.abs(near / exact - 1)).toBeLessThan(10 / df)
+        }
   })
 })

@@ -2,9 +2,19 @@
  * A root of a continuous function that changes sign between `low` and `high`, to `relative` of its size (by default
  * the resolution of doubles), by Brent's method (Brent, Algorithms for Minimization without Derivatives, 1973, chapter 4).
  */
-export function findRoot(f: (x: number) => number, low: number, high: number, relative = 2.3e-16): number {
-  let [a, b] = [low, high]
-  let [fa, fb] = [f(a), f(b)]
+export function findRoot(f: (x: number) => number, low: number, high: number, relative?: number): number {
+  return rootBetween(f, { x: low, y: f(low) }, { x: high, y: f(high) }, relative)
+}
+
+/** A place where a function is known. */
+interface Known {
+  x: number
+  y: number
+}
+
+function rootBetween(f: (x: number) => number, low: Known, high: Known, relative = 2.3e-16): number {
+  let [a, b] = [low.x, high.x]
+  let [fa, fb] = [low.y, high.y]
   let [c, fc] = [a, fa]
   let step = b - a
   let previous = step
@@ -71,16 +81,19 @@ export function findRisingRoot(
   width: number,
   relative?: number,
 ): number {
-  let [low, high] = [guess - width, guess + width]
+  const at = (x: number): Known => ({ x, y: f(x) })
+  let low = at(guess - width)
+  let high: Known | null = null
   let reach = width
-  for (let i = 0; i < 1100 && !(f(low) <= 0); i++) {
+  for (let i = 0; i < 1100 && !(low.y <= 0); i++) {
     high = low
-    low -= reach *= 2
+    low = at(low.x - (reach *= 2))
   }
+  high ??= at(guess + width)
   reach = width
-  for (let i = 0; i < 1100 && !(f(high) >= 0); i++) {
+  for (let i = 0; i < 1100 && !(high.y >= 0); i++) {
     low = high
-    high += reach *= 2
+    high = at(high.x + (reach *= 2))
   }
-  return findRoot(f, low, high, relative)
+  return rootBetween(f, low, high, relative)
 }

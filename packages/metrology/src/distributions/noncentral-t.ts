@@ -1,6 +1,6 @@
 import exp from '@stdlib/math-base-special-exp'
 import ln from '@stdlib/math-base-special-ln'
-import { chiConstant, logChiShape } from './chi-density'
+import { chiConstant, chiMean, logChiShape } from './chi-density'
 import { chiSquareQuantile } from './chi-square'
 import { findRisingRoot } from './find-root'
 import { integrate } from './gauss-legendre'
@@ -95,9 +95,12 @@ function smallTail(p: number): (t: number, df: number, noncentrality: number) =>
   return useLower ? below : (t, df, noncentrality) => below(-t, df, -noncentrality)
 }
 
+/** Roots of tails that are themselves good to about 1e-12. */
+const rootTolerance = 1e-14
+
 /**
- * Quantile of the noncentral t distribution for a chance strictly between 0 and 1. Starts from the normal
- * approximation with the mean and spread of (Z + noncentrality)/V.
+ * Quantile of the noncentral t distribution for a chance strictly between 0 and 1. Starts from the approximation of
+ * Jennett and Welch.
  */
 export function noncentralTQuantile(p: number, df: number, noncentrality: number): number {
   if (noncentrality === 0) return tQuantile(p, df)
@@ -107,7 +110,26 @@ export function noncentralTQuantile(p: number, df: number, noncentrality: number
   const gap = (t: number): number =>
     useLower ? ln(tail(t, df, noncentrality)) - target : target - ln(tail(t, df, noncentrality))
   const width = Math.sqrt(1 + (0.5 * noncentrality * noncentrality) / df)
-  return findRisingRoot(gap, noncentrality + normalQuantile(p) * width, 0.2 * width)
+  const near = noncentralTQuantileNear(p, df, noncentrality)
+  return near === null
+    ? findRisingRoot(gap, noncentrality + normalQuantile(p) * width, 0.2 * width, rootTolerance)
+    : findRisingRoot(gap, near, nearness(df) * width, rootTolerance)
+}
+
+/** How far an approximation that takes V for normal may be off, in standard deviations of what is sought. */
+const nearness = (df: number): number => Math.min(0.2, 0.5 / Math.sqrt(df))
+
+/**
+ * The quantile to about 1/(5·df) of itself, from taking Z − t·V for normal (Jennett and Welch, Supplement to the Journal
+ * of the Royal Statistical Society 6, 1939); null where the approximation has none.
+ */
+export function noncentralTQuantileNear(p: number, df: number, noncentrality: number): number | null {
+  const z = normalQuantile(p)
+  const mean = chiMean(df)
+  const variance = (1 - mean) * (1 + mean)
+  const divisor = mean * mean - z * z * variance
+  const inRoot = mean * mean + variance * (noncentrality * noncentrality - z * z)
+  return divisor > 0 && inRoot >= 0 ? (noncentrality * mean + z * Math.sqrt(inRoot)) / divisor : null
 }
 
 /**
@@ -123,5 +145,7 @@ export function noncentralityAt(t: number, df: number, p: number): number {
   const gap = (noncentrality: number): number =>
     useLower ? target - ln(tail(t, df, noncentrality)) : ln(tail(t, df, noncentrality)) - target
   const width = Math.sqrt(1 + (0.5 * t * t) / df)
-  return findRisingRoot(gap, t - normalQuantile(p) * width, 0.2 * width, 1e-13)
+  const mean = chiMean(df)
+  const near = t * mean - normalQuantile(p) * Math.sqrt(1 + t * t * (1 - mean) * (1 + mean))
+  return findRisingRoot(gap, near, nearness(df) * width, 1e-13)
 }

@@ -1,7 +1,7 @@
 import { InvalidInput } from '../input/invalid-input'
 import type { Reader } from '../input/reader'
 import { readRule, ruleDescriptor } from '../rules'
-import { chancesOf, chanceToMeet } from '../rules/chances'
+import { chancesOf, chanceToMeet, leastChanceToMeet } from '../rules/chances'
 import type { Rule, SampleSizeOutput, Truth } from '../types'
 import { readTruth } from './operating-characteristic'
 
@@ -18,30 +18,31 @@ export function sampleSize(rule: Rule, truth: Truth, power: number): { n: number
   const { powerOf } = ruleDescriptor(rule)
   const chance = (n: number) =>
     powerOf === 'meets' ? chanceToMeet(rule, n)(truth) : chancesOf(rule, n)(truth)[powerOf]
-  let held: { n: number; power: number } | null = null
+  /** Far from the answer, a smaller chance that is formed faster settles it; the margin is that of its accuracy. */
+  const surely = (n: number) =>
+    powerOf === 'meets' && (leastChanceToMeet(rule, n)?.(truth) ?? 0) >= power + 1e-9
+  const reaches = (n: number) => surely(n) || chance(n) >= power
+  let held: number | null = null
   for (const n of searchedDownwards()) {
-    const here = chance(n)
-    if (here >= power) held = { n, power: here }
-    else return held && refine(chance, power, n, held)
+    if (reaches(n)) {
+      held = n
+      continue
+    }
+    if (held !== null) held = leastBetween(reaches, n, held)
+    break
   }
-  return held
+  return held === null ? null : { n: held, power: chance(held) }
 }
 
-function refine(
-  chance: (n: number) => number,
-  power: number,
-  tooFew: number,
-  enough: { n: number; power: number },
-): { n: number; power: number } {
-  let low = tooFew
-  let held = enough
-  while (held.n - low > 1) {
-    const middle = Math.floor((low + held.n) / 2)
-    const here = chance(middle)
-    if (here >= power) held = { n: middle, power: here }
+/** The least number above `tooFew`, and at most `enough`, that reaches the power. */
+function leastBetween(reaches: (n: number) => boolean, tooFew: number, enough: number): number {
+  let [low, high] = [tooFew, enough]
+  while (high - low > 1) {
+    const middle = Math.floor((low + high) / 2)
+    if (reaches(middle)) high = middle
     else low = middle
   }
-  return held
+  return high
 }
 
 function* searchedDownwards(): Generator<number> {

@@ -1,4 +1,9 @@
-import { chiSquareQuantile, noncentralTQuantile } from '../distributions'
+import {
+  chiSquareQuantile,
+  noncentralTQuantile,
+  noncentralTQuantileNear,
+  remembered,
+} from '../distributions'
 import { positiveSize } from '../input/bounds'
 import { given } from '../input/common'
 import { complement } from '../statistics/mean-interval'
@@ -27,14 +32,27 @@ export const spreadAtLeast = (rule: Index, bias: number): number =>
  */
 const marginOfSafety = 0.9
 
+/** The tolerance factor t(p; n − 1, √n·half)/√n of the noncentral t distribution. */
+const toleranceFactor = remembered(
+  512,
+  (p: number, n: number, half: number) => noncentralTQuantile(p, n - 1, Math.sqrt(n) * half) / Math.sqrt(n),
+)
+
+/** A factor at least as large that is formed at once, for p from ½; infinite where there is none. */
+function largerFactor(p: number, n: number, half: number): number {
+  const near = noncentralTQuantileNear(p, n - 1, Math.sqrt(n) * half)
+  // The approximation falls short of the quantile by less than a tenth of 1/df there.
+  return near === null ? Infinity : (near / Math.sqrt(n)) * (1 + 0.2 / (n - 1))
+}
+
 /**
  * |bias| + factor·s ≤ allowance, and s at most what Cg allows. On the estimate the factor is least·sigmas/2; on a bound at
- * `p` it is the tolerance factor t(p; n − 1, √n·least·sigmas/2)/√n of the noncentral t distribution, and the spread that
- * Cg allows shrinks or grows by √(χ²(1 − p; n − 1)/(n − 1)), as the bounds of `capabilityIndices` do.
+ * `p` it is the tolerance factor, and the spread that Cg allows shrinks or grows by √(χ²(1 − p; n − 1)/(n − 1)), as the
+ * bounds of `capabilityIndices` do.
  */
-function band(rule: Index, n: number, p: number | null): Band {
+function band(rule: Index, n: number, p: number | null, factorOf = toleranceFactor): Band {
   const half = halfSpread(rule)
-  const factor = p === null ? half : noncentralTQuantile(p, n - 1, Math.sqrt(n) * half) / Math.sqrt(n)
+  const factor = p === null ? half : factorOf(p, n, half)
   const ofCg = rule.leastCg === undefined ? null : (2 * allowance(rule)) / (rule.leastCg * rule.sigmas)
   const shrunk = p === null ? 1 : Math.sqrt(chiSquareQuantile(complement(p), n - 1) / (n - 1))
   return {
@@ -60,6 +78,8 @@ export const index: RuleDescriptor<'index'> = {
     ...given('alpha', reader.optionalNumber('alpha', { above: 0, most: 0.5 })),
   }),
   accepts: (rule, n) => band(rule, n, rule.alpha === undefined ? null : complement(rule.alpha)),
+  acceptsAtLeast: (rule, n) =>
+    rule.alpha === undefined ? null : band(rule, n, complement(rule.alpha), largerFactor),
   refusesOutside: (rule, n) => (rule.alpha === undefined ? null : band(rule, n, rule.alpha)),
   referenceUncertainty: () => 0,
   margin: allowance,

@@ -1,8 +1,8 @@
-import { normalCdf } from '../distributions'
+import { normalCdfWithin, normalReach } from '../distributions'
 import type { Chances, Rule, Truth } from '../types'
 import { acceptedHalfWidth, rootSumOfSquares, type Band } from './band'
 import { ruleDescriptor } from './index'
-import { spreadNodes, type SpreadNode, type SpreadSupport, spreadSupport } from './spread-nodes'
+import { spreadNodes, spreadSupport, type SpreadNodes, type SpreadSupport } from './spread-nodes'
 
 /**
  * The exact chances of the three verdicts of a rule with n ≥ 2 normal readings, as a function of the truth: the
@@ -25,11 +25,19 @@ export function chancesOf(rule: Rule, n: number): (truth: Truth) => Chances {
 }
 
 /** The chance to meet alone, as `chancesOf` gives it: half the work where nothing else is asked. */
-export function chanceToMeet(rule: Rule, n: number): (truth: Truth) => number {
-  const descriptor = ruleDescriptor(rule)
-  const accepted = chanceInside(descriptor.accepts(rule, n), n)
-  const reference = descriptor.referenceUncertainty(rule)
-  return (truth) => accepted(located(truth, n, reference))
+export const chanceToMeet = (rule: Rule, n: number): ((truth: Truth) => number) =>
+  chanceWithin(rule, n, ruleDescriptor(rule).accepts(rule, n))
+
+/** A chance that the chance to meet is at least, near to it and formed faster; null where there is none. */
+export function leastChanceToMeet(rule: Rule, n: number): ((truth: Truth) => number) | null {
+  const band = ruleDescriptor(rule).acceptsAtLeast?.(rule, n)
+  return band ? chanceWithin(rule, n, band) : null
+}
+
+function chanceWithin(rule: Rule, n: number, band: Band): (truth: Truth) => number {
+  const inside = chanceInside(band, n)
+  const reference = ruleDescriptor(rule).referenceUncertainty(rule)
+  return (truth) => inside(located(truth, n, reference))
 }
 
 const located = ({ bias, standardDeviation }: Truth, n: number, reference: number): At => ({
@@ -44,37 +52,62 @@ interface At {
   spreadOfMean: number
 }
 
-/** Beyond nine standard deviations Φ is 0 or 1 to 1e-19. */
-const reach = 9
+/** A band at the points of integration over the spread, where it accepts anything: half widths and weights. */
+interface PlacedBand {
+  count: number
+  halfWidth: Float64Array
+  weight: Float64Array
+}
+
+const noPlace = (): PlacedBand => ({ count: 0, halfWidth: new Float64Array(0), weight: new Float64Array(0) })
+
+/** Writes a band at a spread over what `of` held before. */
+function place(of: PlacedBand, band: Band, standardDeviation: number, { v, weight }: SpreadNodes): void {
+  if (of.halfWidth.length < v.length) {
+    of.halfWidth = new Float64Array(2 * v.length)
+    of.weight = new Float64Array(2 * v.length)
+  }
+  of.count = 0
+  for (let at = 0; at < v.length; at++) {
+    const h = acceptedHalfWidth(band, standardDeviation * (v[at] as number))
+    if (h < 0) continue
+    of.halfWidth[of.count] = h
+    of.weight[of.count] = weight[at] as number
+    of.count++
+  }
+}
 
 function chanceInside(band: Band, n: number): (at: At) => number {
-  const df = n - 1
-  const support = spreadSupport(df)
-  let plain: { standardDeviation: number; nodes: readonly SpreadNode[] } | null = null
+  const whole = spreadSupport(n - 1, 1)
+  const here = noPlace()
+  let placedAt: number | null = null
   return (at) => {
-    const { bias, standardDeviation, spreadOfMean } = at
-    const sharp = sharpPoints(band, at, support)
-    let nodes: readonly SpreadNode[]
-    if (sharp.length > 0) {
-      nodes = spreadNodes(df, support, [...edges(band, standardDeviation), ...sharp])
-    } else {
+    const { standardDeviation } = at
+    const parts = partsOfPanels(band, at, whole)
+    if (parts > mostParts) {
+      const points = [...edges(band, standardDeviation), ...sharpPoints(band, at, whole)]
+      place(here, band, standardDeviation, spreadNodes(whole, points))
+      placedAt = null
+    } else if (placedAt !== standardDeviation) {
       // Curves over the bias share their spread, and so their nodes.
-      if (plain?.standardDeviation !== standardDeviation) {
-        plain = { standardDeviation, nodes: spreadNodes(df, support, edges(band, standardDeviation)) }
-      }
-      nodes = plain.nodes
+      const support = spreadSupport(n - 1, parts)
+      place(here, band, standardDeviation, spreadNodes(support, edges(band, standardDeviation)))
+      placedAt = standardDeviation
     }
-    let sum = 0
-    for (const { v, weight } of nodes) {
-      const h = acceptedHalfWidth(band, standardDeviation * v)
-      if (h < 0) continue
-      const above = (h - bias) / spreadOfMean
-      const below = (h + bias) / spreadOfMean
-      if (above < -reach) continue
-      sum += weight * ((above > reach ? 1 : normalCdf(above)) - (below > reach ? 0 : normalCdf(-below)))
-    }
-    return Math.min(1, Math.max(0, sum))
+    return sumOver(here, at)
   }
+}
+
+function sumOver({ count, halfWidth, weight }: PlacedBand, { bias, spreadOfMean }: At): number {
+  const inSpreads = 1 / spreadOfMean
+  let sum = 0
+  for (let at = 0; at < count; at++) {
+    const h = halfWidth[at] as number
+    const above = (h - bias) * inSpreads
+    if (above < -normalReach) continue
+    sum += (weight[at] as number) * (normalCdfWithin(above) - normalCdfWithin((-h - bias) * inSpreads))
+  }
+  return Math.min(1, Math.max(0, sum))
 }
 
 /** The v at which the band closes, a corner of the integrand, or ends, a step, and where it bends. */
@@ -83,18 +116,24 @@ function edges(band: Band, standardDeviation: number): number[] {
   return [...closed, ...band.bends].map((s) => s / standardDeviation)
 }
 
-/** Break points within the steps of the two normal functions where these are sharper than the panels resolve. */
+/** A panel holds at most six standard deviations of the steps of the two normal functions. */
+const mostInPanel = 6
+/** From here on it takes fewer points to split at the steps themselves, wherever the bias puts them. */
+const mostParts = 6
+
+/** Into how many parts each panel is split, so that none holds too much of a step. */
+function partsOfPanels(band: Band, { standardDeviation, spreadOfMean }: At, support: SpreadSupport): number {
+  const { lower, upper, panels } = support
+  const rise = Math.abs(band.halfWidth(standardDeviation * upper) - band.halfWidth(standardDeviation * lower))
+  return Math.max(1, Math.ceil(rise / (panels * spreadOfMean * mostInPanel)))
+}
+
+/** Break points within the steps of the two normal functions. */
 function sharpPoints(band: Band, at: At, support: SpreadSupport): number[] {
   const { bias, standardDeviation, spreadOfMean } = at
-  const slope =
-    Math.abs(
-      band.halfWidth(standardDeviation * support.upper) - band.halfWidth(standardDeviation * support.lower),
-    ) /
-    ((support.upper - support.lower) * spreadOfMean)
-  if (!(slope * support.panel > 6)) return []
   const points: number[] = []
   for (const side of [bias, -bias]) {
-    for (let z = -reach; z <= reach; z += 4.5) {
+    for (let z = -normalReach; z <= normalReach; z += 4.5) {
       const s = band.spreadAt(side + z * spreadOfMean)
       if (s !== null) points.push(s / standardDeviation)
     }

@@ -8,6 +8,8 @@ export interface RuleDescriptor<T extends RuleType> {
   read(reader: Reader): RuleOf<T>
   /** What the rule accepts with n readings: meets. */
   accepts(rule: RuleOf<T>, n: number): Band
+  /** A part of that band which is formed much faster; null, or left out, where there is none. */
+  acceptsAtLeast?(rule: RuleOf<T>, n: number): Band | null
   /** Outside this band it falls short; null where whatever does not meet falls short. */
   refusesOutside(rule: RuleOf<T>, n: number): Band | null
   /** Standard uncertainty of the reference value, random over certificates, that adds to that of the mean. */
