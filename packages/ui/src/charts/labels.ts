@@ -78,19 +78,21 @@ export function placeCurveLabels(
             box.y >= frame.y &&
             box.y + box.height <= frame.y + frame.height
           if (!inside || used.some((other) => overlap(box, other))) continue
-          const crossed = curves.reduce(
-            (count, curve) => count + curve.points.filter((each) => holds(box, each)).length,
-            0,
-          )
           // Steep parts of the curve, near the middle of the frame, read best; each curve prefers another height.
           const slope = Math.abs((points[at + 1]?.y ?? point.y) - (points[at - 1]?.y ?? point.y))
           const height = frame.y + frame.height * (0.38 + 0.2 * index)
-          const cost =
-            crossed * 50 +
+          const alone =
             Math.abs(point.y - height) * 0.4 -
             Math.min(slope, 12) * 3 +
             (rise ? 6 : 0) +
             (anchor === 'end' ? 4 : 0)
+          // Points in the way are counted, which takes long, only where the place could still be the best.
+          if (best && alone >= best.cost) continue
+          const crossed = curves.reduce(
+            (count, curve) => count + curve.points.filter((each) => holds(box, each)).length,
+            0,
+          )
+          const cost = alone + crossed * 50
           if (!best || cost < best.cost) best = { cost, place, box }
         }
     })

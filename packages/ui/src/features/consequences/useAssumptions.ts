@@ -9,6 +9,10 @@ export const mostReadings = 1000
 export const leastReadings = 2
 const usualChance = 0.9
 
+/** The value there was where the new one says the same, so that nothing is drawn anew for it. */
+export const unchanged = <Value>(before: Value | undefined, now: Value): Value =>
+  before !== undefined && JSON.stringify(before) === JSON.stringify(now) ? before : now
+
 /** A number that may be typed, with what counts while nothing good is. */
 interface Entry {
   usual: number
@@ -75,11 +79,14 @@ export function useAssumptions(
     return assumedReference(characteristic, [...after, ...before]) !== undefined
   })
   return {
-    assumptions: computed<Assumptions>(() => ({
-      readings: value('readings'),
-      standardDeviation: value('spread'),
-      ...(addsReference.value ? { referenceStandardUncertainty: value('reference') } : {}),
-    })),
+    assumptions: computed<Assumptions>((before) =>
+      // A move of the bias leaves them as they are, and so everything that is drawn from them.
+      unchanged(before, {
+        readings: value('readings'),
+        standardDeviation: value('spread'),
+        ...(addsReference.value ? { referenceStandardUncertainty: value('reference') } : {}),
+      }),
+    ),
     /** Whether a clause adds the uncertainty of the reference value, so that it must be assumed. */
     addsReference,
     /** The true bias of the gauge looked at, and the wanted chance to meet a clause. */

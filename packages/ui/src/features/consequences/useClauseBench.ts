@@ -20,7 +20,7 @@ import {
 import { incentiveRows, type IncentiveRow } from './consequenceRows'
 import { curveNames } from './curveNames'
 import { useChunks, type Chunk } from './useChunks'
-import { mostReadings, type AssumptionsView } from './useAssumptions'
+import { mostReadings, unchanged, type AssumptionsView } from './useAssumptions'
 
 export type Which = 'before' | 'after'
 const both: readonly Which[] = ['after', 'before']
@@ -46,10 +46,10 @@ export interface BenchInput {
  */
 export function useClauseBench(source: () => BenchInput, entered: AssumptionsView) {
   const rule = (which: Which): ComputedRef<Rule | null> =>
-    computed(() => {
+    computed((known) => {
       const { pair, characteristic } = source()
       const clause = pair[which]
-      return clause && ruleOf(clause, characteristic, entered.assumptions.value)
+      return unchanged(known, clause && ruleOf(clause, characteristic, entered.assumptions.value))
     })
   const rules = { before: rule('before'), after: rule('after') }
   const assumed = entered.assumptions
