@@ -273,7 +273,9 @@ const anAct = fc.record({
   inDays: fc.integer({ min: 0, max: 12 }),
   clauses: aClauses,
   terms: fc.record({
-    validityMonths: fc.option(fc.integer({ min: 1, max: 120 })),
+    validityMonths: fc.option(
+      fc.oneof(fc.integer({ min: 1, max: 120 }), fc.constant('no-expiry' as const)),
+    ),
     moved: fc.option(fc.constantFrom('suspended' as const, 'stays' as const)),
   }),
   /** How far it gets: signed by both, agreed, countered, or proposed and withdrawn again. */
@@ -294,11 +296,38 @@ function modelOf(signed: readonly Signed[], on: string) {
   const terms = Object.fromEntries(
     termFields.map((field) => {
       const [first] = layers.map((each) => each.terms[field]).filter((value) => value !== null)
-      return [field, first ?? defaultTerms[field]]
+      return [field, first === 'no-expiry' ? null : (first ?? defaultTerms[field])]
     }),
   )
   return { clauses, terms }
 }
+
+it('no expiry, said for one characteristic, counts there against a wider validity and nowhere else', async () => {
+  world.harness.moveClock('2026-11-02T09:00:00.000Z')
+  const place = await newPlace()
+  const { partId, characteristicId, otherCharacteristicId, taskId } = place
+  const on = '2026-11-02'
+  const wide = await world.agree({ partId, clauses: [zeroTest()], terms: { validityMonths: 12 }, effectiveOn: on })
+  const narrow = await world.agree({
+    characteristicId,
+    clauses: [],
+    terms: { validityMonths: 'no-expiry' },
+    effectiveOn: on,
+  })
+  expect(JSON.parse(narrow.versions[0]?.text ?? '')).toMatchObject({ terms: { validityMonths: 'no-expiry' } })
+  const { terms } = await applied(place, on)
+  expect(terms.values.validityMonths).toBeNull()
+  const told = await why(engineer, taskId)
+  expect(told.terms.find(({ field }) => field === 'validityMonths')).toMatchObject({
+    value: null,
+    source: { agreementId: narrow.id },
+    others: [
+      { value: 12, source: { agreementId: wide.id }, why: { code: 'wider-scope', by: { scope: 'characteristic' } } },
+    ],
+  })
+  const sibling = await applied({ ...place, characteristicId: otherCharacteristicId }, on)
+  expect(sibling.terms.values.validityMonths).toBe(12)
+})
 
 it('what applies is a function of date and scope, under any history: no unsigned clause ever judges', async () => {
   let compared = 0

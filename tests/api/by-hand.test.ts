@@ -154,6 +154,8 @@ describe('what a submission freezes beside its clauses', () => {
     expect(await contentOf('quality', id)).toMatchObject({ terms })
     const next = await story.submission(task.id, 'draft')
     expect(await contentOf('engineer', next)).toMatchObject({ terms: { validityMonths: 6, moved: 'stays' } })
+    await agreeTerms(task.part.id, { validityMonths: 'no-expiry' })
+    expect(await contentOf('engineer', next)).toMatchObject({ terms: { validityMonths: null } })
   })
 
   it('lets who took the readings sign where the agreement says so, and nowhere else', async () => {

@@ -1,5 +1,8 @@
 import { z } from 'zod'
 
+/** Said of the validity: an acceptance does not expire. */
+export const noExpiry = 'no-expiry'
+
 const stopsOrStays = z.enum(['suspended', 'stays']).nullable()
 
 /**
@@ -7,12 +10,19 @@ const stopsOrStays = z.enum(['suspended', 'stays']).nullable()
  * that is null is not said there; the wider scope's counts then, and where none says it, the default.
  */
 export const termsSchema = z.object({
-  /** Months for which an acceptance holds. */
+  /** Months for which an acceptance holds; `no-expiry` says against a wider scope that it has no time limit. */
   validityMonths: z
-    .number()
-    .int('Enter whole months.')
-    .min(1, 'Enter 1 month or more.')
-    .max(120, 'Enter 120 months or fewer.')
+    .union(
+      [
+        z.literal(noExpiry),
+        z
+          .number()
+          .int('Enter whole months.')
+          .min(1, 'Enter 1 month or more.')
+          .max(120, 'Enter 120 months or fewer.'),
+      ],
+      `Enter whole months from 1 to 120, or "${noExpiry}".`,
+    )
     .nullable(),
   /** What becomes of an acceptance while the calibration of gauge or standard is overdue. */
   calibrationOverdue: z.enum(['on-hold', 'stays']).nullable(),
@@ -94,8 +104,8 @@ export function resolveTerms<Source>(layers: readonly TermLayer<Source>[]): {
   const from = termFields.map((field): ResolvedTerm<Source> => {
     const said = layers.find(({ terms }) => terms[field] !== null)
     const value = said?.terms[field]
-    return said && value !== undefined
-      ? { field, value, source: said.source }
+    return said && value != null
+      ? { field, value: value === noExpiry ? null : value, source: said.source }
       : { field, value: defaultTerms[field], source: null }
   })
   const values = Object.fromEntries(from.map(({ field, value }) => [field, value]))

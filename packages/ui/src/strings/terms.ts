@@ -1,4 +1,4 @@
-import type { TermField } from '@evenrule/api/contract'
+import { noExpiry, type TermField } from '@evenrule/api/contract'
 import { formatCount } from '../format'
 import { several } from './agreements'
 
@@ -51,10 +51,11 @@ export const termWords = {
   hide: 'Hide terms',
   months: 'months',
   neverExpires: 'no time limit',
+  noLimit: 'No time limit, whatever a wider agreement says',
   unsaid: (usual: string) => `Where nobody says it: ${usual}.`,
   caption: 'Terms side by side',
   term: 'Term',
-  monthsProblem: 'Enter whole months from 1 to 120, or leave it empty.',
+  monthsProblem: 'Enter whole months from 1 to 120, tick that there is no time limit, or leave it empty.',
 } as const
 
 /** The value of any term; null is what is not said. */
@@ -63,6 +64,7 @@ type Value = number | string | boolean | null
 /** The value of one term for reading. */
 export function describeTerm(field: TermField, value: Value): string {
   if (value === null) return termWords.notSaid
+  if (value === noExpiry) return termWords.neverExpires
   if (field === 'validityMonths') return formatCount(Number(value), 'month')
   return termChoices[field]?.[String(value)] ?? String(value)
 }

@@ -44,6 +44,9 @@ describe('terms as typed', () => {
       readingsTakerMaySign: false,
     }))
   it('name months that are none', () => {
+    const endless = { ...noTerms, validityMonths: 'no-expiry' as const }
+    expect(readTerms(typedTerms(endless))).toEqual({ terms: endless, problems: {} })
+    expect(pieceText('term:validityMonths', 'no-expiry')).toBe('no time limit')
     for (const validityMonths of ['0', '121', '1.5', 'two'])
       expect(readTerms({ ...typedTerms(), validityMonths }).problems).toHaveProperty(['terms.validityMonths'])
   })

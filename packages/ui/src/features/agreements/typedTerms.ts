@@ -1,4 +1,4 @@
-import { noTerms, termFields, type TermField, type Terms } from '@evenrule/api/contract'
+import { noExpiry, noTerms, termFields, type TermField, type Terms } from '@evenrule/api/contract'
 import { parseNumber } from '../../format'
 import { termWords as words } from '../../strings/terms'
 
@@ -16,11 +16,12 @@ const isMonths = (value: number | null): value is number =>
 /** What the typed terms say, and what is wrong with them by path in the form. */
 export function readTerms(typed: TypedTerms): { terms: Terms; problems: Record<string, string> } {
   const text = typed.validityMonths.trim()
-  const months = text ? (parseNumber(text).value ?? null) : null
+  const endless = text === noExpiry
+  const months = text && !endless ? (parseNumber(text).value ?? null) : null
   const choice = <V extends string>(value: string) => (value === '' ? null : (value as V))
   return {
     terms: {
-      validityMonths: isMonths(months) ? months : null,
+      validityMonths: endless ? noExpiry : isMonths(months) ? months : null,
       calibrationOverdue: choice(typed.calibrationOverdue),
       outOfLimits: choice(typed.outOfLimits),
       repaired: choice(typed.repaired),
@@ -28,6 +29,6 @@ export function readTerms(typed: TypedTerms): { terms: Terms; problems: Record<s
       changed: choice(typed.changed),
       readingsTakerMaySign: typed.readingsTakerMaySign === '' ? null : typed.readingsTakerMaySign === 'true',
     },
-    problems: text && !isMonths(months) ? { 'terms.validityMonths': words.monthsProblem } : {},
+    problems: text && !endless && !isMonths(months) ? { 'terms.validityMonths': words.monthsProblem } : {},
   }
 }
