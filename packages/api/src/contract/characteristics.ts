@@ -45,6 +45,8 @@ export const characteristicSchema = z.object({
   /** Active measuring tasks, and the proof they have together. */
   tasks: z.number().int(),
   proof: z.enum(proofStates),
+  /** The day on which accepted proof runs out, where that is soon. */
+  runsOutOn: calendarDate.nullable(),
   archivedAt: instant.nullable(),
   rowVersion: z.number().int(),
 })

@@ -112,6 +112,8 @@ export const coveredPartSchema = z.object({
       unit: z.string(),
       class: characteristicClass,
       proof: z.enum(proofStates),
+      /** The day on which accepted proof runs out, where that is soon. */
+      runsOutOn: calendarDate.nullable(),
       /** The measuring task that is least far; null where there is none. */
       taskId: uuid.nullable(),
     }),

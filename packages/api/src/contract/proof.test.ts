@@ -1,5 +1,5 @@
 import { describe, expect, it } from 'vitest'
-import { proofOfCharacteristic, proofOfTask } from './proof'
+import { proofOfCharacteristic, proofOfTask, runsOutOfTask } from './proof'
 import type { StandingState } from './standing'
 
 const of = (states: readonly string[], standing: StandingState = 'stands') =>
@@ -50,4 +50,21 @@ describe('the proof of a characteristic', () => {
   })
   it('says that nothing measures it where it has no task', () =>
     expect(proofOfCharacteristic([])).toBe('no-task'))
+})
+
+describe('accepted proof that runs out soon', () => {
+  const accepted = (runsOutOn: string | null, standing: StandingState = 'stands') => ({
+    state: 'accepted',
+    standing,
+    runsOutOn,
+  })
+  it.each([
+    [[accepted('2027-01-31')], '2027-01-31'],
+    [[accepted(null)], null],
+    [[accepted('2027-01-31'), accepted(null)], null],
+    [[accepted('2027-01-10'), accepted('2027-01-31')], '2027-01-31'],
+    [[accepted('2027-01-31'), accepted(null, 'suspended')], '2027-01-31'],
+    [[accepted(null, 'expired')], null],
+    [[], null],
+  ])('of %j is %s', (submissions, day) => expect(runsOutOfTask(submissions)).toBe(day))
 })

@@ -35,6 +35,8 @@ const ofSubmission: Partial<Record<string, ProofState>> = {
 export interface ProofOfSubmission {
   state: string
   standing: StandingState | null
+  /** Its last day, where that is near. */
+  runsOutOn?: string | null
 }
 
 /**
@@ -45,6 +47,17 @@ export interface ProofOfSubmission {
 export function proofOfTask(submissions: readonly ProofOfSubmission[]): ProofState {
   const states = submissions.map(proofOfSubmission).filter((state) => state !== undefined)
   return states.find(isAccepted) ?? states[0] ?? 'missing'
+}
+
+/**
+ * The day on which a task’s accepted proof runs out, where that is soon; null where it is not, or where an acceptance
+ * that stands longer covers it too.
+ */
+export function runsOutOfTask(submissions: readonly ProofOfSubmission[]): string | null {
+  const days = submissions
+    .filter((each) => isAccepted(proofOfSubmission(each) ?? 'missing'))
+    .map(({ runsOutOn }) => runsOutOn ?? null)
+  return days.includes(null) ? null : (days.toSorted().at(-1) ?? null)
 }
 
 const proofOfSubmission = ({ state, standing }: ProofOfSubmission): ProofState | undefined => {

@@ -67,6 +67,18 @@ describe('the standing of an acceptance', () => {
     expect(addMonths('2026-12-01', 1)).toBe('2027-01-01')
   })
 
+  it('runs out soon from sixty days before its last day, while it stands', () => {
+    const on = (day: string, facts = { ...accepted, calibrations: [] as StandingFacts['calibrations'] }) =>
+      standingOf(facts, day).runsOutOn
+    expect(on('2026-12-01')).toBeNull()
+    expect(on('2026-12-02')).toBe('2027-01-31')
+    expect(on('2027-01-31')).toBe('2027-01-31')
+    expect(on('2027-02-01')).toBeNull()
+    expect(on('2026-12-15', accepted)).toBeNull()
+    const endless = { ...accepted, calibrations: [], terms: { ...suspendAll, validityMonths: null } }
+    expect(on('2036-12-15', endless)).toBeNull()
+  })
+
   it('is on hold from the day after the calibration was due until one finds it within limits', () => {
     expect(stateOn(accepted, '2026-11-02')).toBe('stands')
     expect(standingOf(accepted, '2026-11-03')).toMatchObject({

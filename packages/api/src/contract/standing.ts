@@ -46,12 +46,17 @@ export const standingSchema = z.object({
   since: calendarDate,
   /** Last day of the agreed validity; null where it does not run out. */
   until: calendarDate.nullable(),
+  /** That last day while the acceptance stands and the day is near (`runsOutWithin`); null otherwise. */
+  runsOutOn: calendarDate.nullable(),
   /** Day on which the first calibration that it rests on is due; null where none is known. */
   calibrationDueOn: calendarDate.nullable(),
   /** Null for one that stands. */
   cause: standingCauseSchema.nullable(),
 })
 export type Standing = z.output<typeof standingSchema>
+
+/** Days before its last day from which an acceptance runs out soon: both sides are reminded then. */
+export const runsOutWithin = 60
 
 /** What the agreement says of the life of an acceptance, as frozen in the submission. */
 export type StandingTerms = Omit<ResolvedTerms, 'readingsTakerMaySign'>
@@ -128,6 +133,7 @@ export function standingOf(facts: StandingFacts, day: string): Standing {
     state: found?.state ?? 'stands',
     since: found ? laterDay(found.since, acceptedOn) : acceptedOn,
     until,
+    runsOutOn: !found && until !== null && until <= addDays(day, runsOutWithin) ? until : null,
     calibrationDueOn: due.sort()[0] ?? null,
     cause: found?.cause ?? null,
   }

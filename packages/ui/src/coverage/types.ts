@@ -9,4 +9,6 @@ export interface CoverageTick {
   /** "Ø 24.000 ±0.025, bore" */
   label: string
   state: CoverageState
+  /** The day on which it runs out, as a calendar date; for ticks that run out. */
+  runsOutOn?: string | null
 }

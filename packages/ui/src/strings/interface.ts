@@ -128,5 +128,6 @@ export const plotWords = {
 
 export const coverageRuleWords = {
   covered: (covered: number, total: number) => `${covered} of ${total} characteristics covered`,
+  runsOutOn: (day: string) => `accepted, runs out on ${day}`,
   key: 'one tick per characteristic, numbered as on the drawing: full accepted, half conditional, broken running out, crossed on hold or suspended, flagged challenged, ring missing, ring under a broken line ended',
 } as const

@@ -143,6 +143,9 @@ export const characteristicWords = {
       ? 'All stand on accepted proof.'
       : `${count === 0 ? 'None stands' : `${count} of ${total} stand`} on accepted proof`,
   open: (parts: string[]) => `: ${parts.join(', ')}.`,
+  runsOutCount: (count: number) =>
+    count === 1 ? 'The proof of 1 runs out soon.' : `The proof of ${count} runs out soon.`,
+  runsOutOn: (day: string) => `runs out on ${day}`,
   challengedCount: (count: number) => `${count} challenged or refused`,
   stoppedCount: (count: number) => `${count} on hold or suspended`,
   endedCount: (count: number) => `${count} expired, lapsed or reopened`,

@@ -12,6 +12,7 @@ const row = (number: number, state: proof.ProofState, more: object = {}) =>
     unit: 'mm',
     class: 'ordinary',
     proof: state,
+    runsOutOn: null,
     ...more,
   }) as characteristics.Characteristic
 
@@ -45,9 +46,18 @@ describe('the answer on a part’s page', () => {
 })
 
 describe('the coverage rule of a part', () => {
+  it('draws what is accepted and runs out soon with its day, and says how many', () => {
+    const rows = [row(1, 'accepted', { runsOutOn: '2026-12-20' }), row(2, 'accepted-with-conditions')]
+    expect(coverageTicks(rows).map(({ state, runsOutOn }) => [state, runsOutOn])).toEqual([
+      ['running-out', '2026-12-20'],
+      ['conditional', null],
+    ])
+    expect(answerOfPart('A', rows).strong).toBe('All stand on accepted proof. The proof of 1 runs out soon.')
+  })
+
   it('stands in the order of the drawing, each tick named with its tolerance', () =>
     expect(coverageTicks([row(7, 'waiting'), row(2, 'accepted')])).toEqual([
-      { number: 2, label: 'Bore Ø 24.000 ±0.025\u202Fmm', state: 'accepted' },
-      { number: 7, label: 'Bore Ø 24.000 ±0.025\u202Fmm', state: 'missing' },
+      { number: 2, label: 'Bore Ø 24.000 ±0.025\u202Fmm', state: 'accepted', runsOutOn: null },
+      { number: 7, label: 'Bore Ø 24.000 ±0.025\u202Fmm', state: 'missing', runsOutOn: null },
     ]))
 })

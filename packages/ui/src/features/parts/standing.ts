@@ -4,7 +4,7 @@ import { characteristicWords as words } from '../../strings/parts'
 import { toleranceText } from './tolerance'
 
 type Row = characteristics.Characteristic
-type TickRow = Pick<Row, 'number' | 'name' | 'nominal' | 'lowerLimit' | 'upperLimit' | 'unit' | 'proof'>
+type TickRow = Pick<Row, 'number' | 'name' | 'nominal' | 'lowerLimit' | 'upperLimit' | 'unit' | 'proof' | 'runsOutOn'>
 
 const coverageOf: Record<proof.ProofState, CoverageState> = {
   'no-task': 'missing',
@@ -28,7 +28,8 @@ export const coverageTicks = (rows: readonly TickRow[]): CoverageTick[] =>
     .map((row) => ({
       number: row.number,
       label: `${row.name} ${toleranceText(row)}`,
-      state: coverageOf[row.proof],
+      state: row.runsOutOn === null ? coverageOf[row.proof] : 'running-out',
+      runsOutOn: row.runsOutOn,
     }))
 
 /** Whether accepted proof covers it, with conditions or without. */
@@ -54,9 +55,13 @@ export function answerOfPart(revision: string, rows: readonly Row[]): PartAnswer
     [count('missing', 'no-task'), words.missingCount],
   ] as const
   const rest = open.filter(([number]) => number > 0).map(([number, say]) => say(number))
+  const ending = rows.filter(({ runsOutOn }) => runsOutOn !== null).length
   const safety = rows.filter((row) => row.class === 'safety').length
   return {
     plain: words.has(revision, rows.length, safety),
-    strong: words.accepted(accepted, rows.length) + (rest.length > 0 ? words.open(rest) : ''),
+    strong: [
+      words.accepted(accepted, rows.length) + (rest.length > 0 ? words.open(rest) : ''),
+      ...(ending > 0 ? [words.runsOutCount(ending)] : []),
+    ].join(' '),
   }
 }

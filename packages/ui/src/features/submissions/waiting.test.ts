@@ -106,6 +106,7 @@ describe('the answer', () => {
         state: 'on-hold',
         since: '2026-11-07',
         until: null,
+        runsOutOn: null,
         calibrationDueOn: '2026-11-06',
         cause: { kind: 'calibration-overdue', of: 'gauge', code: 'BG-14', dueOn: '2026-11-06' },
       },

@@ -31,6 +31,7 @@ export async function listOfCoverage(tenant: Tenant, query: QueryOf<typeof listC
           .map((row) => ({
             ...row,
             proof: proofs.get(row.id)?.proof ?? 'no-task',
+            runsOutOn: proofs.get(row.id)?.runsOutOn ?? null,
             taskId: proofs.get(row.id)?.leastFar ?? null,
           })),
       }))

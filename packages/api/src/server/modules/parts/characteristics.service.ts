@@ -208,7 +208,7 @@ function recordCharacteristic(
 
 function asAnswer(
   row: CharacteristicInPart,
-  proof: ProofOfCharacteristic = { tasks: 0, proof: 'no-task', leastFar: null },
+  proof: ProofOfCharacteristic = { tasks: 0, proof: 'no-task', runsOutOn: null, leastFar: null },
 ): CharacteristicAnswer {
   const { characteristic, part, revision, isCurrent } = row
   return {

@@ -1,4 +1,4 @@
-import type { Standing } from '../../../contract/standing'
+import { runsOutWithin, type Standing } from '../../../contract/standing'
 import { dayIn, dayInWords, daysBetween } from '../../calendar'
 import type { Tenant } from '../../db/tenant'
 import { selectAcceptedIds } from '../standing/standing.repository'
@@ -7,7 +7,7 @@ import { inDays, stageOf } from './reminders.stages'
 import { selectNamedSubmissions, titleOf, type NamedSubmission } from './reminders.submissions.repository'
 import type { Reminder } from './reminders.types'
 
-const daysBefore = [60, 14]
+const daysBefore = [runsOutWithin, 14]
 
 /**
  * Acceptances that run out soon, and those that stopped standing by the calendar alone: expired, lapsed, on hold. What
