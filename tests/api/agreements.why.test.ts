@@ -273,9 +273,7 @@ const anAct = fc.record({
   inDays: fc.integer({ min: 0, max: 12 }),
   clauses: aClauses,
   terms: fc.record({
-    validityMonths: fc.option(
-      fc.oneof(fc.integer({ min: 1, max: 120 }), fc.constant('no-expiry' as const)),
-    ),
+    validityMonths: fc.option(fc.oneof(fc.integer({ min: 1, max: 120 }), fc.constant('no-expiry' as const))),
     moved: fc.option(fc.constantFrom('suspended' as const, 'stays' as const)),
   }),
   /** How far it gets: signed by both, agreed, countered, or proposed and withdrawn again. */
@@ -307,7 +305,12 @@ it('no expiry, said for one characteristic, counts there against a wider validit
   const place = await newPlace()
   const { partId, characteristicId, otherCharacteristicId, taskId } = place
   const on = '2026-11-02'
-  const wide = await world.agree({ partId, clauses: [zeroTest()], terms: { validityMonths: 12 }, effectiveOn: on })
+  const wide = await world.agree({
+    partId,
+    clauses: [zeroTest()],
+    terms: { validityMonths: 12 },
+    effectiveOn: on,
+  })
   const narrow = await world.agree({
     characteristicId,
     clauses: [],
@@ -322,7 +325,11 @@ it('no expiry, said for one characteristic, counts there against a wider validit
     value: null,
     source: { agreementId: narrow.id },
     others: [
-      { value: 12, source: { agreementId: wide.id }, why: { code: 'wider-scope', by: { scope: 'characteristic' } } },
+      {
+        value: 12,
+        source: { agreementId: wide.id },
+        why: { code: 'wider-scope', by: { scope: 'characteristic' } },
+      },
     ],
   })
   const sibling = await applied({ ...place, characteristicId: otherCharacteristicId }, on)

@@ -8,7 +8,12 @@ export { chiSquareQuantile, chiSquareTails } from './chi-square'
 export { fQuantile, fTails } from './f'
 export { findRoot } from './find-root'
 export type { Tails } from './incomplete-gamma'
-export { noncentralityAt, noncentralTQuantile, noncentralTQuantileNear, noncentralTTails } from './noncentral-t'
+export {
+  noncentralityAt,
+  noncentralTQuantile,
+  noncentralTQuantileNear,
+  noncentralTTails,
+} from './noncentral-t'
 export { normalCdfWithin, normalReach } from './normal-table'
 export { normalCdf, normalQuantile, normalUpperTail } from './normal'
 export { remembered } from './remembered'

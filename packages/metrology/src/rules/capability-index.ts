@@ -1,9 +1,4 @@
-import {
-  chiSquareQuantile,
-  noncentralTQuantile,
-  noncentralTQuantileNear,
-  remembered,
-} from '../distributions'
+import { chiSquareQuantile, noncentralTQuantile, noncentralTQuantileNear, remembered } from '../distributions'
 import { positiveSize } from '../input/bounds'
 import { given } from '../input/common'
 import { complement } from '../statistics/mean-interval'

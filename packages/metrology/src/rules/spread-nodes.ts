@@ -25,7 +25,7 @@ const perPanel = 2 * legendre.length
  * The support of V = s/σ on df ≥ 1 degrees of freedom, each of its panels in so many parts: its density has one peak
  * and falls off on both sides. Every curve and check at one number of readings shares it.
  */
-export const spreadSupport = remembered(64, (df: number, parts = 1): SpreadSupport => {
+export const spreadSupport: (df: number, parts: number) => SpreadSupport = remembered(64, (df, parts) => {
   const { lower, upper } = parts === 1 ? endsOf(df) : spreadSupport(df, 1)
   const panels = panelCount * parts
   const nodes = emptyNodes(panels)

@@ -46,10 +46,10 @@ export interface BenchInput {
  */
 export function useClauseBench(source: () => BenchInput, entered: AssumptionsView) {
   const rule = (which: Which): ComputedRef<Rule | null> =>
-    computed((known) => {
+    computed<Rule | null>((before) => {
       const { pair, characteristic } = source()
       const clause = pair[which]
-      return unchanged(known, clause && ruleOf(clause, characteristic, entered.assumptions.value))
+      return unchanged(before, clause && ruleOf(clause, characteristic, entered.assumptions.value))
     })
   const rules = { before: rule('before'), after: rule('after') }
   const assumed = entered.assumptions

@@ -4,7 +4,10 @@ import { characteristicWords as words } from '../../strings/parts'
 import { toleranceText } from './tolerance'
 
 type Row = characteristics.Characteristic
-type TickRow = Pick<Row, 'number' | 'name' | 'nominal' | 'lowerLimit' | 'upperLimit' | 'unit' | 'proof' | 'runsOutOn'>
+type TickRow = Pick<
+  Row,
+  'number' | 'name' | 'nominal' | 'lowerLimit' | 'upperLimit' | 'unit' | 'proof' | 'runsOutOn'
+>
 
 const coverageOf: Record<proof.ProofState, CoverageState> = {
   'no-task': 'missing',

@@ -10586,7 +10586,7 @@ function readRule(reader) {
 var import_math_base_special_exp9 = __toESM(require_lib58(), 1);
 var panelCount = 8;
 var perPanel = 2 * nodes.length;
-var spreadSupport = remembered(64, (df, parts = 1) => {
+var spreadSupport = remembered(64, (df, parts) => {
   const { lower, upper } = parts === 1 ? endsOf(df) : spreadSupport(df, 1);
   const panels2 = panelCount * parts;
   const nodes2 = emptyNodes(panels2);
