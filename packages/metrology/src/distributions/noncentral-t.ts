@@ -120,7 +120,7 @@ export function noncentralTQuantile(p: number, df: number, noncentrality: number
 const nearness = (df: number): number => Math.min(0.2, 0.5 / Math.sqrt(df))
 
 /**
- * The quantile to about 1/(5·df) of itself, from taking Z − t·V for normal (Jennett and Welch, Supplement to the Journal
+ * The quantile to 1/(5·df) of itself for chances from a half to 0.9, never too small by more, from taking Z − t·V for normal (Jennett and Welch, Supplement to the Journal
  * of the Royal Statistical Society 6, 1939); null where the approximation has none.
  */
 export function noncentralTQuantileNear(p: number, df: number, noncentrality: number): number | null {
