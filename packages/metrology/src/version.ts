@@ -1,2 +1,2 @@
 /** Version of the computation; part of every frozen evaluation, raised whenever any output could change. */
-export const ENGINE_VERSION = '0.1.0'
+export const ENGINE_VERSION = '0.2.0'

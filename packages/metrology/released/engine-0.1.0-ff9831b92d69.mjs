@@ -1729,7 +1729,7 @@ var require_main30 = __commonJS({
     var TINY = 5551115123125783e-32;
     var TWO53 = 9007199254740992;
     var TWO_THIRDS = 0.6666666666666666;
-    function log1p2(x) {
+    function log1p(x) {
       var hfsq;
       var hu;
       var y;
@@ -1815,7 +1815,7 @@ var require_main30 = __commonJS({
       }
       return k * LN2_HI - (hfsq - (s * (hfsq + R) + (k * LN2_LO + c)) - f);
     }
-    module.exports = log1p2;
+    module.exports = log1p;
   }
 });
 
@@ -1823,8 +1823,8 @@ var require_main30 = __commonJS({
 var require_lib38 = __commonJS({
   "node_modules/@stdlib/math-base-special-log1p/lib/index.js"(exports, module) {
     "use strict";
-    var log1p2 = require_main30();
-    module.exports = log1p2;
+    var log1p = require_main30();
+    module.exports = log1p;
   }
 });
 
@@ -2322,28 +2322,28 @@ var require_main41 = __commonJS({
     var CLEAR_EXP_MASK = 2148532223 >>> 0;
     var FRAC = [0, 0];
     var WORDS = [0, 0];
-    function ldexp(frac, exp10) {
+    function ldexp(frac, exp9) {
       var high;
       var m;
-      if (exp10 === 0 || frac === 0 || // handles +-0
+      if (exp9 === 0 || frac === 0 || // handles +-0
       isnan(frac) || isInfinite(frac)) {
         return frac;
       }
       normalize(frac, FRAC, 1, 0);
       frac = FRAC[0];
-      exp10 += FRAC[1];
-      exp10 += floatExp(frac);
-      if (exp10 < MIN_SUBNORMAL_EXPONENT) {
+      exp9 += FRAC[1];
+      exp9 += floatExp(frac);
+      if (exp9 < MIN_SUBNORMAL_EXPONENT) {
         return copysign(0, frac);
       }
-      if (exp10 > MAX_EXPONENT) {
+      if (exp9 > MAX_EXPONENT) {
         if (frac < 0) {
           return NINF;
         }
         return PINF;
       }
-      if (exp10 <= MAX_SUBNORMAL_EXPONENT) {
-        exp10 += 52;
+      if (exp9 <= MAX_SUBNORMAL_EXPONENT) {
+        exp9 += 52;
         m = TWO52_INV;
       } else {
         m = 1;
@@ -2351,7 +2351,7 @@ var require_main41 = __commonJS({
       toWords.assign(frac, WORDS, 1, 0);
       high = WORDS[0];
       high &= CLEAR_EXP_MASK;
-      high |= exp10 + BIAS << 20;
+      high |= exp9 + BIAS << 20;
       return m * fromWords(high, WORDS[1]);
     }
     module.exports = ldexp;
@@ -2418,7 +2418,7 @@ var require_main42 = __commonJS({
     var UNDERFLOW = -745.1332191019411;
     var NEARZERO = 1 / (1 << 28);
     var NEG_NEARZERO = -NEARZERO;
-    function exp10(x) {
+    function exp9(x) {
       var hi;
       var lo;
       var k;
@@ -2446,7 +2446,7 @@ var require_main42 = __commonJS({
       lo = k * LN2_LO;
       return expmulti(hi, lo, k);
     }
-    module.exports = exp10;
+    module.exports = exp9;
   }
 });
 
@@ -3184,10 +3184,10 @@ var require_main49 = __commonJS({
   "node_modules/@stdlib/math-base-special-beta/lib/main.js"(exports, module) {
     "use strict";
     var isnan = require_lib6();
-    var log1p2 = require_lib38();
+    var log1p = require_lib38();
     var sqrt = require_lib39();
     var abs = require_lib42();
-    var exp10 = require_lib58();
+    var exp9 = require_lib58();
     var pow = require_lib67();
     var E = require_lib68();
     var EPSILON = require_lib69();
@@ -3236,7 +3236,7 @@ var require_main49 = __commonJS({
       res = lanczosSumExpGScaled(a) * (lanczosSumExpGScaled(b) / lanczosSumExpGScaled(c));
       ambh = a - 0.5 - b;
       if (abs(b * ambh) < cgh * 100 && a > 100) {
-        res *= exp10(ambh * log1p2(-b / cgh));
+        res *= exp9(ambh * log1p(-b / cgh));
       } else {
         res *= pow(agh / cgh, ambh);
       }
@@ -4172,7 +4172,7 @@ var require_stirling_approximation = __commonJS({
     "use strict";
     var SQRT_TWO_PI = require_lib87();
     var pow = require_lib67();
-    var exp10 = require_lib58();
+    var exp9 = require_lib58();
     var polyval = require_polyval_s();
     var MAX_STIRLING = 143.01608;
     function gamma2(x) {
@@ -4181,7 +4181,7 @@ var require_stirling_approximation = __commonJS({
       var v;
       w = 1 / x;
       w = 1 + w * polyval(w);
-      y = exp10(x);
+      y = exp9(x);
       if (x > MAX_STIRLING) {
         v = pow(x, 0.5 * x - 0.25);
         y = v * (v / y);
@@ -4627,9 +4627,9 @@ var require_gamma_delta_ratio_lanczos = __commonJS({
     "use strict";
     var lanczosSum = require_lib92();
     var gamma2 = require_lib89();
-    var log1p2 = require_lib38();
+    var log1p = require_lib38();
     var abs = require_lib42();
-    var exp10 = require_lib58();
+    var exp9 = require_lib58();
     var pow = require_lib67();
     var EPSILON = require_lib69();
     var E = require_lib68();
@@ -4652,13 +4652,13 @@ var require_gamma_delta_ratio_lanczos = __commonJS({
       zgh = z + G - 0.5;
       if (z + delta === z) {
         if (abs(delta / zgh) < EPSILON) {
-          result = exp10(-delta);
+          result = exp9(-delta);
         } else {
           result = 1;
         }
       } else {
         if (abs(delta) < 10) {
-          result = exp10((0.5 - z) * log1p2(delta / zgh));
+          result = exp9((0.5 - z) * log1p(delta / zgh));
         } else {
           result = pow(zgh / (zgh + delta), z - 0.5);
         }
@@ -5480,13 +5480,13 @@ var require_tgamma_i_large_x = __commonJS({
 var require_finite_gamma_q = __commonJS({
   "node_modules/@stdlib/math-base-special-gammainc/lib/finite_gamma_q.js"(exports, module) {
     "use strict";
-    var exp10 = require_lib58();
+    var exp9 = require_lib58();
     function finiteGammaQ(a, x) {
       var term;
       var sum;
       var e;
       var n;
-      e = exp10(-x);
+      e = exp9(-x);
       sum = e;
       if (sum !== 0) {
         term = sum;
@@ -5619,7 +5619,7 @@ var require_main71 = __commonJS({
   "node_modules/@stdlib/math-base-special-erfc/lib/main.js"(exports, module) {
     "use strict";
     var isnan = require_lib6();
-    var exp10 = require_lib58();
+    var exp9 = require_lib58();
     var setLowWord = require_lib62();
     var PINF = require_lib31();
     var NINF = require_lib33();
@@ -5707,7 +5707,7 @@ var require_main71 = __commonJS({
           s = SBC + s * polyvalSB(s);
         }
         z = setLowWord(ax, 0);
-        r = exp10(-(z * z) - 0.5625) * exp10((z - ax) * (z + ax) + r / s);
+        r = exp9(-(z * z) - 0.5625) * exp9((z - ax) * (z + ax) + r / s);
         if (sign) {
           return 2 - r / ax;
         }
@@ -5737,7 +5737,7 @@ var require_finite_half_gamma_q = __commonJS({
     "use strict";
     var erfc2 = require_lib104();
     var sqrt = require_lib39();
-    var exp10 = require_lib58();
+    var exp9 = require_lib58();
     var PI = require_lib78();
     function finiteHalfGammaQ(a, x) {
       var half;
@@ -5747,7 +5747,7 @@ var require_finite_half_gamma_q = __commonJS({
       var n;
       e = erfc2(sqrt(x));
       if (e !== 0 && a > 1) {
-        term = exp10(-x) / sqrt(PI * x);
+        term = exp9(-x) / sqrt(PI * x);
         term *= x;
         half = 0.5;
         term /= half;
@@ -5778,7 +5778,7 @@ var require_lib105 = __commonJS({
 var require_full_igamma_prefix = __commonJS({
   "node_modules/@stdlib/math-base-special-gammainc/lib/full_igamma_prefix.js"(exports, module) {
     "use strict";
-    var exp10 = require_lib58();
+    var exp9 = require_lib58();
     var pow = require_lib67();
     var ln9 = require_lib95();
     var MAX_LN = require_lib99();
@@ -5789,19 +5789,19 @@ var require_full_igamma_prefix = __commonJS({
       alz = a * ln9(z);
       if (z >= 1) {
         if (alz < MAX_LN && -z > MIN_LN) {
-          prefix = pow(z, a) * exp10(-z);
+          prefix = pow(z, a) * exp9(-z);
         } else if (a >= 1) {
-          prefix = pow(z / exp10(z / a), a);
+          prefix = pow(z / exp9(z / a), a);
         } else {
-          prefix = exp10(alz - z);
+          prefix = exp9(alz - z);
         }
       } else {
         if (alz > MIN_LN) {
-          prefix = pow(z, a) * exp10(-z);
+          prefix = pow(z, a) * exp9(-z);
         } else if (z / a < MAX_LN) {
-          prefix = pow(z / exp10(z / a), a);
+          prefix = pow(z / exp9(z / a), a);
         } else {
-          prefix = exp10(alz - z);
+          prefix = exp9(alz - z);
         }
       }
       return prefix;
@@ -6116,7 +6116,7 @@ var require_igamma_temme_large = __commonJS({
     var log1pmx2 = require_lib108();
     var erfc2 = require_lib104();
     var sqrt = require_lib39();
-    var exp10 = require_lib58();
+    var exp9 = require_lib58();
     var TWO_PI = require_lib109();
     var polyvalC0 = require_polyval_c0();
     var polyvalC1 = require_polyval_c1();
@@ -6152,7 +6152,7 @@ var require_igamma_temme_large = __commonJS({
       workspace[8] = polyvalC8(z);
       workspace[9] = -5967612901927463e-19;
       result = evalpoly(workspace, 1 / a);
-      result *= exp10(-y) / sqrt(TWO_PI * a);
+      result *= exp9(-y) / sqrt(TWO_PI * a);
       if (x < a) {
         result = -result;
       }
@@ -6261,7 +6261,7 @@ var require_regularised_gamma_prefix = __commonJS({
     var log1pmx2 = require_lib108();
     var sqrt = require_lib39();
     var abs = require_lib42();
-    var exp10 = require_lib58();
+    var exp9 = require_lib58();
     var pow = require_lib67();
     var max = require_lib72();
     var min = require_lib74();
@@ -6283,32 +6283,32 @@ var require_regularised_gamma_prefix = __commonJS({
       d = (z - a - G + 0.5) / agh;
       if (a < 1) {
         if (z <= MIN_LN || a < 1 / FLOAT64_MAX) {
-          return exp10(a * ln9(z) - z - gammaln(a));
+          return exp9(a * ln9(z) - z - gammaln(a));
         }
-        return pow(z, a) * exp10(-z) / gamma2(a);
+        return pow(z, a) * exp9(-z) / gamma2(a);
       }
       if (abs(d * d * a) <= 100 && a > 150) {
         prefix = a * log1pmx2(d) + z * (0.5 - G) / agh;
-        prefix = exp10(prefix);
+        prefix = exp9(prefix);
       } else {
         alz = a * ln9(z / agh);
         amz = a - z;
         if (min(alz, amz) <= MIN_LN || max(alz, amz) >= MAX_LN) {
           amza = amz / a;
           if (min(alz, amz) / 2 > MIN_LN && max(alz, amz) / 2 < MAX_LN) {
-            sq = pow(z / agh, a / 2) * exp10(amz / 2);
+            sq = pow(z / agh, a / 2) * exp9(amz / 2);
             prefix = sq * sq;
           } else if (min(alz, amz) / 4 > MIN_LN && max(alz, amz) / 4 < MAX_LN && z > a) {
-            sq = pow(z / agh, a / 4) * exp10(amz / 4);
+            sq = pow(z / agh, a / 4) * exp9(amz / 4);
             prefix = sq * sq;
             prefix *= prefix;
           } else if (amza > MIN_LN && amza < MAX_LN) {
-            prefix = pow(z * exp10(amza) / agh, a);
+            prefix = pow(z * exp9(amza) / agh, a);
           } else {
-            prefix = exp10(alz + amz);
+            prefix = exp9(alz + amz);
           }
         } else {
-          prefix = pow(z / agh, a) * exp10(amz);
+          prefix = pow(z / agh, a) * exp9(amz);
         }
       }
       prefix *= sqrt(agh / E) / lanczosSumExpGScaled(a);
@@ -6528,7 +6528,7 @@ var require_main77 = __commonJS({
     "use strict";
     var gamma2 = require_lib89();
     var expm1 = require_lib36();
-    var log1p2 = require_lib38();
+    var log1p = require_lib38();
     var isnan = require_lib6();
     var lgammaSmallImp = require_lgamma_small_imp();
     function gamma1pm1(x) {
@@ -6539,7 +6539,7 @@ var require_main77 = __commonJS({
         if (x < -0.5) {
           return gamma2(1 + x) - 1;
         }
-        return expm1(-log1p2(x) + lgammaSmallImp(x + 2, x + 1, x));
+        return expm1(-log1p(x) + lgammaSmallImp(x + 2, x + 1, x));
       }
       if (x < 2) {
         return expm1(lgammaSmallImp(x + 1, x, x - 1));
@@ -7088,7 +7088,7 @@ var require_main78 = __commonJS({
   "node_modules/@stdlib/math-base-special-gammainc/lib/main.js"(exports, module) {
     "use strict";
     var gammaln = require_lib98();
-    var exp10 = require_lib58();
+    var exp9 = require_lib58();
     var ln9 = require_lib95();
     var SQRT_TWO_PI = require_lib87();
     var MAX_LN = require_lib99();
@@ -7134,7 +7134,7 @@ var require_main78 = __commonJS({
         if (result > MAX_LN) {
           return PINF;
         }
-        return exp10(result);
+        return exp9(result);
       }
       return igammaFinal(x, a, normalized, invert);
     }
@@ -7155,7 +7155,7 @@ var require_lib115 = __commonJS({
 var require_full_igamma_prefix2 = __commonJS({
   "node_modules/@stdlib/math-base-special-kernel-betainc/lib/full_igamma_prefix.js"(exports, module) {
     "use strict";
-    var exp10 = require_lib58();
+    var exp9 = require_lib58();
     var pow = require_lib67();
     var ln9 = require_lib95();
     var MAX_LN = require_lib99();
@@ -7166,18 +7166,18 @@ var require_full_igamma_prefix2 = __commonJS({
       alz = a * ln9(z);
       if (z >= 1) {
         if (alz < MAX_LN && -z > MIN_LN) {
-          prefix = pow(z, a) * exp10(-z);
+          prefix = pow(z, a) * exp9(-z);
         } else if (a >= 1) {
-          prefix = pow(z / exp10(z / a), a);
+          prefix = pow(z / exp9(z / a), a);
         } else {
-          prefix = exp10(alz - z);
+          prefix = exp9(alz - z);
         }
       } else if (alz > MIN_LN) {
-        prefix = pow(z, a) * exp10(-z);
+        prefix = pow(z, a) * exp9(-z);
       } else if (z / a < MAX_LN) {
-        prefix = pow(z / exp10(z / a), a);
+        prefix = pow(z / exp9(z / a), a);
       } else {
-        prefix = exp10(alz - z);
+        prefix = exp9(alz - z);
       }
       return prefix;
     }
@@ -7192,10 +7192,10 @@ var require_regularized_gamma_prefix = __commonJS({
     var lanczosSumExpGScaled = require_lib110();
     var gammaln = require_lib98();
     var gamma2 = require_lib89();
-    var log1p2 = require_lib38();
+    var log1p = require_lib38();
     var sqrt = require_lib39();
     var abs = require_lib42();
-    var exp10 = require_lib58();
+    var exp9 = require_lib58();
     var pow = require_lib67();
     var max = require_lib72();
     var min = require_lib74();
@@ -7216,32 +7216,32 @@ var require_regularized_gamma_prefix = __commonJS({
       d = (z - a - G + 0.5) / agh;
       if (a < 1) {
         if (z <= MIN_LN) {
-          return exp10(a * ln9(z) - z - gammaln(a));
+          return exp9(a * ln9(z) - z - gammaln(a));
         }
-        return pow(z, a) * exp10(-z) / gamma2(a);
+        return pow(z, a) * exp9(-z) / gamma2(a);
       }
       if (abs(d * d * a) <= 100 && a > 150) {
-        prefix = a * (log1p2(d) - d) + z * (0.5 - G) / agh;
-        prefix = exp10(prefix);
+        prefix = a * (log1p(d) - d) + z * (0.5 - G) / agh;
+        prefix = exp9(prefix);
       } else {
         alz = a * ln9(z / agh);
         amz = a - z;
         if (min(alz, amz) <= MIN_LN || max(alz, amz) >= MAX_LN) {
           amza = amz / a;
           if (min(alz, amz) / 2 > MIN_LN && max(alz, amz) / 2 < MAX_LN) {
-            sq = pow(z / agh, a / 2) * exp10(amz / 2);
+            sq = pow(z / agh, a / 2) * exp9(amz / 2);
             prefix = sq * sq;
           } else if (min(alz, amz) / 4 > MIN_LN && max(alz, amz) / 4 < MAX_LN && z > a) {
-            sq = pow(z / agh, a / 4) * exp10(amz / 4);
+            sq = pow(z / agh, a / 4) * exp9(amz / 4);
             prefix = sq * sq;
             prefix *= prefix;
           } else if (amza > MIN_LN && amza < MAX_LN) {
-            prefix = pow(z * exp10(amza) / agh, a);
+            prefix = pow(z * exp9(amza) / agh, a);
           } else {
-            prefix = exp10(alz + amz);
+            prefix = exp9(alz + amz);
           }
         } else {
-          prefix = pow(z / agh, a) * exp10(amz);
+          prefix = pow(z / agh, a) * exp9(amz);
         }
       }
       prefix *= sqrt(agh / E) / lanczosSumExpGScaled(a);
@@ -7258,7 +7258,7 @@ var require_beta_small_b_large_a_series = __commonJS({
     var gammaDeltaRatio = require_lib94();
     var factorial = require_lib91();
     var gammainc2 = require_lib115();
-    var log1p2 = require_lib38();
+    var log1p = require_lib38();
     var abs = require_lib42();
     var pow = require_lib67();
     var ln9 = require_lib95();
@@ -7289,7 +7289,7 @@ var require_beta_small_b_large_a_series = __commonJS({
       bm1 = b - 1;
       t = a + bm1 / 2;
       if (y < 0.35) {
-        lx = log1p2(-y);
+        lx = log1p(-y);
       } else {
         lx = ln9(x);
       }
@@ -7418,10 +7418,10 @@ var require_ibeta_power_terms = __commonJS({
     var maxabs = require_lib116();
     var minabs = require_lib117();
     var expm1 = require_lib36();
-    var log1p2 = require_lib38();
+    var log1p = require_lib38();
     var sqrt = require_lib39();
     var abs = require_lib42();
-    var exp10 = require_lib58();
+    var exp9 = require_lib58();
     var pow = require_lib67();
     var min = require_lib74();
     var ln9 = require_lib95();
@@ -7460,12 +7460,12 @@ var require_ibeta_power_terms = __commonJS({
       if (minabs(l1, l2) < 0.2) {
         if (l1 * l2 > 0 || min(a, b) < 1) {
           if (abs(l1) < 0.1) {
-            result *= exp10(a * log1p2(l1));
+            result *= exp9(a * log1p(l1));
           } else {
             result *= pow(x * cgh / agh, a);
           }
           if (abs(l2) < 0.1) {
-            result *= exp10(b * log1p2(l2));
+            result *= exp9(b * log1p(l2));
           } else {
             result *= pow(y * cgh / bgh, b);
           }
@@ -7473,37 +7473,37 @@ var require_ibeta_power_terms = __commonJS({
           smallA = a < b;
           ratio = b / a;
           if (smallA && ratio * l2 < 0.1 || !smallA && l1 / ratio > 0.1) {
-            l3 = expm1(ratio * log1p2(l2));
+            l3 = expm1(ratio * log1p(l2));
             l3 = l1 + l3 + l3 * l1;
-            l3 = a * log1p2(l3);
-            result *= exp10(l3);
+            l3 = a * log1p(l3);
+            result *= exp9(l3);
           } else {
-            l3 = expm1(log1p2(l1) / ratio);
+            l3 = expm1(log1p(l1) / ratio);
             l3 = l2 + l3 + l3 * l2;
-            l3 = b * log1p2(l3);
-            result *= exp10(l3);
+            l3 = b * log1p(l3);
+            result *= exp9(l3);
           }
         } else if (abs(l1) < abs(l2)) {
-          l = a * log1p2(l1) + b * ln9(y * cgh / bgh);
+          l = a * log1p(l1) + b * ln9(y * cgh / bgh);
           if (l <= MIN_LN || l >= MAX_LN) {
             l += ln9(result);
             if (l >= MAX_LN) {
               return NaN;
             }
-            result = exp10(l);
+            result = exp9(l);
           } else {
-            result *= exp10(l);
+            result *= exp9(l);
           }
         } else {
-          l = b * log1p2(l2) + a * ln9(x * cgh / agh);
+          l = b * log1p(l2) + a * ln9(x * cgh / agh);
           if (l <= MIN_LN || l >= MAX_LN) {
             l += ln9(result);
             if (l >= MAX_LN) {
               return NaN;
             }
-            result = exp10(l);
+            result = exp9(l);
           } else {
-            result *= exp10(l);
+            result *= exp9(l);
           }
         }
       } else {
@@ -7522,7 +7522,7 @@ var require_ibeta_power_terms = __commonJS({
               if (l2 >= MAX_LN) {
                 return NaN;
               }
-              result = exp10(l2);
+              result = exp9(l2);
             }
           } else {
             p1 = pow(b1, a / b);
@@ -7534,7 +7534,7 @@ var require_ibeta_power_terms = __commonJS({
               if (l2 >= MAX_LN) {
                 return NaN;
               }
-              result = exp10(l2);
+              result = exp9(l2);
             }
           }
         } else {
@@ -7897,9 +7897,9 @@ var require_ibeta_series = __commonJS({
     "use strict";
     var lanczosSumExpGScaled = require_lib110();
     var sumSeries = require_lib103();
-    var log1p2 = require_lib38();
+    var log1p = require_lib38();
     var sqrt = require_lib39();
-    var exp10 = require_lib58();
+    var exp9 = require_lib58();
     var pow = require_lib67();
     var ln9 = require_lib95();
     var MIN_VALUE = require_lib53();
@@ -7942,7 +7942,7 @@ var require_ibeta_series = __commonJS({
         l2 = ln9(x * cgh / agh) * a;
         if (l1 > MIN_LN && l1 < MAX_LN && l2 > MIN_LN && l2 < MAX_LN) {
           if (a * b < bgh * 10) {
-            result *= exp10((b - 0.5) * log1p2(a / bgh));
+            result *= exp9((b - 0.5) * log1p(a / bgh));
           } else {
             result *= pow(cgh / bgh, b - 0.5);
           }
@@ -7954,9 +7954,9 @@ var require_ibeta_series = __commonJS({
         } else {
           result = ln9(result) + l1 + l2 + (ln9(agh) - 1) / 2;
           if (out) {
-            out[1] = exp10(result + b * ln9(y));
+            out[1] = exp9(result + b * ln9(y));
           }
-          result = exp10(result);
+          result = exp9(result);
         }
       } else {
         result = pow(x, a);
@@ -7979,11 +7979,11 @@ var require_assign3 = __commonJS({
     var isnan = require_lib6();
     var expm1 = require_lib36();
     var floor = require_lib37();
-    var log1p2 = require_lib38();
+    var log1p = require_lib38();
     var asin = require_lib41();
     var beta = require_lib70();
     var sqrt = require_lib39();
-    var exp10 = require_lib58();
+    var exp9 = require_lib58();
     var pow = require_lib67();
     var max = require_lib72();
     var min = require_lib74();
@@ -8102,7 +8102,7 @@ var require_assign3 = __commonJS({
         }
         out[i1] = a * pow(x, a - 1);
         if (y < 0.5) {
-          p = upper ? -expm1(a * log1p2(-y)) : exp10(a * log1p2(-y));
+          p = upper ? -expm1(a * log1p(-y)) : exp9(a * log1p(-y));
         } else {
           p = upper ? -(pow(x, a) - 1) : pow(x, a);
         }
@@ -8906,7 +8906,7 @@ var require_erfcx_y100 = __commonJS({
 var require_main86 = __commonJS({
   "node_modules/@stdlib/math-base-special-erfcx/lib/main.js"(exports, module) {
     "use strict";
-    var exp10 = require_lib58();
+    var exp9 = require_lib58();
     var PINF = require_lib31();
     var isnan = require_lib6();
     var erfcxY100 = require_erfcx_y100();
@@ -8931,9 +8931,9 @@ var require_main86 = __commonJS({
       }
       x2 = x * x;
       if (x < -6.1) {
-        return 2 * exp10(x2);
+        return 2 * exp9(x2);
       }
-      return 2 * exp10(x2) - erfcxY100(400 / (4 - x));
+      return 2 * exp9(x2) - erfcxY100(400 / (4 - x));
     }
     module.exports = erfcx2;
   }
@@ -9323,9 +9323,9 @@ var import_math_base_special_exp = __toESM(require_lib58(), 1);
 var import_math_base_special_ln2 = __toESM(require_lib95(), 1);
 
 // packages/metrology/src/distributions/find-root.ts
-function rootBetween(f, low, high, relative = 23e-17) {
-  let [a, b] = [low.x, high.x];
-  let [fa, fb] = [low.y, high.y];
+function findRoot(f, low, high, relative = 23e-17) {
+  let [a, b] = [low, high];
+  let [fa, fb] = [f(a), f(b)];
   let [c, fc] = [a, fa];
   let step = b - a;
   let previous = step;
@@ -9372,21 +9372,18 @@ function interpolated(a, b, c, fa, fb, fc, middle, previous, tolerance) {
   return fits ? p / q : null;
 }
 function findRisingRoot(f, guess, width, relative) {
-  const at = (x) => ({ x, y: f(x) });
-  let low = at(guess - width);
-  let high = null;
-  let reach = width;
-  for (let i = 0; i < 1100 && !(low.y <= 0); i++) {
+  let [low, high] = [guess - width, guess + width];
+  let reach2 = width;
+  for (let i = 0; i < 1100 && !(f(low) <= 0); i++) {
     high = low;
-    low = at(low.x - (reach *= 2));
+    low -= reach2 *= 2;
   }
-  high ??= at(guess + width);
-  reach = width;
-  for (let i = 0; i < 1100 && !(high.y >= 0); i++) {
+  reach2 = width;
+  for (let i = 0; i < 1100 && !(f(high) >= 0); i++) {
     low = high;
-    high = at(high.x + (reach *= 2));
+    high += reach2 *= 2;
   }
-  return rootBetween(f, low, high, relative);
+  return findRoot(f, low, high, relative);
 }
 
 // packages/metrology/src/distributions/normal.ts
@@ -9453,7 +9450,6 @@ function betaQuantile(p, a, b) {
 // packages/metrology/src/distributions/chi-density.ts
 var import_math_base_special_exp3 = __toESM(require_lib58(), 1);
 var import_math_base_special_ln4 = __toESM(require_lib95(), 1);
-var import_math_base_special_log1p = __toESM(require_lib38(), 1);
 
 // packages/metrology/src/distributions/scaled-gamma.ts
 var import_math_base_special_exp2 = __toESM(require_lib58(), 1);
@@ -9475,10 +9471,6 @@ function logChiShape(v, df) {
 }
 function chiConstant(df) {
   return Math.sqrt(df / pi) / scaledGamma(df / 2);
-}
-function chiMean(df) {
-  const exponent = 0.5 * (df * (0, import_math_base_special_log1p.default)(1 / df) - 1);
-  return scaledGamma((df + 1) / 2) / scaledGamma(df / 2) * (0, import_math_base_special_exp3.default)(exponent);
 }
 var pi = 3.141592653589793;
 
@@ -9676,7 +9668,6 @@ function smallTail(p) {
   }
   return useLower ? below : (t, df, noncentrality) => below(-t, df, -noncentrality);
 }
-var rootTolerance = 1e-14;
 function noncentralTQuantile(p, df, noncentrality) {
   if (noncentrality === 0) return tQuantile(p, df);
   const useLower = p <= 0.5;
@@ -9684,17 +9675,7 @@ function noncentralTQuantile(p, df, noncentrality) {
   const tail = smallTail(p);
   const gap = (t) => useLower ? (0, import_math_base_special_ln7.default)(tail(t, df, noncentrality)) - target : target - (0, import_math_base_special_ln7.default)(tail(t, df, noncentrality));
   const width = Math.sqrt(1 + 0.5 * noncentrality * noncentrality / df);
-  const near = noncentralTQuantileNear(p, df, noncentrality);
-  return near === null ? findRisingRoot(gap, noncentrality + normalQuantile(p) * width, 0.2 * width, rootTolerance) : findRisingRoot(gap, near, nearness(df) * width, rootTolerance);
-}
-var nearness = (df) => Math.min(0.2, 0.5 / Math.sqrt(df));
-function noncentralTQuantileNear(p, df, noncentrality) {
-  const z = normalQuantile(p);
-  const mean = chiMean(df);
-  const variance = (1 - mean) * (1 + mean);
-  const divisor = mean * mean - z * z * variance;
-  const inRoot = mean * mean + variance * (noncentrality * noncentrality - z * z);
-  return divisor > 0 && inRoot >= 0 ? (noncentrality * mean + z * Math.sqrt(inRoot)) / divisor : null;
+  return findRisingRoot(gap, noncentrality + normalQuantile(p) * width, 0.2 * width);
 }
 function noncentralityAt(t, df, p) {
   if (Math.abs(t) > 1e7) return t * Math.sqrt(chiSquareQuantile(t > 0 ? 1 - p : p, df) / df);
@@ -9703,59 +9684,11 @@ function noncentralityAt(t, df, p) {
   const tail = smallTail(p);
   const gap = (noncentrality) => useLower ? target - (0, import_math_base_special_ln7.default)(tail(t, df, noncentrality)) : (0, import_math_base_special_ln7.default)(tail(t, df, noncentrality)) - target;
   const width = Math.sqrt(1 + 0.5 * t * t / df);
-  const mean = chiMean(df);
-  const near = t * mean - normalQuantile(p) * Math.sqrt(1 + t * t * (1 - mean) * (1 + mean));
-  return findRisingRoot(gap, near, nearness(df) * width, 1e-13);
-}
-
-// packages/metrology/src/distributions/normal-table.ts
-var import_math_base_special_exp7 = __toESM(require_lib58(), 1);
-var perUnit = 8;
-var normalReach = 9;
-var terms = 9;
-var cells = 2 * normalReach * perUnit + 1;
-var coefficients = (() => {
-  const table = new Float64Array(cells * terms);
-  for (let cell = 0; cell < cells; cell++) {
-    const z = cell / perUnit - normalReach;
-    const density2 = (0, import_math_base_special_exp7.default)(-0.5 * z * z) / 2.5066282746310002;
-    table[cell * terms] = normalCdf(z);
-    let [before, hermite, factorial] = [0, 1, 1];
-    for (let k = 0; k + 1 < terms; k++) {
-      factorial *= k + 1;
-      table[cell * terms + k + 1] = (k % 2 === 0 ? density2 : -density2) * hermite / factorial;
-      [before, hermite] = [hermite, z * hermite - k * before];
-    }
-  }
-  return table;
-})();
-function normalCdfWithin(z) {
-  if (z <= -normalReach) return 0;
-  if (z >= normalReach) return 1;
-  const cell = Math.round((z + normalReach) * perUnit);
-  const d = z - (cell / perUnit - normalReach);
-  const from = cell * terms;
-  let sum = 0;
-  for (let at = from + terms - 1; at >= from; at--) sum = sum * d + coefficients[at];
-  return sum;
-}
-
-// packages/metrology/src/distributions/remembered.ts
-function remembered(most, answer) {
-  const known = /* @__PURE__ */ new Map();
-  return (...of) => {
-    const key = of.join("/");
-    const found = known.get(key);
-    if (found !== void 0) return found;
-    const made = answer(...of);
-    if (known.size >= most) known.delete(known.keys().next().value);
-    known.set(key, made);
-    return made;
-  };
+  return findRisingRoot(gap, t - normalQuantile(p) * width, 0.2 * width, 1e-13);
 }
 
 // packages/metrology/src/distributions/studentized-range.ts
-var import_math_base_special_exp8 = __toESM(require_lib58(), 1);
+var import_math_base_special_exp7 = __toESM(require_lib58(), 1);
 var import_math_base_special_ln8 = __toESM(require_lib95(), 1);
 function studentizedRangeTails(q, groups, df) {
   if (!(q > 0)) return { lower: 0, upper: 1 };
@@ -9768,14 +9701,14 @@ function studentizedRangeQuantile(p, groups, df) {
   const useLower = p <= 0.5;
   const target = (0, import_math_base_special_ln8.default)(useLower ? p : 1 - p);
   const gap = (logQ) => {
-    const tails = studentizedRangeTails((0, import_math_base_special_exp8.default)(logQ), groups, df);
+    const tails = studentizedRangeTails((0, import_math_base_special_exp7.default)(logQ), groups, df);
     return useLower ? (0, import_math_base_special_ln8.default)(tails.lower) - target : target - (0, import_math_base_special_ln8.default)(tails.upper);
   };
-  return (0, import_math_base_special_exp8.default)(findRisingRoot(gap, 1, 0.5, 1e-11));
+  return (0, import_math_base_special_exp7.default)(findRisingRoot(gap, 1, 0.5, 1e-11));
 }
 function overSpread(tail, q, df) {
   const height = (u) => {
-    const v = (0, import_math_base_special_exp8.default)(u);
+    const v = (0, import_math_base_special_exp7.default)(u);
     const chance = tail(q * v);
     return chance > 0 ? logChiShape(v, df) + u + (0, import_math_base_special_ln8.default)(chance) : -Infinity;
   };
@@ -9786,7 +9719,7 @@ function overSpread(tail, q, df) {
   const right = fall(height, peak, top, step);
   const towards = (end, count) => Array.from({ length: count }, (_, i) => peak + (end - peak) * squared((i + 1) / count));
   const points = [...towards(left, 8).reverse(), peak, ...towards(right, 6)];
-  return chiConstant(df) * (0, import_math_base_special_exp8.default)(top) * integrate((u) => (0, import_math_base_special_exp8.default)(height(u) - top), points);
+  return chiConstant(df) * (0, import_math_base_special_exp7.default)(top) * integrate((u) => (0, import_math_base_special_exp7.default)(height(u) - top), points);
 }
 function climb(height, from, width) {
   let peak = from;
@@ -9858,7 +9791,7 @@ function wholePower(base, power) {
   }
   return result;
 }
-var density = (z) => 0.3989422804014327 * (0, import_math_base_special_exp8.default)(-0.5 * z * z);
+var density = (z) => 0.3989422804014327 * (0, import_math_base_special_exp7.default)(-0.5 * z * z);
 var squared = (value) => value * value;
 
 // packages/metrology/src/statistics/data-checks.ts
@@ -10447,17 +10380,9 @@ var spreadAtLeast = (rule, bias2) => Math.min(
   rule.leastCg === void 0 ? Infinity : 2 * allowance(rule) / (rule.leastCg * rule.sigmas)
 );
 var marginOfSafety = 0.9;
-var toleranceFactor = remembered(
-  512,
-  (p, n, half) => noncentralTQuantile(p, n - 1, Math.sqrt(n) * half) / Math.sqrt(n)
-);
-function largerFactor(p, n, half) {
-  const near = noncentralTQuantileNear(p, n - 1, Math.sqrt(n) * half);
-  return near === null ? Infinity : near / Math.sqrt(n) * (1 + 0.2 / (n - 1));
-}
-function band(rule, n, p, factorOf = toleranceFactor) {
+function band(rule, n, p) {
   const half = halfSpread(rule);
-  const factor = p === null ? half : factorOf(p, n, half);
+  const factor = p === null ? half : noncentralTQuantile(p, n - 1, Math.sqrt(n) * half) / Math.sqrt(n);
   const ofCg = rule.leastCg === void 0 ? null : 2 * allowance(rule) / (rule.leastCg * rule.sigmas);
   const shrunk = p === null ? 1 : Math.sqrt(chiSquareQuantile(complement(p), n - 1) / (n - 1));
   return {
@@ -10477,7 +10402,6 @@ var index = {
     ...given("alpha", reader.optionalNumber("alpha", { above: 0, most: 0.5 }))
   }),
   accepts: (rule, n) => band(rule, n, rule.alpha === void 0 ? null : complement(rule.alpha)),
-  acceptsAtLeast: (rule, n) => rule.alpha === void 0 ? null : band(rule, n, complement(rule.alpha), largerFactor),
   refusesOutside: (rule, n) => rule.alpha === void 0 ? null : band(rule, n, rule.alpha),
   referenceUncertainty: () => 0,
   margin: allowance,
@@ -10583,25 +10507,16 @@ function readRule(reader) {
 }
 
 // packages/metrology/src/rules/spread-nodes.ts
-var import_math_base_special_exp9 = __toESM(require_lib58(), 1);
+var import_math_base_special_exp8 = __toESM(require_lib58(), 1);
 var panelCount = 8;
-var perPanel = 2 * nodes.length;
-var spreadSupport = remembered(64, (df, parts) => {
-  const { lower, upper } = parts === 1 ? endsOf(df) : spreadSupport(df, 1);
-  const panels2 = panelCount * parts;
-  const nodes2 = emptyNodes(panels2);
-  const constant = chiConstant(df);
-  const at = (i) => edge(lower, upper, panels2, i);
-  for (let i = 0; i < panels2; i++) fillPanel(nodes2, i * perPanel, at(i), at(i + 1), df, constant);
-  return { df, lower, upper, panels: panels2, nodes: nodes2 };
-});
-function endsOf(df) {
+function spreadSupport(df) {
   const peak = Math.sqrt((df - 1) / df);
   const floor = (peak > 0 ? logChiShape(peak, df) : 0) - 34;
   const outside3 = (v) => v <= 0 || logChiShape(v, df) < floor;
-  return { lower: bisect(peak, 0, outside3), upper: bisect(peak, peak + 12 / Math.sqrt(df), outside3) };
+  const lower = bisect(peak, 0, outside3);
+  const upper = bisect(peak, peak + 12 / Math.sqrt(df), outside3);
+  return { lower, upper, panel: (upper - lower) / panelCount };
 }
-var edge = (lower, upper, panels2, at) => at === panels2 ? upper : lower + at * (upper - lower) / panels2;
 function bisect(inner, outer, outside3) {
   let [near, far] = [inner, outer];
   for (let i = 0; i < 10; i++) {
@@ -10611,51 +10526,27 @@ function bisect(inner, outer, outside3) {
   }
   return far;
 }
-function spreadNodes(support, breakPoints) {
-  const { df, lower, upper, panels: panels2 } = support;
-  const inside2 = breakPoints.filter((point2) => point2 > lower && point2 < upper).sort((a, b) => a - b);
-  if (inside2.length === 0) return support.nodes;
+function spreadNodes(df, support, breakPoints) {
+  const { lower, upper, panel } = support;
+  const points = [lower, upper];
+  for (let i = 1; i < panelCount; i++) points.push(lower + i * panel);
+  for (const point2 of breakPoints) if (point2 > lower && point2 < upper) points.push(point2);
+  points.sort((a, b) => a - b);
   const constant = chiConstant(df);
-  const nodes2 = emptyNodes(panels2 + inside2.length);
-  let filled = 0;
-  let next = 0;
-  for (let i = 0; i < panels2; i++) {
-    const end = edge(lower, upper, panels2, i + 1);
-    let from = edge(lower, upper, panels2, i);
-    if (!((inside2[next] ?? Infinity) < end)) {
-      const part = [i * perPanel, (i + 1) * perPanel];
-      nodes2.v.set(support.nodes.v.subarray(...part), filled);
-      nodes2.weight.set(support.nodes.weight.subarray(...part), filled);
-      filled += perPanel;
-      continue;
-    }
-    for (; (inside2[next] ?? Infinity) < end; next++) {
-      const point2 = inside2[next];
-      filled = fillPanel(nodes2, filled, from, point2, df, constant);
-      from = point2;
-    }
-    filled = fillPanel(nodes2, filled, from, end, df, constant);
-  }
-  return { v: nodes2.v.subarray(0, filled), weight: nodes2.weight.subarray(0, filled) };
-}
-var emptyNodes = (panels2) => ({
-  v: new Float64Array(panels2 * perPanel),
-  weight: new Float64Array(panels2 * perPanel)
-});
-function fillPanel({ v, weight }, at, from, to, df, constant) {
-  const center = 0.5 * (from + to);
-  const half = 0.5 * (to - from);
-  if (half <= 0) return at;
-  let place2 = at;
-  for (const [node, share] of nodes) {
-    for (const sign of [-1, 1]) {
-      const point2 = center + sign * half * node;
-      v[place2] = point2;
-      weight[place2] = half * share * constant * (0, import_math_base_special_exp9.default)(logChiShape(point2, df));
-      place2++;
+  const result = [];
+  for (let i = 1; i < points.length; i++) {
+    const from = points[i - 1];
+    const to = points[i];
+    const center = 0.5 * (from + to);
+    const half = 0.5 * (to - from);
+    if (half <= 0) continue;
+    for (const [node, weight] of nodes) {
+      for (const v of [center - half * node, center + half * node]) {
+        result.push({ v, weight: half * weight * constant * (0, import_math_base_special_exp8.default)(logChiShape(v, df)) });
+      }
     }
   }
-  return place2;
+  return result;
 }
 
 // packages/metrology/src/rules/chances.ts
@@ -10672,82 +10563,59 @@ function chancesOf(rule, n) {
     return { meets, fallsShort, notShown: notRefused ? Math.max(0, 1 - meets - fallsShort) : 0 };
   };
 }
-var chanceToMeet = (rule, n) => chanceWithin(rule, n, ruleDescriptor(rule).accepts(rule, n));
-function leastChanceToMeet(rule, n) {
-  const band2 = ruleDescriptor(rule).acceptsAtLeast?.(rule, n);
-  return band2 ? chanceWithin(rule, n, band2) : null;
-}
-function chanceWithin(rule, n, band2) {
-  const inside2 = chanceInside(band2, n);
-  const reference = ruleDescriptor(rule).referenceUncertainty(rule);
-  return (truth) => inside2(located(truth, n, reference));
+function chanceToMeet(rule, n) {
+  const descriptor = ruleDescriptor(rule);
+  const accepted = chanceInside(descriptor.accepts(rule, n), n);
+  const reference = descriptor.referenceUncertainty(rule);
+  return (truth) => accepted(located(truth, n, reference));
 }
 var located = ({ bias: bias2, standardDeviation }, n, reference) => ({
   bias: Math.abs(bias2),
   standardDeviation,
   spreadOfMean: rootSumOfSquares(standardDeviation / Math.sqrt(n), reference)
 });
-var noPlace = () => ({ count: 0, halfWidth: new Float64Array(0), weight: new Float64Array(0) });
-function place(of, band2, standardDeviation, { v, weight }) {
-  if (of.halfWidth.length < v.length) {
-    of.halfWidth = new Float64Array(2 * v.length);
-    of.weight = new Float64Array(2 * v.length);
-  }
-  of.count = 0;
-  for (let at = 0; at < v.length; at++) {
-    const h = acceptedHalfWidth(band2, standardDeviation * v[at]);
-    if (h < 0) continue;
-    of.halfWidth[of.count] = h;
-    of.weight[of.count] = weight[at];
-    of.count++;
-  }
-}
+var reach = 9;
 function chanceInside(band2, n) {
-  const whole = spreadSupport(n - 1, 1);
-  const here = noPlace();
-  let placedAt = null;
+  const df = n - 1;
+  const support = spreadSupport(df);
+  let plain = null;
   return (at) => {
-    const { standardDeviation } = at;
-    const parts = partsOfPanels(band2, at, whole);
-    if (parts > mostParts) {
-      const points = [...edges(band2, standardDeviation), ...sharpPoints(band2, at, whole)];
-      place(here, band2, standardDeviation, spreadNodes(whole, points));
-      placedAt = null;
-    } else if (placedAt !== standardDeviation) {
-      const support = spreadSupport(n - 1, parts);
-      place(here, band2, standardDeviation, spreadNodes(support, edges(band2, standardDeviation)));
-      placedAt = standardDeviation;
+    const { bias: bias2, standardDeviation, spreadOfMean } = at;
+    const sharp = sharpPoints(band2, at, support);
+    let nodes2;
+    if (sharp.length > 0) {
+      nodes2 = spreadNodes(df, support, [...edges(band2, standardDeviation), ...sharp]);
+    } else {
+      if (plain?.standardDeviation !== standardDeviation) {
+        plain = { standardDeviation, nodes: spreadNodes(df, support, edges(band2, standardDeviation)) };
+      }
+      nodes2 = plain.nodes;
     }
-    return sumOver(here, at);
+    let sum = 0;
+    for (const { v, weight } of nodes2) {
+      const h = acceptedHalfWidth(band2, standardDeviation * v);
+      if (h < 0) continue;
+      const above = (h - bias2) / spreadOfMean;
+      const below2 = (h + bias2) / spreadOfMean;
+      if (above < -reach) continue;
+      sum += weight * ((above > reach ? 1 : normalCdf(above)) - (below2 > reach ? 0 : normalCdf(-below2)));
+    }
+    return Math.min(1, Math.max(0, sum));
   };
-}
-function sumOver({ count, halfWidth, weight }, { bias: bias2, spreadOfMean }) {
-  const inSpreads = 1 / spreadOfMean;
-  let sum = 0;
-  for (let at = 0; at < count; at++) {
-    const h = halfWidth[at];
-    const above = (h - bias2) * inSpreads;
-    if (above < -normalReach) continue;
-    sum += weight[at] * (normalCdfWithin(above) - normalCdfWithin((-h - bias2) * inSpreads));
-  }
-  return Math.min(1, Math.max(0, sum));
 }
 function edges(band2, standardDeviation) {
   const closed = [band2.spreadAt(0), band2.largestSpread].filter((s) => s !== null && s !== void 0);
   return [...closed, ...band2.bends].map((s) => s / standardDeviation);
 }
-var mostInPanel = 6;
-var mostParts = 6;
-function partsOfPanels(band2, { standardDeviation, spreadOfMean }, support) {
-  const { lower, upper, panels: panels2 } = support;
-  const rise = Math.abs(band2.halfWidth(standardDeviation * upper) - band2.halfWidth(standardDeviation * lower));
-  return Math.max(1, Math.ceil(rise / (panels2 * spreadOfMean * mostInPanel)));
-}
 function sharpPoints(band2, at, support) {
   const { bias: bias2, standardDeviation, spreadOfMean } = at;
+  const slope = Math.abs(
+    band2.halfWidth(standardDeviation * support.upper) - band2.halfWidth(standardDeviation * support.lower)
+  ) / ((support.upper - support.lower) * spreadOfMean);
+  if (!(slope * support.panel > 6)) return [];
   const points = [];
   for (const side of [bias2, -bias2]) {
-    for (let z = -normalReach; z <= normalReach; z += 4.5) {
+    for (let z = -reach; z <= reach; z += 4.5) {
       const s = band2.spreadAt(side + z * spreadOfMean);
       if (s !== null) points.push(s / standardDeviation);
     }
@@ -10786,27 +10654,24 @@ var mostReadings = 1e5;
 function sampleSize(rule, truth, power) {
   const { powerOf } = ruleDescriptor(rule);
   const chance = (n) => powerOf === "meets" ? chanceToMeet(rule, n)(truth) : chancesOf(rule, n)(truth)[powerOf];
-  const surely = (n) => powerOf === "meets" && (leastChanceToMeet(rule, n)?.(truth) ?? 0) >= power + 1e-9;
-  const reaches = (n) => surely(n) || chance(n) >= power;
   let held = null;
   for (const n of searchedDownwards()) {
-    if (reaches(n)) {
-      held = n;
-      continue;
-    }
-    if (held !== null) held = leastBetween(reaches, n, held);
-    break;
+    const here = chance(n);
+    if (here >= power) held = { n, power: here };
+    else return held && refine(chance, power, n, held);
   }
-  return held === null ? null : { n: held, power: chance(held) };
+  return held;
 }
-function leastBetween(reaches, tooFew, enough) {
-  let [low, high] = [tooFew, enough];
-  while (high - low > 1) {
-    const middle = Math.floor((low + high) / 2);
-    if (reaches(middle)) high = middle;
+function refine(chance, power, tooFew, enough) {
+  let low = tooFew;
+  let held = enough;
+  while (held.n - low > 1) {
+    const middle = Math.floor((low + held.n) / 2);
+    const here = chance(middle);
+    if (here >= power) held = { n: middle, power: here };
     else low = middle;
   }
-  return high;
+  return held;
 }
 function* searchedDownwards() {
   let n = mostReadings;
