@@ -30,9 +30,6 @@ export const equipmentEventWords: Record<GaugeEventKind, string> = {
   changed: 'was changed in software or fixture',
 }
 
-/** What somebody wrote, as the end of a sentence. */
-const quoted = (words: string): string => (/[.!?…]$/.test(words) ? `“${words}”` : `“${words}”.`)
-
 const sinceWords: Record<Exclude<StandingState, 'stands'>, string> = {
   'on-hold': 'On hold',
   suspended: 'Suspended',

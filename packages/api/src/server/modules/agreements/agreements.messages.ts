@@ -1,4 +1,3 @@
-import { dayInWords } from '../../calendar'
 import { otherSide, type Role, type Side } from '../../../contract/access'
 import { dayInWords } from '../../calendar'
 import type { Tenant } from '../../db/tenant'
