@@ -140,10 +140,11 @@ describe('a question that is carried over a fresh sign-in', () => {
     { kind: 'act', act: 'accept-with-conditions' },
     { kind: 'reinstate' },
     { kind: 'say', challengeId: id, saying: 'correct' },
+    { kind: 'say', challengeId: id, saying: 'answer' },
   ])('%j comes back', (asked) => expect(readAsked(writeAsked(asked) ?? '')).toEqual(asked))
-  it('is only one that ends in a signature', () => {
+  it('is only one that ends in a signature, or comes with a proposal to answer by', () => {
     expect(writeAsked({ kind: 'challenge', preset: {} })).toBeUndefined()
-    expect(writeAsked({ kind: 'say', challengeId: id, saying: 'answer' })).toBeUndefined()
+    expect(writeAsked({ kind: 'say', challengeId: id, saying: 'withdraw' })).toBeUndefined()
     expect(readAsked('correct.nothing')).toBeUndefined()
   })
 })

@@ -39,6 +39,11 @@ export interface Sentence {
 
 const ended = ['accepted', 'accepted-with-conditions', 'refused', 'withdrawn', 'superseded']
 
+/** Whether all that is left to answer is whether a challenge stays unresolved. */
+const onlyUnresolved = (challenges: ReadSubmission['submission']['challenges']): boolean =>
+  challenges.some(({ state }) => state === 'unresolved-proposed') &&
+  !challenges.some(({ state }) => state === 'open')
+
 /**
  * The answer in words: what was shown and where it stands; of a submission that has ended, its end first. An
  * acceptance that does not stand any more says that before all else.
@@ -47,7 +52,7 @@ export function answerOf({ submission, content, results }: ReadSubmission, parti
   const { decisive, rest } = overallAnswer(results)
   const { state, ageDays, decidedAt, challenges } = submission
   const [strong, then] =
-    state === 'challenged' && !challenges.some((each) => each.state === 'open')
+    state === 'challenged' && onlyUnresolved(challenges)
       ? unresolvedAsked(parties, ageDays)
       : standingWords[state](parties, ageDays, decidedAt)
   const shown =
