@@ -144,6 +144,7 @@ export function childEnvironment(config, secrets) {
     SMTP_URL: config.address.smtp,
     MAIL_DATA: config.folder.mail,
     SESSION_SECRET: secrets.session,
+    INVITATION_SECRET: secrets.invitation,
     SUPPLIER_DIST: join(config.folder.build, 'supplier'),
     CUSTOMER_DIST: join(config.folder.build, 'customer'),
     ENGINES_DIR: join(config.root, 'packages/metrology/released'),

@@ -4,6 +4,7 @@ import { errors } from 'oidc-provider'
 import type Provider from 'oidc-provider'
 import { pageAssets } from '../page/page'
 import { frontPage, messagePage, signInPage } from './pages'
+import { Newcomers } from './newcomers'
 import { findPerson, people } from './people'
 import { cookieNames, createProvider } from './provider'
 import type { Settings } from './provider'
@@ -21,7 +22,7 @@ const askAlways: RequestHandler = (request, _response, next) => {
 
 const filterOf = ({ query }: Request) => (typeof query.filter === 'string' ? query.filter.trim() : '')
 
-function interactionRoutes(provider: Provider, { apps }: Settings) {
+function interactionRoutes(provider: Provider, { apps }: Settings, newcomers: Newcomers) {
   const router = express.Router()
   const form = express.urlencoded({ extended: false, limit: '4kb' })
 
@@ -34,7 +35,8 @@ function interactionRoutes(provider: Provider, { apps }: Settings) {
         uid,
         app: app?.name ?? '',
         filter: filterOf(request),
-        expected: people.find(({ sub, email }) => hint !== undefined && (sub === hint || email === hint)),
+        others: newcomers.all(),
+        expected: [...people, ...newcomers.all()].find(({ sub, email }) => hint !== undefined && (sub === hint || email === hint)),
         fresh: String(params.prompt ?? '').includes('login') || params.max_age !== undefined,
       }),
     )
@@ -42,12 +44,31 @@ function interactionRoutes(provider: Provider, { apps }: Settings) {
 
   router.post('/:uid/sign-in', form, async (request, response) => {
     const { sub } = request.body as { sub?: unknown }
-    const person = typeof sub === 'string' ? findPerson(sub) : undefined
+    const person = typeof sub === 'string' ? (findPerson(sub) ?? newcomers.find(sub)) : undefined
     if (!person) {
       response
         .status(422)
         .type('html')
         .send(messagePage('Nobody was chosen', 'Go back and choose one of the people listed.', apps))
+      return
+    }
+    await provider.interactionFinished(request, response, {
+      login: { accountId: person.sub, remember: false },
+    })
+  })
+
+  router.post('/:uid/new', form, async (request, response) => {
+    const { name, email, verified } = request.body as Record<string, unknown>
+    const person = newcomers.enter({
+      name: typeof name === 'string' ? name : '',
+      email: typeof email === 'string' ? email : '',
+      verified: verified === 'yes',
+    })
+    if (!person) {
+      response
+        .status(422)
+        .type('html')
+        .send(messagePage('This is no e-mail address', 'Go back and enter one, such as name@company.example.', apps))
       return
     }
     await provider.interactionFinished(request, response, {
@@ -67,7 +88,8 @@ function interactionRoutes(provider: Provider, { apps }: Settings) {
 
 /** The whole stand-in: pages to choose a person, and the provider behind them. */
 export function createApp(settings: Settings) {
-  const provider = createProvider(settings)
+  const newcomers = new Newcomers()
+  const provider = createProvider(settings, newcomers)
   const app = express()
   app.disable('x-powered-by')
   app.use(pageAssets(settings.apps.map(({ origin }) => origin)))
@@ -75,7 +97,7 @@ export function createApp(settings: Settings) {
   app.get('/submit.js', (_request, response) => {
     response.sendFile('fakes/oidc/submit.js', { root: process.env.EVENRULE_ROOT ?? process.cwd() })
   })
-  app.use('/interaction', interactionRoutes(provider, settings))
+  app.use('/interaction', interactionRoutes(provider, settings, newcomers))
   app.use('/auth', askAlways)
   app.use(provider.callback())
 

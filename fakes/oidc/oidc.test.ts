@@ -64,7 +64,7 @@ const connect = (app: (typeof apps)[number]) =>
 async function signIn(
   visit: Browser,
   app: (typeof apps)[number],
-  sub: string,
+  who: string | Record<string, string>,
   more: Record<string, string> = {},
 ) {
   const config = await connect(app)
@@ -80,7 +80,10 @@ async function signIn(
   })
   const asked = await visit(url.href)
   const page = await visit(asked.location)
-  const chosen = await visit(`${asked.location}/sign-in`, { sub })
+  const chosen =
+    typeof who === 'string'
+      ? await visit(`${asked.location}/sign-in`, { sub: who })
+      : await visit(`${asked.location}/new`, who)
   const back = await visit(chosen.location)
   const tokens = await openid.authorizationCodeGrant(config, new URL(back.location), {
     pkceCodeVerifier: verifier,
@@ -137,6 +140,39 @@ describe('the sign-in stand-in', () => {
     expect((await visit(`${location}/sign-in`, { sub: 'demo-nobody' })).status).toBe(422)
     const left = await visit(`${location}/cancel`, {})
     expect((await visit(left.location)).location).toContain('error=access_denied')
+  })
+
+  it('signs in anybody who enters an address, confirmed or not, as one person for each address', async () => {
+    const visit = browser()
+    const first = await signIn(visit, supplier, {
+      ...{ email: 'Nia.Brook@gears.example', name: 'Nia Brook', verified: 'yes' },
+    })
+    expect(first.claims).toMatchObject({
+      ...{ name: 'Nia Brook', email: 'Nia.Brook@gears.example', email_verified: true },
+    })
+    const again = await signIn(visit, customer, { email: 'nia.brook@GEARS.example', name: '' })
+    expect(again.claims).toMatchObject({
+      ...{ sub: first.claims?.sub, name: 'nia.brook@GEARS.example', email_verified: false },
+    })
+    // From then on the page offers them by a click, marked as not confirmed.
+    const listed = await signIn(visit, supplier, String(first.claims?.sub))
+    expect(listed.page).toContain('nia.brook@GEARS.example, not confirmed')
+    expect(listed.claims?.email_verified).toBe(false)
+  })
+
+  it('takes no address that is none', async () => {
+    const visit = browser()
+    const config = await connect(supplier)
+    const { location } = await visit(
+      openid.buildAuthorizationUrl(config, {
+        redirect_uri: `${supplier.origin}/api/v1/sign-in/callback`,
+        scope: 'openid',
+        code_challenge: await openid.calculatePKCECodeChallenge('x'.repeat(43)),
+        code_challenge_method: 'S256',
+      }).href,
+    )
+    for (const email of ['', 'nobody', 'a b@c.example', `${'x'.repeat(250)}@c.example`])
+      expect((await visit(`${location}/new`, { email })).status).toBe(422)
   })
 
   it('ends its session without a further question when the app signs out', async () => {

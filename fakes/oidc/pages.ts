@@ -9,13 +9,16 @@ export interface SignIn {
   uid: string
   app: string
   filter: string
+  /** Those who entered themselves before. */
+  others: readonly Person[]
   /** Somebody who is expected to sign in, such as the one who is about to sign a submission. */
   expected: Person | undefined
   /** Whether the app asked for a fresh sign-in though somebody may be signed in there. */
   fresh: boolean
 }
 
-const roleLine = ({ roles }: Person) => (roles.length > 0 ? roles.join(', ') : 'no role yet')
+const roleLine = ({ roles, email, verified }: Person) =>
+  roles.length > 0 ? roles.join(', ') : `${email}${verified ? '' : ', not confirmed'}`
 
 function personButton(person: Person, uid: string): Html {
   return html`<form method="post" action="/interaction/${uid}/sign-in">
@@ -31,8 +34,8 @@ function personEntry(person: Person): Html {
   </div>`
 }
 
-function peopleList(filter: string, entry: (person: Person) => Html): Html {
-  const found = groups(filter)
+function peopleList(filter: string, entry: (person: Person) => Html, others: readonly Person[] = []): Html {
+  const found = groups(filter, others)
   if (found.length === 0)
     return html`<p role="status">Nobody here matches “${filter}”. Change or clear the filter.</p>`
   return html`${found.map(
@@ -48,6 +51,20 @@ function peopleList(filter: string, entry: (person: Person) => Html): Html {
   )}`
 }
 
+/** For somebody who is not on the list, such as one who has been invited. */
+const newPersonForm = (uid: string): Html => html`
+  <section>
+    <h2>Somebody else</h2>
+    <p class="soft">Signs in anybody under any address, as a new person or as the same one as before.</p>
+    <form class="field" method="post" action="/interaction/${uid}/new">
+      <label>E-mail<input name="email" type="email" required maxlength="254" /></label>
+      <label>Name<input name="name" maxlength="200" /></label>
+      <label class="check"><input name="verified" type="checkbox" value="yes" checked />Address confirmed</label>
+      <button class="plain-button">Sign in as this person</button>
+    </form>
+  </section>
+`
+
 function filterForm(action: string, filter: string): Html {
   return html`<form class="field" method="get" action="${action}" role="search">
     <label>Name, role or organisation<input name="filter" value="${filter}" type="search" /></label>
@@ -56,7 +73,7 @@ function filterForm(action: string, filter: string): Html {
 }
 
 /** The page on which one chooses whom to sign in as. */
-export function signInPage({ uid, app, filter, expected, fresh }: SignIn): string {
+export function signInPage({ uid, app, filter, others, expected, fresh }: SignIn): string {
   const heading =
     fresh && expected ? `Sign in afresh as ${expected.name}?` : `Who signs in to the ${app} app?`
   const answer = fresh
@@ -70,7 +87,7 @@ export function signInPage({ uid, app, filter, expected, fresh }: SignIn): strin
       <p>${answer}</p>
       ${expected ? html`<div class="people">${personButton(expected, uid)}</div>` : undefined}
       ${filterForm(`/interaction/${uid}`, filter)}
-      ${peopleList(filter, (person) => personButton(person, uid))}
+      ${peopleList(filter, (person) => personButton(person, uid), others)} ${newPersonForm(uid)}
       <form class="field" method="post" action="/interaction/${uid}/cancel">
         <button class="plain-button">Back to the ${app} app without signing in</button>
       </form>

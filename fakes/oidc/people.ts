@@ -5,6 +5,8 @@ export interface Person {
   sub: string
   name: string
   email: string
+  /** Whether the provider vouches for the address. */
+  verified: boolean
   /** Name of the organisation; undefined for somebody who belongs to none. */
   organisation: string | undefined
   /** What the organisation is, such as "supplier". */
@@ -26,7 +28,7 @@ export const people: Person[] = demonstration.people.map(({ organisation, ...per
   const found = organisation === null ? undefined : organisations.get(organisation)
   if (organisation !== null && !found)
     throw new Error(`${person.sub} names an organisation that is not listed.`)
-  return { ...person, organisation: found?.name, side: found?.side ?? 'belongs to nobody yet' }
+  return { ...person, verified: true, organisation: found?.name, side: found?.side ?? 'belongs to nobody yet' }
 })
 
 /** The person with this subject. */
@@ -34,17 +36,17 @@ export const findPerson = (sub: string) => people.find((person) => person.sub ==
 
 /**
  * People by organisation, each of whom has all the words of the filter in their name, e-mail address, role or
- * organisation.
+ * organisation. `others` are those who are not of the demonstration.
  */
-export function groups(filter: string): Group[] {
+export function groups(filter: string, others: readonly Person[] = []): Group[] {
   const words = filter.toLowerCase().split(/\s+/).filter(Boolean)
   const found = new Map<string, Group>()
-  for (const person of people) {
+  for (const person of [...people, ...others]) {
     const text = [person.name, person.email, person.organisation ?? '', ...person.roles]
       .join(' ')
       .toLowerCase()
     if (!words.every((word) => text.includes(word))) continue
-    const title = person.organisation ?? 'No organisation'
+    const title = person.organisation ?? (others.includes(person) ? 'Entered here' : 'No organisation')
     const group = found.get(title) ?? { title, side: person.side, people: [] }
     group.people.push(person)
     found.set(title, group)

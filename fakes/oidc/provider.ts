@@ -1,6 +1,7 @@
 import Provider from 'oidc-provider'
 import type { ClientMetadata, Configuration, JWK } from 'oidc-provider'
 import { messagePage, signOutPage } from './pages'
+import type { Newcomers } from './newcomers'
 import { findPerson } from './people'
 
 /** One of the two apps as the provider knows it. */
@@ -41,8 +42,8 @@ const client = ({ origin, clientId, clientSecret }: App): ClientMetadata => ({
   scope: scopes,
 })
 
-/** The provider with both apps registered and every demo person as an account. */
-export function createProvider({ issuer, apps, keys }: Settings): Provider {
+/** The provider with both apps registered; every demo person is an account, and whoever enters themselves. */
+export function createProvider({ issuer, apps, keys }: Settings, newcomers: Newcomers): Provider {
   const cookie = { signed: true, httpOnly: true, sameSite: 'lax' as const }
   const configuration: Configuration = {
     clients: apps.map(client),
@@ -68,10 +69,10 @@ export function createProvider({ issuer, apps, keys }: Settings): Provider {
       },
     },
     findAccount: (_context, sub) => {
-      const person = findPerson(sub)
+      const person = findPerson(sub) ?? newcomers.find(sub)
       if (!person) return undefined
-      const { name, email } = person
-      return { accountId: sub, claims: () => ({ sub, name, email, email_verified: true }) }
+      const { name, email, verified } = person
+      return { accountId: sub, claims: () => ({ sub, name, email, email_verified: verified }) }
     },
     // Both apps belong to the product: nobody is asked whether they may know a name and an e-mail address.
     loadExistingGrant: async (context) => {

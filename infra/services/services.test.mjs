@@ -52,6 +52,11 @@ describe('the settings', () => {
     const made = keepSecrets(config)
     expect(made.session).toMatch(/^[0-9a-f]{48}$/)
     expect(keepSecrets(config)).toEqual(made)
+    const { invitation: _none, ...earlier } = made
+    writeFileSync(config.file.secrets, JSON.stringify(earlier))
+    const upgraded = keepSecrets(config)
+    expect(upgraded).toEqual({ ...earlier, invitation: expect.stringMatching(/^[0-9a-f]{48}$/) })
+    expect(keepSecrets(config)).toEqual(upgraded)
   })
 })
 

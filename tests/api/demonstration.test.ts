@@ -1,5 +1,5 @@
 import type { ClauseOutput } from '@evenrule/metrology'
-import { front, record, requests, requestStates, type Side } from '@evenrule/api/contract'
+import { front, invitations, record, requests, requestStates, type Side } from '@evenrule/api/contract'
 import { studyStates } from '@evenrule/api/contract/moves/study'
 import { submissionStates } from '@evenrule/api/contract/moves/submission'
 import { afterAll, beforeAll, describe, expect, it } from 'vitest'
@@ -12,6 +12,7 @@ import {
 import { playDemonstration } from '../../packages/api/src/server/seed/run'
 import { gauges } from '../../packages/api/src/server/seed/scenario.gauges'
 import { Stage } from '../../packages/api/src/server/seed/stage'
+import { people } from '../../fakes/oidc/people'
 import { startHarness, type Harness } from './harness'
 
 const seededAt = new Date('2026-11-20T08:00:00.000Z')
@@ -68,13 +69,29 @@ describe('the demonstration', () => {
     }
   })
 
-  it('leaves its messages readable, and none of its mail to be sent', async () => {
+  it('leaves its messages readable, and none of its mail to be sent but that of invitations', async () => {
     const { rows } = await harness.owner.query<{ waiting: number; messages: number }>(
-      `select (select count(*) from outbox where sent_at is null)::integer as waiting,
+      `select (select count(*) from outbox where sent_at is null and message_id is not null)::integer as waiting,
          (select count(*) from messages)::integer as messages`,
     )
     expect(rows[0]?.waiting).toBe(0)
     expect(rows[0]?.messages).toBeGreaterThan(100)
+  })
+
+  it('has invitations that are pending and one that has expired, of a person whom the sign-in page offers', async () => {
+    const { brackwell } = base.organisations
+    const admin = asMember('customer', brackwell, 'Adaeze Holm')
+    const params = { organisationId: brackwell.id }
+    const suppliers = await admin.call(invitations.listSupplierInvitations, params)
+    expect(suppliers.items.map(({ supplierName, state }) => [supplierName, state])).toEqual([
+      ['Dunmere Gears', 'pending'],
+      ['Halden Forge', 'expired'],
+    ])
+    const members = await admin.call(invitations.listInvitations, params)
+    expect(members.items).toMatchObject([{ email: 'wren.idle@idle.example', state: 'pending' }])
+    for (const { email, state } of [...suppliers.items, ...members.items])
+      if (state === 'pending')
+        expect(people.find((person) => person.email === email)).toMatchObject({ organisation: undefined })
   })
 
   it('estimates the bias that the gauges were given, as often as their intervals promise', async () => {

@@ -59,6 +59,7 @@ const need = (name: string): string => {
   return value
 }
 
+export const invitationSecret = 'a secret of the tests'
 const origins: Record<Side, string> = { supplier: 'http://supplier.test', customer: 'http://customer.test' }
 
 /** A product of its own: a database cloned from the migrated template, both apps, a clock that the test moves. */
@@ -87,7 +88,7 @@ export async function startHarness() {
   }
   const routes = allRoutes({
     database,
-    config: { origins },
+    config: { origins, invitationSecret },
     // Nothing answers at this address: signing in for real is proved in sign-in.test.ts.
     identity: openIdentity({
       origins,

@@ -10,7 +10,7 @@ import { createApp } from '../../packages/api/src/server/app'
 import { openIdentity } from '../../packages/api/src/server/integrations/oidc'
 import { openSessions } from '../../packages/api/src/server/integrations/sessions'
 import { allRoutes } from '../../packages/api/src/server/routes'
-import { startHarness } from './harness'
+import { invitationSecret, startHarness } from './harness'
 
 const listen = async (): Promise<{ server: Server; address: string }> => {
   const server = createServer()
@@ -51,7 +51,7 @@ export async function startSignInWorld() {
     clock,
   )
   const identity = openIdentity({ origins, oidc: { issuer: provider.address, ...clients } })
-  const routes = allRoutes({ database: harness.database, config: { origins }, identity, sessions })
+  const routes = allRoutes({ database: harness.database, config: { origins, invitationSecret }, identity, sessions })
   for (const side of sides)
     servers[side].server.on(
       'request',

@@ -16,7 +16,7 @@ import {
   sendDueMail,
   writeMail,
 } from '../../packages/api/src/server/modules/notifications/mail.service'
-import { startHarness, type Harness, type Organisation, type Person } from './harness'
+import { invitationSecret, startHarness, type Harness, type Organisation, type Person } from './harness'
 
 const origins = { supplier: 'http://supplier.test', customer: 'http://customer.test:4320' }
 let harness: Harness
@@ -95,7 +95,7 @@ const send = (more: { transport?: MailTransport; stopped?: () => boolean } = {})
     {
       database: system.database,
       transport: more.transport ?? transport,
-      origins,
+      ...{ origins, invitationSecret },
       logger: pino({ level: 'silent' }),
       clock: harness.now,
     },
@@ -235,7 +235,8 @@ describe('several workers', () => {
     })
     expect(taken).toBeDefined()
     // The mail left, and the worker died before it could note that.
-    if (taken) await transport.send(writeMail(taken, origins))
+    const written = taken && writeMail(taken, { origins, invitationSecret })
+    if (written) await transport.send(written)
     expect(await send()).toBe(0)
     passes(claimFor)
     expect(await send()).toBe(1)
@@ -309,6 +310,7 @@ it('the worker’s program sends what comes, and ends in order on SIGTERM', asyn
         PATH: process.env.PATH ?? '',
         SYSTEM_DATABASE_URL: harness.urlAs('evenrule_system'),
         SMTP_URL: smtpUrl,
+        INVITATION_SECRET: invitationSecret,
         SUPPLIER_ORIGIN: origins.supplier,
         CUSTOMER_ORIGIN: origins.customer,
       },

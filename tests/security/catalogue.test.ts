@@ -267,6 +267,9 @@ describe('the running program', () => {
     expect(await columns('requests')).toEqual([
       ...['due_on', 'row_version', 'withdrawal_reason', 'withdrawn_at', 'withdrawn_by'],
     ])
+    expect(await columns('invitations')).toEqual([
+      ...['expires_on', 'nonce', 'revoked_at', 'revoked_by', 'row_version', 'sent_at', 'token_hash'],
+    ])
     expect(await columns('messages')).toEqual(['read_at'])
     expect(await columns('users')).toEqual(['muted_mail', 'name'])
     expect(await columns('organisations')).toEqual(['name', 'row_version', 'time_zone'])
@@ -311,13 +314,21 @@ describe('roles', () => {
     const read = [
       ...['agreement_signatures', 'agreement_versions', 'agreements', 'calibrations', 'carry_overs'],
       ...['challenges', 'characteristics', 'conditions', 'decisions', 'gauges', 'measuring_tasks'],
-      ...['messages', 'organisations', 'outbox', 'part_revisions', 'parts', 'reference_standards'],
+      ...['invitations', 'messages', 'organisations', 'outbox', 'part_revisions', 'parts', 'reference_standards'],
       ...['reinstatements', 'relationships', 'reminders', 'request_answers', 'request_tasks', 'requests'],
       ...['standing_calibrations', 'standing_events', 'submission_texts', 'submissions', 'users'],
     ]
     expect(held.sort()).toEqual(
       [...read.map((table) => `SELECT ${table}`), 'INSERT reminders', 'UPDATE outbox'].sort(),
     )
+  })
+
+  it('of the worker write the mail of invitations without the hash of a token', async () => {
+    const [row] = await query<{ hash: boolean; nonce: boolean }>(
+      `select has_column_privilege('evenrule_system', 'invitations', 'token_hash', 'SELECT') as hash,
+         has_column_privilege('evenrule_system', 'invitations', 'nonce', 'SELECT') as nonce`,
+    )
+    expect(row).toEqual({ hash: false, nonce: true })
   })
 
   it('of the sessions reach the sessions, nothing else, and no other role reaches those', async () => {
@@ -352,6 +363,12 @@ describe('functions', () => {
        from pg_proc p where p.pronamespace = 'public'::regnamespace and p.prosecdef order by 1`,
     )
     expect(definers.map(({ name }) => name)).toEqual([
+      'accept_invitation',
+      'ended_memberships_of_person',
+      'found_organisation',
+      'invitation_by_token',
+      'is_invited',
+      'mail_invitation',
       'members_of_current',
       'memberships_of_person',
       'names_of_people',

@@ -28,6 +28,8 @@ const personRoutes = [
   'get /engines/:sha256',
   'get /session',
   'post /evaluate',
+  'post /invitations/accept',
+  'post /invitations/open',
   'post /sign-out',
   'post /sign-out-everywhere',
 ]

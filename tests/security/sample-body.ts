@@ -33,6 +33,7 @@ const known: Record<string, unknown> = {
   chance: 0.9,
   bias: '0',
   timeZone: 'Europe/Berlin',
+  email: 'somebody@people.example',
   about: { kind: 'terms' },
   clauses: [{ type: 'bias-zero-test', parameters: { alpha: 0.05 } }],
 }

@@ -4,6 +4,7 @@ import {
   gaugeEvents,
   gauges,
   houseTerms,
+  invitations,
   requests,
   parts,
   reviews,
@@ -168,6 +169,23 @@ export async function startWorld() {
     body: { round: 1, items: [{ about, sha256: effective?.sha256 }] },
   })
 
+  // Invitations that are open: of a member on either side, and of a supplier.
+  const invite = (side: Side, email: string) =>
+    harness.as(side, insider).call(
+      invitations.inviteMember,
+      { organisationId: victims[side].id },
+      { body: { email, roles: ['reader'] } },
+    )
+  const invited: Record<Side, { id: string }> = {
+    supplier: await invite('supplier', 'one@people.example'),
+    customer: await invite('customer', 'two@people.example'),
+  }
+  const invitedSupplier = await harness.as('customer', insider).call(
+    invitations.inviteSupplier,
+    { organisationId: customer.id },
+    { body: { email: 'three@people.example', supplierName: 'Three' } },
+  )
+
   // The worker's chore, under a clock that runs ahead to the days before the request is due.
   const system = openDatabase(harness.urlAs('evenrule_system'), 1)
   const ahead = () => new Date('2027-02-25T09:00:00.000Z')
@@ -199,6 +217,7 @@ export async function startWorld() {
     userId: story.people.reader.id,
     chainId: relationship.id,
     houseTermsId,
+    supplierInvitationId: invitedSupplier.id,
     ...ofReviews,
     ...(await one(`select id as "challengeId" from challenges where submission_id = $1`, challenged)),
     ...(await one(`select id as "fileId" from files where org_id = $1 limit 1`, supplier.id)),
@@ -214,6 +233,7 @@ export async function startWorld() {
   const ofSide = async (side: Side): Promise<Samples> => ({
     ...shared,
     organisationId: victims[side].id,
+    invitationId: invited[side].id,
     ...(await one(
       `select id as "messageId" from messages where org_id = $1 and user_id = $2 and side = $3 limit 1`,
       victims[side].id,

@@ -27,6 +27,13 @@ export const line = (maximum = 200) =>
 export const paragraph = (maximum = 4000) =>
   storable(z.string().trim().max(maximum, `Shorten this to ${maximum} characters.`))
 
+/** An e-mail address; two that differ by case alone are the same. */
+export const emailAddress = z
+  .string()
+  .trim()
+  .max(254, 'Shorten this to 254 characters.')
+  .pipe(z.email('Enter an e-mail address, such as name@company.example.'))
+
 /**
  * A number kept as the text that was entered (so that 24.000 keeps its zeros), with a decimal comma turned
  * into a point. The digits are the record; the double is derived where it is used.

@@ -10,6 +10,7 @@ export const messageKinds = [
   'challenge',
   'decision',
   'standing',
+  'invitation',
   'reminder',
 ] as const
 export type MessageKind = (typeof messageKinds)[number]

@@ -15,6 +15,13 @@ import {
 import { roles } from './access'
 import { defineEndpoint } from './define'
 
+/** The roles of one member, in the order of the product. */
+export const chosenRoles = z
+  .array(roleSchema)
+  .min(1, 'Choose at least one role; a reader sees everything and changes nothing.')
+  .max(roles.length)
+  .transform((chosen) => roles.filter((role) => chosen.includes(role)))
+
 export const memberSchema = z.object({
   /** The person. */
   id: uuid,
@@ -50,11 +57,7 @@ export const changeMember = defineEndpoint({
   access: 'members.change',
   params: paramsWith('userId'),
   body: z.object({
-    roles: z
-      .array(roleSchema)
-      .min(1, 'Choose at least one role; a reader sees everything and changes nothing.')
-      .max(roles.length)
-      .transform((chosen) => roles.filter((role) => chosen.includes(role))),
+    roles: chosenRoles,
     endsOn: calendarDate.nullable(),
     expectedVersion,
   }),
@@ -81,6 +84,15 @@ const isTimeZone = (name: string): boolean => {
   }
 }
 
+/** An IANA time zone, whose calendar judges days. */
+export const timeZone = z
+  .string()
+  .max(60)
+  .refine(isTimeZone, 'Choose a time zone such as Europe/Berlin.')
+
+/** What an organisation is called; its partners see it too. */
+export const organisationName = line(120)
+
 export const organisationSchema = z.object({
   id: uuid,
   name: z.string(),
@@ -106,8 +118,8 @@ export const changeOrganisation = defineEndpoint({
   access: 'organisation.change',
   params: organisationParams,
   body: z.object({
-    name: line(120),
-    timeZone: z.string().max(60).refine(isTimeZone, 'Choose a time zone such as Europe/Berlin.'),
+    name: organisationName,
+    timeZone,
     expectedVersion,
   }),
   response: organisationSchema,

@@ -28,6 +28,8 @@ export const recordSubjects = [
   'reference-standard',
   'member',
   'organisation',
+  'invitation',
+  'relationship',
 ] as const
 export type RecordSubject = (typeof recordSubjects)[number]
 const recordSubject = z.enum(recordSubjects, 'Choose one of the subjects of the record.')

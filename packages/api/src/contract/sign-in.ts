@@ -1,5 +1,5 @@
 import { z } from 'zod'
-import { instant, roleSchema, sideSchema, uuid } from './common'
+import { calendarDate, instant, roleSchema, sideSchema, uuid } from './common'
 import { defineEndpoint } from './define'
 
 /** Reasons why a sign-in did not come about; the sign-in page says each in words. */
@@ -39,6 +39,8 @@ export const readSession = defineEndpoint({
     /** When this sign-in ends, however busy the person is. */
     endsAt: instant,
     organisations: z.array(organisationOfPerson),
+    /** Memberships that have ended, the latest first, so that a person is told why an organisation is gone. */
+    ended: z.array(z.object({ name: z.string(), endsOn: calendarDate })),
     /** Where the app of each side is. */
     apps: z.object({ supplier: z.string(), customer: z.string() }),
   }),

@@ -1,7 +1,7 @@
 import { join } from 'node:path'
-import express, { type Express, type RequestHandler } from 'express'
+import express, { type Express, type Request, type RequestHandler } from 'express'
 import helmet from 'helmet'
-import { rateLimit } from 'express-rate-limit'
+import { ipKeyGenerator, rateLimit } from 'express-rate-limit'
 import type { Side } from '../contract/access'
 import type { Database } from './db/database'
 import { mount } from './http/mount'
@@ -41,7 +41,9 @@ export function createApp(dependencies: AppDependencies): Express {
   api.use(sameOrigin(origin))
   api.use(express.json({ limit: '4mb' }))
   const limited = limiter(dependencies.rateLimitPerMinute ?? 120)
+  const guarded = limiter(Math.min(dependencies.rateLimitPerMinute ?? 120, tokensPerMinute), personOrAddress)
   for (const route of dependencies.routes) {
+    if (takesToken(route)) api[route.endpoint.method](route.endpoint.path, guarded)
     if (isCostly(route)) api[route.endpoint.method](route.endpoint.path, limited)
     mount(api, route, { side, database: dependencies.database, services })
   }
@@ -56,12 +58,22 @@ export function createApp(dependencies: AppDependencies): Express {
 const isCostly = ({ endpoint }: Route): boolean =>
   Boolean(endpoint.upload) || /^\/(sign-in|evaluate)/.test(endpoint.path)
 
-const limiter = (perMinute: number): RequestHandler =>
+/** Where a person shows the secret of a link: nobody may try many. */
+const takesToken = ({ endpoint }: Route): boolean => endpoint.path.startsWith('/invitations/')
+/** Links that one person may look up or use in a minute. */
+const tokensPerMinute = 30
+
+/** Who is signed in counts by themselves: a whole company may sit behind one address. */
+const personOrAddress = (request: Request): string =>
+  request.session?.person?.userId ?? ipKeyGenerator(request.ip ?? '')
+
+const limiter = (perMinute: number, keyGenerator?: (request: Request) => string): RequestHandler =>
   perMinute === 0
     ? (_request, _response, next) => next()
     : rateLimit({
         windowMs: 60_000,
         limit: perMinute,
+        ...(keyGenerator ? { keyGenerator } : {}),
         standardHeaders: 'draft-8',
         legacyHeaders: false,
         handler: tooMany,

@@ -3,6 +3,8 @@ export interface Config {
   databaseUrl: string
   sessionDatabaseUrl: string
   sessionSecret: string
+  /** Derives the tokens of invitations; the worker writes the links with it. */
+  invitationSecret: string
   oidc: { issuer: string; supplier: OidcClient; customer: OidcClient }
   origins: { supplier: string; customer: string }
   ports: { supplier: number; customer: number }
@@ -22,6 +24,7 @@ export interface OidcClient {
 export interface WorkerConfig {
   systemDatabaseUrl: string
   origins: { supplier: string; customer: string }
+  invitationSecret: string
   smtpUrl: string
   mailFrom: string
   logLevel: string
@@ -40,6 +43,7 @@ export function readConfig(env: NodeJS.ProcessEnv): Config {
     databaseUrl: need(env, 'DATABASE_URL'),
     sessionDatabaseUrl: need(env, 'SESSION_DATABASE_URL'),
     sessionSecret: need(env, 'SESSION_SECRET'),
+    invitationSecret: need(env, 'INVITATION_SECRET'),
     oidc: {
       issuer: need(env, 'OIDC_ISSUER'),
       supplier: {
@@ -76,6 +80,7 @@ export function readWorkerConfig(env: NodeJS.ProcessEnv): WorkerConfig {
   return {
     systemDatabaseUrl: need(env, 'SYSTEM_DATABASE_URL'),
     origins,
+    invitationSecret: need(env, 'INVITATION_SECRET'),
     smtpUrl: need(env, 'SMTP_URL'),
     mailFrom: env.MAIL_FROM ?? `Evenrule <evenrule@${new URL(origins.supplier).hostname}>`,
     logLevel: env.LOG_LEVEL ?? 'info',

@@ -11,6 +11,7 @@ import { gaugeEventsRoutes } from './modules/gauges/gauge-events.routes'
 import { gaugesRoutes } from './modules/gauges/gauges.routes'
 import { standardsRoutes } from './modules/gauges/standards.routes'
 import { houseTermsRoutes } from './modules/house-terms/house-terms.routes'
+import { invitationsRoutes } from './modules/invitations/invitations.routes'
 import { messagesRoutes } from './modules/notifications/messages.routes'
 import { characteristicsRoutes } from './modules/parts/characteristics.routes'
 import { partsRoutes } from './modules/parts/parts.routes'
@@ -28,7 +29,7 @@ import { systemRoutes } from './modules/system/system.routes'
 
 export interface RouteDependencies {
   database: Database
-  config: Pick<Config, 'origins'>
+  config: Pick<Config, 'origins' | 'invitationSecret'>
   identity: Identity
   sessions: Pick<Sessions, 'end' | 'endAllOf'>
 }
@@ -55,6 +56,7 @@ export function allRoutes({ database, config, identity, sessions }: RouteDepende
     ...requestsRoutes,
     ...messagesRoutes,
     ...organisationsRoutes,
+    ...invitationsRoutes({ database, invitationSecret: config.invitationSecret }),
     ...recordRoutes,
     ...submissionsRoutes,
     ...reviewsRoutes,

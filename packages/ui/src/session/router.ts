@@ -8,6 +8,7 @@ import {
   type Router,
   type RouterHistory,
 } from 'vue-router'
+import { invitationPath, keptInvitation } from './invitationToken'
 import { useSessionStore } from './useSessionStore'
 
 declare module 'vue-router' {
@@ -22,6 +23,7 @@ type Lazy = () => Promise<Component>
 export interface EvenrulePages {
   signIn: Lazy
   signedOut: Lazy
+  invitation: Lazy
   noOrganisation: Lazy
   notFound: Lazy
 }
@@ -54,6 +56,7 @@ export function createEvenruleRouter({ pages, routes, history = createWebHistory
     routes: [
       { path: '/sign-in', name: 'sign-in', component: pages.signIn, meta: { public: true } },
       { path: '/signed-out', name: 'signed-out', component: pages.signedOut, meta: { public: true } },
+      { path: invitationPath, name: 'invitation', component: pages.invitation, meta: { public: true } },
       { path: '/', name: 'home', component: pages.noOrganisation },
       { path: '/no-organisation', name: 'no-organisation', component: pages.noOrganisation },
       { path: '/organisations/:organisationId', children: Object.values(routes).flat() },
@@ -80,12 +83,14 @@ export async function admit(to: RouteLocationNormalized): Promise<true | RouteLo
   if (session.failure) return true
   if (session.signedOut) return { name: 'sign-in', query: { returnTo: to.fullPath } }
   if (to.name === 'home') {
+    // Whoever signed in to accept an invitation goes on with it.
+    if (keptInvitation()) return { name: 'invitation' }
     const { home } = session
     return home ? organisationPath(home.id) : { name: 'no-organisation' }
   }
   const { organisationId } = to.params
   if (typeof organisationId !== 'string' || to.name === 'not-found') return true
-  if (session.organisations.some(({ id }) => id === organisationId)) {
+  if ([...session.organisations, ...session.foundable].some(({ id }) => id === organisationId)) {
     session.enter(organisationId)
     return true
   }

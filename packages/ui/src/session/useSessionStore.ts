@@ -31,7 +31,13 @@ export const useSessionStore = defineStore('session', () => {
   const elsewhere = computed(() =>
     everyOrganisation.value.filter((each) => !organisations.value.includes(each)),
   )
-  const organisation = computed(() => organisations.value.find(({ id }) => id === organisationId.value))
+  /** Of those the ones whose admin may make a customer of them here, by inviting their first supplier. */
+  const foundable = computed(() =>
+    elsewhere.value.filter((each) => roleAllows('suppliers.invite', side, each.roles)),
+  )
+  /** Memberships that have ended. */
+  const ended = computed(() => session.value?.ended ?? [])
+  const organisation = computed(() => everyOrganisation.value.find(({ id }) => id === organisationId.value))
   const roles = computed(() => organisation.value?.roles ?? [])
   const otherApp = computed(() => session.value?.apps[side === 'supplier' ? 'customer' : 'supplier'])
   /** Where `/` leads: the organisation open last, else the first. */
@@ -98,6 +104,8 @@ export const useSessionStore = defineStore('session', () => {
     person,
     organisations,
     elsewhere,
+    foundable,
+    ended,
     organisation,
     roles,
     otherApp,

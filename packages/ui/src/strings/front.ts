@@ -113,7 +113,7 @@ export const firstSteps: Record<'supplier' | 'customer', { title: string; text: 
     steps: [
       {
         title: 'See your customers',
-        text: 'A customer has to work with you here before anything else can be entered.',
+        text: 'A customer has to invite you, and you to accept, before anything else can be entered.',
         to: 'relationships',
         label: 'Open customers',
       },
@@ -143,7 +143,7 @@ export const firstSteps: Record<'supplier' | 'customer', { title: string; text: 
     steps: [
       {
         title: 'See your suppliers',
-        text: 'Only those who work with you here can send you proof.',
+        text: 'Invite them by e-mail: only those who work with you here can send you proof.',
         to: 'relationships',
         label: 'Open suppliers',
       },
@@ -182,7 +182,8 @@ export const relationshipWords = {
   links: 'Open',
   emptyTitle: { supplier: 'No customer yet', customer: 'No supplier yet' },
   emptyText: {
-    supplier: 'Your customer’s admin takes you up; then your customers are listed here.',
-    customer: 'An admin takes a supplier up; then your suppliers are listed here.',
+    supplier:
+      'A customer invites you by e-mail. Have the invitation sent to an admin of yours; once it is accepted, the customer is listed here.',
+    customer: 'An admin invites a supplier by e-mail; once it has accepted, it is listed here.',
   },
 } as const

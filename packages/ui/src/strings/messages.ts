@@ -9,6 +9,7 @@ export const messageKindWords: Record<messages.MessageKind, string> = {
   challenge: 'Challenge',
   decision: 'Decision',
   standing: 'Standing',
+  invitation: 'Invitation',
   reminder: 'Reminder',
 }
 
@@ -20,6 +21,7 @@ export const messageKindHints: Record<messages.MessageKind, string> = {
   challenge: 'Objections to a named result, and their answers.',
   decision: 'Proof accepted, accepted with conditions or refused.',
   standing: 'Accepted proof that does not stand any more, or stands again.',
+  invitation: 'Members and suppliers who have accepted an invitation.',
   reminder: 'Days that come near or are over: requests, challenges, conditions, calibrations, agreements.',
 }
 

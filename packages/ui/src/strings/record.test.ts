@@ -4,6 +4,7 @@ import { agreementMoves } from '@evenrule/api/contract/moves/agreement-version'
 import { challengeMoves } from '@evenrule/api/contract/moves/challenge'
 import { conditionMoves } from '@evenrule/api/contract/moves/condition'
 import { houseTermsMoves } from '@evenrule/api/contract/moves/house-terms'
+import { invitationMoves } from '@evenrule/api/contract/moves/invitation'
 import { requestMoves } from '@evenrule/api/contract/moves/request'
 import { studyMoves } from '@evenrule/api/contract/moves/study'
 import { submissionMoves } from '@evenrule/api/contract/moves/submission'
@@ -17,7 +18,7 @@ const namedInServices = (): string[] => {
     /\.(service|messages)\.ts$/.test(file),
   )
   const kind =
-    /'((?:agreement|study|submission|challenge|condition|request|house-terms|part|characteristic|measuring-task|gauge|reference-standard|calibration|member|organisation)\.[a-z-]+)'/g
+    /'((?:agreement|study|submission|challenge|condition|request|house-terms|part|characteristic|measuring-task|gauge|reference-standard|calibration|member|organisation|invitation|relationship)\.[a-z-]+)'/g
   return files.flatMap((file) =>
     [...readFileSync(join(modules, file), 'utf8').matchAll(kind)].map(([, type]) => type ?? ''),
   )
@@ -27,6 +28,7 @@ const ofMoves = [
   ...challengeMoves,
   ...conditionMoves,
   ...houseTermsMoves,
+  ...invitationMoves,
   ...requestMoves,
   ...studyMoves,
   ...submissionMoves,

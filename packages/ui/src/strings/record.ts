@@ -22,6 +22,8 @@ export const recordSubjectWords: Record<record.RecordSubject, [named: string, un
   'reference-standard': ['reference standard', 'a reference standard'],
   member: ['member', 'a former member'],
   organisation: ['organisation', 'the organisation'],
+  invitation: ['invitation of', 'an invitation'],
+  relationship: ['business relationship of', 'the business relationship'],
 }
 
 /** Kinds of subject in the filter. */
@@ -39,6 +41,8 @@ export const recordFilterWords: Record<record.RecordSubject, string> = {
   'reference-standard': 'reference standards',
   member: 'members',
   organisation: 'organisation',
+  invitation: 'invitations',
+  relationship: 'business relationships',
 }
 
 /** What somebody did, in the past tense; `*` stands for the thing it was done to. */
@@ -139,6 +143,12 @@ export const eventWords: Record<string, string> = {
   'calibration.entered': 'entered a calibration of *',
   'calibration.certificate-added': 'added the certificate to a calibration of *',
   'member.changed': 'changed the membership of *',
+  'member.joined': 'accepted an invitation and joined: *',
+  'invitation.sent': 'sent *',
+  'invitation.sent-again': 'sent * again',
+  'invitation.revoked': 'revoked *',
+  'organisation.founded': 'founded *',
+  'relationship.begun': 'accepted an invitation and began *',
   'organisation.changed': 'changed the details of *',
 }
 

@@ -56,17 +56,6 @@ export const endedWords = {
   action: 'Sign in and come back to this page',
 } as const
 
-export const noOrganisationWords = {
-  question: 'Which organisation do you work for?',
-  none: 'You belong to no organisation yet.',
-  what: 'Ask an admin of your organisation to add you as a member, and tell them this e-mail address:',
-  then: 'Then load this page again.',
-  reload: 'Load again',
-  elsewhere: (names: string, side: Side) => `${names}: the work is in the ${apps[side]}.`,
-  open: (side: Side) => `Open the ${apps[side]}`,
-  enter: (name: string) => `Go to ${name}`,
-} as const
-
 export const accountWords = {
   menu: 'Account',
   organisation: 'Organisation',

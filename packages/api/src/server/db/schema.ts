@@ -1,6 +1,7 @@
 export * from '../modules/sign-in/sign-in.table'
 export * from '../modules/organisations/organisations.table'
 export * from '../modules/relationships/relationships.table'
+export * from '../modules/invitations/invitations.table'
 export * from '../modules/files/files.table'
 export * from '../modules/gauges/gauges.table'
 export * from '../modules/gauges/gauge-events.table'

@@ -1,21 +1,14 @@
-import { and, eq } from 'drizzle-orm'
-import { allows, type Permission, type Side } from '../../contract/access'
-import { dayIn } from '../calendar'
+import type { Permission, Side } from '../../contract/access'
 import { newId } from '../db/columns'
 import type { Database } from '../db/database'
-import { withTenant, type Tenant } from '../db/tenant'
-import { defineError, notFound, ProblemError } from '../errors'
-import { memberships, organisations } from '../modules/organisations/organisations.table'
+import { withTenant } from '../db/tenant'
+import { defineError, ProblemError } from '../errors'
 import { securityEvents } from '../modules/sign-in/sign-in.table'
 import type { Services } from '../services'
+import { authorise } from './authorise'
 import type { Route, UploadedFile } from './route'
 import { freshFor, type SignedIn } from './session'
 
-const notAllowed = defineError(
-  'not-allowed',
-  403,
-  'Your role in this organisation does not allow that. Ask an admin of your organisation for the role that does.',
-)
 const signInAfresh = defineError(
   'sign-in-afresh',
   403,
@@ -66,20 +59,6 @@ export async function callTenantRoute(
     }
     throw error
   }
-}
-
-/** The membership is read on every request: a role taken away, or a membership that ended, counts at once. */
-async function authorise(tenant: Tenant, permission: Permission): Promise<void> {
-  const [membership] = await tenant.tx
-    .select({ roles: memberships.roles, endsOn: memberships.endsOn, timeZone: organisations.timeZone })
-    .from(memberships)
-    .innerJoin(organisations, eq(organisations.id, memberships.orgId))
-    .where(and(eq(memberships.orgId, tenant.organisationId), eq(memberships.userId, tenant.userId)))
-  if (!membership) throw notFound('organisation')
-  const { endsOn, timeZone } = membership
-  if (endsOn && endsOn < dayIn(timeZone, tenant.now)) throw notFound('organisation')
-  if (!allows(permission, tenant.side, membership.roles)) throw notAllowed()
-  tenant.roles = membership.roles
 }
 
 async function logRefusal(

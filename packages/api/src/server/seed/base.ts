@@ -31,7 +31,7 @@ const begun = 'demonstration begun'
 const complete = 'demonstration complete'
 
 /**
- * What has no service yet because it comes by invitation: organisations, people, memberships, relationships.
+ * What the demonstration begins with: organisations, people, memberships, relationships.
  * Written by the owner of the database in one transaction; undefined when the demonstration is there already.
  * One that was cut off is begun anew: nothing but it can be in the database then.
  */
@@ -51,11 +51,14 @@ export async function seedBase(ownerUrl: string, issuer: string, at: string): Pr
 
 /**
  * Notes that the demonstration is whole. Its mail is marked as sent at the time it is of: the people are to find a
- * year of messages in the app, not hundreds of mails that nobody waited for. Mail of what follows goes out.
+ * year of messages in the app, not hundreds of mails that nobody waited for. Mail of what follows goes out, and that of
+ * invitations too: without it nobody could accept them.
  */
 export async function finishSeed(ownerUrl: string): Promise<void> {
   await asOwner(ownerUrl, async (client) => {
-    await client.query('update outbox set sent_at = next_attempt_at, attempts = 1 where sent_at is null')
+    await client.query(
+      'update outbox set sent_at = next_attempt_at, attempts = 1 where sent_at is null and message_id is not null',
+    )
     await client.query(`comment on schema public is '${complete}'`)
   })
 }

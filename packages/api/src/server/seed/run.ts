@@ -3,6 +3,7 @@ import type { Base } from './base'
 import { gaugeScenes, standardScenes } from './gauges'
 import { houseTermsScenes } from './house-terms'
 import { Ids } from './ids'
+import { invitationScenes } from './invitations'
 import { lifeScenes } from './life'
 import { partScenes } from './parts'
 import { requestScenes } from './requests'
@@ -24,6 +25,7 @@ export async function playDemonstration(stage: Stage, base: Base): Promise<void>
     requestScenes,
     studyScenes,
     lifeScenes,
+    invitationScenes,
   ].flatMap((scenesOf) => scenesOf(stage, base, ids))
   let day = Infinity
   for (const scene of inOrder(scenes)) {

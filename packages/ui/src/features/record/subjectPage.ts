@@ -14,6 +14,8 @@ const pages: Record<record.RecordSubject, { path: (id: string) => string; side?:
   'reference-standard': { path: (id) => `standards/${id}`, side: 'supplier' },
   member: { path: () => 'members' },
   organisation: { path: () => 'members' },
+  invitation: { path: () => 'members' },
+  relationship: { path: () => 'relationships' },
 }
 
 /** Where the page of an event's subject lies in this side's app; undefined where it has none. */

@@ -2,6 +2,7 @@ import { createPinia } from 'pinia'
 import { createApp, type Component } from 'vue'
 import type { RouterOptions } from '../../session/router'
 import { createClient, provideClient } from '../../session/client'
+import { takeInvitation } from '../../session/invitationToken'
 import { createEvenruleRouter } from '../../session/router'
 import { rememberStores } from '../../session/stores'
 import { useSessionStore } from '../../session/useSessionStore'
@@ -17,6 +18,7 @@ export interface AppOptions {
 
 /** Builds one side's app and puts it on the page. */
 export function startApp({ side, root, routes }: AppOptions): void {
+  takeInvitation()
   const pinia = createPinia().use(rememberStores)
   const client = createClient({ onSignedOut: () => useSessionStore(pinia).expire() })
   const router = createEvenruleRouter({
@@ -24,6 +26,7 @@ export function startApp({ side, root, routes }: AppOptions): void {
     pages: {
       signIn: () => import('./SignInPage.vue'),
       signedOut: () => import('./SignedOutPage.vue'),
+      invitation: () => import('../invitations/InvitationPage.vue'),
       noOrganisation: () => import('./NoOrganisationPage.vue'),
       notFound: () => import('./NotFoundPage.vue'),
     },

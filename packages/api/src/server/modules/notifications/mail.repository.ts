@@ -1,21 +1,29 @@
 import { and, asc, eq, isNull, lt, lte } from 'drizzle-orm'
 import type { Side } from '../../../contract/access'
-import type { Database } from '../../db/database'
+import type { Database, Transaction } from '../../db/database'
+import { selectInvitationToMail, type InvitationToMail } from '../invitations/invitations.mail.repository'
 import { users } from '../sign-in/sign-in.table'
 import { messages, outbox } from './notifications.table'
 
-/** A mail that this worker has taken, with everything needed to write it. */
-export interface TakenMail {
-  id: string
+/** A message as its mail is written from it. */
+export interface MessageToMail {
+  of: 'message'
   messageId: string
-  /** Which try this is, from 1. */
-  attempt: number
   to: { name: string; address: string }
   side: Side
   subject: string
   body: string
   link: string
   createdAt: string
+}
+
+/** A mail that this worker has taken, with everything needed to write it. */
+export interface TakenMail {
+  id: string
+  /** Which try this is, from 1. */
+  attempt: number
+  /** Null for the mail of an invitation that was sent again, used, revoked or has run out meanwhile. */
+  content: MessageToMail | InvitationToMail | null
 }
 
 /**
@@ -29,33 +37,38 @@ export async function takeDueMail(
 ): Promise<TakenMail | undefined> {
   return database.transaction(async (tx) => {
     const [row] = await tx
-      .select({
-        id: outbox.id,
-        messageId: outbox.messageId,
-        attempts: outbox.attempts,
-        name: users.name,
-        address: users.email,
-        side: messages.side,
-        subject: messages.subject,
-        body: messages.body,
-        link: messages.link,
-        createdAt: messages.createdAt,
-      })
+      .select()
       .from(outbox)
-      .innerJoin(messages, and(eq(messages.orgId, outbox.orgId), eq(messages.id, outbox.messageId)))
-      .innerJoin(users, eq(users.id, messages.userId))
       .where(and(isNull(outbox.sentAt), lte(outbox.nextAttemptAt, now), lt(outbox.attempts, attempts)))
       .orderBy(asc(outbox.nextAttemptAt), asc(outbox.id))
       .limit(1)
-      .for('update', { of: outbox, skipLocked: true })
+      .for('update', { skipLocked: true })
     if (!row) return undefined
-    const { attempts: before, name, address, ...mail } = row
-    await tx
-      .update(outbox)
-      .set({ attempts: before + 1, nextAttemptAt: until })
-      .where(eq(outbox.id, row.id))
-    return { ...mail, attempt: before + 1, to: { name, address } }
+    const { id, orgId, messageId, invitationId, invitationNonce } = row
+    const attempt = row.attempts + 1
+    await tx.update(outbox).set({ attempts: attempt, nextAttemptAt: until }).where(eq(outbox.id, id))
+    const content =
+      invitationId && invitationNonce
+        ? await selectInvitationToMail(tx, { orgId, invitationId, nonce: invitationNonce }, now)
+        : await selectMessageToMail(tx, orgId, messageId ?? '')
+    return { id, attempt, content }
   })
+}
+
+async function selectMessageToMail(
+  tx: Transaction,
+  orgId: string,
+  messageId: string,
+): Promise<MessageToMail> {
+  const { side, subject, body, link, createdAt } = messages
+  const [row] = await tx
+    .select({ name: users.name, address: users.email, mail: { side, subject, body, link, createdAt } })
+    .from(messages)
+    .innerJoin(users, eq(users.id, messages.userId))
+    .where(and(eq(messages.orgId, orgId), eq(messages.id, messageId)))
+  if (!row) throw new Error('The message of a mail is not there.')
+  const { name, address, mail } = row
+  return { of: 'message', messageId, to: { name, address }, ...mail }
 }
 
 /** Notes that a mail has left. */
@@ -63,14 +76,15 @@ export async function markSent(database: Database, id: string, at: string): Prom
   await database.update(outbox).set({ sentAt: at, lastError: null }).where(eq(outbox.id, id))
 }
 
-/** Notes why a mail did not leave, and when to try again. */
+/** Notes why a mail did not leave, and when to try again; `attempts` where it is the last word. */
 export async function markFailed(
   database: Database,
   id: string,
-  failure: { error: string; nextAttemptAt: string },
+  failure: { error: string; nextAttemptAt?: string; attempts?: number },
 ): Promise<void> {
+  const { error: lastError, ...when } = failure
   await database
     .update(outbox)
-    .set({ lastError: failure.error, nextAttemptAt: failure.nextAttemptAt })
+    .set({ lastError, ...when })
     .where(and(eq(outbox.id, id), isNull(outbox.sentAt)))
 }

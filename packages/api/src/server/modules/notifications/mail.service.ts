@@ -2,13 +2,18 @@ import type { Logger } from 'pino'
 import type { Side } from '../../../contract/access'
 import type { Database } from '../../db/database'
 import type { MailTransport, OutgoingMail } from '../../integrations/mail'
-import { markFailed, markSent, takeDueMail, type TakenMail } from './mail.repository'
+import type { InvitationToMail } from '../invitations/invitations.mail.repository'
+import { invitationMail } from '../invitations/invitations.messages'
+import { linkOf, tokenOf } from '../invitations/invitations.token'
+import { markFailed, markSent, takeDueMail, type MessageToMail, type TakenMail } from './mail.repository'
 
 export interface MailDependencies {
   /** Under the system role: mail goes to the members of every organisation. */
   database: Database
   transport: MailTransport
   origins: Record<Side, string>
+  /** Derives the tokens of invitations, which are stored nowhere. */
+  invitationSecret: string
   logger: Logger
   clock: () => Date
 }
@@ -18,6 +23,9 @@ export const claimFor = 5 * 60_000
 /** After as many tries, about two days, a mail is left with its last error; the message stays in the app. */
 export const attemptsAtMost = 16
 
+/** Why the mail of an invitation is left. */
+const noLongerWanted = 'The invitation was sent again, used, revoked or has run out.'
+
 const firstDelay = 30_000
 const longestDelay = 6 * 3_600_000
 
@@ -25,8 +33,29 @@ const longestDelay = 6 * 3_600_000
 export const delayAfter = (attempt: number): number =>
   Math.min(firstDelay * 2 ** Math.min(attempt - 1, 20), longestDelay)
 
+/** Writes what was taken; undefined for what is not wanted any more. */
+export function writeMail(
+  { id, content }: TakenMail,
+  { origins, invitationSecret }: Pick<MailDependencies, 'origins' | 'invitationSecret'>,
+): OutgoingMail | undefined {
+  if (content === null) return undefined
+  return content.of === 'message'
+    ? mailOfMessage(content, origins)
+    : mailOfInvitation(id, content, linkOf(origins[content.side], tokenOf(invitationSecret, content)))
+}
+
+/** The mail of an invitation, to an address that may be no user's yet. */
+function mailOfInvitation(id: string, invitation: InvitationToMail, link: string): OutgoingMail {
+  return {
+    messageId: `<${id}@${new URL(link).hostname}>`,
+    to: { name: '', address: invitation.email },
+    ...invitationMail(invitation, link),
+    date: invitation.sentAt,
+  }
+}
+
 /** The mail of one message: its words, and a link into the app of the side it is for. */
-export function writeMail(mail: TakenMail, origins: Record<Side, string>): OutgoingMail {
+function mailOfMessage(mail: MessageToMail, origins: Record<Side, string>): OutgoingMail {
   const address = new URL(mail.link, origins[mail.side])
   const text = [
     mail.body,
@@ -72,10 +101,16 @@ export async function sendDueMail(
 }
 
 async function deliver(dependencies: MailDependencies, mail: TakenMail): Promise<boolean> {
-  const { database, transport, origins, logger, clock } = dependencies
-  const named = { outbox: mail.id, message: mail.messageId, attempt: mail.attempt }
+  const { database, transport, logger, clock } = dependencies
+  const named = { outbox: mail.id, attempt: mail.attempt }
+  const written = writeMail(mail, dependencies)
+  if (!written) {
+    await markFailed(database, mail.id, { error: noLongerWanted, attempts: attemptsAtMost })
+    logger.info(named, 'mail no longer wanted')
+    return false
+  }
   try {
-    await transport.send(writeMail(mail, origins))
+    await transport.send(written)
   } catch (error) {
     const nextAttemptAt = after(clock(), delayAfter(mail.attempt))
     logger.warn({ ...named, err: error, nextAttemptAt }, 'mail not sent')

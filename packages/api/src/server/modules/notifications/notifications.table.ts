@@ -1,7 +1,8 @@
 import { sql } from 'drizzle-orm'
-import { foreignKey, index, integer, pgPolicy, pgTable, text, unique, uuid } from 'drizzle-orm/pg-core'
+import { check, foreignKey, index, integer, pgPolicy, pgTable, text, unique, uuid } from 'drizzle-orm/pg-core'
 import type { MessageKind } from '../../../contract/messages'
 import { currentOrg, currentUser, instant, ownerColumn, primaryId } from '../../db/columns'
+import { invitations } from '../invitations/invitations.table'
 import { organisations } from '../organisations/organisations.table'
 import { users } from '../sign-in/sign-in.table'
 
@@ -45,13 +46,19 @@ export const messages = pgTable(
   ],
 )
 
-/** Mail waiting to be sent, once each; the worker's alone. */
+/**
+ * Mail waiting to be sent, once each; the worker's alone. It is the mail of a message, or of an invitation, whose
+ * address is no user's yet.
+ */
 export const outbox = pgTable(
   'outbox',
   {
     ...ownerColumn,
     id: primaryId(),
-    messageId: uuid().notNull(),
+    messageId: uuid(),
+    invitationId: uuid(),
+    /** Which sending of the invitation it is: once that was sent again, this mail is not wanted any more. */
+    invitationNonce: text(),
     attempts: integer().notNull().default(0),
     nextAttemptAt: instant().notNull(),
     sentAt: instant(),
@@ -67,6 +74,15 @@ export const outbox = pgTable(
       columns: [t.orgId, t.messageId],
       foreignColumns: [messages.orgId, messages.id],
     }),
+    foreignKey({
+      name: 'outbox_invitation_fk',
+      columns: [t.orgId, t.invitationId],
+      foreignColumns: [invitations.orgId, invitations.id],
+    }),
+    check(
+      'outbox_one_thing',
+      sql`(message_id is null) <> (invitation_id is null) and (invitation_id is null) = (invitation_nonce is null)`,
+    ),
     pgPolicy('outbox_system', {
       as: 'permissive',
       for: 'all',

@@ -43,6 +43,19 @@ export async function selectMember(tenant: Tenant, userId: string): Promise<Memb
   return row
 }
 
+/** The member whose membership goes on by this day and who has this address, in whatever case. */
+export async function selectMemberWithAddress(
+  tenant: Tenant,
+  email: string,
+  day: string,
+): Promise<MemberListed | undefined> {
+  const [row] = await fromMembers(
+    tenant,
+    and(eq(sql`lower(${person.email})`, email.toLowerCase()), goesOn(day)),
+  )
+  return row
+}
+
 /** Changes a membership that still has the version the sender saw; false where it has not. */
 export async function updateMember(
   { tx, organisationId }: Tenant,

@@ -19,7 +19,7 @@ import {
   type MemberListed,
 } from './members.repository'
 import { lastAdmin } from './organisations.errors'
-import { todayOf } from './organisations.lookup.service'
+import { hasEnded, todayOf } from './organisations.lookup.service'
 import { selectOrganisation, updateOrganisation } from './organisations.repository'
 
 /** One page of this organisation's members. */
@@ -74,8 +74,7 @@ async function memberById(tenant: Tenant, userId: string): Promise<MemberListed>
 
 function asMember({ membership, name, email }: MemberListed, today: string): Member {
   const { userId, roles, createdAt, endsOn, rowVersion } = membership
-  const ended = endsOn !== null && endsOn < today
-  return { id: userId, name, email, roles, createdAt, endsOn, ended, rowVersion }
+  return { id: userId, name, email, roles, createdAt, endsOn, ended: hasEnded(endsOn, today), rowVersion }
 }
 
 /** Name and time zone of this organisation. */

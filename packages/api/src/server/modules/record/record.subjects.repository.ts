@@ -1,12 +1,15 @@
 import { and, eq, inArray } from 'drizzle-orm'
+import { alias } from 'drizzle-orm/pg-core'
 import type { RecordSubject } from '../../../contract/record'
 import type { Tenant } from '../../db/tenant'
 import { agreements, agreementVersions } from '../agreements/agreements.table'
 import { gauges, referenceStandards } from '../gauges/gauges.table'
 import { houseTerms } from '../house-terms/house-terms.table'
+import { invitations } from '../invitations/invitations.table'
 import { namesOfPeople } from '../organisations/people.repository'
 import { organisations } from '../organisations/organisations.table'
 import { characteristics, measuringTasks, parts } from '../parts/parts.table'
+import { relationships } from '../relationships/relationships.table'
 import { requests } from '../requests/requests.table'
 import { challenges } from '../reviews/reviews.table'
 import { studies } from '../studies/studies.table'
@@ -166,6 +169,24 @@ const finders: Record<RecordSubject, Finder> = {
   },
   member: async (tenant, ids) =>
     [...(await namesOfPeople(tenant, ids))].map(([id, label]) => ({ id, label, pageId: id })),
+  invitation: async ({ tx }, ids) => {
+    const rows = await tx
+      .select({ id: invitations.id, email: invitations.email, supplier: invitations.supplierName })
+      .from(invitations)
+      .where(inArray(invitations.id, ids))
+    return rows.map(({ id, email, supplier }) => ({ id, label: supplier ?? email, pageId: id }))
+  },
+  relationship: async ({ tx }, ids) => {
+    const supplier = alias(organisations, 'supplier')
+    const customer = alias(organisations, 'customer')
+    const rows = await tx
+      .select({ id: relationships.id, supplier: supplier.name, customer: customer.name })
+      .from(relationships)
+      .innerJoin(supplier, eq(supplier.id, relationships.supplierOrgId))
+      .innerJoin(customer, eq(customer.id, relationships.customerOrgId))
+      .where(inArray(relationships.id, ids))
+    return rows.map((row) => ({ id: row.id, label: `${row.supplier} and ${row.customer}`, pageId: row.id }))
+  },
   organisation: async ({ tx }, ids) => {
     const rows = await tx
       .select({ id: organisations.id, label: organisations.name })

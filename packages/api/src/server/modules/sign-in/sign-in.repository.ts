@@ -1,12 +1,12 @@
-import { sql } from 'drizzle-orm'
+import { eq, sql } from 'drizzle-orm'
 import type { Role } from '../../../contract/access'
 import { newId } from '../../db/columns'
-import type { Database } from '../../db/database'
+import type { Database, Transaction } from '../../db/database'
 import { withPerson } from '../../db/tenant'
 import type { Identified } from '../../integrations/oidc'
-import { securityEvents } from './sign-in.table'
+import { securityEvents, users } from './sign-in.table'
 
-export type SecurityEventKind = 'sign-in' | 'sign-out' | 'sign-out-everywhere' | 'sign-in-refused'
+export type SecurityEventKind = 'sign-in' | 'sign-out' | 'sign-out-everywhere' | 'sign-in-refused' | 'invitation-refused'
 
 /** Finds or makes the person of a verified sign-in, keyed by issuer and subject; returns their id. */
 export async function personOf(database: Database, identified: Identified, at: string): Promise<string> {
@@ -40,6 +40,33 @@ export async function membershipsOf(
     )
     return rows
   })
+}
+
+/** Where a person was a member until a day that is over, by each organisation's own calendar. */
+export async function endedMembershipsOf(
+  database: Database,
+  userId: string,
+  now: string,
+): Promise<{ name: string; endsOn: string }[]> {
+  return withPerson(database, userId, async (tx) => {
+    const { rows } = await tx.execute<{ name: string; endsOn: string }>(
+      sql`select org_name as name, ends_on as "endsOn" from ended_memberships_of_person(${userId}::uuid, ${now}::timestamptz)`,
+    )
+    return rows
+  })
+}
+
+/** The address of the person who acts, and whether their provider has verified it. */
+export async function selectOwnAddress(
+  tx: Transaction,
+  userId: string,
+): Promise<{ email: string; verified: boolean }> {
+  const [row] = await tx
+    .select({ email: users.email, verified: users.emailVerified })
+    .from(users)
+    .where(eq(users.id, userId))
+  if (!row) throw new Error('The person signed in is not visible to themselves.')
+  return row
 }
 
 /** Appends to the log of sign-ins, sign-outs and refusals; never with tokens. */

@@ -5,7 +5,7 @@ import { absoluteLimit, type PendingSignIn, type SignedIn } from '../../http/ses
 import { IdentityError, type Identity } from '../../integrations/oidc'
 import type { Sessions } from '../../integrations/sessions'
 import type { Services } from '../../services'
-import { logSecurityEvent, membershipsOf, personOf } from './sign-in.repository'
+import { endedMembershipsOf, logSecurityEvent, membershipsOf, personOf } from './sign-in.repository'
 
 export interface SignInDependencies {
   database: Database
@@ -153,7 +153,8 @@ export async function readSessionOf(
   services: Services,
   person: SignedIn,
 ) {
-  const memberships = await membershipsOf(database, person.userId, services.clock().toISOString())
+  const now = services.clock().toISOString()
+  const memberships = await membershipsOf(database, person.userId, now)
   return {
     person: { ...person, id: person.userId },
     endsAt: new Date(Date.parse(person.signedInAt) + absoluteLimit).toISOString(),
@@ -164,6 +165,7 @@ export async function readSessionOf(
       roles: row.roles,
       sides: [...(row.supplies ? (['supplier'] as const) : []), ...(row.buys ? (['customer'] as const) : [])],
     })),
+    ended: await endedMembershipsOf(database, person.userId, now),
     apps: { supplier: origins.supplier, customer: origins.customer },
   }
 }

@@ -1,0 +1,2 @@
+export { default as InvitationsSection } from './InvitationsSection.vue'
+export { default as InvitationEntry } from './InvitationEntry.vue'
