@@ -36,7 +36,9 @@ function interactionRoutes(provider: Provider, { apps }: Settings, newcomers: Ne
         app: app?.name ?? '',
         filter: filterOf(request),
         others: newcomers.all(),
-        expected: [...people, ...newcomers.all()].find(({ sub, email }) => hint !== undefined && (sub === hint || email === hint)),
+        expected: [...people, ...newcomers.all()].find(
+          ({ sub, email }) => hint !== undefined && (sub === hint || email === hint),
+        ),
         fresh: String(params.prompt ?? '').includes('login') || params.max_age !== undefined,
       }),
     )
@@ -68,7 +70,13 @@ function interactionRoutes(provider: Provider, { apps }: Settings, newcomers: Ne
       response
         .status(422)
         .type('html')
-        .send(messagePage('This is no e-mail address', 'Go back and enter one, such as name@company.example.', apps))
+        .send(
+          messagePage(
+            'This is no e-mail address',
+            'Go back and enter one, such as name@company.example.',
+            apps,
+          ),
+        )
       return
     }
     await provider.interactionFinished(request, response, {

@@ -59,7 +59,9 @@ const newPersonForm = (uid: string): Html => html`
     <form class="field" method="post" action="/interaction/${uid}/new">
       <label>E-mail<input name="email" type="email" required maxlength="254" /></label>
       <label>Name<input name="name" maxlength="200" /></label>
-      <label class="check"><input name="verified" type="checkbox" value="yes" checked />Address confirmed</label>
+      <label class="check"
+        ><input name="verified" type="checkbox" value="yes" checked />Address confirmed</label
+      >
       <button class="plain-button">Sign in as this person</button>
     </form>
   </section>

@@ -28,7 +28,12 @@ export const people: Person[] = demonstration.people.map(({ organisation, ...per
   const found = organisation === null ? undefined : organisations.get(organisation)
   if (organisation !== null && !found)
     throw new Error(`${person.sub} names an organisation that is not listed.`)
-  return { ...person, verified: true, organisation: found?.name, side: found?.side ?? 'belongs to nobody yet' }
+  return {
+    ...person,
+    verified: true,
+    organisation: found?.name,
+    side: found?.side ?? 'belongs to nobody yet',
+  }
 })
 
 /** The person with this subject. */

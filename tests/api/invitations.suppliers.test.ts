@@ -28,7 +28,12 @@ const count = async (table: string) =>
 describe('inviting a supplier', () => {
   it('sends a mail into the supplier app, which names the supplier as the customer does', async () => {
     const answer = await world.inviteSupplier({
-      ...{ email: 'sales@gears.example', supplierName: 'Gear shop', supplierNumber: 'B-1', message: 'Hello.' },
+      ...{
+        email: 'sales@gears.example',
+        supplierName: 'Gear shop',
+        supplierNumber: 'B-1',
+        message: 'Hello.',
+      },
     })
     expect(answer).toMatchObject({
       ...{ kind: 'supplier', supplierName: 'Gear shop', supplierNumber: 'B-1', roles: [], endsOn: null },
@@ -82,10 +87,19 @@ describe('a new supplier', () => {
     })
     const answer = await world.accept(token, person, { newOrganisation: shop })
     expect(answer.status).toBe(200)
-    const { organisationId, relationshipId } = answer.body as { organisationId: string; relationshipId: string }
+    const { organisationId, relationshipId } = answer.body as {
+      organisationId: string
+      relationshipId: string
+    }
     const session = await as('supplier', person).call(signIn.readSession, {})
     expect(session.organisations).toMatchObject([
-      { id: organisationId, name: shop.name, timeZone: 'Europe/Vienna', roles: ['admin'], sides: ['supplier'] },
+      {
+        id: organisationId,
+        name: shop.name,
+        timeZone: 'Europe/Vienna',
+        roles: ['admin'],
+        sides: ['supplier'],
+      },
     ])
     const sites = await as('supplier', person).call(gauges.listSites, { organisationId })
     expect(sites.items.map(({ name }) => name)).toEqual(['Hall 1'])
@@ -137,7 +151,10 @@ describe('a new supplier', () => {
     [{ newOrganisation: { ...shop, name: ' ' } }, 'body.newOrganisation.name'],
     [{ newOrganisation: { ...shop, timeZone: 'Mars/Base' } }, 'body.newOrganisation.timeZone'],
     [{ newOrganisation: { ...shop, site: '' } }, 'body.newOrganisation.site'],
-    [{ newOrganisation: shop, organisationId: '0198f5a0-0000-7000-8000-000000000001' }, 'body.organisationId'],
+    [
+      { newOrganisation: shop, organisationId: '0198f5a0-0000-7000-8000-000000000001' },
+      'body.organisationId',
+    ],
   ])('is refused with %j at its field, and nothing is left of it', async (more, path) => {
     const person = await world.somebody(`Careless ${Math.random()}`)
     const token = await invited(person.email)
@@ -183,7 +200,9 @@ describe('an organisation that is there', () => {
     expect((await world.open(ofEngineer, engineer)).body.choices).toEqual([
       { id: supplier.id, name: supplier.name, hindrance: 'not-admin' },
     ])
-    expect((await world.accept(ofEngineer, engineer, { organisationId: supplier.id })).body.code).toBe('not-allowed')
+    expect((await world.accept(ofEngineer, engineer, { organisationId: supplier.id })).body.code).toBe(
+      'not-allowed',
+    )
     expect((await world.accept(ofEngineer, engineer, { organisationId: elsewhere.id })).status).toBe(404)
 
     const token = await invited(owner.email)
@@ -218,7 +237,9 @@ describe('an organisation that is there', () => {
     const refused = await world.accept(token, second, { organisationId: itself.id })
     expect(refused.body).toMatchObject({ status: 409, code: 'supplier-itself' })
     // Founding another with it is possible.
-    expect((await world.accept(token, second, { newOrganisation: { ...shop, name: 'Own shop' } })).status).toBe(200)
+    expect(
+      (await world.accept(token, second, { newOrganisation: { ...shop, name: 'Own shop' } })).status,
+    ).toBe(200)
   })
 
   it('gets one relationship where its admins accept two invitations at once', async () => {
@@ -307,7 +328,9 @@ describe('past the services', () => {
 it('a person can try only so many links in a minute, and others are not held up by it', async () => {
   const session: RequestHandler = (req, _res, next) => {
     const userId = req.headers['x-person']
-    Object.assign(req, { session: { person: { userId, name: '', email: '', authenticatedAt: '', signedInAt: '' } } })
+    Object.assign(req, {
+      session: { person: { userId, name: '', email: '', authenticatedAt: '', signedInAt: '' } },
+    })
     next()
   }
   const app = createApp({

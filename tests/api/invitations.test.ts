@@ -43,7 +43,12 @@ describe('inviting a member', () => {
 
   it('from the supplier app leads to the supplier app', async () => {
     await world.inviteMember(
-      ...[{ email: 'shop@people.example' }, world.people.owner, 'supplier', world.organisations.supplier] as const,
+      ...([
+        { email: 'shop@people.example' },
+        world.people.owner,
+        'supplier',
+        world.organisations.supplier,
+      ] as const),
     )
     const [mail] = await world.mails()
     expect(mail?.text).toContain(`${origins.supplier}/invitation#`)
@@ -159,7 +164,10 @@ describe('accepting as a member', () => {
     const { items } = await world.harness
       .as('customer', world.people.buyer)
       .call(messages.listMessages, own(), { query: { kind: 'invitation' } })
-    expect(items[0]).toMatchObject({ subject: `${person.name} has joined`, link: expect.stringMatching(/members$/) })
+    expect(items[0]).toMatchObject({
+      subject: `${person.name} has joined`,
+      link: expect.stringMatching(/members$/),
+    })
     const mail = (await world.mails()).find(({ subject }) => subject === `${person.name} has joined`)
     expect(mail?.to.address).toBe(world.people.buyer.email)
     const events = await world.harness
@@ -238,9 +246,14 @@ describe('accepting as a member', () => {
     const token = await world.token(person.email)
     const revoked = await world.act(`invitations/${invited.id}/revoke`, { expectedVersion: 1 })
     expect(revoked.body).toMatchObject({ state: 'revoked', rowVersion: 2 })
-    expect((await world.accept(token, person)).body).toMatchObject({ status: 409, code: 'invitation-revoked' })
+    expect((await world.accept(token, person)).body).toMatchObject({
+      status: 409,
+      code: 'invitation-revoked',
+    })
     for (const act of ['resend', 'revoke'])
-      expect((await world.act(`invitations/${invited.id}/${act}`, { expectedVersion: 2 })).body).toMatchObject({
+      expect(
+        (await world.act(`invitations/${invited.id}/${act}`, { expectedVersion: 2 })).body,
+      ).toMatchObject({
         ...{ status: 409, code: 'wrong-state' },
       })
   })
@@ -279,7 +292,11 @@ describe('accepting as a member', () => {
     const refused = await world.accept(token, person)
     expect(refused.body).toMatchObject({ status: 409, code: 'member-already' })
     const buyer = world.harness.as('customer', world.people.buyer)
-    await buyer.call(organisations.endMember, { ...own(), userId: person.id }, { body: { expectedVersion: 1 } })
+    await buyer.call(
+      organisations.endMember,
+      { ...own(), userId: person.id },
+      { body: { expectedVersion: 1 } },
+    )
     const session = await world.harness.as('customer', person).call(signIn.readSession, {})
     expect([session.organisations, session.ended]).toEqual([
       [],
@@ -297,7 +314,9 @@ describe('accepting as a member', () => {
     expect(answers.filter(({ status }) => status === 200)).toHaveLength(1)
     for (const { status, body } of answers)
       if (status !== 200) expect([status, body.code]).toEqual([409, 'invitation-used'])
-    const { rowCount } = await world.harness.owner.query('select from memberships where user_id = $1', [person.id])
+    const { rowCount } = await world.harness.owner.query('select from memberships where user_id = $1', [
+      person.id,
+    ])
     expect(rowCount).toBe(1)
     const joined = await world.harness.owner.query(
       `select from record_events where type = 'member.joined' and subject_id = $1`,
@@ -316,7 +335,9 @@ describe('accepting as a member', () => {
         world.act(`invitations/${id}/revoke`, { expectedVersion: 1 }),
       ])
       expect([accepted.status, revoked.status].sort()).toEqual([200, 409])
-      const { rowCount } = await world.harness.owner.query('select from memberships where user_id = $1', [person.id])
+      const { rowCount } = await world.harness.owner.query('select from memberships where user_id = $1', [
+        person.id,
+      ])
       expect(rowCount).toBe(accepted.status === 200 ? 1 : 0)
     }
   })
@@ -345,7 +366,9 @@ describe('tokens', () => {
     )
     expect((await world.accept('guessed', person)).body.code).toBe('invitation-unknown')
     expect((await world.accept(token, person)).body.code).toBe('invitation-unknown')
-    expect((await list({ search: person.email })).items).toMatchObject([{ id, state: 'pending', rowVersion: 1 }])
+    expect((await list({ search: person.email })).items).toMatchObject([
+      { id, state: 'pending', rowVersion: 1 },
+    ])
   })
 
   it('of more than a text’s length, or none, are refused at their field', async () => {

@@ -55,15 +55,25 @@ export async function startInvitations() {
     mails,
     /** Every line the worker has logged. */
     logged,
-    inviteMember: (body: Record<string, unknown>, by = people.buyer, side: Side = 'customer', of = customer) =>
+    inviteMember: (
+      body: Record<string, unknown>,
+      by = people.buyer,
+      side: Side = 'customer',
+      of = customer,
+    ) =>
       harness.as(side, by).call(invitations.inviteMember, at(of), { body: { roles: ['reader'], ...body } }),
     inviteSupplier: (body: Record<string, unknown>, by = people.buyer, of = customer) =>
       harness.as('customer', by).call(invitations.inviteSupplier, at(of), {
         body: { supplierName: 'Gear shop', ...body },
       }),
     /** The raw answer to an act on an invitation, as its path below the organisation names it. */
-    act: (path: string, body: Record<string, unknown>, by = people.buyer, side: Side = 'customer', of = customer) =>
-      harness.as(side, by).send('post', `/organisations/${of.id}/${path}`).send(body),
+    act: (
+      path: string,
+      body: Record<string, unknown>,
+      by = people.buyer,
+      side: Side = 'customer',
+      of = customer,
+    ) => harness.as(side, by).send('post', `/organisations/${of.id}/${path}`).send(body),
     /** The token of the newest mail to an address. */
     async token(address: string): Promise<string> {
       const mail = (await mails()).filter(({ to }) => to.address === address).pop()

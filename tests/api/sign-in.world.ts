@@ -51,7 +51,12 @@ export async function startSignInWorld() {
     clock,
   )
   const identity = openIdentity({ origins, oidc: { issuer: provider.address, ...clients } })
-  const routes = allRoutes({ database: harness.database, config: { origins, invitationSecret }, identity, sessions })
+  const routes = allRoutes({
+    database: harness.database,
+    config: { origins, invitationSecret },
+    identity,
+    sessions,
+  })
   for (const side of sides)
     servers[side].server.on(
       'request',

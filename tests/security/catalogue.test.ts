@@ -314,7 +314,15 @@ describe('roles', () => {
     const read = [
       ...['agreement_signatures', 'agreement_versions', 'agreements', 'calibrations', 'carry_overs'],
       ...['challenges', 'characteristics', 'conditions', 'decisions', 'gauges', 'measuring_tasks'],
-      ...['invitations', 'messages', 'organisations', 'outbox', 'part_revisions', 'parts', 'reference_standards'],
+      ...[
+        'invitations',
+        'messages',
+        'organisations',
+        'outbox',
+        'part_revisions',
+        'parts',
+        'reference_standards',
+      ],
       ...['reinstatements', 'relationships', 'reminders', 'request_answers', 'request_tasks', 'requests'],
       ...['standing_calibrations', 'standing_events', 'submission_texts', 'submissions', 'users'],
     ]

@@ -171,20 +171,24 @@ export async function startWorld() {
 
   // Invitations that are open: of a member on either side, and of a supplier.
   const invite = (side: Side, email: string) =>
-    harness.as(side, insider).call(
-      invitations.inviteMember,
-      { organisationId: victims[side].id },
-      { body: { email, roles: ['reader'] } },
-    )
+    harness
+      .as(side, insider)
+      .call(
+        invitations.inviteMember,
+        { organisationId: victims[side].id },
+        { body: { email, roles: ['reader'] } },
+      )
   const invited: Record<Side, { id: string }> = {
     supplier: await invite('supplier', 'one@people.example'),
     customer: await invite('customer', 'two@people.example'),
   }
-  const invitedSupplier = await harness.as('customer', insider).call(
-    invitations.inviteSupplier,
-    { organisationId: customer.id },
-    { body: { email: 'three@people.example', supplierName: 'Three' } },
-  )
+  const invitedSupplier = await harness
+    .as('customer', insider)
+    .call(
+      invitations.inviteSupplier,
+      { organisationId: customer.id },
+      { body: { email: 'three@people.example', supplierName: 'Three' } },
+    )
 
   // The worker's chore, under a clock that runs ahead to the days before the request is due.
   const system = openDatabase(harness.urlAs('evenrule_system'), 1)

@@ -180,9 +180,7 @@ export const openedInvitationSchema = z.object({
   message: z.string(),
   expiresOn: calendarDate,
   /** For which of the person's organisations a supplier's invitation can be accepted; empty for a member's. */
-  choices: z.array(
-    z.object({ id: uuid, name: z.string(), hindrance: z.enum(acceptHindrances).nullable() }),
-  ),
+  choices: z.array(z.object({ id: uuid, name: z.string(), hindrance: z.enum(acceptHindrances).nullable() })),
   /** Where it led, once the person has accepted it; null otherwise. */
   acceptedFor: uuid.nullable(),
 })

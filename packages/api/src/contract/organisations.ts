@@ -85,10 +85,7 @@ const isTimeZone = (name: string): boolean => {
 }
 
 /** An IANA time zone, whose calendar judges days. */
-export const timeZone = z
-  .string()
-  .max(60)
-  .refine(isTimeZone, 'Choose a time zone such as Europe/Berlin.')
+export const timeZone = z.string().max(60).refine(isTimeZone, 'Choose a time zone such as Europe/Berlin.')
 
 /** What an organisation is called; its partners see it too. */
 export const organisationName = line(120)

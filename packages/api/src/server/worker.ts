@@ -29,7 +29,17 @@ while (!stopped()) {
     logger.error({ err: error }, 'reminders could not be looked for')
   }
   try {
-    await sendDueMail({ database, transport, origins: config.origins, invitationSecret: config.invitationSecret, logger, clock }, stopped)
+    await sendDueMail(
+      {
+        database,
+        transport,
+        origins: config.origins,
+        invitationSecret: config.invitationSecret,
+        logger,
+        clock,
+      },
+      stopped,
+    )
   } catch (error) {
     // The database may be away for a while; the mail waits in it and is looked for again.
     logger.error({ err: error }, 'mail could not be looked for')

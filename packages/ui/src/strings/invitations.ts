@@ -18,6 +18,7 @@ export const invitationWords = {
   show: 'Show',
   any: 'any',
   none: 'none',
+  nothing: 'nothing to do',
   resend: 'Send again',
   resendNamed: (email: string) => `Send again: ${email}`,
   resendTitle: (email: string) => `Send the invitation to ${email} again?`,
@@ -75,16 +76,19 @@ export const openInvitationWords = {
   enterAnswer: 'Open the link of the mail, or paste it here.',
   link: 'Link of the invitation',
   linkHint: 'The whole address from the mail, or the characters behind its # sign.',
-  linkWrong: 'This is no link of an invitation. Copy it whole from the newest mail; it ends with # and 43 characters.',
+  linkWrong:
+    'This is no link of an invitation. Copy it whole from the newest mail; it ends with # and 43 characters.',
   open: 'Open the invitation',
   strangerQuestion: 'Whom is this invitation for?',
   strangerAnswer:
     'For the address it was sent to. Sign in with that address; then you read what it says, before you accept anything.',
   signIn: 'Sign in and read it',
-  firstTime: 'Is it your first time here? The sign-in page lets you in by your address; nothing else is needed before.',
+  firstTime:
+    'Is it your first time here? The sign-in page lets you in by your address; nothing else is needed before.',
   memberQuestion: (organisation: string) => `Will you join ${organisation}?`,
   supplierQuestion: (organisation: string) => `Will you supply ${organisation} in Evenrule?`,
-  asks: (inviter: string | null, organisation: string) => (inviter ? `${inviter} of ${organisation}` : organisation),
+  asks: (inviter: string | null, organisation: string) =>
+    inviter ? `${inviter} of ${organisation}` : organisation,
   asMember: 'invites you as',
   asSupplier: 'invites you to accept for',
   yourCompany: 'your company',
@@ -104,7 +108,10 @@ export const openInvitationWords = {
   site: 'First site',
   siteHint: 'Where you measure, such as Hall 2 or Measuring room. More can follow.',
   siteMissing: 'Enter one place where you measure.',
-  accept: { member: 'Accept and join', supplier: 'Accept and begin' } satisfies Record<InvitationKind, string>,
+  accept: { member: 'Accept and join', supplier: 'Accept and begin' } satisfies Record<
+    InvitationKind,
+    string
+  >,
   signedInAs: (email: string) => `You are signed in as ${email}.`,
   another: 'Use another account',
   anotherLink: 'Enter another link',

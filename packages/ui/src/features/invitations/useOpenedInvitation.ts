@@ -38,7 +38,7 @@ export function useOpenedInvitation() {
   )
 
   const { data, error, loading, reload } = useLoaded(
-    () => [token.value, session.person?.id, ready.value],
+    () => [token.value, session.person?.id],
     async () =>
       token.value && session.person && !session.signedOut
         ? api.call(invitations.openInvitation, { body: { token: token.value } })

@@ -39,9 +39,7 @@ export async function selectInvitationToMail(
     .from(invitations)
     .innerJoin(organisations, eq(organisations.id, invitations.orgId))
     .leftJoin(users, eq(users.id, invitations.invitedBy))
-    .where(
-      and(eq(invitations.orgId, orgId), eq(invitations.id, invitationId), eq(invitations.nonce, nonce)),
-    )
+    .where(and(eq(invitations.orgId, orgId), eq(invitations.id, invitationId), eq(invitations.nonce, nonce)))
   if (!row) return null
   const { invitation, standing, organisation, inviter } = row
   const state = invitationState({ ...invitation, ...standing }, dayIn(row.timeZone, now))

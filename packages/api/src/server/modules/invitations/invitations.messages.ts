@@ -66,7 +66,10 @@ export interface MailedInvitation {
 }
 
 /** The mail of an invitation: who asks whom to do what, how, and until when. */
-export function invitationMail(invitation: MailedInvitation, link: string): { subject: string; text: string } {
+export function invitationMail(
+  invitation: MailedInvitation,
+  link: string,
+): { subject: string; text: string } {
   const { kind, organisation, inviter, supplierName, roles, endsOn, message, email, expiresOn } = invitation
   const who = inviter ? `${inviter} of ${organisation}` : organisation
   const asked =

@@ -2,7 +2,13 @@ import * as contract from '../../../contract/invitations'
 import { personRoute, tenantRoute, type Route } from '../../http/route'
 import { acceptInvitationOf } from './invitations.accept.service'
 import { openInvitationOf, refusalsLogged, type InvitationDependencies } from './invitations.find.service'
-import { inviteMemberOf, inviteSupplierOf, listOfInvitations, resendOf, revokeOf } from './invitations.service'
+import {
+  inviteMemberOf,
+  inviteSupplierOf,
+  listOfInvitations,
+  resendOf,
+  revokeOf,
+} from './invitations.service'
 
 export const invitationsRoutes = (dependencies: InvitationDependencies): Route[] => {
   const { invitationSecret: secret } = dependencies

@@ -47,9 +47,7 @@ export async function selectByToken(
 
 /** Uses an invitation up: a membership of the person, or the relationship of this organisation with the inviter. */
 export async function useInvitation({ tx, now }: Tenant, hash: string, relationshipId: string | null) {
-  await tx.execute(
-    sql`select accept_invitation(${hash}, ${relationshipId}::uuid, ${now}::timestamptz)`,
-  )
+  await tx.execute(sql`select accept_invitation(${hash}, ${relationshipId}::uuid, ${now}::timestamptz)`)
 }
 
 /** Makes this organisation, which does not exist yet, with the person as its admin. */

@@ -20,7 +20,13 @@ describe('the token of an invitation', () => {
   it('is taken for its own sending alone, whole', () => {
     const token = tokenOf(secret, sending)
     expect(isTokenOf(secret, sending, token)).toBe(true)
-    for (const wrong of ['', token.slice(1), `${token}x`, hashOf(token), tokenOf(secret, { ...sending, nonce: 'b' })])
+    for (const wrong of [
+      '',
+      token.slice(1),
+      `${token}x`,
+      hashOf(token),
+      tokenOf(secret, { ...sending, nonce: 'b' }),
+    ])
       expect(isTokenOf(secret, sending, wrong)).toBe(false)
   })
 

@@ -6,7 +6,8 @@ import { withPerson } from '../../db/tenant'
 import type { Identified } from '../../integrations/oidc'
 import { securityEvents, users } from './sign-in.table'
 
-export type SecurityEventKind = 'sign-in' | 'sign-out' | 'sign-out-everywhere' | 'sign-in-refused' | 'invitation-refused'
+export type SecurityEventKind =
+  'sign-in' | 'sign-out' | 'sign-out-everywhere' | 'sign-in-refused' | 'invitation-refused'
 
 /** Finds or makes the person of a verified sign-in, keyed by issuer and subject; returns their id. */
 export async function personOf(database: Database, identified: Identified, at: string): Promise<string> {
