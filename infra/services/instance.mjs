@@ -82,9 +82,14 @@ export class Instance {
     }
   }
 
-  /** Brings up everything that the servers stand on: packages, bundles, stand-ins, and a migrated database. */
-  async foundation() {
+  /** Brings up what keeps things, with the database as it is: packages, bundles, stand-ins, PostgreSQL. */
+  async stores() {
     await this.#together([this.#code(), this.database()])
+  }
+
+  /** Brings up everything that the servers stand on: the stores, and a migrated database. */
+  async foundation() {
+    await this.stores()
     await this.#chore('migrate', 'Bringing the database up to date')
   }
 

@@ -4,7 +4,7 @@ import { installPostgres } from './debian.mjs'
 import { Problem } from './say.mjs'
 
 const oldest = 15
-const needed = ['initdb', 'postgres', 'psql', 'pg_isready']
+const needed = ['initdb', 'postgres', 'psql', 'pg_isready', 'pg_dump', 'pg_restore']
 
 /** Folders with a complete server, by major version, the highest first. */
 function installed() {
@@ -15,6 +15,9 @@ function installed() {
     .filter(({ folder }) => needed.every((program) => existsSync(join(folder, program))))
     .sort((a, b) => b.version - a.version)
 }
+
+/** Folder of the newest programs that are installed; undefined when they have to be looked up on the path. */
+export const newestPrograms = () => installed()[0]?.folder
 
 /** A server that stands on the path, as on systems other than Debian. */
 function onPathFolder() {

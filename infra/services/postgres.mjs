@@ -122,6 +122,16 @@ async function makeCluster(folder, { binaries, user, secrets, log, signal, durab
 /** Settings that trade safety for speed, for a cluster that is thrown away. */
 const throwAway = ['fsync=off', 'synchronous_commit=off', 'full_page_writes=off', 'max_connections=200']
 
+/** The folder of the cluster that an instance has; undefined when it has none. */
+const existingCluster = ({ folder }) =>
+  [folder.postgres, folder.postgresFallback].find((path) => existsSync(path))
+
+/** Folder of the programs that fit the cluster of an instance which is running. */
+export function programsOfCluster(config, tools) {
+  const cluster = existingCluster(config)
+  return findBinaries(cluster && clusterVersion(cluster), tools)
+}
+
 /**
  * Finds or installs PostgreSQL, makes the private cluster when there is none, and describes how to start it.
  *
@@ -132,9 +142,7 @@ const throwAway = ['fsync=off', 'synchronous_commit=off', 'full_page_writes=off'
  */
 export async function preparePostgres(config, secrets, { say, signal, durable = true }) {
   const log = join(config.folder.log, 'setup.log')
-  const existing = [config.folder.postgres, config.folder.postgresFallback].find((folder) =>
-    existsSync(folder),
-  )
+  const existing = existingCluster(config)
   const binaries = await findBinaries(existing && clusterVersion(existing), { log, say, signal })
   const user = serverUser()
   const folder = existing ?? clusterFolder(config, user)

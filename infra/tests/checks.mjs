@@ -2,7 +2,7 @@ import { spawnSync } from 'node:child_process'
 import { existsSync } from 'node:fs'
 import { join } from 'node:path'
 import { root } from '../config.mjs'
-import { runShown } from './run-shown.mjs'
+import { runShown } from '../services/run-shown.mjs'
 
 const program = (path) => join(root, 'node_modules', path)
 

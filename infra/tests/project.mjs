@@ -3,7 +3,7 @@ import { join } from 'node:path'
 import { root } from '../config.mjs'
 import { readJson } from '../services/files.mjs'
 import { Problem } from '../services/say.mjs'
-import { runShown } from './run-shown.mjs'
+import { runShown } from '../services/run-shown.mjs'
 
 const config = 'tests/vitest.config.ts'
 

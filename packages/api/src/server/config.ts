@@ -61,16 +61,31 @@ export function readConfig(env: NodeJS.ProcessEnv): Config {
       customer: Number(env.EVENRULE_CUSTOMER_PORT ?? 4320),
     },
     dist: { supplier: need(env, 'SUPPLIER_DIST'), customer: need(env, 'CUSTOMER_DIST') },
-    s3: {
-      endpoint: need(env, 'S3_ENDPOINT'),
-      bucket: need(env, 'S3_BUCKET'),
-      accessKeyId: need(env, 'S3_ACCESS_KEY_ID'),
-      secretAccessKey: need(env, 'S3_SECRET_ACCESS_KEY'),
-      region: env.S3_REGION ?? 'us-east-1',
-    },
+    s3: readS3(env),
     enginesDir: need(env, 'ENGINES_DIR'),
     logLevel: env.LOG_LEVEL ?? 'info',
     clockFile: env.EVENRULE_CLOCK_FILE,
+  }
+}
+
+/** What backing up and restoring read: the owner of the database, the files, and where PostgreSQL's programs lie. */
+export interface KeeperConfig {
+  ownerUrl: string
+  s3: Config['s3']
+  enginesDir: string
+  migrationsDir: string
+  /** Folder of pg_dump, pg_restore and psql; without one they are looked up on the path. */
+  postgresBin: string | undefined
+}
+
+/** Reads what backing up and restoring need of the environment. */
+export function readKeeperConfig(env: NodeJS.ProcessEnv): KeeperConfig {
+  return {
+    ownerUrl: need(env, 'MIGRATOR_DATABASE_URL'),
+    s3: readS3(env),
+    enginesDir: env.ENGINES_DIR ?? 'packages/metrology/released',
+    migrationsDir: env.MIGRATIONS_DIR ?? 'infra/migrations',
+    postgresBin: env.POSTGRES_BIN || undefined,
   }
 }
 
@@ -87,6 +102,14 @@ export function readWorkerConfig(env: NodeJS.ProcessEnv): WorkerConfig {
     clockFile: env.EVENRULE_CLOCK_FILE,
   }
 }
+
+const readS3 = (env: NodeJS.ProcessEnv) => ({
+  endpoint: need(env, 'S3_ENDPOINT'),
+  bucket: need(env, 'S3_BUCKET'),
+  accessKeyId: need(env, 'S3_ACCESS_KEY_ID'),
+  secretAccessKey: need(env, 'S3_SECRET_ACCESS_KEY'),
+  region: env.S3_REGION ?? 'us-east-1',
+})
 
 const readOrigins = (env: NodeJS.ProcessEnv) => ({
   supplier: need(env, 'SUPPLIER_ORIGIN'),

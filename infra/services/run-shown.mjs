@@ -1,5 +1,5 @@
 import { spawn } from 'node:child_process'
-import { Stopped } from '../services/say.mjs'
+import { Stopped } from './say.mjs'
 
 /**
  * Runs a program of the checkout with its output shown as it comes.
