@@ -28,6 +28,8 @@ export default defineConfig({
       project('reference', ['tests/reference/**/*.test.ts'], { testTimeout: 120_000 }),
       project('api', ['tests/api/**/*.test.ts']),
       project('security', ['tests/security/**/*.test.ts'], { testTimeout: 120_000 }),
+      // On databases of their own, made from those of earlier releases.
+      project('upgrade', ['tests/upgrade/**/*.test.ts'], { testTimeout: 120_000, hookTimeout: 120_000 }),
       // Two files at a time share the instance: each works on parts, tasks and agreements of its own.
       project('browser', ['tests/browser/**/*.test.ts'], {
         testTimeout: 300_000,

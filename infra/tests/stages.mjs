@@ -12,6 +12,7 @@ export const stages = [
   { name: 'reference', needs: 'nothing' },
   { name: 'api', needs: 'database' },
   { name: 'security', needs: 'database' },
+  { name: 'upgrade', needs: 'database' },
   { name: 'browser', needs: 'product' },
   { name: 'calendar', needs: 'product' },
   { name: 'faults', needs: 'product' },

@@ -124,7 +124,7 @@ export class TestStand {
 
   #environment() {
     const { address, port } = this.#config
-    const { secrets, environment } = this.#instance
+    const { secrets, environment, binaries } = this.#instance
     const oidc = Object.entries(environment).filter(
       ([name]) => name.startsWith('OIDC_') && name !== 'OIDC_DATA',
     )
@@ -134,6 +134,7 @@ export class TestStand {
       TEST_POSTGRES_PORT: `${port.postgres}`,
       TEST_POSTGRES_ADMIN_URL: adminUrl(this.#config, secrets),
       TEST_TEMPLATE_DATABASE: template,
+      TEST_POSTGRES_BIN: binaries,
       ...Object.fromEntries(
         roles.map((role) => [`TEST_PASSWORD_${role.toUpperCase()}`, secrets.postgres[role]]),
       ),

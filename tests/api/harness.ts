@@ -62,14 +62,17 @@ const need = (name: string): string => {
 export const invitationSecret = 'a secret of the tests'
 const origins: Record<Side, string> = { supplier: 'http://supplier.test', customer: 'http://customer.test' }
 
-/** A product of its own: a database cloned from the migrated template, both apps, a clock that the test moves. */
-export async function startHarness() {
+/**
+ * A product of its own: a database cloned from the migrated template (or from another one), both apps, a clock that
+ * the test moves.
+ */
+export async function startHarness({
+  template = need('TEST_TEMPLATE_DATABASE'),
+  files = memoryFiles(),
+}: { template?: string; files?: FileStore } = {}) {
   const adminUrl = need('TEST_POSTGRES_ADMIN_URL')
   const name = `test_${randomUUID().replaceAll('-', '')}`
-  await onAdmin(
-    adminUrl,
-    `create database ${name} template ${need('TEST_TEMPLATE_DATABASE')} owner evenrule_migrator`,
-  )
+  await onAdmin(adminUrl, `create database ${name} template ${template} owner evenrule_migrator`)
   const urlAs = (role: string): string => {
     const url = new URL(adminUrl)
     url.username = role
@@ -82,7 +85,7 @@ export async function startHarness() {
   let now = new Date('2026-11-02T09:00:00.000Z')
   const services: Services = {
     clock: () => now,
-    files: memoryFiles(),
+    files,
     engines: await openEngines(fileURLToPath(new URL('../../packages/metrology/released', import.meta.url))),
     logger: pino({ level: 'silent' }),
   }
