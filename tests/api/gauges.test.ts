@@ -232,7 +232,7 @@ describe('calibrations', () => {
     expect(answer.status).toBe(422)
     expect(answer.body.errors[0]).toMatchObject({
       path: 'body.file',
-      message: expect.stringContaining('no PDF, PNG or JPEG'),
+      message: expect.stringContaining('PDF, PNG or JPEG'),
     })
   })
 

@@ -211,16 +211,19 @@ describe('the run sheet', () => {
       .expect(200)
     expect(answer.headers['content-disposition']).toContain('attachment')
     const lines = answer.text.trimEnd().split('\r\n')
-    expect(lines[0]).toBe('\ufeffNo.;Position or time;Reading (mm)')
-    expect(lines).toHaveLength(11)
+    expect(lines[0]).toBe(`\ufeffRun sheet of study ${study.code}`)
+    expect(lines[2]).toBe('No.;Position or time;Reading (mm);Remark')
+    expect(lines).toHaveLength(13)
     expect(answer.text).toContain(";'=180;")
-    const filled = lines.map((line, at) => (at === 0 ? line : `${line}24,00${at % 10}`)).join('\r\n')
+    const filled = lines
+      .map((line, at) => (at < 3 ? line : line.replace(/;;$/, `;24,00${at % 10};`)))
+      .join('\r\n')
     const preview = await engineer().call(
       studies.previewReadings,
       { studyId: study.id },
       { body: { source: 'uploaded' }, file: { name: 'sheet.csv', bytes: Buffer.from(filled) } },
     )
-    expect(preview.readAs).toMatchObject({ column: 'C', columnName: 'Reading (mm)', decimal: 'comma' })
+    expect(preview.readAs).toMatchObject({ columns: ['C'], columnNames: ['Reading (mm)'], decimal: 'comma' })
     expect([preview.readings.length, preview.errorCount]).toEqual([10, 0])
   })
   it('differs between studies', async () => {
@@ -245,8 +248,8 @@ describe('previewing readings', () => {
       encoding: 'windows-1252',
       separator: 'semicolon',
       decimal: 'comma',
-      column: 'B',
-      columnName: 'Länge [µm]',
+      columns: ['B'],
+      columnNames: ['Länge [µm]'],
     })
     expect(seen.errors).toMatchObject([{ code: 'not-a-number', row: 3, column: 'B', text: '24,0O2' }])
     expect(seen.readings.map(({ value }) => value)).toEqual([24.001, 24.0005, 25])
@@ -275,7 +278,7 @@ describe('previewing readings', () => {
   })
   it('refuses a file that is too large, and one that is no text', async () => {
     const study = await register(await story.task())
-    const large = { name: 'large.csv', bytes: Buffer.alloc(5_000_001, '1') }
+    const large = { name: 'large.csv', bytes: Buffer.alloc(10_000_001, '1') }
     expect(await refused(preview(study.id, { source: 'uploaded' }, large))).toMatchObject({
       status: 413,
       code: 'file-too-large',
@@ -579,6 +582,7 @@ describe('who may', () => {
     expect(await status(harness.as('supplier', people.stranger).send('get', foreign))).toBe(404)
     for (const [method, rest] of [
       ['get', '/run-sheet.csv'],
+      ['get', '/run-sheet.xlsx'],
       ['get', '/readings/1/file'],
     ] as const)
       expect(await status(harness.as('supplier', people.stranger).send(method, foreign + rest))).toBe(404)

@@ -60,5 +60,5 @@ export const uploadAttachment = defineEndpoint({
   upload: { maximumBytes: largestFile },
   response: fileSchema,
   summary:
-    'Takes a PDF, PNG, JPEG or CSV file that is to go with a challenge, an answer, a report or a judgement by hand.',
+    'Takes a PDF, PNG, JPEG, XLSX or CSV file that is to go with a challenge, an answer, a report or a judgement by hand.',
 })

@@ -1,26 +1,41 @@
 import { z } from 'zod'
 import { line } from './common'
-import { columnLetter, decimalMarks, encodings, separators, tableChoice } from './tables'
+import {
+  columnLetter,
+  decimalMarks,
+  encodings,
+  mostTableColumns,
+  mostTableRows,
+  separators,
+  sheetSchema,
+  tableChoice,
+  tableKinds,
+} from './tables'
 
 /** Largest file of readings, in bytes, and the most readings one study holds. */
-export const largestReadingsFile = 5_000_000
+export const largestReadingsFile = 10_000_000
 export const mostReadings = 100_000
 
-/** Down one column, or, where there is a single row of numbers, across it. */
-export const directions = ['down', 'across'] as const
+/** Long: all readings in one column. Wide: several in each row, taken row by row from left to right. */
+export const layouts = ['long', 'wide'] as const
 
-/** How a text or a file was read. */
+/** How a text or a file was read: all that is needed to read the kept file again in the same way. */
 export const readAsSchema = z.object({
-  encoding: z.enum(encodings),
+  kind: z.enum(tableKinds),
+  /** Of a workbook. */
+  sheet: z.string().nullable(),
+  /** Of a text. */
+  encoding: z.enum(encodings).nullable(),
   byteOrderMark: z.boolean(),
-  separator: z.enum(separators),
+  separator: z.enum(separators).nullable(),
+  /** Of cells that are text; numbers of a workbook need none. */
   decimal: z.enum(decimalMarks),
-  direction: z.enum(directions),
+  layout: z.enum(layouts),
   /** Rows above the first reading that name the columns or tell something else. */
   headerRows: z.number().int(),
-  /** Letter of the column with the readings, as spreadsheets name it; null where they lie across a row. */
-  column: z.string().nullable(),
-  columnName: z.string().nullable(),
+  /** The columns with the readings, from left to right, and what they are called. */
+  columns: z.array(columnLetter),
+  columnNames: z.array(z.string().nullable()),
 })
 export type ReadAs = z.output<typeof readAsSchema>
 
@@ -35,11 +50,15 @@ export const readingsInput = tableChoice.extend({
   /** How the text came about. Typed lines hold one reading each and are never split at commas. */
   source: z.enum(['typed', 'pasted', 'uploaded']),
   decimal: z.enum(decimalMarks, `Choose point or comma. ${detected}`).optional(),
-  direction: z.enum(directions, `Choose down or across. ${detected}`).optional(),
+  layout: z.enum(layouts, `Choose long or wide. ${detected}`).optional(),
   /** Rows to pass over at the top. */
-  headerRows: z.number().int().min(0).max(1000).optional(),
-  /** Letter of the column that holds the readings. */
-  column: columnLetter.optional(),
+  headerRows: z.number().int().min(0).max(mostTableRows).optional(),
+  /** The column that holds the readings, or the columns of the wide layout. */
+  columns: z
+    .array(columnLetter)
+    .min(1, 'Name at least one column.')
+    .max(mostTableColumns, `Name at most ${mostTableColumns} columns.`)
+    .optional(),
 })
 export type ReadingsInput = z.output<typeof readingsInput>
 
@@ -55,6 +74,10 @@ export const cellProblems = [
   'broken-quotes',
   /** A mean or a sum below the readings. */
   'summary-row',
+  /** Of a workbook: computed instead of entered, an error such as #DIV/0!, a day or a time. */
+  'formula',
+  'error-value',
+  'date-in-cell',
 ] as const
 export type CellProblem = (typeof cellProblems)[number]
 
@@ -76,6 +99,12 @@ export const noteCodes = [
   'comma-both',
   'column-chosen',
   'read-across',
+  'read-wide',
+  'sheet-chosen',
+  /** Rows or columns that the workbook hides hold readings. */
+  'hidden-cells',
+  /** The rows of a run sheet do not stand in its order. */
+  'run-sheet-order',
   'rows-passed-over',
   /** Rows at the end whose reading is not taken yet, as on a run sheet half filled. */
   'empty-at-end',
@@ -99,6 +128,10 @@ export type ReadingsNote = z.output<typeof readingsNoteSchema>
 
 export const readingsPreviewSchema = z.object({
   readAs: readAsSchema,
+  /** Whether a table with the same headings was read so before, and is read as then. */
+  remembered: z.boolean(),
+  /** Of a workbook: its sheets in their order. */
+  sheets: z.array(sheetSchema),
   /** How many columns hold numbers, and which was taken. */
   columns: z.array(
     z.object({
@@ -111,7 +144,9 @@ export const readingsPreviewSchema = z.object({
   /** The first rows as they were split, headers included. */
   firstRows: z.array(z.object({ row: z.number().int(), cells: z.array(z.string()) })),
   rows: z.number().int(),
-  readings: z.array(z.object({ row: z.number().int(), text: z.string(), value: z.number() })),
+  readings: z.array(
+    z.object({ row: z.number().int(), column: z.string(), text: z.string(), value: z.number() }),
+  ),
   /** Cells without a number where a reading belongs: the first 200, and how many there are. */
   errors: z.array(cellErrorSchema),
   errorCount: z.number().int(),

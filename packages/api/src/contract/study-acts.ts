@@ -55,6 +55,14 @@ export const downloadRunSheet = defineEndpoint({
   summary: 'The randomised run sheet as CSV, with an empty column to fill in and upload again.',
 })
 
+export const downloadRunSheetWorkbook = defineEndpoint({
+  method: 'get',
+  path: `${studyPath}/run-sheet.xlsx`,
+  access: 'studies.read',
+  params: studyParams,
+  summary: 'The same as XLSX. Readings kept so far stand in it; it comes back filled in as it is.',
+})
+
 export const previewReadings = defineEndpoint({
   method: 'post',
   path: `${studyPath}/readings/preview`,
@@ -63,6 +71,8 @@ export const previewReadings = defineEndpoint({
   body: readingsInput.extend({
     /** As when storing: the readings follow those kept so far. */
     append: z.boolean().default(false),
+    /** A table with headings that were read before is read as then, unless sheet or columns are named. */
+    asRemembered: z.boolean().default(true),
   }),
   upload: { maximumBytes: largestReadingsFile },
   response: readingsPreviewSchema,

@@ -15,8 +15,8 @@ export const filesWords = {
     most === 1 ? 'Choose a file, or drop it here' : 'Choose files, or drop them here',
   hint: (most: number) =>
     most === 1
-      ? 'PDF, PNG, JPEG or CSV, up to 20 MB. The other side can open it.'
-      : 'PDF, PNG, JPEG or CSV, up to 20 MB each. The other side can open them.',
+      ? 'PDF, PNG, JPEG, XLSX or CSV, up to 20 MB. The other side can open it.'
+      : 'PDF, PNG, JPEG, XLSX or CSV, up to 20 MB each. The other side can open them.',
   chosen: 'Files chosen',
   remove: 'Take out',
   sending: (name: string) => `Sending ${name} …`,

@@ -138,11 +138,14 @@ export const collectWords = {
   on: (standard: string) => `standard ${standard}`,
   gaugeFor: (gauge: string, characteristic: string) => `${gauge} for ${characteristic}`,
   runSheet: 'Run sheet',
-  runSheetText: 'Take the readings in this order; the slots were dealt at random.',
-  runSheetPlain: 'Take the readings one after the other, without looking for a pattern.',
+  runSheetText:
+    'Take the readings in this order; the slots were dealt at random. A file of it can be filled in and uploaded as it is.',
+  runSheetPlain:
+    'Take the readings one after the other, without looking for a pattern. A file of the sheet can be filled in and uploaded as it is.',
   print: 'Print run sheet',
-  download: 'Download as CSV',
-  downloadSemicolon: 'with semicolons',
+  downloadXlsx: 'Download as XLSX',
+  download: 'as CSV',
+  downloadSemicolon: 'as CSV with semicolons',
   number: 'No.',
   slot: 'Position or time',
   reading: 'Reading',
@@ -185,8 +188,9 @@ export const entryWords = {
   paste: 'Copied cells',
   pasteHint: 'Copy the cells in your spreadsheet and paste them here, headings and all.',
   file: 'File with the readings',
-  drop: 'Drop a CSV file here, or choose one',
-  dropHint: 'Comma, semicolon or tab; decimal comma or point; at most 5 MB. The file is kept byte for byte.',
+  drop: 'Drop an XLSX or CSV file here, or choose one',
+  dropHint:
+    'A workbook, or text with comma, semicolon or tab, decimal comma or point; at most 10 MB. The file is kept byte for byte.',
   dropAgain: 'Choose another file',
   fileAgain: (name: string) => `Choose ${name} again: a file cannot be kept across a reload.`,
   fileMissing: 'Choose the file with the readings.',
@@ -205,18 +209,31 @@ export const entryWords = {
     decimal: { point: 'decimal point', comma: 'decimal comma' },
     encoding: { 'utf-8': 'UTF-8', 'windows-1252': 'Windows-1252', 'utf-16': 'UTF-16' },
   } satisfies {
-    separator: Record<studies.ReadAs['separator'], string>
+    separator: Record<NonNullable<studies.ReadAs['separator']>, string>
     decimal: Record<studies.ReadAs['decimal'], string>
-    encoding: Record<studies.ReadAs['encoding'], string>
+    encoding: Record<NonNullable<studies.ReadAs['encoding']>, string>
   },
   inColumn: (letter: string, name: string | null) => `column ${letter}${name ? ` “${name}”` : ''}`,
+  inColumns: (first: string, last: string, count: number) =>
+    `${countWord(count)} columns, ${first} to ${last}, row by row`,
+  inSheet: (name: string) => `sheet “${name}”`,
   acrossRow: 'across one row',
+  remembered: 'Read as last time: a table with these headings came before.',
+  detect: 'Read it anew',
+  sheet: 'Sheet',
+  sheetHidden: 'hidden in the workbook',
+  layout: 'The readings stand in',
+  layouts: { long: 'one column', wide: 'several columns, row by row' } satisfies Record<
+    studies.ReadAs['layout'],
+    string
+  >,
+  columnsWide: 'Columns with the readings',
   headerRows: (count: number) => `${formatCount(count, 'row')} passed over at the top`,
   column: 'Column with the readings',
   columnChoice: (letter: string, name: string | null) => (name ? `${letter}, ${name}` : letter),
   columnNumbers: (count: number) => formatCount(count, 'number'),
   separators: { comma: 'comma', semicolon: 'semicolon', tab: 'tab', none: 'nothing' } satisfies Record<
-    studies.ReadAs['separator'],
+    NonNullable<studies.ReadAs['separator']>,
     string
   >,
   decimals: { point: 'point', comma: 'comma' } satisfies Record<studies.ReadAs['decimal'], string>,

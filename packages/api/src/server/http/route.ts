@@ -26,6 +26,8 @@ export interface TenantCall<E extends EndpointShape, P = undefined> extends Pars
 export interface PrepareCall<E extends EndpointShape> extends Parsed<E> {
   file: UploadedFile | undefined
   services: Services
+  /** Asks the organisation's rows for what the preparation needs, in a short transaction of its own. */
+  ask: <T>(question: (tenant: Tenant) => Promise<T>) => Promise<T>
 }
 
 export interface PersonCall<E extends EndpointShape> extends Parsed<E> {

@@ -46,7 +46,11 @@ export async function callTenantRoute(
     let prepared: unknown
     if (route.prepare) {
       await withTenant(database, services, context, (tenant) => authorise(tenant, permission))
-      prepared = await (route.prepare as (call: unknown) => Promise<unknown>)({ ...rest(), file, services })
+      prepared = await (route.prepare as (call: unknown) => Promise<unknown>)({
+        ...{ ...rest(), file, services },
+        ask: <T>(question: (tenant: Tenant) => Promise<T>) =>
+          withTenant(database, services, context, question),
+      })
     }
     return await withTenant(database, services, context, async (tenant) => {
       await authorise(tenant, permission)

@@ -52,7 +52,7 @@ const zipped: readonly (readonly [part: string, name: string, mend: string])[] =
 
 /** What the head of a text tells of it where it is no CSV. */
 const texts: readonly (readonly [pattern: RegExp, name: string, mend: string])[] = [
-  [/^<(!doctype html|html|head|body|table|meta)\b/i, 'a web page (HTML), whatever its name says', asXlsx],
+  [/^<(!doctype html|html|head|body|table|meta)\b/i, 'a web page (HTML)', asXlsx],
   [/urn:schemas-microsoft-com:office:spreadsheet/, 'an XML spreadsheet of 2003', asXlsx],
   [/^<\?xml|^<[a-z][\w:.-]*[\s>]/i, 'an XML file', 'Export the table as XLSX or CSV.'],
   [/^[{[]\s*["{[]/, 'a JSON file', 'Export the table as XLSX or CSV.'],
@@ -64,32 +64,50 @@ export const isWorkbook = (bytes: Buffer): boolean =>
 
 const zippedAs = (bytes: Buffer) => zipped.find(([part]) => bytes.includes(part))
 
+interface Other {
+  /** Such as "a PDF file". */
+  name: string
+  mend: string
+}
+
 /** Whether the file is a CSV or an XLSX by its content; refuses anything else, saying what it is and how to mend it. */
 export function kindOf({ name, bytes }: UploadedFile): TableKind {
   if (bytes.length === 0) throw refusedFile(`${name} is empty. Choose the file with the table.`)
-  const refuse = (what: string, mend: string) => refusedFile(`${name} is ${what}. ${mend}`)
-  if (begins(bytes, zip)) {
-    const other = zippedAs(bytes)
-    if (other) throw refuse(other[1], other[2])
-    if (isWorkbook(bytes)) return 'xlsx'
-    throw refuse('a ZIP file', 'Unpack it and choose the XLSX or CSV file inside.')
-  }
-  if (begins(bytes, 'PK\u0005\u0006')) throw refuse('an empty ZIP file', instead)
-  if (begins(bytes, '\u00d0\u00cf\u0011\u00e0')) {
-    const holds = (stream: string) => bytes.includes(Buffer.from(stream, 'utf16le'))
-    if (holds('EncryptedPackage'))
-      throw refuse('a workbook with a password', 'Save it without a password and choose it again.')
-    if (holds('Workbook') || holds('Book'))
-      throw refuse('an old binary workbook (XLS)', 'Save it as XLSX or CSV and choose that.')
-    throw refuse('an old office document', asXlsx)
-  }
-  const other = heads.find(([head]) => begins(bytes, head))
-  if (other) throw refuse(other[1], other[2])
+  const other = otherFormat(bytes)
+  if (other) throw refusedFile(`${name} is ${other.name}, whatever its name says. ${other.mend}`)
+  return isWorkbook(bytes) ? 'xlsx' : 'csv'
+}
+
+/** What a file is by its content, where that is known and neither a CSV nor an XLSX. */
+export function otherFormat(bytes: Buffer): Other | undefined {
+  if (begins(bytes, zip)) return isWorkbook(bytes) ? undefined : otherZip(bytes)
+  if (begins(bytes, 'PK\u0005\u0006')) return { name: 'an empty ZIP file', mend: instead }
+  if (begins(bytes, '\u00d0\u00cf\u0011\u00e0')) return otherOffice(bytes)
+  const [, name, mend = ''] = heads.find(([head]) => begins(bytes, head)) ?? textFormat(bytes) ?? []
+  return name === undefined ? undefined : { name, mend }
+}
+
+function otherZip(bytes: Buffer): Other {
+  const [, name, mend] = zippedAs(bytes) ?? []
+  return name !== undefined && mend !== undefined
+    ? { name, mend }
+    : { name: 'a ZIP file', mend: 'Unpack it and choose the XLSX or CSV file inside.' }
+}
+
+/** Files of the office programs before 2007, in which workbooks with a password are wrapped to this day. */
+function otherOffice(bytes: Buffer): Other {
+  const holds = (stream: string) => bytes.includes(Buffer.from(stream, 'utf16le'))
+  if (holds('EncryptedPackage'))
+    return { name: 'a workbook with a password', mend: 'Save it without a password and choose it again.' }
+  return holds('Workbook') || holds('Book')
+    ? { name: 'an old binary workbook (XLS)', mend: 'Save it as XLSX or CSV and choose that.' }
+    : { name: 'an old office document', mend: asXlsx }
+}
+
+function textFormat(bytes: Buffer) {
   const head = bytes
     .subarray(0, 2000)
     .toString('latin1')
     .replace(/^(\u00ef\u00bb\u00bf)?\s*/, '')
-  const text = texts.find(([pattern]) => pattern.test(head))
-  if (text) throw refuse(text[1], text[2])
-  return 'csv'
+  return texts.find(([pattern]) => pattern.test(head))
 }

@@ -19,8 +19,11 @@ const plain = (cell: string): string => cell.trim().replace(/^[\u2212\u2013]/, '
 
 /** Reads a cell as a number whatever its decimal mark; undefined where it is none. */
 export function asWritten(cell: string): Written | undefined {
-  const text = plain(cell)
-  if (!number.test(text)) return undefined
+  let text = cell
+  if (!number.test(text)) {
+    text = plain(cell)
+    if (text === cell || !number.test(text)) return undefined
+  }
   const mark = text.includes(',') ? 'comma' : text.includes('.') ? 'point' : null
   return { digits: text.replace(',', '.'), mark }
 }

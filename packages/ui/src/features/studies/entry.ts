@@ -12,9 +12,13 @@ export interface EntryValues {
   file: string
   append: boolean
   /** Empty where it is left to be detected. */
-  column: string
+  sheet: string
+  layout: '' | studies.ReadAs['layout']
+  columns: string[]
   separator: '' | studies.ReadAs['separator']
   decimal: '' | studies.ReadAs['decimal']
+  /** A table that was read before is read as then. */
+  asRemembered: boolean
   leaveOutBadRows: boolean
   collectedOn: string
   takenBy: string[]
@@ -32,15 +36,19 @@ export interface EntryStart {
   appraiser: string
 }
 
+/** Everything about how to read left to be detected, as for every other file. */
+export const nothingChosen = (): Pick<
+  EntryValues,
+  'sheet' | 'layout' | 'columns' | 'separator' | 'decimal' | 'asRemembered'
+> => ({ sheet: '', layout: '', columns: [], separator: '', decimal: '', asRemembered: true })
+
 export const entryStart = ({ planned, kept, texts, today, me, appraiser }: EntryStart): EntryValues => ({
   source: 'typed',
   typed: texts.length ? [...texts] : emptyGrid(planned, kept),
   pasted: '',
   file: '',
   append: kept > 0 && texts.length === 0,
-  column: '',
-  separator: '',
-  decimal: '',
+  ...nothingChosen(),
   leaveOutBadRows: false,
   collectedOn: today,
   takenBy: me ? [me] : [],
@@ -48,20 +56,42 @@ export const entryStart = ({ planned, kept, texts, today, me, appraiser }: Entry
   reason: '',
 })
 
-type Input = Pick<studies.ReadingsInput, 'source' | 'text' | 'column' | 'separator' | 'decimal'>
+type Chosen = Pick<
+  studies.ReadingsInput,
+  'sheet' | 'layout' | 'columns' | 'separator' | 'decimal' | 'encoding' | 'headerRows'
+>
+type Input = Pick<studies.ReadingsInput, 'source' | 'text'> & Chosen
+
+const chosenOf = ({ sheet, layout, columns, separator, decimal }: EntryValues): Chosen => ({
+  ...(sheet ? { sheet } : {}),
+  ...(layout ? { layout } : {}),
+  ...(columns.length ? { columns } : {}),
+  ...(separator ? { separator } : {}),
+  ...(decimal ? { decimal } : {}),
+})
 
 /** What is sent of the readings, or null while there are none. A typed grid is one reading a line. */
 export function entryInput(values: EntryValues, hasFile: boolean): Input | null {
-  const { source, column, separator, decimal } = values
-  const how = {
-    ...(column ? { column } : {}),
-    ...(separator ? { separator } : {}),
-    ...(decimal ? { decimal } : {}),
-  }
-  if (source === 'uploaded') return hasFile ? { source, ...how } : null
-  if (source === 'pasted') return values.pasted.trim() ? { source, text: values.pasted, ...how } : null
+  const { source } = values
+  if (source === 'uploaded') return hasFile ? { source, ...chosenOf(values) } : null
+  if (source === 'pasted')
+    return values.pasted.trim() ? { source, text: values.pasted, ...chosenOf(values) } : null
   const text = typedText(values.typed)
   return text.trim() ? { source, text } : null
+}
+
+/** The same as it was previewed: what is stored is read exactly as it was shown. */
+export function shownInput(input: Input, preview: studies.ReadingsPreview | null): Input {
+  if (preview === null || input.source === 'typed') return input
+  const { sheet, encoding, separator, decimal, layout, headerRows, columns } = preview.readAs
+  return {
+    ...{ source: input.source, ...(input.text === undefined ? {} : { text: input.text }) },
+    ...(sheet === null ? {} : { sheet }),
+    ...(encoding === null || input.source === 'pasted' ? {} : { encoding }),
+    ...(separator === null ? {} : { separator }),
+    ...{ decimal, layout, headerRows },
+    ...(columns.length ? { columns } : {}),
+  }
 }
 
 /** What keeps the readings from being stored, by field; checks that need no server. */
@@ -92,16 +122,18 @@ export function entryProblems(
 
 /** How a text or a file was read, as one sentence for reading. */
 export function readAsText(readAs: studies.ReadAs, source: EntrySource): string {
+  const { sheet, encoding, separator, decimal, headerRows, columns, columnNames } = readAs
   const parts = [
-    readAs.direction === 'across'
-      ? words.acrossRow
-      : readAs.column === null
-        ? ''
-        : words.inColumn(readAs.column, readAs.columnName),
-    readAs.separator === 'none' ? '' : words.readAs.separator[readAs.separator],
-    words.readAs.decimal[readAs.decimal],
-    source === 'uploaded' ? words.readAs.encoding[readAs.encoding] : '',
-    readAs.headerRows ? words.headerRows(readAs.headerRows) : '',
+    sheet === null ? '' : words.inSheet(sheet),
+    columns.length > 1
+      ? words.inColumns(columns[0] ?? '', columns.at(-1) ?? '', columns.length)
+      : columns[0] === undefined
+        ? words.acrossRow
+        : words.inColumn(columns[0], columnNames[0] ?? null),
+    separator === null || separator === 'none' ? '' : words.readAs.separator[separator],
+    separator === null ? '' : words.readAs.decimal[decimal],
+    source === 'uploaded' && encoding !== null ? words.readAs.encoding[encoding] : '',
+    headerRows ? words.headerRows(headerRows) : '',
   ]
   return parts.filter(Boolean).join(', ')
 }

@@ -1,7 +1,7 @@
 import type { studies } from '@evenrule/api/contract'
 import { describe, expect, it } from 'vitest'
 import { planReasonText } from '../../strings/studies'
-import { entryInput, entryProblems, entryStart, readAsText } from './entry'
+import { entryInput, entryProblems, entryStart, readAsText, shownInput } from './entry'
 import { chanceOf, planAnswer, slotsOf, suggestedCode } from './planFacts'
 import { verdictOf } from './studyText'
 import { emptyGrid, pastedCells, spreadPaste, typedText } from './typedGrid'
@@ -33,15 +33,31 @@ const preview = (errorCount: number, mayLeaveOut: boolean) =>
 
 describe('the entry of readings', () => {
   it('sends typed readings one a line, without choices that belong to files', () =>
-    expect(entryInput({ ...start, typed: ['1,5', '2,5', ''], column: 'B' }, false)).toEqual({
+    expect(entryInput({ ...start, typed: ['1,5', '2,5', ''], columns: ['B'] }, false)).toEqual({
       source: 'typed',
       text: '1,5\n2,5',
     }))
   it('sends the choices only where one was made', () => {
     expect(entryInput({ ...start, source: 'uploaded' }, true)).toEqual({ source: 'uploaded' })
     expect(
-      entryInput({ ...start, source: 'pasted', pasted: 'a;1,5', column: 'B', decimal: 'comma' }, false),
-    ).toEqual({ source: 'pasted', text: 'a;1,5', column: 'B', decimal: 'comma' })
+      entryInput({ ...start, source: 'pasted', pasted: 'a;1,5', columns: ['B'], decimal: 'comma' }, false),
+    ).toEqual({ source: 'pasted', text: 'a;1,5', columns: ['B'], decimal: 'comma' })
+  })
+  it('stores what was shown, however it came to be read so', () => {
+    const readAs = {
+      ...{ kind: 'xlsx', sheet: 'Data', encoding: null, byteOrderMark: false, separator: null },
+      ...{ decimal: 'point', layout: 'wide', headerRows: 1, columns: ['B', 'C'], columnNames: ['1', '2'] },
+    }
+    const shown = { readAs } as studies.ReadingsPreview
+    expect(shownInput({ source: 'uploaded', columns: ['B'] }, shown)).toEqual({
+      ...{ source: 'uploaded', sheet: 'Data', decimal: 'point' },
+      ...{ layout: 'wide', headerRows: 1, columns: ['B', 'C'] },
+    })
+    expect(shownInput({ source: 'uploaded', columns: ['B'] }, null)).toEqual({
+      source: 'uploaded',
+      columns: ['B'],
+    })
+    expect(shownInput({ source: 'typed', text: '1' }, shown)).toEqual({ source: 'typed', text: '1' })
   })
   it('has nothing to send before anything is entered', () => {
     expect(entryInput(start, false)).toBeNull()
@@ -89,24 +105,22 @@ describe('the entry of readings', () => {
     })
     expect([values.typed, values.append, values.takenBy]).toEqual([['1', '2'], false, []])
   })
-  it('says how a file was read', () =>
-    expect(
-      readAsText(
-        {
-          encoding: 'windows-1252',
-          byteOrderMark: false,
-          separator: 'semicolon',
-          decimal: 'comma',
-          direction: 'down',
-          headerRows: 1,
-          column: 'B',
-          columnName: 'Wert',
-        },
-        'uploaded',
-      ),
-    ).toBe(
+  it('says how a file was read', () => {
+    const text = {
+      ...{ kind: 'csv' as const, sheet: null, encoding: 'windows-1252' as const, byteOrderMark: false },
+      ...{ separator: 'semicolon' as const, decimal: 'comma' as const, layout: 'long' as const },
+      ...{ headerRows: 1, columns: ['B'], columnNames: ['Wert'] },
+    }
+    expect(readAsText(text, 'uploaded')).toBe(
       'column B “Wert”, semicolon between cells, decimal comma, Windows-1252, 1 row passed over at the top',
-    ))
+    )
+    const workbook = {
+      ...{ kind: 'xlsx' as const, sheet: 'Data', encoding: null, byteOrderMark: false, separator: null },
+      ...{ decimal: 'point' as const, layout: 'wide' as const, headerRows: 0 },
+      ...{ columns: ['B', 'C', 'D'], columnNames: [null, null, null] },
+    }
+    expect(readAsText(workbook, 'uploaded')).toBe('sheet “Data”, three columns, B to D, row by row')
+  })
 })
 
 describe('planning', () => {

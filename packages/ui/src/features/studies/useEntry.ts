@@ -4,7 +4,7 @@ import { useForm, type Form } from '../../forms/useForm'
 import { useApi } from '../../session/client'
 import { useSession } from '../../session/useSessionStore'
 import { orNull, useHere, type Loaded } from '../common'
-import { entryInput, entryProblems, entryStart, type EntryValues } from './entry'
+import { entryInput, entryProblems, entryStart, nothingChosen, shownInput, type EntryValues } from './entry'
 import { countingData, keptReadings } from './studyText'
 import { useAsked } from './useAsked'
 
@@ -19,6 +19,10 @@ export interface Entry {
   before(): number
   /** Takes the file to read. */
   choose(file: File): void
+  /** Takes another sheet; what was chosen of the sheet before counts no longer. */
+  chooseSheet(sheet: string): void
+  /** Reads anew without what is remembered and what was chosen. */
+  detect(): void
   /** Whether everything that can be checked here is in order. */
   ready(): boolean
 }
@@ -66,7 +70,7 @@ export function useEntry(
       api.call(studies.storeReadings, {
         params: at,
         body: {
-          ...(entryInput(values, Boolean(file.value)) ?? { source: values.source }),
+          ...toStore(values),
           append: values.append,
           expectedVersion: study.rowVersion,
           complete: complete.value,
@@ -81,11 +85,19 @@ export function useEntry(
     done,
   })
 
+  /** As it is shown, once the answer on what is entered now is there. */
+  function toStore(values: EntryValues) {
+    const input = entryInput(values, Boolean(file.value)) ?? { source: values.source }
+    const { data, loading, error } = preview
+    return shownInput(input, loading.value || error.value ? null : (data.value ?? null))
+  }
+
   const stamp = computed(() => file.value && [file.value.name, file.value.size, file.value.lastModified])
   const preview = useAsked(
     () => {
       const input = entryInput(form.values, Boolean(file.value))
-      return input && { body: { ...input, append: form.values.append }, stamp: stamp.value }
+      const { append, asRemembered } = form.values
+      return input && { body: { ...input, append, asRemembered }, stamp: stamp.value }
     },
     ({ body }) =>
       api.call(studies.previewReadings, {
@@ -94,6 +106,9 @@ export function useEntry(
         ...(body.source === 'uploaded' && file.value ? { file: file.value } : {}),
       }),
   )
+  const take = (values: Partial<EntryValues>) => {
+    for (const [name, value] of Object.entries(values)) form.field(name)['onUpdate:modelValue'](value)
+  }
   return {
     form,
     file,
@@ -102,9 +117,12 @@ export function useEntry(
     kept,
     before: () => (form.values.append ? kept.value : 0),
     choose(chosen) {
+      if (chosen.name !== form.values.file) take(nothingChosen())
       file.value = chosen
       form.field('file')['onUpdate:modelValue'](chosen.name)
     },
+    chooseSheet: (sheet) => take({ ...nothingChosen(), sheet }),
+    detect: () => take({ ...nothingChosen(), asRemembered: false }),
     ready: () => Object.values(problems(form.values)).every((problem) => problem === undefined),
   }
 }

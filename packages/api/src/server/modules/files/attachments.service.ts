@@ -2,7 +2,7 @@ import type { Tenant } from '../../db/tenant'
 import { invalidInput } from '../../errors'
 import type { PrepareCall } from '../../http/route'
 import type { uploadAttachment } from '../../../contract/files'
-import { contentTypeOf } from './files.content'
+import { contentTypeOf, notOfType } from './files.content'
 import type { FileRow } from './files.repository'
 import { fileById, keepFile, type FileToKeep } from './files.service'
 
@@ -14,12 +14,7 @@ export async function storeAttachment({
   if (!file) throw invalidInput([{ path: 'body.file', message: 'Choose a file.' }])
   const contentType = contentTypeOf(file.bytes)
   if (!contentType)
-    throw invalidInput([
-      {
-        path: 'body.file',
-        message: `${file.name} is no PDF, PNG, JPEG or CSV file, whatever its name says. Save it as one of these and choose it again.`,
-      },
-    ])
+    throw notOfType(file, 'PDF, PNG, JPEG, XLSX or CSV', 'Save it as one of these and choose it again.')
   return { ...file, contentType, stored: await services.files.put(file.bytes) }
 }
 

@@ -1,8 +1,10 @@
+import { invalidInput, type ProblemError } from '../../errors'
 import type { UploadedFile } from '../../http/route'
-import { invalidInput } from '../../errors'
+import { isWorkbook, otherFormat, tableTypes } from '../../tables/content'
 
 /** The types of file that the product takes; told by content, never by name. */
-export type ContentType = 'application/pdf' | 'image/png' | 'image/jpeg' | 'text/csv'
+export type ContentType =
+  'application/pdf' | 'image/png' | 'image/jpeg' | (typeof tableTypes)[keyof typeof tableTypes]
 
 const startsWith = (bytes: Buffer, ...head: number[]): boolean =>
   head.every((byte, index) => bytes[index] === byte)
@@ -13,7 +15,8 @@ export function contentTypeOf(bytes: Buffer): ContentType | null {
   if (bytes.subarray(0, 1024).includes('%PDF-')) return 'application/pdf'
   if (startsWith(bytes, 0x89, 0x50, 0x4e, 0x47, 0x0d, 0x0a, 0x1a, 0x0a)) return 'image/png'
   if (startsWith(bytes, 0xff, 0xd8, 0xff)) return 'image/jpeg'
-  return isText(bytes) ? 'text/csv' : null
+  if (isWorkbook(bytes)) return tableTypes.xlsx
+  return isText(bytes) && !otherFormat(bytes) ? tableTypes.csv : null
 }
 
 /** Text in UTF-8 or Latin-1: no control characters but tab and line ends. */
@@ -31,12 +34,16 @@ export const certificateTypes = ['application/pdf', 'image/png', 'image/jpeg'] a
 export function certificateType(file: UploadedFile): ContentType {
   const type = contentTypeOf(file.bytes)
   if (type && (certificateTypes as readonly ContentType[]).includes(type)) return type
-  throw invalidInput([
-    {
-      path: 'body.file',
-      message: `${file.name} is no PDF, PNG or JPEG file, whatever its name says. Save the certificate as one of these and choose it again.`,
-    },
-  ])
+  throw notOfType(file, 'PDF, PNG or JPEG', 'Save the certificate as one of these and choose it again.')
+}
+
+/** Refuses a file by its content, saying what it is where that is known. */
+export function notOfType({ name, bytes }: UploadedFile, wanted: string, mend: string): ProblemError {
+  const is =
+    bytes.length === 0
+      ? 'is empty'
+      : `is ${otherFormat(bytes)?.name ?? `no ${wanted} file`}, whatever its name says`
+  return invalidInput([{ path: 'body.file', message: `${name} ${is}. Files are taken as ${wanted}. ${mend}` }])
 }
 
 // Control characters, marks that turn the direction of text, lone surrogates, and what some systems forbid.

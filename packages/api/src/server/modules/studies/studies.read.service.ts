@@ -9,7 +9,8 @@ import { standardById } from '../gauges/gauges.lookup.service'
 import { namesOfPeople } from '../organisations/people.repository'
 import { taskById } from '../parts/parts.lookup.service'
 import { selectNames } from '../relationships/relationships.repository'
-import { runSheetFile, runSheetOf } from './run-sheet'
+import { readAsStored } from './readings/stored'
+import { runSheetCsv, runSheetOf, runSheetXlsx } from './run-sheet'
 import { figuresWithoutCriteria } from './studies.evaluate.service'
 import { noFile } from './studies.errors'
 import {
@@ -60,6 +61,7 @@ export async function readStudyOf(tenant: Tenant, studyId: string): Promise<Stud
     data: await Promise.all(
       revisions.map(async ({ fileId, ...row }) => ({
         ...row,
+        readAs: readAsStored(row.readAs),
         file: fileId === null ? null : await fileById(tenant, fileId),
         takenBy: row.takenBy.map(person),
         createdBy: person(row.createdBy),
@@ -80,12 +82,26 @@ export async function readingsFileOf(tenant: Tenant, studyId: string, revision: 
 }
 
 /** The run sheet of a study as CSV. */
-export async function runSheetFileOf(
+export async function runSheetCsvOf(
   tenant: Tenant,
   studyId: string,
   separator: 'comma' | 'semicolon' | 'tab',
 ): Promise<Download> {
-  return runSheetFile(await studyById(tenant, studyId), separator)
+  const { study, kept } = await toFillIn(tenant, studyId)
+  return runSheetCsv(study, kept, separator)
+}
+
+/** The same as XLSX. */
+export async function runSheetXlsxOf(tenant: Tenant, studyId: string): Promise<Download> {
+  const { study, kept } = await toFillIn(tenant, studyId)
+  return runSheetXlsx(study, kept)
+}
+
+/** A study with the readings that stand on its sheet already. */
+async function toFillIn(tenant: Tenant, studyId: string): Promise<{ study: StudyRow; kept: string[] }> {
+  const study = await studyById(tenant, studyId)
+  const [newest] = await selectRevisions(tenant, studyId)
+  return { study, kept: newest?.texts ?? [] }
 }
 
 async function standardOf(

@@ -1,10 +1,10 @@
 import * as contract from '../../../contract/studies'
+import { tableTypes } from '../../tables/content'
 import { preparedRoute, tenantRoute, type Route } from '../../http/route'
-import { readReadings } from './readings/read'
 import { abandonStudyOf } from './studies.abandon.service'
 import { listOfStudies } from './studies.list.service'
-import { previewOf } from './studies.preview.service'
-import { readingsFileOf, readStudyOf, runSheetFileOf } from './studies.read.service'
+import { previewOf, readToPreview } from './studies.preview.service'
+import { readingsFileOf, readStudyOf, runSheetCsvOf, runSheetXlsxOf } from './studies.read.service'
 import { planOf, registerStudyOf } from './studies.register.service'
 import { readToStore, storeReadingsOf } from './studies.store.service'
 
@@ -14,11 +14,14 @@ export const studiesRoutes: Route[] = [
   tenantRoute(contract.registerStudy, ({ tenant, body }) => registerStudyOf(tenant, body)),
   tenantRoute(contract.readStudy, ({ tenant, params }) => readStudyOf(tenant, params.studyId)),
   tenantRoute(contract.downloadRunSheet, ({ tenant, params, query }) =>
-    runSheetFileOf(tenant, params.studyId, query.separator),
+    runSheetCsvOf(tenant, params.studyId, query.separator),
+  ),
+  tenantRoute(contract.downloadRunSheetWorkbook, ({ tenant, params }) =>
+    runSheetXlsxOf(tenant, params.studyId),
   ),
   preparedRoute(
     contract.previewReadings,
-    async ({ body, file }) => ({ read: await readReadings(body, file), file }),
+    async ({ body, file, ask }) => ({ read: await readToPreview(body, file, ask), file }),
     ({ tenant, params, body, prepared }) => previewOf(tenant, params.studyId, body, prepared),
   ),
   preparedRoute(
@@ -26,7 +29,8 @@ export const studiesRoutes: Route[] = [
     async ({ body, file, services }) => {
       const read = await readToStore(body, file)
       const stored = file && (await services.files.put(file.bytes))
-      return { read, file: file && stored ? { ...file, contentType: 'text/csv', stored } : null }
+      const contentType = tableTypes[read.readAs.kind]
+      return { read, file: file && stored ? { ...file, contentType, stored } : null }
     },
     ({ tenant, params, body, prepared }) => storeReadingsOf(tenant, params.studyId, body, prepared),
   ),

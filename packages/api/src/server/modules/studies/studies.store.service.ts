@@ -12,7 +12,10 @@ import { standardById } from '../gauges/gauges.lookup.service'
 import { selectTimeZone } from '../organisations/organisations.repository'
 import { selectMembersAmong } from '../organisations/people.repository'
 import { canonicalText, sha256 } from '../record/record.append'
-import { leftOutOf, readReadings, type ReadReadings } from './readings/read'
+import { rememberMapping } from '../mappings/mappings.service'
+import { leftOutOf, readReadings } from './readings/read'
+import { refuseOtherSheet, withoutKept } from './readings/run-sheet-back'
+import type { ReadReadings } from './readings/take'
 import { standardOfAnotherQuantity } from './studies.errors'
 import { evaluateStudy, type Evaluated } from './studies.evaluate.service'
 import { readStudyOf, studyById } from './studies.read.service'
@@ -66,11 +69,13 @@ export async function storeReadingsOf(
   const study = await studyById(tenant, studyId)
   if (study.rowVersion !== body.expectedVersion) throw changedMeanwhile('study')
   const move = moveFor(study, body)
+  refuseOtherSheet(study, read)
   const revisions = await selectRevisions(tenant, studyId)
   const takenBy = [...new Set(body.takenBy)]
   await refuseWrongFields(tenant, study, body, takenBy)
   const before = body.append ? revisions[0] : undefined
-  const texts = [...(before?.texts ?? []), ...read.readings.map(({ text }) => text)]
+  const readings = withoutKept(read, before)
+  const texts = [...(before?.texts ?? []), ...readings.map(({ text }) => text)]
   const data: StudyDataRow = {
     orgId: tenant.organisationId,
     id: newId(),
@@ -82,7 +87,7 @@ export async function storeReadingsOf(
     fileId: file ? await keepFile(tenant, file) : null,
     readAs: read.readAs,
     standard: await frozenStandard(tenant, study),
-    values: [...(before?.values ?? []), ...read.readings.map(({ value }) => value)],
+    values: [...(before?.values ?? []), ...readings.map(({ value }) => value)],
     texts,
     leftOut: [...(before?.leftOut ?? []), ...leftOutOf(read)],
     appraiser: body.appraiser,
@@ -98,6 +103,7 @@ export async function storeReadingsOf(
   const values = { state: move.to, collectedOn }
   if (!(await updateStudy(tenant, studyId, body.expectedVersion, values))) throw changedMeanwhile('study')
   await insertRevision(tenant, data)
+  for (const lesson of read.lessons) await rememberMapping(tenant, lesson)
   await insertEvaluations(tenant, rowsOf(tenant, data, evaluated))
   recordReadings(tenant, { study, move, data, file, evaluated })
   return readStudyOf(tenant, studyId)

@@ -23,6 +23,7 @@ import { gauges, referenceStandards } from '../gauges/gauges.table'
 import { organisations } from '../organisations/organisations.table'
 import { measuringTasks } from '../parts/parts.table'
 import { relationships } from '../relationships/relationships.table'
+import type { ReadAsOfFirstRelease } from './readings/stored'
 
 /** A clause as it was in force when the study was registered, with where it came from. */
 export type FrozenClause = Criterion
@@ -153,8 +154,8 @@ export const studyData = pgTable(
     /** Why readings that were judged before were replaced. */
     reason: text(),
     fileId: uuid(),
-    /** How the text was read: encoding, separator, decimal mark, column. */
-    readAs: jsonb().$type<ReadAs>().notNull(),
+    /** How it was read: sheet or encoding and separator, decimal mark, layout, columns. */
+    readAs: jsonb().$type<ReadAs | ReadAsOfFirstRelease>().notNull(),
     /** The standard in use, with its values of the day of storing. */
     standard: jsonb().$type<FrozenStandard>().notNull(),
     values: doublePrecision().array().notNull(),

@@ -9,7 +9,24 @@ export function headerRowsOf(rows: readonly string[][]): number {
     row.some((cell) => asWritten(cell) !== undefined || meantAsNumber(cell)),
   )
   // Without any number there is nothing to stand above.
-  return first < 0 ? 0 : first
+  if (first < 0) return 0
+  return countsItsColumns(rows[first] ?? [], rows[first + 1] ?? []) ? first + 1 : first
+}
+
+/** A row such as Part, 1, 2, 3 above fractions names the columns, though it holds numbers. */
+function countsItsColumns(row: readonly string[], below: readonly string[]): boolean {
+  const numbered = row.flatMap((cell, at) => (/^\d{1,3}$/.test(cell.trim()) ? [at] : []))
+  const names = row.filter((cell) => cell.trim() !== '')
+  return (
+    numbered.length > 1 &&
+    names.length > numbered.length &&
+    counts(
+      numbered.map((at) => row[at] ?? ''),
+      2,
+    ) &&
+    names.every((cell) => asWritten(cell) === undefined || /^\d{1,3}$/.test(cell.trim())) &&
+    numbered.every((at) => (asWritten(below[at] ?? '')?.mark ?? null) !== null)
+  )
 }
 
 export interface Column {

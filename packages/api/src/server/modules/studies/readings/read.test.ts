@@ -3,16 +3,17 @@ import { describe, expect, it } from 'vitest'
 import type { ReadingsInput } from '../../../../contract/readings'
 import { ProblemError } from '../../../errors'
 import { readTextFile, readText } from '../../../tables/csv/read-text'
-import { readingsOf, readReadings, type ReadReadings } from './read'
+import { readReadings } from './read'
+import { readingsOf, type ReadReadings } from './take'
 
 const paste = (text: string, more: Partial<ReadingsInput> = {}) => {
   const input = { source: 'pasted' as const, ...more }
   const separator = input.separator ?? (input.source === 'typed' ? 'none' : undefined)
-  return readingsOf(readText(text, separator), input, undefined)
+  return readingsOf(readText(text, separator), input)
 }
 const upload = (content: string | Buffer, more: Partial<ReadingsInput> = {}) => {
   const file = { name: 'bore.csv', bytes: Buffer.from(content) }
-  return readingsOf(readTextFile(file, more), { source: 'uploaded', ...more }, file)
+  return readingsOf(readTextFile(file, more), { source: 'uploaded', ...more })
 }
 const values = (read: ReadReadings) => read.readings.map(({ value }) => value)
 const texts = (read: ReadReadings) => read.readings.map(({ text }) => text)
@@ -41,14 +42,16 @@ describe('one column', () => {
     expect(values(read)).toEqual([24.001, 23.999, 24])
     expect(texts(read)).toEqual(['24.001', '23.999', '24.000'])
     expect(read.readAs).toEqual({
+      kind: 'csv',
+      sheet: null,
       encoding: 'utf-8',
       byteOrderMark: false,
       separator: 'none',
       decimal: 'point',
-      direction: 'down',
+      layout: 'long',
       headerRows: 0,
-      column: 'A',
-      columnName: null,
+      columns: ['A'],
+      columnNames: [null],
     })
     expect([read.errors, read.notes]).toEqual([[], []])
   })
@@ -96,8 +99,8 @@ describe('several columns', () => {
       separator: 'semicolon',
       decimal: 'comma',
       headerRows: 1,
-      column: 'B',
-      columnName: 'Messwert [mm]',
+      columns: ['B'],
+      columnNames: ['Messwert [mm]'],
     })
     expect(codes(read)).toEqual([])
   })
@@ -118,7 +121,7 @@ describe('several columns', () => {
   it('with quoted decimal commas between commas', () => {
     const read = upload('Nr,Reading\n1,"24,001"\n2,"23,999"\n')
     expect(values(read)).toEqual([24.001, 23.999])
-    expect(read.readAs).toMatchObject({ separator: 'comma', decimal: 'comma', column: 'B' })
+    expect(read.readAs).toMatchObject({ separator: 'comma', decimal: 'comma', columns: ['B'] })
   })
   it('with commas in both roles are joined where the heading proves it, and the answer says so', () => {
     const read = paste('Nr,Reading\n1,24,001\n2,23,999\n3,24,000')
@@ -126,9 +129,9 @@ describe('several columns', () => {
     expect(codes(read)).toContain('comma-both')
     // Sent back as named, it is read the same.
     const again = paste('Nr,Reading\n1,24,001\n2,23,999\n3,24,000', {
-      separator: read.readAs.separator,
+      separator: read.readAs.separator ?? undefined,
       decimal: read.readAs.decimal,
-      column: 'B',
+      columns: ['B'],
       headerRows: 1,
     })
     expect(values(again)).toEqual([24.001, 23.999, 24])
@@ -139,7 +142,7 @@ describe('several columns', () => {
   it('pasted from a spreadsheet come with tabs', () => {
     const read = paste('Time\tReading\tBy\n08:00\t24,001\tA\n08:10\t23,999\tA')
     expect(values(read)).toEqual([24.001, 23.999])
-    expect(read.readAs).toMatchObject({ separator: 'tab', decimal: 'comma', column: 'B' })
+    expect(read.readAs).toMatchObject({ separator: 'tab', decimal: 'comma', columns: ['B'] })
   })
   it('keep their places when the first cell of a row is empty', () => {
     expect(values(paste('Reading\tNote\n\tlost\n24.001\t\n24.002\tok'))).toEqual([24.001, 24.002])
@@ -149,23 +152,23 @@ describe('several columns', () => {
     const text = '24.001;24.101\n24.002;24.102'
     const read = paste(text)
     expect([values(read), codes(read)]).toEqual([[24.001, 24.002], ['column-chosen']])
-    expect(values(paste(text, { column: 'B' }))).toEqual([24.101, 24.102])
+    expect(values(paste(text, { columns: ['B'] }))).toEqual([24.101, 24.102])
     expect(read.columns).toEqual([
       { letter: 'A', name: null, numbers: 2, chosen: true },
       { letter: 'B', name: null, numbers: 2, chosen: false },
     ])
-    expect(problem(() => paste(text, { column: 'D' }))).toMatchObject({ path: 'body.column' })
+    expect(problem(() => paste(text, { columns: ['D'] }))).toMatchObject({ path: 'body.columns' })
   })
   it('are taken from beside a column that counts, also where most of them are wrong', () => {
     const read = paste('Nr;Wert\n1;24,001\n2;lost\n3;1.024,5\n4;-')
-    expect(read.readAs.column).toBe('B')
+    expect(read.readAs.columns).toEqual(['B'])
     expect(places(read)).toEqual(['B3 not-a-number', 'B4 thousands-separator', 'B5 not-a-number'])
-    expect(paste('Nr;x\n1;24,001\n3;24,002').readAs.column).toBe('B')
+    expect(paste('Nr;x\n1;24,001\n3;24,002').readAs.columns).toEqual(['B'])
   })
   it('may stand under a title, a day and units, which are passed over', () => {
     const read = upload('Bore gauge BG-14\nDay;2026-11-02\nNr;Reading\n;mm\n1;24,001\n2;24,002\n')
     expect(values(read)).toEqual([24.001, 24.002])
-    expect(read.readAs).toMatchObject({ headerRows: 4, columnName: 'Reading' })
+    expect(read.readAs).toMatchObject({ headerRows: 4, columnNames: ['Reading'] })
     expect(codes(read)).toEqual(['rows-passed-over'])
   })
   it('may have empty cells and rows at the end', () => {
@@ -196,7 +199,7 @@ describe('one row', () => {
   it('of numbers is read from left to right, past its label', () => {
     const read = paste('Reading\t24.001\t24.002\t24.003')
     expect(values(read)).toEqual([24.001, 24.002, 24.003])
-    expect(read.readAs).toMatchObject({ direction: 'across', column: null })
+    expect(read.readAs).toMatchObject({ layout: 'wide' })
     expect(codes(read)).toEqual(['read-across'])
   })
   it('names the column of a bad cell', () => {
@@ -209,7 +212,7 @@ describe('encodings', () => {
   it('are told apart: Latin-1 with µ and ±', () => {
     const read = upload(latin('Nr;Abweichung [µm] ±\n1;0,2\n2;-0,1\n'))
     expect(values(read)).toEqual([0.2, -0.1])
-    expect(read.readAs).toMatchObject({ encoding: 'windows-1252', columnName: 'Abweichung [µm] ±' })
+    expect(read.readAs).toMatchObject({ encoding: 'windows-1252', columnNames: ['Abweichung [µm] ±'] })
     expect(codes(read)).toEqual(['read-as-latin-1'])
   })
   it('are told apart: what only Windows-1252 has', () => {
@@ -217,9 +220,9 @@ describe('encodings', () => {
     expect(read.firstRows[0]?.cells).toEqual(['€ –'])
   })
   it('are told apart: UTF-8 with and without a byte order mark', () => {
-    expect(upload('Wert µm\n0,2\n').readAs).toMatchObject({ encoding: 'utf-8', columnName: 'Wert µm' })
+    expect(upload('Wert µm\n0,2\n').readAs).toMatchObject({ encoding: 'utf-8', columnNames: ['Wert µm'] })
     const marked = upload('\ufeffReading\n24.001\n')
-    expect(marked.readAs).toMatchObject({ encoding: 'utf-8', byteOrderMark: true, columnName: 'Reading' })
+    expect(marked.readAs).toMatchObject({ encoding: 'utf-8', byteOrderMark: true, columnNames: ['Reading'] })
     expect(values(upload('\ufeff24.001\n24.002'))).toEqual([24.001, 24.002])
   })
   it('are told apart: UTF-16 with tabs, as spreadsheets save text', () => {
@@ -228,7 +231,7 @@ describe('encodings', () => {
     expect(read.readAs).toMatchObject({ encoding: 'utf-16', separator: 'tab' })
   })
   it('may be chosen, and are refused where the bytes are not of it', () => {
-    expect(upload(latin('Wert µ\n1,5'), { encoding: 'windows-1252' }).readAs.columnName).toBe('Wert µ')
+    expect(upload(latin('Wert µ\n1,5'), { encoding: 'windows-1252' }).readAs.columnNames).toEqual(['Wert µ'])
     expect(problem(() => upload(latin('Wert µ\n1,5'), { encoding: 'utf-8' })).path).toBe('body.encoding')
   })
 })
