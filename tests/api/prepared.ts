@@ -224,10 +224,13 @@ export class Story {
     return now.params
   }
 
-  /** A registered study, computed from readings that the engineer took and uploaded, or typed. */
+  /**
+   * A registered study, computed from readings that the engineer took and uploaded, or typed; beside another column,
+   * which would be read if none were chosen, the choice is remembered.
+   */
   async study(
     task: { id: string; standard: { id: string } },
-    { readings = goodReadings, takenBy = this.people.engineer, upload = true } = {},
+    { readings = goodReadings, takenBy = this.people.engineer, upload = true, beside = false } = {},
   ): Promise<studies.Study> {
     const code = `BS-${(this.#counter += 1)}`
     const engineer = this.by('engineer')
@@ -241,13 +244,17 @@ export class Story {
         },
       },
     )
-    const bytes = Buffer.from(`reading\r\n${readings.join('\r\n')}\r\n`)
+    const rows = beside
+      ? ['left;value', ...readings.map((reading) => `${reading};1.5`)]
+      : ['reading', ...readings]
+    const bytes = Buffer.from(`${rows.join('\r\n')}\r\n`)
     return engineer.call(
       studies.storeReadings,
       { studyId: registered.id },
       {
         body: {
           ...(upload ? { source: 'uploaded' } : { source: 'typed', text: readings.join('\n') }),
+          ...(beside ? { columns: ['A'] } : {}),
           expectedVersion: registered.rowVersion,
           complete: true,
           collectedOn: this.harness.now().toISOString().slice(0, 10),

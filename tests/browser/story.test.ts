@@ -1,5 +1,8 @@
 import type { Page } from 'playwright-core'
 import { afterAll, afterEach, beforeAll, describe, expect, it, vi } from 'vitest'
+import { tableTypes } from '../../packages/api/src/server/tables/content'
+import { rowsXml, workbookParts } from '../../packages/api/src/server/tables/testing/workbook'
+import { zipOf } from '../../packages/api/src/server/tables/testing/zip'
 import { axeFaults, choose, dayIn, picture, TwoSides } from './support'
 
 const part = '9022-005'
@@ -12,6 +15,23 @@ const csv = (): Buffer => {
   const rows = offsets.map((offset, at) => `${at + 1};${(61.49 + offset / 100).toFixed(2).replace('.', ',')}`)
   return Buffer.from(`\uFEFFNo.;Reading [mm]\r\n${rows.join('\r\n')}\r\n`, 'utf8')
 }
+
+/** A workbook with a cover and the readings of three trials beside each other. */
+const workbook = (): Buffer =>
+  zipOf(
+    workbookParts({
+      sheets: [
+        { name: 'Cover', rows: rowsXml([['Height gauge', 'HG-6']]) },
+        {
+          name: 'Data',
+          rows: rowsXml([
+            ['Part', 'Trial 1', 'Trial 2', 'Trial 3'],
+            ...[1, 2, 3, 4].map((number) => [`part ${number}`, 61.49, 61.5, 61.48]),
+          ]),
+        },
+      ],
+    }),
+  )
 
 describe('the main job, from the first proposal to the acceptance', () => {
   const two = new TwoSides('story')
@@ -116,6 +136,13 @@ describe('the main job, from the first proposal to the acceptance', () => {
 
   it('uploads a file with a decimal comma, sees how it was read, and computes', async () => {
     await supplierPage.getByText('Upload a file').click()
+    // A workbook first: its readings stand on the second sheet, in three columns.
+    await supplierPage
+      .locator('input[type=file]')
+      .setInputFiles({ name: 'height.xlsx', mimeType: tableTypes.xlsx, buffer: workbook() })
+    await supplierPage.getByText('sheet “Data”, three columns, B to D').waitFor()
+    await supplierPage.getByRole('checkbox', { name: 'D, Trial 3' }).uncheck()
+    await supplierPage.getByText('sheet “Data”, two columns, B to C').waitFor()
     await supplierPage
       .locator('input[type=file]')
       .setInputFiles({ name: 'height.csv', mimeType: 'text/csv', buffer: csv() })

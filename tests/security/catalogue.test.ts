@@ -202,6 +202,7 @@ describe('the running program', () => {
     'agreement_rounds',
     'agreement_versions',
     'agreements',
+    'column_mappings',
     'house_terms',
     'memberships',
     'submission_by_hand',
@@ -224,7 +225,7 @@ describe('the running program', () => {
     expect(writtenOnce.filter((table) => !tables.includes(table))).toEqual([])
   })
 
-  it('may remove drafts and memberships, nothing else', async () => {
+  it('may remove drafts, memberships and habits of reading files, nothing else', async () => {
     expect(await allowed('DELETE')).toEqual(removable)
   })
 

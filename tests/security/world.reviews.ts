@@ -36,7 +36,7 @@ export async function reviewRows(story: Story): Promise<Samples> {
 
   const manual = await story.task()
   await story.agree(manual.part.id, [...clauses, byHand])
-  await story.study(manual)
+  await story.study(manual, { beside: true })
   const draft = await story.submission(manual.id, 'draft')
   await story.by('engineer').call(
     submissions.judgeByHand,

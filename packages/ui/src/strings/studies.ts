@@ -223,7 +223,7 @@ export const entryWords = {
   sheet: 'Sheet',
   sheetHidden: 'hidden in the workbook',
   layout: 'The readings stand in',
-  layouts: { long: 'one column', wide: 'several columns, row by row' } satisfies Record<
+  layouts: { long: 'one column', wide: 'several columns' } satisfies Record<
     studies.ReadAs['layout'],
     string
   >,
@@ -242,7 +242,7 @@ export const entryWords = {
   row: 'Row',
   firstRows: 'First rows of the table',
   toRow: (rows: number) => `${formatCount(rows, 'row')} in all`,
-  errors: (count: number) => `${formatCount(count, 'cell')} without a readable number`,
+  errors: (count: number) => `${formatCount(count, 'cell')} without a reading`,
   errorsText: 'Nothing is stored while they stand: mend them, or leave their rows out.',
   moreErrors: (count: number) => `and ${formatNumber(count)} more`,
   emptyCell: '(empty)',

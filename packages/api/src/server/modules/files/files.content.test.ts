@@ -11,7 +11,10 @@ describe('the type of a file', () => {
     ['MZ\u0000\u0001', null],
     ['<!doctype html><script>1</script>', null],
     ['{"a":1}', null],
-    ['PK\u0003\u0004 … xl/workbook.xml …', 'application/vnd.openxmlformats-officedocument.spreadsheetml.sheet'],
+    [
+      'PK\u0003\u0004 … xl/workbook.xml …',
+      'application/vnd.openxmlformats-officedocument.spreadsheetml.sheet',
+    ],
     ['PK\u0003\u0004 … xl/workbook.xml … xl/vbaProject.bin', null],
     ['PK\u0003\u0004 … word/document.xml …', null],
   ])('%j is %s by its content', (text, type) => expect(contentTypeOf(Buffer.from(text))).toBe(type))

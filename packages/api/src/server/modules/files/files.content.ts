@@ -43,7 +43,9 @@ export function notOfType({ name, bytes }: UploadedFile, wanted: string, mend: s
     bytes.length === 0
       ? 'is empty'
       : `is ${otherFormat(bytes)?.name ?? `no ${wanted} file`}, whatever its name says`
-  return invalidInput([{ path: 'body.file', message: `${name} ${is}. Files are taken as ${wanted}. ${mend}` }])
+  return invalidInput([
+    { path: 'body.file', message: `${name} ${is}. Files are taken as ${wanted}. ${mend}` },
+  ])
 }
 
 // Control characters, marks that turn the direction of text, lone surrogates, and what some systems forbid.

@@ -53,7 +53,8 @@ const summaryWords =
   /^\s*(mean|average|avg|sum|total|count|std\.?( ?dev\.?)?|standard deviation|range|median|min(imum)?|max(imum)?|mittelwert|summe|standardabweichung|spannweite|moyenne|somme|media|suma)\s*:?$/i
 
 /** Whether a row or a column of this name holds figures about the readings. */
-export const isSummary = (name: string): boolean => name !== '' && !/^\d/.test(name) && summaryWords.test(name)
+export const isSummary = (name: string): boolean =>
+  name !== '' && !/^\d/.test(name) && summaryWords.test(name)
 
 /** Reads every cell; those without a reading are named with their place, what is wrong, and how to mend it. */
 export function readCells(
