@@ -1,7 +1,7 @@
 import type { Permission, Side } from '../../contract/access'
 import { newId } from '../db/columns'
 import type { Database } from '../db/database'
-import { withTenant } from '../db/tenant'
+import { withTenant, type Tenant } from '../db/tenant'
 import { defineError, ProblemError } from '../errors'
 import { securityEvents } from '../modules/sign-in/sign-in.table'
 import type { Services } from '../services'
