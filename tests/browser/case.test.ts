@@ -27,9 +27,9 @@ describe('a challenge answered by another criterion, one that quotes a what-if, 
       .getByRole('link', { name: new RegExp(gauge) })
       .first()
       .click()
+    await page.waitForURL(/submissions\/[0-9a-f-]{36}/)
+    submission = /submissions\/[0-9a-f-]{36}/.exec(page.url())?.[0] ?? ''
     await page.getByRole('button', { name: 'Change the criterion' }).click()
-    submission = /caseOf=([0-9a-f-]{36})/.exec(page.url())?.[1] ?? ''
-    submission = `submissions/${submission}`
     await page.getByText(/The challenge you came from is attached/).waitFor()
     await page.getByLabel('Margin either way').fill('8')
     await page.getByRole('button', { name: /^Send/ }).click()
