@@ -114,7 +114,7 @@ describe('what is judged by hand, and what becomes of the acceptance', () => {
     const page = customerPage
     await two.at('customer', submission)
     await page.getByRole('heading', { name: 'What was judged by hand?' }).waitFor()
-    await page.getByText(reason).first().waitFor()
+    await page.getByText(reason).filter({ visible: true }).first().waitFor()
     expect(await bytesOf(page)).toEqual(chart.buffer)
     await act(page, 'Accept')
     await page.getByText(/^Accepted by Brackwell Drivelines on/).waitFor()
