@@ -318,9 +318,15 @@ describe('the other side', () => {
       'submission_studies',
       'submission_by_hand',
       'submission_notes',
-      'files',
     ]) {
       const { rowCount } = await within({ org }, () => app.query(`select from ${table}`))
+      expect([table, rowCount]).toEqual([table, 0])
+    }
+    // A customer has files and imports of its own.
+    for (const table of ['files', 'imports']) {
+      const { rowCount } = await within({ org }, () =>
+        app.query(`select from ${table} where org_id <> $1`, [org]),
+      )
       expect([table, rowCount]).toEqual([table, 0])
     }
     const drafts = await within({ org }, () =>

@@ -18,6 +18,7 @@ import { openDatabase } from '../../packages/api/src/server/db/database'
 import { tellReminders } from '../../packages/api/src/server/modules/reminders/reminders.service'
 import type { Organisation, Person } from '../api/harness'
 import { clauses, startStory } from '../api/prepared'
+import { importRow } from './world.imports'
 import { reviewRows } from './world.reviews'
 
 /** Ids for the parameters of paths, and for fields of bodies, by their name. */
@@ -238,6 +239,7 @@ export async function startWorld() {
     ...shared,
     organisationId: victims[side].id,
     invitationId: invited[side].id,
+    importId: await importRow(story, side === 'supplier' ? 'engineer' : 'quality'),
     ...(await one(
       `select id as "messageId" from messages where org_id = $1 and user_id = $2 and side = $3 limit 1`,
       victims[side].id,

@@ -67,6 +67,7 @@ export const permissions = {
   'requests.read': { sides: both, roles: everybody },
   'requests.ask': { sides: ['customer'], roles: customerWorkers },
   'conditions.report': { sides: both, roles: [...supplierWorkers, ...customerWorkers] },
+  'imports.read': { sides: both, roles: everybody },
   'attachments.add': { sides: both, roles: [...supplierWorkers, ...customerWorkers] },
   'record.read': { sides: both, roles: everybody },
   'evaluate.run': { sides: both, roles: everybody },

@@ -26,6 +26,7 @@ export const recordSubjects = [
   'measuring-task',
   'gauge',
   'reference-standard',
+  'import',
   'member',
   'organisation',
   'invitation',

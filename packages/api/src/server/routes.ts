@@ -12,6 +12,7 @@ import { gaugesRoutes } from './modules/gauges/gauges.routes'
 import { standardsRoutes } from './modules/gauges/standards.routes'
 import { houseTermsRoutes } from './modules/house-terms/house-terms.routes'
 import { invitationsRoutes } from './modules/invitations/invitations.routes'
+import { importsRoutes } from './modules/imports/imports.routes'
 import { messagesRoutes } from './modules/notifications/messages.routes'
 import { characteristicsRoutes } from './modules/parts/characteristics.routes'
 import { partsRoutes } from './modules/parts/parts.routes'
@@ -53,6 +54,7 @@ export function allRoutes({ database, config, identity, sessions }: RouteDepende
     ...agreementsRoutes,
     ...houseTermsRoutes,
     ...studiesRoutes,
+    ...importsRoutes(database),
     ...requestsRoutes,
     ...messagesRoutes,
     ...organisationsRoutes,

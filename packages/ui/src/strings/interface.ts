@@ -51,6 +51,7 @@ export const problemNoticeWords = {
     'effective-date-past': 'The first day in force has passed',
     'limits-changed': 'The limits have changed since',
     'not-as-seen': 'This is not what you saw',
+    'changed-since-preview': 'The preview no longer holds',
     'own-side-has-signed': 'Your side has signed',
     'confirmed-by-customer': 'The customer stands behind this',
     'gauge-in-use': 'This gauge is in use',

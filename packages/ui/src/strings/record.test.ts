@@ -55,6 +55,7 @@ describe('the sentence of an event', () => {
       'recorded “second thoughts had” for ',
       '',
     ])
+    expect(eventSentence('study.registered', { registeredBeforehand: false })[1]).toMatch(/taken before/)
     expect(eventSentence('submission.signed')).toEqual(['signed ', ' and submitted it'])
   })
 })
@@ -85,6 +86,7 @@ describe('what an event adds', () => {
       { roles: ['admin', 'reader'], endsOn: '2027-01-31' },
       'Organisation admin, Reader. Until 31 Jan 2027.',
     ],
+    ['import.applied', { new: 3, changed: 0, badRows: 2 }, '3 new, 0 changed. 2 rows left out.'],
     ['part.changed', { label: 'C', reason: '' }, ''],
   ])('for %s with %j is “%s”', (type, data, words) => expect(eventDetail({ type, data })).toBe(words))
 })

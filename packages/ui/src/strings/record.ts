@@ -20,6 +20,7 @@ export const recordSubjectWords: Record<record.RecordSubject, [named: string, un
   'measuring-task': ['measuring task', 'a measuring task'],
   gauge: ['gauge', 'a gauge'],
   'reference-standard': ['reference standard', 'a reference standard'],
+  import: ['the import of', 'an import'],
   member: ['member', 'a former member'],
   organisation: ['organisation', 'the organisation'],
   invitation: ['invitation of', 'an invitation'],
@@ -39,6 +40,7 @@ export const recordFilterWords: Record<record.RecordSubject, string> = {
   'measuring-task': 'measuring tasks',
   gauge: 'gauges',
   'reference-standard': 'reference standards',
+  import: 'imports',
   member: 'members',
   organisation: 'organisation',
   invitation: 'invitations',
@@ -69,6 +71,7 @@ export const eventWords: Record<string, string> = {
   'request.withdrawn': 'withdrew *',
   'request.answered': 'answered * with a submission',
   'study.registered': 'registered * before its first reading',
+  'study.taken-over': 'registered *, whose readings were taken before',
   'study.readings-kept': 'kept readings of *',
   'study.computed': 'finished the readings of * and had it computed',
   'study.corrected': 'stored corrected readings of *',
@@ -142,6 +145,7 @@ export const eventWords: Record<string, string> = {
   'reference-standard.restored': 'restored *',
   'calibration.entered': 'entered a calibration of *',
   'calibration.certificate-added': 'added the certificate to a calibration of *',
+  'import.applied': 'finished *',
   'member.changed': 'changed the membership of *',
   'member.joined': 'accepted an invitation and joined: *',
   'invitation.sent': 'sent *',
@@ -152,16 +156,21 @@ export const eventWords: Record<string, string> = {
   'organisation.changed': 'changed the details of *',
 }
 
+type Data = record.RecordEvent['data']
+
 /** The sentence around the thing of an event; one of a kind that has no words yet is told by its type. */
-export function eventSentence(type: string): [before: string, after: string] {
-  const words = eventWords[type] ?? `recorded “${type.replace(/^[^.]*\./, '').replaceAll('-', ' ')}” for *`
+export function eventSentence(type: string, data: Data = {}): [before: string, after: string] {
+  // What was registered afterwards was never before its first reading.
+  const isTakenOver = type === 'study.registered' && data.registeredBeforehand === false
+  const words =
+    eventWords[isTakenOver ? 'study.taken-over' : type] ??
+    `recorded “${type.replace(/^[^.]*\./, '').replaceAll('-', ' ')}” for *`
   const [before = '', after = ''] = words.split('*')
   return [before, after]
 }
 
 const isText = (value: unknown): value is string => typeof value === 'string' && value.trim() !== ''
 
-type Data = record.RecordEvent['data']
 type Detail = (data: Data) => string
 
 const day = (value: unknown): string => (isText(value) ? formatDate(value) : '')
@@ -211,6 +220,13 @@ const details: Record<string, Detail> = {
   'submission.reopened': ({ revision, limits }) =>
     has(revision, (label) => `Revision ${label}: ${limitsWords[limits as LimitsComparison] ?? ''}.`),
   'submission.carried-over': ({ revision }) => has(revision, (label) => `Revision ${label}.`),
+  'import.applied': ({ new: made, changed, badRows }) =>
+    [
+      `${String(made)} new, ${String(changed)} changed.`,
+      Number(badRows) > 0 ? `${String(badRows)} rows left out.` : '',
+    ]
+      .filter(Boolean)
+      .join(' '),
   'submission.signed': verdicts,
   'submission.corrected': verdicts,
 }

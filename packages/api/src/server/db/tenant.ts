@@ -25,6 +25,8 @@ export interface Tenant extends TenantContext {
   record(event: PendingEvent): void
   /** Tells people in the app and by mail; written when the transaction ends. */
   notify(notice: Notice): void
+  /** Begins something of its own once all of this is committed; not at all where it is not. */
+  afterwards(begin: () => void): void
 }
 
 /**
@@ -38,7 +40,8 @@ export async function withTenant<T>(
   context: TenantContext,
   work: (tenant: Tenant) => Promise<T>,
 ): Promise<T> {
-  return database.transaction(async (tx) => {
+  const afterwards: (() => void)[] = []
+  const answer = await database.transaction(async (tx) => {
     await tx.execute(
       sql`select set_config('app.org_id', ${context.organisationId}, true), set_config('app.user_id', ${context.userId}, true)`,
     )
@@ -51,12 +54,15 @@ export async function withTenant<T>(
       now: services.clock().toISOString(),
       record: (event) => void events.push(event),
       notify: (notice) => void notices.push(notice),
+      afterwards: (begin) => void afterwards.push(begin),
     }
     const result = await work(tenant)
     await sendNotices(tenant, notices)
     await appendEvents(tenant, events)
     return result
   })
+  for (const begin of afterwards) begin()
+  return answer
 }
 
 /** Runs `work` with only the person known: sign-in, the switcher. Sees no organisation's rows. */

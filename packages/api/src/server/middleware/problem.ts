@@ -50,7 +50,8 @@ const problemPage = ({ detail, id }: Problem): string => `<!doctype html>
 </html>
 `
 
-function toProblem(error: unknown): Problem {
+/** An error as problem details; of an unexpected one nothing more than that. */
+export function toProblem(error: unknown): Problem {
   if (error instanceof ProblemError) {
     return {
       type: `urn:evenrule:problem:${error.code}`,

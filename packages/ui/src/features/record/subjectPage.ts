@@ -12,6 +12,7 @@ const pages: Record<record.RecordSubject, { path: (id: string) => string; side?:
   'measuring-task': { path: (id) => `tasks/${id}` },
   gauge: { path: (id) => `gauges/${id}`, side: 'supplier' },
   'reference-standard': { path: (id) => `standards/${id}`, side: 'supplier' },
+  import: { path: (id) => `imports/${id}` },
   member: { path: () => 'members' },
   organisation: { path: () => 'members' },
   invitation: { path: () => 'members' },

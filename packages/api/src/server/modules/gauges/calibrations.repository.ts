@@ -1,4 +1,4 @@
-import { and, desc, eq, isNull, lte, sql, type AnyColumn, type SQL } from 'drizzle-orm'
+import { and, desc, eq, inArray, isNull, lte, sql, type AnyColumn, type SQL } from 'drizzle-orm'
 import { dueSoonDays, type CalibrationStanding } from '../../../contract/calibrations'
 import type { listGaugeCalibrations } from '../../../contract/calibrations'
 import type { QueryOf } from '../../../contract/define'
@@ -102,6 +102,18 @@ export async function selectCalibrations(
     .orderBy(...orderOf({ calibratedOn, dueOn }, query.sort, calibrations.id))
     .limit(windowOf(query).limit)
     .offset(windowOf(query).offset)
+}
+
+/** Every calibration of some gauges. */
+export async function selectCalibrationsOfGauges(
+  { tx, organisationId }: Tenant,
+  gaugeIds: readonly string[],
+): Promise<CalibrationRow[]> {
+  if (gaugeIds.length === 0) return []
+  return tx
+    .select()
+    .from(calibrations)
+    .where(and(eq(calibrations.orgId, organisationId), inArray(calibrations.gaugeId, [...gaugeIds])))
 }
 
 export async function insertCalibration(

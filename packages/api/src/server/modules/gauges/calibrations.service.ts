@@ -42,10 +42,7 @@ export async function addCalibration(
 ): Promise<CalibrationAnswer> {
   const row = await rowOf(tenant, thing)
   if (row.archivedAt) throw isArchived('gaugeId' in thing ? 'gauge' : 'reference standard')
-  if (body.calibratedOn > (await todayOf(tenant)))
-    throw invalidInput([
-      { path: 'body.calibratedOn', message: 'This day is still to come. Enter the day of the calibration.' },
-    ])
+  refuseDayToCome(body, await todayOf(tenant))
   const fileId = certificate ? await keepFile(tenant, certificate) : null
   const { words, ...entered } = body
   const calibration = await insertCalibration(tenant, { ...entered, ...thing, fileId })
@@ -68,6 +65,14 @@ export async function addCalibration(
       calibration.id,
     )
   return { ...calibration, certificate: fileId ? await fileById(tenant, fileId) : null }
+}
+
+/** Refuses a calibration of a day that is still to come. */
+export function refuseDayToCome({ calibratedOn }: { calibratedOn: string }, today: string): void {
+  if (calibratedOn > today)
+    throw invalidInput([
+      { path: 'body.calibratedOn', message: 'This day is still to come. Enter the day of the calibration.' },
+    ])
 }
 
 const foundOutOfLimits = (certificateNumber: string): string =>

@@ -1,4 +1,4 @@
-import { and, eq, isNull, sql } from 'drizzle-orm'
+import { and, eq, inArray, isNull, sql } from 'drizzle-orm'
 import type { QueryOf } from '../../../contract/define'
 import type { listGauges } from '../../../contract/gauges'
 import { archivedIs, containing, orderOf, totalOverPages, windowOf } from '../../db/paging'
@@ -67,6 +67,16 @@ export async function selectListedGauge(
 export async function selectGauge(tenant: Tenant, gaugeId: string): Promise<GaugeRow | undefined> {
   const [row] = await tenant.tx.select().from(gauges).where(ownGauge(tenant, gaugeId))
   return row
+}
+
+/** Gauges by their codes with the names of their sites, archived ones too. */
+export async function selectGaugesCoded({ tx, organisationId }: Tenant, codes: readonly string[]) {
+  if (codes.length === 0) return []
+  return tx
+    .select({ gauge: gauges, site: sites.name })
+    .from(gauges)
+    .leftJoin(sites, and(eq(sites.orgId, gauges.orgId), eq(sites.id, gauges.siteId)))
+    .where(and(eq(gauges.orgId, organisationId), inArray(gauges.code, [...codes])))
 }
 
 /** What people enter of a gauge. */

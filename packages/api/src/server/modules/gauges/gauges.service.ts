@@ -65,14 +65,7 @@ export async function changeGaugeOf(
   { expectedVersion, site, ...entered }: BodyOf<typeof changeGauge>,
 ): Promise<GaugeAnswer> {
   const before = await gaugeById(tenant, gaugeId)
-  if (before.archivedAt) throw isArchived('gauge')
-  if (!areCompatible(before.unit, entered.unit) && (await selectTasksOfGauge(tenant, gaugeId)).length > 0)
-    throw invalidInput([
-      {
-        path: 'body.unit',
-        message: `This gauge measures characteristics in ${before.unit} or a unit of the same quantity; ${entered.unit} is of another. Archive its measuring tasks first.`,
-      },
-    ])
+  await refuseGaugeChange(tenant, before, entered)
   const siteId = site === null ? null : await siteNamed(tenant, site)
   const updated = await uniqueOr409(taken, () =>
     updateGauge(tenant, gaugeId, expectedVersion, { ...entered, siteId }),
@@ -83,6 +76,22 @@ export async function changeGaugeOf(
     for (const task of await renameInTasks(tenant, updated))
       recordTask(tenant, task, 'measuring-task.changed')
   return readGaugeOf(tenant, gaugeId)
+}
+
+/** Refuses a change that a gauge does not allow as it stands. */
+export async function refuseGaugeChange(
+  tenant: Tenant,
+  before: GaugeRow,
+  { unit }: Pick<GaugeRow, 'unit'>,
+): Promise<void> {
+  if (before.archivedAt) throw isArchived('gauge')
+  if (!areCompatible(before.unit, unit) && (await selectTasksOfGauge(tenant, before.id)).length > 0)
+    throw invalidInput([
+      {
+        path: 'body.unit',
+        message: `This gauge measures characteristics in ${before.unit} or a unit of the same quantity; ${unit} is of another. Archive its measuring tasks first.`,
+      },
+    ])
 }
 
 export async function archiveGaugeOf(

@@ -1,4 +1,4 @@
-import { and, eq, sql } from 'drizzle-orm'
+import { and, eq, inArray, sql } from 'drizzle-orm'
 import type { QueryOf } from '../../../contract/define'
 import type { listStandards } from '../../../contract/standards'
 import { archivedIs, containing, orderOf, totalOverPages, windowOf } from '../../db/paging'
@@ -67,6 +67,18 @@ export type EnteredStandard = Pick<
   StandardRow,
   'code' | 'name' | 'certifiedValue' | 'unit' | 'expandedUncertainty'
 > & { coverageFactor?: string }
+
+/** Reference standards by their codes, archived ones too. */
+export async function selectStandardsCoded(
+  { tx, organisationId }: Tenant,
+  codes: readonly string[],
+): Promise<StandardRow[]> {
+  if (codes.length === 0) return []
+  return tx
+    .select()
+    .from(referenceStandards)
+    .where(and(eq(referenceStandards.orgId, organisationId), inArray(referenceStandards.code, [...codes])))
+}
 
 export async function insertStandard(tenant: Tenant, entered: EnteredStandard): Promise<StandardRow> {
   const [inserted] = await tenant.tx

@@ -117,6 +117,17 @@ export async function selectActiveOfRevisions(
     .orderBy(asc(characteristics.number))
 }
 
+/** Every characteristic of some parts, of all their revisions, archived ones too. */
+export async function selectCharacteristicsOfParts(
+  tenant: Tenant,
+  partIds: readonly string[],
+): Promise<CharacteristicInPart[]> {
+  if (partIds.length === 0) return []
+  return fromCharacteristics(tenant).where(
+    and(ownCharacteristics(tenant), inArray(characteristics.partId, [...partIds])),
+  )
+}
+
 export async function selectCharacteristic(
   tenant: Tenant,
   characteristicId: string,

@@ -63,12 +63,23 @@ export async function characteristicById(
   return asAnswer(row, (await proofOfCharacteristics(tenant, [characteristicId])).get(characteristicId))
 }
 
+type Entered = BodyOf<typeof createCharacteristic>
+
 /** Enters a characteristic; what the supplier enters waits for the customer's confirmation. */
 export async function enterCharacteristic(
   tenant: Tenant,
-  { partId, revisionId }: { partId: string; revisionId: string },
-  entered: BodyOf<typeof createCharacteristic>,
+  place: { partId: string; revisionId: string },
+  entered: Entered,
 ): Promise<CharacteristicAnswer> {
+  return characteristicById(tenant, (await storeCharacteristic(tenant, place, entered)).id)
+}
+
+/** The same where many are entered and nobody reads each answer. */
+export async function storeCharacteristic(
+  tenant: Tenant,
+  { partId, revisionId }: { partId: string; revisionId: string },
+  entered: Entered,
+): Promise<CharacteristicRow> {
   const part = await partRow(tenant, partId)
   if (part.archivedAt) throw isArchived('part')
   const revision = await selectRevision(tenant, part, revisionId)
@@ -80,7 +91,7 @@ export async function enterCharacteristic(
     }),
   )
   recordCharacteristic(tenant, row, 'characteristic.created', { ...entered, revision: revision.label })
-  return characteristicById(tenant, row.id)
+  return row
 }
 
 /**
@@ -92,8 +103,32 @@ export async function changeCharacteristicOf(
   characteristicId: string,
   { expectedVersion, ...entered }: BodyOf<typeof changeCharacteristic>,
 ): Promise<CharacteristicAnswer> {
+  await storeCharacteristicChange(tenant, characteristicId, { expectedVersion, ...entered })
+  return characteristicById(tenant, characteristicId)
+}
+
+/** The same where many are changed and nobody reads each answer. */
+export async function storeCharacteristicChange(
+  tenant: Tenant,
+  characteristicId: string,
+  { expectedVersion, ...entered }: BodyOf<typeof changeCharacteristic>,
+): Promise<void> {
   await lockCharacteristic(tenant, characteristicId)
-  const row = await loaded(tenant, characteristicId)
+  await refuseChange(tenant, await loaded(tenant, characteristicId), entered)
+  const values = { ...entered, confirmedByCustomer: tenant.side === 'customer' }
+  const updated = await uniqueOr409(taken, () =>
+    updateCharacteristic(tenant, characteristicId, expectedVersion, values),
+  )
+  if (!updated) throw changedMeanwhile('characteristic')
+  recordCharacteristic(tenant, updated, 'characteristic.changed', values)
+}
+
+/** Refuses a change that a characteristic does not allow as it stands. */
+export async function refuseChange(
+  tenant: Tenant,
+  row: CharacteristicInPart,
+  entered: Entered,
+): Promise<void> {
   const { characteristic, part, spreadFrozenBy } = row
   if (part.archivedAt) throw isArchived('part')
   if (characteristic.archivedAt) throw isArchived('characteristic')
@@ -104,16 +139,9 @@ export async function changeCharacteristicOf(
   if (spreadFrozenBy !== null && spread !== null && spread !== entered.processStandardDeviation)
     throw spreadFrozen(`Agreement ${spreadFrozenBy}`)
   if (!areCompatible(characteristic.unit, entered.unit)) {
-    const measured = (await proofOfCharacteristics(tenant, [characteristicId])).get(characteristicId)
+    const measured = (await proofOfCharacteristics(tenant, [characteristic.id])).get(characteristic.id)
     if (measured && measured.tasks > 0) throw otherQuantity(entered.unit)
   }
-  const values = { ...entered, confirmedByCustomer: tenant.side === 'customer' }
-  const updated = await uniqueOr409(taken, () =>
-    updateCharacteristic(tenant, characteristicId, expectedVersion, values),
-  )
-  if (!updated) throw changedMeanwhile('characteristic')
-  recordCharacteristic(tenant, updated, 'characteristic.changed', values)
-  return characteristicById(tenant, characteristicId)
 }
 
 /** The customer stands behind what the supplier entered. */

@@ -1,4 +1,4 @@
-import { and, eq, sql } from 'drizzle-orm'
+import { and, eq, inArray, or, sql } from 'drizzle-orm'
 import { alias } from 'drizzle-orm/pg-core'
 import type { QueryOf } from '../../../contract/define'
 import type { listParts } from '../../../contract/parts'
@@ -70,6 +70,15 @@ export async function selectParts(tenant: Tenant, query: QueryOf<typeof listPart
 export async function selectPart(tenant: Tenant, partId: string): Promise<PartListed | undefined> {
   const [row] = await fromParts(tenant).where(and(ownParts(tenant), eq(parts.id, partId)))
   return row
+}
+
+/** Parts of this side by the customer's or the supplier's own number, archived ones too. */
+export async function selectPartsNumbered(tenant: Tenant, numbers: readonly string[]): Promise<PartListed[]> {
+  if (numbers.length === 0) return []
+  const wanted = [...numbers]
+  return fromParts(tenant).where(
+    and(ownParts(tenant), or(inArray(parts.number, wanted), inArray(parts.supplierNumber, wanted))),
+  )
 }
 
 /** The two parties of a relationship in which this organisation stands on the side it acts on. */

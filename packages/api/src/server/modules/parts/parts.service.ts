@@ -86,16 +86,24 @@ export async function changePartOf(
   partId: string,
   { expectedVersion, ...values }: BodyOf<typeof changePart>,
 ): Promise<PartAnswer> {
-  const part = await partRow(tenant, partId)
-  if (part.archivedAt) throw isArchived('part')
-  if (tenant.side === 'customer' && values.supplierNumber !== part.supplierNumber)
-    throw invalidInput([
-      { path: 'body.supplierNumber', message: 'This is the supplier’s own number; only they change it.' },
-    ])
+  refusePartChange(tenant, await partRow(tenant, partId), values)
   const updated = await uniqueOr409(taken, () => updatePart(tenant, partId, expectedVersion, values))
   if (!updated) throw changedMeanwhile('part')
   recordPart(tenant, updated, 'part.changed', { ...values })
   return partById(tenant, partId)
+}
+
+/** Refuses a change that a part does not allow as it stands. */
+export function refusePartChange(
+  tenant: Tenant,
+  part: PartRow,
+  { supplierNumber }: Pick<PartRow, 'supplierNumber'>,
+): void {
+  if (part.archivedAt) throw isArchived('part')
+  if (tenant.side === 'customer' && supplierNumber !== part.supplierNumber)
+    throw invalidInput([
+      { path: 'body.supplierNumber', message: 'This is the supplier’s own number; only they change it.' },
+    ])
 }
 
 /** Takes a part out of the lists. What the customer has confirmed, only the customer archives. */

@@ -1,4 +1,4 @@
-import { and, desc, eq, sql } from 'drizzle-orm'
+import { and, asc, desc, eq, inArray, sql } from 'drizzle-orm'
 import type { QueryOf } from '../../../contract/define'
 import type { listRevisions } from '../../../contract/parts'
 import { newId } from '../../db/columns'
@@ -57,6 +57,19 @@ export async function selectNewestRevisions(
     .where(and(eq(partRevisions.relationshipId, part.relationshipId), eq(partRevisions.partId, part.id)))
     .orderBy(desc(partRevisions.sequence))
     .limit(count)
+}
+
+/** Every revision of some parts, in their order. */
+export async function selectRevisionsOfParts(
+  { tx }: Tenant,
+  partIds: readonly string[],
+): Promise<RevisionRow[]> {
+  if (partIds.length === 0) return []
+  return tx
+    .select()
+    .from(partRevisions)
+    .where(inArray(partRevisions.partId, [...partIds]))
+    .orderBy(asc(partRevisions.sequence))
 }
 
 /** Adds a revision at the end of the part's sequence. */

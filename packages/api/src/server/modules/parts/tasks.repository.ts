@@ -111,6 +111,14 @@ export async function selectTask(tenant: Tenant, taskId: string): Promise<TaskRo
   return row
 }
 
+/** Every active task of some parts, of all their revisions. */
+export async function selectTasksOfParts(tenant: Tenant, partIds: readonly string[]): Promise<TaskListed[]> {
+  if (partIds.length === 0) return []
+  return fromTasks(tenant).where(
+    and(ownTasks(tenant), inArray(measuringTasks.partId, [...partIds]), isNull(measuringTasks.archivedAt)),
+  )
+}
+
 /** Every active task of a revision; a revision has a few dozen at most. */
 export async function selectTasksOfRevision(tenant: Tenant, revisionId: string): Promise<TaskListed[]> {
   return fromTasks(tenant)

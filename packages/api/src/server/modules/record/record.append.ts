@@ -36,7 +36,9 @@ export async function appendEvents(tenant: Tenant, events: readonly PendingEvent
   const byChain = new Map<string, PendingEvent[]>()
   for (const event of events) {
     const chain = event.relationship?.id ?? tenant.organisationId
-    byChain.set(chain, [...(byChain.get(chain) ?? []), event])
+    const own = byChain.get(chain)
+    if (own) own.push(event)
+    else byChain.set(chain, [event])
   }
   for (const chainId of [...byChain.keys()].sort()) {
     const own = byChain.get(chainId) ?? []
@@ -53,6 +55,9 @@ const ownersOf = (tenant: Tenant, event: PendingEvent) =>
         customerOrgId: event.relationship.customerOrgId,
       }
     : { orgId: tenant.organisationId, supplierOrgId: null, customerOrgId: null }
+
+/** One statement takes 65,535 values; an import appends thousands of events. */
+const insertedAtOnce = 1000
 
 async function appendToChain(
   tenant: Tenant,
@@ -102,7 +107,8 @@ async function appendToChain(
       hash,
     }
   })
-  await tx.insert(recordEvents).values(rows)
+  for (let at = 0; at < rows.length; at += insertedAtOnce)
+    await tx.insert(recordEvents).values(rows.slice(at, at + insertedAtOnce))
   await tx.execute(
     sql`update record_heads set sequence = ${sequence}, hash = ${hash} where chain_id = ${chainId}`,
   )

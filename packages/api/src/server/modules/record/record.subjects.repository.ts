@@ -6,6 +6,8 @@ import { agreements, agreementVersions } from '../agreements/agreements.table'
 import { gauges, referenceStandards } from '../gauges/gauges.table'
 import { houseTerms } from '../house-terms/house-terms.table'
 import { invitations } from '../invitations/invitations.table'
+import { files } from '../files/files.table'
+import { imports } from '../imports/imports.table'
 import { namesOfPeople } from '../organisations/people.repository'
 import { organisations } from '../organisations/organisations.table'
 import { characteristics, measuringTasks, parts } from '../parts/parts.table'
@@ -166,6 +168,14 @@ const finders: Record<RecordSubject, Finder> = {
       .from(referenceStandards)
       .where(inArray(referenceStandards.id, ids))
     return rows.map(({ id, code, name }) => ({ id, label: `${code} ${name}`, pageId: id }))
+  },
+  import: async ({ tx }, ids) => {
+    const rows = await tx
+      .select({ id: imports.id, label: files.name })
+      .from(imports)
+      .innerJoin(files, and(eq(files.orgId, imports.orgId), eq(files.id, imports.fileId)))
+      .where(inArray(imports.id, ids))
+    return rows.map((row) => ({ ...row, pageId: row.id }))
   },
   member: async (tenant, ids) =>
     [...(await namesOfPeople(tenant, ids))].map(([id, label]) => ({ id, label, pageId: id })),

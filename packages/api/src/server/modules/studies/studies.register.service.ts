@@ -16,7 +16,7 @@ import { selectTask, type TaskRow } from '../parts/tasks.repository'
 import { canonicalText, sha256 } from '../record/record.append'
 import { relationshipById, todayIn } from '../relationships/relationships.lookup.service'
 import { readStudyOf } from './studies.read.service'
-import { insertStudy, insertStudyTasks, nextAttempts } from './studies.repository'
+import { insertStudy, insertStudyTasks, nextAttempts, type StudyRow } from './studies.repository'
 import { attemptsOn } from './studies.results.service'
 import type { FrozenCharacteristic, FrozenClause } from './studies.table'
 
@@ -83,6 +83,11 @@ export async function registerStudyOf(
   tenant: Tenant,
   body: Entered,
 ): Promise<AnswerInputOf<typeof readStudy>> {
+  return readStudyOf(tenant, (await storeStudy(tenant, body)).id)
+}
+
+/** The same where many are registered and nobody reads each answer. */
+export async function storeStudy(tenant: Tenant, body: Entered): Promise<StudyRow> {
   const { taskIds, unit, standardId } = body
   const { served, gauge } = await servedBy(tenant, taskIds, unit)
   if (gauge.archivedAt) throw isArchived('gauge')
@@ -133,7 +138,7 @@ export async function registerStudyOf(
       })),
     },
   })
-  return readStudyOf(tenant, study.id)
+  return study
 }
 
 /** Tasks that one study can serve: of this supplier, active, of one gauge, in units of the study's quantity. */

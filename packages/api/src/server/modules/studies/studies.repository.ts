@@ -19,6 +19,15 @@ export async function selectStudy(tenant: Tenant, studyId: string): Promise<Stud
   return row
 }
 
+/** Studies by their codes, abandoned ones too. */
+export async function selectStudiesCoded(tenant: Tenant, codes: readonly string[]): Promise<StudyRow[]> {
+  if (codes.length === 0) return []
+  return tenant.tx
+    .select()
+    .from(studies)
+    .where(and(own(tenant), inArray(studies.code, [...codes])))
+}
+
 /** Tasks of a study in a fixed order. */
 export async function selectTasksOf(tenant: Tenant, studyId: string): Promise<StudyTaskRow[]> {
   return tenant.tx

@@ -66,6 +66,26 @@ export async function storeReadingsOf(
   body: Entered,
   { read, file }: { read: ReadReadings; file: FileToKeep | null },
 ): Promise<AnswerInputOf<typeof readStudy>> {
+  const kept = file && { fileId: await keepFile(tenant, file), sha256: file.stored.sha256 }
+  await storeRevision(tenant, studyId, body, { read, kept })
+  return readStudyOf(tenant, studyId)
+}
+
+/** What is stored of readings, wherever they were read. */
+type ReadingsToStore = Parameters<typeof leftOutOf>[0] & Pick<ReadReadings, 'readAs' | 'readings'>
+/** A file that is noted already. */
+interface KeptFile {
+  fileId: string
+  sha256: string
+}
+
+/** The same where many studies are stored from one file and nobody reads each answer. */
+export async function storeRevision(
+  tenant: Tenant,
+  studyId: string,
+  body: Entered,
+  { read, kept }: { read: ReadingsToStore; kept: KeptFile | null },
+): Promise<void> {
   const study = await studyById(tenant, studyId)
   if (study.rowVersion !== body.expectedVersion) throw changedMeanwhile('study')
   const move = moveFor(study, body)
@@ -84,7 +104,7 @@ export async function storeReadingsOf(
     source: body.source,
     complete: body.complete,
     reason: move.name === 'correct' ? body.reason : null,
-    fileId: file ? await keepFile(tenant, file) : null,
+    fileId: kept?.fileId ?? null,
     readAs: read.readAs,
     standard: await frozenStandard(tenant, study),
     values: [...(before?.values ?? []), ...readings.map(({ value }) => value)],
@@ -105,8 +125,7 @@ export async function storeReadingsOf(
   await insertRevision(tenant, data)
   for (const lesson of read.lessons) await rememberMapping(tenant, lesson)
   await insertEvaluations(tenant, rowsOf(tenant, data, evaluated))
-  recordReadings(tenant, { study, move, data, file, evaluated })
-  return readStudyOf(tenant, studyId)
+  recordReadings(tenant, { study, move, data, kept, evaluated })
 }
 
 /** The move that storing these readings makes; refuses it where the state does not allow it. */
@@ -179,11 +198,11 @@ function recordReadings(
     study: StudyRow
     move: StudyMove
     data: StudyDataRow
-    file: FileToKeep | null
+    kept: KeptFile | null
     evaluated: readonly Evaluated[]
   },
 ): void {
-  const { study, move, data, file, evaluated } = stored
+  const { study, move, data, kept, evaluated } = stored
   tenant.record({
     type: move.event,
     subject: { type: 'study', id: study.id },
@@ -193,7 +212,7 @@ function recordReadings(
       readings: data.values.length,
       leftOut: data.leftOut.length,
       readingsSha256: data.sha256,
-      fileSha256: file?.stored.sha256 ?? null,
+      fileSha256: kept?.sha256 ?? null,
       appraiser: data.appraiser,
       takenBy: data.takenBy,
       collectedOn: data.collectedOn,
