@@ -3,6 +3,7 @@ import type { Permission } from './access'
 import { instant, organisationParams, pageOf, pageQuery, paramsWith, sortBy, uuid } from './common'
 import { defineEndpoint } from './define'
 import { importStates } from './moves/import'
+import { columnLetter, mostTableColumns, tableChoice } from './tables'
 
 export const importKinds = ['parts', 'gauges', 'studies'] as const
 export const importKind = z.enum(importKinds)
@@ -17,20 +18,15 @@ export const mostImportReadings = 200_000
 /** Most bad rows and things that one answer names; the counts tell of all of them. */
 export const mostNamed = 200
 
-const letter = z.string().regex(/^[A-Z]{1,3}$/, 'Name the column by its letter, such as B.')
+/** Letters of the columns by field. */
+export const importColumns = z.record(z.string().max(40), z.array(columnLetter).max(mostTableColumns))
 
 /** How the table of a file is read; what is left out is detected. */
-const choice = {
-  sheet: z.string().max(100).optional(),
-  separator: z.enum(['comma', 'semicolon', 'tab'], 'Choose comma, semicolon or tab.').optional(),
-  encoding: z.enum(['utf-8', 'windows-1252', 'utf-16']).optional(),
+const importInput = tableChoice.extend({
   /** Number of the row that names the columns. */
   headerRow: z.number().int().min(1).max(1000).optional(),
-  /** Letters of the columns by field; left out, they are remembered or guessed from the names. */
-  columns: z.record(z.string().max(40), z.array(letter).max(1000)).optional(),
-}
-const importInput = z.object({
-  ...choice,
+  /** Left out, they are as for the last file with the same names, or guessed from the names. */
+  columns: importColumns.optional(),
   /** Studies alone: members who took the readings, and may not sign what is submitted of them. */
   takenBy: z.array(uuid).max(20, 'Name at most 20 people.').default([]),
 })

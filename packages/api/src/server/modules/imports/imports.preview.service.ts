@@ -12,8 +12,8 @@ import { readTable } from '../../tables/read-table'
 import type { Table } from '../../tables/table'
 import { sha256 } from '../record/record.append'
 import { badRowsOf, countsOf, planOf } from './imports.plan.service'
-import { selectRememberedColumns } from './imports.repository'
-import { columnsOf, sourceOf, type Source } from './imports.source'
+import { tenantSource } from './imports.remembered'
+import { columnsOf } from './imports.source'
 import { basisOf } from './rows/plan'
 
 /** A file with its table, read before the transaction begins. */
@@ -32,15 +32,6 @@ export async function readUpload({
   if (!file) throw invalidInput([{ path: 'body.file', message: 'Choose the XLSX or CSV file to import.' }])
   return { file, table: await readTable(file, body) }
 }
-
-/** The file with its columns as this organisation chose them for files of the same names, or as they are guessed. */
-export const tenantSource = (
-  tenant: Tenant,
-  kind: ImportKind,
-  table: Table,
-  input: ImportInput,
-): Promise<Source> =>
-  sourceOf(kind, tenant.side, table, input, (signature) => selectRememberedColumns(tenant, kind, signature))
 
 /** What a file would make new, change and leave as it is, and every bad row; nothing is stored. */
 export async function previewOf(

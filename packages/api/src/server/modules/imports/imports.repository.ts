@@ -1,4 +1,4 @@
-import { and, desc, eq, sql } from 'drizzle-orm'
+import { and, eq, sql } from 'drizzle-orm'
 import type { QueryOf } from '../../../contract/define'
 import type { listImports } from '../../../contract/imports'
 import { silentAfter } from '../../../contract/moves/import'
@@ -41,26 +41,6 @@ export async function selectImports(tenant: Tenant, query: QueryOf<typeof listIm
 export async function selectImport(tenant: Tenant, importId: string): Promise<ImportListed | undefined> {
   const [row] = await fromImports(tenant).where(and(own(tenant), eq(imports.id, importId)))
   return row
-}
-
-/** The columns with which a file of the same names came in last; undefined where none did. */
-export async function selectRememberedColumns(
-  tenant: Tenant,
-  kind: ImportRow['kind'],
-  signature: string,
-): Promise<ImportRow['input']['columns']> {
-  const [last] = await tenant.tx
-    .select({ input: imports.input })
-    .from(imports)
-    .where(
-      and(
-        ...[own(tenant), eq(imports.kind, kind), eq(imports.state, 'applied')],
-        sql`${imports.input}->>'signature' = ${signature}`,
-      ),
-    )
-    .orderBy(desc(imports.createdAt), desc(imports.id))
-    .limit(1)
-  return last?.input.columns
 }
 
 export async function insertImport(

@@ -11,6 +11,7 @@ import { refuseChanged } from './imports.apply.service'
 import { refusedAtRow } from './imports.errors'
 import { badRowsOf, countsOf, planOf } from './imports.plan.service'
 import { lockImports, noteProgress, selectImport, updateImport, type ImportRow } from './imports.repository'
+import { rememberColumns } from './imports.remembered'
 import { sourceOf } from './imports.source'
 import { turn } from './rows/context'
 import { partnersOf } from './rows/partners'
@@ -76,6 +77,7 @@ class Running {
       this.#done += 1
       await turn()
     }
+    await rememberColumns(tenant, row.kind, source)
     const counts = countsOf(plan)
     tenant.record({
       type: 'import.applied',

@@ -22,9 +22,6 @@ import { findHeader, guessMapping, normalised, type Mapping } from './rows/mappi
 export const fieldsOf = (kind: ImportKind, side: Side): Field[] =>
   kind === 'parts' ? partFields(side) : kind === 'gauges' ? gaugeFields : studyFields
 
-/** With the SHA-256 of the names of the columns, by which the next file like it is known. */
-export type KeptInput = ImportInput & { signature?: string }
-
 /** A file with what its columns mean. */
 export interface Source {
   table: Table
@@ -35,7 +32,9 @@ export interface Source {
   missing: string[]
   mapped: MappedRows
   /** How the file was read, so that it is read the same way once more. */
-  input: KeptInput
+  input: ImportInput
+  /** SHA-256 of the names of the columns, by which the next file like it is known. */
+  signature: string
 }
 
 /** Columns by field that a file with the same names was imported with before. */
@@ -71,8 +70,8 @@ export async function sourceOf(
   const columns = Object.fromEntries(
     Object.entries(mapping).map(([key, places]) => [key, places.map(letterOf)]),
   )
-  const used = { ...input, headerRow, columns, signature }
-  return { table, fields, headerRow, mapping, missing, mapped, input: used }
+  const used = { ...input, headerRow, columns }
+  return { table, fields, headerRow, mapping, missing, mapped, input: used, signature }
 }
 
 /** The columns that the sender chose; each may serve one field. */

@@ -30,7 +30,7 @@ export const imports = pgTable(
     fileId: uuid().notNull(),
     sha256: text().notNull(),
     /** How the file was read, columns included, so that it is read the same way once more. */
-    input: jsonb().$type<ImportInput & { signature?: string }>().notNull(),
+    input: jsonb().$type<ImportInput>().notNull(),
     /** What the preview rested on. */
     basis: text().notNull(),
     counts: jsonb().$type<ImportCounts>().notNull(),

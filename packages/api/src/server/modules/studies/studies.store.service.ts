@@ -72,7 +72,7 @@ export async function storeReadingsOf(
 }
 
 /** What is stored of readings, wherever they were read. */
-type ReadingsToStore = Parameters<typeof leftOutOf>[0] & Pick<ReadReadings, 'readAs' | 'readings'>
+type ReadingsToStore = Pick<ReadReadings, 'readAs' | 'readings' | 'errors' | 'runSheet' | 'lessons'>
 /** A file that is noted already. */
 interface KeptFile {
   fileId: string

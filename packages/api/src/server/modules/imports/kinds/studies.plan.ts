@@ -106,8 +106,8 @@ async function storeWhole(tenant: Tenant, settled: SettledStudy, source: StudySo
   }
   const read = {
     readAs: source.readAs,
-    readings: readings.map(({ text, value }) => ({ row: settled.row, text, value })),
-    errors: [],
+    readings: readings.map(({ text, value }) => ({ row: settled.row, column: '', text, value })),
+    ...{ errors: [], runSheet: null, lessons: [] },
   }
   await storeRevision(tenant, study.id, body, { read, kept: source.kept })
 }

@@ -4,15 +4,17 @@ import type { StudySource } from './studies.plan'
 
 /** How the readings of an imported file were read, as a study keeps it. */
 export function readAsOf({ table, headerRow, mapping, mapped }: Source): StudySource['readAs'] {
-  const [first = 0, ...more] = mapping.readings ?? []
+  const places = mapping.readings ?? []
   return {
-    encoding: table.dialect?.encoding ?? 'utf-8',
+    kind: table.kind,
+    sheet: table.sheet,
+    encoding: table.dialect?.encoding ?? null,
     byteOrderMark: table.dialect?.byteOrderMark ?? false,
-    separator: table.dialect?.separator ?? 'none',
+    separator: table.dialect?.separator ?? null,
     decimal: mapped.writing.decimal,
-    direction: more.length > 0 ? 'across' : 'down',
+    layout: places.length > 1 ? 'wide' : 'long',
     headerRows: headerRow,
-    column: more.length > 0 ? null : letterOf(first),
-    columnName: table.rows[headerRow - 1]?.cells[first] ?? null,
+    columns: places.map(letterOf),
+    columnNames: places.map((place) => table.rows[headerRow - 1]?.cells[place] ?? null),
   }
 }

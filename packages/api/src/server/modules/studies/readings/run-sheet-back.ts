@@ -4,7 +4,10 @@ import type { Reading } from './cells'
 import type { ReadReadings } from './take'
 
 /** Refuses the run sheet of another study: its readings were taken of another gauge, or in another order. */
-export function refuseOtherSheet({ code }: Pick<StudyRow, 'code'>, { runSheet }: ReadReadings): void {
+export function refuseOtherSheet(
+  { code }: Pick<StudyRow, 'code'>,
+  { runSheet }: Pick<ReadReadings, 'runSheet'>,
+): void {
   if (runSheet === null || runSheet.code === code) return
   throw invalidInput([
     {
@@ -21,7 +24,7 @@ export function refuseOtherSheet({ code }: Pick<StudyRow, 'code'>, { runSheet }:
  * follows them is new. Where they differ from what is kept, nobody can tell which hold.
  */
 export function withoutKept(
-  { readings, runSheet }: ReadReadings,
+  { readings, runSheet }: Pick<ReadReadings, 'readings' | 'runSheet'>,
   kept: Pick<StudyDataRow, 'values'> | undefined,
 ): Reading[] {
   if (runSheet === null || !kept) return readings
