@@ -22,7 +22,8 @@ export const biasText = (bias: number, unit: Unit): string =>
   formatNumber(bias, { unit, digits: placesFor(bias, 2) })
 
 export const consequenceWords = {
-  heading: (subject: string) => `What the ${subject.toLowerCase()} clause does`,
+  heading: (subject: string, rule?: string) =>
+    `What the ${subject.toLowerCase()} clause does${rule === undefined ? '' : `: ${rule}`}`,
   more: 'Everything this clause does',
   inForce: 'in force',
   proposal: 'proposal',
