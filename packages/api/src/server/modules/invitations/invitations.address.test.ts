@@ -1,4 +1,4 @@
-import { assert, property, string, tuple } from 'fast-check'
+import { assert, property, stringMatching, tuple } from 'fast-check'
 import { describe, expect, it } from 'vitest'
 import { maskedAddress, sameAddress } from './invitations.address'
 
@@ -10,14 +10,10 @@ describe('a masked address', () => {
   ])('of %s is %s', (address, masked) => expect(maskedAddress(address)).toBe(masked))
 
   it('never holds more of the name or the domain than a first letter and the ending', () => {
-    const word = string({ unit: 'binary-ascii', minLength: 2, maxLength: 20 }).filter((text) =>
-      /^[a-z0-9]+$/.test(text),
-    )
+    const word = stringMatching(/^[a-z0-9]{2,20}$/)
     assert(
       property(tuple(word, word), ([name, domain]) => {
-        const masked = maskedAddress(`${name}@${domain}.example`)
-        expect(masked).not.toContain(name)
-        expect(masked).not.toContain(domain)
+        expect(maskedAddress(`${name}@${domain}.example`)).toBe(`${name[0]}•••@${domain[0]}•••.example`)
       }),
     )
   })
