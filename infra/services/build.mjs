@@ -6,6 +6,7 @@ import {
   mkdirSync,
   readFileSync,
   readdirSync,
+  readlinkSync,
   rmSync,
   symlinkSync,
 } from 'node:fs'
@@ -179,7 +180,9 @@ async function bundleServer({ root, folder }) {
 /** Bundles outside the checkout find the packages through a link, as those inside do by their place. */
 function linkPackages(root, folder) {
   if (!relative(root, folder).startsWith('..')) return
-  const link = join(folder, 'node_modules')
+  const [link, packages] = [join(folder, 'node_modules'), join(root, 'node_modules')]
+  // Left as it is where it is right: programs may be loading through it while the next build begins.
+  if (lstatSync(link, { throwIfNoEntry: false })?.isSymbolicLink() && readlinkSync(link) === packages) return
   rmSync(link, { force: true })
-  symlinkSync(join(root, 'node_modules'), link)
+  symlinkSync(packages, link)
 }
