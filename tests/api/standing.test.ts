@@ -77,6 +77,7 @@ describe('an acceptance', () => {
       state: 'stands',
       since: '2026-11-02',
       until: null,
+      runsOutOn: null,
       calibrationDueOn: '2027-03-01',
       cause: null,
     }
