@@ -223,10 +223,7 @@ export const entryWords = {
   sheet: 'Sheet',
   sheetHidden: 'hidden in the workbook',
   layout: 'The readings stand in',
-  layouts: { long: 'one column', wide: 'several columns' } satisfies Record<
-    studies.ReadAs['layout'],
-    string
-  >,
+  layouts: { long: 'one column', wide: 'several columns' } satisfies Record<studies.ReadAs['layout'], string>,
   columnsWide: 'Columns with the readings',
   headerRows: (count: number) => `${formatCount(count, 'row')} passed over at the top`,
   column: 'Column with the readings',
