@@ -23,14 +23,8 @@ export const characteristicClasses = ['ordinary', 'significant', 'safety'] as co
 export const characteristicClass = z.enum(characteristicClasses, 'Choose ordinary, significant or safety.')
 export type CharacteristicClass = z.output<typeof characteristicClass>
 
-export const characteristicSchema = z.object({
-  id: uuid,
-  relationshipId: uuid,
-  partId: uuid,
-  partNumber: z.string(),
-  revisionId: uuid,
-  revision: z.string(),
-  currentRevision: z.boolean(),
+/** What a characteristic is, wherever it is told; decimal text as entered. */
+export const characteristicFacts = {
   /** The number on the drawing. */
   number: z.number().int(),
   name: z.string(),
@@ -39,6 +33,17 @@ export const characteristicSchema = z.object({
   upperLimit: z.string().nullable(),
   unit: z.string(),
   class: characteristicClass,
+}
+
+export const characteristicSchema = z.object({
+  id: uuid,
+  relationshipId: uuid,
+  partId: uuid,
+  partNumber: z.string(),
+  revisionId: uuid,
+  revision: z.string(),
+  currentRevision: z.boolean(),
+  ...characteristicFacts,
   processStandardDeviation: z.string().nullable(),
   confirmedByCustomer: z.boolean(),
   /** A signed agreement rests on the limits: nominal, limits, unit and class can no longer change. */

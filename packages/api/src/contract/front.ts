@@ -1,5 +1,5 @@
 import { z } from 'zod'
-import { characteristicClass } from './characteristics'
+import { characteristicFacts } from './characteristics'
 import { calendarDate, instant, organisationParams, pageOf, pageQuery, sortBy, uuid } from './common'
 import { defineEndpoint } from './define'
 import { proofStates } from './proof'
@@ -104,13 +104,7 @@ export const coveredPartSchema = z.object({
   characteristics: z.array(
     z.object({
       id: uuid,
-      number: z.number().int(),
-      name: z.string(),
-      nominal: z.string().nullable(),
-      lowerLimit: z.string().nullable(),
-      upperLimit: z.string().nullable(),
-      unit: z.string(),
-      class: characteristicClass,
+      ...characteristicFacts,
       proof: z.enum(proofStates),
       /** The day on which accepted proof runs out, where that is soon. */
       runsOutOn: calendarDate.nullable(),

@@ -1,6 +1,6 @@
 import type { Clause } from '@evenrule/metrology'
 import { z } from 'zod'
-import { characteristicClass } from './characteristics'
+import { characteristicFacts } from './characteristics'
 import { uuid } from './common'
 
 export const hashSchema = z.string().regex(/^[0-9a-f]{64}$/, 'This is not a SHA-256 hash.')
@@ -21,13 +21,7 @@ export const frozenCharacteristicSchema = z.object({
   characteristicId: uuid,
   partNumber: z.string(),
   revision: z.string(),
-  number: z.number().int(),
-  name: z.string(),
-  nominal: z.string().nullable(),
-  lowerLimit: z.string().nullable(),
-  upperLimit: z.string().nullable(),
-  unit: z.string(),
-  class: characteristicClass,
+  ...characteristicFacts,
   processStandardDeviation: z.string().nullable(),
 })
 export type FrozenCharacteristic = z.output<typeof frozenCharacteristicSchema>

@@ -1,12 +1,10 @@
 import { BackupProblem } from './backup/backup.problem'
 import { restoreBackup } from './backup/restore-backup'
 import { readKeeperConfig } from './config'
-import { openDatabase } from './db/database'
 import { JournalProblem } from './db/journal'
 import { openEngines } from './integrations/engines'
 import { openFileStore } from './integrations/file-store'
-import { reportOf } from './modules/record/record.report'
-import { verifyWholeRecord } from './modules/record/record.verify'
+import { tellRecord } from './tell-record'
 
 /*
  * Puts a backup back and checks the record:
@@ -28,14 +26,7 @@ async function main(): Promise<number> {
     },
     folder,
   )
-  const { database, pool } = openDatabase(ownerUrl, 1)
-  try {
-    const { lines, status } = reportOf(await verifyWholeRecord(database, engines))
-    for (const line of lines) console.log(line)
-    return status
-  } finally {
-    await pool.end()
-  }
+  return tellRecord(ownerUrl, engines)
 }
 
 try {

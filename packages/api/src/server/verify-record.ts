@@ -1,7 +1,5 @@
-import { openDatabase } from './db/database'
 import { openEngines } from './integrations/engines'
-import { reportOf } from './modules/record/record.report'
-import { verifyWholeRecord } from './modules/record/record.verify'
+import { tellRecord } from './tell-record'
 
 /*
  * Recomputes the whole record from the database, with every frozen text and evaluation:
@@ -15,15 +13,8 @@ async function main(): Promise<number> {
   const knownHash = process.argv[2]
   if (knownHash !== undefined && !/^[0-9a-f]{64}$/.test(knownHash))
     throw new Error(`"${knownHash}" is no hash: give 64 characters, 0 to 9 and a to f.`)
-  const { database, pool } = openDatabase(url, 1)
-  try {
-    const engines = await openEngines(process.env.ENGINES_DIR ?? 'packages/metrology/released')
-    const { lines, status } = reportOf(await verifyWholeRecord(database, engines, knownHash), knownHash)
-    for (const line of lines) console.log(line)
-    return status
-  } finally {
-    await pool.end()
-  }
+  const engines = await openEngines(process.env.ENGINES_DIR ?? 'packages/metrology/released')
+  return tellRecord(url, engines, knownHash)
 }
 
 try {

@@ -172,7 +172,7 @@ export const studyFields: Field[] = [
       'wert',
       'ablesung',
       'mesure',
-      'lecture',
+      'valeur mesurée',
       'lectura',
       'medida',
       'lettura',
